@@ -1,0 +1,77 @@
+import 'server-only';
+import { sql } from 'drizzle-orm';
+import { drizzle, type NodePgDatabase } from 'drizzle-orm/node-postgres';
+import pg from 'pg';
+import { env } from '@/lib/server/env';
+import * as auth from './schema/auth';
+import * as heap from './schema/heap';
+import * as people from './schema/people';
+import * as rule from './schema/rule';
+import * as running from './schema/running';
+import * as study from './schema/study';
+import * as watch from './schema/watch';
+import * as yard from './schema/yard';
+
+export const schema = { ...auth, ...heap, ...people, ...rule, ...running, ...study, ...watch, ...yard };
+export type Db = NodePgDatabase<typeof schema>;
+
+/**
+ * A holding to query in. Every query of tenant tables takes it first, names `id` in its where clause, and is held to it
+ * once more by row security.
+ */
+export interface Holding {
+  id: string;
+  db: Db;
+}
+
+/** Row security's word for "whichever holding": the worker and the look-ups that find a holding run under it. */
+const EVERY = '*';
+
+interface Pools {
+  tenant?: pg.Pool;
+  every?: pg.Pool;
+}
+// A bundler may load this module twice in one process; the pools stay one.
+const pools: Pools = ((globalThis as { middenwardPools?: Pools }).middenwardPools ??= {});
+
+function makePool(holding: string): pg.Pool {
+  const pool = new pg.Pool({
+    connectionString: env().DATABASE_URL,
+    max: 10,
+    connectionTimeoutMillis: 2000,
+    query_timeout: 30_000,
+    idleTimeoutMillis: 30_000,
+    options: `-c app.holding=${holding} -c timezone=UTC`,
+  });
+  // Without a listener the loss of an idle connection would end the process.
+  pool.on('error', () => undefined);
+  return pool;
+}
+
+/** Runs `work` in one transaction that sees the rows of one holding only. */
+export async function inHolding<T>(holdingId: string, work: (holding: Holding) => Promise<T>): Promise<T> {
+  pools.tenant ??= makePool('none');
+  return drizzle({ client: pools.tenant, schema }).transaction(async (db) => {
+    await db.execute(sql`select set_config('app.holding', ${holdingId}, true)`);
+    return work({ id: holdingId, db });
+  });
+}
+
+/** Sees every holding: for the worker, for sign-in, and for finding which holding a key or token belongs to. */
+export function everyHolding(): Db {
+  pools.every ??= makePool(EVERY);
+  return drizzle({ client: pools.every, schema });
+}
+
+/** The pool below `everyHolding`, for COPY and LISTEN, which drizzle does not speak. */
+export function everyPool(): pg.Pool {
+  pools.every ??= makePool(EVERY);
+  return pools.every;
+}
+
+export async function closePools(): Promise<void> {
+  const closing = [pools.tenant, pools.every];
+  delete pools.tenant;
+  delete pools.every;
+  await Promise.all(closing.map((pool) => pool?.end()));
+}

@@ -1,0 +1,51 @@
+import { sql } from 'drizzle-orm';
+import { foreignKey, index, integer, jsonb, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import type { RuleBody } from '@/lib/schema/rule';
+import { holdingId, instant } from './columns';
+import { house } from './yard';
+
+export const rule = pgTable(
+  'rule',
+  {
+    holdingId: holdingId(),
+    id: uuid('id').notNull(),
+    houseId: uuid('house_id').notNull(),
+    channelId: uuid('channel_id').notNull(),
+    slug: text('slug').notNull(),
+    name: text('name').notNull(),
+    revision: integer('revision').notNull().default(1),
+    createdAt: instant('created_at').notNull().defaultNow(),
+    retiredAt: instant('retired_at'),
+  },
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.id] }),
+    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    uniqueIndex('rule_slug').on(table.holdingId, table.slug),
+  ],
+);
+
+export const ruleVersion = pgTable(
+  'rule_version',
+  {
+    holdingId: holdingId(),
+    id: uuid('id').notNull(),
+    ruleId: uuid('rule_id').notNull(),
+    /** A draft already carries the number it will have. */
+    number: integer('number').notNull(),
+    status: text('status').$type<'draft' | 'in-force' | 'retired'>().notNull(),
+    body: jsonb('body').$type<RuleBody>().notNull(),
+    why: text('why'),
+    by: text('by').notNull(),
+    draftedAt: instant('drafted_at').notNull(),
+    forcedAt: instant('forced_at'),
+    endedAt: instant('ended_at'),
+  },
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.id] }),
+    foreignKey({ columns: [table.holdingId, table.ruleId], foreignColumns: [rule.holdingId, rule.id] }).onDelete('cascade'),
+    uniqueIndex('rule_version_number').on(table.ruleId, table.number),
+    uniqueIndex('rule_version_draft').on(table.ruleId).where(sql`status = 'draft'`),
+    uniqueIndex('rule_version_in_force').on(table.ruleId).where(sql`status = 'in-force'`),
+    index('rule_version_rule').on(table.holdingId, table.ruleId),
+  ],
+);

@@ -1,0 +1,292 @@
+/**
+ * What the core is told and what it answers. Everything is plain data in SI: °C, K, s, W; instants are epoch
+ * milliseconds UTC. Ids are the database's, so that latches, timers and credits outlive a renaming.
+ */
+import type { ConditionTree, RuleBody } from '@/lib/schema/rule';
+
+export type State = 'on' | 'off';
+export type Quality = 'good' | 'uncertain' | 'bad';
+export type Contact = 'NO' | 'NC';
+
+/** The ladder, highest first. */
+export const CLAIMS = [
+  'lock-out',
+  'interlock',
+  'limit',
+  'proving',
+  'short-cycle',
+  'hand',
+  'source-guard',
+  'frost',
+  'fail-safe',
+  'rest',
+  'band',
+  'idle',
+] as const;
+export type Claim = (typeof CLAIMS)[number];
+
+/** What a reason or an explanation may carry: JSON, with instants as epoch ms in fields that end in `At` or `Until`. */
+export type Data = { [key: string]: DataValue };
+export type DataValue = string | number | boolean | null | DataValue[] | { [key: string]: DataValue };
+
+// ── configuration of one house, as the database keeps it ────────────────────────────────────────────────────────
+
+export interface HouseConfig {
+  house: {
+    id: string;
+    name: string;
+    zone: string;
+    latitude: number;
+    longitude: number;
+    altitude: number;
+    frostLimit: number | null;
+    frostAlarm: number | null;
+  };
+  points: PointConfig[];
+  sources: SourceConfig[];
+  loops: LoopConfig[];
+  channels: ChannelConfig[];
+  interlocks: InterlockConfig[];
+  /** Rules in force only, one version each. */
+  rules: RuleConfig[];
+}
+
+export interface PointConfig {
+  id: string;
+  key: string;
+  name: string;
+  role: string;
+  unit: string;
+  min: number | null;
+  max: number | null;
+  /** Seconds of silence after which the point is bad; null means three reporting intervals. */
+  staleAfterS: number | null;
+  /** Reporting interval of its node, s. */
+  reportEveryS: number;
+  /** Fastest plausible change, unit a second. */
+  maxRate: number | null;
+  frozenAfterS: number | null;
+  sensor: string | null;
+  derived: { of: string; points: string[]; windowS?: number } | null;
+}
+
+export interface SourceConfig {
+  id: string;
+  slug: string;
+  name: string;
+  kind: 'heap' | 'ground' | 'heater' | 'other';
+  corePoint: string | null;
+  basePoint: string | null;
+  coreFloor: number | null;
+  /** Channel-seconds on in the rolling 24 h; null means no limit. */
+  dailyLimitS: number | null;
+  ready: { level: number; forS: number } | null;
+}
+
+export interface LoopConfig {
+  id: string;
+  name: string;
+  source: string | null;
+  channel: string | null;
+  intake: string | null;
+  return: string | null;
+}
+
+export interface ChannelConfig {
+  id: string;
+  number: number;
+  key: string;
+  label: string;
+  node: string | null;
+  relay: number | null;
+  /** Slug of its source. */
+  source: string | null;
+  frostHelp: boolean;
+  contact: Contact;
+  loadKind: 'motor' | 'vent' | 'heater' | 'valve' | 'lamp' | 'other';
+  loadW: number | null;
+  minOnS: number;
+  minOffS: number;
+  longestOnS: number | null;
+  highLimit: { point: string; above: number } | null;
+  runProof: { point: string; above: number } | null;
+}
+
+export interface InterlockConfig {
+  id: string;
+  channel: string;
+  kind: 'never-with' | 'needs';
+  other: string;
+  delayS: number;
+  frostMayBreak: boolean;
+}
+
+export interface RuleConfig {
+  id: string;
+  name: string;
+  channel: string;
+  versionId: string;
+  version: number;
+  body: RuleBody;
+}
+
+export type { ConditionTree, RuleBody };
+
+// ── what the worker saw ─────────────────────────────────────────────────────────────────────────────────────────
+
+export interface Observed {
+  workerStartedAt: number;
+  /** By point id: the newest reading by its own time; a point that never spoke is absent. */
+  points: Record<string, ObservedPoint>;
+  /** By channel id; a channel whose node never reported is absent. */
+  relays: Record<string, ObservedRelay>;
+  /** Not yet taken or taken: the core takes each number once, in order. */
+  commands: PersonCommand[];
+}
+
+export interface ObservedPoint {
+  value: number;
+  at: number;
+  /** Times of this point's readings since the step before, the newest not among them, ascending. */
+  between?: number[];
+}
+
+export interface ObservedRelay {
+  /** What the relay says of itself, as the load's state (an NC contact is turned round already). */
+  reported: State | null;
+  /** When that report was received. */
+  reportedAt: number | null;
+  /** The report names the newest command that changed this relay. */
+  acknowledges: boolean;
+  /** Latest instant at which a lease given so far can end; null: none was given. */
+  leaseEndsAt: number | null;
+}
+
+export type PersonCommand = { number: number; at: number; by: string } & (
+  | { kind: 'hand'; channel: string; state: State; seconds: number; holdInFrost: boolean }
+  | { kind: 'auto'; channel: string }
+  | { kind: 'all-off'; seconds: number }
+  | { kind: 'lock-out'; channel: string; lockout: string; why: string }
+  | { kind: 'unlock'; channel: string; lockout: string }
+  | { kind: 'prove'; channel: string; seconds: number }
+  | { kind: 'ready'; source: string }
+);
+
+// ── what the core answers ───────────────────────────────────────────────────────────────────────────────────────
+
+export interface ChannelResult {
+  id: string;
+  number: number;
+  /** Of the load. */
+  state: State;
+  /** Of the relay's coil: what is sent. */
+  coil: State;
+  claim: Claim;
+  because: Data;
+  /** When this decision ends by itself, if it does. */
+  until: number | null;
+  mode: 'auto' | 'hand' | 'locked';
+  /** The state that counts for timers and credit: reported where that is fresh, else wanted. */
+  counted: State;
+}
+
+export interface PointResult {
+  id: string;
+  /** The value in use: the last plausible one. */
+  value: number | null;
+  at: number | null;
+  quality: Quality;
+  /** Why it is not good: silent, out-of-range, one-wire-fault, too-fast, frozen, input-bad … */
+  why: string | null;
+}
+
+export interface SourceResult {
+  id: string;
+  slug: string;
+  /** Share of the longest draw that is left, 0 to 1. */
+  credit: number;
+  restSince: number | null;
+  /** Earliest or known end of the rest; null: not resting. */
+  restUntil: number | null;
+  /** Latest end of a rest that waits for a level; null otherwise. */
+  restAtMostUntil: number | null;
+  /** Channel-seconds on in the rolling 24 h. */
+  drawnTodayS: number;
+  drawing: boolean;
+  ready: boolean | null;
+  underFloor: boolean;
+}
+
+export interface LadderStep {
+  claim: Claim;
+  speaks: boolean;
+  wants?: State | 'hold';
+  because?: Data;
+}
+
+/** The ladder down to the claim that decided, and what would follow it. */
+export interface Explanation {
+  channel: string;
+  at: number;
+  state: State;
+  claim: Claim;
+  until: number | null;
+  ladder: LadderStep[];
+  /** What comes next, earliest first: when known, the claim that then decides, and what would bring it sooner. */
+  next: Data[];
+  rule: { id: string; version: number } | null;
+}
+
+export type ControlEvent = { at: number } & (
+  | {
+      kind: 'switching';
+      channel: string;
+      from: State;
+      to: State;
+      claim: Claim;
+      explanation: Explanation;
+    }
+  | { kind: 'decision'; channel: string; claim: Claim; before: Claim }
+  | { kind: 'rest-begun' | 'rest-ended'; source: string; why: Data }
+  | { kind: 'latch'; rule: string; on: boolean }
+  | { kind: 'hand-begun' | 'hand-ended'; channel: string; why: Data }
+  | { kind: 'lock-out-begun' | 'lock-out-ended'; channel: string; why: Data }
+  | { kind: 'command-refused'; number: number; channel: string | null; why: string }
+  | { kind: 'quality'; point: string; from: Quality; to: Quality; why: string | null }
+  | { kind: 'fault-begun' | 'fault-ended'; fault: Fault }
+);
+
+/** A standing condition somebody should know of; level-triggered: the list is whole at every step. */
+export interface Fault {
+  /** Stable while it stands: kind and what it is about. */
+  key: string;
+  kind:
+    | 'frost'
+    | 'point-bad'
+    | 'core-under-floor'
+    | 'core-not-good'
+    | 'frost-without-reading'
+    | 'hand-off-in-frost'
+    | 'interlock-blocks-frost'
+    | 'high-limit'
+    | 'no-gain'
+    | 'daily-limit'
+    | 'rest-ran-to-most'
+    | 'fan-standing'
+    | 'relay-does-not-follow'
+    | 'frozen-point-in-frost';
+  about: { point?: string; channel?: string; source?: string };
+  since: number;
+  data: Data;
+}
+
+export interface StepResult {
+  memory: import('./memory').Memory;
+  channels: ChannelResult[];
+  points: PointResult[];
+  sources: SourceResult[];
+  faults: Fault[];
+  events: ControlEvent[];
+  /** Earliest instant at which something changes without a new reading; null: nothing is pending. */
+  wakeAt: number | null;
+}

@@ -1,0 +1,32 @@
+import { z } from 'zod';
+import { Text } from './common';
+
+export const ALARM_KINDS = [
+  'point-silent',
+  'point-not-trusted',
+  'frost',
+  'node-lost',
+  'control-not-running',
+  'core-under-floor',
+  'core-not-good',
+  'frost-without-reading',
+  'hand-off-in-frost',
+  'interlock-blocks-frost',
+  'high-limit',
+  'no-gain',
+  'daily-limit',
+  'rest-ran-to-most',
+  'fan-standing',
+  'relay-does-not-follow',
+  'frozen-point-in-frost',
+  'cloned-token',
+  'epoch-too-far',
+] as const;
+export type AlarmKind = (typeof ALARM_KINDS)[number];
+
+export const AlarmQuery = z.strictObject({
+  state: z.enum(['active', 'history', 'all']).default('active'),
+  limit: z.coerce.number().int().min(1).max(500).default(100),
+  cursor: z.string().max(400).optional(),
+});
+export const AlarmAcknowledge = z.strictObject({ note: Text.optional() });

@@ -1,0 +1,61 @@
+import { z } from 'zod';
+
+/** A key names a point, node or channel inside its house and goes on the wire, so it keeps SenML's safe characters. */
+export const Key = z
+  .string()
+  .regex(/^[A-Za-z0-9][A-Za-z0-9._-]{0,62}$/, 'Use letters, digits, dot, dash or underscore; begin with a letter or digit; 63 at most.');
+
+export const Name = z.string().trim().min(1, 'Give a name.').max(120, 'At most 120 characters.');
+export const Text = z.string().trim().max(4000, 'At most 4000 characters.');
+export const Why = z.string().trim().min(1, 'Say why in a few words.').max(500, 'At most 500 characters.');
+
+export const finite = (least: number, most: number, unit: string) =>
+  z.number({ error: `Give a number in ${unit}.` }).min(least, `At least ${least} ${unit}.`).max(most, `At most ${most} ${unit}.`);
+
+export const wholeSeconds = (least: number, most: number) =>
+  z
+    .number({ error: 'Give whole seconds.' })
+    .int('Give whole seconds.')
+    .min(least, `At least ${least} s.`)
+    .max(most, `At most ${most} s.`);
+
+/** °C of anything this product measures, flame and liquid nitrogen aside. */
+export const Celsius = finite(-60, 200, '°C');
+
+export const Zone = z.string().refine(isZone, 'Name an IANA time zone, such as Europe/London.');
+
+function isZone(value: string): boolean {
+  try {
+    new Intl.DateTimeFormat('en', { timeZone: value });
+    return value.includes('/') || value === 'UTC';
+  } catch {
+    return false;
+  }
+}
+
+/** `HH:MM` in the house's zone. */
+export const ClockTime = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'Give a time as HH:MM.');
+
+/** A clock time, or the sun with an offset: `sunset-01:00`, `sunrise+00:30`. */
+export const DayTime = z
+  .string()
+  .regex(
+    /^(([01]\d|2[0-3]):[0-5]\d|(sunrise|sunset)([+-](0\d|1[0-2]):[0-5]\d)?)$/,
+    'Give HH:MM, or sunrise or sunset with an offset, such as sunset-01:00.',
+  );
+
+/** `MM-DD`. 29 February is a day like others: in a common year it is read as 1 March. */
+export const MonthDay = z
+  .string()
+  .regex(/^(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])$/, 'Give month and day as MM-DD.')
+  .refine((value) => Number(value.slice(3)) <= ([31, 29, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31][Number(value.slice(0, 2)) - 1] ?? 0), 'That month has no such day.');
+
+export const Uuid = z.uuid();
+
+export const Instant = z.iso.datetime({ offset: true, error: 'Give an ISO 8601 time with offset.' });
+
+/** Paging of every list. */
+export const PageQuery = z.strictObject({
+  limit: z.coerce.number().int().min(1).max(500).default(100),
+  cursor: z.string().max(400).optional(),
+});
