@@ -1,0 +1,2 @@
+export const PROGRAMS: Record<string, string>;
+export function build(names?: string[]): Promise<void>;
