@@ -13,12 +13,6 @@ export interface Part {
 }
 export type Sentence = Part[];
 
-/** What a reader prefers; everything inside stays SI and 24 h. */
-export interface Reader {
-  temperature: 'C' | 'F';
-  clock: '24' | '12';
-}
-
 /** Joins texts and parts into one sentence; neighbours that look alike become one part. */
 export function sentence(...pieces: (string | Part | Sentence)[]): Sentence {
   const parts: Sentence = [];
