@@ -51,23 +51,30 @@ async function buildPrograms(names) {
   const esbuild = await import('esbuild');
   const result = await esbuild
     .build({
-      absWorkingDir: ROOT,
+      ...bundleSettings(),
       entryPoints: Object.fromEntries(stale.map((name) => [name, PROGRAMS[name]])),
       outdir: BUILD,
       outExtension: { '.js': '.mjs' },
-      bundle: true,
-      platform: 'node',
-      target: 'node20',
-      format: 'esm',
-      packages: 'external',
-      sourcemap: 'linked',
-      // what marks a module as the server's throws outside Next; its own empty half does not (see vitest.config.ts)
-      alias: { 'server-only': path.join(ROOT, 'node_modules/server-only/empty.js') },
-      logLevel: 'silent',
     })
     .catch((error) => error);
   if (result instanceof Error) throw new Trouble(`The programs do not build:\n${result.message}`);
   for (const name of stale) writeStamp(name, hash);
+}
+
+/** What every bundle has in common. Packages stay outside: they are installed beside it anyhow. */
+export function bundleSettings() {
+  return {
+    absWorkingDir: ROOT,
+    bundle: true,
+    platform: 'node',
+    target: 'node20',
+    format: 'esm',
+    packages: 'external',
+    sourcemap: 'linked',
+    // what marks a module as the server's throws outside Next; its own empty half does not (see vitest.config.ts)
+    alias: { 'server-only': path.join(ROOT, 'node_modules/server-only/empty.js') },
+    logLevel: 'silent',
+  };
 }
 
 async function buildPages() {

@@ -1,0 +1,2 @@
+export function ensurePackages(root?: string): void;
+export function areInstalled(root?: string): boolean;

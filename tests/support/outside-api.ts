@@ -1,0 +1,67 @@
+/** A program that knows only the interface's description: signs in and calls it as a browser or a script would. */
+export interface Answer {
+  status: number;
+  headers: Headers;
+  // The interface's own contract is what the tests look at, so bodies stay open here.
+  body: Body;
+}
+export type Body = { [key: string]: Body } & Body[] & string & number & boolean;
+
+export class OutsideApi {
+  private cookie = '';
+  constructor(readonly url: string) {}
+
+  static async signIn(url: string, email: string, password: string): Promise<OutsideApi> {
+    const api = new OutsideApi(url);
+    const response = await fetch(`${url}/api/auth/sign-in/email`, {
+      method: 'POST',
+      headers: { 'content-type': 'application/json', origin: url },
+      body: JSON.stringify({ email, password }),
+    });
+    if (response.status !== 200)
+      throw new Error(`sign-in answered ${response.status}: ${await response.text()}`);
+    api.cookie = response.headers
+      .getSetCookie()
+      .map((line) => line.split(';')[0])
+      .join('; ');
+    return api;
+  }
+
+  async call(
+    method: string,
+    path: string,
+    body?: unknown,
+    headers: Record<string, string> = {},
+  ): Promise<Answer> {
+    const response = await fetch(`${this.url}/api/v1${path}`, {
+      method,
+      headers: {
+        cookie: this.cookie,
+        origin: this.url,
+        ...(body === undefined ? {} : { 'content-type': 'application/json' }),
+        ...headers,
+      },
+      ...(body === undefined ? {} : { body: typeof body === 'string' ? body : JSON.stringify(body) }),
+    });
+    const text = await response.text();
+    const json = /json/.test(response.headers.get('content-type') ?? '');
+    return {
+      status: response.status,
+      headers: response.headers,
+      body: (json ? JSON.parse(text) : text) as Body,
+    };
+  }
+
+  get(path: string): Promise<Answer> {
+    return this.call('GET', path);
+  }
+
+  /** POST that must succeed; answers the body. */
+  async make(path: string, body: unknown): Promise<Body> {
+    const answer = await this.call('POST', path, body);
+    if (answer.status !== 201 && answer.status !== 200) {
+      throw new Error(`POST ${path} answered ${answer.status}: ${JSON.stringify(answer.body)}`);
+    }
+    return answer.body;
+  }
+}
