@@ -58,6 +58,8 @@ const coils = z.record(relayNumber, coil);
 
 export const helloFrame = z.strictObject({
   type: z.literal('hello'),
+  // The count runs over all frames of a boot, so a node may number its hello too.
+  seq: seq.optional(),
   node: z.string().min(1).max(100),
   firmware: z.string().max(200),
   channels: z.number().int().min(0).max(9999),

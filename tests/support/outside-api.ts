@@ -1,11 +1,17 @@
 /** A program that knows only the interface's description: signs in and calls it as a browser or a script would. */
+export type Body = Record<string, unknown>;
 export interface Answer {
   status: number;
   headers: Headers;
-  // The interface's own contract is what the tests look at, so bodies stay open here.
   body: Body;
 }
-export type Body = { [key: string]: Body } & Body[] & string & number & boolean;
+
+/** A list inside a body. */
+export function listOf(body: Body, key = 'items'): Body[] {
+  const list = body[key];
+  if (!Array.isArray(list)) throw new Error(`${key} is no list: ${JSON.stringify(body)}`);
+  return list as Body[];
+}
 
 export class OutsideApi {
   private cookie = '';
@@ -48,7 +54,7 @@ export class OutsideApi {
     return {
       status: response.status,
       headers: response.headers,
-      body: (json ? JSON.parse(text) : text) as Body,
+      body: (json ? JSON.parse(text) : { text }) as Body,
     };
   }
 
