@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { Text } from './common';
+import { PageQuery, Text } from './common';
 
 export const ALARM_KINDS = [
   'point-silent',
@@ -26,7 +26,6 @@ export type AlarmKind = (typeof ALARM_KINDS)[number];
 
 export const AlarmQuery = z.strictObject({
   state: z.enum(['active', 'history', 'all']).default('active'),
-  limit: z.coerce.number().int().min(1).max(500).default(100),
-  cursor: z.string().max(400).optional(),
+  ...PageQuery.shape,
 });
 export const AlarmAcknowledge = z.strictObject({ note: Text.optional() });

@@ -3,14 +3,20 @@ import { z } from 'zod';
 /** A key names a point, node or channel inside its house and goes on the wire, so it keeps SenML's safe characters. */
 export const Key = z
   .string()
-  .regex(/^[A-Za-z0-9][A-Za-z0-9._-]{0,62}$/, 'Use letters, digits, dot, dash or underscore; begin with a letter or digit; 63 at most.');
+  .regex(
+    /^[A-Za-z0-9][A-Za-z0-9._-]{0,62}$/,
+    'Use letters, digits, dot, dash or underscore; begin with a letter or digit; 63 at most.',
+  );
 
 export const Name = z.string().trim().min(1, 'Give a name.').max(120, 'At most 120 characters.');
 export const Text = z.string().trim().max(4000, 'At most 4000 characters.');
 export const Why = z.string().trim().min(1, 'Say why in a few words.').max(500, 'At most 500 characters.');
 
 export const finite = (least: number, most: number, unit: string) =>
-  z.number({ error: `Give a number in ${unit}.` }).min(least, `At least ${least} ${unit}.`).max(most, `At most ${most} ${unit}.`);
+  z
+    .number({ error: `Give a number in ${unit}.` })
+    .min(least, `At least ${least} ${unit}.`)
+    .max(most, `At most ${most} ${unit}.`);
 
 export const wholeSeconds = (least: number, most: number) =>
   z
@@ -48,14 +54,51 @@ export const DayTime = z
 export const MonthDay = z
   .string()
   .regex(/^(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])$/, 'Give month and day as MM-DD.')
-  .refine((value) => Number(value.slice(3)) <= ([31, 29, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31][Number(value.slice(0, 2)) - 1] ?? 0), 'That month has no such day.');
+  .refine(
+    (value) =>
+      Number(value.slice(3)) <=
+      ([31, 29, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31][Number(value.slice(0, 2)) - 1] ?? 0),
+    'That month has no such day.',
+  );
 
 export const Uuid = z.uuid();
 
-export const Instant = z.iso.datetime({ offset: true, error: 'Give an ISO 8601 time with offset.' });
+export const Instant = z.iso
+  .datetime({ offset: true, error: 'Give an ISO 8601 time with offset.' })
+  .refine((value) => value >= '1970' && value < '2200', 'Give a time between 1970 and 2200.');
+
+/** Where a list goes on: the last row given, by its instant where the list is in order of time. */
+export interface Place {
+  id: string;
+  at?: number | undefined;
+}
+const PlaceText = z.strictObject({
+  id: z.string().max(80),
+  at: z.number().int().min(0).max(8e15).optional(),
+});
+
+export function writeCursor(place: Place): string {
+  return btoa(JSON.stringify(place)).replaceAll('+', '-').replaceAll('/', '_').replaceAll('=', '');
+}
+
+export const Cursor = z
+  .string()
+  .max(400)
+  .transform((text, context): Place => {
+    try {
+      return PlaceText.parse(JSON.parse(atob(text.replaceAll('-', '+').replaceAll('_', '/'))));
+    } catch {
+      context.addIssue({ code: 'custom', message: 'Give the cursor as it stood in the page before.' });
+      return z.NEVER;
+    }
+  });
 
 /** Paging of every list. */
 export const PageQuery = z.strictObject({
-  limit: z.coerce.number().int().min(1).max(500).default(100),
-  cursor: z.string().max(400).optional(),
+  limit: z.coerce.number({ error: 'Give a whole number.' }).int().min(1).max(500).default(100),
+  cursor: Cursor.optional(),
 });
+export type PageQuery = z.infer<typeof PageQuery>;
+
+export const listOf = <T extends z.ZodType>(item: T) =>
+  z.strictObject({ items: z.array(item), next: z.string().nullable() });

@@ -23,7 +23,12 @@ export type ConditionTree = { all: ConditionNode[] } | { any: ConditionNode[] } 
 
 const ConditionLeaf = z
   .strictObject({
-    fact: z.string().regex(/^(time\.(hour|month|weekday|sunUp)|[A-Za-z0-9][A-Za-z0-9._-]{0,62})$/, 'Name a point by its key, or time.hour, time.month, time.weekday, time.sunUp.'),
+    fact: z
+      .string()
+      .regex(
+        /^(time\.(hour|month|weekday|sunUp)|[A-Za-z0-9][A-Za-z0-9._-]{0,62})$/,
+        'Name a point by its key, or time.hour, time.month, time.weekday, time.sunUp.',
+      ),
     operator: z.enum(OPERATORS),
     value: z.union([z.number(), z.boolean(), z.array(z.number()).min(1).max(50)]),
   })
@@ -33,13 +38,15 @@ const ConditionLeaf = z
   });
 
 const Node: z.ZodType<ConditionNode> = z.lazy(() => z.union([ConditionLeaf, ConditionTree]));
-export const ConditionTree: z.ZodType<ConditionTree> = z.lazy(() =>
-  z.union([
-    z.strictObject({ all: z.array(Node).min(1).max(50) }),
-    z.strictObject({ any: z.array(Node).min(1).max(50) }),
-    z.strictObject({ not: Node }),
-  ]),
-).meta({ id: 'ConditionTree' });
+export const ConditionTree: z.ZodType<ConditionTree> = z
+  .lazy(() =>
+    z.union([
+      z.strictObject({ all: z.array(Node).min(1).max(50) }),
+      z.strictObject({ any: z.array(Node).min(1).max(50) }),
+      z.strictObject({ not: Node }),
+    ]),
+  )
+  .meta({ id: 'ConditionTree' });
 
 export const BandPeriod = z
   .strictObject({
@@ -88,7 +95,10 @@ export const RuleBody = z.strictObject({
     .array(BandPeriod)
     .min(1, 'A rule needs a band.')
     .max(12)
-    .refine((band) => new Set(band.map((period) => period.from)).size === band.length, 'Two periods begin at the same time.'),
+    .refine(
+      (band) => new Set(band.map((period) => period.from)).size === band.length,
+      'Two periods begin at the same time.',
+    ),
   rest: Rest.optional(),
   only: ConditionTree.optional(),
   season: z.strictObject({ from: MonthDay, to: MonthDay }).optional(),

@@ -25,9 +25,24 @@ export const POINT_ROLES = [
 ] as const;
 export type PointRole = (typeof POINT_ROLES)[number];
 
-export const UNITS = ['Cel', 'K', '%RH', '/', '%', 'W/m2', 'ppm', 'Pa', 'm/s', 'W', 'Wh', 'V', 'A', 'm3/s'] as const;
+export const UNITS = [
+  'Cel',
+  'K',
+  '%RH',
+  '/',
+  '%',
+  'W/m2',
+  'ppm',
+  'Pa',
+  'm/s',
+  'W',
+  'Wh',
+  'V',
+  'A',
+  'm3/s',
+] as const;
 
-const houseFields = {
+export const houseFields = {
   name: Name,
   zone: Zone,
   latitude: finite(-90, 90, '°'),
@@ -45,7 +60,7 @@ export const HouseCreate = z.strictObject({
 export const HouseAmend = z.strictObject(houseFields).partial();
 
 export const NODE_KINDS = ['socket', 'http', 'modbus', 'mqtt'] as const;
-const nodeFields = {
+export const nodeFields = {
   key: Key,
   kind: z.enum(NODE_KINDS),
   reportEvery: wholeSeconds(1, 3600),
@@ -71,7 +86,7 @@ export const DERIVED = [
   'loop-heat',
 ] as const;
 
-const pointFields = {
+export const pointFields = {
   key: Key,
   node: Key.nullable(),
   name: Name,
@@ -107,9 +122,9 @@ export const PointCreate = z
     sensor: pointFields.sensor.default(null),
     derived: pointFields.derived.default(null),
   })
-  .refine((point) => (point.node === null) === (point.derived !== null), {
+  .refine((point) => point.node === null || point.derived === null, {
     path: ['node'],
-    error: 'A point is measured by a node, or derived from other points: give one of the two.',
+    error: 'A point is measured by a node, or derived from other points, not both.',
   })
   .refine((point) => point.min === null || point.max === null || point.min < point.max, {
     path: ['max'],
@@ -118,7 +133,7 @@ export const PointCreate = z
 export const PointAmend = z.strictObject(pointFields).partial();
 
 export const SOURCE_KINDS = ['heap', 'ground', 'heater', 'other'] as const;
-const sourceFields = {
+export const sourceFields = {
   name: Name,
   kind: z.enum(SOURCE_KINDS),
   corePoint: Key.nullable(),
@@ -151,7 +166,7 @@ const Load = z.strictObject({
   supply: z.enum(['ac', 'dc']).optional(),
   contactAmps: finite(0, 200, 'A').optional(),
 });
-const channelFields = {
+export const channelFields = {
   number: z.number().int().min(1).max(999),
   node: Key,
   relay: z.number().int().min(1).max(64),

@@ -1,0 +1,91 @@
+import 'server-only';
+import { and, asc, eq, isNull, sql } from 'drizzle-orm';
+import { v7 as uuid } from 'uuid';
+import type { z } from 'zod';
+import type { Holding } from '@/db/client';
+import { house } from '@/db/schema/yard';
+import type { HouseAmend, HouseCreate } from '@/lib/schema/yard';
+import type { House } from '@/lib/schema/yard-view';
+import { touchPlan } from './plan';
+import { isId } from './reference';
+import { freeSlug } from './slug';
+
+type Row = typeof house.$inferSelect;
+
+function toHouse(row: Row): House {
+  const { id, revision, slug, name, zone, latitude, longitude, altitude, frostLimit, frostAlarm } = row;
+  return { id, revision, slug, name, zone, latitude, longitude, altitude, frostLimit, frostAlarm };
+}
+
+export async function listHouses(holding: Holding): Promise<House[]> {
+  const rows = await holding.db
+    .select()
+    .from(house)
+    .where(and(eq(house.holdingId, holding.id), isNull(house.removedAt)))
+    .orderBy(asc(house.id));
+  return rows.map(toHouse);
+}
+
+/** By id or slug. */
+export async function findHouse(holding: Holding, ref: string): Promise<House | null> {
+  const rows = await holding.db
+    .select()
+    .from(house)
+    .where(
+      and(
+        eq(house.holdingId, holding.id),
+        isNull(house.removedAt),
+        isId(ref) ? eq(house.id, ref) : eq(house.slug, ref),
+      ),
+    );
+  return rows[0] === undefined ? null : toHouse(rows[0]);
+}
+
+async function takenSlugs(holding: Holding): Promise<Set<string>> {
+  const rows = await holding.db
+    .select({ slug: house.slug })
+    .from(house)
+    .where(and(eq(house.holdingId, holding.id), isNull(house.removedAt)));
+  return new Set(rows.map((row) => row.slug));
+}
+
+export async function createHouse(holding: Holding, given: z.infer<typeof HouseCreate>): Promise<House> {
+  const slug = freeSlug(given.name, await takenSlugs(holding));
+  const id = uuid();
+  const rows = await holding.db
+    .insert(house)
+    .values({ ...given, id, holdingId: holding.id, slug })
+    .returning();
+  await touchPlan(holding, id);
+  return one(rows);
+}
+
+/** The slug stays when the name changes: addresses that people kept go on working. */
+export async function amendHouse(
+  holding: Holding,
+  id: string,
+  given: z.infer<typeof HouseAmend>,
+): Promise<House> {
+  const rows = await holding.db
+    .update(house)
+    .set({ ...given, revision: sql`${house.revision} + 1` })
+    .where(and(eq(house.holdingId, holding.id), eq(house.id, id)))
+    .returning();
+  await touchPlan(holding, id);
+  return one(rows);
+}
+
+/** Taken out of use: its record stays, its relays fall to their safe states when the worker sees that it is gone. */
+export async function removeHouse(holding: Holding, id: string, now: Date): Promise<void> {
+  await holding.db
+    .update(house)
+    .set({ removedAt: now, revision: sql`${house.revision} + 1` })
+    .where(and(eq(house.holdingId, holding.id), eq(house.id, id)));
+  await touchPlan(holding, id);
+}
+
+function one(rows: Row[]): House {
+  const row = rows[0];
+  if (row === undefined) throw new Error('the house was there a moment ago');
+  return toHouse(row);
+}
