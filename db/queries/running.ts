@@ -1,0 +1,220 @@
+/** What control did and how it stands: written by the worker in batches, read by pages and the interface. */
+import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm';
+import type { Db, Holding } from '@/db/client';
+import { controlMemory, decision, relayReport, switching } from '@/db/schema/running';
+import type { Explanation, State } from '@/lib/control/types';
+import type { HouseState } from '@/lib/live/frames';
+
+export type SwitchingRow = typeof switching.$inferInsert;
+export type DecisionRow = typeof decision.$inferInsert;
+export type RelayReportRow = typeof relayReport.$inferInsert;
+export type MemoryRow = typeof controlMemory.$inferInsert;
+
+/** Rows of any number of houses and holdings, in the order in which they came to be. */
+export interface RunningBatch {
+  switchings: SwitchingRow[];
+  decisions: DecisionRow[];
+  reports: RelayReportRow[];
+  /** One a house at most: the newest. */
+  memories: MemoryRow[];
+}
+
+/**
+ * Keeps a batch in one transaction, so that a memory never knows of a switching that is not stored, nor the other way
+ * round. Safe to repeat: what is there already stays.
+ */
+export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
+  await db.transaction(async (tx) => {
+    if (batch.switchings.length > 0)
+      await tx.insert(switching).values(batch.switchings).onConflictDoNothing();
+    if (batch.decisions.length > 0) await tx.insert(decision).values(batch.decisions).onConflictDoNothing();
+    if (batch.reports.length > 0) await tx.insert(relayReport).values(batch.reports).onConflictDoNothing();
+    for (const row of batch.memories) {
+      const { holdingId: _holding, houseId: _house, ...changed } = row;
+      await tx
+        .insert(controlMemory)
+        .values(row)
+        .onConflictDoUpdate({ target: [controlMemory.holdingId, controlMemory.houseId], set: changed });
+    }
+  });
+}
+
+export interface KeptMemory {
+  memory: Record<string, unknown> | null;
+  memoryAt: number | null;
+  taken: number;
+  planRevision: number;
+  state: HouseState | null;
+  stateAt: number | null;
+}
+
+export async function readMemory(holding: Holding, houseId: string): Promise<KeptMemory | null> {
+  const [row] = await holding.db
+    .select()
+    .from(controlMemory)
+    .where(and(eq(controlMemory.holdingId, holding.id), eq(controlMemory.houseId, houseId)));
+  if (row === undefined) return null;
+  return {
+    memory: row.memory,
+    memoryAt: row.memoryAt?.getTime() ?? null,
+    taken: row.taken,
+    planRevision: row.planRevision,
+    // Written by the worker in this very shape, and by nobody else.
+    state: row.state as HouseState | null,
+    stateAt: row.stateAt?.getTime() ?? null,
+  };
+}
+
+export interface Switching {
+  id: string;
+  channelId: string;
+  at: number;
+  from: State;
+  to: State;
+  claim: string;
+  number: number | null;
+  ruleId: string | null;
+  version: number | null;
+  explanation: Explanation;
+}
+
+/** Where a list was left: the time and id of its last item. */
+export interface SwitchingCursor {
+  at: number;
+  id: string;
+}
+
+/** Newest first. */
+export async function listSwitchings(
+  holding: Holding,
+  houseId: string,
+  ask: { from?: number; to?: number; channelIds?: string[]; before?: SwitchingCursor; limit: number },
+): Promise<Switching[]> {
+  const rows = await holding.db
+    .select()
+    .from(switching)
+    .where(
+      and(
+        eq(switching.holdingId, holding.id),
+        eq(switching.houseId, houseId),
+        ask.from === undefined ? undefined : gte(switching.at, new Date(ask.from)),
+        ask.to === undefined ? undefined : lt(switching.at, new Date(ask.to)),
+        ask.channelIds === undefined ? undefined : inArray(switching.channelId, ask.channelIds),
+        ask.before === undefined
+          ? undefined
+          : or(
+              lt(switching.at, new Date(ask.before.at)),
+              and(eq(switching.at, new Date(ask.before.at)), lt(switching.id, ask.before.id)),
+            ),
+      ),
+    )
+    .orderBy(desc(switching.at), desc(switching.id))
+    .limit(ask.limit);
+  return rows.map(asSwitching);
+}
+
+/** The switching that a channel stood under at a time: the newest at or before it. */
+export async function switchingAt(
+  holding: Holding,
+  channelId: string,
+  at: number,
+): Promise<Switching | null> {
+  const [row] = await holding.db
+    .select()
+    .from(switching)
+    .where(
+      and(
+        eq(switching.holdingId, holding.id),
+        eq(switching.channelId, channelId),
+        lte(switching.at, new Date(at)),
+      ),
+    )
+    .orderBy(desc(switching.at), desc(switching.id))
+    .limit(1);
+  return row === undefined ? null : asSwitching(row);
+}
+
+function asSwitching(row: typeof switching.$inferSelect): Switching {
+  const { id, channelId, from, to, claim, number, ruleId, version, explanation } = row;
+  return { id, channelId, at: row.at.getTime(), from, to, claim, number, ruleId, version, explanation };
+}
+
+export interface Decision {
+  channelId: string;
+  at: number;
+  state: State;
+  claim: string;
+}
+
+/** Decisions from `from` to before `to`, ascending, led by the one of each channel that stood at `from`. */
+export async function listDecisions(
+  holding: Holding,
+  channelIds: readonly string[],
+  from: number,
+  to: number,
+): Promise<Decision[]> {
+  if (channelIds.length === 0) return [];
+  const mine = and(eq(decision.holdingId, holding.id), inArray(decision.channelId, [...channelIds]));
+  const standing = await holding.db
+    .selectDistinctOn([decision.channelId])
+    .from(decision)
+    .where(and(mine, lt(decision.at, new Date(from))))
+    .orderBy(decision.channelId, desc(decision.at), desc(decision.id));
+  const during = await holding.db
+    .select()
+    .from(decision)
+    .where(and(mine, gte(decision.at, new Date(from)), lt(decision.at, new Date(to))))
+    .orderBy(asc(decision.at), asc(decision.id));
+  return [...standing, ...during].map((row) => ({
+    channelId: row.channelId,
+    at: row.at.getTime(),
+    state: row.state,
+    claim: row.claim,
+  }));
+}
+
+export interface RelayReport {
+  channelId: string;
+  at: number;
+  state: State;
+  number: number;
+}
+
+/** What relays said of their loads, ascending, led by the report of each channel that stood at `from`. */
+export async function listRelayReports(
+  holding: Holding,
+  channelIds: readonly string[],
+  from: number,
+  to: number,
+): Promise<RelayReport[]> {
+  if (channelIds.length === 0) return [];
+  const mine = and(eq(relayReport.holdingId, holding.id), inArray(relayReport.channelId, [...channelIds]));
+  const standing = await holding.db
+    .selectDistinctOn([relayReport.channelId])
+    .from(relayReport)
+    .where(and(mine, lt(relayReport.at, new Date(from))))
+    .orderBy(relayReport.channelId, desc(relayReport.at), desc(relayReport.id));
+  const during = await holding.db
+    .select()
+    .from(relayReport)
+    .where(and(mine, gte(relayReport.at, new Date(from)), lt(relayReport.at, new Date(to))))
+    .orderBy(asc(relayReport.at), asc(relayReport.id));
+  return [...standing, ...during].map((row) => ({
+    channelId: row.channelId,
+    at: row.at.getTime(),
+    state: row.state,
+    number: row.number,
+  }));
+}
+
+/** What the link last knew of each node, for the wiring page and for a restarted worker. */
+export async function writeNodeStatus(
+  db: Db,
+  nodes: readonly { id: string; holdingId: string; lastHeardAt: number; status: Record<string, unknown> }[],
+): Promise<void> {
+  for (const node of nodes) {
+    await db.execute(sql`
+      update node set status = ${JSON.stringify(node.status)}::jsonb, last_heard_at = ${new Date(node.lastHeardAt)}
+      where holding_id = ${node.holdingId} and id = ${node.id}`);
+  }
+}
