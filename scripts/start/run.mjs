@@ -1,6 +1,8 @@
 // `npm start` from packages to the door; each step is skipped when it is done already.
-import { spawnSync } from 'node:child_process';
+import { spawn } from 'node:child_process';
+import { once } from 'node:events';
 import path from 'node:path';
+import { createInterface } from 'node:readline';
 import { ensurePackages } from '../packages.mjs';
 import { DOOR, doorArguments, partsEnvironment } from '../parts.mjs';
 import { BUILD, ROOT } from '../places.mjs';
@@ -34,7 +36,7 @@ export async function start(env = process.env, usual = {}) {
   const ports = { webPort, workerPort, mailPort };
   const parts = { ...settings, ...ports, ...secrets, databaseUrl: database.url, publicUrl };
   Object.assign(process.env, partsEnvironment(parts));
-  seed(secrets.password);
+  await seed(secrets.password, usual.seedArguments ?? []);
   await build();
 
   say('starting web, worker' + (settings.yard ? ' and yard' : ''));
@@ -90,15 +92,25 @@ async function warnIfAboveRowSecurity(url) {
   }
 }
 
-function seed(password) {
-  const ended = spawnSync(process.execPath, ['--enable-source-maps', path.join(BUILD, 'seed.mjs')], {
-    cwd: ROOT,
-    stdio: ['ignore', 'inherit', 'inherit'],
-    env: { ...process.env, DEMO_PASSWORD: password },
-  });
-  if (ended.status !== 0) {
-    throw new Trouble('The demo holdings could not be made; the reason is above.', ended.status ?? 1);
+/** The seed says what it does; where all is there, it says nothing. */
+async function seed(password, seedArguments) {
+  const child = spawn(
+    process.execPath,
+    ['--enable-source-maps', path.join(BUILD, 'seed.mjs'), ...seedArguments],
+    {
+      cwd: ROOT,
+      stdio: ['ignore', 'pipe', 'inherit'],
+      env: { ...process.env, DEMO_PASSWORD: password },
+    },
+  );
+  let quiet = true;
+  for await (const line of createInterface({ input: child.stdout })) {
+    quiet = false;
+    say(line);
   }
+  const code = child.exitCode ?? (await once(child, 'exit'))[0];
+  if (code !== 0) throw new Trouble('The demo holdings could not be made; the reason is above.', code ?? 1);
+  if (quiet) say('demo holdings … already there');
 }
 
 function signIns(password) {

@@ -41,7 +41,7 @@ async function makeTemplate(): Promise<Cluster> {
   // DATABASE_URL is left aside on purpose: tests drop databases, which nobody wants on a server that is in use
   const { url, ownerUrl } = await ensurePostgres({
     dataDir: TEST_DATA,
-    databaseUrl: undefined,
+    databaseUrl: '',
     fast: true,
     port: TEST_PORT,
   });

@@ -1,0 +1,113 @@
+#!/usr/bin/env node
+// npm test: what the tests need, then format, lint, types, build and all tests. The last line counts them.
+//   npm test -- tests/control        only these tests, without the four checks
+import { spawn } from 'node:child_process';
+import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
+import path from 'node:path';
+import { ensurePackages } from './packages.mjs';
+import { BUILD, ROOT } from './places.mjs';
+import { giveUp, say } from './say.mjs';
+import { checkNode } from './start/settings.mjs';
+
+const RESULTS = path.join(BUILD, 'tests.json');
+const bin = (...parts) => path.join(ROOT, 'node_modules', ...parts);
+
+async function main() {
+  checkNode();
+  process.chdir(ROOT);
+  ensurePackages();
+  const cluster = await testCluster();
+  const { ensureChromium } = await import('./chromium.mjs');
+  say(`browser for the tests: ${ensureChromium()}`);
+
+  const chosen = process.argv.slice(2);
+  const checks = chosen.length === 0 ? await runChecks() : [];
+  // without a build there are no pages to test; the failed check has been counted
+  const projects = checks.includes('build') ? ['--project', 'pure', '--project', 'database'] : [];
+  if (projects.length > 0) say('the tests of pages and in the browser are left out: there is no build');
+  const tests = await runTests([...projects, ...chosen]);
+  await cluster.release();
+
+  const passed = tests.passed + (chosen.length === 0 ? CHECKS.length - checks.length : 0);
+  const failed = tests.failed + checks.length;
+  for (const name of checks) console.log(`failed: ${name}`);
+  console.log(`${passed} passed, ${failed} failed`);
+  process.exitCode = failed === 0 ? 0 : 1;
+}
+
+/** Looked after here once, so that its absence is one sentence and not one for each test file. */
+async function testCluster() {
+  const { ensurePostgres, stopPostgres } = await import('./pg.mjs');
+  const dataDir = path.join(ROOT, '.data-test');
+  // DATABASE_URL is left aside on purpose: tests drop databases
+  const { started, adminUrl } = await ensurePostgres({ dataDir, databaseUrl: '', fast: true, port: 54_330 });
+  say(started ? 'PostgreSQL for the tests started' : 'PostgreSQL for the tests … already there');
+  return {
+    release: async () => {
+      if (started && !(await hasOtherUsers(adminUrl))) stopPostgres({ dataDir });
+    },
+  };
+}
+
+async function hasOtherUsers(adminUrl) {
+  const { default: pg } = await import('pg');
+  const client = new pg.Client({ connectionString: adminUrl });
+  await client.connect();
+  try {
+    const sql =
+      "select 1 from pg_stat_activity where backend_type = 'client backend' and pid <> pg_backend_pid()";
+    return (await client.query(sql)).rowCount > 0;
+  } finally {
+    await client.end();
+  }
+}
+
+const CHECKS = [
+  {
+    name: 'format',
+    command: [bin('prettier', 'bin', 'prettier.cjs'), '--check', '--log-level', 'warn', '.'],
+  },
+  { name: 'lint', command: [bin('eslint', 'bin', 'eslint.js'), '.', '--max-warnings', '0'] },
+  { name: 'build', command: [path.join(ROOT, 'scripts', 'build.mjs')] },
+  // after the build, which writes the types of the routes
+  { name: 'types', command: [bin('typescript', 'bin', 'tsc'), '--noEmit'] },
+];
+
+/** @returns the names of the checks that failed */
+async function runChecks() {
+  const failed = [];
+  for (const { name, command } of CHECKS) {
+    say(`check: ${name}`);
+    if ((await run(command)) !== 0) {
+      failed.push(name);
+      say(`check: ${name} FAILED`);
+    }
+  }
+  return failed;
+}
+
+async function runTests(more) {
+  say('tests');
+  mkdirSync(BUILD, { recursive: true });
+  rmSync(RESULTS, { force: true });
+  const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`];
+  const code = await run([bin('vitest', 'vitest.mjs'), 'run', ...reporters, ...more]);
+  if (!existsSync(RESULTS)) return { passed: 0, failed: 1 };
+  const results = JSON.parse(readFileSync(RESULTS, 'utf8'));
+  // a file that could not be read at all has no tests to count, but it is a failure
+  const unread = results.testResults.filter(
+    (file) => file.status === 'failed' && file.assertionResults.length === 0,
+  );
+  const failed = results.numFailedTests + unread.length;
+  // an error outside any test (a broken set-up, an unhandled rejection) fails the run as well
+  return { passed: results.numPassedTests, failed: failed === 0 && code !== 0 ? 1 : failed };
+}
+
+function run(args) {
+  return new Promise((resolve) => {
+    const child = spawn(process.execPath, args, { cwd: ROOT, stdio: ['ignore', 'inherit', 'inherit'] });
+    child.once('close', (code) => resolve(code ?? 1));
+  });
+}
+
+main().catch(giveUp);
