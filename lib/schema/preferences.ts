@@ -3,7 +3,7 @@ import { USUAL, type Preferences } from '@/lib/units/preferences';
 
 const fields = {
   temperature: z.enum(['C', 'F']),
-  clock: z.enum(['24', '12']),
+  clock: z.union([z.literal(24), z.literal(12)]),
   flow: z.enum(['L/s', 'cfm']),
   length: z.enum(['m', 'ft']),
 };

@@ -1,107 +1,132 @@
 /**
- * Figures as people read them: their unit, a true minus sign, the decimals that mean something. SI comes in; only the
- * text carries the reader's unit.
+ * Figures as they are read: unit always beside, true minus sign, one rounding for one kind of thing wherever it stands,
+ * so that a sentence, a table and a chart say the same. Null is "not known yet", never a dash that could be a minus.
  */
-import { fahrenheit, fahrenheitDifference } from './conversion';
+import { cfm, fahrenheit, fahrenheitDifference, feet } from './conversion';
+import type { Preferences } from './preferences';
 
-/** What a reader prefers; everything inside stays SI and 24 h. */
-export interface Reader {
-  temperature: 'C' | 'F';
-  clock: '24' | '12';
-}
-
-/** Narrow no-break space would be finer typography, but it is missing in the mono face; a no-break space is in all three. */
+export const UNKNOWN = 'not known yet';
+/** No-break: a figure and its unit stay on one line. A narrow one would be finer, but the mono face lacks it. */
 const space = '\u00a0';
 
 /**
- * A number with a true minus sign; `least` decimals are always shown, more up to `most` only where they are not zero.
- * @example figure(-12.25, 1) === '−12.3' @example figure(43, 0, 1) === '43'
+ * Rounded to `places`, halves away from zero as people round, with a true minus; never "−0.0".
+ * @example decimal(-12.25, 1) === '−12.3'
  */
-export function figure(value: number, least: number, most = least): string {
-  const factor = 10 ** most;
-  // halves away from zero, as people round, and no "−0.0"
-  const rounded = (Math.sign(value) * Math.round(Math.abs(value) * factor + 1e-9)) / factor;
-  let text = Math.abs(rounded).toFixed(most);
-  while (most > least && text.endsWith('0') && text.includes('.')) {
-    text = text.slice(0, -1);
-    most -= 1;
-  }
-  if (text.endsWith('.')) text = text.slice(0, -1);
-  return rounded < 0 ? `−${text}` : text;
+export function decimal(value: number, places: number): string {
+  const factor = 10 ** places;
+  const rounded = Math.round(Math.abs(value) * factor + 1e-9) / factor;
+  const text = rounded.toFixed(places);
+  return value < 0 && rounded !== 0 ? `−${text}` : text;
 }
 
-export function temperatureUnit(reader: Reader): string {
-  return reader.temperature === 'F' ? '°F' : '°C';
+/** The degree sign with its letter: what stands in a field or a table head. */
+export function degrees(preferences: Preferences): '°C' | '°F' {
+  return preferences.temperature === 'F' ? '°F' : '°C';
 }
 
-/** °C as the reader's number, without the unit. */
-export function temperatureFigure(celsius: number, reader: Reader, least = 1, most = least): string {
-  return figure(reader.temperature === 'F' ? fahrenheit(celsius) : celsius, least, most);
+/** A temperature without its unit, for a table whose head has it and for a chart's axis. */
+export function temperatureFigure(celsius: number, preferences: Preferences, places = 1): string {
+  return decimal(preferences.temperature === 'F' ? fahrenheit(celsius) : celsius, places);
 }
 
-/** @example temperature(4, {temperature: 'C', clock: '24'}) === '4.0 °C' */
-export function temperature(celsius: number, reader: Reader, least = 1, most = least): string {
-  return `${temperatureFigure(celsius, reader, least, most)}${space}${temperatureUnit(reader)}`;
+/** @example temperature(-12.34, USUAL) === '−12.3 °C' */
+export function temperature(celsius: number | null, preferences: Preferences, places = 1): string {
+  if (celsius === null) return UNKNOWN;
+  return `${temperatureFigure(celsius, preferences, places)}${space}${degrees(preferences)}`;
 }
 
-/** A difference in K, as degrees of the reader. @example difference(-0.5, f) === '−0.9 °F' */
-export function difference(kelvin: number, reader: Reader, least = 1, most = least): string {
-  const value = reader.temperature === 'F' ? fahrenheitDifference(kelvin) : kelvin;
-  return `${figure(value, least, most)}${space}${temperatureUnit(reader)}`;
+/** A difference of temperatures in the reader's degrees. @example difference(3, USUAL) === '3.0 °C' */
+export function difference(kelvin: number | null, preferences: Preferences, places = 1): string {
+  if (kelvin === null) return UNKNOWN;
+  const shown = preferences.temperature === 'F' ? fahrenheitDifference(kelvin) : kelvin;
+  return `${decimal(shown, places)}${space}${degrees(preferences)}`;
+}
+
+/** @example warmer(3, USUAL) === '3.0 °C warmer' */
+export function warmer(kelvin: number | null, preferences: Preferences): string {
+  if (kelvin === null) return UNKNOWN;
+  const amount = difference(Math.abs(kelvin), preferences);
+  if (Number.parseFloat(amount) === 0) return 'just as warm';
+  return `${amount} ${kelvin < 0 ? 'colder' : 'warmer'}`;
+}
+
+/** A difference with its sign, for a table. @example change(0.2, USUAL) === '+0.2 °C' */
+export function change(kelvin: number | null, preferences: Preferences): string {
+  if (kelvin === null) return UNKNOWN;
+  const text = difference(kelvin, preferences);
+  return kelvin > 0 && Number.parseFloat(text) !== 0 ? `+${text}` : text;
+}
+
+/** Whole watts under 10 kW. @example power(714.3) === '714 W' */
+export function power(watts: number | null): string {
+  if (watts === null) return UNKNOWN;
+  return Math.abs(watts) < 10_000 ? `${decimal(watts, 0)}${space}W` : `${decimal(watts / 1000, 1)}${space}kW`;
 }
 
 /**
- * Seconds as people say them: seconds under 2 min where they fill no minute, minutes under 2 h, then hours, then days.
- * @example duration(1500) === '25 min' @example duration(22200) === '6 h 10 min'
+ * Heat takes one place, a fan's electricity three. `sd` only where the figure is an estimate.
+ * @example energy(2.71, 1, 0.4) === '2.7 ± 0.4 kWh'
  */
-export function duration(seconds: number): string {
-  const whole = Math.round(seconds);
-  if (whole === 0 || (whole < 120 && whole % 60 !== 0)) return `${whole}${space}s`;
-  if (whole < 7200) {
-    const minutes = `${Math.floor(whole / 60)}${space}min`;
-    return whole % 60 === 0 ? minutes : `${minutes} ${whole % 60}${space}s`;
-  }
-  const minutes = Math.round(whole / 60);
-  if (minutes >= 3 * 1440 && minutes % 1440 === 0) return `${minutes / 1440}${space}days`;
-  const hours = `${Math.floor(minutes / 60)}${space}h`;
-  return minutes % 60 === 0 ? hours : `${hours} ${minutes % 60}${space}min`;
+export function energy(kWh: number | null, places = 1, sd?: number | null): string {
+  if (kWh === null) return UNKNOWN;
+  const give = sd === undefined || sd === null ? '' : `${space}±${space}${decimal(sd, places)}`;
+  return `${decimal(kWh, places)}${give}${space}kWh`;
 }
 
-/** `HH:MM` by the reader's clock. @example clockTime('18:05', {…, clock: '12'}) === '6:05 pm' */
-export function clockTime(time: string, reader: Reader): string {
-  if (reader.clock === '24') return time;
-  const hour = Number(time.slice(0, 2));
-  return `${hour % 12 === 0 ? 12 : hour % 12}:${time.slice(3, 5)}${space}${hour < 12 ? 'am' : 'pm'}`;
+/** @example share(0.308) === '31 %' */
+export function share(part: number | null, places = 0): string {
+  return part === null ? UNKNOWN : `${decimal(part * 100, places)}${space}%`;
 }
 
-/**
- * A reading in its point's unit: degrees by the reader, ratios in per cent, others as they are.
- * @example reading(0.84, '/', reader) === '84 %'
- */
-export function reading(value: number, unit: string, reader: Reader): string {
+export function humidity(percent: number | null): string {
+  return percent === null ? UNKNOWN : `${decimal(percent, 0)}${space}%${space}RH`;
+}
+
+/** Air flow, from m³/s. */
+export function flow(cubicMetresASecond: number | null, preferences: Preferences): string {
+  if (cubicMetresASecond === null) return UNKNOWN;
+  return preferences.flow === 'cfm'
+    ? `${decimal(cfm(cubicMetresASecond), 0)}${space}cfm`
+    : `${decimal(cubicMetresASecond * 1000, 1)}${space}L/s`;
+}
+
+export function length(metresLong: number | null, preferences: Preferences): string {
+  if (metresLong === null) return UNKNOWN;
+  return preferences.length === 'ft'
+    ? `${decimal(feet(metresLong), 1)}${space}ft`
+    : `${decimal(metresLong, 2)}${space}m`;
+}
+
+/** A value of a point in the unit it is kept in (SenML's name of it). A ratio, `/`, reads in per cent. */
+export function pointValue(value: number | null, unit: string, preferences: Preferences): string {
+  if (value === null) return UNKNOWN;
   switch (unit) {
     case 'Cel':
-      return temperature(value, reader);
+      return temperature(value, preferences);
     case 'K':
-      return difference(value, reader);
+      return difference(value, preferences);
     case '%RH':
-      return `${figure(value, 0)}${space}%${space}RH`;
+      return humidity(value);
     case '/':
     case '%':
-      return `${figure(value * 100, 0)}${space}%`;
-    case 'W/m2':
-      return `${figure(value, 0)}${space}W/m²`;
+      return share(value);
+    case 'W':
+      return power(value);
     case 'm3/s':
-      return `${figure(value * 1000, 1)}${space}L/s`;
+      return flow(value, preferences);
+    case 'W/m2':
+      return `${decimal(value, 0)}${space}W/m²`;
+    case 'Wh':
     case 'ppm':
     case 'Pa':
-    case 'W':
-    case 'Wh':
-      return `${figure(value, 0)}${space}${unit}`;
-    case 'V':
-    case 'A':
-      return `${figure(value, 2)}${space}${unit}`;
+      return `${decimal(value, 0)}${space}${unit}`;
     default:
-      return `${figure(value, 1, 2)}${space}${unit}`;
+      return `${decimal(value, 2)}${space}${unit}`;
   }
+}
+
+/** A count with its noun. @example count(1, 'start') === '1 start' */
+export function count(many: number, one: string, more = `${one}s`): string {
+  return `${many}${space}${many === 1 ? one : more}`;
 }

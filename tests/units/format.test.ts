@@ -1,65 +1,69 @@
 import { describe, expect, it } from 'vitest';
-import { clockTime, difference, duration, figure, reading, temperature } from '@/lib/units/format';
+import * as format from '@/lib/units/format';
+import { USUAL, type Preferences } from '@/lib/units/preferences';
 
-const metric = { temperature: 'C', clock: '24' } as const;
-const american = { temperature: 'F', clock: '12' } as const;
+const american: Preferences = { temperature: 'F', clock: 12, flow: 'cfm', length: 'ft' };
 /** Figures and units are kept together by a no-break space. */
 const spaced = (text: string) => text.replaceAll('\u00a0', ' ');
 
-describe('figures', () => {
-  it('carry a true minus sign', () => expect(figure(-12.25, 1)).toBe('−12.3'));
-  it('round halves away from zero, on both sides', () => {
-    expect([figure(0.25, 1), figure(-0.25, 1), figure(1.005, 2)]).toEqual(['0.3', '−0.3', '1.01']);
+describe('a figure', () => {
+  it('carries a true minus sign', () => expect(format.decimal(-12.25, 1)).toBe('−12.3'));
+  it('rounds halves away from zero on both sides', () =>
+    expect([0.25, -0.25, 1.05].map((value) => format.decimal(value, 1))).toEqual(['0.3', '−0.3', '1.1']));
+  it('never reads minus nought', () =>
+    expect([-0.04, -0, 0].map((value) => format.decimal(value, 1))).toEqual(['0.0', '0.0', '0.0']));
+});
+
+describe('a temperature', () => {
+  it('stands with its unit in the reader’s degrees', () => {
+    expect(spaced(format.temperature(-12.34, USUAL))).toBe('−12.3 °C');
+    expect(spaced(format.temperature(4, american))).toBe('39.2 °F');
   });
-  it('never read minus nought', () => expect(figure(-0.04, 1)).toBe('0.0'));
-  it('drop decimals that say nothing where they may', () => {
-    expect([figure(43, 0, 1), figure(43.5, 0, 1), figure(10, 0, 2), figure(100, 0)]).toEqual([
-      '43',
-      '43.5',
-      '10',
-      '100',
-    ]);
+  it('keeps a difference apart from a temperature in °F', () => {
+    expect(spaced(format.difference(10, american))).toBe('18.0 °F');
+    expect(spaced(format.change(-0.2, USUAL))).toBe('−0.2 °C');
+    expect(spaced(format.change(0.2, USUAL))).toBe('+0.2 °C');
+    expect(spaced(format.change(0.01, USUAL))).toBe('0.0 °C');
+  });
+  it('says warmer and colder instead of kelvin', () => {
+    expect(spaced(format.warmer(3, USUAL))).toBe('3.0 °C warmer');
+    expect(spaced(format.warmer(-5, american))).toBe('9.0 °F colder');
+    expect(format.warmer(0.01, USUAL)).toBe('just as warm');
+  });
+  it('that is missing is not known yet', () =>
+    expect([format.temperature(null, USUAL), format.power(null), format.energy(null)]).toEqual(
+      Array(3).fill('not known yet'),
+    ));
+});
+
+describe('heat and power', () => {
+  it('carry ± only where they are an estimate', () => {
+    expect(spaced(format.energy(2.71, 1, 0.4))).toBe('2.7 ± 0.4 kWh');
+    expect(spaced(format.energy(0.0312, 3))).toBe('0.031 kWh');
+  });
+  it('read in watts, then in kilowatts', () =>
+    expect([714.3, 12_345].map(format.power).map(spaced)).toEqual(['714 W', '12.3 kW']));
+  it('share, flow and length follow the reader', () => {
+    expect(spaced(format.share(0.308))).toBe('31 %');
+    expect(spaced(format.flow(0.0425, USUAL))).toBe('42.5 L/s');
+    expect(spaced(format.flow(0.0425, american))).toBe('90 cfm');
+    expect(spaced(format.length(1.2, USUAL))).toBe('1.20 m');
+    expect(spaced(format.length(1.2, american))).toBe('3.9 ft');
   });
 });
 
-describe('units', () => {
-  it('keep a temperature and a difference apart in °F', () => {
-    expect(spaced(temperature(4, american))).toBe('39.2 °F');
-    expect(spaced(difference(-0.5, american))).toBe('−0.9 °F');
-  });
-  it('say kelvin as degrees', () => expect(spaced(difference(3, metric))).toBe('3.0 °C'));
-  it('read a ratio in per cent and humidity as it is', () => {
-    expect(spaced(reading(0.84, '/', metric))).toBe('84 %');
-    expect(spaced(reading(84, '%RH', metric))).toBe('84 % RH');
-  });
-});
+it.each([
+  [4, 'Cel', '4.0 °C'],
+  [3, 'K', '3.0 °C'],
+  [84, '%RH', '84 % RH'],
+  [0.84, '/', '84 %'],
+  [250.4, 'W/m2', '250 W/m²'],
+  [812, 'ppm', '812 ppm'],
+  [0.42, 'A', '0.42 A'],
+  [12.1, 'm/s', '12.10 m/s'],
+])('a point at %d %s reads %s', (value, unit, text) =>
+  expect(spaced(format.pointValue(value, unit, USUAL))).toBe(text),
+);
 
-describe('durations', () => {
-  it.each([
-    [1, '1 s'],
-    [0, '0 s'],
-    [60, '1 min'],
-    [90, '90 s'],
-    [150, '2 min 30 s'],
-    [1500, '25 min'],
-    [3600, '60 min'],
-    [5400, '90 min'],
-    [7200, '2 h'],
-    [9000, '2 h 30 min'],
-    [22200, '6 h 10 min'],
-    [28800, '8 h'],
-    [86400, '24 h'],
-    [259200, '3 days'],
-  ])('%i s reads %s', (seconds, text) => expect(spaced(duration(seconds))).toBe(text));
-});
-
-describe('clock', () => {
-  it('follows the reader', () => {
-    expect(clockTime('18:05', metric)).toBe('18:05');
-    expect(['00:00', '12:30', '18:05'].map((time) => spaced(clockTime(time, american)))).toEqual([
-      '12:00 am',
-      '12:30 pm',
-      '6:05 pm',
-    ]);
-  });
-});
+it('a count agrees with its noun', () =>
+  expect([format.count(1, 'start'), format.count(4, 'start')].map(spaced)).toEqual(['1 start', '4 starts']));

@@ -1,0 +1,50 @@
+/**
+ * The three faces, served by ourselves from the packages in node_modules. Latin is preloaded; the extended halves
+ * carry a unicode-range, so a browser fetches them only for a name that needs them.
+ */
+import localFont from 'next/font/local';
+
+// next/font reads these calls at build time, so each range and path is a literal
+const sentence = localFont({
+  src: '../node_modules/@fontsource-variable/literata/files/literata-latin-wght-normal.woff2',
+  weight: '200 900',
+  display: 'swap',
+  variable: '--face-sentence',
+  fallback: ['Georgia', 'serif'],
+});
+const sentenceExtended = localFont({
+  src: '../node_modules/@fontsource-variable/literata/files/literata-latin-ext-wght-normal.woff2',
+  weight: '200 900',
+  display: 'swap',
+  preload: false,
+  variable: '--face-sentence-extended',
+  adjustFontFallback: false,
+  declarations: [{ prop: 'unicode-range', value: 'U+0100-02BA,U+1E00-1EF2,U+20A0-20AB,U+20AD-20C0' }],
+});
+const plain = localFont({
+  src: '../node_modules/@fontsource-variable/atkinson-hyperlegible-next/files/atkinson-hyperlegible-next-latin-wght-normal.woff2',
+  weight: '200 800',
+  display: 'swap',
+  variable: '--face-plain',
+  fallback: ['system-ui', 'sans-serif'],
+});
+const plainExtended = localFont({
+  src: '../node_modules/@fontsource-variable/atkinson-hyperlegible-next/files/atkinson-hyperlegible-next-latin-ext-wght-normal.woff2',
+  weight: '200 800',
+  display: 'swap',
+  preload: false,
+  variable: '--face-plain-extended',
+  adjustFontFallback: false,
+  declarations: [{ prop: 'unicode-range', value: 'U+0100-02BA,U+1E00-1EF2,U+20A0-20AB,U+20AD-20C0' }],
+});
+const figure = localFont({
+  src: '../node_modules/@fontsource-variable/atkinson-hyperlegible-mono/files/atkinson-hyperlegible-mono-latin-wght-normal.woff2',
+  weight: '200 800',
+  display: 'swap',
+  variable: '--face-figure',
+  fallback: ['ui-monospace', 'monospace'],
+});
+
+export const faces = [sentence, sentenceExtended, plain, plainExtended, figure]
+  .map((face) => face.variable)
+  .join(' ');
