@@ -22,4 +22,4 @@ export function partsEnvironment(options: {
   mailPort: number;
   rate: number;
   yard: boolean;
-}): Record<string, string>;
+}): { NODE_ENV: 'production'; [name: string]: string };

@@ -17,14 +17,23 @@ export async function nextFree(from, hosts) {
 }
 
 /** A port that the system says nobody uses now. */
-export function anyFree() {
+export async function anyFree() {
+  return (await severalFree(1))[0];
+}
+
+/** Several at once, and different: all are held open until the last is known. */
+export async function severalFree(count) {
+  const servers = await Promise.all(Array.from({ length: count }, listenAnywhere));
+  const ports = servers.map((server) => server.address().port);
+  await Promise.all(servers.map((server) => new Promise((resolve) => server.close(resolve))));
+  return ports;
+}
+
+function listenAnywhere() {
   return new Promise((resolve, reject) => {
     const server = net.createServer();
     server.once('error', reject);
-    server.listen(0, '127.0.0.1', () => {
-      const { port } = server.address();
-      server.close(() => resolve(port));
-    });
+    server.listen(0, '127.0.0.1', () => resolve(server));
   });
 }
 

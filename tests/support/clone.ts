@@ -28,8 +28,10 @@ export async function cloneDatabase(from: {
   url: string;
   ownerUrl: string;
   template: string;
+  /** name that says which run the clone belongs to, where the template's does not */
+  prefix?: string;
 }): Promise<OwnDatabase> {
-  const run = from.template.split('_')[0] ?? from.template;
+  const run = (from.prefix ?? from.template).split('_')[0] ?? '';
   const name = `${run}_${randomBytes(6).toString('hex')}`;
   await asOwner(from.ownerUrl, async (owner) => {
     await owner.query('select pg_advisory_lock($1)', [LOCK_CLONES]);

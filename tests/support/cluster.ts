@@ -29,15 +29,20 @@ let users = 0;
 
 export default async function setup(project: TestProject) {
   users += 1;
-  made ??= makeTemplate();
-  project.provide('cluster', await made);
+  project.provide('cluster', await makeTemplate());
   return async () => {
     users -= 1;
     if (users === 0 && made !== undefined) await dropDatabasesOf((await made).ownerUrl, process.pid);
   };
 }
 
-async function makeTemplate(): Promise<Cluster> {
+/** The cluster with its migrated template: made at the first call in this process, the same afterwards. */
+export function makeTemplate(): Promise<Cluster> {
+  made ??= newTemplate();
+  return made;
+}
+
+async function newTemplate(): Promise<Cluster> {
   // DATABASE_URL is left aside on purpose: tests drop databases, which nobody wants on a server that is in use
   const { url, ownerUrl } = await ensurePostgres({
     dataDir: TEST_DATA,
