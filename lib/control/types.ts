@@ -25,7 +25,7 @@ export const CLAIMS = [
 ] as const;
 export type Claim = (typeof CLAIMS)[number];
 
-/** What a reason or an explanation may carry: JSON, with instants as epoch ms in fields that end in `At` or `Until`. */
+/** What a reason or an explanation may carry: JSON, with instants as epoch ms in fields that end in `At`, `Until` or `Since` (`isInstant` in because.ts). */
 export type Data = { [key: string]: DataValue };
 export type DataValue = string | number | boolean | null | DataValue[] | { [key: string]: DataValue };
 
@@ -110,6 +110,8 @@ export interface ChannelConfig {
   longestOnS: number | null;
   highLimit: { point: string; above: number } | null;
   runProof: { point: string; above: number } | null;
+  /** Air through its loop while it runs, m³/s; without it the heat that a loop moves is unknown. */
+  flowM3S?: number | null;
 }
 
 export interface InterlockConfig {
@@ -145,7 +147,10 @@ export interface Observed {
 }
 
 export interface ObservedPoint {
+  /** Corrected by the calibration in force at the reading's time. */
   value: number;
+  /** As sent, where a calibration changed it: a sensor's range and its fault values (85.0, −127) show only here. */
+  raw?: number;
   at: number;
   /** Times of this point's readings since the step before, the newest not among them, ascending. */
   between?: number[];
@@ -170,6 +175,7 @@ export type PersonCommand = { number: number; at: number; by: string } & (
   | { kind: 'unlock'; channel: string; lockout: string }
   | { kind: 'prove'; channel: string; seconds: number }
   | { kind: 'ready'; source: string }
+  | { kind: 'rebuilt'; source: string }
 );
 
 // ── what the core answers ───────────────────────────────────────────────────────────────────────────────────────
@@ -245,8 +251,11 @@ export type ControlEvent = { at: number } & (
       to: State;
       claim: Claim;
       explanation: Explanation;
+      /** The step came late, and a later switching of this channel in the same step overtook this one: no command can carry it. */
+      overtaken?: true;
     }
-  | { kind: 'decision'; channel: string; claim: Claim; before: Claim }
+  /** Another claim decides, the state stays; a switching tells its claim itself. `before` is null at a channel's first step. */
+  | { kind: 'decision'; channel: string; state: State; claim: Claim; before: Claim | null }
   | { kind: 'rest-begun' | 'rest-ended'; source: string; why: Data }
   | { kind: 'latch'; rule: string; on: boolean }
   | { kind: 'hand-begun' | 'hand-ended'; channel: string; why: Data }
@@ -267,6 +276,7 @@ export interface Fault {
     | 'core-not-good'
     | 'frost-without-reading'
     | 'hand-off-in-frost'
+    | 'hand-on-in-frost'
     | 'interlock-blocks-frost'
     | 'high-limit'
     | 'no-gain'

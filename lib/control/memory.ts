@@ -1,0 +1,175 @@
+/**
+ * What must survive a restart. Plain JSON: `JSON.parse(JSON.stringify(memory))` is the same memory. Entries carry
+ * the database's ids and stand in the plan's order (`fit.ts` puts them there), so a hot step copies arrays, not maps.
+ * A step never changes the memory that it is given; what stays the same is shared with the one that it returns.
+ */
+import type { Claim, Fault, Quality, State } from './types';
+
+export const MEMORY_VERSION = 1;
+
+export interface Memory {
+  version: typeof MEMORY_VERSION;
+  /** Instant of the last step; null before the first. */
+  at: number | null;
+  /** Earliest instant after `at` at which something changes by itself, as known then. */
+  wakeAt: number | null;
+  /** The plan's ids in order: entries below stand in it. */
+  shape: string;
+  /** Greatest number of a person's command taken. */
+  taken: number;
+  points: PointMemory[];
+  rules: RuleMemory[];
+  sources: SourceMemory[];
+  channels: ChannelMemory[];
+  frost: FrostMemory;
+  faults: Fault[];
+  /** Entries whose ids the plan no longer has; they come back with their ids. */
+  parked: { points: PointMemory[]; rules: RuleMemory[]; sources: SourceMemory[]; channels: ChannelMemory[] };
+}
+
+export interface PointMemory {
+  id: string;
+  /** Last plausible value and the time of its reading. */
+  value: number | null;
+  at: number | null;
+  /** Time of the newest reading, plausible or not. */
+  lastAt: number | null;
+  /** Since when the value has been the same to the last bit, by readings' times. */
+  sameSince: number | null;
+  /** Implausible readings in a row. */
+  suspects: number;
+  /** Good readings in a row, counted to 3. */
+  goodRun: number;
+  /** What dropped the quality, silence apart. */
+  dropped: { quality: 'uncertain' | 'bad'; why: string } | null;
+  /** Quality and reason at the last step. */
+  quality: Quality;
+  why: string | null;
+  uncertainSince: number | null;
+  /** A frozen cold point that another house point contradicts, since then. */
+  contradictedSince: number | null;
+  /** trend: [time, value], thinned to the window's needs. */
+  trail: [number, number][] | null;
+}
+
+export interface RuleMemory {
+  id: string;
+  latch: boolean;
+  /** Which point is in use: 0 the rule's own, 1 its first stand-in, … */
+  using: number;
+}
+
+export interface SourceMemory {
+  id: string;
+  /** Credit at `creditAt`, and its change a millisecond from there on. */
+  credit: number;
+  creditAt: number;
+  slope: number;
+  resting: boolean;
+  /** Beginning of the undrawn time of this rest; null while not resting or while something draws in it. */
+  restSince: number | null;
+  restWhy: 'credit-spent' | 'no-gain' | null;
+  /** The last rest ended only by its longest time. */
+  ranToMost: boolean;
+  /** Channels drawing. */
+  draws: number;
+  /** On time of the last 24 h: [from, to, channels]; `to` is null while it goes on. Milliseconds. */
+  spans: [number, number | null, number][];
+  day: { usedMs: number; at: number; slope: number; nextAt: number | null };
+  underFloor: boolean;
+  ready: boolean;
+  /** Core strictly above the ready level without a break since. */
+  aboveSince: number | null;
+}
+
+export interface HandMemory {
+  state: State;
+  by: string;
+  number: number;
+  givenAt: number;
+  until: number;
+  holdInFrost: boolean;
+}
+
+export interface RelayMemory {
+  reported: State | null;
+  reportedAt: number | null;
+  acknowledges: boolean;
+  leaseEndsAt: number | null;
+  /** The step that was told this. */
+  seenAt: number;
+}
+
+export interface ChannelMemory {
+  id: string;
+  /** Of the load. */
+  wanted: State;
+  /** The step that ordered it: a report told to that step or before cannot acknowledge it. */
+  orderedAt: number | null;
+  claim: Claim | null;
+  /** What counts for timers and credit, and since when; null: longer than anybody remembers. */
+  counted: State;
+  countedSince: number | null;
+  /** Least times run from here: as `countedSince`, but for the end of a proving run. */
+  leastSince: number | null;
+  /** What the relay is known to be, for interlocks; null: cannot be said. */
+  known: State | null;
+  knownSince: number | null;
+  relay: RelayMemory | null;
+  hand: HandMemory | null;
+  /** `carries`: it is this pulse that makes the load run. */
+  prove: { by: string; seconds: number; until: number } | null;
+  lockouts: { id: string; why: string; by: string; placedAt: number }[];
+  overHighLimit: boolean;
+  /** A longest run has ended: the load keeps off till the claims have wanted it off once. */
+  ranLongest: { at: number; wantedOff: boolean } | null;
+  /** None of its rules has had a usable point since. */
+  pointDeadSince: number | null;
+  gainLowSince: number | null;
+  noGainUntil: number | null;
+  /** Ordered on, but its proof point shows nothing. */
+  standing: boolean;
+}
+
+export interface FrostMemory {
+  on: boolean;
+  since: number | null;
+  /** No house reading since; a begun frost holds for 30 min. */
+  blindSince: number | null;
+  /** Under the frost alarm. */
+  alarm: boolean;
+}
+
+/** A memory that remembers nothing: least off passed, credit 1, heaps not ready, latches off. */
+export function emptyMemory(): Memory {
+  return {
+    version: MEMORY_VERSION,
+    at: null,
+    wakeAt: null,
+    shape: '',
+    taken: 0,
+    points: [],
+    rules: [],
+    sources: [],
+    channels: [],
+    frost: { on: false, since: null, blindSince: null, alarm: false },
+    faults: [],
+    parked: { points: [], rules: [], sources: [], channels: [] },
+  };
+}
+
+/**
+ * A memory from storage, brought to today's version. Null and undefined give an empty one; anything else that is
+ * not a memory, or is of a later version than this code, throws: dropping it in silence would forget a rest.
+ */
+export function migrateMemory(json: unknown): Memory {
+  if (json === null || json === undefined) return emptyMemory();
+  if (typeof json !== 'object' || !('version' in json))
+    throw new Error('This is not a memory of the control core.');
+  if (json.version !== MEMORY_VERSION)
+    throw new Error(
+      `Memory of version ${String(json.version)} is unknown here; this code knows up to ${MEMORY_VERSION}.`,
+    );
+  // Written by this code alone and checked by its version; entries that lack a field are filled from an empty one.
+  return { ...emptyMemory(), ...(json as Memory) };
+}
