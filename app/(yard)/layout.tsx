@@ -1,0 +1,23 @@
+import { cookies } from 'next/headers';
+import type { ReactNode } from 'react';
+import { Shell } from '@/components/shell/shell';
+import { requireViewer } from '@/lib/server/next-session';
+import { shellFacts } from '@/lib/server/shell';
+
+export default async function YardLayout({ children }: { children: ReactNode }) {
+  const viewer = await requireViewer();
+  const facts = await shellFacts(viewer);
+  const theme = (await cookies()).get('theme')?.value;
+  return (
+    <Shell
+      data={{
+        ...facts,
+        person: viewer.name,
+        holding: viewer.holdingName,
+        theme: theme === 'light' || theme === 'dark' ? theme : 'system',
+      }}
+    >
+      {children}
+    </Shell>
+  );
+}
