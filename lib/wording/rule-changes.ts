@@ -1,10 +1,12 @@
 /** What differs between two versions of a rule, field by field, in words. */
 import type { RuleBody } from '@/lib/control/types';
-import { difference, duration, temperature, type Reader } from '@/lib/units/format';
+import { difference, temperature } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { plainText } from './phrase';
 import { conditionWords } from './rule-conditions';
 import { pointWords, type RuleNames } from './rule-names';
 import { dayTimeWords, monthDayWords } from './rule-when';
-import { plain } from './sentence';
+import { amount, exactly, level } from './settings';
 
 export interface Change {
   /** Dotted, as in the interface: `band.0.high`. */
@@ -17,10 +19,10 @@ export interface Change {
 
 type Fields = Map<string, { path: string; label: string; text: string }>;
 
-const atMost1 = (celsius: number, reader: Reader) => temperature(celsius, reader, 1);
+const atMost1 = (celsius: number, preferences: Preferences) => temperature(celsius, preferences, 1);
 
 /** Every field of a body as text, keyed so that the same thing of two versions meets: a period by when it begins. */
-function fieldsOf(body: RuleBody, names: RuleNames, reader: Reader): Fields {
+function fieldsOf(body: RuleBody, names: RuleNames, preferences: Preferences): Fields {
   const fields: Fields = new Map();
   const put = (key: string, path: string, label: string, text: string | undefined) => {
     if (text !== undefined) fields.set(key, { path, label, text });
@@ -37,7 +39,7 @@ function fieldsOf(body: RuleBody, names: RuleNames, reader: Reader): Fields {
       : body.standIns
           .map((one) => {
             const offset =
-              one.offset === 0 ? '' : ` ${one.offset > 0 ? '+' : ''}${difference(one.offset, reader, 0, 1)}`;
+              one.offset === 0 ? '' : ` ${one.offset > 0 ? '+' : ''}${amount(one.offset, preferences)}`;
             return `${pointWords(one.point, names)}${offset}`;
           })
           .join(', then '),
@@ -45,42 +47,41 @@ function fieldsOf(body: RuleBody, names: RuleNames, reader: Reader): Fields {
   body.band.forEach((period, index) => {
     const single = body.band.length === 1;
     const key = single ? 'all day' : period.from;
-    const when = single ? '' : ` from ${dayTimeWords(period.from, reader)}`;
+    const when = single ? '' : ` from ${dayTimeWords(period.from, preferences)}`;
     put(
       `low ${key}`,
       `band.${index}.low`,
       `${warm ? 'on below' : 'off below'}${when}`,
-      atMost1(period.low, reader),
+      atMost1(period.low, preferences),
     );
     put(
       `high ${key}`,
       `band.${index}.high`,
       `${warm ? 'off above' : 'on above'}${when}`,
-      atMost1(period.high, reader),
+      atMost1(period.high, preferences),
     );
   });
   const rest = body.rest;
   if (rest) {
-    put('longestDraw', 'rest.longestDraw', 'longest draw', duration(rest.longestDraw));
-    put('least', 'rest.least', 'rest at least', duration(rest.least));
+    put('longestDraw', 'rest.longestDraw', 'longest draw', exactly(rest.longestDraw));
+    put('least', 'rest.least', 'rest at least', exactly(rest.least));
     put(
       'until',
       'rest.until.level',
       'then until',
-      rest.until &&
-        `${pointWords(rest.until.point, names)} is ${temperature(rest.until.level, reader, 0, 1)}`,
+      rest.until && `${pointWords(rest.until.point, names)} is ${level(rest.until.level, preferences)}`,
     );
-    put('most', 'rest.most', 'rest at most', rest.most === undefined ? undefined : duration(rest.most));
+    put('most', 'rest.most', 'rest at most', rest.most === undefined ? undefined : exactly(rest.most));
     put(
       'leastGain',
       'rest.leastGain.kelvin',
       'stop if it brings less than',
       rest.leastGain &&
-        `${difference(rest.leastGain.kelvin, reader)} after ${duration(rest.leastGain.after)}`,
+        `${difference(rest.leastGain.kelvin, preferences)} after ${exactly(rest.leastGain.after)}`,
     );
     put('frostMayBreak', 'rest.frostMayBreak', 'frost may break a rest', rest.frostMayBreak ? 'yes' : 'no');
   }
-  put('only', 'only', 'only while', body.only && plain(conditionWords(body.only, names, reader)));
+  put('only', 'only', 'only while', body.only && plainText(conditionWords(body.only, names, preferences)));
   put(
     'season',
     'season.from',
@@ -91,15 +92,21 @@ function fieldsOf(body: RuleBody, names: RuleNames, reader: Reader): Fields {
     'hours',
     'hours.from',
     'daily hours',
-    body.hours && `${dayTimeWords(body.hours.from, reader)} to ${dayTimeWords(body.hours.to, reader)}`,
+    body.hours &&
+      `${dayTimeWords(body.hours.from, preferences)} to ${dayTimeWords(body.hours.to, preferences)}`,
   );
   return fields;
 }
 
 /** In the order of the editor; empty where both say the same to a reader. */
-export function ruleChanges(before: RuleBody, after: RuleBody, names: RuleNames, reader: Reader): Change[] {
-  const was = fieldsOf(before, names, reader);
-  const is = fieldsOf(after, names, reader);
+export function ruleChanges(
+  before: RuleBody,
+  after: RuleBody,
+  names: RuleNames,
+  preferences: Preferences,
+): Change[] {
+  const was = fieldsOf(before, names, preferences);
+  const is = fieldsOf(after, names, preferences);
   const keys = [...new Set([...is.keys(), ...was.keys()])];
   return keys.flatMap((key) => {
     const old = was.get(key);

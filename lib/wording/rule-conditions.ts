@@ -1,9 +1,12 @@
 /** A rule's extra conditions in words. */
 import type { ConditionTree } from '@/lib/control/types';
-import { clockTime, figure, reading, type Reader } from '@/lib/units/format';
+import { decimal, pointValue } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { dayTime } from '@/lib/units/time';
+import { between, join } from './join';
+import { plainText, type Phrase } from './phrase';
 import { pointTone, pointWords, type RuleNames } from './rule-names';
 import { dayName, monthName } from './rule-when';
-import { listed, sentence, type Sentence } from './sentence';
 
 export type ConditionNode = Extract<ConditionTree, { all: unknown }>['all'][number];
 export type Condition = Extract<ConditionNode, { fact: string }>;
@@ -19,40 +22,38 @@ export const OPERATOR_WORDS: Record<Condition['operator'], string> = {
   notIn: 'none of',
 };
 
-const hourWords = (hour: number, reader: Reader) =>
-  clockTime(`${String(hour % 24).padStart(2, '0')}:00`, reader);
+const hourWords = (hour: number, preferences: Preferences) =>
+  dayTime(`${String(hour % 24).padStart(2, '0')}:00`, preferences);
 
 /** `time.hour` counts whole hours, so "at most 5" lasts until 06:00. */
-function hourCondition(leaf: Condition, reader: Reader): string {
+function hourCondition(leaf: Condition, preferences: Preferences): string {
   if (typeof leaf.value !== 'number') {
     const hours = Array.isArray(leaf.value)
-      ? leaf.value.map((hour) => hourWords(hour, reader)).join(', ')
+      ? leaf.value.map((hour) => hourWords(hour, preferences)).join(', ')
       : '';
     return `the hour that began is ${OPERATOR_WORDS[leaf.operator]} ${hours}`;
   }
   const hour = leaf.value;
   switch (leaf.operator) {
     case 'lessThan':
-      return `it is before ${hourWords(hour, reader)}`;
+      return `it is before ${hourWords(hour, preferences)}`;
     case 'lessThanInclusive':
-      return `it is before ${hourWords(hour + 1, reader)}`;
+      return `it is before ${hourWords(hour + 1, preferences)}`;
     case 'greaterThan':
-      return `it is ${hourWords(hour + 1, reader)} or later`;
+      return `it is ${hourWords(hour + 1, preferences)} or later`;
     case 'greaterThanInclusive':
-      return `it is ${hourWords(hour, reader)} or later`;
+      return `it is ${hourWords(hour, preferences)} or later`;
     case 'notEqual':
-      return `it is not between ${hourWords(hour, reader)} and ${hourWords(hour + 1, reader)}`;
+      return `it is not between ${hourWords(hour, preferences)} and ${hourWords(hour + 1, preferences)}`;
     default:
-      return `it is between ${hourWords(hour, reader)} and ${hourWords(hour + 1, reader)}`;
+      return `it is between ${hourWords(hour, preferences)} and ${hourWords(hour + 1, preferences)}`;
   }
 }
 
 function calendarCondition(leaf: Condition, kind: 'month' | 'day'): string {
   const name = kind === 'month' ? monthName : dayName;
   const values = Array.isArray(leaf.value) ? leaf.value : typeof leaf.value === 'number' ? [leaf.value] : [];
-  const words = listed(values.map(name), 'or')
-    .map((part) => part.text)
-    .join('');
+  const words = plainText(between(values.map(name), ', ', ' or '));
   const not = leaf.operator === 'notEqual' || leaf.operator === 'notIn' ? 'not ' : '';
   const before = leaf.operator === 'lessThan' ? 'before ' : leaf.operator === 'greaterThan' ? 'after ' : '';
   const through =
@@ -64,50 +65,49 @@ function calendarCondition(leaf: Condition, kind: 'month' | 'day'): string {
   return `the ${kind} is ${not}${before}${words}${through}`;
 }
 
-function leafWords(leaf: Condition, names: RuleNames, reader: Reader): Sentence {
+function leafWords(leaf: Condition, names: RuleNames, preferences: Preferences): Phrase[] {
   switch (leaf.fact) {
     case 'time.hour':
-      return sentence(hourCondition(leaf, reader));
+      return join(hourCondition(leaf, preferences));
     case 'time.month':
-      return sentence(calendarCondition(leaf, 'month'));
+      return join(calendarCondition(leaf, 'month'));
     case 'time.weekday':
-      return sentence(calendarCondition(leaf, 'day'));
+      return join(calendarCondition(leaf, 'day'));
     case 'time.sunUp': {
       const isUp = (leaf.value === true) === (leaf.operator === 'equal');
-      return sentence(isUp ? 'the sun is up' : 'the sun is down');
+      return join(isUp ? 'the sun is up' : 'the sun is down');
     }
   }
   const unit = names.points.find((point) => point.key === leaf.fact)?.unit ?? '';
   const inUnit = (value: number) => ({
-    text: unit === '' ? figure(value, 0, 2) : reading(value, unit, reader),
+    text:
+      unit === '' ? decimal(value, Number.isInteger(value) ? 0 : 2) : pointValue(value, unit, preferences),
     tone: pointTone(leaf.fact, names),
-    strong: true,
   });
   const value =
     typeof leaf.value === 'boolean'
-      ? sentence(leaf.value ? 'true' : 'false')
-      : listed([leaf.value].flat().map(inUnit), 'or');
-  return sentence(`${pointWords(leaf.fact, names)} is ${OPERATOR_WORDS[leaf.operator]} `, value);
+      ? join(leaf.value ? 'true' : 'false')
+      : between([leaf.value].flat().map(inUnit), ', ', ' or ');
+  return join(`${pointWords(leaf.fact, names)} is ${OPERATOR_WORDS[leaf.operator]} `, value);
 }
 
-/** @example conditionWords({all: […]}, …) reads "the heap’s core is at least 38.0 °C and it is 18:00 or later" */
+/**
+ * The same word stands between all of a group, and groups inside one are bracketed, since "a, b or c" inside "and" could
+ * be read in two ways.
+ * @example conditionWords({all: […]}, …) reads "the heap’s core is at least 38.0 °C and it is 18:00 or later"
+ */
 export function conditionWords(
   node: ConditionNode,
   names: RuleNames,
-  reader: Reader,
+  preferences: Preferences,
   nested = false,
-): Sentence {
-  if ('fact' in node) return leafWords(node, names, reader);
-  if ('not' in node) return sentence('not (', conditionWords(node.not, names, reader), ')');
+): Phrase[] {
+  if ('fact' in node) return leafWords(node, names, preferences);
+  if ('not' in node) return join('not (', conditionWords(node.not, names, preferences), ')');
   const children = 'all' in node ? node.all : node.any;
-  const words = children.map((child) => conditionWords(child, names, reader, children.length > 1));
-  const joined = 'all' in node && children.length > 0 ? joinedBy(words, ' and ') : joinedBy(words, ' or ');
-  return nested && children.length > 1 ? sentence('(', joined, ')') : joined;
-}
-
-/** The same word between all, since "a, b or c" inside "and" could be read in two ways. */
-function joinedBy(words: Sentence[], between: string): Sentence {
-  return sentence(...words.flatMap((one, index) => (index === 0 ? [one] : [between, one])));
+  const words = children.map((child) => conditionWords(child, names, preferences, children.length > 1));
+  const joined = between(words, 'all' in node ? ' and ' : ' or ');
+  return nested && children.length > 1 ? join('(', joined, ')') : joined;
 }
 
 /** Whether the simple form of the editor can show it: all of some leaves, nothing nested. */

@@ -2,7 +2,7 @@
  * How a rule's sentence calls what it names. A rule keeps keys, people read names: by its role where that alone tells
  * which point is meant ("the bench"), else by its own name.
  */
-import type { Part } from './sentence';
+import type { Tone } from './phrase';
 
 export interface NamedPoint {
   key: string;
@@ -50,7 +50,7 @@ export function pointWords(key: string, names: RuleNames): string {
   return /\d$/.test(name) || /^(the|air) /i.test(name) ? name : `the ${name}`;
 }
 
-export function pointTone(key: string, names: RuleNames): NonNullable<Part['tone']> {
+export function pointTone(key: string, names: RuleNames): Tone {
   switch (names.points.find((one) => one.key === key)?.role) {
     case 'outdoors':
       return 'outdoors';
@@ -63,7 +63,10 @@ export function pointTone(key: string, names: RuleNames): NonNullable<Part['tone
     case 'loop-intake':
     case 'loop-return':
       return 'ember';
-    default:
+    case 'house-air':
+    case 'bench':
       return 'house';
+    default:
+      return 'strong';
   }
 }

@@ -1,5 +1,7 @@
 /** Season and daily hours in words. */
-import { clockTime, duration, type Reader } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { dayTime } from '@/lib/units/time';
+import { exactly } from './settings';
 
 const months = [
   'January',
@@ -43,14 +45,14 @@ export function dayMark(text: string): DayMark | null {
   return { at: sun[1] === 'sunrise' ? 'sunrise' : 'sunset', offsetMin: sun[2] === '-' ? -offset : offset };
 }
 
-/** @example dayTimeWords('sunset-01:00', reader) === '1 h before sunset' */
-export function dayTimeWords(text: string, reader: Reader): string {
+/** @example dayTimeWords('sunset-01:00', USUAL) === '1 h before sunset' */
+export function dayTimeWords(text: string, preferences: Preferences): string {
   const mark = dayMark(text);
   if (!mark) return text;
-  if (mark.at === 'clock') return clockTime(mark.time, reader);
+  if (mark.at === 'clock') return dayTime(mark.time, preferences);
   if (mark.offsetMin === 0) return mark.at;
   const much = Math.abs(mark.offsetMin);
-  const away = much % 60 === 0 ? `${much / 60}\u00a0h` : duration(much * 60);
+  const away = much % 60 === 0 ? `${much / 60}\u00a0h` : exactly(much * 60);
   return `${away} ${mark.offsetMin < 0 ? 'before' : 'after'} ${mark.at}`;
 }
 
@@ -60,11 +62,11 @@ export interface When {
 }
 
 /** "Only from 1 October to 30 April, between 18:00 and 08:00." Empty where nothing bounds the rule. */
-export function whenWords(when: When, reader: Reader): string {
+export function whenWords(when: When, preferences: Preferences): string {
   const season = when.season && `from ${monthDayWords(when.season.from)} to ${monthDayWords(when.season.to)}`;
   const hours =
     when.hours &&
-    `between ${dayTimeWords(when.hours.from, reader)} and ${dayTimeWords(when.hours.to, reader)}`;
+    `between ${dayTimeWords(when.hours.from, preferences)} and ${dayTimeWords(when.hours.to, preferences)}`;
   const both = [season, hours].filter(Boolean).join(', ');
   return both === '' ? '' : `Only ${both}.`;
 }

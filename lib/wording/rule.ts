@@ -3,14 +3,17 @@
  * same of the same rule.
  */
 import type { RuleBody } from '@/lib/control/types';
-import { difference, duration, temperature, type Reader } from '@/lib/units/format';
+import { difference, temperature } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { join, sentences } from './join';
+import type { Phrase } from './phrase';
 import { conditionWords } from './rule-conditions';
 import { midSentence, pointTone, pointWords, type RuleNames } from './rule-names';
 import { dayTimeWords, whenWords } from './rule-when';
-import { sentence, type Part, type Sentence } from './sentence';
+import { amount, exactly, level } from './settings';
 
 interface Verbs {
-  begin: (label: Part) => Sentence;
+  begin: (label: Phrase) => Phrase[];
   end: string;
 }
 
@@ -18,26 +21,26 @@ interface Verbs {
 function verbs(loadKind: string): Verbs {
   switch (loadKind) {
     case 'motor':
-      return { begin: (label) => sentence('Run the ', label), end: 'stop it' };
+      return { begin: (label) => join('Run the ', label), end: 'stop it' };
     case 'vent':
     case 'valve':
-      return { begin: (label) => sentence('Open the ', label), end: 'shut it' };
+      return { begin: (label) => join('Open the ', label), end: 'shut it' };
     default:
-      return { begin: (label) => sentence('Switch the ', label, ' on'), end: 'switch it off' };
+      return { begin: (label) => join('Switch the ', label, ' on'), end: 'switch it off' };
   }
 }
 
-function bandSentence(body: RuleBody, names: RuleNames, reader: Reader): Sentence {
+function bandSentence(body: RuleBody, names: RuleNames, preferences: Preferences): Phrase[] {
   const tone = pointTone(body.point, names);
-  const at = (celsius: number): Part => ({ text: temperature(celsius, reader), tone, strong: true });
+  const at = (celsius: number): Phrase => ({ text: temperature(celsius, preferences), tone });
   const warm = body.purpose === 'warm';
   const verb = verbs(names.channel.loadKind);
-  const begin = verb.begin({ text: midSentence(names.channel.label), strong: true });
-  const point: Part = { text: pointWords(body.point, names), strong: true };
+  const begin = verb.begin({ text: midSentence(names.channel.label), tone: 'strong' });
+  const point: Phrase = { text: pointWords(body.point, names), tone: 'strong' };
   const [first, ...others] = body.band;
-  if (!first) return sentence(begin, ' by ', point, '.');
+  if (!first) return join(begin, ' by ', point, '.');
   if (others.length === 0) {
-    return sentence(
+    return join(
       begin,
       ' when ',
       point,
@@ -50,55 +53,54 @@ function bandSentence(body: RuleBody, names: RuleNames, reader: Reader): Sentenc
   }
   const periods = body.band.flatMap((period, index) => [
     index === 0 ? '' : '; ',
-    `from ${dayTimeWords(period.from, reader)} ${warm ? 'below' : 'above'} `,
+    `from ${dayTimeWords(period.from, preferences)} ${warm ? 'below' : 'above'} `,
     at(warm ? period.low : period.high),
     `, ${verb.end} ${warm ? 'above' : 'below'} `,
     at(warm ? period.high : period.low),
   ]);
-  return sentence(begin, ' by ', point, ': ', ...periods, '.');
+  return join(begin, ' by ', point, ': ', ...periods, '.');
 }
 
-function standInSentence(body: RuleBody, names: RuleNames, reader: Reader): Sentence {
+function standInSentence(body: RuleBody, names: RuleNames, preferences: Preferences): Phrase[] {
   if (body.standIns.length === 0) return [];
   const stands = body.standIns.map((standIn) => {
     const by = pointWords(standIn.point, names);
     if (standIn.offset === 0) return by;
-    const much = difference(Math.abs(standIn.offset), reader, 0, 1);
+    const much = amount(Math.abs(standIn.offset), preferences);
     return `${by} ${standIn.offset < 0 ? 'less' : 'plus'} ${much}`;
   });
-  return sentence(`If that sensor fails, go by ${stands.join(', then by ')}.`);
+  return join(`If that sensor fails, go by ${stands.join(', then by ')}.`);
 }
 
 /** "After 25 min of draw rest at least 30 min, then until the heap beside the pipe is back to 43 °C, 60 min at most." */
 export function restSentence(
   rest: NonNullable<RuleBody['rest']>,
   names: RuleNames,
-  reader: Reader,
-): Sentence {
-  const ember = (text: string): Part => ({ text, tone: 'ember', strong: true });
+  preferences: Preferences,
+): Phrase[] {
+  const ember = (text: string): Phrase => ({ text, tone: 'ember' });
   const wait = rest.until
-    ? sentence(
+    ? join(
         `, then until ${pointWords(rest.until.point, names)} is back to `,
         {
-          text: temperature(rest.until.level, reader, 0, 1),
+          text: level(rest.until.level, preferences),
           tone: pointTone(rest.until.point, names),
-          strong: true,
         },
-        rest.most === undefined ? '' : `, ${duration(rest.most)} at most`,
+        rest.most === undefined ? '' : `, ${exactly(rest.most)} at most`,
       )
     : [];
   const gain = rest.leastGain
-    ? sentence(
+    ? join(
         ' Stop a draw that brings less than ',
-        ember(difference(rest.leastGain.kelvin, reader, 1)),
-        ` after ${duration(rest.leastGain.after)}.`,
+        ember(difference(rest.leastGain.kelvin, preferences)),
+        ` after ${exactly(rest.leastGain.after)}.`,
       )
     : [];
-  return sentence(
+  return join(
     'After ',
-    ember(duration(rest.longestDraw)),
+    ember(exactly(rest.longestDraw)),
     ' of draw rest at least ',
-    ember(duration(rest.least)),
+    ember(exactly(rest.least)),
     wait,
     '.',
     gain,
@@ -110,27 +112,26 @@ export function restSentence(
  * The whole rule in words; °C in, the reader's unit out.
  * @example "Run the gate-heap fan when the bench falls below 4.0 °C, stop it above 7.0 °C. After 25 min of draw rest …"
  */
-export function ruleSentence(body: RuleBody, names: RuleNames, reader: Reader): Sentence {
-  const only = body.only ? sentence('Only while ', conditionWords(body.only, names, reader), '.') : [];
-  const sentences = [
-    bandSentence(body, names, reader),
-    standInSentence(body, names, reader),
-    body.rest ? restSentence(body.rest, names, reader) : [],
+export function ruleSentence(body: RuleBody, names: RuleNames, preferences: Preferences): Phrase[] {
+  const only = body.only ? join('Only while ', conditionWords(body.only, names, preferences), '.') : [];
+  return sentences(
+    bandSentence(body, names, preferences),
+    standInSentence(body, names, preferences),
+    body.rest ? restSentence(body.rest, names, preferences) : [],
     only,
-    sentence(whenWords(body, reader)),
-  ].filter((one) => one.length > 0);
-  return sentence(...sentences.flatMap((one, index) => (index === 0 ? [one] : [' ', one])));
+    join(whenWords(body, preferences)),
+  );
 }
 
 /** The sentence of the list: what starts and stops it, and its rest in short. */
-export function ruleHeadline(body: RuleBody, names: RuleNames, reader: Reader): Sentence {
-  return bandSentence(body, names, reader);
+export function ruleHeadline(body: RuleBody, names: RuleNames, preferences: Preferences): Phrase[] {
+  return bandSentence(body, names, preferences);
 }
 
 /** "4.0 to 7.5 °C"; of several periods the widest span. */
-export function bandWords(body: RuleBody, reader: Reader): string {
+export function bandWords(body: RuleBody, preferences: Preferences): string {
   const low = Math.min(...body.band.map((period) => period.low));
   const high = Math.max(...body.band.map((period) => period.high));
-  const from = temperature(low, reader).replace(/\u00a0.*$/, '');
-  return `${from} to ${temperature(high, reader)}`;
+  const from = temperature(low, preferences).replace(/\u00a0.*$/, '');
+  return `${from} to ${temperature(high, preferences)}`;
 }

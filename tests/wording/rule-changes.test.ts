@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest';
+import { USUAL, type Preferences } from '@/lib/units/preferences';
 import { RuleBody, type RuleBodyInput } from '@/lib/schema/rule';
 import { changeWords, ruleChanges } from '@/lib/wording/rule-changes';
 
-const metric = { temperature: 'C', clock: '24' } as const;
+const metric = USUAL;
 const names = {
   channel: { label: 'Gate-heap fan', loadKind: 'motor' },
   points: [
@@ -16,12 +17,8 @@ const base: RuleBodyInput = {
   point: 'bench-1',
   band: [{ from: '00:00', low: 4, high: 7.5 }],
 };
-const changes = (
-  before: RuleBodyInput,
-  after: RuleBodyInput,
-  reader: { temperature: 'C' | 'F'; clock: '24' } = metric,
-) =>
-  ruleChanges(RuleBody.parse(before), RuleBody.parse(after), names, reader).map((change) =>
+const changes = (before: RuleBodyInput, after: RuleBodyInput, preferences: Preferences = metric) =>
+  ruleChanges(RuleBody.parse(before), RuleBody.parse(after), names, preferences).map((change) =>
     changeWords(change).replaceAll('\u00a0', ' '),
   );
 
@@ -31,7 +28,7 @@ describe('the comparison of two versions', () => {
   it('names the threshold and says the unit once', () => {
     const after = { ...base, band: [{ from: '00:00', low: 4, high: 8 }] };
     expect(changes(base, after)).toEqual(['off above: 7.5 → 8.0 °C']);
-    expect(changes(base, after, { temperature: 'F', clock: '24' })).toEqual(['off above: 45.5 → 46.4 °F']);
+    expect(changes(base, after, { ...USUAL, temperature: 'F' })).toEqual(['off above: 45.5 → 46.4 °F']);
   });
 
   it('says what came and what went', () => {

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { USUAL, type Preferences } from '@/lib/units/preferences';
 import { conditionWords, isSimple, type Condition, type ConditionNode } from '@/lib/wording/rule-conditions';
-import { plain } from '@/lib/wording/sentence';
+import { plainText } from '@/lib/wording/phrase';
 
 const names = {
   channel: { label: 'Gate-heap fan', loadKind: 'motor' },
@@ -10,8 +11,11 @@ const names = {
     { key: 'rh', name: 'House humidity', role: 'humidity', unit: '%RH' },
   ],
 };
-const says = (node: ConditionNode, temperature: 'C' | 'F' = 'C', clock: '12' | '24' = '24') =>
-  plain(conditionWords(node, names, { temperature, clock })).replaceAll('\u00a0', ' ');
+const says = (
+  node: ConditionNode,
+  temperature: Preferences['temperature'] = 'C',
+  clock: Preferences['clock'] = 24,
+) => plainText(conditionWords(node, names, { ...USUAL, temperature, clock })).replaceAll('\u00a0', ' ');
 const leaf = (fact: string, operator: Condition['operator'], value: Condition['value']) => ({
   fact,
   operator,
@@ -47,7 +51,7 @@ describe('conditions in words', () => {
     expect(says({ all: [a, { any: [b, c] }] })).toBe(
       'the heap’s core is above 38.0 °C and (it is before 06:00 or the sun is up)',
     );
-    expect(says({ not: { all: [a, b] } }, 'C', '12')).toBe(
+    expect(says({ not: { all: [a, b] } }, 'C', 12)).toBe(
       'not (the heap’s core is above 38.0 °C and it is before 6:00 am)',
     );
   });

@@ -1,11 +1,12 @@
 import { describe, expect, it } from 'vitest';
+import { USUAL, type Preferences } from '@/lib/units/preferences';
 import { RuleBody, type RuleBodyInput } from '@/lib/schema/rule';
 import { bandWords, ruleSentence } from '@/lib/wording/rule';
 import type { RuleNames } from '@/lib/wording/rule-names';
-import { plain } from '@/lib/wording/sentence';
+import { plainText } from '@/lib/wording/phrase';
 
-const metric = { temperature: 'C', clock: '24' } as const;
-const american = { temperature: 'F', clock: '12' } as const;
+const metric = USUAL;
+const american: Preferences = { ...USUAL, temperature: 'F', clock: 12 };
 const names: RuleNames = {
   channel: { label: 'Gate-heap fan', loadKind: 'motor' },
   points: [
@@ -29,8 +30,8 @@ const rest: NonNullable<RuleBodyInput['rest']> = {
   until: { point: 'gate-base', level: 43 },
   frostMayBreak: true,
 };
-const says = (body: RuleBodyInput, reader: typeof metric | typeof american = metric, of = names) =>
-  plain(ruleSentence(RuleBody.parse(body), of, reader)).replaceAll('\u00a0', ' ');
+const says = (body: RuleBodyInput, preferences: Preferences = metric, of = names) =>
+  plainText(ruleSentence(RuleBody.parse(body), of, preferences)).replaceAll('\u00a0', ' ');
 
 describe('the sentence of a rule', () => {
   it('says what starts and what stops a fan', () => {
@@ -132,8 +133,12 @@ describe('the sentence of a rule', () => {
 
   it('colours its figures as their lines', () => {
     const parts = ruleSentence(RuleBody.parse({ ...simple, rest }), names, metric);
-    const toneOf = (text: string) => parts.find((part) => part.text.replaceAll('\u00a0', ' ') === text)?.tone;
-    expect([toneOf('4.0 °C'), toneOf('25 min'), toneOf('43 °C')]).toEqual(['house', 'ember', 'base']);
+    const coloured = parts.flatMap((part) =>
+      typeof part === 'string' || part.tone === 'strong'
+        ? []
+        : [`${part.text.replaceAll('\u00a0', ' ')} ${part.tone}`],
+    );
+    expect(coloured).toEqual(['4.0 °C house', '7.0 °C house', '25 min ember', '30 min ember', '43 °C base']);
   });
 
   it('has a band in short', () => {
