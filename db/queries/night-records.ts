@@ -1,0 +1,302 @@
+/** What a night is made of: the house's parts as they stand, and what was kept of readings, decisions and reports. */
+import { and, asc, desc, eq, gte, inArray, isNull, lt, or, sql } from 'drizzle-orm';
+import type { AnyPgColumn } from 'drizzle-orm/pg-core';
+import type { Holding } from '@/db/client';
+import { switching } from '@/db/schema/running';
+import { alarm } from '@/db/schema/watch';
+import { calibration, channel, house, loop, node, point, source } from '@/db/schema/yard';
+import type { NightChannel, NightInput } from '@/lib/analysis/nights';
+import type { Night } from '@/lib/analysis/night';
+import type { Series } from '@/lib/analysis/series';
+import type { ChannelRecord } from '@/lib/analysis/spans';
+import { CLAIMS, type Claim } from '@/lib/control/types';
+import type { Calibration } from './plan';
+import { correct } from './reading';
+import { listDecisions, listRelayReports } from './running';
+
+export interface YardOfNights {
+  house: NightInput['house'] & { id: string };
+  sources: (NightInput['source'] & { id: string })[];
+  points: PointOfNights[];
+  channels: ChannelOfNights[];
+}
+
+interface PointOfNights {
+  number: number;
+  key: string;
+  name: string;
+  role: string;
+  holdS: number;
+  calibrations: Calibration[];
+}
+
+interface ChannelOfNights extends Omit<NightChannel, 'record'> {
+  id: string;
+  sourceId: string;
+  nodeKey: string;
+  safe: 'on' | 'off';
+  removedAt: number | null;
+}
+
+/** Twice a missed report still counts as read; the third makes the point silent, as control counts it. */
+const REPORTS_HELD = 3;
+/** Readings shortly before the noon hold into the night. */
+const LEAD_MS = 15 * 60_000;
+
+/** Parts of a house that nights are made of, those taken out of use included: what they did stays. Null: no such house. */
+export async function yardOfNights(holding: Holding, houseId: string): Promise<YardOfNights | null> {
+  const { db } = holding;
+  const [head] = await db
+    .select()
+    .from(house)
+    .where(and(eq(house.holdingId, holding.id), eq(house.id, houseId)));
+  if (head === undefined) return null;
+  const of = (table: { holdingId: AnyPgColumn; houseId: AnyPgColumn }) =>
+    and(eq(table.holdingId, holding.id), eq(table.houseId, houseId));
+  const nodes = new Map((await db.select().from(node).where(of(node))).map((row) => [row.id, row]));
+  const points = await db.select().from(point).where(of(point)).orderBy(asc(point.number));
+  const keys = new Map(points.map((row) => [row.id, row.key]));
+  const keyOf = (id: string | null) => (id === null ? null : (keys.get(id) ?? null));
+  const corrections = await calibrationsOf(
+    holding,
+    points.map((row) => row.id),
+  );
+  const loops = await db
+    .select()
+    .from(loop)
+    .where(and(of(loop), isNull(loop.removedAt)));
+  const sources = await db
+    .select()
+    .from(source)
+    .where(and(of(source), isNull(source.removedAt)))
+    .orderBy(asc(source.id));
+  const channels = await db.select().from(channel).where(of(channel)).orderBy(asc(channel.number));
+  const { zone, latitude, longitude } = head;
+  return {
+    house: { id: head.id, zone, latitude, longitude, altitudeM: head.altitude, frostLimitC: head.frostLimit },
+    sources: sources.map((row) => ({
+      id: row.id,
+      slug: row.slug,
+      core: keyOf(row.corePointId),
+      base: keyOf(row.basePointId),
+    })),
+    points: points.map((row) => ({
+      number: row.number,
+      key: row.key,
+      name: row.name,
+      role: row.role,
+      holdS: row.staleAfterS ?? REPORTS_HELD * (nodes.get(row.nodeId ?? '')?.reportEveryS ?? 30),
+      calibrations: corrections.get(row.id) ?? [],
+    })),
+    channels: channels.flatMap((row): ChannelOfNights[] => {
+      if (row.sourceId === null) return [];
+      const own = loops.find((one) => one.channelId === row.id && one.sourceId === row.sourceId);
+      const [intake, back] = [keyOf(own?.intakePointId ?? null), keyOf(own?.returnPointId ?? null)];
+      return [
+        {
+          id: row.id,
+          sourceId: row.sourceId,
+          number: row.number,
+          label: row.label,
+          powerW: row.load.watts ?? null,
+          flow:
+            row.flow === null
+              ? null
+              : {
+                  m3PerS: row.flow.litresPerSecond / 1000,
+                  sdM3PerS: row.flow.sd === undefined ? null : row.flow.sd / 1000,
+                  from: row.flow.from,
+                },
+          loop: intake === null || back === null ? null : { intake, return: back },
+          nodeKey: nodes.get(row.nodeId)?.key ?? '',
+          safe: row.contact === 'NC' ? 'on' : 'off',
+          removedAt: row.removedAt?.getTime() ?? null,
+        },
+      ];
+    }),
+  };
+}
+
+async function calibrationsOf(holding: Holding, pointIds: string[]): Promise<Map<string, Calibration[]>> {
+  const found = new Map<string, Calibration[]>();
+  if (pointIds.length === 0) return found;
+  const rows = await holding.db
+    .select()
+    .from(calibration)
+    .where(and(eq(calibration.holdingId, holding.id), inArray(calibration.pointId, pointIds)))
+    .orderBy(asc(calibration.from));
+  for (const row of rows) {
+    const list = found.get(row.pointId) ?? [];
+    list.push({ from: row.from.getTime(), offset: row.offset, gain: row.gain });
+    found.set(row.pointId, list);
+  }
+  return found;
+}
+
+/** One night of every source of a house, ready to be summed up; by the source's id. */
+export async function nightInputs(
+  holding: Holding,
+  yard: YardOfNights,
+  night: Night,
+  nowMs: number,
+): Promise<Map<string, NightInput>> {
+  const to = Math.min(night.to, nowMs);
+  const channels = yard.channels.filter((one) => one.removedAt === null || one.removedAt > night.from);
+  const records = await recordsOf(holding, yard.house.id, channels, night.from, to);
+  const points = await seriesOf(holding, yard, night.from - LEAD_MS, to);
+  return new Map(
+    yard.sources.map(({ id, ...own }) => [
+      id,
+      {
+        night,
+        nowMs,
+        house: yard.house,
+        source: own,
+        channels: channels
+          .filter((one) => one.sourceId === id)
+          .flatMap((one) => {
+            const record = records.get(one.id);
+            return record === undefined ? [] : [{ ...one, record }];
+          }),
+        points,
+      },
+    ]),
+  );
+}
+
+function isClaim(value: string): value is Claim {
+  return (CLAIMS as readonly string[]).includes(value);
+}
+
+async function recordsOf(
+  holding: Holding,
+  houseId: string,
+  channels: readonly ChannelOfNights[],
+  from: number,
+  to: number,
+): Promise<Map<string, ChannelRecord>> {
+  const ids = channels.map((one) => one.id);
+  const decisions = await listDecisions(holding, ids, from, to);
+  const reports = await listRelayReports(holding, ids, from, to);
+  const trips = await tripsOf(holding, ids, from, to);
+  const lost = await nodesLost(holding, houseId, from, to);
+  const mine = <T extends { channelId: string }>(rows: readonly T[], id: string) =>
+    rows.filter((row) => row.channelId === id);
+  return new Map(
+    channels.map((one) => [
+      one.id,
+      {
+        decisions: mine(decisions, one.id).flatMap((row) =>
+          isClaim(row.claim) ? [{ at: row.at, state: row.state, claim: row.claim }] : [],
+        ),
+        reports: mine(reports, one.id),
+        trips: mine(trips, one.id),
+        silences: lost.filter((silence) => silence.node === one.nodeKey),
+        safe: one.safe,
+      },
+    ]),
+  );
+}
+
+/** Lease trips from `from` to before `to`, ascending, led by each channel's last one before. */
+async function tripsOf(holding: Holding, ids: string[], from: number, to: number) {
+  if (ids.length === 0) return [];
+  const mine = and(
+    eq(switching.holdingId, holding.id),
+    inArray(switching.channelId, ids),
+    isNull(switching.number),
+  );
+  const before = await holding.db
+    .selectDistinctOn([switching.channelId], {
+      channelId: switching.channelId,
+      at: switching.at,
+      state: switching.to,
+    })
+    .from(switching)
+    .where(and(mine, lt(switching.at, new Date(from))))
+    .orderBy(switching.channelId, desc(switching.at));
+  const during = await holding.db
+    .select({ channelId: switching.channelId, at: switching.at, state: switching.to })
+    .from(switching)
+    .where(and(mine, gte(switching.at, new Date(from)), lt(switching.at, new Date(to))))
+    .orderBy(asc(switching.at));
+  return [...before, ...during].map((row) => ({ ...row, at: row.at.getTime() }));
+}
+
+/** When nodes of a house were lost: what the alarms of their links say. */
+async function nodesLost(holding: Holding, houseId: string, from: number, to: number) {
+  const rows = await holding.db
+    .select({ about: alarm.about, raisedAt: alarm.raisedAt, clearedAt: alarm.clearedAt })
+    .from(alarm)
+    .where(
+      and(
+        eq(alarm.holdingId, holding.id),
+        eq(alarm.houseId, houseId),
+        eq(alarm.kind, 'node-lost'),
+        lt(alarm.raisedAt, new Date(to)),
+        or(isNull(alarm.clearedAt), gte(alarm.clearedAt, new Date(from))),
+      ),
+    )
+    .orderBy(asc(alarm.raisedAt));
+  return rows.map((row) => ({
+    node: row.about.node ?? '',
+    from: row.raisedAt.getTime(),
+    to: row.clearedAt?.getTime() ?? null,
+  }));
+}
+
+const ROLES_OF_EVERY_NIGHT = ['house-air', 'bench', 'outdoors'];
+
+/** Good readings of the points that nights need, corrected. Plain rows: a night of a house has some 30 000. */
+async function seriesOf(
+  holding: Holding,
+  yard: YardOfNights,
+  from: number,
+  to: number,
+): Promise<Map<string, Series>> {
+  const named = new Set([
+    ...yard.sources.flatMap((one) => [one.core, one.base]),
+    ...yard.channels.flatMap((one) => [one.loop?.intake, one.loop?.return]),
+  ]);
+  const wanted = yard.points.filter((one) => ROLES_OF_EVERY_NIGHT.includes(one.role) || named.has(one.key));
+  const series = new Map<number, { from: PointOfNights; line: Series }>(
+    wanted.map((one) => {
+      const { key, name, role, holdS } = one;
+      return [one.number, { from: one, line: { key, name, role, holdS, good: [] } }];
+    }),
+  );
+  if (wanted.length > 0) {
+    const numbers = sql.join(
+      wanted.map((one) => sql`${one.number}`),
+      sql`, `,
+    );
+    const { rows } = await holding.db.execute<{ point: string; at: number; value: number }>(sql`
+      select point, (extract(epoch from at) * 1000)::float8 as at, value from reading
+      where point in (${numbers}) and at >= ${new Date(from)} and at < ${new Date(to)} and quality = 0
+      order by point, at`);
+    for (const row of rows) {
+      const one = series.get(Number(row.point));
+      one?.line.good.push({ at: row.at, value: correct(one.from.calibrations, row.at, row.value) });
+    }
+  }
+  return new Map([...series.values()].map(({ line }) => [line.key, line]));
+}
+
+/**
+ * Epoch ms of the first thing that is known of each source of a house: a decision of a channel of its own, or a reading of
+ * its core or base. Sources of which nothing is known are absent: they have no nights yet.
+ */
+export async function firstKnown(holding: Holding, houseId: string): Promise<Map<string, number>> {
+  const { rows } = await holding.db.execute<{ id: string; at: number | null }>(sql`
+    select s.id, (extract(epoch from least(
+      (select min(first.at) from channel c cross join lateral
+        (select at from decision where channel_id = c.id order by at limit 1) first
+        where c.holding_id = s.holding_id and c.source_id = s.id),
+      (select min(first.at) from point p cross join lateral
+        (select at from reading where point = p.number order by at limit 1) first
+        where p.holding_id = s.holding_id and p.id in (s.core_point_id, s.base_point_id))
+    )) * 1000)::float8 as at
+    from source s
+    where s.holding_id = ${holding.id} and s.house_id = ${houseId} and s.removed_at is null`);
+  return new Map(rows.flatMap((row) => (row.at === null ? [] : [[row.id, row.at] as const])));
+}
