@@ -1,0 +1,161 @@
+import 'server-only';
+import { and, asc, eq, or, sql } from 'drizzle-orm';
+import { v7 as uuid } from 'uuid';
+import type { z } from 'zod';
+import type { Holding } from '@/db/client';
+import { channel, interlock, loop } from '@/db/schema/yard';
+import type { ChannelCreate } from '@/lib/schema/yard';
+import { Channel } from '@/lib/schema/yard-view';
+import { listNodes } from './node';
+import { touchPlan } from './plan';
+import { rulesOfChannel } from './point-uses';
+import { houseNames, inUse, isId, type HouseNames } from './reference';
+import { Refusal } from './refusal';
+
+type Given = z.infer<typeof ChannelCreate>;
+type Row = typeof channel.$inferSelect;
+
+function toChannel(row: Row, names: HouseNames): Channel {
+  const { id, revision, number, relay, key, label, frostHelp, contact, load, startsPerHour } = row;
+  const { highLimit, runProof, fallback, flow } = row;
+  return Channel.parse({
+    ...{ id, revision, number, relay, key, label, frostHelp, contact, load, startsPerHour },
+    ...{ highLimit, runProof, fallback, flow },
+    node: names.nodes.key(row.nodeId) ?? '',
+    source: names.sources.key(row.sourceId),
+    minOn: row.minOnS,
+    minOff: row.minOffS,
+    longestOn: row.longestOnS,
+    provedAt: row.provedAt?.toISOString() ?? null,
+  });
+}
+
+export async function listChannels(holding: Holding, houseId: string): Promise<Channel[]> {
+  const rows = await holding.db
+    .select()
+    .from(channel)
+    .where(inUse(holding, houseId, channel))
+    .orderBy(asc(channel.number));
+  const names = await houseNames(holding, houseId);
+  return rows.map((row) => toChannel(row, names));
+}
+
+/** By id, number or key; a number goes before a key of the same digits. */
+export async function findChannel(holding: Holding, houseId: string, ref: string): Promise<Channel | null> {
+  const all = await listChannels(holding, houseId);
+  return (
+    all.find((row) => row.id === ref) ??
+    all.find((row) => String(row.number) === ref) ??
+    all.find((row) => row.key === ref) ??
+    null
+  );
+}
+
+/** @throws Refusal at the path of a name that this house does not have, or of a relay that the node has not */
+async function columns(holding: Holding, houseId: string, given: Given) {
+  const names = await houseNames(holding, houseId);
+  const node = names.nodes.find(given.node, 'node');
+  const relays = (await listNodes(holding, houseId)).find((row) => row.id === node.id)?.channels ?? 0;
+  if (given.relay > relays) {
+    throw new Refusal(
+      'relay',
+      `Node ${node.key} has ${relays === 0 ? 'no relays' : `relays 1 to ${relays}`}.`,
+    );
+  }
+  const named = <T extends { point: string }>(part: T | null, path: string): T | null =>
+    part === null ? null : { ...part, point: names.points.find(part.point, `${path}.point`).key };
+  const { number, relay, key, label, frostHelp, contact, startsPerHour } = given;
+  const { kind, watts, volts, supply, contactAmps } = given.load;
+  const { flow } = given;
+  return {
+    ...{ number, relay, key, label, frostHelp, contact, startsPerHour },
+    load: {
+      kind,
+      ...(watts === undefined ? {} : { watts }),
+      ...(volts === undefined ? {} : { volts }),
+      ...(supply === undefined ? {} : { supply }),
+      ...(contactAmps === undefined ? {} : { contactAmps }),
+    },
+    flow:
+      flow === null
+        ? null
+        : {
+            litresPerSecond: flow.litresPerSecond,
+            from: flow.from,
+            ...(flow.sd === undefined ? {} : { sd: flow.sd }),
+          },
+    nodeId: node.id,
+    sourceId: names.sources.id(given.source, 'source'),
+    minOnS: given.minOn,
+    minOffS: given.minOff,
+    longestOnS: given.longestOn,
+    highLimit: named(given.highLimit, 'highLimit'),
+    runProof: named(given.runProof, 'runProof'),
+    fallback: named(given.fallback, 'fallback'),
+  };
+}
+
+export async function createChannel(holding: Holding, houseId: string, given: Given): Promise<Channel> {
+  const id = uuid();
+  await holding.db
+    .insert(channel)
+    .values({ ...(await columns(holding, houseId, given)), id, houseId, holdingId: holding.id });
+  await touchPlan(holding, houseId);
+  return found(holding, houseId, id);
+}
+
+/** A proof is of a wiring: another node, relay, contact or load has not been seen to run. */
+export async function amendChannel(
+  holding: Holding,
+  houseId: string,
+  before: Channel,
+  given: Given,
+): Promise<Channel> {
+  const set = await columns(holding, houseId, given);
+  const rewired =
+    given.node !== before.node ||
+    given.relay !== before.relay ||
+    given.contact !== before.contact ||
+    JSON.stringify(set.load) !== JSON.stringify(before.load);
+  await holding.db
+    .update(channel)
+    .set({ ...set, ...(rewired ? { provedAt: null } : {}), revision: sql`${channel.revision} + 1` })
+    .where(and(eq(channel.holdingId, holding.id), eq(channel.id, before.id)));
+  await touchPlan(holding, houseId);
+  return found(holding, houseId, before.id);
+}
+
+export async function removeChannel(
+  holding: Holding,
+  houseId: string,
+  gone: Channel,
+  now: Date,
+): Promise<void> {
+  const uses = [...(await rulesOfChannel(holding, gone.id)), ...(await fixedTo(holding, houseId, gone.id))];
+  if (uses.length > 0) throw new Refusal(null, `Still used by ${uses.join(', ')}. Change those first.`);
+  await holding.db
+    .update(channel)
+    .set({ removedAt: now, revision: sql`${channel.revision} + 1` })
+    .where(and(eq(channel.holdingId, holding.id), eq(channel.id, gone.id)));
+  await touchPlan(holding, houseId);
+}
+
+async function fixedTo(holding: Holding, houseId: string, id: string): Promise<string[]> {
+  const loops = await holding.db
+    .select({ name: loop.name })
+    .from(loop)
+    .where(and(inUse(holding, houseId, loop), eq(loop.channelId, id)));
+  const locks = await holding.db
+    .select({ id: interlock.id })
+    .from(interlock)
+    .where(
+      and(inUse(holding, houseId, interlock), or(eq(interlock.channelId, id), eq(interlock.otherId, id))),
+    );
+  return [...loops.map((row) => row.name), ...(locks.length > 0 ? ['an interlock'] : [])];
+}
+
+async function found(holding: Holding, houseId: string, id: string): Promise<Channel> {
+  const row = isId(id) ? await findChannel(holding, houseId, id) : null;
+  if (row === null) throw new Error('the channel was there a moment ago');
+  return row;
+}
