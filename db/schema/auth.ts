@@ -89,7 +89,10 @@ export const member = pgTable(
     role: text('role').notNull(),
     createdAt: instant('created_at').notNull().defaultNow(),
   },
-  (table) => [uniqueIndex('member_once').on(table.organizationId, table.userId), index('member_user').on(table.userId)],
+  (table) => [
+    uniqueIndex('member_once').on(table.organizationId, table.userId),
+    index('member_user').on(table.userId),
+  ],
 );
 
 export const invitation = pgTable(

@@ -1,4 +1,14 @@
-import { doublePrecision, foreignKey, index, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
+import {
+  doublePrecision,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
 import { source } from './yard';
 
@@ -11,7 +21,9 @@ export const heapEntry = pgTable(
     kind: text('kind').notNull(),
     at: instant('at').notNull(),
     text: text('text').notNull(),
-    materials: jsonb('materials').$type<{ material: string; kilograms?: number; litres?: number }[]>().notNull(),
+    materials: jsonb('materials')
+      .$type<{ material: string; kilograms?: number; litres?: number }[]>()
+      .notNull(),
     litresOfWater: doublePrecision('litres_of_water'),
     volumeM3: doublePrecision('volume_m3'),
     by: text('by').notNull(),
@@ -22,7 +34,10 @@ export const heapEntry = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.sourceId], foreignColumns: [source.holdingId, source.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.sourceId],
+      foreignColumns: [source.holdingId, source.id],
+    }).onDelete('cascade'),
     index('heap_entry_at').on(table.holdingId, table.sourceId, table.at),
   ],
 );

@@ -16,7 +16,10 @@ export const apiKey = pgTable(
     lastUsedAt: instant('last_used_at'),
     revokedAt: instant('revoked_at'),
   },
-  (table) => [primaryKey({ columns: [table.holdingId, table.id] }), uniqueIndex('api_key_hash').on(table.hash)],
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.id] }),
+    uniqueIndex('api_key_hash').on(table.hash),
+  ],
 );
 
 /** Append-only: no query updates or deletes it. */
@@ -32,7 +35,10 @@ export const auditLog = pgTable(
     subject: text('subject').notNull(),
     detail: jsonb('detail').$type<Record<string, unknown>>().notNull().default({}),
   },
-  (table) => [primaryKey({ columns: [table.holdingId, table.id] }), index('audit_log_at').on(table.holdingId, table.at)],
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.id] }),
+    index('audit_log_at').on(table.holdingId, table.at),
+  ],
 );
 
 /** Answers kept for 24 h, so that a repeated request with the same Idempotency-Key acts once. */

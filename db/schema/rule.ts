@@ -1,5 +1,15 @@
 import { sql } from 'drizzle-orm';
-import { foreignKey, index, integer, jsonb, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import type { RuleBody } from '@/lib/schema/rule';
 import { holdingId, instant } from './columns';
 import { house } from './yard';
@@ -19,7 +29,10 @@ export const rule = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
     uniqueIndex('rule_slug').on(table.holdingId, table.slug),
   ],
 );
@@ -42,10 +55,17 @@ export const ruleVersion = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.ruleId], foreignColumns: [rule.holdingId, rule.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.ruleId],
+      foreignColumns: [rule.holdingId, rule.id],
+    }).onDelete('cascade'),
     uniqueIndex('rule_version_number').on(table.ruleId, table.number),
-    uniqueIndex('rule_version_draft').on(table.ruleId).where(sql`status = 'draft'`),
-    uniqueIndex('rule_version_in_force').on(table.ruleId).where(sql`status = 'in-force'`),
+    uniqueIndex('rule_version_draft')
+      .on(table.ruleId)
+      .where(sql`status = 'draft'`),
+    uniqueIndex('rule_version_in_force')
+      .on(table.ruleId)
+      .where(sql`status = 'in-force'`),
     index('rule_version_rule').on(table.holdingId, table.ruleId),
   ],
 );

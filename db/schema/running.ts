@@ -38,11 +38,18 @@ export const switching = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
     index('switching_at').on(table.holdingId, table.houseId, table.at),
     index('switching_channel').on(table.channelId, table.at),
-    uniqueIndex('switching_number').on(table.channelId, table.number).where(sql`number is not null`),
-    uniqueIndex('switching_trip').on(table.channelId, table.trip).where(sql`trip is not null`),
+    uniqueIndex('switching_number')
+      .on(table.channelId, table.number)
+      .where(sql`number is not null`),
+    uniqueIndex('switching_trip')
+      .on(table.channelId, table.trip)
+      .where(sql`trip is not null`),
   ],
 );
 
@@ -63,7 +70,10 @@ export const decision = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
     index('decision_channel').on(table.channelId, table.at),
     uniqueIndex('decision_once').on(table.channelId, table.at, table.claim, table.state),
   ],
@@ -80,7 +90,10 @@ export const relayReport = pgTable(
     state: text('state').$type<'on' | 'off'>().notNull(),
     number: bigint('number', { mode: 'number' }).notNull(),
   },
-  (table) => [primaryKey({ columns: [table.holdingId, table.id] }), index('relay_report_channel').on(table.channelId, table.at)],
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.id] }),
+    index('relay_report_channel').on(table.channelId, table.at),
+  ],
 );
 
 /** What people ordered, numbered a house; the core takes each number once, in order. */
@@ -96,7 +109,10 @@ export const personCommand = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.houseId, table.number] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
   ],
 );
 
@@ -119,7 +135,10 @@ export const controlMemory = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.houseId] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
   ],
 );
 

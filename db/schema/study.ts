@@ -16,7 +16,10 @@ export const night = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.sourceId, table.night] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
     index('night_house').on(table.holdingId, table.houseId, table.night),
   ],
 );

@@ -13,7 +13,9 @@ export const alarm = pgTable(
     /** Stable while its cause stands: kind, house and what it is about. */
     key: text('key').notNull(),
     kind: text('kind').notNull(),
-    about: jsonb('about').$type<{ point?: string; channel?: string; source?: string; node?: string }>().notNull(),
+    about: jsonb('about')
+      .$type<{ point?: string; channel?: string; source?: string; node?: string }>()
+      .notNull(),
     data: jsonb('data').$type<Record<string, unknown>>().notNull().default({}),
     raisedAt: instant('raised_at').notNull(),
     clearedAt: instant('cleared_at'),
@@ -22,7 +24,9 @@ export const alarm = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    uniqueIndex('alarm_standing').on(table.holdingId, table.key).where(sql`cleared_at is null`),
+    uniqueIndex('alarm_standing')
+      .on(table.holdingId, table.key)
+      .where(sql`cleared_at is null`),
     index('alarm_raised').on(table.holdingId, table.raisedAt),
   ],
 );
@@ -40,7 +44,10 @@ export const alarmEvent = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.alarmId], foreignColumns: [alarm.holdingId, alarm.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.alarmId],
+      foreignColumns: [alarm.holdingId, alarm.id],
+    }).onDelete('cascade'),
     index('alarm_event_alarm').on(table.alarmId, table.at),
   ],
 );

@@ -42,7 +42,9 @@ export const house = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    uniqueIndex('house_slug').on(table.holdingId, table.slug).where(sql`removed_at is null`),
+    uniqueIndex('house_slug')
+      .on(table.holdingId, table.slug)
+      .where(sql`removed_at is null`),
   ],
 );
 
@@ -73,8 +75,13 @@ export const node = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
-    uniqueIndex('node_key').on(table.holdingId, table.houseId, table.key).where(sql`removed_at is null`),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
+    uniqueIndex('node_key')
+      .on(table.holdingId, table.houseId, table.key)
+      .where(sql`removed_at is null`),
     uniqueIndex('node_token').on(table.tokenHash),
     index('node_former_token').on(table.formerTokenHash),
   ],
@@ -106,8 +113,13 @@ export const point = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
-    uniqueIndex('point_key').on(table.holdingId, table.houseId, table.key).where(sql`removed_at is null`),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
+    uniqueIndex('point_key')
+      .on(table.holdingId, table.houseId, table.key)
+      .where(sql`removed_at is null`),
     uniqueIndex('point_number').on(table.number),
   ],
 );
@@ -126,7 +138,10 @@ export const calibration = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.pointId], foreignColumns: [point.holdingId, point.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.pointId],
+      foreignColumns: [point.holdingId, point.id],
+    }).onDelete('cascade'),
     index('calibration_point').on(table.pointId, table.from),
   ],
 );
@@ -152,8 +167,13 @@ export const source = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
-    uniqueIndex('source_slug').on(table.holdingId, table.slug).where(sql`removed_at is null`),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
+    uniqueIndex('source_slug')
+      .on(table.holdingId, table.slug)
+      .where(sql`removed_at is null`),
   ],
 );
 
@@ -180,7 +200,13 @@ export const channel = pgTable(
     longestOnS: integer('longest_on_s'),
     highLimit: jsonb('high_limit').$type<{ point: string; above: number }>(),
     runProof: jsonb('run_proof').$type<{ point: string; above: number }>(),
-    fallback: jsonb('fallback').$type<{ point: string; below: number; above: number; onFor: number; offFor: number }>(),
+    fallback: jsonb('fallback').$type<{
+      point: string;
+      below: number;
+      above: number;
+      onFor: number;
+      offFor: number;
+    }>(),
     flow: jsonb('flow').$type<{ litresPerSecond: number; from: string; sd?: number }>(),
     /** When this wiring was proved; a changed wiring clears it. */
     provedAt: instant('proved_at'),
@@ -190,11 +216,20 @@ export const channel = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
     foreignKey({ columns: [table.holdingId, table.nodeId], foreignColumns: [node.holdingId, node.id] }),
-    uniqueIndex('channel_number').on(table.holdingId, table.houseId, table.number).where(sql`removed_at is null`),
-    uniqueIndex('channel_key').on(table.holdingId, table.houseId, table.key).where(sql`removed_at is null`),
-    uniqueIndex('channel_relay').on(table.holdingId, table.nodeId, table.relay).where(sql`removed_at is null`),
+    uniqueIndex('channel_number')
+      .on(table.holdingId, table.houseId, table.number)
+      .where(sql`removed_at is null`),
+    uniqueIndex('channel_key')
+      .on(table.holdingId, table.houseId, table.key)
+      .where(sql`removed_at is null`),
+    uniqueIndex('channel_relay')
+      .on(table.holdingId, table.nodeId, table.relay)
+      .where(sql`removed_at is null`),
   ],
 );
 
@@ -216,8 +251,13 @@ export const loop = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
-    uniqueIndex('loop_slug').on(table.holdingId, table.slug).where(sql`removed_at is null`),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
+    uniqueIndex('loop_slug')
+      .on(table.holdingId, table.slug)
+      .where(sql`removed_at is null`),
   ],
 );
 
@@ -238,7 +278,10 @@ export const interlock = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
   ],
 );
 
@@ -257,7 +300,12 @@ export const lockout = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({ columns: [table.holdingId, table.houseId], foreignColumns: [house.holdingId, house.id] }).onDelete('cascade'),
-    uniqueIndex('lockout_once').on(table.channelId).where(sql`removed_at is null`),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
+    uniqueIndex('lockout_once')
+      .on(table.channelId)
+      .where(sql`removed_at is null`),
   ],
 );

@@ -58,8 +58,21 @@ export type StateSource = z.infer<typeof StateSource>;
 
 /** From the worker. `/live?house=<id>`; the first frame is a state, and again whenever a reader fell behind. */
 export const LiveFrame = z.discriminatedUnion('type', [
-  z.object({ type: z.literal('state'), house: z.string(), state: HouseState, rate: z.number(), now: z.string() }),
-  z.object({ type: z.literal('switching'), house: z.string(), channel: z.number(), at: z.string(), to: State, claim: z.string() }),
+  z.object({
+    type: z.literal('state'),
+    house: z.string(),
+    state: HouseState,
+    rate: z.number(),
+    now: z.string(),
+  }),
+  z.object({
+    type: z.literal('switching'),
+    house: z.string(),
+    channel: z.number(),
+    at: z.string(),
+    to: State,
+    claim: z.string(),
+  }),
   z.object({ type: z.literal('alarms'), house: z.string() }),
   z.object({ type: z.literal('plan'), house: z.string() }),
 ]);
