@@ -1,24 +1,43 @@
 /** The second demo holding, Stonebeck Nursery, whose rows Larkmoor must never see. Invented throughout. */
 import { probe, type DemoHouse } from './larkmoor';
 
-export const lowHouse: DemoHouse = {
+export const beckHouse: DemoHouse = {
   house: {
-    name: 'Low house',
+    name: 'Beck house',
     zone: 'Europe/London',
     latitude: 54.4,
     longitude: -2.6,
-    altitude: 180,
+    altitude: 140,
     frostLimit: 2,
     frostAlarm: 1,
   },
   nodes: [{ key: 'SN-1', kind: 'socket', reportEvery: 30, channels: 4 }],
   points: [
     probe('SN-1', 'house-air', 'House air', 'house-air', { maxRate: 0.5, frozenAfter: 14_400 }),
+    probe('SN-1', 'bench-1', 'Bench probe 1', 'bench', { maxRate: 0.5, frozenAfter: 14_400 }),
+    {
+      key: 'humidity',
+      node: 'SN-1',
+      name: 'House humidity',
+      role: 'humidity',
+      unit: '%RH',
+      min: 0,
+      max: 110,
+    },
     probe('SN-1', 'outdoors', 'Outdoors', 'outdoors', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('SN-1', 'loop-intake', 'Loop intake', 'loop-intake', { maxRate: 1 }),
     probe('SN-1', 'loop-return', 'Loop return', 'loop-return', { maxRate: 2 }),
     probe('SN-1', 'beck-core', 'Beck heap core', 'heap-core', { maxRate: 0.1 }),
     probe('SN-1', 'beck-base', 'Beck heap beside the pipe', 'heap-base', { maxRate: 0.2 }),
+    {
+      key: 'fan-amps',
+      node: 'SN-1',
+      name: 'Beck-heap fan current',
+      role: 'current',
+      unit: 'A',
+      min: 0,
+      max: 5,
+    },
   ],
   sources: [
     {
@@ -40,11 +59,11 @@ export const lowHouse: DemoHouse = {
       source: 'beck-heap',
       frostHelp: true,
       contact: 'NO',
-      load: { kind: 'motor', watts: 12, volts: 24, supply: 'dc', contactAmps: 5 },
+      load: { kind: 'motor', watts: 10, volts: 24, supply: 'dc', contactAmps: 5 },
       minOn: 120,
       minOff: 120,
       startsPerHour: 6,
-      flow: { litresPerSecond: 42, from: 'rated' },
+      flow: { litresPerSecond: 35, from: 'rated' },
     },
   ],
   loops: [

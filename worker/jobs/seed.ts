@@ -16,7 +16,7 @@ import {
   writeHolding,
   type DemoPerson,
 } from '@/db/seed/people';
-import { lowHouse } from '@/db/seed/stonebeck';
+import { beckHouse } from '@/db/seed/stonebeck';
 import { renewTokens, writeHouse, type NodeSecret, type SeededHouse } from '@/db/seed/write-house';
 import { env } from '@/lib/server/env';
 import { ROLES } from '@/lib/server/permissions';
@@ -42,7 +42,7 @@ const HOLDINGS: { name: string; slug: string; people: DemoPerson[]; houses: Demo
     name: 'Stonebeck Nursery',
     slug: 'stonebeck-nursery',
     people: [{ email: 'owner@stonebeck.example', name: 'Stonebeck owner', role: owner }],
-    houses: [lowHouse],
+    houses: [beckHouse],
   },
 ];
 
