@@ -3,8 +3,7 @@
  * its condition unknown; `not` unknown stays unknown; an unknown root is not met. Operators are the library's to the
  * letter, coercions included, so that with every fact there the verdict is the library's.
  */
-import type { Condition, ConditionNode } from '@/lib/schema/rule';
-import type { ConditionTree } from './types';
+import type { Condition, ConditionNode, ConditionTree } from './rule-body';
 
 export type FactValue = number | boolean;
 /** null: the fact has no good reading. */

@@ -4,6 +4,7 @@
  */
 import type { CompiledConditions } from './conditions';
 import type { RuleCalendar, TimeFacts } from './calendar';
+import type { PlanInterlock } from './interlocks';
 import type { ChannelConfig, HouseConfig, PointConfig, RuleConfig, SourceConfig, State } from './types';
 
 export interface Plan {
@@ -17,7 +18,7 @@ export interface Plan {
   interlocks: PlanInterlock[];
   /** Channels, needed ones before those that need them. */
   needsOrder: number[];
-  /** Channels by number: who asks first for the last of a credit. */
+  /** Places of channels, by number: who asks first for the last of a credit. */
   order: number[];
   /** Derived points, each after its inputs. */
   derivedOrder: number[];
@@ -105,12 +106,4 @@ export interface PlanRest {
     intake: number | null;
     return: number | null;
   } | null;
-}
-
-export interface PlanInterlock {
-  kind: 'never-with' | 'needs';
-  channel: number;
-  other: number;
-  delayMs: number;
-  frostMayBreak: boolean;
 }

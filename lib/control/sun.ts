@@ -1,6 +1,6 @@
 /** Sunrise and sunset of a local date at a place. */
-import { getTimes } from 'suncalc';
 import { DateTime } from 'luxon';
+import { getTimes } from 'suncalc';
 
 export interface SunDay {
   sunrise: number | null;
@@ -10,15 +10,15 @@ export interface SunDay {
 }
 
 /**
- * The two events of the solar day round the local noon of a date, epoch ms, to about a minute (the sun's upper edge
- * at the horizon, −0.833°). Near the pole, where one or both do not happen, they are null and `polar` says which way.
+ * The two events of the solar day round a local noon (epoch ms), epoch ms, to about a minute: the sun's upper edge
+ * at the horizon, −0.833°. Degrees, north and east positive. Where they do not happen they are null and `polar` says
+ * which way. From local noon, so that the sunset of an American evening stays on its own date.
  */
-export function sunDay(date: DateTime, latitude: number, longitude: number): SunDay {
-  // suncalc takes the solar day whose noon is nearest: local noon, so that an American evening stays on its own date
-  const noon = date.set({ hour: 12, minute: 0, second: 0, millisecond: 0 });
-  const times = getTimes(noon.toJSDate(), latitude, longitude);
-  const sunrise = times.sunrise?.getTime() ?? null;
-  const sunset = times.sunset?.getTime() ?? null;
-  const polar = times.alwaysUp === true ? 'up' : times.alwaysDown === true ? 'down' : null;
-  return { sunrise, sunset, polar };
+export function sunOfDay(noon: number, latitude: number, longitude: number): SunDay {
+  const times = getTimes(DateTime.fromMillis(noon).toJSDate(), latitude, longitude);
+  return {
+    sunrise: times.sunrise === null ? null : Math.round(times.sunrise.getTime()),
+    sunset: times.sunset === null ? null : Math.round(times.sunset.getTime()),
+    polar: times.alwaysUp === true ? 'up' : times.alwaysDown === true ? 'down' : null,
+  };
 }

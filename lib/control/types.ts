@@ -2,7 +2,7 @@
  * What the core is told and what it answers. Everything is plain data in SI: °C, K, s, W; instants are epoch
  * milliseconds UTC. Ids are the database's, so that latches, timers and credits outlive a renaming.
  */
-import type { ConditionTree, RuleBody } from '@/lib/schema/rule';
+import type { ConditionTree, RuleBody } from './rule-body';
 
 export type State = 'on' | 'off';
 export type Quality = 'good' | 'uncertain' | 'bad';
@@ -288,15 +288,4 @@ export interface Fault {
   about: { point?: string; channel?: string; source?: string };
   since: number;
   data: Data;
-}
-
-export interface StepResult {
-  memory: import('./memory').Memory;
-  channels: ChannelResult[];
-  points: PointResult[];
-  sources: SourceResult[];
-  faults: Fault[];
-  events: ControlEvent[];
-  /** Earliest instant at which something changes without a new reading; null: nothing is pending. */
-  wakeAt: number | null;
 }

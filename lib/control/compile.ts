@@ -1,0 +1,195 @@
+/** From a house as the database keeps it to a plan that `step` can run. */
+import { compileCalendar, compileTimeFacts, place } from './calendar';
+import { compileConditions } from './conditions';
+import { compileDerived, derivedOrder } from './derived';
+import { needsOrder, type PlanInterlock } from './interlocks';
+import type { Plan, PlanChannel, PlanPoint, PlanRest, PlanRule, PlanSource } from './plan';
+import type { ChannelConfig, HouseConfig, PointConfig, RuleConfig, SourceConfig } from './types';
+
+/** Points that may honestly stand still, by role. */
+const NEVER_FROZEN = new Set(['light', 'contact', 'ground', 'heap-core', 'heap-base', 'heap-edge']);
+
+/** A place by name, noting the names that lead nowhere. */
+type Find = (key: string | null) => number | null;
+
+/**
+ * Compiles a house. Never throws for a configuration that the forms accepted: a key that leads nowhere (a point
+ * removed under a rule) is noted in `plan.missing`, and what hangs on it counts as bad.
+ */
+export function compile(config: HouseConfig): Plan {
+  const missing = new Set<string>();
+  const finder = (keys: string[]): Find => {
+    const places = new Map(keys.map((key, index) => [key, index]));
+    return (key) => {
+      if (key === null) return null;
+      const found = places.get(key);
+      if (found === undefined) missing.add(key);
+      return found ?? null;
+    };
+  };
+  const point = finder(config.points.map((one) => one.key));
+  const source = finder(config.sources.map((one) => one.slug));
+  const channel = finder(config.channels.map((one) => one.key));
+  const where = place(config.house);
+
+  const rules: PlanRule[] = [];
+  for (const rule of config.rules) {
+    const place = channel(rule.channel);
+    if (place !== null) rules.push(compileRule(rule, place, point, compileCalendar(rule.body, where)));
+  }
+  const interlocks: PlanInterlock[] = [];
+  for (const lock of config.interlocks) {
+    const first = channel(lock.channel);
+    const other = channel(lock.other);
+    if (first === null || other === null) continue;
+    interlocks.push({
+      kind: lock.kind,
+      channel: first,
+      other,
+      delayMs: lock.delayS * 1000,
+      frostMayBreak: lock.frostMayBreak,
+    });
+  }
+  const channels = config.channels.map((one, index) =>
+    compileChannel(one, index, rules, interlocks, point, source),
+  );
+  const sources = config.sources.map((one, index) => compileSource(one, index, channels, rules, point));
+  const points = config.points.map((one) => compilePoint(one, config, point));
+  return {
+    shape: [points, rules, sources, channels].map((list) => list.map((one) => one.id).join(',')).join(';'),
+    house: config.house,
+    points,
+    sources,
+    channels,
+    rules,
+    interlocks,
+    needsOrder: needsOrder(channels.length, interlocks),
+    order: channels.map((_, index) => index).sort((a, b) => numberOf(channels, a) - numberOf(channels, b)),
+    derivedOrder: derivedOrder(points),
+    housePoints: points.flatMap((one, index) => (one.isHouse ? [index] : [])),
+    timeFacts: compileTimeFacts(where),
+    usesTimeFacts: rules.some((rule) => rule.only?.facts.some((fact) => fact.startsWith('time.')) === true),
+    missing: [...missing],
+  };
+}
+
+const numberOf = (channels: PlanChannel[], index: number): number => channels[index]?.number ?? 0;
+
+function compilePoint(config: PointConfig, house: HouseConfig, find: Find): PlanPoint {
+  return {
+    id: config.id,
+    key: config.key,
+    config,
+    staleMs: (config.staleAfterS ?? 3 * config.reportEveryS) * 1000,
+    frozenMs:
+      config.frozenAfterS === null || NEVER_FROZEN.has(config.role) ? null : config.frozenAfterS * 1000,
+    maxRateMs: config.maxRate === null ? null : config.maxRate / 1000,
+    oneWire: config.sensor === 'one-wire',
+    isHouse: config.role === 'house-air' || config.role === 'bench',
+    derived: config.derived === null ? null : compileDerived(config.derived, house, find),
+  };
+}
+
+function compileRule(
+  config: RuleConfig,
+  channel: number,
+  find: Find,
+  calendar: PlanRule['calendar'],
+): PlanRule {
+  const { body } = config;
+  const own = { point: find(body.point), key: body.point, offset: 0 };
+  const standIns = body.standIns.map((one) => ({
+    point: find(one.point),
+    key: one.point,
+    offset: one.offset,
+  }));
+  const only = body.only === undefined ? null : compileConditions(body.only);
+  const points = [own, ...standIns];
+  return {
+    id: config.id,
+    config,
+    channel,
+    warm: body.purpose === 'warm',
+    points,
+    calendar,
+    only,
+    rest: compileRest(body.rest, find),
+  };
+}
+
+function compileRest(rest: RuleConfig['body']['rest'], find: Find): PlanRest | null {
+  if (rest === undefined) return null;
+  const gain = rest.leastGain;
+  return {
+    longestDrawMs: rest.longestDraw * 1000,
+    leastMs: rest.least * 1000,
+    mostMs: rest.most === undefined ? null : rest.most * 1000,
+    until:
+      rest.until === undefined
+        ? null
+        : { point: find(rest.until.point), key: rest.until.point, level: rest.until.level },
+    leastGain:
+      gain === undefined
+        ? null
+        : {
+            kelvin: gain.kelvin,
+            afterMs: gain.after * 1000,
+            intake: find(gain.intake),
+            return: find(gain.return),
+          },
+  };
+}
+
+function compileChannel(
+  config: ChannelConfig,
+  index: number,
+  rules: PlanRule[],
+  interlocks: PlanInterlock[],
+  point: Find,
+  source: Find,
+): PlanChannel {
+  const own = rules.flatMap((rule, place) => (rule.channel === index ? [place] : []));
+  const cools =
+    config.loadKind === 'vent' || (own.length > 0 && own.every((place) => rules[place]?.warm === false));
+  return {
+    id: config.id,
+    key: config.key,
+    number: config.number,
+    config,
+    source: source(config.source),
+    rules: own,
+    safe: config.contact === 'NC' ? 'on' : 'off',
+    minOnMs: config.minOnS * 1000,
+    minOffMs: config.minOffS * 1000,
+    highLimitPoint: point(config.highLimit?.point ?? null),
+    runProofPoint: point(config.runProof?.point ?? null),
+    inFrost: config.frostHelp ? 'helps' : cools ? 'cools' : null,
+    frostMayBreakRest: own.every((place) => rules[place]?.config.body.rest?.frostMayBreak !== false),
+    interlocks: interlocks.flatMap((lock, place) =>
+      lock.channel === index || lock.other === index ? [place] : [],
+    ),
+  };
+}
+
+function compileSource(
+  config: SourceConfig,
+  index: number,
+  channels: PlanChannel[],
+  rules: PlanRule[],
+  point: Find,
+): PlanSource {
+  const own = channels.flatMap((channel, place) => (channel.source === index ? [place] : []));
+  const restRules = rules.flatMap((rule, place) =>
+    own.includes(rule.channel) && rule.rest !== null ? [place] : [],
+  );
+  return {
+    id: config.id,
+    slug: config.slug,
+    config,
+    core: point(config.corePoint),
+    channels: own,
+    rules: restRules,
+    hasRest: restRules.length > 0,
+    dailyLimitMs: config.dailyLimitS === null ? null : config.dailyLimitS * 1000,
+  };
+}

@@ -1,0 +1,159 @@
+/** Points that are reckoned from others. Quality is the worst of the inputs; the time is the newest input's. */
+import {
+  dewPoint,
+  dryAirDensity,
+  dryAirJPerKgK,
+  pressureAtAltitude,
+  saturationPressure,
+} from '@/lib/physics/air';
+import type { PointMemory } from './memory';
+import type { PlanDerived, PlanPoint } from './plan';
+import { keepQuality } from './quality';
+import { entry, type Run } from './run';
+import type { HouseConfig, PointConfig, Quality } from './types';
+
+const HOUR_MS = 3_600_000;
+const TRAIL_LENGTH = 120;
+
+export function compileDerived(
+  derived: NonNullable<PointConfig['derived']>,
+  house: HouseConfig,
+  find: (key: string) => number | null,
+): PlanDerived {
+  const [intake, back] = derived.points;
+  const loop = house.loops.find((one) => one.intake === intake && one.return === back);
+  return {
+    of: derived.of,
+    // −1 stands for a point that is not there: the derived one is then bad for good
+    inputs: derived.points.map((key) => find(key) ?? -1),
+    windowMs: (derived.windowS ?? 1800) * 1000,
+    pressure: pressureAtAltitude(house.house.altitude),
+    flowM3S: house.channels.find((one) => one.key === loop?.channel)?.flowM3S ?? null,
+  };
+}
+
+/** Derived points, each after its inputs; those in a ring (refused at save) are left out and so stay bad. */
+export function derivedOrder(points: readonly PlanPoint[]): number[] {
+  const order: number[] = [];
+  const known = new Set(points.flatMap((point, index) => (point.derived === null ? [index] : [])));
+  for (let more = true; more;) {
+    more = false;
+    points.forEach((point, index) => {
+      if (
+        known.has(index) ||
+        point.derived?.inputs.some((input) => input >= 0 && !known.has(input)) !== false
+      )
+        return;
+      known.add(index);
+      order.push(index);
+      more = true;
+    });
+  }
+  return order;
+}
+
+/** Values are reckoned anew only where an input has a newer reading. */
+export function settleDerived(run: Run): void {
+  for (const index of run.plan.derivedOrder) {
+    const { derived } = entry(run.plan.points, index);
+    if (derived === null) continue;
+    let at = -Infinity;
+    let quality: Quality = 'good';
+    let why: string | null = null;
+    for (const input of derived.inputs) {
+      const memory = input < 0 ? null : entry(run.points, input);
+      at = Math.max(at, memory?.at ?? -Infinity);
+      const worse = memory?.quality ?? 'bad';
+      if (worse === 'bad' || (worse === 'uncertain' && quality === 'good')) quality = worse;
+      if (worse !== 'good') why ??= `input-${worse}`;
+    }
+    const memory = entry(run.points, index);
+    if (at > (memory.at ?? -Infinity) && quality !== 'bad') {
+      run.points[index] = reckon(
+        derived,
+        memory,
+        derived.inputs.map((input) => entry(run.points, input)),
+        at,
+      );
+    }
+    if (entry(run.points, index).value === null && quality !== 'bad') {
+      quality = 'bad';
+      why = derived.of === 'trend' ? 'window-not-full' : 'cannot-be-reckoned';
+    }
+    keepQuality(run, index, quality, why);
+  }
+}
+
+function reckon(derived: PlanDerived, memory: PointMemory, inputs: PointMemory[], at: number): PointMemory {
+  const values = inputs.map((input) => input.value ?? NaN);
+  let trail = memory.trail;
+  let value: number | null;
+  if (derived.of === 'trend') {
+    trail = extendTrail(memory.trail ?? [], [at, values[0] ?? NaN], derived.windowMs);
+    value = trend(trail, derived.windowMs);
+  } else value = formula(derived, values);
+  return { ...memory, value: value !== null && Number.isFinite(value) ? value : null, at, lastAt: at, trail };
+}
+
+/**
+ * K, °C, Pa or W by kind. Humidity points are in %RH, 0 to 100. loop-heat: Q = ρ V̇ c_p (return − intake), air
+ * weighed at the intake, where the flow is told; null without a flow.
+ */
+function formula(derived: PlanDerived, values: number[]): number | null {
+  const [first = NaN, second = NaN] = values;
+  switch (derived.of) {
+    case 'difference':
+    case 'lift':
+      return first - second;
+    case 'mean':
+      return values.reduce((sum, value) => sum + value, 0) / values.length;
+    case 'least':
+      return Math.min(...values);
+    case 'greatest':
+      return Math.max(...values);
+    case 'dew-point':
+      return dewPoint(first, Math.min(1, Math.max(0, second / 100)));
+    case 'vapour-pressure-deficit':
+      return saturationPressure(first) * (1 - Math.min(1, Math.max(0, second / 100)));
+    case 'loop-heat':
+      if (derived.flowM3S === null) return null;
+      return dryAirDensity(first, derived.pressure) * derived.flowM3S * dryAirJPerKgK * (second - first);
+    default:
+      return null;
+  }
+}
+
+/** Thinned to about 120 samples a window, so that memory does not grow with the reporting rate. */
+function extendTrail(
+  trail: [number, number][],
+  sample: [number, number],
+  windowMs: number,
+): [number, number][] {
+  const last = trail.at(-1);
+  const kept = trail.filter(([at]) => at >= sample[0] - windowMs);
+  // the newest always counts: where it is too near the one before, it takes its place
+  const before = trail.at(-2);
+  if (last !== undefined && before !== undefined && sample[0] - before[0] < windowMs / TRAIL_LENGTH)
+    kept.pop();
+  return [...kept, sample];
+}
+
+/** Slope by least squares, unit an hour; null until the samples span half the window. */
+function trend(trail: [number, number][], windowMs: number): number | null {
+  const first = trail[0];
+  const last = trail.at(-1);
+  if (first === undefined || last === undefined || last[0] - first[0] < windowMs / 2) return null;
+  let sumT = 0;
+  let sumV = 0;
+  let sumTT = 0;
+  let sumTV = 0;
+  for (const [at, value] of trail) {
+    const hours = (at - first[0]) / HOUR_MS;
+    sumT += hours;
+    sumV += value;
+    sumTT += hours * hours;
+    sumTV += hours * value;
+  }
+  const n = trail.length;
+  return (n * sumTV - sumT * sumV) / (n * sumTT - sumT * sumT);
+}

@@ -1,0 +1,56 @@
+/** The working state of one step: copies of the memory's lists, whose entries are replaced, never changed. */
+import type { ChannelMemory, FrostMemory, PointMemory, RuleMemory, SourceMemory } from './memory';
+import type { InterlockVerdict } from './interlocks';
+import type { Plan } from './plan';
+import type { ControlEvent, Observed, Quality } from './types';
+
+export interface Run {
+  plan: Plan;
+  observed: Observed;
+  /** The instant that is being settled. */
+  at: number;
+  /** The instant of the step itself: orders given anywhere in it leave now. */
+  stepAt: number;
+  /** Nobody drove the relays at `at`: the worker was away. */
+  undriven: boolean;
+  /** Earliest later instant at which something changes by itself; Infinity: none. */
+  wake: number;
+  points: PointMemory[];
+  rules: RuleMemory[];
+  sources: SourceMemory[];
+  channels: ChannelMemory[];
+  frost: FrostMemory;
+  /** Quality as control uses it: ten minutes of uncertain count as bad. */
+  usable: Quality[];
+  /** How each rule stands at `at`. */
+  standing: RuleCode[];
+  interlocked: (InterlockVerdict | null)[];
+  /** By source: Σ 1/longest draw a ms, and the number, of what draws or has been decided to at `at`. */
+  drawRate: number[];
+  drawCount: number[];
+  events: ControlEvent[];
+  /** Faults of the step before, and whether explanations are wanted with switchings. */
+  explains: boolean;
+}
+
+/** Why a rule wants its channel on, or not. */
+export type RuleCode =
+  | 'wants'
+  | 'satisfied'
+  | 'out-of-season'
+  | 'out-of-hours'
+  | 'condition-not-met'
+  | 'condition-unknown'
+  | 'point-bad';
+
+/** The entry of a list that the plan says is there. */
+export function entry<T>(list: readonly T[], index: number): T {
+  const found = list[index];
+  if (found === undefined) throw new RangeError(`The plan names entry ${index} of a list of ${list.length}.`);
+  return found;
+}
+
+/** Something happens by itself at `instant`: the step must be awake then. */
+export function wakeAt(run: Run, instant: number): void {
+  if (instant > run.at && instant < run.wake) run.wake = instant;
+}

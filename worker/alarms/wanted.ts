@@ -1,0 +1,102 @@
+/** Which alarms ought to stand in a house: level-triggered, from its faults and its nodes. Pure. */
+import type { AlarmAbout } from '@/db/queries/alarm';
+import type { HouseRecord, NodeWiring } from '@/db/queries/plan';
+import type { StepResult } from '@/lib/control/step-result';
+import type { Fault } from '@/lib/control/types';
+import type { AlarmKind } from '@/lib/schema/alarm';
+import type { NodeStanding } from '../control/state';
+
+export interface WantedAlarm {
+  key: string;
+  kind: AlarmKind;
+  about: AlarmAbout;
+  data: Record<string, unknown>;
+  since: number;
+}
+
+/** A node is lost this long after its points are taken as silent. */
+const LOST_AFTER_SILENCE_MS = 60_000;
+const SILENT_INTERVALS = 3;
+
+export interface WantedAlarms {
+  alarms: WantedAlarm[];
+  /** Keys of which nothing can be said yet: they stay as they are. `others`: all that are not wanted. */
+  undecided: ReadonlySet<string> | 'others';
+}
+
+/**
+ * App time at which a node that says nothing more is lost. Silence counts from the worker's own start, for before it the
+ * silence may have been ours. Null: it is here, was never heard of, or is not one that calls.
+ */
+export function lostAt(
+  node: NodeWiring,
+  standing: NodeStanding | undefined,
+  startedAt: number,
+): number | null {
+  const calls = node.kind === 'socket' || node.kind === 'http';
+  if (!calls || standing === undefined || standing.lastHeardAt === null) return null;
+  if (node.kind === 'socket' && standing.online) return null;
+  const heardAt = Math.max(standing.lastHeardAt, startedAt);
+  return heardAt + SILENT_INTERVALS * node.reportEveryS * 1000 + LOST_AFTER_SILENCE_MS;
+}
+
+/** What stands while a house's own step fails: nothing is known of the rest. */
+export function controlFailed(houseId: string, why: string, since: number): WantedAlarms {
+  const key = keyOf('control-not-running', houseId, 'step');
+  return {
+    alarms: [{ key, kind: 'control-not-running', about: {}, data: { why }, since }],
+    undecided: 'others',
+  };
+}
+
+export function wantedAlarms(
+  record: HouseRecord,
+  result: StepResult,
+  nodes: ReadonlyMap<string, NodeStanding>,
+  startedAt: number,
+  now: number,
+): WantedAlarms {
+  const alarms: WantedAlarm[] = [];
+  const undecided = new Set<string>();
+  /** One cause leads: of a node that is away, or was never there, its points have nothing to add. */
+  const away = new Set<string>();
+  for (const node of record.nodes) {
+    const standing = nodes.get(node.id);
+    const at = lostAt(node, standing, startedAt);
+    const key = keyOf('node-lost', record.id, node.id);
+    if (at !== null && now >= at) {
+      const data = { lastHeardAt: standing?.lastHeardAt ?? null };
+      alarms.push({ key, kind: 'node-lost', about: { node: node.key }, data, since: at });
+    } else if (at !== null && standing?.lastHeardAt !== null && (standing?.lastHeardAt ?? 0) < startedAt) {
+      undecided.add(key);
+    }
+    const isHere = node.kind === 'socket' ? standing?.online === true : at !== null && now < at;
+    if (!isHere) away.add(node.id);
+  }
+  for (const fault of result.faults) {
+    const alarm = fromFault(record, fault, away);
+    if (alarm !== null) alarms.push(alarm);
+  }
+  return { alarms, undecided };
+}
+
+function fromFault(record: HouseRecord, fault: Fault, away: ReadonlySet<string>): WantedAlarm | null {
+  const { kind, about, data, since } = fault;
+  if (kind !== 'point-bad') return { key: keyOf(kind, record.id, fault.key), kind, about, data, since };
+  const point = record.points.find((one) => one.key === about.point || one.id === about.point);
+  const isSilent = data['why'] === 'silent';
+  if (isSilent && point !== undefined && point.nodeId !== null && away.has(point.nodeId)) return null;
+  const alarm = isSilent ? 'point-silent' : 'point-not-trusted';
+  const name = point?.key ?? about.point ?? '';
+  return {
+    key: keyOf(alarm, record.id, point?.id ?? name),
+    kind: alarm,
+    about: { point: name },
+    data,
+    since,
+  };
+}
+
+function keyOf(kind: string, houseId: string, about: string): string {
+  return `${kind}:${houseId}:${about}`;
+}

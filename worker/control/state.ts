@@ -1,0 +1,88 @@
+/** How a house stands, as pages, browsers and the interface are told: names for ids, ISO times with the house's offset. */
+import { DateTime } from 'luxon';
+import type { HouseRecord } from '@/db/queries/plan';
+import { isInstant } from '@/lib/control/because';
+import type { StepResult } from '@/lib/control/step-result';
+import type { DataValue, State } from '@/lib/control/types';
+import type { HouseState } from '@/lib/live/frames';
+
+export interface NodeStanding {
+  online: boolean;
+  lastHeardAt: number | null;
+}
+
+export function houseState(
+  record: HouseRecord,
+  result: StepResult,
+  reported: ReadonlyMap<string, State | null>,
+  nodes: ReadonlyMap<string, NodeStanding>,
+  now: number,
+): HouseState {
+  const { zone } = record.config.house;
+  const iso = (at: number | null) => (at === null ? null : isoIn(zone, at));
+  const points = new Map(result.points.map((point) => [point.id, point]));
+  const channels = new Map(result.channels.map((channel) => [channel.id, channel]));
+  const sources = new Map(result.sources.map((source) => [source.id, source]));
+  return {
+    at: isoIn(zone, now),
+    points: record.points.map(({ id, key, name, role, unit }) => {
+      const point = points.get(id);
+      return {
+        ...{ key, name, role, unit },
+        value: point?.value ?? null,
+        at: iso(point?.at ?? null),
+        quality: point?.quality ?? 'bad',
+        why: point?.why ?? null,
+      };
+    }),
+    channels: record.channels.flatMap((wiring) => {
+      const channel = channels.get(wiring.id);
+      if (channel === undefined) return [];
+      return {
+        number: wiring.number,
+        key: wiring.key,
+        label: wiring.label,
+        state: channel.state,
+        reported: reported.get(wiring.id) ?? null,
+        claim: channel.claim,
+        because: Object.fromEntries(
+          Object.entries(channel.because).map(([field, value]) => [field, wire(zone, field, value)]),
+        ),
+        until: iso(channel.until),
+        mode: channel.mode,
+        proved: wiring.proved,
+        lockedOut: wiring.lockedOut || channel.mode === 'locked',
+      };
+    }),
+    sources: record.config.sources.flatMap(({ id, slug, name, kind }) => {
+      const source = sources.get(id);
+      if (source === undefined) return [];
+      return {
+        ...{ slug, name, kind },
+        credit: source.credit,
+        restSince: iso(source.restSince),
+        restUntil: iso(source.restUntil),
+        restAtMostUntil: iso(source.restAtMostUntil),
+        drawnToday: source.drawnTodayS,
+        drawing: source.drawing,
+        underFloor: source.underFloor,
+      };
+    }),
+    nodes: record.nodes.map(({ id, key }) => {
+      const standing = nodes.get(id);
+      return { key, online: standing?.online ?? false, lastHeardAt: iso(standing?.lastHeardAt ?? null) };
+    }),
+  };
+}
+
+function isoIn(zone: string, at: number): string {
+  const time = DateTime.fromMillis(at, { zone });
+  return (time.isValid ? time : DateTime.fromMillis(at, { zone: 'utc' })).toISO() ?? '';
+}
+
+function wire(zone: string, field: string, value: DataValue): DataValue {
+  if (typeof value === 'number') return isInstant(field) ? isoIn(zone, value) : value;
+  if (Array.isArray(value)) return value.map((one) => wire(zone, field, one));
+  if (value === null || typeof value !== 'object') return value;
+  return Object.fromEntries(Object.entries(value).map(([inner, one]) => [inner, wire(zone, inner, one)]));
+}
