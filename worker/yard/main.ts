@@ -1,0 +1,63 @@
+/**
+ * The yard as a process: `--config FILE --server WS_URL [--rate N]`. One JSON line an event on standard
+ * output; ends with 0 on SIGTERM and SIGINT after saving its world, with 78 on a wrong setting.
+ */
+import { systemClock } from './clock';
+import { readConfig, type YardConfig } from './config';
+import { readWorld, saveWorld } from './store';
+import { Yard, type YardLog } from './yard';
+
+const saveEveryMs = 60_000;
+
+const log: YardLog = (event, fields) => {
+  const at = new Date(systemClock.wallMs()).toISOString();
+  process.stdout.write(`${JSON.stringify({ at, event, ...fields })}\n`);
+};
+
+function config(): YardConfig {
+  try {
+    return readConfig(process.argv.slice(2));
+  } catch (error) {
+    process.stderr.write(`yard: ${error instanceof Error ? error.message : String(error)}\n`);
+    process.exit(78);
+  }
+}
+
+function main(): void {
+  const settings = config();
+  const saved = readWorld(settings.stateFile, settings.seed);
+  log('start', {
+    seed: settings.seed,
+    rate: settings.rate,
+    world: 'world' in saved ? `from ${new Date(saved.world.ms).toISOString()}` : saved.why,
+  });
+  const yard = new Yard(settings, systemClock, log, 'world' in saved ? saved.world : undefined);
+  const save = (): void => {
+    const world = yard.current();
+    if (world === undefined) return;
+    try {
+      saveWorld(settings.stateFile, world);
+    } catch (error) {
+      // A full disk must not stop the nodes: the next start then only begins further back.
+      log('world not saved', { why: error instanceof Error ? error.message : String(error) });
+    }
+  };
+  const saveAgain = (): void => {
+    systemClock.after(saveEveryMs, () => {
+      save();
+      saveAgain();
+    });
+  };
+  const end = (signal: string): void => {
+    save();
+    yard.stop();
+    log('end', { signal });
+    process.exit(0);
+  };
+  process.once('SIGTERM', () => end('SIGTERM'));
+  process.once('SIGINT', () => end('SIGINT'));
+  yard.start();
+  saveAgain();
+}
+
+main();

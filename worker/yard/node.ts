@@ -1,0 +1,245 @@
+/**
+ * A field node: everything that the field protocol asks of one, and nothing of what it measures or moves.
+ * What it knows of the server is what comes over the wire.
+ */
+import { parseServerFrame, relaysEveryS, type BootId, type CommandFrame } from '@/lib/field/frames';
+import type { KeptRecord } from './backlog';
+import type { AppTime, Clock } from './clock';
+import { Line } from './line';
+import { Outbox } from './outbox';
+import { RelayBoard } from './relays';
+
+/** The hardware watchdog that is modelled: a node that does not run for so long is reset, coils off. */
+export const watchdogMs = 10_000;
+const watchdogFedEveryMs = 2_000;
+/** How much sooner than asked a timer of Node may come. */
+const timerEarlyMs = 5;
+
+export interface NodeParts {
+  key: string;
+  token: string;
+  server: string;
+  relays: number;
+  rate: number;
+  /** interval of readings until a welcome says another, s of app time */
+  reportS: number;
+  clock: Clock;
+  time: AppTime;
+  /** readings of this moment, epoch ms of app time */
+  sample(appMs: number): Array<Omit<KeptRecord, 't'>>;
+  /** called just before coils change at this monotonic time: until then they were as they are */
+  beforeCoilsChange(monotonicMs: number): void;
+  log(event: string, fields: Record<string, unknown>): void;
+}
+
+type TimerName = 'lease' | 'relays' | 'sample' | 'watchdog';
+
+export class FieldNode {
+  private board: RelayBoard;
+  private readonly outbox: Outbox;
+  private readonly line: Line;
+  private seq = 0;
+  private isWelcome = false;
+  private reportS: number;
+  private sampledS = 0;
+  private ranMs: number;
+  private readonly timers = new Map<TimerName, () => void>();
+
+  constructor(private readonly parts: NodeParts) {
+    this.board = new RelayBoard(parts.relays, parts.clock.id(), parts.rate);
+    this.reportS = parts.reportS;
+    this.ranMs = parts.clock.monotonicMs();
+    this.outbox = new Outbox(
+      (pack) => this.send({ type: 'readings', pack }),
+      (ms, then) => parts.clock.after(ms, () => this.run(then)),
+    );
+    this.line = new Line(parts.server, parts.token, parts.clock, {
+      opened: () => this.run(() => this.opened()),
+      text: (text) => this.run(() => this.received(text)),
+      closed: (code, why, againInMs) => this.run(() => this.closed(code, why, againInMs)),
+    });
+  }
+
+  start(): void {
+    this.parts.log('boot', { boot: this.board.boot });
+    this.line.dial();
+    this.scheduleSample();
+    this.feedWatchdog();
+  }
+
+  /** Ends the node as a pulled plug does, but for the closing handshake. */
+  stop(): void {
+    this.parts.beforeCoilsChange(this.parts.clock.monotonicMs());
+    for (const cancel of this.timers.values()) cancel();
+    this.timers.clear();
+    this.outbox.lineDown();
+    this.line.stop();
+  }
+
+  /** What the coils really are, and how much waits to be acknowledged. */
+  state(): ReturnType<RelayBoard['state']> & { boot: BootId; unacknowledged: number } {
+    return { ...this.board.state(), boot: this.board.boot, unacknowledged: this.outbox.size };
+  }
+
+  /** Lets the node see what the time has brought, such as the end of a lease. */
+  wake(): void {
+    this.run(() => undefined);
+  }
+
+  /** Everything that the node does goes through here, so that a gap in its running is always seen first. */
+  private run(work: () => void): void {
+    const now = this.parts.clock.monotonicMs();
+    const resetMs = this.ranMs + watchdogMs;
+    const frozen = now > resetMs;
+    this.ranMs = now;
+    this.expireLease(frozen ? Math.min(now, resetMs) : now);
+    if (frozen) this.reset(resetMs);
+    else work();
+  }
+
+  private expireLease(untilMs: number): void {
+    const endsMs = this.board.leaseEndsMs();
+    if (endsMs === null || endsMs > untilMs) return;
+    this.parts.beforeCoilsChange(endsMs);
+    this.board.expire(endsMs);
+    this.parts.log('trip', { trips: this.board.state().trips, number: this.board.state().number });
+    this.sendRelays();
+    this.send({ type: 'log', level: 'warning', text: 'the lease ended: every coil dropped' });
+  }
+
+  /** The watchdog has pulled the reset line: a new boot with every coil off. Kept readings are in flash. */
+  private reset(atMs: number): void {
+    this.parts.beforeCoilsChange(atMs);
+    this.board = new RelayBoard(this.parts.relays, this.parts.clock.id(), this.parts.rate);
+    this.seq = 0;
+    this.isWelcome = false;
+    this.parts.log('watchdog', { boot: this.board.boot });
+    this.line.drop();
+    this.scheduleSample();
+    this.feedWatchdog();
+  }
+
+  private feedWatchdog(): void {
+    this.set('watchdog', watchdogFedEveryMs, () => this.feedWatchdog());
+  }
+
+  private opened(): void {
+    const appMs = this.parts.time.nowMs();
+    this.line.send({
+      type: 'hello',
+      node: this.parts.key,
+      firmware: 'yard 1',
+      channels: this.parts.relays,
+      boot: this.board.boot,
+      clock: appMs === null ? null : appMs / 1000,
+    });
+  }
+
+  private closed(code: number, why: string, againInMs: number): void {
+    this.parts.log('line down', { code, why, againInMs: Math.round(againInMs) });
+    this.isWelcome = false;
+    this.cancel('relays');
+    this.outbox.lineDown();
+  }
+
+  private received(text: string): void {
+    const parsed = parseServerFrame(text);
+    if (!parsed.ok) return this.parts.log('frame not understood', { why: parsed.why });
+    const { frame } = parsed;
+    switch (frame.type) {
+      case 'welcome':
+        this.parts.time.set(frame.now * 1000);
+        this.reportS = frame.report;
+        return this.welcomed();
+      case 'command':
+        return this.command(frame);
+      case 'ack':
+        if (!('stored' in frame)) return;
+        if (frame.refused.length > 0) this.parts.log('readings refused', { refused: frame.refused });
+        return this.outbox.acknowledged(frame.seq);
+      case 'error':
+        return this.parts.log('error from the server', { why: frame.why, seq: frame.seq ?? null });
+    }
+  }
+
+  private welcomed(): void {
+    this.parts.log('welcome', { report: this.reportS });
+    this.line.welcomed();
+    this.isWelcome = true;
+    this.board.connected();
+    this.sendRelays();
+    if (this.sampledS === 0) this.takeSample(this.parts.time.nowMs());
+    else this.outbox.send();
+    this.scheduleSample();
+  }
+
+  private command(frame: CommandFrame): void {
+    const now = this.parts.clock.monotonicMs();
+    this.parts.beforeCoilsChange(now);
+    const answer = this.board.command(frame, now);
+    if (!answer.taken) {
+      return this.parts.log('command ignored', { number: frame.number, why: answer.why });
+    }
+    this.scheduleLease();
+    if (answer.isRenewal && !answer.changed) return;
+    this.parts.log('command', { number: frame.number, channels: this.board.state().channels });
+    this.sendRelays();
+  }
+
+  private scheduleLease(): void {
+    const endsMs = this.board.leaseEndsMs();
+    if (endsMs === null) this.cancel('lease');
+    else this.set('lease', endsMs - this.parts.clock.monotonicMs(), () => this.scheduleLease());
+  }
+
+  private sendRelays(): void {
+    if (!this.isWelcome) return;
+    const seq = this.send({ type: 'relays', ...this.board.state() });
+    if (seq !== null) this.board.sent(seq, this.parts.clock.monotonicMs());
+    this.set('relays', this.parts.time.realMs(relaysEveryS), () => this.sendRelays());
+  }
+
+  /** @returns the frame's seq, or null where the line is not open */
+  private send(frame: { type: 'relays' | 'readings' | 'log' } & Record<string, unknown>): number | null {
+    if (!this.isWelcome) return null;
+    this.seq += 1;
+    return this.line.send({ ...frame, seq: this.seq }) ? this.seq : null;
+  }
+
+  private takeSample(appMs: number | null): void {
+    const t = Math.floor((appMs ?? 0) / 1000);
+    if (t <= this.sampledS) return;
+    this.sampledS = t;
+    this.outbox.add(this.parts.sample(t * 1000).map((record) => ({ ...record, t })));
+    this.outbox.send();
+  }
+
+  /** At whole multiples of the interval, so that stamps are even and a restart falls into step. */
+  private scheduleSample(afterMs = this.parts.time.nowMs()): void {
+    const appMs = this.parts.time.nowMs();
+    if (appMs === null || afterMs === null) return;
+    const everyMs = this.reportS * 1000;
+    const dueMs = (Math.floor(afterMs / everyMs) + 1) * everyMs;
+    this.set('sample', this.parts.time.realMs((dueMs - appMs) / 1000), () => {
+      const now = this.parts.time.nowMs() ?? 0;
+      // Timers may come a little early, and late after a stall: the stamp is the multiple all the same.
+      const isDue = now > dueMs - timerEarlyMs * this.parts.rate;
+      const stampMs = Math.max(dueMs, Math.floor(now / everyMs) * everyMs);
+      if (isDue) this.takeSample(stampMs);
+      this.scheduleSample(isDue ? stampMs : now);
+    });
+  }
+
+  private set(name: TimerName, ms: number, then: () => void): void {
+    this.cancel(name);
+    this.timers.set(
+      name,
+      this.parts.clock.after(Math.max(0, ms), () => this.run(then)),
+    );
+  }
+
+  private cancel(name: TimerName): void {
+    this.timers.get(name)?.();
+    this.timers.delete(name);
+  }
+}
