@@ -8,6 +8,7 @@ export default tseslint.config(
     languageOptions: { parserOptions: { projectService: true } },
     linterOptions: { reportUnusedDisableDirectives: 'error' },
     rules: {
+      eqeqeq: 'error',
       '@typescript-eslint/consistent-type-imports': 'error',
       '@typescript-eslint/no-import-type-side-effects': 'error',
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
@@ -28,6 +29,10 @@ export default tseslint.config(
         { selector: 'ExportAllDeclaration', message: 'No barrels: import from the file that has it.' },
       ],
     },
+  },
+  {
+    files: ['**/*.{mjs,cjs}'],
+    rules: { 'no-unused-vars': 'error', 'prefer-const': 'error', 'no-var': 'error', eqeqeq: 'error' },
   },
   {
     // a test reads what it has just made; the checks that matter there are on the promises

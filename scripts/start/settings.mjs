@@ -33,7 +33,7 @@ export function readSettings(env, { usualPort = USUAL_PORT } = {}) {
     password,
     authSecret: given('AUTH_SECRET'),
     databaseUrl: given('DATABASE_URL'),
-    dataDir: dataFolder(given('DATA_DIR')),
+    dataDir: dataFolder(given('DATA_DIR') ?? ''),
     webPort: portOf(given, 'WEB_PORT'),
     workerPort: portOf(given, 'WORKER_PORT'),
     mailPort: portOf(given, 'MAIL_PORT'),
@@ -59,7 +59,7 @@ function originOf(text) {
   if (text === undefined) return undefined;
   const url = URL.canParse(text) ? new URL(text) : null;
   if (url === null || !/^https?:$/.test(url.protocol)) {
-    wrong('PUBLIC_URL must be the address that browsers use, such as https://yard.example.');
+    wrong('PUBLIC_URL must be the address that browsers use, such as https://nursery.example.');
   }
   return url.origin;
 }

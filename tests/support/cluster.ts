@@ -32,8 +32,14 @@ export default async function setup(project: TestProject) {
   project.provide('cluster', await makeTemplate());
   return async () => {
     users -= 1;
-    if (users === 0 && made !== undefined) await dropDatabasesOf((await made).ownerUrl, process.pid);
+    if (users === 0) await releaseTemplate();
   };
+}
+
+/** Drops what this process made in the cluster. */
+export async function releaseTemplate(): Promise<void> {
+  if (made !== undefined) await dropDatabasesOf((await made).ownerUrl, process.pid);
+  made = undefined;
 }
 
 /** The cluster with its migrated template: made at the first call in this process, the same afterwards. */
