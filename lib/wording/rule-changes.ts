@@ -1,5 +1,5 @@
 /** What differs between two versions of a rule, field by field, in words. */
-import type { RuleBody } from '@/lib/control/types';
+import type { RuleBody } from '@/lib/control/rule-body';
 import { difference, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { plainText } from './phrase';

@@ -1,5 +1,5 @@
 /** A rule's extra conditions in words. */
-import type { ConditionTree } from '@/lib/control/types';
+import type { Condition, ConditionNode, ConditionTree } from '@/lib/control/rule-body';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { dayTime } from '@/lib/units/time';
@@ -7,9 +7,6 @@ import { between, join } from './join';
 import { plainText, type Phrase } from './phrase';
 import { pointTone, pointWords, type RuleNames } from './rule-names';
 import { dayName, monthName } from './rule-when';
-
-export type ConditionNode = Extract<ConditionTree, { all: unknown }>['all'][number];
-export type Condition = Extract<ConditionNode, { fact: string }>;
 
 export const OPERATOR_WORDS: Record<Condition['operator'], string> = {
   greaterThanInclusive: 'at least',

@@ -2,7 +2,7 @@
  * A rule as the sentence a grower would say. Made from its body alone, so that list, editor, trial and mail all say the
  * same of the same rule.
  */
-import type { RuleBody } from '@/lib/control/types';
+import type { RuleBody } from '@/lib/control/rule-body';
 import { difference, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { join, sentences } from './join';

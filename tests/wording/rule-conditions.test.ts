@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { USUAL, type Preferences } from '@/lib/units/preferences';
-import { conditionWords, isSimple, type Condition, type ConditionNode } from '@/lib/wording/rule-conditions';
+import type { Condition, ConditionNode } from '@/lib/control/rule-body';
+import { conditionWords, isSimple } from '@/lib/wording/rule-conditions';
 import { plainText } from '@/lib/wording/phrase';
 
 const names = {

@@ -1,0 +1,57 @@
+/** What the page Wiring shows: everything wired in a house, and how the worker last saw it. */
+import { and, eq, isNull } from 'drizzle-orm';
+import type { Holding } from '@/db/client';
+import { node } from '@/db/schema/yard';
+import type { HouseState } from '@/lib/live/frames';
+import type {
+  Channel,
+  FieldNode,
+  House,
+  Interlock,
+  Lockout,
+  Loop,
+  Point,
+  Source,
+} from '@/lib/schema/yard-view';
+import { listChannels } from './channel';
+import { listInterlocks } from './interlock';
+import { listLockouts } from './lockout';
+import { listLoops } from './loop';
+import { listNodes } from './node';
+import { listPoints } from './point';
+import { readMemory } from './running';
+import { listSources } from './source';
+
+export interface WiringPage {
+  house: House;
+  nodes: FieldNode[];
+  /** By node id, as the link keeps it. */
+  nodeStatus: Record<string, Record<string, unknown>>;
+  points: Point[];
+  sources: Source[];
+  channels: Channel[];
+  loops: Loop[];
+  interlocks: Interlock[];
+  lockouts: Lockout[];
+  /** Null until the worker has stepped this house for the first time. */
+  state: HouseState | null;
+}
+
+export async function readWiring(holding: Holding, house: House): Promise<WiringPage> {
+  const rows = await holding.db
+    .select({ id: node.id, status: node.status })
+    .from(node)
+    .where(and(eq(node.holdingId, holding.id), eq(node.houseId, house.id), isNull(node.removedAt)));
+  return {
+    house,
+    nodes: await listNodes(holding, house.id),
+    nodeStatus: Object.fromEntries(rows.map((row) => [row.id, row.status])),
+    points: await listPoints(holding, house.id),
+    sources: await listSources(holding, house.id),
+    channels: await listChannels(holding, house.id),
+    loops: await listLoops(holding, house.id),
+    interlocks: await listInterlocks(holding, house.id),
+    lockouts: await listLockouts(holding, house.id),
+    state: (await readMemory(holding, house.id))?.state ?? null,
+  };
+}
