@@ -19,12 +19,14 @@ export async function start(env = process.env, usual = {}) {
   ensurePackages();
 
   // what follows stands on packages, so it is imported only now
-  const { ensurePostgres, makeFolder } = await import('../pg.mjs');
+  const { ensurePostgres, makeFolder, stopPostgres } = await import('../pg.mjs');
   makeFolder(settings.dataDir);
   claimFolder(settings.dataDir, port);
   const secrets = keptSecrets(settings);
   const database = await ensurePostgres({ dataDir: settings.dataDir, databaseUrl: settings.databaseUrl });
   say(database.started ? 'PostgreSQL started' : 'PostgreSQL … already there');
+  // the last thing at the end, after all who use it; this folder has no other user, or it could not have been claimed
+  if (database.own) process.once('exit', () => stopPostgres({ dataDir: settings.dataDir }));
   await migrate(database);
 
   const { build, PROGRAMS } = await import('../build.mjs');
