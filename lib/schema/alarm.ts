@@ -11,6 +11,7 @@ export const ALARM_KINDS = [
   'core-not-good',
   'frost-without-reading',
   'hand-off-in-frost',
+  'hand-on-in-frost',
   'interlock-blocks-frost',
   'high-limit',
   'no-gain',

@@ -9,14 +9,29 @@ export const HeapMaterial = z.strictObject({
   litres: finite(0, 1_000_000, 'L').optional(),
 });
 
+const fields = {
+  kind: z.enum(HEAP_ENTRY_KINDS),
+  at: Instant,
+  text: Text,
+  materials: z.array(HeapMaterial).max(20),
+  litresOfWater: finite(0, 100_000, 'L'),
+  volume: finite(0, 10_000, 'm³'),
+};
 export const HeapEntryCreate = z.strictObject({
   /** Slug or id of the source. */
   source: z.string().min(1, 'Choose the heap.').max(140),
-  kind: z.enum(HEAP_ENTRY_KINDS),
-  at: Instant.optional(),
-  text: Text.default(''),
-  materials: z.array(HeapMaterial).max(20).default([]),
-  litresOfWater: finite(0, 100_000, 'L').optional(),
-  volume: finite(0, 10_000, 'm³').optional(),
+  kind: fields.kind,
+  at: fields.at.optional(),
+  text: fields.text.default(''),
+  materials: fields.materials.default([]),
+  litresOfWater: fields.litresOfWater.optional(),
+  volume: fields.volume.optional(),
 });
-export const HeapEntryAmend = HeapEntryCreate.omit({ source: true }).partial();
+// Made of the bare fields: a default inside would be filled in, and wipe what the change does not speak of.
+export const HeapEntryAmend = z
+  .strictObject({
+    ...fields,
+    litresOfWater: fields.litresOfWater.nullable(),
+    volume: fields.volume.nullable(),
+  })
+  .partial();

@@ -238,6 +238,16 @@ export const InterlockCreate = z
     error: 'A channel cannot be interlocked with itself.',
   });
 
+export const InterlockAmend = z
+  .strictObject({
+    channel: Key,
+    kind: z.enum(['never-with', 'needs']),
+    other: Key,
+    delay: wholeSeconds(0, 3600),
+    frostMayBreak: z.boolean(),
+  })
+  .partial();
+
 export const LockoutCreate = z.strictObject({ channel: Key, why: Why });
 
 export const HandCommand = z.strictObject({

@@ -1,0 +1,20 @@
+import * as channels from '@/db/queries/channel';
+import { ChannelCreate } from '@/lib/schema/yard';
+import { merged, serve } from '@/lib/server/guard';
+import { amendChannel, getChannel, removeChannel } from '@/lib/server/operations/wiring';
+
+export const GET = serve(getChannel, async ({ things }) => ({ body: things.channel }));
+
+export const PATCH = serve(amendChannel, async ({ holding, things, body }) => ({
+  body: await channels.amendChannel(
+    holding,
+    things.house.id,
+    things.channel,
+    merged(ChannelCreate, things.channel, body),
+  ),
+}));
+
+export const DELETE = serve(removeChannel, async ({ holding, things, now }) => {
+  await channels.removeChannel(holding, things.house.id, things.channel, now);
+  return {};
+});

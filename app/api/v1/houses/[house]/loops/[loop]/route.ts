@@ -1,0 +1,20 @@
+import * as loops from '@/db/queries/loop';
+import { LoopCreate } from '@/lib/schema/yard';
+import { merged, serve } from '@/lib/server/guard';
+import { amendLoop, getLoop, removeLoop } from '@/lib/server/operations/yard';
+
+export const GET = serve(getLoop, async ({ things }) => ({ body: things.loop }));
+
+export const PATCH = serve(amendLoop, async ({ holding, things, body }) => ({
+  body: await loops.amendLoop(
+    holding,
+    things.house.id,
+    things.loop.id,
+    merged(LoopCreate, things.loop, body),
+  ),
+}));
+
+export const DELETE = serve(removeLoop, async ({ holding, things, now }) => {
+  await loops.removeLoop(holding, things.house.id, things.loop.id, now);
+  return {};
+});

@@ -1,0 +1,20 @@
+import * as nodes from '@/db/queries/node';
+import { NodeCreate } from '@/lib/schema/yard';
+import { merged, serve } from '@/lib/server/guard';
+import { amendNode, getNode, removeNode } from '@/lib/server/operations/wiring';
+
+export const GET = serve(getNode, async ({ things }) => ({ body: things.node }));
+
+export const PATCH = serve(amendNode, async ({ holding, things, body }) => ({
+  body: await nodes.amendNode(
+    holding,
+    things.house.id,
+    things.node.id,
+    merged(NodeCreate, things.node, body),
+  ),
+}));
+
+export const DELETE = serve(removeNode, async ({ holding, things, now }) => {
+  await nodes.removeNode(holding, things.house.id, things.node.id, now);
+  return {};
+});

@@ -1,0 +1,165 @@
+import 'server-only';
+import { and, asc, desc, eq, isNull, sql } from 'drizzle-orm';
+import { v7 as uuid } from 'uuid';
+import type { Holding } from '@/db/client';
+import { rule, ruleVersion } from '@/db/schema/rule';
+import { channel, house } from '@/db/schema/yard';
+import type { RuleBody } from '@/lib/schema/rule';
+import { mapRulePoints } from '@/lib/schema/rule-points';
+import type { Rule, RuleVersion, RuleWithVersions } from '@/lib/schema/rule-view';
+import { houseNames, isId } from './reference';
+import { freeSlug } from './slug';
+
+/** Rules as people read and write them; how versions pass into and out of force stands in rule-version.ts. */
+const headFields = {
+  id: rule.id,
+  houseId: rule.houseId,
+  revision: rule.revision,
+  slug: rule.slug,
+  name: rule.name,
+  house: house.slug,
+  channel: channel.key,
+  channelId: rule.channelId,
+  retiredAt: rule.retiredAt,
+};
+interface Head {
+  id: string;
+  houseId: string;
+  revision: number;
+  slug: string;
+  name: string;
+  house: string;
+  channel: string;
+  channelId: string;
+  retiredAt: Date | null;
+}
+/** With what the routes need beside the answer: whose house and channel. */
+export interface FoundRule extends RuleWithVersions {
+  houseId: string;
+  channelId: string;
+}
+
+async function heads(holding: Holding, only: ReturnType<typeof eq> | undefined): Promise<Head[]> {
+  return holding.db
+    .select(headFields)
+    .from(rule)
+    .innerJoin(house, and(eq(house.holdingId, rule.holdingId), eq(house.id, rule.houseId)))
+    .innerJoin(channel, and(eq(channel.holdingId, rule.holdingId), eq(channel.id, rule.channelId)))
+    .where(and(eq(rule.holdingId, holding.id), isNull(house.removedAt), only))
+    .orderBy(asc(rule.createdAt), asc(rule.id));
+}
+
+export function toVersion(row: typeof ruleVersion.$inferSelect): RuleVersion {
+  const { id, number, status, body, why, by } = row;
+  return {
+    ...{ id, number, status, body, why, by },
+    draftedAt: row.draftedAt.toISOString(),
+    forcedAt: row.forcedAt?.toISOString() ?? null,
+    endedAt: row.endedAt?.toISOString() ?? null,
+  };
+}
+
+async function withVersions(holding: Holding, head: Head): Promise<FoundRule> {
+  const rows = await holding.db
+    .select()
+    .from(ruleVersion)
+    .where(and(eq(ruleVersion.holdingId, holding.id), eq(ruleVersion.ruleId, head.id)))
+    .orderBy(desc(ruleVersion.number));
+  const versions = rows.map(toVersion);
+  const draft = versions.find((row) => row.status === 'draft') ?? null;
+  const inForce = versions.find((row) => row.status === 'in-force') ?? null;
+  const shown = draft ?? inForce ?? versions[0];
+  if (shown === undefined) throw new Error(`rule ${head.id} has no version`);
+  return {
+    ...head,
+    ...{ body: shown.body, draft, inForce, versions },
+    retiredAt: head.retiredAt?.toISOString() ?? null,
+  };
+}
+
+/** The rule without what only its own page shows. */
+export function toRule(found: FoundRule): Rule {
+  const { id, revision, slug, name, house, channel, body, draft, inForce, retiredAt } = found;
+  return { id, revision, slug, name, house, channel, body, draft, inForce, retiredAt };
+}
+
+export function toRuleWithVersions(found: FoundRule): RuleWithVersions {
+  return { ...toRule(found), versions: found.versions };
+}
+
+export async function listRules(holding: Holding, houseId: string, withRetired = false): Promise<Rule[]> {
+  const all = await heads(
+    holding,
+    and(eq(rule.houseId, houseId), withRetired ? undefined : isNull(rule.retiredAt)),
+  );
+  const found: Rule[] = [];
+  for (const head of all) found.push(toRule(await withVersions(holding, head)));
+  return found;
+}
+
+/** By id or slug, which is the holding's; retired ones too, so that their versions can be read and brought back. */
+export async function findRule(holding: Holding, ref: string): Promise<FoundRule | null> {
+  const head = (await heads(holding, isId(ref) ? eq(rule.id, ref) : eq(rule.slug, ref)))[0];
+  return head === undefined ? null : withVersions(holding, head);
+}
+
+/** @throws Refusal at the path of a point that this house does not have */
+export async function resolveBody(holding: Holding, houseId: string, body: RuleBody): Promise<RuleBody> {
+  const { points } = await houseNames(holding, houseId);
+  return mapRulePoints(body, (ref, path) => points.find(ref, path).key);
+}
+
+interface Act {
+  by: string;
+  now: Date;
+}
+
+export async function createRule(
+  holding: Holding,
+  houseId: string,
+  given: { name: string; channel: string; body: RuleBody },
+  act: Act,
+): Promise<FoundRule> {
+  const channelId = (await houseNames(holding, houseId)).channels.find(given.channel, 'channel').id;
+  // The body stands one deeper here than in PUT draft, and so do its paths.
+  const { points } = await houseNames(holding, houseId);
+  const body = mapRulePoints(given.body, (ref, path) => points.find(ref, `body.${path}`).key);
+  const taken = await holding.db.select({ slug: rule.slug }).from(rule).where(eq(rule.holdingId, holding.id));
+  const id = uuid();
+  await holding.db.insert(rule).values({
+    ...{ id, houseId, channelId, holdingId: holding.id, name: given.name, createdAt: act.now },
+    slug: freeSlug(given.name, new Set(taken.map((row) => row.slug))),
+  });
+  await holding.db.insert(ruleVersion).values({
+    ...{ id: uuid(), holdingId: holding.id, ruleId: id, number: 1, status: 'draft', body, by: act.by },
+    draftedAt: act.now,
+  });
+  return again(holding, id);
+}
+
+export async function renameRule(holding: Holding, id: string, name: string): Promise<FoundRule> {
+  await holding.db
+    .update(rule)
+    .set({ name })
+    .where(and(eq(rule.holdingId, holding.id), eq(rule.id, id)));
+  await touchRule(holding, id, {});
+  return again(holding, id);
+}
+
+/** Counts a change, so that whoever still has the former state in hand is told. */
+export async function touchRule(
+  holding: Holding,
+  id: string,
+  set: { retiredAt?: Date | null },
+): Promise<void> {
+  await holding.db
+    .update(rule)
+    .set({ ...set, revision: sql`${rule.revision} + 1` })
+    .where(and(eq(rule.holdingId, holding.id), eq(rule.id, id)));
+}
+
+export async function again(holding: Holding, id: string): Promise<FoundRule> {
+  const found = await findRule(holding, id);
+  if (found === null) throw new Error('the rule was there a moment ago');
+  return found;
+}

@@ -1,0 +1,41 @@
+import { z } from 'zod';
+import { PageQuery } from './common';
+import { Finding, RuleBody } from './rule';
+
+export const RuleVersion = z.strictObject({
+  id: z.string(),
+  number: z.number(),
+  status: z.enum(['draft', 'in-force', 'retired']),
+  body: RuleBody,
+  why: z.string().nullable(),
+  by: z.string(),
+  draftedAt: z.string(),
+  forcedAt: z.string().nullable(),
+  endedAt: z.string().nullable(),
+});
+export type RuleVersion = z.infer<typeof RuleVersion>;
+
+export const Rule = z.strictObject({
+  id: z.string(),
+  revision: z.number(),
+  slug: z.string(),
+  name: z.string(),
+  house: z.string(),
+  channel: z.string(),
+  /** What is being written, else what is in force, else what was last. */
+  body: RuleBody,
+  draft: RuleVersion.nullable(),
+  inForce: RuleVersion.nullable(),
+  retiredAt: z.string().nullable(),
+});
+export type Rule = z.infer<typeof Rule>;
+
+export const RuleWithVersions = z.strictObject({ ...Rule.shape, versions: z.array(RuleVersion) });
+export type RuleWithVersions = z.infer<typeof RuleWithVersions>;
+
+export const RuleListQuery = z.strictObject({
+  ...PageQuery.shape,
+  /** Retired ones too. */
+  retired: z.enum(['true', 'false']).default('false'),
+});
+export const Findings = z.strictObject({ findings: z.array(Finding) });

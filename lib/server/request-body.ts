@@ -1,0 +1,45 @@
+import { Problem } from './errors';
+
+export const LARGEST_BODY = 1024 * 1024;
+
+/** The body as text. @throws Problem `too-large` as soon as it is, without reading on */
+export async function readText(request: Request): Promise<string> {
+  if (Number(request.headers.get('content-length') ?? 0) > LARGEST_BODY) throw new Problem('too-large');
+  if (request.body === null) return '';
+  const parts: Uint8Array[] = [];
+  let size = 0;
+  for await (const part of request.body) {
+    size += part.byteLength;
+    if (size > LARGEST_BODY) throw new Problem('too-large');
+    parts.push(part);
+  }
+  return Buffer.concat(parts).toString('utf8');
+}
+
+/** @throws Problem `not-valid` at path '' for what is no JSON, and for text that no database keeps */
+export function parseJson(text: string): unknown {
+  let value: unknown;
+  try {
+    value = JSON.parse(text);
+  } catch {
+    throw refuse(text.trim() === '' ? 'This request needs a body in JSON.' : 'The body is not valid JSON.');
+  }
+  // NUL and halves of a surrogate pair are valid JSON, and PostgreSQL takes neither in text.
+  if (/[\0\p{Surrogate}]/u.test(everyText(value)))
+    throw refuse('The body holds a character that cannot be kept.');
+  return value;
+}
+
+function everyText(value: unknown): string {
+  const texts: string[] = [];
+  JSON.stringify(value, (key, inner: unknown) => {
+    texts.push(key);
+    if (typeof inner === 'string') texts.push(inner);
+    return inner;
+  });
+  return texts.join('\n');
+}
+
+function refuse(message: string): Problem {
+  return new Problem('not-valid', { errors: [{ path: '', message }] });
+}
