@@ -1,8 +1,12 @@
-/** Durations, ages and clock times as they are read, in the house's zone. No clock: every instant is handed in. */
-import { DateTime } from 'luxon';
+/**
+ * Durations, ages and clock times as they are read, in the house's zone. No clock: every instant is handed in. Watch
+ * needs this in the browser, so it stands on Intl alone; luxon would be 23 kB of script for one page.
+ */
 import type { Preferences } from './preferences';
 
 const space = '\u00a0';
+// spelt out: "Sep" and "Sept" differ between browsers, and the server's page must equal the browser's
+const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
 
 /**
  * A span of time rounded to what matters: seconds under one minute, then whole minutes, then hours and minutes, from
@@ -27,14 +31,43 @@ export function age(milliseconds: number): string {
   return milliseconds < 1000 ? 'just now' : `${duration(milliseconds / 1000)} ago`;
 }
 
+const formats = new Map<string, Intl.DateTimeFormat>();
+
+/** Year, month, day, hour and minute that a clock on the wall shows; making a format costs more than using it. */
+function wall(at: number, zone: string): { year: number; month: number; day: number; time: string } {
+  let format = formats.get(zone);
+  if (format === undefined) {
+    format = new Intl.DateTimeFormat('en-GB', {
+      timeZone: zone,
+      calendar: 'iso8601',
+      year: 'numeric',
+      month: 'numeric',
+      day: 'numeric',
+      hour: '2-digit',
+      minute: '2-digit',
+      hourCycle: 'h23',
+    });
+    formats.set(zone, format);
+  }
+  const parts = new Map(format.formatToParts(at).map((part) => [part.type, part.value]));
+  const number = (type: Intl.DateTimeFormatPartTypes) => Number(parts.get(type) ?? 0);
+  return {
+    year: number('year'),
+    month: number('month'),
+    day: number('day'),
+    time: `${(parts.get('hour') ?? '').padStart(2, '0')}:${(parts.get('minute') ?? '').padStart(2, '0')}`,
+  };
+}
+
 /** @example clock(at, 'Europe/London', USUAL) === '02:14', '2:14 am' for a reader of twelve hours */
 export function clock(at: number, zone: string, preferences: Preferences): string {
-  return dayTime(DateTime.fromMillis(at, { zone }).toFormat('HH:mm'), preferences);
+  return dayTime(wall(at, zone).time, preferences);
 }
 
 /** @example day(at, zone) === '26 Nov' */
 export function day(at: number, zone: string): string {
-  return DateTime.fromMillis(at, { zone, locale: 'en-GB' }).toFormat('d LLL');
+  const there = wall(at, zone);
+  return `${there.day} ${MONTHS[there.month - 1] ?? ''}`;
 }
 
 /** A clock time with as much of the date as makes it plain beside `now`. */
@@ -42,8 +75,11 @@ export function moment(at: number, now: number, zone: string, preferences: Prefe
   const time = clock(at, zone, preferences);
   // half a day either way cannot be mistaken: 22:10 read at 03:00 is last night's
   if (Math.abs(now - at) < 12 * 3_600_000) return time;
-  const there = DateTime.fromMillis(at, { zone }).startOf('day');
-  const days = Math.round(DateTime.fromMillis(now, { zone }).startOf('day').diff(there, 'days').days);
+  const dayOf = (instant: number) => {
+    const there = wall(instant, zone);
+    return Date.UTC(there.year, there.month - 1, there.day) / 86_400_000;
+  };
+  const days = dayOf(now) - dayOf(at);
   if (days === 0) return time;
   if (days === 1) return `yesterday ${time}`;
   if (days === -1) return `tomorrow ${time}`;

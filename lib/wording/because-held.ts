@@ -1,0 +1,119 @@
+/** Why a load is held: the claims that stand above the night's own business. */
+import type { Reasons } from '@/lib/control/because';
+import { duration } from '@/lib/units/time';
+import { temperature } from '@/lib/units/format';
+import { begin, channelName, pointName, said, sourceName, timeWords, type Scene } from './scene';
+import { CLAIM_NAMES } from './claims';
+import { level } from './settings';
+
+type Reason<Claim extends keyof Reasons> = Partial<Reasons[Claim]>;
+
+export function lockOutWords(reason: Reason<'lock-out'>, scene: Scene): string {
+  const [first, ...others] = reason.lockouts ?? [];
+  if (first === undefined) return 'Locked out. Only a person removes it.';
+  const since = timeWords(first.placedAt, scene);
+  return said(
+    `Locked out by ${first.by}${since === null ? '' : ` since ${since}`}: ${first.why.replace(/\.$/, '')}.`,
+    others.length > 0 && `${others.length} more lock-out${others.length === 1 ? '' : 's'} stand on it.`,
+    'Only a person removes it.',
+  );
+}
+
+export function interlockWords(reason: Reason<'interlock'>, scene: Scene): string {
+  const other = channelName(reason.other ?? '', scene);
+  const until = timeWords(reason.until, scene);
+  if (reason.kind === 'holds') return `Kept on because ${other} needs it, till that reports off.`;
+  if (reason.kind === 'needs') {
+    if (reason.otherState !== 'on') return `Needs ${other} to run first.`;
+    return until === null
+      ? `Needs ${other}, which has just begun.`
+      : `Needs ${other} to have run till ${until}.`;
+  }
+  if (reason.otherState === 'on') return `Never together with ${other}, which runs.`;
+  if (reason.otherState === null)
+    return `Never together with ${other}, whose relay has not yet said that it is off.`;
+  return until === null ? `Never together with ${other}.` : `Waits till ${until}, after ${other}.`;
+}
+
+export function limitWords(reason: Reason<'limit'>, scene: Scene): string {
+  const until = timeWords(reason.until, scene);
+  switch (reason.cause) {
+    case 'high-limit-point-bad':
+      return `${begin(pointName(reason.point ?? '', scene))} guards its high limit and cannot be trusted, so it stays off.`;
+    case 'longest-on':
+      return said(
+        `Has run for its longest time, ${duration(reason.longestOnS ?? 0)}.`,
+        until !== null && `Off at least till ${until}.`,
+      );
+    default:
+      return said(
+        `${begin(pointName(reason.point ?? '', scene))} is at ${temperature(reason.value ?? null, scene.preferences)}, over the limit of ${level(reason.above ?? 0, scene.preferences)}.`,
+        reason.againAtOrBelow !== undefined &&
+          `Again from ${level(reason.againAtOrBelow, scene.preferences)} down.`,
+      );
+  }
+}
+
+export function provingWords(reason: Reason<'proving'>, scene: Scene): string {
+  const until = timeWords(reason.until, scene);
+  return said(
+    `${reason.by ?? 'An installer'} proves it with a run of ${duration(reason.seconds ?? 0)}${until === null ? '' : `, till ${until}`}.`,
+  );
+}
+
+export function shortCycleWords(reason: Reason<'short-cycle'>, scene: Scene): string {
+  const until = timeWords(reason.until, scene);
+  const next =
+    reason.wantedBy === undefined
+      ? ''
+      : `; then ${CLAIM_NAMES[reason.wantedBy]} turns it ${reason.wanted ?? 'over'}`;
+  return `Kept ${reason.holds ?? 'so'} for at least ${duration(reason.leastS ?? 0)}${until === null ? '' : `, till ${until}`}${next}.`;
+}
+
+export function sourceGuardWords(reason: Reason<'source-guard'>, scene: Scene): string {
+  const source = sourceName(reason.source ?? '', scene);
+  const value = temperature(reason.value ?? null, scene.preferences);
+  if (reason.cause === 'not-ready') {
+    const until = timeWords(reason.until, scene);
+    const asked = `its core must stay above ${level(reason.level ?? 0, scene.preferences)} for ${duration(reason.forS ?? 0)}`;
+    return said(
+      `${begin(source)} is not ready yet: ${asked}.`,
+      typeof reason.aboveSince === 'number'
+        ? `It has been since ${timeWords(reason.aboveSince, scene) ?? ''}${until === null ? '' : `, so it is ready ${until} at the earliest`}.`
+        : `It is at ${value}.`,
+    );
+  }
+  return said(
+    `The core of ${source} is at ${value}, under its floor of ${level(reason.floor ?? 0, scene.preferences)}.`,
+    reason.againAtOrAbove !== undefined &&
+      `Drawn on again from ${level(reason.againAtOrAbove, scene.preferences)}.`,
+  );
+}
+
+const FAULTS: Record<string, string> = {
+  silent: 'silent',
+  'never-heard': 'never heard',
+  'out-of-range': 'out of its range',
+  'one-wire-fault': 'its probe answers with a fault',
+  'too-fast': 'changing faster than it can',
+  frozen: 'frozen at one value',
+  'input-bad': 'made of a sensor that cannot be trusted',
+  contradicted: 'contradicted by its neighbours',
+};
+
+/** What is wrong with a point. @example faultWords('silent') === 'silent' */
+export function faultWords(why: string | null | undefined): string {
+  return why === null || why === undefined ? 'not to be trusted' : (FAULTS[why] ?? 'not to be trusted');
+}
+
+export function failSafeWords(reason: Reason<'fail-safe'>, scene: Scene): string {
+  const points = (reason.points ?? []).map((one) => {
+    const since = timeWords(one.lastAt, scene);
+    return `${pointName(one.point, scene)}, ${faultWords(one.why)}${since === null ? '' : ` since ${since}`}`;
+  });
+  const [what, is] = points.length > 1 ? ['Its sensors are', ''] : ['Its sensor is', ''];
+  return said(
+    `${what} missing${is}${points.length === 0 ? '' : `: ${points.join('; ')}`}.`,
+    reason.safe === 'on' && 'Runs, as its wiring makes it when nothing commands it.',
+  );
+}

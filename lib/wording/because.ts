@@ -1,0 +1,43 @@
+/** Why a channel stands as it does, in one or two plain sentences, from the reason that the core gave as data. */
+import type { Reasons } from '@/lib/control/because';
+import { CLAIMS, type Claim } from '@/lib/control/types';
+import * as held from './because-held';
+import * as night from './because-night';
+import { withInstants, type Scene } from './scene';
+
+type Words = { [Name in Claim]: (reason: Partial<Reasons[Name]>, scene: Scene) => string };
+
+const WORDS: Words = {
+  'lock-out': held.lockOutWords,
+  interlock: held.interlockWords,
+  limit: held.limitWords,
+  proving: held.provingWords,
+  'short-cycle': held.shortCycleWords,
+  hand: night.handWords,
+  'source-guard': held.sourceGuardWords,
+  frost: night.frostWords,
+  'fail-safe': held.failSafeWords,
+  rest: night.restWords,
+  band: night.bandWords,
+  idle: night.idleWords,
+};
+
+export function isClaim(value: string): value is Claim {
+  return (CLAIMS as readonly string[]).includes(value);
+}
+
+/**
+ * @param because as the core gave it, or as it came over the wire with its instants in ISO
+ * @example becauseWords('band', {…}, scene) reads "The bench is at 3.6 °C, under 4.0 °C. Stops above 7.5 °C."
+ */
+export function becauseWords(claim: string, because: unknown, scene: Scene): string {
+  if (!isClaim(claim)) return '';
+  const reason = withInstants(because);
+  const data = typeof reason === 'object' && reason !== null ? reason : {};
+  return wordsOf(claim, data, scene);
+}
+
+/** A reason kept by an older release may lack fields, so every field is optional to the words. */
+function wordsOf<Name extends Claim>(claim: Name, data: object, scene: Scene): string {
+  return WORDS[claim](data as Partial<Reasons[Name]>, scene);
+}
