@@ -41,7 +41,7 @@ export async function start(env = process.env, usual = {}) {
   await seed(secrets.password, usual.seedArguments ?? []);
   await build();
 
-  say('starting web, worker' + (settings.yard ? ' and yard' : ''));
+  say(settings.yard ? 'starting web, worker, yard' : 'starting web, worker');
   delete process.env.DEMO_PASSWORD; // only the seed needs it
   const notes = signIns(secrets.password);
   process.argv = [
