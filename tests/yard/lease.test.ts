@@ -1,5 +1,7 @@
-import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { FakeServer, pass, testNode, until, type Connection, type TestNode } from './support';
+
+vi.setConfig({ testTimeout: 40_000 });
 
 let server: FakeServer;
 let it: TestNode;

@@ -1,4 +1,4 @@
-import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { AppTime } from '@/worker/yard/clock';
 import { Backlog, keptForS } from '@/worker/yard/backlog';
 import { FakeClock, FakeServer, pass, testNode, until, type Connection, type TestNode } from './support';
@@ -8,6 +8,8 @@ interface Sent {
   v: number;
   t: number;
 }
+vi.setConfig({ testTimeout: 40_000 });
+
 let server: FakeServer;
 let it: TestNode;
 const two = (appMs: number): Array<{ n: string; u: string; v: number }> => [

@@ -146,10 +146,10 @@ export class FakeServer {
   }
 }
 
-/** Waits for a condition, 5 s at most; there is no time in it for the node, whose clock stands. */
+/** Waits for a condition, 30 s at most; there is no time in it for the node, whose clock stands. */
 export async function until(condition: () => boolean): Promise<void> {
-  for (const end = Date.now() + 5_000; !condition();) {
-    if (Date.now() > end) throw new Error('waited 5 s for what did not come');
+  for (const end = Date.now() + 30_000; !condition();) {
+    if (Date.now() > end) throw new Error('waited 30 s for what did not come');
     await new Promise((resolve) => setImmediate(resolve));
   }
 }

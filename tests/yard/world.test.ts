@@ -1,7 +1,10 @@
-import { describe, expect, test } from 'vitest';
+import { describe, expect, test, vi } from 'vitest';
 import { yardHouses } from '@/worker/yard/catalogue';
 import { sensorReadings } from '@/worker/yard/sensors';
 import * as yard from '@/worker/yard/world';
+
+// Weeks are played here; a busy machine may need its time for them.
+vi.setConfig({ testTimeout: 60_000 });
 
 const start = Date.UTC(2026, 10, 20, 12);
 const dayS = 86_400;

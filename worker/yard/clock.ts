@@ -28,6 +28,11 @@ export const systemClock: Clock = {
   id: () => randomUUID(),
 };
 
+/** A moment as people and other programs read it. */
+export function iso(ms: number): string {
+  return new Date(ms).toISOString();
+}
+
 /**
  * App time as a node without a clock of its own keeps it: set from `welcome.now`, carried on by the
  * monotonic clock times the rate. At rate 1 the machine's own clock serves until the first welcome.

@@ -2,6 +2,9 @@
 import { parseArgs } from 'node:util';
 import { readFileSync } from 'node:fs';
 import { z } from 'zod';
+import { yardHouses } from './catalogue';
+
+const houseKeys = yardHouses.map(({ key }) => key);
 
 const yardConfig = z.strictObject({
   seed: z.number().int(),
@@ -12,7 +15,9 @@ const yardConfig = z.strictObject({
       key: z.string().min(1),
       token: z.string().min(1),
       /** key of the house in the yard's catalogue that this node is wired into */
-      house: z.string().min(1),
+      house: z.string().refine((key) => houseKeys.includes(key), {
+        error: ({ input }) => `the yard has no house "${String(input)}"; it has ${houseKeys.join(', ')}`,
+      }),
     }),
   ),
 });

@@ -1,8 +1,8 @@
 /**
  * The yard as a process: `--config FILE --server WS_URL [--rate N]`. One JSON line an event on standard
- * output; ends with 0 on SIGTERM and SIGINT after saving its world, with 78 on a wrong setting.
+ * output, `at` being app time where that is known; ends with 0 on SIGTERM and SIGINT after saving its world, with 78 on a wrong setting.
  */
-import { systemClock } from './clock';
+import { iso, systemClock } from './clock';
 import { readConfig, type YardConfig } from './config';
 import { readWorld, saveWorld } from './store';
 import { Yard, type YardLog } from './yard';
@@ -10,8 +10,8 @@ import { Yard, type YardLog } from './yard';
 const saveEveryMs = 60_000;
 
 const log: YardLog = (event, fields) => {
-  const at = new Date(systemClock.wallMs()).toISOString();
-  process.stdout.write(`${JSON.stringify({ at, event, ...fields })}\n`);
+  const line = { at: iso(systemClock.wallMs()), event, ...fields };
+  process.stdout.write(`${JSON.stringify(line)}\n`);
 };
 
 function config(): YardConfig {
@@ -26,11 +26,6 @@ function config(): YardConfig {
 function main(): void {
   const settings = config();
   const saved = readWorld(settings.stateFile, settings.seed);
-  log('start', {
-    seed: settings.seed,
-    rate: settings.rate,
-    world: 'world' in saved ? `from ${new Date(saved.world.ms).toISOString()}` : saved.why,
-  });
   const yard = new Yard(settings, systemClock, log, 'world' in saved ? saved.world : undefined);
   const save = (): void => {
     const world = yard.current();
@@ -56,6 +51,11 @@ function main(): void {
   };
   process.once('SIGTERM', () => end('SIGTERM'));
   process.once('SIGINT', () => end('SIGINT'));
+  log('start', {
+    seed: settings.seed,
+    rate: settings.rate,
+    world: 'world' in saved ? `from ${iso(saved.world.ms)}` : saved.why,
+  });
   yard.start();
   saveAgain();
 }

@@ -80,8 +80,10 @@ export function createWorld(seed: number, startMs: number): World {
  */
 export function stepWorld(world: World, relays: YardRelays, dtS: number): World {
   const houses: Record<string, HouseWorld> = {};
+  // All houses ask for the same few moments, and the weather is half of the work of a step.
+  const weather = remembered((ms) => weatherAt(world.seed, ms));
   for (const place of yardHouses) {
-    houses[place.key] = stepHouse(world, place, relays[place.node] ?? {}, dtS);
+    houses[place.key] = stepHouse(world, place, relays[place.node] ?? {}, dtS, weather);
   }
   return { ...world, ms: world.ms + dtS * 1000, houses, relays };
 }
@@ -93,8 +95,20 @@ export function houseWorld(world: World, houseKey: string): HouseWorld {
 }
 
 export function localWeather(world: World, place: YardHouse, ms: number): Weather {
-  const weather = weatherAt(world.seed, ms);
+  return sheltered(weatherAt(world.seed, ms), place);
+}
+
+function sheltered(weather: Weather, place: YardHouse): Weather {
   return { ...weather, tempC: weather.tempC + place.shelterK };
+}
+
+function remembered(ask: (ms: number) => Weather): (ms: number) => Weather {
+  const known = new Map<number, Weather>();
+  return (ms) => {
+    const found = known.get(ms) ?? ask(ms);
+    known.set(ms, found);
+    return found;
+  };
 }
 
 /** Heat stored in the lumps of a house, its heap and its soil, J above 0 °C: what the flows must add up to. */
@@ -128,7 +142,13 @@ export function isOn(coils: Coils, relay: number | undefined): boolean {
   return relay !== undefined && coils[String(relay)] === 'on';
 }
 
-function stepHouse(world: World, place: YardHouse, coils: Coils, dtS: number): HouseWorld {
+function stepHouse(
+  world: World,
+  place: YardHouse,
+  coils: Coils,
+  dtS: number,
+  weatherOf: (ms: number) => Weather,
+): HouseWorld {
   const now = houseWorld(world, place.key);
   const pressurePa = pressureAtAltitude(place.altitudeM);
   const corePerK = coreJPerK(place.heap, now.heap);
@@ -142,7 +162,7 @@ function stepHouse(world: World, place: YardHouse, coils: Coils, dtS: number): H
 
   const rates = (state: readonly number[], timeS: number): number[] => {
     const [airC = 0, massC = 0, coreC = 0, baseC = 0, ringC = 0, digestibleJ = 0] = state;
-    const weather = localWeather(world, place, timeS * 1000);
+    const weather = sheltered(weatherOf(timeS * 1000), place);
     const around = {
       outdoorsC: weather.tempC,
       groundC: underHeapC,

@@ -3,7 +3,7 @@
  * moment whenever somebody looks at it or a coil is about to change, so that a coil acts for as long as it was on.
  */
 import { reportEveryS, yardHouse } from './catalogue';
-import { AppTime, type Clock } from './clock';
+import { AppTime, iso, type Clock } from './clock';
 import type { YardConfig } from './config';
 import { FieldNode } from './node';
 import { sensorReadings } from './sensors';
@@ -69,8 +69,13 @@ export class Yard {
         return sensorReadings(world, house, appMs).map(({ key: n, unit: u, value: v }) => ({ n, u, v }));
       },
       beforeCoilsChange: (monotonicMs) => this.bringUpTo(monotonicMs),
-      log: (event, fields) => this.log(event, { node: key, ...fields }),
+      log: (event, fields) => this.log(event, { ...this.at(), node: key, ...fields }),
     });
+  }
+
+  private at(): { at?: string } {
+    const appMs = this.time.nowMs();
+    return appMs === null ? {} : { at: iso(appMs) };
   }
 
   private keepStepping(): void {
