@@ -44,6 +44,8 @@ export interface NightSummary {
   from: number;
   /** End of what is summed: the noon, or now. */
   to: number;
+  /** Its second noon. */
+  ends: number;
   complete: boolean;
   /** Of the night, or of what has passed of it. */
   hours: number;
@@ -105,6 +107,7 @@ export function summarise(input: NightInput): NightSummary {
     source: source.slug,
     from: night.from,
     to,
+    ends: night.to,
     complete: to === night.to,
     hours: round(hoursBetween(night.from, to), 4),
     onSeconds,

@@ -1,0 +1,60 @@
+import type { ReactNode } from 'react';
+import type { NightSummary } from '@/lib/analysis/nights';
+import { totalOf } from '@/lib/analysis/totals';
+import { count, decimal, energy, share, temperature } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { clock, duration } from '@/lib/units/time';
+import { nightDate, whyMissing } from '@/lib/wording/duty';
+
+export interface FigureRow {
+  name: ReactNode;
+  value: ReactNode;
+  note?: ReactNode;
+}
+
+/**
+ * The figures of one night or of several, from the very totals that the table and the sentence show. Watch's "This night
+ * so far" takes them for one night.
+ */
+export function nightFigures(
+  nights: readonly NightSummary[],
+  zone: string,
+  frostLimitC: number | null,
+  preferences: Preferences,
+): FigureRow[] {
+  const totals = totalOf(nights);
+  const last = nights.at(-1);
+  const { heat, electricity, heatPerElectricity: gain, lowest, outdoorsLowest } = totals;
+  const why = last?.missing.heat;
+  // one night's lowest is told with its time, that of several with its night
+  const when = (at: number, night: string) =>
+    nights.length === 1 ? clock(at, zone, preferences) : nightDate(night);
+  const rows: (FigureRow | null)[] = [
+    { name: 'Ran', value: `${duration(totals.onSeconds)}, ${count(totals.starts, 'start')}` },
+    { name: 'Rested', value: duration(totals.restSeconds) },
+    totals.dutyOfDraw === null ? null : { name: 'Ran, of run and rest', value: share(totals.dutyOfDraw) },
+    heat === null
+      ? { name: 'Heat', value: 'not known', ...(why === undefined ? {} : { note: whyMissing(why) }) }
+      : { name: 'Heat', value: energy(heat.kWh, 1, heat.sd) },
+    electricity === null ? null : { name: 'Electricity', value: energy(electricity.kWh, 3) },
+    gain === null
+      ? null
+      : { name: 'Heat for 1 kWh of fan', value: `${decimal(gain.value, 0)} ± ${decimal(gain.sd, 0)} kWh` },
+    lowest === null
+      ? { name: 'Lowest in the house', value: 'not read' }
+      : {
+          name: 'Lowest in the house',
+          value: `${temperature(lowest.value, preferences)}, ${when(lowest.at, lowest.night)}`,
+        },
+    frostLimitC === null
+      ? null
+      : {
+          name: `Under ${temperature(frostLimitC, preferences)}`,
+          value: duration(totals.belowFrostLimitSeconds),
+        },
+    outdoorsLowest === null
+      ? null
+      : { name: 'Lowest outdoors', value: temperature(outdoorsLowest.value, preferences) },
+  ];
+  return rows.filter((row) => row !== null);
+}

@@ -1,0 +1,113 @@
+import type { StripSpan } from '@/lib/analysis/nights';
+
+/** Once on a page that has strips. Patterns carry the meaning; colour only supports it. */
+export function StripPatterns() {
+  return (
+    <svg aria-hidden="true" className="absolute size-0">
+      <defs>
+        <pattern
+          id="duty-rest"
+          width="5"
+          height="5"
+          patternUnits="userSpaceOnUse"
+          patternTransform="rotate(45)"
+        >
+          <rect width="5" height="5" className="fill-sheet" />
+          <rect width="1.6" height="5" className="fill-ember" />
+        </pattern>
+        <pattern id="duty-held" width="5" height="5" patternUnits="userSpaceOnUse">
+          <circle cx="1.5" cy="1.5" r="1" className="fill-soft" />
+          <circle cx="4" cy="4" r="1" className="fill-soft" />
+        </pattern>
+      </defs>
+    </svg>
+  );
+}
+
+function Spans({ spans, length, className }: { spans: StripSpan[]; length: number; className: string }) {
+  const part = (seconds: number) => `${Math.round((seconds / length) * 10_000) / 100}%`;
+  if (spans.length === 0) return null;
+  return (
+    <g className={className}>
+      {spans.map(([, from, to]) => (
+        <rect key={from} x={part(from)} width={part(to - from)} />
+      ))}
+    </g>
+  );
+}
+
+/**
+ * One channel's night from noon to noon. `length` is the whole night's, s: one that lasts ends early. Its words stand
+ * beside it in the table, so to a reader that cannot see it it is nothing.
+ */
+export function NightStrip({
+  spans,
+  length,
+  tall = false,
+}: {
+  spans: StripSpan[];
+  length: number;
+  tall?: boolean;
+}) {
+  const of = (kind: StripSpan[0], on?: boolean) =>
+    spans.filter((span) => span[0] === kind && (on === undefined || span[3] === on));
+  return (
+    <svg
+      aria-hidden="true"
+      className={`block w-full overflow-visible [&_rect]:h-full ${tall ? 'h-7' : 'h-3'}`}
+      preserveAspectRatio="none"
+    >
+      <Spans spans={of('rest')} length={length} className="fill-[url(#duty-rest)]" />
+      <Spans spans={of('held')} length={length} className="fill-[url(#duty-held)]" />
+      <Spans spans={of('run')} length={length} className="fill-ember" />
+      <Spans spans={of('hand', true)} length={length} className="fill-ember stroke-ink stroke-2" />
+      <Spans spans={of('hand', false)} length={length} className="fill-sheet stroke-ink stroke-2" />
+    </svg>
+  );
+}
+
+/** What the patterns mean. */
+export function StripKey() {
+  const swatch = 'inline-block h-3 w-5 overflow-visible align-[-1px] [&_rect]:h-full [&_rect]:w-full';
+  return (
+    <span className="flex flex-wrap gap-x-3 gap-y-1">
+      {(
+        [
+          ['run', 'fill-ember'],
+          ['rest', 'fill-[url(#duty-rest)]'],
+          ['held', 'fill-[url(#duty-held)]'],
+          ['by hand', 'fill-sheet stroke-ink stroke-2'],
+        ] as const
+      ).map(([name, fill]) => (
+        <span key={name} className="whitespace-nowrap">
+          <svg aria-hidden="true" className={swatch}>
+            <rect className={fill} />
+          </svg>{' '}
+          {name}
+        </span>
+      ))}
+    </span>
+  );
+}
+
+const CLOCK = {
+  24: ['12', '18', '00', '06', '12'],
+  12: ['12 pm', '6 pm', '12 am', '6 am', '12 pm'],
+} as const;
+
+/** Noon, evening, midnight, morning, noon. */
+export function StripAxis({ clock }: { clock: 24 | 12 }) {
+  return (
+    <span className="relative block h-4 font-mono text-[0.8rem] font-normal text-soft">
+      {CLOCK[clock].map((name, place) => (
+        <span
+          key={place}
+          className="absolute whitespace-nowrap"
+          style={{ left: `${place * 25}%`, transform: `translateX(-${place * 25}%)` }}
+        >
+          {name}
+        </span>
+      ))}
+    </span>
+  );
+}

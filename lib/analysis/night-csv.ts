@@ -1,0 +1,42 @@
+/** Nights as comma-separated values (RFC 4180), for a spreadsheet: one row a night and source, units in the heads. */
+import { DateTime } from 'luxon';
+import type { NightSummary } from './nights';
+
+type Cell = string | number | boolean | null;
+
+const COLUMNS: [head: string, of: (night: NightSummary, time: (at: number) => string) => Cell][] = [
+  ['night', (night) => night.night],
+  ['source', (night) => night.source],
+  ['complete', (night) => night.complete],
+  ['hours_h', (night) => night.hours],
+  ['on_s', (night) => night.onSeconds],
+  ['rest_s', (night) => night.restSeconds],
+  ['duty_of_night', (night) => night.dutyOfNight],
+  ['duty_of_draw', (night) => night.dutyOfDraw],
+  ['starts', (night) => night.starts],
+  ['heat_kWh', (night) => night.heat?.kWh ?? null],
+  ['heat_sd_kWh', (night) => night.heat?.sd ?? null],
+  ['electricity_kWh', (night) => night.electricity?.kWh ?? null],
+  ['lowest_C', (night) => night.lowest?.value ?? null],
+  ['lowest_point', (night) => night.lowest?.point ?? null],
+  ['lowest_at', (night, time) => (night.lowest ? time(night.lowest.at) : null)],
+  ['below_frost_limit_s', (night) => night.belowFrostLimitSeconds],
+  ['outdoors_lowest_C', (night) => night.outdoorsLowest?.value ?? null],
+  ['core_at_dawn_C', (night) => night.coreAtDawn?.value ?? null],
+  ['coverage', (night) => night.coverage],
+];
+
+/** What a spreadsheet would take for a formula is quoted out of it: keys are people's own text. */
+function cell(value: Cell): string {
+  if (value === null) return '';
+  if (typeof value !== 'string') return String(value);
+  const safe = /^[=+\-@\t\r]/.test(value) ? `'${value}` : value;
+  return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
+}
+
+/** Figures exactly as the interface tells them; what is not known is empty. Lines end in CR LF. */
+export function nightsCsv(nights: readonly NightSummary[], zone: string): string {
+  const time = (at: number) => DateTime.fromMillis(at, { zone }).toISO({ suppressMilliseconds: true }) ?? '';
+  const rows = nights.map((night) => COLUMNS.map(([, of]) => cell(of(night, time))).join(','));
+  return [COLUMNS.map(([head]) => head).join(','), ...rows, ''].join('\r\n');
+}
