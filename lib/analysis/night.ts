@@ -47,6 +47,11 @@ export function nightsBetween(fromMs: number, toMs: number, zone: string): Night
   return nights;
 }
 
+/** The name of the night `count` nights before (or, below zero, after) another. */
+export function nightBefore(night: string, count: number): string {
+  return DateTime.fromISO(night, { zone: 'UTC' }).minus({ days: count }).toFormat('yyyy-MM-dd');
+}
+
 /** Hours between two instants, epoch ms. */
 export function hoursBetween(fromMs: number, toMs: number): number {
   return (toMs - fromMs) / 3_600_000;

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { hoursBetween, nightNamed, nightOf, nightsBetween } from '@/lib/analysis/night';
+import { hoursBetween, nightBefore, nightNamed, nightOf, nightsBetween } from '@/lib/analysis/night';
 import { nightLengths } from '../checks/nights';
 
 const iso = (ms: number) => new Date(ms).toISOString().replace('.000', '');
@@ -49,6 +49,10 @@ describe('nights', () => {
         expect(nightNamed(night.night, where)).toEqual(night);
       }),
     );
+  });
+
+  it('are counted back by date, over the end of a month', () => {
+    expect(nightBefore('2026-12-01', 34)).toBe('2026-10-28');
   });
 
   it.each(['2026-02-30', 'today', '2026-11-26T00:00'])('refuse %s as a name', (name) => {
