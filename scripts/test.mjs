@@ -8,6 +8,7 @@ import { ensurePackages } from './packages.mjs';
 import { BUILD, ROOT } from './places.mjs';
 import { giveUp, say } from './say.mjs';
 import { checkNode } from './start/settings.mjs';
+import { countTests } from './test/count.mjs';
 
 const RESULTS = path.join(BUILD, 'tests.json');
 const bin = (...parts) => path.join(ROOT, 'node_modules', ...parts);
@@ -92,15 +93,7 @@ async function runTests(more) {
   rmSync(RESULTS, { force: true });
   const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`];
   const code = await run([bin('vitest', 'vitest.mjs'), 'run', ...reporters, ...more]);
-  if (!existsSync(RESULTS)) return { passed: 0, failed: 1 };
-  const results = JSON.parse(readFileSync(RESULTS, 'utf8'));
-  // a file that could not be read at all has no tests to count, but it is a failure
-  const unread = results.testResults.filter(
-    (file) => file.status === 'failed' && file.assertionResults.length === 0,
-  );
-  const failed = results.numFailedTests + unread.length;
-  // an error outside any test (a broken set-up, an unhandled rejection) fails the run as well
-  return { passed: results.numPassedTests, failed: failed === 0 && code !== 0 ? 1 : failed };
+  return countTests(existsSync(RESULTS) ? JSON.parse(readFileSync(RESULTS, 'utf8')) : null, code);
 }
 
 function run(args) {
