@@ -1,6 +1,7 @@
 import { describe, expect, test, vi } from 'vitest';
 import { yardHouses } from '@/worker/yard/catalogue';
 import { sensorReadings } from '@/worker/yard/sensors';
+import { flowNames } from '@/worker/yard/house-world';
 import * as yard from '@/worker/yard/world';
 
 // Weeks are played here; a busy machine may need its time for them.
@@ -29,7 +30,7 @@ describe('energy', () => {
   test.each(yardHouses.map(({ key }) => key))('of %s balances: flows add up to what is stored', (key) => {
     const before = yard.createWorld(7, start);
     const after = run(before, 3 * dayS, 30);
-    const flows = yard.flowNames.map((name) => yard.houseWorld(after, key).flowsJ[name]);
+    const flows = flowNames.map((name) => yard.houseWorld(after, key).flowsJ[name]);
     const moved = flows.reduce((sum, flow) => sum + Math.abs(flow), 0);
     const change = yard.storedJ(after, key) - yard.storedJ(before, key);
     expect(Math.abs(flows.reduce((sum, flow) => sum + flow, 0) - change) / moved).toBeLessThan(1e-6);

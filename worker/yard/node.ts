@@ -8,12 +8,11 @@ import type { AppTime, Clock } from './clock';
 import { Line } from './line';
 import { Outbox } from './outbox';
 import { RelayBoard } from './relays';
+import { Sampler } from './sampler';
 
 /** The hardware watchdog that is modelled: a node that does not run for so long is reset, coils off. */
 export const watchdogMs = 10_000;
 const watchdogFedEveryMs = 2_000;
-/** How much sooner than asked a timer of Node may come. */
-const timerEarlyMs = 5;
 
 export interface NodeParts {
   key: string;
@@ -37,21 +36,26 @@ type TimerName = 'lease' | 'relays' | 'sample' | 'watchdog';
 export class FieldNode {
   private board: RelayBoard;
   private readonly outbox: Outbox;
+  private readonly sampler: Sampler;
   private readonly line: Line;
   private seq = 0;
   private isWelcome = false;
-  private reportS: number;
-  private sampledS = 0;
   private ranMs: number;
   private readonly timers = new Map<TimerName, () => void>();
 
   constructor(private readonly parts: NodeParts) {
     this.board = new RelayBoard(parts.relays, parts.clock.id(), parts.rate);
-    this.reportS = parts.reportS;
     this.ranMs = parts.clock.monotonicMs();
     this.outbox = new Outbox(
       (pack) => this.send({ type: 'readings', pack }),
       (ms, then) => parts.clock.after(ms, () => this.run(then)),
+    );
+    this.sampler = new Sampler(
+      parts.reportS,
+      parts.rate,
+      parts.time,
+      (t) => this.sample(t),
+      (ms, then) => this.set('sample', ms, then),
     );
     this.line = new Line(parts.server, parts.token, parts.clock, {
       opened: () => this.run(() => this.opened()),
@@ -63,7 +67,7 @@ export class FieldNode {
   start(): void {
     this.parts.log('boot', { boot: this.board.boot });
     this.line.dial();
-    this.scheduleSample();
+    this.sampler.schedule();
     this.feedWatchdog();
   }
 
@@ -115,7 +119,7 @@ export class FieldNode {
     this.isWelcome = false;
     this.parts.log('watchdog', { boot: this.board.boot });
     this.line.drop();
-    this.scheduleSample();
+    this.sampler.schedule();
     this.feedWatchdog();
   }
 
@@ -149,8 +153,8 @@ export class FieldNode {
     switch (frame.type) {
       case 'welcome':
         this.parts.time.set(frame.now * 1000);
-        this.reportS = frame.report;
-        return this.welcomed();
+        this.sampler.setInterval(frame.report);
+        return this.welcomed(frame.report);
       case 'command':
         return this.command(frame);
       case 'ack':
@@ -162,15 +166,15 @@ export class FieldNode {
     }
   }
 
-  private welcomed(): void {
-    this.parts.log('welcome', { report: this.reportS });
+  private welcomed(report: number): void {
+    this.parts.log('welcome', { report });
     this.line.welcomed();
     this.isWelcome = true;
     this.board.connected();
     this.sendRelays();
-    if (this.sampledS === 0) this.takeSample(this.parts.time.nowMs());
+    if (this.sampler.isFresh) this.sampler.now();
     else this.outbox.send();
-    this.scheduleSample();
+    this.sampler.schedule();
   }
 
   private command(frame: CommandFrame): void {
@@ -206,28 +210,9 @@ export class FieldNode {
     return this.line.send({ ...frame, seq: this.seq }) ? this.seq : null;
   }
 
-  private takeSample(appMs: number | null): void {
-    const t = Math.floor((appMs ?? 0) / 1000);
-    if (t <= this.sampledS) return;
-    this.sampledS = t;
+  private sample(t: number): void {
     this.outbox.add(this.parts.sample(t * 1000).map((record) => ({ ...record, t })));
     this.outbox.send();
-  }
-
-  /** At whole multiples of the interval, so that stamps are even and a restart falls into step. */
-  private scheduleSample(afterMs = this.parts.time.nowMs()): void {
-    const appMs = this.parts.time.nowMs();
-    if (appMs === null || afterMs === null) return;
-    const everyMs = this.reportS * 1000;
-    const dueMs = (Math.floor(afterMs / everyMs) + 1) * everyMs;
-    this.set('sample', this.parts.time.realMs((dueMs - appMs) / 1000), () => {
-      const now = this.parts.time.nowMs() ?? 0;
-      // Timers may come a little early, and late after a stall: the stamp is the multiple all the same.
-      const isDue = now > dueMs - timerEarlyMs * this.parts.rate;
-      const stampMs = Math.max(dueMs, Math.floor(now / everyMs) * everyMs);
-      if (isDue) this.takeSample(stampMs);
-      this.scheduleSample(isDue ? stampMs : now);
-    });
   }
 
   private set(name: TimerName, ms: number, then: () => void): void {

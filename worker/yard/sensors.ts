@@ -6,7 +6,8 @@ import { humidityRatio, pressureAtAltitude, relativeHumidity } from '@/lib/physi
 import { yardHouse, type Quantity, type YardHouse, type YardPoint } from './catalogue';
 import { normal } from './noise';
 import type { Weather } from './weather';
-import { houseWorld, isOn, localWeather, type HouseWorld, type World } from './world';
+import { isOn, type HouseWorld } from './house-world';
+import { houseWorld, localWeather, type World } from './world';
 
 export interface SensorReading {
   key: string;

@@ -3,7 +3,8 @@ import { mkdirSync, readFileSync, renameSync, writeFileSync } from 'node:fs';
 import { dirname } from 'node:path';
 import { z } from 'zod';
 import { yardHouses } from './catalogue';
-import { flowNames, type World } from './world';
+import { flowNames } from './house-world';
+import type { World } from './world';
 
 const finite = z.number();
 const worldFile = z.strictObject({
