@@ -1,16 +1,10 @@
 // Debian's Chromium, for the tests in a browser.
-import { existsSync } from 'node:fs';
-import path from 'node:path';
 import { installDebian } from './debian.mjs';
+import { inPath } from './path.mjs';
 
 /** The browser's program, or undefined: what CHROMIUM names, else the first found in PATH. */
 export function findChromium() {
-  if (process.env.CHROMIUM) return process.env.CHROMIUM;
-  const folders = (process.env.PATH ?? '').split(path.delimiter);
-  const places = ['chromium', 'chromium-browser', 'google-chrome'].flatMap((name) =>
-    folders.map((folder) => path.join(folder, name)),
-  );
-  return places.find((place) => existsSync(place));
+  return process.env.CHROMIUM || inPath('chromium') || inPath('chromium-browser') || inPath('google-chrome');
 }
 
 export function ensureChromium() {

@@ -1,6 +1,6 @@
 // Debian's packages, where the user may install them.
 import { spawnSync } from 'node:child_process';
-import { existsSync } from 'node:fs';
+import { inPath } from './path.mjs';
 import { say, Trouble } from './say.mjs';
 
 /**
@@ -12,7 +12,7 @@ import { say, Trouble } from './say.mjs';
 export function installDebian(names, purpose, otherWay) {
   const list = names.join(' ');
   const byHand = `Install it with: apt-get install ${list}. ${otherWay}`;
-  if (!existsSync('/usr/bin/apt-get')) {
+  if (inPath('apt-get') === undefined) {
     throw new Trouble(`${list} is needed for ${purpose}, and this machine has no apt-get. ${byHand}`);
   }
   const asRoot = rootPrefix();

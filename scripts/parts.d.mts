@@ -7,6 +7,7 @@ export function doorArguments(options: {
   trustProxy?: boolean;
   webPort: number;
   workerPort: number;
+  standbyPorts?: number[];
   yard: boolean;
   rate: number;
   dataDir: string;

@@ -16,6 +16,7 @@ export function doorArguments({
   trustProxy,
   webPort,
   workerPort,
+  standbyPorts = [],
   yard,
   rate,
   dataDir,
@@ -34,6 +35,8 @@ export function doorArguments({
   ];
   return [
     ...['--port', String(port), '--web-port', String(webPort), '--worker-port', String(workerPort)],
+    // workers that somebody else starts: the door only asks them whether they lead
+    ...standbyPorts.flatMap((standby) => ['--worker-port', String(standby)]),
     ...(portFixed ? ['--port-fixed'] : []),
     ...(host ? ['--host', host] : []),
     ...(publicUrl ? ['--public-url', publicUrl] : []),

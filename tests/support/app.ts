@@ -20,6 +20,8 @@ export interface AppOptions {
   rate?: number;
   /** The demo holdings, with so many nights of history; false for an empty database. Default three nights. */
   seed?: false | { nights: number };
+  /** Loopback ports of stand-by workers, which the test itself starts. */
+  standbyPorts?: number[];
   /** More environment for the parts, over the usual. */
   env?: Record<string, string>;
 }
@@ -56,7 +58,7 @@ export async function startApp(
     throw new Error('The pages are not built: npm run build');
   }
   await build(Object.keys(PROGRAMS));
-  const { yard = false, rate = 1, seed = { nights: 3 } } = options;
+  const { yard = false, rate = 1, seed = { nights: 3 }, standbyPorts = [] } = options;
   const dataDir = mkdtempSync(path.join(tmpdir(), 'middenward-app-'));
   const database =
     seed === false
@@ -64,7 +66,7 @@ export async function startApp(
       : await seededDatabase(cluster, { nights: seed.nights, rate, dataDir });
   const [port = 0, webPort = 0, workerPort = 0, mailPort = 0] = await severalFree(4);
   const url = `http://localhost:${port}`;
-  const parts = { webPort, workerPort, mailPort, yard, rate, dataDir };
+  const parts = { webPort, workerPort, mailPort, yard, rate, dataDir, standbyPorts };
 
   const door = spawn(process.execPath, [DOOR, ...doorArguments({ ...parts, port, portFixed: true })], {
     cwd: ROOT,

@@ -10,6 +10,8 @@ import { readSettings, SettingsFault, type Settings } from './settings';
 import { CONFIGURATION, Supervisor } from './supervise';
 
 const say = (line: string) => console.log(line);
+// whoever read our lines may go (a closed terminal, `| head`); control goes on
+process.stdout.on('error', () => {});
 
 function endWith(sentence: string, code: number): never {
   console.error(sentence);

@@ -1,0 +1,1 @@
+export function installDebian(names: string[], purpose: string, otherWay: string): void;
