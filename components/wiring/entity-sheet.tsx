@@ -3,12 +3,12 @@ import { useRouter } from 'next/navigation';
 import { useState, type ReactNode } from 'react';
 import { useForm, type FieldErrors, type FieldValues, type Resolver } from 'react-hook-form';
 import type { z } from 'zod';
-import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import type { Preferences } from '@/lib/units/preferences';
 import { bodyOf, issuesOf, nested, valuesOf, type Group } from './spec';
+import { SheetFoot } from './sheet-foot';
 import { SpecFields } from './spec-fields';
 
 export interface EntitySheetProps {
@@ -24,6 +24,8 @@ export interface EntitySheetProps {
   etag?: string | undefined;
   save: string;
   done: string;
+  /** What happens when it is taken out of use; null: not from here. */
+  removal: { word: string; what: string } | null;
   onClose: () => void;
   /** Takes the answer before the sheet closes: a node's token is in it. True keeps the sheet's place. */
   onAnswer?: (answer: unknown) => boolean;
@@ -87,22 +89,16 @@ export function EntitySheet(props: EntitySheetProps) {
         <p role="alert" className="font-semibold text-alarm empty:hidden">
           {failure ?? (errors.root?.message || null)}
         </p>
-        {isLeaving ? (
-          <div role="alert" className="flex flex-wrap items-center gap-2 border-t border-line pt-3">
-            <p className="w-full font-semibold">What you typed is not saved. Throw it away?</p>
-            <Button onClick={() => setLeaving(false)} autoFocus>
-              Go on typing
-            </Button>
-            <Button onClick={props.onClose}>Throw away</Button>
-          </div>
-        ) : (
-          <div className="sticky bottom-0 -mx-5 -mb-5 flex flex-wrap gap-2 border-t border-line bg-sheet px-5 py-3">
-            <Button type="submit" kind="primary" busy={isSubmitting}>
-              {props.save}
-            </Button>
-            <Button onClick={() => (isDirty ? setLeaving(true) : props.onClose())}>Leave as it is</Button>
-          </div>
-        )}
+        <SheetFoot
+          save={props.save}
+          busy={isSubmitting}
+          isDirty={isDirty}
+          removal={props.removal}
+          path={props.path}
+          isLeaving={isLeaving}
+          setLeaving={setLeaving}
+          onClose={props.onClose}
+        />
       </form>
     </Dialog>
   );

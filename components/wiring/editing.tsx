@@ -1,0 +1,112 @@
+'use client';
+import dynamic from 'next/dynamic';
+import { createContext, use, useState, type ReactNode } from 'react';
+import { Button } from '@/components/ui/button';
+import type { Preferences } from '@/lib/units/preferences';
+import type { Yard } from './forms/options';
+import type { Kind } from './kinds';
+
+/** Forms with their schemas are half of this page's script, and most visits only read. */
+const KindSheet = dynamic(() => import('./kind-sheet').then((module) => module.KindSheet));
+const TokenSheet = dynamic(() => import('./token-sheet').then((module) => module.TokenSheet));
+
+interface Editing {
+  allowed: readonly string[];
+  edit: (kind: Kind, id: string | null) => void;
+  token: (nodeId: string, doing: 'rotate' | 'revoke') => void;
+}
+const Context = createContext<Editing>({ allowed: [], edit: () => undefined, token: () => undefined });
+
+type Open =
+  | { what: 'kind'; kind: Kind; id: string | null }
+  | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' };
+
+/** Opens the forms of the page; without the right, its buttons are not there. */
+export function WiringEditing({
+  yard,
+  preferences,
+  allowed,
+  children,
+}: {
+  yard: Yard;
+  preferences: Preferences;
+  allowed: readonly string[];
+  children: ReactNode;
+}) {
+  const [open, setOpen] = useState<Open | null>(null);
+  const close = () => setOpen(null);
+  return (
+    <Context
+      value={{
+        allowed,
+        edit: (kind, id) => setOpen({ what: 'kind', kind, id }),
+        token: (nodeId, doing) => setOpen({ what: 'token', nodeId, doing }),
+      }}
+    >
+      {children}
+      {open?.what === 'kind' ? (
+        <KindSheet yard={yard} preferences={preferences} kind={open.kind} id={open.id} onClose={close} />
+      ) : null}
+      {open?.what === 'token' ? (
+        <TokenSheet yard={yard} nodeId={open.nodeId} doing={open.doing} onClose={close} />
+      ) : null}
+    </Context>
+  );
+}
+
+const needs = (kind: Kind) =>
+  kind === 'house' || kind === 'source' || kind === 'loop' ? 'yard.write' : 'wiring.write';
+
+export function AddButton({
+  kind,
+  label,
+  primary = false,
+}: {
+  kind: Kind;
+  label: string;
+  primary?: boolean;
+}) {
+  const { allowed, edit } = use(Context);
+  if (!allowed.includes(needs(kind))) return null;
+  return (
+    <Button kind={primary ? 'primary' : 'plain'} onClick={() => edit(kind, null)}>
+      {label}
+    </Button>
+  );
+}
+
+/** `of` names the thing for a screen reader, since a page has many of these buttons. */
+export function ChangeButton({ kind, id, of }: { kind: Kind; id: string; of: string }) {
+  const { allowed, edit } = use(Context);
+  if (!allowed.includes(needs(kind))) return null;
+  return (
+    <Button kind="quiet" onClick={() => edit(kind, id)}>
+      Change<span className="sr-only"> {of}</span>…
+    </Button>
+  );
+}
+
+export function TokenButtons({
+  nodeId,
+  nodeKey,
+  isRevoked,
+}: {
+  nodeId: string;
+  nodeKey: string;
+  isRevoked: boolean;
+}) {
+  const { allowed, token } = use(Context);
+  if (!allowed.includes('node.token')) return null;
+  return (
+    <>
+      <Button kind="quiet" onClick={() => token(nodeId, 'rotate')}>
+        New token<span className="sr-only"> for {nodeKey}</span>…
+      </Button>
+      {isRevoked ? null : (
+        <Button kind="quiet" onClick={() => token(nodeId, 'revoke')}>
+          Revoke<span className="sr-only"> the token of {nodeKey}</span>…
+        </Button>
+      )}
+    </>
+  );
+}

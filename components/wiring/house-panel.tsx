@@ -1,0 +1,46 @@
+import { Figures, Panel } from '@/components/ui/panel';
+import type { House } from '@/lib/schema/yard-view';
+import { decimal, length, temperature } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { LAST_RESORT_CAUTION } from '@/lib/wording/wiring-parts';
+import { ChangeButton } from './editing';
+
+/** Where the house stands, and at what cold it acts and wakes somebody. */
+export function HousePanel({ house, preferences }: { house: House; preferences: Preferences }) {
+  const degree = (value: number, plus: string, minus: string) =>
+    `${decimal(Math.abs(value), 2)}° ${value < 0 ? minus : plus}`;
+  return (
+    <Panel title="House" actions={<ChangeButton kind="house" id={house.id} of={house.name} />}>
+      <Figures
+        rows={[
+          { name: 'Name', value: <span className="font-sans">{house.name}</span> },
+          { name: 'Time zone', value: <span className="font-sans">{house.zone}</span> },
+          {
+            name: 'Place',
+            value: `${degree(house.latitude, 'N', 'S')}, ${degree(house.longitude, 'E', 'W')}`,
+          },
+          { name: 'Altitude', value: length(house.altitude, preferences) },
+          {
+            name: 'Frost help below',
+            value:
+              house.frostLimit === null ? (
+                <span className="font-sans text-warn">none</span>
+              ) : (
+                temperature(house.frostLimit, preferences)
+              ),
+          },
+          {
+            name: 'Wakes somebody below',
+            value:
+              house.frostAlarm === null ? (
+                <span className="font-sans text-warn">nobody is woken</span>
+              ) : (
+                temperature(house.frostAlarm, preferences)
+              ),
+          },
+        ]}
+      />
+      <p className="mt-2 border-l-4 border-warn pl-3 text-[0.9rem] text-soft">{LAST_RESORT_CAUTION}</p>
+    </Panel>
+  );
+}
