@@ -30,8 +30,8 @@ export function nightFigures(
   const when = (at: number, night: string) =>
     nights.length === 1 ? clock(at, zone, preferences) : nightDate(night);
   const rows: (FigureRow | null)[] = [
-    { name: 'Ran', value: `${duration(totals.onSeconds)}, ${count(totals.starts, 'start')}` },
-    { name: 'Rested', value: duration(totals.restSeconds) },
+    { name: 'Ran', value: `${hours(totals.onSeconds)}, ${count(totals.starts, 'start')}` },
+    { name: 'Rested', value: hours(totals.restSeconds) },
     totals.dutyOfDraw === null ? null : { name: 'Ran, of run and rest', value: share(totals.dutyOfDraw) },
     heat === null
       ? { name: 'Heat', value: 'not known', ...(why === undefined ? {} : { note: whyMissing(why) }) }
@@ -50,11 +50,16 @@ export function nightFigures(
       ? null
       : {
           name: `Under ${temperature(frostLimitC, preferences)}`,
-          value: duration(totals.belowFrostLimitSeconds),
+          value: hours(totals.belowFrostLimitSeconds),
         },
     outdoorsLowest === null
       ? null
       : { name: 'Lowest outdoors', value: temperature(outdoorsLowest.value, preferences) },
   ];
   return rows.filter((row) => row !== null);
+}
+
+/** Many nights are told in hours throughout: "5 days" of a fan would not be read as a sum of runs. */
+function hours(seconds: number): string {
+  return seconds < 48 * 3600 ? duration(seconds) : `${decimal(seconds / 3600, 0)}\u00a0h`;
 }

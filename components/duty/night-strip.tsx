@@ -54,7 +54,7 @@ export function NightStrip({
   return (
     <svg
       aria-hidden="true"
-      className={`block w-full overflow-visible [&_rect]:h-full ${tall ? 'h-7' : 'h-3'}`}
+      className={`block w-full overflow-visible [&_rect]:h-full ${tall ? 'h-7' : 'h-3.5'}`}
       preserveAspectRatio="none"
     >
       <Spans spans={of('rest')} length={length} className="fill-[url(#duty-rest)]" />
@@ -68,7 +68,7 @@ export function NightStrip({
 
 /** What the patterns mean. */
 export function StripKey() {
-  const swatch = 'inline-block h-3 w-5 overflow-visible align-[-1px] [&_rect]:h-full [&_rect]:w-full';
+  const swatch = 'mr-1 inline-block h-3 w-5 overflow-visible align-[-1px] [&_rect]:h-full [&_rect]:w-full';
   return (
     <span className="flex flex-wrap gap-x-3 gap-y-1">
       {(
@@ -94,6 +94,10 @@ const CLOCK = {
   24: ['12', '18', '00', '06', '12'],
   12: ['12 pm', '6 pm', '12 am', '6 am', '12 pm'],
 } as const;
+
+/** Lines at noon, evening, midnight, morning and noon, behind a strip that fills its box. */
+export const QUARTERS =
+  'border-r border-line bg-[linear-gradient(to_right,var(--line)_1px,transparent_1px)] bg-size-[25%_100%]';
 
 /** Noon, evening, midnight, morning, noon. */
 export function StripAxis({ clock }: { clock: 24 | 12 }) {

@@ -7,7 +7,7 @@ import { decimal, degrees, share, temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { nightDate } from '@/lib/wording/duty';
 import { addressOf, type DutyAddress, type Sort } from './address';
-import { NightStrip, StripAxis } from './night-strip';
+import { NightStrip, QUARTERS, StripAxis } from './night-strip';
 
 export interface NightsTableProps {
   house: string;
@@ -38,7 +38,7 @@ function sorted(nights: NightSummary[], { sort, order }: DutyAddress): NightSumm
   });
 }
 
-function columnsOf({ house, address, preferences, nights }: NightsTableProps, hasHeat: boolean): Column[] {
+function columnsOf({ house, address, preferences }: NightsTableProps, hasHeat: boolean): Column[] {
   const column = (key: Sort, label: string, more: Partial<Column> = {}): Column => {
     const isSorted = address.sort === key;
     const order = isSorted && address.order === 'up' ? 'down' : 'up';
@@ -55,7 +55,7 @@ function columnsOf({ house, address, preferences, nights }: NightsTableProps, ha
   };
   const unit = degrees(preferences);
   return [
-    column('night', nights.length === 1 ? 'night' : 'nights', { figure: false }),
+    column('night', 'night', { figure: false }),
     { key: 'strip', label: <StripAxis clock={preferences.clock} /> },
     column('ran', 'ran'),
     ...(hasHeat ? [column('heat', 'kWh')] : []),
@@ -137,8 +137,8 @@ function NightRow({
           {night.complete ? null : <span className="sr-only"> (so far)</span>}
         </Link>
       </th>
-      <td className="w-1/2 min-w-32 px-2 py-0.5">
-        <span className="flex flex-col gap-0.5 bg-[linear-gradient(to_right,var(--line)_1px,transparent_1px)] bg-size-[25%_100%]">
+      <td className={classes('w-1/2 min-w-32 px-0 py-0.5', QUARTERS)}>
+        <span className="flex flex-col gap-0.5">
           {night.strips.map((strip) => (
             <NightStrip key={strip.channel} spans={strip.spans} length={length} />
           ))}

@@ -7,7 +7,7 @@ import { clock } from '@/lib/units/time';
 import { decisionWords, nightTitle } from '@/lib/wording/duty';
 import { addressOf, type DutyAddress } from './address';
 import { nightFigures } from './figures';
-import { NightStrip, StripAxis } from './night-strip';
+import { NightStrip, QUARTERS, StripAxis } from './night-strip';
 
 export interface OpenedDecision {
   channel: string;
@@ -58,7 +58,7 @@ export function OpenedNight({
             {summary.strips.map((strip) => (
               <div key={strip.channel}>
                 <p className="pb-1 text-[0.9rem]">{strip.label}</p>
-                <div className="border-y border-line bg-[linear-gradient(to_right,var(--line)_1px,transparent_1px)] bg-size-[25%_100%] py-1">
+                <div className={`border-y border-line py-1 ${QUARTERS}`}>
                   <NightStrip spans={strip.spans} length={(summary.ends - summary.from) / 1000} tall />
                 </div>
               </div>
@@ -66,6 +66,7 @@ export function OpenedNight({
             <StripAxis clock={preferences.clock} />
             <Decisions
               decisions={decisions}
+              from={summary.from}
               zone={zone}
               preferences={preferences}
               many={summary.strips.length > 1}
@@ -93,11 +94,14 @@ export function OpenedNight({
 
 function Decisions({
   decisions,
+  from,
   zone,
   preferences,
   many,
 }: {
   decisions: OpenedDecision[];
+  /** The night's first noon: what stood then was decided before. */
+  from: number;
   zone: string;
   preferences: Preferences;
   many: boolean;
@@ -121,7 +125,7 @@ function Decisions({
             dateTime={new Date(decision.at).toISOString()}
             className="w-20 shrink-0 font-mono text-[0.95rem] text-soft"
           >
-            {clock(decision.at, zone, preferences)}
+            {decision.at < from ? 'at noon' : clock(decision.at, zone, preferences)}
           </time>
           <span>
             {many ? `${decision.channel}: ` : null}
