@@ -73,3 +73,10 @@ export function pause(clock: Clock, ms: number): Promise<void> {
     clock.after(ms, resolve);
   });
 }
+
+/** Before there is a clock: real time. */
+export function pauseReal(ms: number): Promise<void> {
+  return new Promise((resolve) => {
+    setTimeout(resolve, ms);
+  });
+}

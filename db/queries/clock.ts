@@ -43,7 +43,7 @@ export async function keepClockAnchor(
   );
 }
 
-/** App time, epoch ms, at a real time, epoch ms. */
+/** App time at a real time, both in whole epoch ms. */
 export function appTime(anchor: ClockAnchor, realAt: number): number {
-  return anchor.appAt + (realAt - anchor.realAt) * anchor.rate;
+  return Math.round(anchor.appAt + (realAt - anchor.realAt) * anchor.rate);
 }

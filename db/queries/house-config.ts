@@ -101,6 +101,7 @@ function channelConfig(row: HouseRows['channels'][number], source: string | null
     contact: row.contact === 'NC' ? 'NC' : 'NO',
     loadKind: LOAD_KINDS.find((kind) => kind === row.load.kind) ?? 'other',
     loadW: row.load.watts ?? null,
+    flowM3S: row.flow === null ? null : row.flow.litresPerSecond / 1000,
   };
 }
 

@@ -70,6 +70,25 @@ export function wantedAlarms(
     } else if (at !== null && standing?.lastHeardAt !== null && (standing?.lastHeardAt ?? 0) < startedAt) {
       undecided.add(key);
     }
+    const about = { node: node.key };
+    if (standing?.isCloned === true) {
+      alarms.push({
+        key: keyOf('cloned-token', record.id, node.id),
+        kind: 'cloned-token',
+        about,
+        data: {},
+        since: now,
+      });
+    }
+    if (standing?.isEpochTooFar === true) {
+      alarms.push({
+        key: keyOf('epoch-too-far', record.id, node.id),
+        kind: 'epoch-too-far',
+        about,
+        data: {},
+        since: now,
+      });
+    }
     const isHere = node.kind === 'socket' ? standing?.online === true : at !== null && now < at;
     if (!isHere) away.add(node.id);
   }
@@ -81,19 +100,26 @@ export function wantedAlarms(
 }
 
 function fromFault(record: HouseRecord, fault: Fault, away: ReadonlySet<string>): WantedAlarm | null {
-  const { kind, about, data, since } = fault;
+  const { kind, data, since } = fault;
+  const about = named(record, fault.about);
   if (kind !== 'point-bad') return { key: keyOf(kind, record.id, fault.key), kind, about, data, since };
-  const point = record.points.find((one) => one.key === about.point || one.id === about.point);
-  const isSilent = data['why'] === 'silent';
+  const point = record.points.find((one) => one.id === fault.about.point);
+  const isSilent = data['why'] === 'silent' || data['why'] === 'never-spoke';
   if (isSilent && point !== undefined && point.nodeId !== null && away.has(point.nodeId)) return null;
   const alarm = isSilent ? 'point-silent' : 'point-not-trusted';
-  const name = point?.key ?? about.point ?? '';
+  return { key: keyOf(alarm, record.id, fault.about.point ?? fault.key), kind: alarm, about, data, since };
+}
+
+/** Ids become what people call the thing: key or slug. */
+function named(record: HouseRecord, { point, channel, source }: Fault['about']): AlarmAbout {
+  const keyIn = (list: readonly { id: string; key: string }[], id: string) =>
+    list.find((one) => one.id === id)?.key ?? id;
   return {
-    key: keyOf(alarm, record.id, point?.id ?? name),
-    kind: alarm,
-    about: { point: name },
-    data,
-    since,
+    ...(point === undefined ? {} : { point: keyIn(record.points, point) }),
+    ...(channel === undefined ? {} : { channel: keyIn(record.channels, channel) }),
+    ...(source === undefined
+      ? {}
+      : { source: record.config.sources.find((one) => one.id === source)?.slug ?? source }),
   };
 }
 

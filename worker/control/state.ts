@@ -9,6 +9,10 @@ import type { HouseState } from '@/lib/live/frames';
 export interface NodeStanding {
   online: boolean;
   lastHeardAt: number | null;
+  /** Three connections took over from each other within ten minutes. */
+  isCloned: boolean;
+  /** It reports a command of an epoch that nobody can have led in. */
+  isEpochTooFar: boolean;
 }
 
 export function houseState(
@@ -73,6 +77,10 @@ export function houseState(
       return { key, online: standing?.online ?? false, lastHeardAt: iso(standing?.lastHeardAt ?? null) };
     }),
   };
+}
+
+export function isoUtc(at: number): string {
+  return isoIn('utc', at);
 }
 
 function isoIn(zone: string, at: number): string {

@@ -1,0 +1,85 @@
+/** From one step's result to the rows that the database keeps of it. Pure. */
+import { v7 } from 'uuid';
+import type { HouseHead, ChannelWiring } from '@/db/queries/plan';
+import type { DecisionRow, RelayReportRow, SwitchingRow } from '@/db/queries/running';
+import type { ControlEvent, Explanation } from '@/lib/control/types';
+import { loadState, type Report, type Trip } from './node-relays';
+
+export function switchingRows(
+  house: HouseHead,
+  events: readonly ControlEvent[],
+  numberOf: (channelId: string) => number | null,
+): SwitchingRow[] {
+  return events.flatMap((event) => {
+    if (event.kind !== 'switching') return [];
+    const { channel, from, to, claim, explanation } = event;
+    // One that a later switching of the same step overtook is carried by no command.
+    const number = event.overtaken === true ? null : numberOf(channel);
+    return [
+      { ...headOf(house, channel, event.at), from, to, claim, number, ...ruleOf(explanation), explanation },
+    ];
+  });
+}
+
+export function decisionRows(house: HouseHead, events: readonly ControlEvent[]): DecisionRow[] {
+  return events.flatMap((event) => {
+    if (event.kind !== 'switching' && event.kind !== 'decision') return [];
+    const state = event.kind === 'switching' ? event.to : event.state;
+    return [{ ...headOf(house, event.channel, event.at), state, claim: event.claim }];
+  });
+}
+
+export function reportRows(
+  house: HouseHead,
+  changed: readonly ChannelWiring[],
+  report: Report,
+): RelayReportRow[] {
+  return changed.flatMap((channel) => {
+    const coil = report.channels[String(channel.relay)];
+    if (coil === undefined) return [];
+    return {
+      holdingId: house.holdingId,
+      id: v7(),
+      channelId: channel.id,
+      at: new Date(report.at),
+      state: loadState(channel, coil),
+      number: report.number,
+    };
+  });
+}
+
+/** Coils that dropped with their lease: switchings of their own, that no command made. */
+export function tripRows(house: HouseHead, { trip, dropped }: Trip, at: number): SwitchingRow[] {
+  return dropped.map((channel) => {
+    const from = loadState(channel, 'on');
+    const to = loadState(channel, 'off');
+    const because = { safe: to, points: [], trip };
+    const explanation: Explanation = {
+      channel: channel.id,
+      at,
+      state: to,
+      claim: 'fail-safe',
+      until: null,
+      ladder: [{ claim: 'fail-safe', speaks: true, wants: to, because }],
+      next: [],
+      rule: null,
+    };
+    return {
+      ...headOf(house, channel.id, at),
+      from,
+      to,
+      claim: 'fail-safe',
+      number: null,
+      trip,
+      explanation,
+    };
+  });
+}
+
+function headOf(house: HouseHead, channelId: string, at: number) {
+  return { holdingId: house.holdingId, houseId: house.id, id: v7(), channelId, at: new Date(at) };
+}
+
+function ruleOf({ rule }: Explanation) {
+  return rule === null ? {} : { ruleId: rule.id, version: rule.version };
+}

@@ -1,0 +1,103 @@
+/**
+ * What control did, on its way into the database: switchings with their ladders, decisions, reports, memories and states of
+ * all houses, in order, many to a commit.
+ */
+import {
+  writeRunning,
+  type DecisionRow,
+  type MemoryRow,
+  type RelayReportRow,
+  type RunningBatch,
+  type SwitchingRow,
+} from '@/db/queries/running';
+import type { Base } from '../base';
+import { GroupWriter, Overflow } from '../group-writer';
+
+export interface Entry {
+  switchings?: SwitchingRow[];
+  decisions?: DecisionRow[];
+  reports?: RelayReportRow[];
+  /** Columns of the house's row that change. */
+  memory?: MemoryRow;
+}
+
+/** A switching with its ladder is some 3 kB: a hundred megabytes at most. */
+const HELD_ROWS = 30_000;
+const GROUP_ROWS = 500;
+/** A command waits this long for its switching to be committed; then control goes on and the row follows. */
+const COMMIT_LIMIT_MS = 400;
+
+export class Journal {
+  private readonly writer: GroupWriter<Entry, null>;
+
+  constructor(private readonly base: Base) {
+    this.writer = new GroupWriter(base, {
+      name: 'running',
+      groupWeight: GROUP_ROWS,
+      heldWeight: HELD_ROWS,
+      weigh: (entry) => rowsOf(entry) + 1,
+      write: async (entries) => {
+        await writeRunning(base.db, batchOf(entries));
+        return entries.map(() => null);
+      },
+    });
+  }
+
+  get held(): number {
+    return this.writer.held;
+  }
+
+  get isAway(): boolean {
+    return this.writer.isAway;
+  }
+
+  /**
+   * Resolves when the entry is committed, at once while the database is known to be away, and after 400 ms in any case:
+   * a relay must not wait for a disk that does not answer.
+   * @returns whether it is durable
+   */
+  async append(entry: Entry): Promise<boolean> {
+    const written = this.writer.put(entry).then(
+      () => true,
+      (error: unknown) => {
+        const what = error instanceof Overflow ? 'dropped, the journal is full' : 'refused by the database';
+        this.base.log.error({ err: error, rows: rowsOf(entry) }, `what control did is ${what}`);
+        return false;
+      },
+    );
+    if (this.writer.isAway) return false;
+    return Promise.race([
+      written,
+      new Promise<boolean>((resolve) => {
+        const cancel = this.base.clock.after(COMMIT_LIMIT_MS, () => resolve(false));
+        void written.then(cancel);
+      }),
+    ]);
+  }
+
+  settle(limitMs: number): Promise<void> {
+    return this.writer.settle(limitMs);
+  }
+
+  stop(): void {
+    this.writer.stop();
+  }
+}
+
+function rowsOf(entry: Entry): number {
+  return (entry.switchings?.length ?? 0) + (entry.decisions?.length ?? 0) + (entry.reports?.length ?? 0);
+}
+
+/** Of several memories of a house only the newest columns are written. */
+function batchOf(entries: Entry[]): RunningBatch {
+  const memories = new Map<string, MemoryRow>();
+  for (const { memory } of entries) {
+    if (memory !== undefined) memories.set(memory.houseId, { ...memories.get(memory.houseId), ...memory });
+  }
+  return {
+    switchings: entries.flatMap((entry) => entry.switchings ?? []),
+    decisions: entries.flatMap((entry) => entry.decisions ?? []),
+    reports: entries.flatMap((entry) => entry.reports ?? []),
+    memories: [...memories.values()],
+  };
+}

@@ -1,0 +1,74 @@
+/** From packs to the table of readings: many packs a commit, an answer for each. */
+import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
+import type { Base } from '../base';
+import { GroupWriter } from '../group-writer';
+
+/** Some forty bytes each; a thousand houses' readings of ten minutes. Beyond it nodes keep theirs, unacknowledged. */
+const HELD_ROWS = 500_000;
+const GROUP_ROWS = 20_000;
+
+export interface Stored {
+  stored: number;
+  duplicate: number;
+}
+
+export class Ingest {
+  private readonly writer: GroupWriter<ReadingRow[], boolean[]>;
+  /** Earliest new reading of each point since the roll-ups last looked. */
+  private touched = new Map<number, number>();
+
+  constructor(private readonly base: Base) {
+    this.writer = new GroupWriter(base, {
+      name: 'readings',
+      groupWeight: GROUP_ROWS,
+      heldWeight: HELD_ROWS,
+      // An empty pack weighs too: it waits for its turn, so acknowledgements keep their order.
+      weigh: (rows) => Math.max(rows.length, 1),
+      write: async (packs) => {
+        const flags = await storeReadings(base.pool, packs.flat());
+        let first = 0;
+        return packs.map((rows) => flags.slice(first, (first += rows.length)));
+      },
+    });
+  }
+
+  get held(): number {
+    return this.writer.held;
+  }
+
+  get isAway(): boolean {
+    return this.writer.isAway;
+  }
+
+  /** Resolves once the rows are committed. */
+  async store(rows: ReadingRow[]): Promise<Stored> {
+    const flags = await this.writer.put(rows);
+    rows.forEach((row, index) => {
+      if (flags[index] === true) this.touch(row);
+    });
+    const stored = flags.filter(Boolean).length;
+    this.base.metrics.add('readings_stored_total', stored);
+    this.base.metrics.add('readings_duplicate_total', rows.length - stored);
+    return { stored, duplicate: rows.length - stored };
+  }
+
+  /** What the roll-ups must be reckoned afresh for; empties the list. */
+  takeTouched(): Map<number, number> {
+    const touched = this.touched;
+    this.touched = new Map();
+    return touched;
+  }
+
+  settle(limitMs: number): Promise<void> {
+    return this.writer.settle(limitMs);
+  }
+
+  stop(): void {
+    this.writer.stop();
+  }
+
+  private touch(row: ReadingRow): void {
+    const before = this.touched.get(row.point);
+    if (before === undefined || row.at < before) this.touched.set(row.point, row.at);
+  }
+}

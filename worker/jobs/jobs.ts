@@ -1,0 +1,78 @@
+/** What is done by the clock: roll-ups, night summaries, months of readings made ahead. The leader alone does them. */
+import cron, { type ScheduledTask } from 'node-cron';
+import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
+import type { Base } from '../base';
+import type { Houses } from '../control/houses';
+import type { Ingest } from '../field/ingest';
+
+/** At the start the last day is reckoned afresh: what came just before the end may not have been rolled up. */
+const AFRESH_MS = 24 * 3_600_000;
+const MONTH_MS = 31 * 86_400_000;
+
+export interface JobDeps extends Base {
+  houses: Houses;
+  ingest: Ingest;
+  isLeading: () => boolean;
+}
+
+export class Jobs {
+  private tasks: ScheduledTask[] = [];
+  private readonly running = new Set<string>();
+
+  constructor(private readonly deps: JobDeps) {}
+
+  start(): void {
+    void this.run('roll-ups', () => this.rollUpAfresh());
+    void this.run('months', () => this.makeMonths());
+    const each = (expression: string, name: string, work: () => Promise<void>) =>
+      cron.schedule(expression, () => void this.run(name, work), { timezone: 'UTC' });
+    this.tasks = [
+      each('*/1 * * * *', 'roll-ups', () => this.rollUpTouched()),
+      each('17 3 * * *', 'months', () => this.makeMonths()),
+    ];
+  }
+
+  stop(): void {
+    for (const task of this.tasks) void task.stop();
+    this.tasks = [];
+  }
+
+  /** One at a time of a kind; a failure is logged, and the next turn tries again. */
+  private async run(name: string, work: () => Promise<void>): Promise<void> {
+    if (this.running.has(name) || !this.deps.isLeading()) return;
+    this.running.add(name);
+    try {
+      await work();
+    } catch (error) {
+      this.deps.log.warn({ err: error, job: name }, 'a job failed; its next turn tries again');
+    } finally {
+      this.running.delete(name);
+    }
+  }
+
+  private async rollUpTouched(): Promise<void> {
+    const touched = this.deps.ingest.takeTouched();
+    const to = this.deps.clock.appNow();
+    // Points of which the same hour was touched go together: most packs are of now.
+    const hours = new Map<number, number[]>();
+    for (const [point, from] of touched) {
+      const hour = Math.floor(from / 3_600_000);
+      hours.set(hour, [...(hours.get(hour) ?? []), point]);
+    }
+    for (const [hour, points] of hours) await rollUp(this.deps.pool, points, hour * 3_600_000, to);
+  }
+
+  private async rollUpAfresh(): Promise<void> {
+    const now = this.deps.clock.appNow();
+    for (const house of this.deps.houses.all()) {
+      const points = house.record.points.map((point) => point.number);
+      await rollUp(this.deps.pool, points, now - AFRESH_MS, now);
+    }
+  }
+
+  private async makeMonths(): Promise<void> {
+    const now = this.deps.clock.appNow();
+    await makeReadingMonth(this.deps.pool, now);
+    await makeReadingMonth(this.deps.pool, now + MONTH_MS);
+  }
+}
