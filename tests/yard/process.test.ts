@@ -6,6 +6,7 @@ import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { systemClock } from '@/worker/yard/clock';
 import { readWorld } from '@/worker/yard/store';
+import { houseWorld, type World } from '@/worker/yard/world';
 import { FakeServer, until } from './support';
 
 // Real processes start here, which a busy machine does slowly.
@@ -53,7 +54,7 @@ function yard(config: object, extra: string[] = []): Run {
   child.stdout.on('data', (chunk) => {
     const lines = (rest + String(chunk)).split('\n');
     rest = lines.pop() ?? '';
-    events.push(...lines.map((line): Record<string, unknown> => JSON.parse(line)));
+    events.push(...lines.map((line) => JSON.parse(line) as Record<string, unknown>));
   });
   child.stderr.on('data', (chunk) => (complaint += String(chunk)));
   return { child, events, complaint: () => complaint, ended: once(child, 'exit') };
@@ -89,7 +90,7 @@ describe('the yard as a process', () => {
     first.child.kill('SIGTERM');
     await first.ended;
     const file = join(folder, 'world.json');
-    const before = JSON.parse(readFileSync(file, 'utf8'));
+    const before = JSON.parse(readFileSync(file, 'utf8')) as World;
     const anHourMs = 3_600_000;
     writeFileSync(file, JSON.stringify({ ...before, ms: before.ms - anHourMs }));
 
@@ -97,10 +98,10 @@ describe('the yard as a process', () => {
     await until(() => second.events.some(({ event }) => event === 'start'));
     second.child.kill('SIGTERM');
     await second.ended;
-    const after = JSON.parse(readFileSync(file, 'utf8'));
+    const after = JSON.parse(readFileSync(file, 'utf8')) as World;
     expect(after.ms).toBeGreaterThanOrEqual(before.ms);
-    expect(after.houses['long-house'].flowsJ.generated).toBeGreaterThan(1e6);
-    expect(after.houses['long-house'].flowsJ.fans).toBe(0);
+    expect(houseWorld(after, 'long-house').flowsJ.generated).toBeGreaterThan(1e6);
+    expect(houseWorld(after, 'long-house').flowsJ.fans).toBe(0);
   });
 
   test('begins anew where the saved world is torn', async () => {

@@ -47,7 +47,7 @@ export class Connection {
 
   constructor(readonly socket: WebSocket) {
     socket.on('message', (data) => {
-      const parsed = parseNodeFrame(String(data));
+      const parsed = parseNodeFrame(Buffer.isBuffer(data) ? data.toString('utf8') : '');
       if (!parsed.ok) throw new Error(`the node sent a malformed frame: ${parsed.why}`);
       this.frames.push(parsed.frame);
     });

@@ -60,7 +60,8 @@ export class Line {
     });
     socket.on('message', (data, isBinary) => {
       heard();
-      if (!isBinary) this.events.text(String(data));
+      // One buffer a message is what ws gives unless asked for parts.
+      if (!isBinary && Buffer.isBuffer(data)) this.events.text(data.toString('utf8'));
     });
     socket.on('ping', heard);
     socket.on('pong', heard);
