@@ -141,3 +141,17 @@ async function found(holding: Holding, houseId: string, id: string): Promise<Poi
   if (row === null) throw new Error('the point was there a moment ago');
   return row;
 }
+
+/** Numbers under which readings are kept, by key and by id. */
+export async function pointNumbers(holding: Holding, houseId: string): Promise<Map<string, PointNumber>> {
+  const rows = await holding.db
+    .select({ id: point.id, key: point.key, number: point.number })
+    .from(point)
+    .where(inUse(holding, houseId, point));
+  return new Map(rows.flatMap((row) => [[row.key, row] as const, [row.id, row] as const]));
+}
+
+export interface PointNumber {
+  key: string;
+  number: number;
+}

@@ -95,3 +95,11 @@ export const Health = z.strictObject({
   lastStep: z.string().nullable(),
 });
 export type Health = z.infer<typeof Health>;
+
+/** A person's order, and until when it holds. */
+export const OrderAnswer = z.strictObject({
+  /** Of the order, in the house. */
+  number: z.number(),
+  at: z.string(),
+  until: z.string().nullable(),
+});

@@ -6,9 +6,9 @@ import { addAudit } from '@/db/queries/audit';
 import { keepAnswer, takeKey, type Asked } from '@/db/queries/idempotency';
 import { lockHolding } from '@/db/queries/lock';
 import { appNow } from './app-clock';
-import { sayPlainly } from './body-errors';
 import { identify, type Caller } from './caller';
-import { notValid, Problem, problemResponse } from './errors';
+import { check } from './check';
+import { Problem, problemResponse } from './errors';
 import { paramsOf, type Operation, type ParamsOf } from './operation';
 import { may } from './permissions';
 import { parseJson, readText } from './request-body';
@@ -31,6 +31,7 @@ export interface Answer {
   body?: unknown;
   /** An answer that is not JSON. */
   file?: { type: string; name: string; text: string };
+  headers?: Record<string, string>;
   /** What the audit row is about, where the path and the body do not say it. */
   subject?: string;
   /** Runs once the change is committed, before the answer goes out. */
@@ -131,22 +132,6 @@ function parse(operation: Operation, request: Request, text: string): { body: un
   return { body: check(operation.body, given), query };
 }
 
-/** @throws Problem `not-valid` with every issue at its path */
-export function check<T extends z.ZodType>(schema: T, value: unknown): z.output<T> {
-  const parsed = schema.safeParse(value, { error: sayPlainly });
-  if (!parsed.success) throw notValid(parsed.error);
-  return parsed.data;
-}
-
-/** A change of some fields, checked as the whole that it makes. */
-export function merged<T extends z.ZodObject>(schema: T, before: object, change: object): z.output<T> {
-  const known = Object.entries(before).filter(([name]) => Object.hasOwn(schema.shape, name));
-  return check(schema, {
-    ...Object.fromEntries(known.filter(([, value]) => value !== undefined)),
-    ...change,
-  });
-}
-
 /** `If-Match` speaks of the last thing that the path names. */
 function refuseStale(request: Request, things: Partial<Things>): void {
   const wanted = request.headers.get('if-match');
@@ -192,7 +177,7 @@ function repeat(
 }
 
 function respond(status: number, answer: Answer): Response {
-  const headers = new Headers({ 'cache-control': 'no-store' });
+  const headers = new Headers({ 'cache-control': 'no-store', ...answer.headers });
   const { body, file } = answer;
   if (file !== undefined) {
     headers.set('content-type', `${file.type}; charset=utf-8`);

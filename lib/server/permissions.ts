@@ -4,6 +4,8 @@
  */
 export const ROLES = ['owner', 'grower', 'installer'] as const;
 export type Role = (typeof ROLES)[number];
+/** Of whom a holding always keeps one. */
+export const OWNER: Role = 'owner';
 
 const everyone = ['owner', 'grower', 'installer'] as const;
 

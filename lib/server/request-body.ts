@@ -18,6 +18,7 @@ export async function readText(request: Request): Promise<string> {
 
 /** @throws Problem `not-valid` at path '' for what is no JSON, and for text that no database keeps */
 export function parseJson(text: string): unknown {
+  if (depthOf(text) > DEEPEST) throw refuse('The body is nested too deeply.');
   let value: unknown;
   try {
     value = JSON.parse(text);
@@ -28,6 +29,19 @@ export function parseJson(text: string): unknown {
   if (/[\0\p{Surrogate}]/u.test(everyText(value)))
     throw refuse('The body holds a character that cannot be kept.');
   return value;
+}
+
+const DEEPEST = 60;
+
+/** Nesting of a JSON text, told before anything walks it: a deep enough one would exhaust the stack. */
+function depthOf(text: string): number {
+  let depth = 0;
+  let deepest = 0;
+  for (const [mark] of text.matchAll(/"(?:[^"\\]|\\.)*"|[[{\]}]/g)) {
+    if (mark === '{' || mark === '[') deepest = Math.max(deepest, (depth += 1));
+    else if (mark === '}' || mark === ']') depth -= 1;
+  }
+  return deepest;
 }
 
 function everyText(value: unknown): string {

@@ -1,5 +1,6 @@
 import {
   HouseStateAnswer,
+  OrderAnswer,
   Readings,
   ReadingsQuery,
   SwitchingList,
@@ -52,7 +53,7 @@ export const takeByHand = operation({
   action: 'channel.hand',
   summary: 'Take a channel by hand for a time',
   body: HandCommand,
-  answers: { 200: HouseStateAnswer },
+  answers: { 200: OrderAnswer },
 });
 export const giveBack = operation({
   id: 'hand.give-back',
@@ -60,7 +61,7 @@ export const giveBack = operation({
   path: '/houses/{house}/channels/{channel}/hand',
   action: 'channel.hand',
   summary: 'Give a channel back to its rules',
-  answers: { 200: HouseStateAnswer },
+  answers: { 200: OrderAnswer },
 });
 export const allOff = operation({
   id: 'hand.all-off',
@@ -69,5 +70,5 @@ export const allOff = operation({
   action: 'channel.hand',
   summary: 'Everything in the house off for an hour',
   body: AllOff,
-  answers: { 200: HouseStateAnswer },
+  answers: { 200: OrderAnswer },
 });

@@ -1,6 +1,7 @@
 import * as houses from '@/db/queries/house';
 import { HouseCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendHouse, getHouse, removeHouse } from '@/lib/server/operations/yard';
 
 export const GET = serve(getHouse, async ({ things }) => ({ body: things.house }));

@@ -1,6 +1,7 @@
 import * as channels from '@/db/queries/channel';
 import { ChannelCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendChannel, getChannel, removeChannel } from '@/lib/server/operations/wiring';
 
 export const GET = serve(getChannel, async ({ things }) => ({ body: things.channel }));

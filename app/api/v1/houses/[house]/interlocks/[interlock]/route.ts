@@ -1,6 +1,7 @@
 import * as interlocks from '@/db/queries/interlock';
 import { InterlockCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendInterlock, getInterlock, removeInterlock } from '@/lib/server/operations/wiring';
 
 export const GET = serve(getInterlock, async ({ things }) => ({ body: things.interlock }));

@@ -1,6 +1,7 @@
 import * as loops from '@/db/queries/loop';
 import { LoopCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendLoop, getLoop, removeLoop } from '@/lib/server/operations/yard';
 
 export const GET = serve(getLoop, async ({ things }) => ({ body: things.loop }));

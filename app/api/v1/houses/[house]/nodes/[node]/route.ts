@@ -1,6 +1,7 @@
 import * as nodes from '@/db/queries/node';
 import { NodeCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendNode, getNode, removeNode } from '@/lib/server/operations/wiring';
 
 export const GET = serve(getNode, async ({ things }) => ({ body: things.node }));

@@ -1,6 +1,7 @@
 import * as points from '@/db/queries/point';
 import { PointCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendPoint, getPoint, removePoint } from '@/lib/server/operations/wiring';
 
 export const GET = serve(getPoint, async ({ things }) => ({ body: things.point }));

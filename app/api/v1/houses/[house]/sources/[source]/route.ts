@@ -1,6 +1,7 @@
 import * as sources from '@/db/queries/source';
 import { SourceCreate } from '@/lib/schema/yard';
-import { merged, serve } from '@/lib/server/guard';
+import { merged } from '@/lib/server/check';
+import { serve } from '@/lib/server/guard';
 import { amendSource, getSource, removeSource } from '@/lib/server/operations/yard';
 
 export const GET = serve(getSource, async ({ things }) => ({ body: things.source }));

@@ -1,0 +1,4 @@
+import { answerAuth } from '@/lib/server/auth-door';
+
+export const GET = answerAuth;
+export const POST = answerAuth;

@@ -1,0 +1,16 @@
+import { Problem } from '@/lib/server/errors';
+import { serve } from '@/lib/server/guard';
+import { why } from '@/lib/server/operations/running';
+import { whyNow, whyThen } from '@/lib/server/why';
+
+export const GET = serve(why, async ({ holding, things, query, now }) => {
+  const { house, channel } = things;
+  const answer =
+    query.at === undefined
+      ? await whyNow(holding, house, channel, now.getTime())
+      : await whyThen(holding, house, channel, Date.parse(query.at));
+  if (answer === null) {
+    throw new Problem('not-found', { detail: 'Nothing was decided for this channel at that time.' });
+  }
+  return { body: answer };
+});

@@ -1,0 +1,5 @@
+import { describe } from '@/lib/server/openapi';
+import { open } from '@/lib/server/open-route';
+import { getDescription } from '@/lib/server/operations/open';
+
+export const GET = open(getDescription, async () => Response.json(describe()));

@@ -1,0 +1,7 @@
+import { serve } from '@/lib/server/guard';
+import { checkRule } from '@/lib/server/operations/rules';
+import { findingsOf } from '@/lib/server/rule-check';
+
+export const POST = serve(checkRule, async ({ holding, things, body }) => ({
+  body: { findings: await findingsOf(holding, things.rule, body.body) },
+}));

@@ -1,0 +1,13 @@
+import type { Operation } from '../operation';
+import * as open from './open';
+import * as people from './people';
+import * as record from './record';
+import * as rules from './rules';
+import * as running from './running';
+import * as wiring from './wiring';
+import * as yard from './yard';
+
+/** Every route of the interface; a test holds it equal to the route files. */
+export const OPERATIONS: readonly Operation[] = [yard, wiring, running, rules, record, people, open].flatMap(
+  (subject): Operation[] => Object.values(subject),
+);
