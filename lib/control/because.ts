@@ -183,7 +183,8 @@ export type NextReason =
   | {
       /** Sooner, if the point passes the value. */
       kind: 'if';
-      point: string;
+      /** null: the coldest house-air or bench point, which frost looks at. */
+      point: string | null;
       side: 'above' | 'below';
       value: number;
       state: State;

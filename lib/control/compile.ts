@@ -59,6 +59,8 @@ export function compile(config: HouseConfig): Plan {
     shape: [points, rules, sources, channels].map((list) => list.map((one) => one.id).join(',')).join(';'),
     house: config.house,
     points,
+    pointPlaces: new Map(points.map((one, index) => [one.key, index])),
+    usedPoints: usedPoints(points, rules, channels),
     sources,
     channels,
     rules,
@@ -169,6 +171,39 @@ function compileChannel(
       lock.channel === index || lock.other === index ? [place] : [],
     ),
   };
+}
+
+/**
+ * A rest needs a source to keep its credit. A channel whose rules have one and that names no source draws on a
+ * source of its own, known by the channel's id and key, so that its longest draw is kept all the same.
+ */
+function addOwnSources(channels: PlanChannel[], sources: PlanSource[], rules: PlanRule[]): void {
+  channels.forEach((channel, place) => {
+    const own = channel.rules.filter((rule) => rules[rule]?.rest != null);
+    if (channel.source !== null || own.length === 0) return;
+    const nothing = { corePoint: null, basePoint: null, coreFloor: null, dailyLimitS: null, ready: null };
+    const { id, key, config } = channel;
+    channel.source = sources.length;
+    sources.push({
+      id,
+      slug: key,
+      config: { id, slug: key, name: config.label, kind: 'other', ...nothing },
+      core: null,
+      channels: [place],
+      rules: own,
+      hasRest: true,
+      dailyLimitMs: null,
+    });
+  });
+}
+
+function usedPoints(points: PlanPoint[], rules: PlanRule[], channels: PlanChannel[]): Set<number> {
+  const used = new Set<number>();
+  for (const rule of rules) for (const { point } of rule.points) if (point !== null) used.add(point);
+  for (const { highLimitPoint } of channels) if (highLimitPoint !== null) used.add(highLimitPoint);
+  for (const index of [...used])
+    for (const input of points[index]?.derived?.inputs ?? []) if (input >= 0) used.add(input);
+  return used;
 }
 
 function compileSource(

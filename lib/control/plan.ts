@@ -12,6 +12,10 @@ export interface Plan {
   shape: string;
   house: HouseConfig['house'];
   points: PlanPoint[];
+  /** Where each key stands. */
+  pointPlaces: Map<string, number>;
+  /** Points that decide something: their silence is worth an alarm even before they ever spoke. */
+  usedPoints: Set<number>;
   sources: PlanSource[];
   channels: PlanChannel[];
   rules: PlanRule[];

@@ -46,6 +46,12 @@ export function silenceIn(
   return null;
 }
 
+/** When a point falls silent as far as the times of all its readings tell, those known only now included. */
+export function silenceAhead(point: PlanPoint, memory: PointMemory, seen: ObservedPoint | undefined): number {
+  const newest = Math.max(spokeAt(memory), seen?.at ?? -Infinity);
+  return silenceIn(point, memory, seen) ?? newest + point.staleMs + 1;
+}
+
 /**
  * Takes a point's newest reading. One implausible reading leaves the last good one in force; a second in a row drops
  * the quality; three good ones in a row bring it back. The first good one is believed at once.
@@ -99,7 +105,7 @@ export function settlePoints(run: Run): void {
       quality = 'bad';
       why ??= 'never-spoke';
     } else {
-      const silentAt = spokeAt(memory) + point.staleMs + 1;
+      const silentAt = run.silentAt?.[index] ?? spokeAt(memory) + point.staleMs + 1;
       if (run.at >= silentAt) {
         // our own absence is not the point's silence: it has its time again from the worker's start
         const excusedTill = run.observed.workerStartedAt + point.staleMs + 1;

@@ -1,8 +1,9 @@
 /** The working state of one step: copies of the memory's lists, whose entries are replaced, never changed. */
 import type { ChannelMemory, FrostMemory, PointMemory, RuleMemory, SourceMemory } from './memory';
 import type { InterlockVerdict } from './interlocks';
+import type { RuleCalendar } from './calendar';
 import type { Plan } from './plan';
-import type { ControlEvent, Observed, Quality } from './types';
+import type { Claim, ControlEvent, Observed, Quality, State } from './types';
 
 export interface Run {
   plan: Plan;
@@ -13,6 +14,10 @@ export interface Run {
   stepAt: number;
   /** Nobody drove the relays at `at`: the worker was away. */
   undriven: boolean;
+  /** Since when: the last step before the gap. */
+  awayFrom: number | null;
+  /** When each point falls silent, where that is not to be read from its memory alone. */
+  silentAt: number[] | null;
   /** Earliest later instant at which something changes by itself; Infinity: none. */
   wake: number;
   points: PointMemory[];
@@ -22,14 +27,22 @@ export interface Run {
   frost: FrostMemory;
   /** Quality as control uses it: ten minutes of uncertain count as bad. */
   usable: Quality[];
+  /** What the calendar says to each rule at `at`. */
+  calendars: RuleCalendar[];
   /** How each rule stands at `at`. */
   standing: RuleCode[];
+  /** By channel: the claim from hand to idle that speaks, and what it wants. */
+  lowerClaim: Claim[];
+  lowerState: State[];
+  /** The same with lock-out, limit and proving: what the channel asks of its interlocks. */
+  demandClaim: Claim[];
+  demandState: State[];
   interlocked: (InterlockVerdict | null)[];
   /** By source: Σ 1/longest draw a ms, and the number, of what draws or has been decided to at `at`. */
   drawRate: number[];
   drawCount: number[];
   events: ControlEvent[];
-  /** Faults of the step before, and whether explanations are wanted with switchings. */
+  /** Whether switchings carry their ladder; a look into the future needs none. */
   explains: boolean;
 }
 

@@ -1,0 +1,110 @@
+/**
+ * Frost: the lowest house-air or bench reading that is not bad is under the house's frost limit (it ends 1 K above).
+ * On for channels marked to help, off for cooling ones. Ignores season, hours and conditions; breaks rest and daily
+ * limit where the rules allow it, never the core floor, which is asked before it.
+ */
+import type { FrostReason } from '../because';
+import { entry, wakeAt, type Run } from '../run';
+import type { ClaimRung } from './claim';
+import { restForbids } from './rest';
+
+const ENDS_K = 1;
+const BLIND_MS = 1_800_000;
+/** Wet things freezing stand still at 0 °C, so a frozen point is believed in the cold … */
+const STILL_TRUE_C = 2;
+/** … but not for ever against another point of the house. */
+const CONTRADICTED_MS = 12 * 3_600_000;
+
+export const frost: ClaimRung<'frost'> = {
+  claim: 'frost',
+  speaks: (run, channel) => {
+    if (!run.frost.on) return null;
+    const { inFrost, config, frostMayBreakRest } = entry(run.plan.channels, channel);
+    if (inFrost === null) return null;
+    if (inFrost === 'cools') return 'off';
+    if (config.loadKind === 'heater' && run.frost.blindSince !== null) return null;
+    if (!frostMayBreakRest && restForbids(run, channel) !== null) return null;
+    return 'on';
+  },
+  because: (run, channel): FrostReason => {
+    const limit = run.plan.house.frostLimit ?? 0;
+    const coldest = coldestPoint(run);
+    const { inFrost } = entry(run.plan.channels, channel);
+    const forbidden = restForbids(run, channel);
+    const borrows = forbidden === 'credit-spent' ? 'rest' : forbidden;
+    const reason = {
+      point: coldest === null ? null : entry(run.plan.points, coldest).key,
+      value: coldest === null ? null : entry(run.points, coldest).value,
+      limit,
+      endsAtOrAbove: limit + ENDS_K,
+      frostSince: run.frost.since ?? run.at,
+      part: inFrost ?? 'helps',
+      borrows: inFrost === 'helps' ? borrows : null,
+    } as const;
+    const { blindSince } = run.frost;
+    return blindSince === null ? reason : { ...reason, until: blindSince + BLIND_MS };
+  },
+};
+
+/** The coldest of the house's air and bench points that is not bad; null: there is none. */
+export function coldestPoint(run: Run): number | null {
+  let coldest: number | null = null;
+  let lowest = Infinity;
+  for (const index of run.plan.housePoints) {
+    const { value, why, contradictedSince } = entry(run.points, index);
+    if (value === null || value >= lowest) continue;
+    const frozenCold = why === 'frozen' && value <= STILL_TRUE_C;
+    const contradicted = contradictedSince !== null && run.at >= contradictedSince + CONTRADICTED_MS;
+    if (frozenCold ? contradicted : run.usable[index] === 'bad') continue;
+    lowest = value;
+    coldest = index;
+  }
+  return coldest;
+}
+
+/** Settles the house's frost and the frost alarm. */
+export function settleFrost(run: Run): void {
+  const { frostLimit, frostAlarm } = run.plan.house;
+  const warnsAt = frostAlarm ?? frostLimit;
+  const before = run.frost;
+  if (warnsAt === null) {
+    if (before.on || before.alarm) run.frost = { on: false, since: null, blindSince: null, alarm: false };
+    return;
+  }
+  if (frostLimit !== null) settleContradiction(run, frostLimit);
+  const coldest = coldestPoint(run);
+  let { on, alarm, blindSince } = before;
+  if (coldest !== null) {
+    const value = entry(run.points, coldest).value ?? Infinity;
+    blindSince = null;
+    on = frostLimit !== null && (value < frostLimit || (on && value < frostLimit + ENDS_K));
+    alarm = value < warnsAt || (alarm && value < warnsAt + ENDS_K);
+  } else if (on) {
+    blindSince ??= run.at;
+    if (run.at >= blindSince + BLIND_MS) {
+      on = false;
+      blindSince = null;
+    } else wakeAt(run, blindSince + BLIND_MS);
+  }
+  if (on === before.on && alarm === before.alarm && blindSince === before.blindSince) return;
+  run.frost = { on, alarm, blindSince, since: on ? (before.since ?? run.at) : null };
+}
+
+/** Since when a frozen cold point has been contradicted by a good one well over the limit. */
+function settleContradiction(run: Run, limit: number): void {
+  for (const index of run.plan.housePoints) {
+    const memory = entry(run.points, index);
+    const frozenCold = memory.why === 'frozen' && (memory.value ?? Infinity) <= STILL_TRUE_C;
+    let { contradictedSince } = memory;
+    if (!frozenCold) contradictedSince = null;
+    else {
+      const other = run.plan.housePoints.some((one) => {
+        const { value } = entry(run.points, one);
+        return one !== index && run.usable[one] === 'good' && value !== null && value >= limit + ENDS_K;
+      });
+      contradictedSince = other ? (contradictedSince ?? run.at) : null;
+      if (contradictedSince !== null) wakeAt(run, contradictedSince + CONTRADICTED_MS);
+    }
+    if (contradictedSince !== memory.contradictedSince) run.points[index] = { ...memory, contradictedSince };
+  }
+}

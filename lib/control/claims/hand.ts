@@ -1,0 +1,83 @@
+/**
+ * Hand: a person's command that has not ended. It ends by its time; on a channel marked to help, a hand off ends when
+ * frost begins unless it was told to hold; a hand on of a cooling channel ends when frost begins; a hand on whose
+ * point is dead ends 30 min after the death or the command (a heater's at once).
+ */
+import type { HandReason } from '../because';
+import type { HandMemory } from '../memory';
+import { entry, wakeAt, type Run } from '../run';
+import type { ClaimRung } from './claim';
+
+const HALF_HOUR_MS = 1_800_000;
+
+export const hand: ClaimRung<'hand'> = {
+  claim: 'hand',
+  speaks: (run, channel) => entry(run.channels, channel).hand?.state ?? null,
+  because: (run, channel): HandReason => {
+    const { hand: given, pointDeadSince } = entry(run.channels, channel);
+    if (given === null) throw new Error('No hand is on this channel.');
+    const { state, by, givenAt, holdInFrost } = given;
+    const reason = { state, by, givenAt, holdInFrost, until: handUntil(run, channel, given) };
+    return state === 'on' && pointDeadSince !== null ? { ...reason, pointDeadSince } : reason;
+  },
+};
+
+/** When a hand ends as things stand. */
+export function handUntil(run: Run, channel: number, given: HandMemory): number {
+  const { config, inFrost } = entry(run.plan.channels, channel);
+  const { pointDeadSince } = entry(run.channels, channel);
+  let { until } = given;
+  if (given.state === 'on' && pointDeadSince !== null) {
+    const deadOrGiven = Math.max(pointDeadSince, given.givenAt);
+    until = Math.min(until, config.loadKind === 'heater' ? deadOrGiven : deadOrGiven + HALF_HOUR_MS);
+  }
+  if (given.state === 'on' && inFrost === 'cools' && run.frost.on)
+    until = Math.min(until, given.givenAt + HALF_HOUR_MS);
+  return until;
+}
+
+/** Notes since when none of a channel's rules has a usable point, and ends a hand that is over. */
+export function settleHand(run: Run, channel: number): void {
+  const dead = isPointDead(run, channel);
+  let memory = entry(run.channels, channel);
+  if (dead !== (memory.pointDeadSince !== null)) {
+    memory = { ...memory, pointDeadSince: dead ? run.at : null };
+    run.channels[channel] = memory;
+  }
+  if (memory.hand === null) return;
+  const until = handUntil(run, channel, memory.hand);
+  if (run.at >= until) return endHand(run, channel, until < memory.hand.until ? 'point-dead' : 'time');
+  wakeAt(run, until);
+  const frostBegan = run.frost.on && memory.hand.givenAt < (run.frost.since ?? Infinity);
+  if (!frostBegan) return;
+  const { inFrost } = entry(run.plan.channels, channel);
+  if (inFrost === 'helps' && memory.hand.state === 'off' && !memory.hand.holdInFrost)
+    endHand(run, channel, 'frost');
+  if (inFrost === 'cools' && memory.hand.state === 'on') endHand(run, channel, 'frost');
+}
+
+export function endHand(
+  run: Run,
+  channel: number,
+  cause: 'time' | 'point-dead' | 'frost' | 'limit' | 'auto',
+): void {
+  const memory = entry(run.channels, channel);
+  if (memory.hand === null) return;
+  const { state, by } = memory.hand;
+  run.channels[channel] = { ...memory, hand: null };
+  run.events.push({ kind: 'hand-ended', at: run.at, channel: memory.id, why: { cause, state, by } });
+}
+
+/** It has rules (those in season, else all), and none has a point or stand-in that is not bad. */
+function isPointDead(run: Run, channel: number): boolean {
+  const { rules } = entry(run.plan.channels, channel);
+  if (rules.length === 0) return false;
+  const inSeason = rules.filter((rule) => run.calendars[rule]?.inSeason === true);
+  return (inSeason.length > 0 ? inSeason : rules).every((rule) => !hasUsablePoint(run, rule));
+}
+
+export function hasUsablePoint(run: Run, rule: number): boolean {
+  return entry(run.plan.rules, rule).points.some(
+    ({ point }) => point !== null && run.usable[point] !== 'bad',
+  );
+}

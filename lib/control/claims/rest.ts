@@ -1,0 +1,157 @@
+/**
+ * Rest: the source's draw credit is spent and its rest has not ended, or the rolling day's limit is used up, or the
+ * channel's last draw brought no gain, or the band wants a start that credit and limit are not worth. Off.
+ * The accounts themselves are kept in ../credit.ts and ../day.ts.
+ */
+import type { RestReason } from '../because';
+import { creditAt, drawCost, leastRestMs, recovered, waitingRules } from '../credit';
+import { usedMs } from '../day';
+import { entry, wakeAt, type Run } from '../run';
+import { bandWants } from './band';
+import type { ClaimRung } from './claim';
+
+export const rest: ClaimRung<'rest'> = {
+  claim: 'rest',
+  speaks: (run, channel) =>
+    restForbids(run, channel) !== null || (bandWants(run, channel) && !isWorthAStart(run, channel))
+      ? 'off'
+      : null,
+  because,
+};
+
+/** What forbids a draw, frost's own leave aside; null: nothing. */
+export function restForbids(run: Run, channel: number): 'credit-spent' | 'daily-limit' | 'no-gain' | null {
+  const { source } = entry(run.plan.channels, channel);
+  if (source === null) return null;
+  const memory = entry(run.sources, source);
+  if (memory.resting) return 'credit-spent';
+  const { dailyLimitMs } = entry(run.plan.sources, source);
+  if (dailyLimitMs !== null && usedMs(memory, run.at) >= dailyLimitMs) {
+    wakeForDay(run, source, dailyLimitMs);
+    return 'daily-limit';
+  }
+  const { noGainUntil } = entry(run.channels, channel);
+  if (noGainUntil !== null && run.at < noGainUntil) {
+    wakeAt(run, noGainUntil);
+    return 'no-gain';
+  }
+  return null;
+}
+
+/** Whether what is left of credit and day carries the channel, beside those that draw, through its least on time. */
+function isWorthAStart(run: Run, channel: number): boolean {
+  const { source, minOnMs } = entry(run.plan.channels, channel);
+  if (source === null || entry(run.channels, channel).counted === 'on') return true;
+  const memory = entry(run.sources, source);
+  const cost = drawCost(run, channel);
+  const { creditMs, dayMs } = worth(run, channel, source, cost);
+  // a millionth of a ms forgives the division: a longest draw of exactly the least on time is worth it
+  if (creditMs + 1e-6 < minOnMs) {
+    const needed = minOnMs * cost;
+    if (memory.slope > 0)
+      wakeAt(run, memory.creditAt + Math.ceil((needed - memory.credit) / memory.slope - 1e-6));
+    return false;
+  }
+  const { dailyLimitMs } = entry(run.plan.sources, source);
+  if (dailyLimitMs === null || dayMs >= minOnMs) return true;
+  wakeForDay(run, source, dailyLimitMs - minOnMs * ((run.drawCount[source] ?? 0) + 1));
+  return false;
+}
+
+/** For how long credit and day would carry a start, ms. */
+function worth(run: Run, channel: number, source: number, cost: number): { creditMs: number; dayMs: number } {
+  const { dailyLimitMs } = entry(run.plan.sources, source);
+  const memory = entry(run.sources, source);
+  const rate = (run.drawRate[source] ?? 0) + cost;
+  return {
+    creditMs: cost === 0 ? Infinity : creditAt(memory, run.at) / rate,
+    dayMs:
+      dailyLimitMs === null
+        ? Infinity
+        : (dailyLimitMs - usedMs(memory, run.at)) / ((run.drawCount[source] ?? 0) + 1),
+  };
+}
+
+/** Wakes when the rolling day has let its use fall to `targetMs`, or when its slope changes before. */
+function wakeForDay(run: Run, source: number, targetMs: number): void {
+  const memory = entry(run.sources, source);
+  const { slope, nextAt } = memory.day;
+  if (nextAt !== null) wakeAt(run, nextAt);
+  // strictly under a limit that is used up: one ms past the instant at which it is met
+  if (slope < 0) wakeAt(run, run.at + Math.max(1, Math.ceil((usedMs(memory, run.at) - targetMs) / -slope)));
+}
+
+function because(run: Run, channel: number): RestReason {
+  const { source: place, minOnMs, inFrost, frostMayBreakRest } = entry(run.plan.channels, channel);
+  if (place === null) throw new Error('A channel without a source does not rest.');
+  const source = entry(run.plan.sources, place);
+  const memory = entry(run.sources, place);
+  const cause: RestReason['cause'] = restForbids(run, channel) ?? 'not-worth-a-start';
+  const { frostLimit } = run.plan.house;
+  const common = {
+    cause,
+    source: source.slug,
+    credit: creditAt(memory, run.at),
+    ...(frostLimit !== null && inFrost === 'helps' && frostMayBreakRest
+      ? { frostBreaksBelow: frostLimit }
+      : {}),
+  };
+  if (cause === 'credit-spent') return { ...common, ...restTimes(run, place) };
+  if (cause === 'no-gain') {
+    const { noGainUntil } = entry(run.channels, channel);
+    const rules = entry(run.plan.channels, channel).rules.map(
+      (rule) => entry(run.plan.rules, rule).rest?.leastGain?.kelvin,
+    );
+    const kelvin = rules.find((one) => one !== undefined);
+    return {
+      ...common,
+      ...(kelvin === undefined ? {} : { leastGainK: kelvin }),
+      restUntil: noGainUntil,
+      until: noGainUntil,
+    };
+  }
+  const drawnS = usedMs(memory, run.at) / 1000;
+  const limitS = source.dailyLimitMs === null ? null : source.dailyLimitMs / 1000;
+  if (cause === 'daily-limit') return { ...common, drawnS, limitS, until: null };
+  const { creditMs, dayMs } = worth(run, channel, place, drawCost(run, channel));
+  const worthS = Math.min(creditMs, dayMs) / 1000;
+  return { ...common, drawnS, limitS, leastOnS: minOnMs / 1000, worthS, until: null };
+}
+
+type RestTimes = Pick<
+  RestReason,
+  'restSince' | 'restUntil' | 'restAtMostUntil' | 'recovery' | 'recoveries' | 'until'
+>;
+
+/** When a source's rest began and can end, and what it waits for. */
+export function restTimes(run: Run, place: number): RestTimes {
+  const source = entry(run.plan.sources, place);
+  const { restSince } = entry(run.sources, place);
+  const waits = waitingRules(run, source);
+  const recoveries = waits.flatMap(({ rest: own }) =>
+    own?.until == null
+      ? []
+      : [
+          {
+            point: own.until.key,
+            value: own.until.point === null ? null : entry(run.points, own.until.point).value,
+            level: own.until.level,
+            good: own.until.point !== null && run.usable[own.until.point] === 'good',
+          },
+        ],
+  );
+  const [recovery, ...others] = recoveries;
+  const told = {
+    ...(recovery === undefined ? {} : { recovery }),
+    ...(others.length === 0 ? {} : { recoveries: others }),
+  };
+  if (restSince === null) return { restSince, restUntil: null, restAtMostUntil: null, until: null, ...told };
+  const leastEnds = restSince + leastRestMs(run, source);
+  const most = waits.map((rule) => restSince + (rule.rest?.mostMs ?? 0));
+  const restAtMostUntil = waits.length === 0 ? null : Math.max(leastEnds, ...most);
+  // past the least, or where nobody can tell the level, the longest time is the end that is known
+  const known = recoveries.every(({ good }) => good) && run.at < leastEnds;
+  const waiting = waits.some(({ rest: own }) => own?.until != null && !recovered(run, own.until));
+  const restUntil = restAtMostUntil === null || known || !waiting ? leastEnds : restAtMostUntil;
+  return { restSince, restUntil, restAtMostUntil, until: restUntil, ...told };
+}

@@ -1,0 +1,50 @@
+/** On time of a source's channels over the rolling 24 h: two fans count twice. Milliseconds. */
+import type { SourceMemory } from './memory';
+
+const DAY_MS = 86_400_000;
+/** Spans kept; over it the two oldest become one of the same content, so a flapping load cannot swell the memory. */
+const SPANS = 500;
+
+/** Channel-milliseconds on in the 24 h up to `at`. */
+export function usedMs(memory: SourceMemory, at: number): number {
+  const { day } = memory;
+  if (day.nextAt !== null && at > day.nextAt) return reckon(memory.spans, at);
+  return day.usedMs + day.slope * (at - day.at);
+}
+
+/** Notes how many channels draw from `at` on, and keeps the sum at hand. */
+export function settleDay(memory: SourceMemory, draws: number, at: number): SourceMemory {
+  const { day } = memory;
+  if (draws === memory.draws && (day.nextAt === null || at < day.nextAt)) return memory;
+  const spans = memory.spans.filter(([, to]) => to === null || to > at - DAY_MS);
+  if (draws !== memory.draws) {
+    const last = spans.at(-1);
+    if (last !== undefined && last[1] === null) spans[spans.length - 1] = [last[0], at, last[2]];
+    if (draws > 0) spans.push([at, null, draws]);
+    merge(spans);
+  }
+  let nextAt: number | null = null;
+  let leaving = 0;
+  for (const [from, to, channels] of spans) {
+    if (from <= at - DAY_MS) leaving = channels;
+    for (const edge of [from + DAY_MS, to === null ? Infinity : to + DAY_MS])
+      if (edge > at && (nextAt === null || edge < nextAt)) nextAt = edge;
+  }
+  return { ...memory, draws, spans, day: { usedMs: reckon(spans, at), at, slope: draws - leaving, nextAt } };
+}
+
+function reckon(spans: SourceMemory['spans'], at: number): number {
+  let sum = 0;
+  for (const [from, to, channels] of spans) {
+    const length = Math.min(to ?? at, at) - Math.max(from, at - DAY_MS);
+    if (length > 0) sum += length * channels;
+  }
+  return sum;
+}
+
+function merge(spans: SourceMemory['spans']): void {
+  const [first, second] = spans;
+  if (spans.length <= SPANS || first?.[1] == null || second?.[1] == null) return;
+  const content = (first[1] - first[0]) * first[2] + (second[1] - second[0]) * second[2];
+  spans.splice(0, 2, [first[0], second[1], content / (second[1] - first[0])]);
+}

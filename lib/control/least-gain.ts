@@ -1,0 +1,76 @@
+/** Two looks at whether a running fan really brings heat: its least gain, and the proof that it turns. */
+import { beginRest, draws, leastRestMs } from './credit';
+import { entry, wakeAt, type Run } from './run';
+
+const LOW_MS = 120_000;
+/** A fan has this long to come up to speed before a reading of its proof counts. */
+const SPIN_UP_MS = 15_000;
+
+/** A load that is ordered on and whose proof shows nothing counts as not drawing. */
+export function settleProof(run: Run, channel: number): void {
+  const { config, runProofPoint } = entry(run.plan.channels, channel);
+  if (config.runProof === null || runProofPoint === null) return;
+  const memory = entry(run.channels, channel);
+  let { standing } = memory;
+  if (memory.counted === 'off') standing = false;
+  else if (run.usable[runProofPoint] === 'good') {
+    const { value, at } = entry(run.points, runProofPoint);
+    const says = at !== null && at >= (memory.countedSince ?? -Infinity) + SPIN_UP_MS;
+    if (says && value !== null) standing = value <= config.runProof.above;
+  }
+  if (standing !== memory.standing) run.channels[channel] = { ...memory, standing };
+}
+
+/**
+ * After `after` of a draw, return minus intake under the least gain for 2 min by good readings alone ends the
+ * channel's draw: it is moving air, not heat. If nothing else draws, the source's credit is spent with it.
+ */
+export function settleGain(run: Run, channel: number): void {
+  const { source, rules } = entry(run.plan.channels, channel);
+  if (source === null) return;
+  const memory = entry(run.channels, channel);
+  const wanted = draws(run, channel) ? gainWanted(run, rules) : null;
+  let { gainLowSince, noGainUntil } = memory;
+  if (noGainUntil !== null && run.at >= noGainUntil) noGainUntil = null;
+  if (wanted === null) gainLowSince = null;
+  else {
+    const looksAt = (memory.countedSince ?? -Infinity) + wanted.afterMs;
+    if (run.at < looksAt) {
+      wakeAt(run, looksAt);
+      gainLowSince = null;
+    } else if (isLow(run, wanted)) {
+      gainLowSince ??= run.at;
+      if (run.at < gainLowSince + LOW_MS) wakeAt(run, gainLowSince + LOW_MS);
+      else {
+        gainLowSince = null;
+        noGainUntil = run.at + leastRestMs(run, entry(run.plan.sources, source));
+        spendAll(run, source);
+      }
+    } else gainLowSince = null;
+  }
+  if (gainLowSince !== memory.gainLowSince || noGainUntil !== memory.noGainUntil)
+    run.channels[channel] = { ...memory, gainLowSince, noGainUntil };
+}
+
+type Gain = NonNullable<NonNullable<Run['plan']['rules'][number]['rest']>['leastGain']>;
+
+function gainWanted(run: Run, rules: readonly number[]): Gain | null {
+  for (const rule of rules) {
+    const gain = entry(run.plan.rules, rule).rest?.leastGain ?? null;
+    if (gain !== null && run.calendars[rule]?.inSeason === true) return gain;
+  }
+  return null;
+}
+
+function isLow(run: Run, { intake, return: back, kelvin }: Gain): boolean {
+  if (intake === null || back === null) return false;
+  if (run.usable[intake] !== 'good' || run.usable[back] !== 'good') return false;
+  const gain = (entry(run.points, back).value ?? NaN) - (entry(run.points, intake).value ?? NaN);
+  return gain < kelvin;
+}
+
+function spendAll(run: Run, source: number): void {
+  const memory = entry(run.sources, source);
+  if ((run.drawCount[source] ?? 0) <= 1 && !memory.resting)
+    run.sources[source] = beginRest(run, memory, 'no-gain');
+}

@@ -1,0 +1,50 @@
+/** A settled run as the worker, the pages and a trial are told of it. */
+import { restTimes } from './claims/rest';
+import { isReady, isUnderFloor } from './claims/source-guard';
+import { creditAt } from './credit';
+import { usedMs } from './day';
+import { becauseOf } from './ladder';
+import { entry, type Run } from './run';
+import type { ChannelResult, PointResult, SourceResult } from './types';
+
+export function channelResult(run: Run, index: number): ChannelResult {
+  const { id, number, safe } = entry(run.plan.channels, index);
+  const memory = entry(run.channels, index);
+  const claim = memory.claim ?? 'idle';
+  const because = becauseOf(run, index, claim);
+  const { until } = because;
+  return {
+    id,
+    number,
+    state: memory.wanted,
+    coil: (memory.wanted === 'on') === (safe === 'off') ? 'on' : 'off',
+    claim,
+    because,
+    until: typeof until === 'number' ? until : null,
+    mode: memory.lockouts.length > 0 ? 'locked' : memory.hand !== null ? 'hand' : 'auto',
+    counted: memory.counted,
+  };
+}
+
+export function pointResult(run: Run, index: number): PointResult {
+  const { id, value, at, quality, why } = entry(run.points, index);
+  return { id, value, at, quality, why };
+}
+
+export function sourceResult(run: Run, index: number): SourceResult {
+  const { id, slug, config } = entry(run.plan.sources, index);
+  const memory = entry(run.sources, index);
+  const rest = memory.resting ? restTimes(run, index) : null;
+  return {
+    id,
+    slug,
+    credit: creditAt(memory, run.at),
+    restSince: rest?.restSince ?? null,
+    restUntil: rest?.restUntil ?? null,
+    restAtMostUntil: rest?.restAtMostUntil ?? null,
+    drawnTodayS: usedMs(memory, run.at) / 1000,
+    drawing: memory.draws > 0,
+    ready: config.ready === null ? null : isReady(run, index),
+    underFloor: isUnderFloor(run, index),
+  };
+}
