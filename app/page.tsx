@@ -7,5 +7,5 @@ import { requireViewer } from '@/lib/server/next-session';
 export default async function FrontPage() {
   const { holdingId } = await requireViewer();
   const [first] = await inHolding(holdingId, readShell);
-  redirect(first === undefined ? '/first-house' : `/${first.slug}/watch`);
+  redirect(first === undefined ? '/new-house' : `/${first.slug}/watch`);
 }

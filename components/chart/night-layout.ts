@@ -1,0 +1,241 @@
+/** Where everything of a noon-to-noon chart stands, in drawing units. Pure, so that it can be tested without a browser. */
+import { scaleLinear } from 'd3-scale';
+import { line as pathOf } from 'd3-shape';
+import type { WatchBand, WatchLine, WatchStrip } from '@/lib/live/watch';
+import { temperatureFigure } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { clock } from '@/lib/units/time';
+import { degreeTicks, hourTicks, spread, type DegreeTick, type HourTick } from './axis';
+import { stripBoxes, type StripBox } from './strip';
+
+export interface NightChart {
+  night: { from: number; to: number };
+  now: number;
+  zone: string;
+  lines: WatchLine[];
+  bands: WatchBand[];
+  strips: WatchStrip[];
+  /** The point that the house's main band goes by: drawn strongest. */
+  main: string | null;
+  frostLimit: number | null;
+}
+
+export interface Frame {
+  width: number;
+  left: number;
+  right: number;
+  top: number;
+  /** Height of the part with temperatures. */
+  plot: number;
+  /** From one strip to the next, and how high a strip is. */
+  stripStep: number;
+  stripHeight: number;
+  /** A strip's name stands over it instead of at its right. */
+  namesAbove: boolean;
+  everyHours: number;
+}
+
+export const WIDE: Frame = {
+  ...{ width: 690, left: 38, right: 104, top: 24, plot: 248 },
+  ...{ stripStep: 26, stripHeight: 14, namesAbove: false, everyHours: 3 },
+};
+export const NARROW: Frame = {
+  ...{ width: 348, left: 34, right: 60, top: 24, plot: 196 },
+  ...{ stripStep: 36, stripHeight: 14, namesAbove: true, everyHours: 6 },
+};
+
+export interface DrawnLine {
+  key: string;
+  role: string;
+  isMain: boolean;
+  /** Which of its role this is, from 0: later ones are dashed. */
+  rank: number;
+  path: string;
+}
+
+export interface DrawnBand {
+  key: string;
+  isMain: boolean;
+  x: number;
+  width: number;
+  y: number;
+  height: number;
+  /** At each threshold, in place; empty where the period is too short for words. */
+  labels: { x: number; y: number; text: string }[];
+}
+
+export interface NightLayout {
+  frame: Frame;
+  height: number;
+  x0: number;
+  x1: number;
+  yTop: number;
+  yBottom: number;
+  hours: (HourTick & { x: number })[];
+  degrees: (DegreeTick & { y: number })[];
+  bands: DrawnBand[];
+  frost: { y: number; text: string } | null;
+  lines: DrawnLine[];
+  labels: { key: string; role: string; isMain: boolean; text: string; x: number; y: number }[];
+  strips: { key: string; name: string; y: number; boxes: StripBox[] }[];
+  now: { x: number; text: string; anchor: 'start' | 'end' } | null;
+}
+
+const INSIDE = ['house-air', 'bench'];
+
+/** °C between which the chart spans: all lines and the bands that warm, never less than 8 K. */
+export function extentOf(chart: Pick<NightChart, 'lines' | 'bands' | 'frostLimit'>): [number, number] {
+  const values = [
+    ...chart.lines.flatMap((one) => one.value.filter((value) => value !== null)),
+    ...chart.bands
+      .filter((band) => band.purpose === 'warm')
+      .flatMap((band) => band.periods.flatMap((period) => [period.low, period.high])),
+    ...(chart.frostLimit === null ? [] : [chart.frostLimit]),
+  ];
+  if (values.length === 0) return [-5, 15];
+  const [least, greatest] = [Math.min(...values), Math.max(...values)];
+  const lack = Math.max(0, 8 - (greatest - least)) / 2;
+  return [Math.floor(least - lack - 0.5), Math.ceil(greatest + lack + 0.5)];
+}
+
+export function nightLayout(chart: NightChart, frame: Frame, preferences: Preferences): NightLayout {
+  const { from, to } = chart.night;
+  const [least, greatest] = extentOf(chart);
+  const x1 = frame.width - frame.right;
+  const yBottom = frame.top + frame.plot;
+  const x = scaleLinear([from, to], [frame.left, x1]);
+  const y = scaleLinear([least, greatest], [yBottom, frame.top]);
+  const nowIn = chart.now > from && chart.now < to;
+  const stripsTop = yBottom + (frame.namesAbove ? 30 : 16);
+  const height = stripsTop + chart.strips.length * frame.stripStep + 18;
+  return {
+    frame,
+    height,
+    x0: frame.left,
+    x1,
+    yTop: frame.top,
+    yBottom,
+    hours: hourTicks(from, to, chart.zone, frame.everyHours, preferences).map((tick) => ({
+      ...tick,
+      x: x(tick.at),
+    })),
+    degrees: degreeTicks(least, greatest, 5, preferences).map((tick) => ({ ...tick, y: y(tick.celsius) })),
+    bands: bandsOf(chart, frame, x, y, [least, greatest], preferences),
+    frost:
+      chart.frostLimit === null
+        ? null
+        : { y: y(chart.frostLimit), text: `frost limit ${temperatureFigure(chart.frostLimit, preferences)}` },
+    lines: chart.lines.map((one) => drawn(one, chart, x, y)),
+    labels: labelsOf(chart, x, y, frame, preferences),
+    strips: chart.strips.map((strip, place) => ({
+      key: strip.key,
+      name: strip.label,
+      y: stripsTop + place * frame.stripStep,
+      boxes: stripBoxes(strip.spans, x),
+    })),
+    now: nowIn
+      ? {
+          x: x(chart.now),
+          text: `now ${clock(chart.now, chart.zone, preferences)}`,
+          anchor: x(chart.now) > frame.width - 90 ? 'end' : 'start',
+        }
+      : null,
+  };
+}
+
+type Scale = (value: number) => number;
+
+function drawn(one: WatchLine, chart: NightChart, x: Scale, y: Scale): DrawnLine {
+  const rank = chart.lines.filter((other) => other.role === one.role).indexOf(one);
+  const places = one.at.map((at, place) => ({ at, value: one.value[place] ?? null }));
+  const path = pathOf<(typeof places)[number]>()
+    .defined((place) => place.value !== null)
+    .x((place) => x(place.at))
+    .y((place) => y(place.value ?? 0))
+    .digits(1)(places);
+  return { key: one.key, role: one.role, isMain: one.key === chart.main, rank, path: path ?? '' };
+}
+
+/** A line's name stands where the line ends, with its last figure. */
+function labelsOf(chart: NightChart, x: Scale, y: Scale, frame: Frame, preferences: Preferences) {
+  const items = chart.lines.flatMap((one) => {
+    const last = one.value.findLastIndex((value) => value !== null);
+    const [at, value] = [one.at[last], one.value[last]];
+    if (at === undefined || value === undefined || value === null) return [];
+    const name = one.role === 'outdoors' ? 'Outdoors' : one.role === 'loop-return' ? 'Loop return' : one.name;
+    // on a phone the colour and the place say which; the name would run over the lines
+    const text = frame.namesAbove ? temperatureFigure(value, preferences) : name;
+    return [
+      { key: one.key, role: one.role, isMain: one.key === chart.main, text, x: x(at) + 5, y: y(value) },
+    ];
+  });
+  return spread(items, 13, frame.top + 6, frame.top + frame.plot - 2);
+}
+
+const NEAR_K = 3;
+
+/** Whether the point that a band goes by came within 3 K of where it begins, in that part of the night. */
+function comesNear(chart: NightChart, band: WatchBand, period: WatchBand['periods'][number]): boolean {
+  const line = chart.lines.find((one) => one.key === band.point);
+  return (line?.at ?? []).some((at, place) => {
+    const value = line?.value[place] ?? null;
+    if (value === null || at < period.from || at >= period.to) return false;
+    return band.purpose === 'warm' ? value < period.low + NEAR_K : value > period.high - NEAR_K;
+  });
+}
+
+function bandsOf(
+  chart: NightChart,
+  frame: Frame,
+  x: Scale,
+  y: Scale,
+  [least, greatest]: [number, number],
+  preferences: Preferences,
+): DrawnBand[] {
+  const known = new Set(chart.lines.filter((one) => INSIDE.includes(one.role)).map((one) => one.key));
+  const main = chart.bands.find((band) => band.point === chart.main && band.purpose === 'warm');
+  let others = 0;
+  return chart.bands
+    .filter((band) => known.has(band.point))
+    .sort((one, other) => Number(other === main) - Number(one === main))
+    .flatMap((band) => {
+      const isMain = band === main;
+      const shift = isMain ? 0 : (others += 1) * 150;
+      return band.periods.flatMap((period, place): DrawnBand[] => {
+        if (period.low > greatest || period.high < least) return [];
+        // a band that nothing came near would only stand in the way of those that decide
+        if (!isMain && !comesNear(chart, band, period)) return [];
+        const [left, right] = [
+          x(Math.max(period.from, chart.night.from)),
+          x(Math.min(period.to, chart.night.to)),
+        ];
+        if (right <= left) return [];
+        const top = Math.max(y(period.high), frame.top);
+        const bottom = Math.min(y(period.low), frame.top + frame.plot);
+        const roomy = right - left > (isMain ? 84 : shift + 84) && !(frame.namesAbove && !isMain);
+        const named = isMain ? '' : `${band.channel}: `;
+        const [over, under] = band.purpose === 'warm' ? ['off above', 'on below'] : ['on above', 'off below'];
+        return [
+          {
+            key: `${band.channel}-${place}`,
+            isMain,
+            ...{ x: left, width: right - left, y: top, height: bottom - top },
+            labels: roomy
+              ? [
+                  {
+                    x: left + 5 + shift,
+                    y: top - 4,
+                    text: `${named}${over} ${temperatureFigure(period.high, preferences)}`,
+                  },
+                  {
+                    x: left + 5 + shift,
+                    y: bottom + 12,
+                    text: `${named}${under} ${temperatureFigure(period.low, preferences)}`,
+                  },
+                ]
+              : [],
+          },
+        ];
+      });
+    });
+}
