@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { giveaways, isLost, isOver, isTwiceOver, lengthOf, saysNothing } from './file-rules';
+import { giveaways, isLost, isOver, isTwiceOver, lengthOf, looseEnds, saysNothing } from './file-rules';
 import { projectFiles, textOf } from './tree';
 
 const TEXT = /\.(tsx?|mjs|cjs|json|md|sql|css|ya?ml|sh|txt)$|^\.[a-z]+|^\.ci\//;
@@ -26,6 +26,13 @@ describe('the project’s files', () => {
       .flatMap((file) => giveaways(textOf(file)).map((what) => `${file}: ${what}`));
     expect(found).toEqual([]);
   });
+});
+
+it('nothing is left for later: no notes to do it, no test left out', () => {
+  const found = projectFiles()
+    .filter((file) => /\.(tsx?|mjs|cjs|sql|css)$/.test(file))
+    .flatMap((file) => looseEnds(textOf(file)).map((what) => `${file}: ${what}`));
+  expect(found).toEqual([]);
 });
 
 describe('each rule about files can fail', () => {
@@ -64,6 +71,15 @@ describe('each rule about files can fail', () => {
     ['"/', 'home', '/ann/x"'],
   ])('%s%s%s is a giveaway', (...parts) => {
     expect(giveaways(parts.join(''))).not.toEqual([]);
+  });
+
+  it.each([
+    ['// TO', 'DO: later'],
+    ['/* FIX', 'ME */'],
+    ['it.', "skip('x', () => {})"],
+    ['describe.', "only('x', () => {})"],
+  ])('%s%s is a loose end', (...parts) => {
+    expect(looseEnds(parts.join(''))).not.toEqual([]);
   });
 
   it.each(['/var/lib/postgresql', 'lib/work/x', './homework/x', 'network/main'])('%s is none', (text) => {

@@ -59,3 +59,12 @@ const GIVEAWAYS: [what: string, pattern: RegExp][] = [
 /** What a file gives away of the machine on which it was written. */
 export const giveaways = (text: string): string[] =>
   GIVEAWAYS.filter(([, pattern]) => pattern.test(text)).map(([what]) => what);
+
+const LOOSE_ENDS: [what: string, pattern: RegExp][] = [
+  ['a note to do it later', new RegExp(['\\b(TO', 'DO|FIX', 'ME|X', 'XX)\\b'].join(''))],
+  ['a test left out', new RegExp(['\\b(it|test|describe)\\.', '(skip|only|todo|fails)\\b'].join(''))],
+];
+
+/** What somebody meant to come back to: a thing is done, or it is an issue. */
+export const looseEnds = (text: string): string[] =>
+  LOOSE_ENDS.filter(([, pattern]) => pattern.test(text)).map(([what]) => what);
