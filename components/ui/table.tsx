@@ -32,7 +32,8 @@ export function Table({
       tabIndex={0}
       role="group"
       aria-label={typeof caption === 'string' ? caption : 'Table'}
-      className="overflow-x-auto"
+      // relative: what is read out only is placed absolutely, and would else widen the page
+      className="relative overflow-x-auto"
     >
       <table className="w-full border-collapse text-[0.95rem]">
         <caption className={captionHidden ? 'sr-only' : 'pb-2 text-left font-semibold'}>{caption}</caption>
