@@ -21,7 +21,8 @@ export function noteRelay(run: Run, index: number): void {
   const relay = { reported, reportedAt, acknowledges, leaseEndsAt, seenAt: run.stepAt };
   memory = { ...memory, relay };
   // it ran by its own report and now says it stands: a lease trip, told as a switching of its own, not of ours
-  const dropped = before?.reported != null && before.reported !== safe && reported === safe;
+  const ran = before !== null && before.reported !== null && before.reported !== safe;
+  const dropped = ran && reported === safe;
   if (dropped && memory.wanted !== safe && isFresh(memory, run.at)) memory.wanted = safe;
   run.channels[index] = memory;
 }
@@ -60,9 +61,9 @@ export function settleCounted(run: Run, index: number): void {
   const { relay, wanted } = memory;
   const fresh = isFresh(memory, run.at);
   let counted: State = wanted;
-  if (fresh && relay?.reported != null) {
-    counted = relay.reported;
-    wakeAt(run, (relay.reportedAt ?? 0) + FRESH_MS);
+  if (fresh) {
+    counted = relay?.reported ?? wanted;
+    wakeAt(run, (relay?.reportedAt ?? 0) + FRESH_MS);
   } else {
     const leaseEndsAt = relay?.leaseEndsAt ?? (run.undriven ? (run.awayFrom ?? 0) + LEASE_MS : null);
     if (wanted !== safe && leaseEndsAt !== null) {
@@ -71,7 +72,7 @@ export function settleCounted(run: Run, index: number): void {
     }
   }
   const known = knownState(memory, safe, fresh, counted, run.at);
-  if (known === null && relay?.leaseEndsAt != null) wakeAt(run, relay.leaseEndsAt);
+  if (known === null && relay !== null) wakeAt(run, relay.leaseEndsAt ?? 0);
   if (counted === memory.counted && known === memory.known) return;
   const next = { ...memory };
   if (known !== memory.known) {

@@ -151,7 +151,7 @@ function restEnd(
   }
   let how: 'rested' | 'recovered' | 'longest-rest' = 'rested';
   for (const { rest } of waitingRules(run, source)) {
-    if (rest?.until == null) continue;
+    if (rest === null || rest.until === null) continue;
     if (!run.undriven && recovered(run, rest.until)) {
       if (how === 'rested') how = 'recovered';
       continue;

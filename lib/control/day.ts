@@ -44,7 +44,8 @@ function reckon(spans: SourceMemory['spans'], at: number): number {
 
 function merge(spans: SourceMemory['spans']): void {
   const [first, second] = spans;
-  if (spans.length <= SPANS || first?.[1] == null || second?.[1] == null) return;
+  if (spans.length <= SPANS || first === undefined || second === undefined) return;
+  if (first[1] === null || second[1] === null) return;
   const content = (first[1] - first[0]) * first[2] + (second[1] - second[0]) * second[2];
   spans.splice(0, 2, [first[0], second[1], content / (second[1] - first[0])]);
 }

@@ -202,7 +202,7 @@ export class Player {
   order(order: Order): this {
     this.orders += 1;
     // the order's own fields with its number, time and person: together a whole command again
-    const command = { ...order, number: this.orders, at: this.now, by: 'Ann' } as PersonCommand;
+    const command = { ...order, number: this.orders, at: this.now, by: 'Ann' };
     this.observed.commands = [...this.observed.commands, command];
     this.step();
     return this;

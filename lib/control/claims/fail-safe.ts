@@ -1,6 +1,6 @@
 /** Fail-safe: the channel has rules in season, and none of them has a point or stand-in that is not bad. */
 import type { FailSafeReason } from '../because';
-import { entry, type Run } from '../run';
+import { entry } from '../run';
 import type { ClaimRung } from './claim';
 import { hasUsablePoint } from './hand';
 

@@ -129,7 +129,7 @@ export function restTimes(run: Run, place: number): RestTimes {
   const { restSince } = entry(run.sources, place);
   const waits = waitingRules(run, source);
   const recoveries = waits.flatMap(({ rest: own }) =>
-    own?.until == null
+    own === null || own.until === null
       ? []
       : [
           {
@@ -151,7 +151,9 @@ export function restTimes(run: Run, place: number): RestTimes {
   const restAtMostUntil = waits.length === 0 ? null : Math.max(leastEnds, ...most);
   // past the least, or where nobody can tell the level, the longest time is the end that is known
   const known = recoveries.every(({ good }) => good) && run.at < leastEnds;
-  const waiting = waits.some(({ rest: own }) => own?.until != null && !recovered(run, own.until));
+  const waiting = waits.some(
+    ({ rest: own }) => own !== null && own.until !== null && !recovered(run, own.until),
+  );
   const restUntil = restAtMostUntil === null || known || !waiting ? leastEnds : restAtMostUntil;
   return { restSince, restUntil, restAtMostUntil, until: restUntil, ...told };
 }
