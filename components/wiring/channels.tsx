@@ -7,6 +7,7 @@ import { day } from '@/lib/units/time';
 import type { Channel, Lockout, Source } from '@/lib/schema/yard-view';
 import { exactly } from '@/lib/wording/settings';
 import {
+  SHARE_NOTE,
   circuitWords,
   contactFit,
   isMains,
@@ -67,7 +68,7 @@ function ChannelRow({
       <Cell figure>
         {ratedWords(channel.load)}
         {fit === null ? null : (
-          <span className="ml-auto block max-w-64 font-sans text-[0.85rem] whitespace-normal text-soft">
+          <span className="ml-auto block max-w-48 font-sans text-[0.85rem] whitespace-normal text-soft">
             <Phrases phrases={fit.words} />
           </span>
         )}
@@ -81,16 +82,18 @@ function ChannelRow({
           <span className="whitespace-nowrap">{day(Date.parse(channel.provedAt), zone)}</span>
         )}
       </Cell>
-      <Cell className="text-right">
-        <ChangeButton kind="channel" id={channel.id} of={channel.label} />
-        {lockout === undefined ? (
-          <LockOutButton
-            house={house}
-            channel={channel.key}
-            label={channel.label}
-            contact={channel.contact}
-          />
-        ) : null}
+      <Cell className="align-middle">
+        <div className="flex justify-end">
+          <ChangeButton kind="channel" id={channel.id} of={channel.label} />
+          {lockout === undefined ? (
+            <LockOutButton
+              house={house}
+              channel={channel.key}
+              label={channel.label}
+              contact={channel.contact}
+            />
+          ) : null}
+        </div>
       </Cell>
     </Row>
   );
@@ -138,6 +141,7 @@ export function Channels({
           ))}
         </Table>
       )}
+      {channels.length === 0 ? null : <p className="mt-2 text-[0.85rem] text-soft">{SHARE_NOTE}</p>}
       {channels.some((one) => isMains(one.load)) ? (
         <div className="mt-3">
           <Notice tone="warn" title="Mains in a damp house">

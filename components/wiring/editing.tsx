@@ -81,7 +81,9 @@ export function ChangeButton({ kind, id, of }: { kind: Kind; id: string; of: str
   if (!allowed.includes(needs(kind))) return null;
   return (
     <Button kind="quiet" onClick={() => edit(kind, id)}>
-      Change<span className="sr-only"> {of}</span>…
+      <span>
+        Change<span className="sr-only"> {of}</span>…
+      </span>
     </Button>
   );
 }
@@ -100,11 +102,15 @@ export function TokenButtons({
   return (
     <>
       <Button kind="quiet" onClick={() => token(nodeId, 'rotate')}>
-        New token<span className="sr-only"> for {nodeKey}</span>…
+        <span>
+          New token<span className="sr-only"> for {nodeKey}</span>…
+        </span>
       </Button>
       {isRevoked ? null : (
         <Button kind="quiet" onClick={() => token(nodeId, 'revoke')}>
-          Revoke<span className="sr-only"> the token of {nodeKey}</span>…
+          <span>
+            Revoke<span className="sr-only"> the token of {nodeKey}</span>…
+          </span>
         </Button>
       )}
     </>

@@ -42,7 +42,11 @@ function LoadEffect({
     <>
       <p aria-live="polite" className="rounded-lg border border-line bg-paper p-3 text-[0.95rem]">
         When nothing commands it: {safeStateWords(contact, kind).toLowerCase()}.{' '}
-        {fit === null ? null : <Phrases phrases={fit.words} />}
+        {fit === null ? null : (
+          <>
+            Its contact: <Phrases phrases={fit.words} />.
+          </>
+        )}
       </p>
       {isMains(load) ? (
         <Notice tone="warn" title="Mains in a damp house">

@@ -45,7 +45,9 @@ export function LockOutButton({
   return (
     <>
       <Button kind="quiet" onClick={() => setOpen(true)}>
-        Lock out<span className="sr-only"> the {label}</span>…
+        <span>
+          Lock out<span className="sr-only"> the {label}</span>…
+        </span>
       </Button>
       <Dialog
         open={open}

@@ -87,9 +87,11 @@ export function Nodes({
                 </Cell>
                 <Cell figure>{status.refused ?? unknown}</Cell>
                 <Cell>{tokenWords(node, now, zone, preferences)}</Cell>
-                <Cell className="text-right">
-                  <ChangeButton kind="node" id={node.id} of={node.key} />
-                  <TokenButtons nodeId={node.id} nodeKey={node.key} isRevoked={node.revokedAt !== null} />
+                <Cell className="align-middle">
+                  <div className="flex justify-end">
+                    <ChangeButton kind="node" id={node.id} of={node.key} />
+                    <TokenButtons nodeId={node.id} nodeKey={node.key} isRevoked={node.revokedAt !== null} />
+                  </div>
                 </Cell>
               </Row>
             );

@@ -2,7 +2,7 @@ import { Age } from '@/components/ui/age';
 import { Panel } from '@/components/ui/panel';
 import { Empty } from '@/components/ui/states';
 import { Cell, Row, RowHead, Table } from '@/components/ui/table';
-import type { StatePoint } from '@/lib/live/frames';
+import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
@@ -83,7 +83,7 @@ function PointRow({
         {stale === null ? <span className="font-sans text-soft">as its inputs</span> : exactly(stale)}
       </Cell>
       <Cell figure>{calibrationWords(point)}</Cell>
-      <Cell className="text-right">
+      <Cell className="py-0 text-right align-middle">
         <ChangeButton kind="point" id={point.id} of={point.name} />
       </Cell>
     </Row>

@@ -1,6 +1,6 @@
 import { classes } from '@/components/ui/classes';
 import { Panel } from '@/components/ui/panel';
-import type { StateChannel } from '@/lib/live/frames';
+import type { StateChannel } from '@/lib/schema/house-state';
 import type { Channel, FieldNode } from '@/lib/schema/yard-view';
 
 /** A contact is closed where its load has current, whichever way it is wired. */
@@ -82,7 +82,7 @@ export function RelayBoard({
 }) {
   if (node.channels === 0) return null;
   return (
-    <Panel title={`Relay board of node ${node.key}`} level={3}>
+    <Panel title={`Relay board of node ${node.key}`}>
       <ol className="grid grid-cols-3 gap-2 rounded-lg bg-earth p-2 sm:grid-cols-4 xl:grid-cols-8">
         {Array.from({ length: node.channels }, (_, place) => {
           const channel = channels.find((one) => one.node === node.key && one.relay === place + 1);

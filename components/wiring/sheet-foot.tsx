@@ -41,7 +41,7 @@ export function SheetFoot({
   }
 
   const strip =
-    'sticky bottom-0 -mx-5 -mb-5 flex flex-wrap items-center gap-2 border-t border-line bg-sheet px-5 py-3';
+    'sticky -bottom-5 -mx-5 -mb-5 flex flex-wrap items-center gap-2 border-t border-line bg-sheet px-5 py-3';
   if (isLeaving) {
     return (
       <div className={strip}>

@@ -1,6 +1,6 @@
 import { Notice } from '@/components/ui/notice';
 import { Sentence } from '@/components/ui/sentence';
-import type { HouseState } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 import type { Preferences } from '@/lib/units/preferences';
 import { wiringSentence } from '@/lib/wording/wiring';
 import { Channels } from './channels';
@@ -80,7 +80,7 @@ export function WiringView({
         />
         <Nodes nodes={nodes} kept={nodeStatus} zone={zone} now={now} preferences={preferences} />
         <Points points={points} states={state?.points ?? []} nodes={nodes} preferences={preferences} />
-        <div className="grid gap-5 xl:grid-cols-2">
+        <div className="grid grid-cols-1 gap-5 xl:grid-cols-2">
           <Sources
             sources={sources}
             loops={yard.loops}

@@ -92,18 +92,15 @@ export function contactFit(load: Load): ContactFit | null {
   const isOver = amps > bears;
   const a = (value: number) => `${decimal(value, 2)}${space}A`;
   const rating = `${plainNumber(load.contactAmps)}${space}A`;
-  const of =
-    share === 1
-      ? `a ${rating} contact`
-      : `the ${a(bears)} that a ${rating} contact is left with for this kind of load`;
+  const left =
+    share === 1 ? `the contact’s ${rating}` : `${a(bears)} (${shareWords(share)} of the contact’s ${rating})`;
   return {
     isOver,
-    words: join(
-      'Draws ',
-      { text: a(amps), tone: isOver ? 'alarm' : 'strong' },
-      isOver ? ', over ' : ' of ',
-      of,
-      share === 1 ? '.' : ' (common practice; the maker’s data sheet decides).',
-    ),
+    words: join({ text: a(amps), tone: isOver ? 'alarm' : 'strong' }, isOver ? ' is over ' : ' of ', left),
   };
 }
+
+const shareWords = (share: number) => (share < 0.2 ? 'a tenth' : 'a third');
+
+export const SHARE_NOTE =
+  'A contact keeps a third of its rating for motors, vents and valves, and a tenth for lamps, since starting draws many times the running current. This is common practice; the maker’s data sheet decides.';

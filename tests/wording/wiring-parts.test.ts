@@ -38,10 +38,8 @@ describe('a load', () => {
   });
 
   it('is held against a contact that is derated for motors, and not for heaters', () => {
-    expect(text(contactFit(fan)?.words ?? [])).toBe(
-      'Draws 0.50 A of the 1.67 A that a 5 A contact is left with for this kind of load (common practice; the maker’s data sheet decides).',
-    );
-    expect(text(contactFit(mat)?.words ?? [])).toBe('Draws 0.70 A of a 10 A contact.');
+    expect(text(contactFit(fan)?.words ?? [])).toBe('0.50 A of 1.67 A (a third of the contact’s 5 A)');
+    expect(text(contactFit(mat)?.words ?? [])).toBe('0.70 A of the contact’s 10 A');
     expect(contactFit({ ...fan, watts: 60 })?.isOver).toBe(true);
     expect(contactFit({ ...mat, watts: 2300 })?.isOver).toBe(false);
     expect(contactFit({ kind: 'motor', watts: 12 })).toBeNull();

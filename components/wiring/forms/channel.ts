@@ -4,7 +4,7 @@ import { named, nodeOptions, pointOptions, sourceOptions, type Yard } from './op
 
 const load: Group = {
   title: 'Load',
-  columns: 3,
+  columns: 2,
   specs: [
     { as: 'choice', path: 'load.kind', label: 'Kind', options: named(LOAD_WORDS) },
     { as: 'number', path: 'load.watts', label: 'Rated power', quantity: 'number', unit: 'W', empty: 'omit' },
