@@ -1,3 +1,4 @@
+import { StripKey } from '@/components/chart/strip';
 import { ButtonLink } from '@/components/ui/button';
 import { Figures, Panel } from '@/components/ui/panel';
 import { Sentence } from '@/components/ui/sentence';
@@ -10,7 +11,7 @@ import { type DutyAddress, RANGES } from './address';
 import { Choice } from './choice';
 import { CoreAtDawn, dawnsOf } from './core-at-dawn';
 import { nightFigures } from './figures';
-import { StripKey, StripPatterns } from './night-strip';
+import { SharedPatterns } from './night-strip';
 import { NightsTable } from './nights-table';
 import { OpenedNight, type OpenedDecision } from './opened-night';
 import { PrintButton } from './print-button';
@@ -43,7 +44,7 @@ export function DutyView({
   const dawns = dawnsOf(nights);
   return (
     <div className="flex flex-col gap-4">
-      <StripPatterns />
+      <SharedPatterns />
       <Sentence phrases={dutySentence(standing, preferences)} before="Duty" />
       <div className="not-on-paper flex flex-wrap items-end justify-between gap-3">
         <Choice
@@ -78,7 +79,7 @@ export function DutyView({
         </Empty>
       ) : (
         <div className="grid gap-4 lg:grid-cols-[minmax(0,1fr)_20.5rem] lg:items-start print:block">
-          <Panel title="Every night, noon to noon" note={<StripKey />}>
+          <Panel title="Every night, noon to noon" note={<StripKey id="duty-key" />}>
             <NightsTable {...shared} nights={nights} totals={totals} />
           </Panel>
           <div className="flex flex-col gap-4">

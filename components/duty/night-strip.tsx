@@ -1,25 +1,11 @@
+import { StripPatterns } from '@/components/chart/strip';
 import type { StripSpan } from '@/lib/analysis/nights';
 
-/** Once on a page that has strips. Patterns carry the meaning; colour only supports it. */
-export function StripPatterns() {
+/** Once on the page: four hundred strips share one pair of patterns. */
+export function SharedPatterns() {
   return (
     <svg aria-hidden="true" className="absolute size-0">
-      <defs>
-        <pattern
-          id="duty-rest"
-          width="5"
-          height="5"
-          patternUnits="userSpaceOnUse"
-          patternTransform="rotate(45)"
-        >
-          <rect width="5" height="5" className="fill-sheet" />
-          <rect width="1.6" height="5" className="fill-ember" />
-        </pattern>
-        <pattern id="duty-held" width="5" height="5" patternUnits="userSpaceOnUse">
-          <circle cx="1.5" cy="1.5" r="1" className="fill-soft" />
-          <circle cx="4" cy="4" r="1" className="fill-soft" />
-        </pattern>
-      </defs>
+      <StripPatterns id="duty" />
     </svg>
   );
 }
@@ -60,33 +46,9 @@ export function NightStrip({
       <Spans spans={of('rest')} length={length} className="fill-[url(#duty-rest)]" />
       <Spans spans={of('held')} length={length} className="fill-[url(#duty-held)]" />
       <Spans spans={of('run')} length={length} className="fill-ember" />
-      <Spans spans={of('hand', true)} length={length} className="fill-ember stroke-ink stroke-2" />
-      <Spans spans={of('hand', false)} length={length} className="fill-sheet stroke-ink stroke-2" />
+      <Spans spans={of('hand', true)} length={length} className="fill-ember/45 stroke-ink stroke-[1.5]" />
+      <Spans spans={of('hand', false)} length={length} className="fill-transparent stroke-ink stroke-[1.5]" />
     </svg>
-  );
-}
-
-/** What the patterns mean. */
-export function StripKey() {
-  const swatch = 'mr-1 inline-block h-3 w-5 overflow-visible align-[-1px] [&_rect]:h-full [&_rect]:w-full';
-  return (
-    <span className="flex flex-wrap gap-x-3 gap-y-1">
-      {(
-        [
-          ['run', 'fill-ember'],
-          ['rest', 'fill-[url(#duty-rest)]'],
-          ['held', 'fill-[url(#duty-held)]'],
-          ['by hand', 'fill-sheet stroke-ink stroke-2'],
-        ] as const
-      ).map(([name, fill]) => (
-        <span key={name} className="whitespace-nowrap">
-          <svg aria-hidden="true" className={swatch}>
-            <rect className={fill} />
-          </svg>{' '}
-          {name}
-        </span>
-      ))}
-    </span>
   );
 }
 

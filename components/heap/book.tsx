@@ -1,0 +1,71 @@
+import { DateTime } from 'luxon';
+import type { HeapEntry } from '@/lib/schema/heap-view';
+import type { Preferences } from '@/lib/units/preferences';
+import { clock } from '@/lib/units/time';
+import { kindWord, whatWent } from '@/lib/wording/heap';
+import { EntryButton } from './entry-button';
+
+/** Newest day first; within a day the newest entry first. */
+function byDay(entries: readonly HeapEntry[], zone: string): [day: string, entries: HeapEntry[]][] {
+  const days = new Map<string, HeapEntry[]>();
+  for (const entry of entries) {
+    const name = DateTime.fromISO(entry.at, { zone, locale: 'en-GB' }).toFormat('cccc d LLLL yyyy');
+    days.set(name, [...(days.get(name) ?? []), entry]);
+  }
+  return [...days];
+}
+
+export function Book({
+  house,
+  heap,
+  zone,
+  entries,
+  mayWrite,
+  preferences,
+}: {
+  house: string;
+  heap: string;
+  zone: string;
+  entries: HeapEntry[];
+  mayWrite: boolean;
+  preferences: Preferences;
+}) {
+  return (
+    <ol className="flex flex-col gap-5">
+      {byDay(entries, zone).map(([name, ofDay]) => (
+        <li key={name}>
+          <h3 className="border-b border-line pb-1 font-mono text-[0.9rem] text-soft">{name}</h3>
+          <ol className="divide-y divide-faint">
+            {ofDay.map((entry) => (
+              <li key={entry.id} className="flex items-start justify-between gap-3 py-2.5">
+                <div className="min-w-0">
+                  <p>
+                    <strong className="font-semibold">{kindWord(entry.kind)}</strong>
+                    {whatWent(entry) === '' ? null : <>: {whatWent(entry)}</>}
+                  </p>
+                  {entry.text === '' ? null : (
+                    <p className="max-w-prose break-words whitespace-pre-line">{entry.text}</p>
+                  )}
+                  <p className="text-[0.9rem] text-soft">
+                    <time dateTime={entry.at}>{clock(Date.parse(entry.at), zone, preferences)}</time>,{' '}
+                    {entry.by}
+                    {entry.amendedAt === null ? null : <>; amended by {entry.amendedBy}</>}
+                  </p>
+                </div>
+                {mayWrite ? (
+                  <EntryButton house={house} heap={heap} zone={zone} kind={entry.kind} entry={entry}>
+                    Amend
+                    <span className="sr-only">
+                      {' '}
+                      {kindWord(entry.kind).toLowerCase()} of {name}
+                    </span>
+                  </EntryButton>
+                ) : null}
+              </li>
+            ))}
+          </ol>
+        </li>
+      ))}
+    </ol>
+  );
+}

@@ -1,0 +1,34 @@
+'use client';
+import dynamic from 'next/dynamic';
+import { useState, type ReactNode } from 'react';
+import { Button, type ButtonKind } from '@/components/ui/button';
+import type { HeapEntry } from '@/lib/schema/heap-view';
+
+/** The form and its schema come when they are asked for: most visits only read. */
+const EntryDialog = dynamic(() => import('./entry-dialog').then((module) => module.EntryDialog));
+
+export interface EntryTarget {
+  house: string;
+  /** Slug of the heap. */
+  heap: string;
+  zone: string;
+  kind: HeapEntry['kind'];
+  /** The one that is amended; left out, a new one is written. */
+  entry?: HeapEntry;
+}
+
+export function EntryButton({
+  look = 'plain',
+  children,
+  ...target
+}: EntryTarget & { look?: ButtonKind; children: ReactNode }) {
+  const [isOpen, setOpen] = useState(false);
+  return (
+    <>
+      <Button kind={look} onClick={() => setOpen(true)} aria-haspopup="dialog">
+        {children}
+      </Button>
+      {isOpen ? <EntryDialog {...target} onClose={() => setOpen(false)} /> : null}
+    </>
+  );
+}
