@@ -3,7 +3,7 @@ import { and, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { point } from '@/db/schema/yard';
 import { nightBefore, nightNamed, nightOf } from '@/lib/analysis/night';
-import type { HouseState } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 import type { Rule, RuleWithVersions } from '@/lib/schema/rule-view';
 import type { Channel, House, Point, Source } from '@/lib/schema/yard-view';
 import { listChannels } from './channel';

@@ -3,7 +3,7 @@ import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm'
 import type { Db, Holding } from '@/db/client';
 import { controlMemory, decision, relayReport, switching } from '@/db/schema/running';
 import type { Explanation, State } from '@/lib/control/types';
-import type { HouseState } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 
 export type SwitchingRow = typeof switching.$inferInsert;
 export type DecisionRow = typeof decision.$inferInsert;

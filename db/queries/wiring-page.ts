@@ -2,7 +2,7 @@
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { node } from '@/db/schema/yard';
-import type { HouseState } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 import type {
   Channel,
   FieldNode,

@@ -1,7 +1,7 @@
 /** What Watch is made of: read once by the server, and kept up to date in the browser by the live feed. */
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { SpanKind } from '@/lib/analysis/spans';
-import type { HouseState } from './frames';
+import type { HouseState } from '@/lib/schema/house-state';
 
 export interface WatchHouse {
   id: string;
@@ -46,8 +46,8 @@ export interface WatchLoop {
   channel: string | null;
   intake: string | null;
   return: string | null;
-  /** m³/s; null where nobody entered it. */
-  flow: number | null;
+  /** W that one degree between its ends is worth while its fan runs; null where nobody entered a flow. */
+  wattPerK: number | null;
 }
 
 /** A band in force over a part of the night, °C. Thresholds change with the hours and with a new version. */

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { HouseState } from '../live/frames';
+import { HouseState } from './house-state';
 import { Alarm } from './alarm-view';
 import { Instant, PageQuery } from './common';
 

@@ -6,7 +6,7 @@ import { listNodes } from '@/db/queries/node';
 import { listPoints } from '@/db/queries/point';
 import { readMemory } from '@/db/queries/running';
 import { listSources } from '@/db/queries/source';
-import type { HouseState } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 import type { HouseStateAnswer } from '@/lib/schema/running';
 import type { House } from '@/lib/schema/yard-view';
 import { alarmList } from './alarm-answer';

@@ -4,7 +4,7 @@ import type { HouseRecord } from '@/db/queries/plan';
 import { isInstant } from '@/lib/control/because';
 import type { StepResult } from '@/lib/control/step-result';
 import type { DataValue, State } from '@/lib/control/types';
-import type { HouseState } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 
 export interface NodeStanding {
   online: boolean;

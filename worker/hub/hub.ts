@@ -2,7 +2,8 @@
 import type { IncomingMessage } from 'node:http';
 import type { Duplex } from 'node:stream';
 import { WebSocketServer, type WebSocket } from 'ws';
-import { LIVE_CLOSE, LiveRequest, type HouseState, type LiveFrame } from '@/lib/live/frames';
+import { LIVE_CLOSE, LiveRequest, type LiveFrame } from '@/lib/live/frames';
+import type { HouseState } from '@/lib/schema/house-state';
 import { getSessionFromHeaders, type Viewer } from '@/lib/server/auth';
 import { trustedOrigins } from '@/lib/server/origins';
 import { may } from '@/lib/server/permissions';
