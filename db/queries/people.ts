@@ -259,3 +259,8 @@ export async function findFirstOwner(holding: Holding, ownerRole: string): Promi
 function fail(): never {
   throw new Error('a row was written and did not come back');
 }
+
+export async function listHoldingIds(): Promise<string[]> {
+  const rows = await everyHolding().select({ id: organization.id }).from(organization);
+  return rows.map((row) => row.id);
+}

@@ -47,3 +47,8 @@ export function parseEnv(from: Record<string, string | undefined>): Env {
   });
   throw new EnvError(`The environment is not right: ${said.join('; ')}.`);
 }
+
+/** `next dev`, where pages need looser rules than in service. Next fills this in when it builds. */
+export function isDevelopment(): boolean {
+  return process.env.NODE_ENV === 'development';
+}

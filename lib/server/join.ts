@@ -7,7 +7,7 @@ import { isId } from '@/db/queries/reference';
 import { Refusal } from '@/db/queries/refusal';
 import type { InvitationAccept } from '@/lib/schema/people';
 import { appNow } from './app-clock';
-import { getSessionFromHeaders, hashPassword } from './auth';
+import { auth, getSessionFromHeaders, hashPassword } from './auth';
 import { Problem } from './errors';
 import { isInvitationToken } from './letters';
 
@@ -36,6 +36,9 @@ export async function join(
   }
   const joined = await acceptInvitation(id, person, new Date());
   if (joined === null) throw new Problem('not-found');
+  if (known !== null) {
+    await auth().api.setActiveOrganization({ headers, body: { organizationId: joined.holdingId } });
+  }
   const at = await appNow();
   await inHolding(joined.holdingId, (holding) =>
     addAudit(holding, { at, by: email, action: 'invitation.accept', subject: email, detail: {} }),
@@ -46,4 +49,29 @@ async function newPerson({ name, password }: z.infer<typeof InvitationAccept>) {
   if (name === undefined) throw new Refusal('name', 'Say what you are called.');
   if (password === undefined) throw new Refusal('password', 'Choose a password.');
   return { name, passwordHash: await hashPassword(password) };
+}
+
+/** What the invited person's page shows; null for a link that is wrong, used up or too old. */
+export interface InvitationFacts {
+  id: string;
+  token: string;
+  email: string;
+  role: string;
+  holdingName: string;
+  inviter: string;
+  /** A new person chooses a password; a known one signs in; one who is signed in only says yes. */
+  as: 'new' | 'known' | 'signed-in' | 'somebody-else';
+}
+
+export async function invitationFor(
+  id: string,
+  token: string,
+  viewerEmail: string | null,
+): Promise<InvitationFacts | null> {
+  const found = await openInvitation(id, token);
+  if (found === null) return null;
+  const { email, role, holdingName, inviter } = found;
+  const known = (await findUserByEmail(email)) !== null;
+  const away = viewerEmail === null ? (known ? 'known' : 'new') : 'somebody-else';
+  return { id, token, email, role, holdingName, inviter, as: viewerEmail === email ? 'signed-in' : away };
 }
