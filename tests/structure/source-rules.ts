@@ -29,7 +29,8 @@ export const RULES: Rule[] = [
       source.file === 'lib/server/env.ts'
         ? []
         : nodesOf(source, (node, at) => {
-            if (isMember(node, 'process', 'env')) return at('process.env');
+            // Next puts a constant in this one's place when it builds
+            if (isMember(node, 'process', 'env') && !isNextRuntime(node)) return at('process.env');
             if (importsFrom(node, /^(node:)?process$/)) return at('an import of process');
             return null;
           }),
@@ -123,6 +124,10 @@ function isMember(node: ts.Node, object: string, member: string): boolean {
     ts.isStringLiteralLike(node.argumentExpression) &&
     node.argumentExpression.text === member
   );
+}
+
+function isNextRuntime(node: ts.Node): boolean {
+  return ts.isPropertyAccessExpression(node.parent) && node.parent.name.text === 'NEXT_RUNTIME';
 }
 
 function importsFrom(node: ts.Node, specifier: RegExp): boolean {
