@@ -77,7 +77,7 @@ export function CoreCurve({
               strokeDasharray="6 4"
               className="stroke-warn"
             />
-            <text x={box.right} y={y(shown(floor)) - 5} textAnchor="end" className="fill-warn font-sans">
+            <text x={box.left + 4} y={y(shown(floor)) - 5} className="fill-warn font-sans">
               not drawn on under {temperature(floor, preferences, 0)}
             </text>
           </g>

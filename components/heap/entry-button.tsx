@@ -25,7 +25,7 @@ export function EntryButton({
   const [isOpen, setOpen] = useState(false);
   return (
     <>
-      <Button kind={look} onClick={() => setOpen(true)} aria-haspopup="dialog">
+      <Button kind={look} onClick={() => setOpen(true)} aria-haspopup="dialog" className="shrink-0">
         {children}
       </Button>
       {isOpen ? <EntryDialog {...target} onClose={() => setOpen(false)} /> : null}

@@ -170,7 +170,7 @@ export function heapCautions(kind: HeapKind): string[] {
   const gases =
     'Gases gather in an opened heap and over its pit: carbon dioxide, carbon monoxide, ammonia. Work upwind, never with your head in the pit, and with a certified carbon monoxide alarm in the house.';
   const hot =
-    'A core over 60 °C scalds, and steam hides where it is. Open it from the side, stand back, keep water at hand.';
+    'A hot core scalds, and its steam hides where it is. Open it from the side, stand back, keep water at hand.';
   const lifting = 'Wet bedding is heavy: lift little, from the legs, or share the work.';
   const hygiene =
     'Wear gloves and wash; dust of a dry heap carries moulds, so damp it or wear a mask. Time at temperature is a record, not an approval.';
