@@ -1,0 +1,76 @@
+import type { RuleBody } from '../rule-body';
+import type { ChannelConfig, HouseConfig } from '../types';
+
+/** A thing to look at, or to stop for, before a rule goes into force. */
+export interface Finding {
+  level: 'stop' | 'look';
+  /** Which check found it. */
+  kind: string;
+  /** What is wrong and what to do, in the words that people read; °C. */
+  text: string;
+  /** Where in the body, dotted: `band.0.low`. */
+  paths: string[];
+}
+
+/** What the configuration alone does not say. Whatever is left out is not checked. */
+export interface CheckContext {
+  /** By channel key. */
+  channels?: Record<string, ChannelFacts>;
+  /** By point key: the greatest value of the last 14 nights. */
+  greatest?: Record<string, number>;
+  /** A thermostat of last resort is wired and proved. */
+  lastResort?: boolean;
+  /** How much warmer than outdoors the house gets with the fan on for good, K. */
+  liftK?: number;
+  /** The coldest outdoors that is to be expected, °C. */
+  coldestOutdoors?: number;
+  /** How the house answers the fan: time constant, s, and rise from off for good to on for good, K. */
+  response?: { tauS: number; riseK: number };
+}
+
+export interface ChannelFacts {
+  proved?: boolean;
+  startsPerHour?: number | null;
+  volts?: number | null;
+  contactAmps?: number | null;
+  hasFallback?: boolean;
+}
+
+export interface RuleToCheck {
+  /** The rule's id, where it has one: its own version in force is not compared with it. */
+  id?: string;
+  /** Key of its channel. */
+  channel: string;
+  body: RuleBody;
+}
+
+export interface CheckInput {
+  config: HouseConfig;
+  rule: RuleToCheck;
+  channel: ChannelConfig | null;
+  context: CheckContext;
+}
+
+export const look = (kind: string, paths: string[], text: string): Finding => ({
+  level: 'look',
+  kind,
+  text,
+  paths,
+});
+export const stop = (kind: string, paths: string[], text: string): Finding => ({
+  level: 'stop',
+  kind,
+  text,
+  paths,
+});
+
+/** `7.5 °C`, without a tail of digits. */
+export const celsius = (value: number): string => `${Math.round(value * 10) / 10} °C`.replace('-', '−');
+
+/** `40 min`, `90 s`, `2 h 30 min`. */
+export function lasting(seconds: number): string {
+  if (seconds < 120) return `${seconds} s`;
+  const minutes = Math.round(seconds / 60);
+  if (minutes < 120) return `${minutes} min`;
+  return minutes % 60 === 0 ? `${minutes / 60} h` : `${Math.floor(minutes / 60)} h ${minutes % 60} min`;
+}

@@ -1,0 +1,162 @@
+/** Things to look at in what a rule hangs on: points, channel, contact, interlocks, conditions. */
+import { needsCycle } from '../interlocks';
+import type { ConditionNode } from '../rule-body';
+import { look, stop, type CheckInput, type Finding } from './finding';
+import { canNeverHold } from './never-holds';
+
+/** A contact's rating is for a resistive load; a motor draws several times its current at each start. */
+const MOTOR_SHARE = 0.5;
+
+export function wiringChecks(input: CheckInput): Finding[] {
+  return [
+    ...missingNames(input),
+    ...rings(input),
+    ...conditionChecks(input),
+    ...contactOverloaded(input),
+    ...proofAndFallback(input),
+  ];
+}
+
+function missingNames({ config, rule, channel }: CheckInput): Finding[] {
+  const known = new Set(config.points.map((one) => one.key));
+  const { point, standIns, rest, only } = rule.body;
+  const named: [string, string][] = [
+    ['point', point],
+    ...standIns.map((one, index): [string, string] => [`standIns.${index}.point`, one.point]),
+  ];
+  if (rest?.until !== undefined) named.push(['rest.until.point', rest.until.point]);
+  if (rest?.leastGain !== undefined) {
+    named.push(
+      ['rest.leastGain.intake', rest.leastGain.intake],
+      ['rest.leastGain.return', rest.leastGain.return],
+    );
+  }
+  const found = named
+    .filter(([, key]) => !known.has(key))
+    .map(([path, key]) =>
+      stop('unknown-point', [path], `There is no point “${key}” in this house. Choose another.`),
+    );
+  const facts = only === undefined ? [] : factsOf(only);
+  for (const fact of facts)
+    if (!fact.startsWith('time.') && !known.has(fact))
+      found.push(
+        stop('unknown-point', ['only'], `There is no point “${fact}” in this house. Choose another.`),
+      );
+  if (channel === null)
+    found.push(
+      stop(
+        'unknown-channel',
+        ['channel'],
+        `There is no channel “${rule.channel}” in this house. Choose another.`,
+      ),
+    );
+  return found;
+}
+
+function factsOf(node: ConditionNode): string[] {
+  if ('all' in node) return node.all.flatMap(factsOf);
+  if ('any' in node) return node.any.flatMap(factsOf);
+  if ('not' in node) return factsOf(node.not);
+  return [node.fact];
+}
+
+function rings({ config }: CheckInput): Finding[] {
+  const ring = needsCycle(config.interlocks.filter((one) => one.kind === 'needs'));
+  const found =
+    ring.length === 0
+      ? []
+      : [
+          stop(
+            'cycle',
+            [],
+            `These channels need each other in a ring, so none could start: ${ring.join(', ')}. Take out one interlock in Wiring.`,
+          ),
+        ];
+  const derived = config.points.flatMap((one) =>
+    (one.derived?.points ?? []).map((other) => ({ channel: one.key, other })),
+  );
+  const points = needsCycle(derived);
+  if (points.length > 0)
+    found.push(
+      stop(
+        'cycle',
+        [],
+        `These points are derived from each other in a ring: ${points.join(', ')}. Take one out in Wiring.`,
+      ),
+    );
+  return found;
+}
+
+function conditionChecks({ config, rule }: CheckInput): Finding[] {
+  const { only } = rule.body;
+  if (only === undefined) return [];
+  const found: Finding[] = [];
+  const ranges = Object.fromEntries(config.points.map(({ key, min, max }) => [key, { min, max }]));
+  if (canNeverHold(only, ranges))
+    found.push(
+      stop(
+        'never-holds',
+        ['only'],
+        'These conditions can never hold together, so the channel would never run. Loosen one of them.',
+      ),
+    );
+  const onGain = factsOf(only).find((fact) => isGain(config, fact));
+  if (onGain !== undefined)
+    found.push(
+      look(
+        'condition-on-gain',
+        ['only'],
+        `“${onGain}” tells what the loop brings while the fan runs; in still air it brings nothing, so the fan could never start. Use “stop if it brings less than” instead.`,
+      ),
+    );
+  return found;
+}
+
+/** A loop's return, or what is derived from both its ends. */
+function isGain(config: CheckInput['config'], key: string): boolean {
+  const point = config.points.find((one) => one.key === key);
+  if (point === undefined) return false;
+  if (point.role === 'loop-return' || point.derived?.of === 'loop-heat') return true;
+  const of = point.derived?.points ?? [];
+  return config.loops.some(
+    (one) => one.return !== null && one.intake !== null && of.includes(one.return) && of.includes(one.intake),
+  );
+}
+
+function contactOverloaded({ channel, context }: CheckInput): Finding[] {
+  const facts = channel === null ? undefined : context.channels?.[channel.key];
+  const volts = facts?.volts ?? 0;
+  const contactAmps = facts?.contactAmps ?? 0;
+  if (channel === null || channel.loadW === null || volts <= 0 || contactAmps <= 0) return [];
+  const amps = channel.loadW / volts;
+  const motor = channel.loadKind === 'motor' || channel.loadKind === 'vent';
+  const bears = contactAmps * (motor ? MOTOR_SHARE : 1);
+  if (amps <= bears) return [];
+  const derated = motor ? ` (half of its ${contactAmps} A, since a motor draws more at each start)` : '';
+  const text = `The load draws ${Math.round(amps * 100) / 100} A; its contact bears ${bears} A${derated}. Use a contactor, or another relay.`;
+  return [look('contact-overloaded', ['channel'], text)];
+}
+
+function proofAndFallback({ config, rule, channel, context }: CheckInput): Finding[] {
+  const found: Finding[] = [];
+  if (context.channels?.[rule.channel]?.proved === false)
+    found.push(
+      look(
+        'unproved',
+        ['channel'],
+        'Nobody has proved this channel: see the load run before a rule relies on it.',
+      ),
+    );
+  if (context.channels === undefined || config.house.frostLimit === null || channel === null) return found;
+  const guarded =
+    context.lastResort === true || Object.values(context.channels).some((one) => one.hasFallback === true);
+  if (!guarded)
+    found.push(
+      look(
+        'no-last-resort',
+        [],
+        'This house has a frost limit, but nothing keeps it when the network or this program fails: set a fallback on a channel, or wire a thermostat of last resort under the lowest band and prove it.',
+      ),
+    );
+  return found;
+}
