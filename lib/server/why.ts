@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { readMemory, listDecisions, switchingAt } from '@/db/queries/running';
 import { CLAIMS, type LadderStep, type State } from '@/lib/control/types';
+import { explainNow } from './explain-now';
 import type { Why } from '@/lib/schema/running';
 import type { Channel, House } from '@/lib/schema/yard-view';
 import { isoIn, isoOrNull, wireData, wireLadder } from './wire';
@@ -43,7 +44,10 @@ export async function whyThen(
   };
 }
 
-/** Why it is so now: the reason of the worker's last step, with what the switching it stands under told of the rest. */
+/**
+ * Why it is so now. The worker's last step says what holds; the core is asked for the whole ladder and what would follow,
+ * and believed as far as it comes to the same decision from what is stored.
+ */
 export async function whyNow(
   holding: Holding,
   house: House,
@@ -53,16 +57,23 @@ export async function whyNow(
   const kept = await readMemory(holding, house.id);
   const state = kept?.state?.channels.find((one) => one.key === channel.key);
   const then = await whyThen(holding, house, channel, now);
-  if (state === undefined) return then;
-  const told = then?.claim === state.claim ? then : null;
-  const ladder = (told?.ladder ?? downTo(state.claim, state.state)).map((step) =>
-    step.claim === state.claim ? { ...step, because: state.because } : step,
-  );
+  if (kept === null || state === undefined) return then;
+  const explained = await explainNow(holding, house.id, channel.id, kept, now);
+  const isSame = explained?.claim === state.claim && explained.state === state.state;
+  const told = isSame
+    ? {
+        ladder: wireLadder(house.zone, explained.ladder),
+        next: explained.next.map((one) => wireData(house.zone, one)),
+        version: explained.rule?.version ?? null,
+      }
+    : { ladder: downTo(state.claim, state.state), next: [], version: then?.version ?? null };
   return {
-    at: kept?.state?.at ?? isoIn(house.zone, now),
+    at: kept.state?.at ?? isoIn(house.zone, now),
     channel: channel.number,
-    ...{ state: state.state, claim: state.claim, until: state.until },
-    ...{ ladder, next: told?.next ?? [], version: told?.version ?? then?.version ?? null },
+    ...{ state: state.state, claim: state.claim, until: state.until, next: told.next, version: told.version },
+    ladder: told.ladder.map((step) =>
+      step.claim === state.claim ? { ...step, because: state.because } : step,
+    ),
   };
 }
 
