@@ -45,6 +45,8 @@ function makePool(holding: string): pg.Pool {
   });
   // Without a listener the loss of an idle connection would end the process.
   pool.on('error', () => undefined);
+  // Nor may that of one that is in use, between two queries of a transaction.
+  pool.on('connect', (client) => client.on('error', () => undefined));
   return pool;
 }
 

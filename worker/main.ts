@@ -13,6 +13,7 @@ import { startWorker } from './worker';
 /** EX_CONFIG: a setting is wrong, which starting again does not mend. */
 const CONFIGURATION = 78;
 const RETRY_MS = 2000;
+const STOP_LIMIT_MS = 7000;
 
 function endWith(sentence: string): never {
   console.error(sentence);
@@ -55,6 +56,8 @@ async function run(): Promise<void> {
     if (stopping) return;
     stopping = true;
     base.log.info('the worker stops; leases decide about the relays');
+    // Without its database an end may wait for ever; the supervisor kills at 8 s.
+    clock.after(STOP_LIMIT_MS, () => process.exit(1));
     sink?.close();
     await worker.stop();
     await closePools();

@@ -1,0 +1,39 @@
+// The worker itself, in this process, on the test file's database and a port of its own.
+import type { AddressInfo } from 'node:net';
+import { randomUUID } from 'node:crypto';
+import { everyHolding, everyPool } from '@/db/client';
+import { log } from '@/lib/server/log';
+import { startClock } from '@/worker/clock';
+import { Metrics } from '@/worker/metrics';
+import { startWorker } from '@/worker/worker';
+import { until } from './until';
+
+export interface OwnWorker {
+  url: string;
+  health: () => Promise<{
+    leader: boolean;
+    epoch: number | null;
+    database: boolean;
+    field: { nodes: number };
+  }>;
+  metrics: Metrics;
+  stop: () => Promise<void>;
+}
+
+/** @param waits for it to lead; a stand-by does not */
+export async function ownWorker(waits = true, instance: string = randomUUID()): Promise<OwnWorker> {
+  const metrics = new Metrics();
+  const base = {
+    clock: await startClock({ rate: 1 }),
+    log: log(),
+    db: everyHolding(),
+    pool: everyPool(),
+    metrics,
+  };
+  const worker = await startWorker(base, instance, 0);
+  const { port } = worker.server.address() as AddressInfo;
+  const url = `http://127.0.0.1:${port}`;
+  const health = async () => (await fetch(`${url}/health`)).json();
+  if (waits) await until('the worker leads', async () => (await health()).leader === true);
+  return { url, health, metrics, stop: worker.stop };
+}
