@@ -1,6 +1,7 @@
 // A database of one's own: a clone of the migrated template, in some fifty milliseconds.
 import { randomBytes } from 'node:crypto';
 import pg from 'pg';
+import { OWNER } from '../../scripts/pg.mjs';
 
 export interface OwnDatabase {
   /** as the app's role */
@@ -27,32 +28,42 @@ export function inDatabase(url: string, name: string): string {
 export async function cloneDatabase(from: {
   url: string;
   ownerUrl: string;
+  adminUrl: string;
   template: string;
   /** name that says which run the clone belongs to, where the template's does not */
   prefix?: string;
 }): Promise<OwnDatabase> {
   const run = (from.prefix ?? from.template).split('_')[0] ?? '';
   const name = `${run}_${randomBytes(6).toString('hex')}`;
-  await asOwner(from.ownerUrl, async (owner) => {
-    await owner.query('select pg_advisory_lock($1)', [LOCK_CLONES]);
-    await owner.query(`create database ${name} template ${from.template}`);
-  });
+  await copyDatabase(from.adminUrl, from.template, name);
   return {
     url: inDatabase(from.url, name),
     ownerUrl: inDatabase(from.ownerUrl, name),
-    drop: () =>
-      asOwner(from.ownerUrl, async (owner) => {
-        await owner.query(`drop database if exists ${name} with (force)`);
-      }),
+    drop: () => dropDatabases(from.adminUrl, [name]),
   };
 }
 
-async function asOwner(ownerUrl: string, work: (owner: pg.Client) => Promise<void>) {
-  const owner = new pg.Client({ connectionString: ownerUrl });
-  await owner.connect();
+/** Copies a database that nobody is connected to, as the owner's. */
+export async function copyDatabase(adminUrl: string, template: string, name: string): Promise<void> {
+  await asAdmin(adminUrl, async (admin) => {
+    await admin.query('select pg_advisory_lock($1)', [LOCK_CLONES]);
+    await admin.query(`create database ${name} template ${template} owner ${OWNER}`);
+  });
+}
+
+/** With force, which ends the connections that a part or a pool left open; only a superuser may end another role's. */
+export async function dropDatabases(adminUrl: string, names: string[]): Promise<void> {
+  await asAdmin(adminUrl, async (admin) => {
+    for (const name of names) await admin.query(`drop database if exists ${name} with (force)`);
+  });
+}
+
+export async function asAdmin<T>(adminUrl: string, work: (admin: pg.Client) => Promise<T>): Promise<T> {
+  const admin = new pg.Client({ connectionString: adminUrl });
+  await admin.connect();
   try {
-    await work(owner);
+    return await work(admin);
   } finally {
-    await owner.end();
+    await admin.end();
   }
 }

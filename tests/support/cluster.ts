@@ -1,11 +1,10 @@
 // One PostgreSQL for all tests, in a data folder of its own, with one migrated database to clone.
 import path from 'node:path';
-import pg from 'pg';
 import type { TestProject } from 'vitest/node';
 import { runMigrations } from '../../scripts/migrate.mjs';
-import { ensurePostgres } from '../../scripts/pg.mjs';
+import { ensurePostgres, OWNER } from '../../scripts/pg.mjs';
 import { ROOT } from '../../scripts/places.mjs';
-import { inDatabase } from './clone';
+import { asAdmin, dropDatabases, inDatabase } from './clone';
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -17,6 +16,8 @@ declare module 'vitest' {
 export interface Cluster {
   url: string;
   ownerUrl: string;
+  /** as superuser: makes and drops databases */
+  adminUrl: string;
   template: string;
 }
 
@@ -38,7 +39,10 @@ export default async function setup(project: TestProject) {
 
 /** Drops what this process made in the cluster. */
 export async function releaseTemplate(): Promise<void> {
-  if (made !== undefined) await dropDatabasesOf((await made).ownerUrl, process.pid);
+  if (made !== undefined) {
+    const { adminUrl } = await made;
+    await dropDatabases(adminUrl, await databases(adminUrl, `^t${process.pid}_`));
+  }
   made = undefined;
 }
 
@@ -50,60 +54,35 @@ export function makeTemplate(): Promise<Cluster> {
 
 async function newTemplate(): Promise<Cluster> {
   // DATABASE_URL is left aside on purpose: tests drop databases, which nobody wants on a server that is in use
-  const { url, ownerUrl } = await ensurePostgres({
+  const { url, ownerUrl, adminUrl } = await ensurePostgres({
     dataDir: TEST_DATA,
     databaseUrl: '',
     fast: true,
     port: TEST_PORT,
   });
-  await dropStale(ownerUrl);
+  await dropStale(adminUrl);
   const template = `t${process.pid}_template`;
-  const owner = new pg.Client({ connectionString: ownerUrl });
-  await owner.connect();
-  try {
-    await owner.query(`drop database if exists ${template} with (force)`);
-    await owner.query(`create database ${template}`);
-  } finally {
-    await owner.end();
-  }
+  await dropDatabases(adminUrl, [template]);
+  await asAdmin(adminUrl, (admin) => admin.query(`create database ${template} owner ${OWNER}`));
   await runMigrations(inDatabase(ownerUrl, template));
-  return { url, ownerUrl, template };
+  return { url, ownerUrl, adminUrl, template };
 }
 
 /** Databases of runs that were killed: their names begin with the process that made them. */
-async function dropStale(ownerUrl: string) {
-  for (const pid of await runsWithDatabases(ownerUrl))
-    if (!isAlive(pid)) await dropDatabasesOf(ownerUrl, pid);
+async function dropStale(adminUrl: string) {
+  const all = await databases(adminUrl, '^t[0-9]+_');
+  const stale = all.filter((name) => !isAlive(Number(/^t(\d+)_/.exec(name)?.[1])));
+  await dropDatabases(adminUrl, stale);
 }
 
-async function runsWithDatabases(ownerUrl: string): Promise<Set<number>> {
-  const names = await databases(ownerUrl, '^t[0-9]+_');
-  return new Set(names.map((name) => Number(/^t(\d+)_/.exec(name)?.[1])));
-}
-
-async function dropDatabasesOf(ownerUrl: string, pid: number) {
-  const names = await databases(ownerUrl, `^t${pid}_`);
-  const owner = new pg.Client({ connectionString: ownerUrl });
-  await owner.connect();
-  try {
-    for (const name of names) await owner.query(`drop database if exists ${name} with (force)`);
-  } finally {
-    await owner.end();
-  }
-}
-
-async function databases(ownerUrl: string, pattern: string): Promise<string[]> {
-  const owner = new pg.Client({ connectionString: ownerUrl });
-  await owner.connect();
-  try {
-    const { rows } = await owner.query<{ datname: string }>(
+function databases(adminUrl: string, pattern: string): Promise<string[]> {
+  return asAdmin(adminUrl, async (admin) => {
+    const { rows } = await admin.query<{ datname: string }>(
       'select datname from pg_database where datname ~ $1',
       [pattern],
     );
     return rows.map((row) => row.datname);
-  } finally {
-    await owner.end();
-  }
+  });
 }
 
 function isAlive(pid: number): boolean {

@@ -12,10 +12,10 @@ import {
   writeFileSync,
 } from 'node:fs';
 import path from 'node:path';
-import pg from 'pg';
+import type pg from 'pg';
 import { partsEnvironment } from '../../scripts/parts.mjs';
 import { BUILD, ROOT } from '../../scripts/places.mjs';
-import { cloneDatabase, inDatabase, type OwnDatabase } from './clone';
+import { asAdmin, cloneDatabase, copyDatabase, dropDatabases, inDatabase, type OwnDatabase } from './clone';
 import type { Cluster } from './cluster';
 
 export const DEMO_PASSWORD = 'only-for-tests-larkmoor';
@@ -48,17 +48,15 @@ export async function seededDatabase(cluster: Cluster, wanted: Wanted): Promise<
 }
 
 async function keptDemo(cluster: Cluster, nights: number): Promise<string> {
-  const owner = new pg.Client({ connectionString: cluster.ownerUrl });
-  await owner.connect();
-  try {
-    await owner.query('select pg_advisory_lock($1)', [LOCK_SEEDING]);
-    await dropOld(owner);
+  return asAdmin(cluster.adminUrl, async (admin) => {
+    await admin.query('select pg_advisory_lock($1)', [LOCK_SEEDING]);
+    await dropOld(admin);
     const name = `demo_${sourcesHash()}_${nights}`;
     const folder = path.join(KEPT, name);
-    const { rowCount } = await owner.query('select 1 from pg_database where datname = $1', [name]);
+    const { rowCount } = await admin.query('select 1 from pg_database where datname = $1', [name]);
     if (rowCount === 1 && existsSync(folder)) return name;
-    await owner.query(`drop database if exists ${name} with (force)`);
-    await owner.query(`create database ${name} template ${cluster.template}`);
+    await dropDatabases(cluster.adminUrl, [name]);
+    await copyDatabase(cluster.adminUrl, cluster.template, name);
     rmSync(folder, { recursive: true, force: true });
     mkdirSync(folder, { recursive: true });
     try {
@@ -68,19 +66,17 @@ async function keptDemo(cluster: Cluster, nights: number): Promise<string> {
       throw error;
     }
     return name;
-  } finally {
-    await owner.end();
-  }
+  });
 }
 
-async function dropOld(owner: pg.Client) {
-  const { rows } = await owner.query<{ datname: string }>(
+async function dropOld(admin: pg.Client) {
+  const { rows } = await admin.query<{ datname: string }>(
     "select datname from pg_database where datname ~ '^demo_'",
   );
   for (const { datname } of rows) {
     const folder = path.join(KEPT, datname);
     if (existsSync(folder) && Date.now() - statSync(folder).ctimeMs < KEPT_FOR_MS) continue;
-    await owner.query(`drop database if exists ${datname} with (force)`);
+    await admin.query(`drop database if exists ${datname} with (force)`);
     rmSync(folder, { recursive: true, force: true });
   }
 }
