@@ -28,7 +28,7 @@ export function History({ alarms, scene }: { alarms: PastAlarm[]; scene: Scene }
         const note = alarm.events.find((event) => event.kind === 'acknowledged')?.note ?? null;
         return (
           <Row key={alarm.id}>
-            <RowHead className="min-w-40 font-normal">
+            <RowHead className="min-w-40 font-normal!">
               {words.title}
               {note === null || note === '' ? null : (
                 <span className="block break-words text-[0.9rem] text-soft">{note}</span>

@@ -20,6 +20,7 @@ const OPEN = new Set([
   'POST /request-password-reset',
   'POST /reset-password',
   'POST /change-password',
+  'POST /revoke-other-sessions',
   'POST /organization/set-active',
 ]);
 
