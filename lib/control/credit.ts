@@ -87,9 +87,9 @@ export function settleSource(run: Run, index: number): void {
   memory = settleDay(memory, number, run.at);
   const spends = spentAt(memory);
   if (spends !== null) wakeAt(run, spends);
-  if (source.dailyLimitMs !== null && memory.day.slope > 0) {
+  if (source.dailyLimitMs !== null && number > 0) {
     const left = source.dailyLimitMs - usedMs(memory, run.at);
-    if (left > 0) wakeAt(run, run.at + ceilMs(left / memory.day.slope));
+    if (left > 0 && memory.day.slope > 0) wakeAt(run, run.at + ceilMs(left / memory.day.slope));
     if (memory.day.nextAt !== null) wakeAt(run, memory.day.nextAt);
   }
   if (memory !== before) run.sources[index] = memory;
