@@ -54,6 +54,10 @@ export class Hub {
     const viewer = await getSessionFromHeaders(headers).catch(() => undefined);
     if (viewer === undefined) return refuseUpgrade(socket, 503, 'Sessions cannot be looked up; try again.');
     const wanted = new URL(request.url ?? '/', 'http://worker').searchParams.get('house') ?? '';
+    // A house made a moment ago: its notification may still be on its way.
+    if (viewer !== null && this.findHouse(viewer, wanted) === undefined) {
+      await this.deps.houses.look().catch(() => undefined);
+    }
     this.sockets.handleUpgrade(request, socket, head, (ws) => this.admit(ws, viewer, wanted, headers));
   }
 

@@ -4,6 +4,7 @@ import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
 import type { Base } from '../base';
 import type { Houses } from '../control/houses';
 import type { Ingest } from '../field/ingest';
+import { refreshNights } from './nights';
 
 /** At the start the last day is reckoned afresh: what came just before the end may not have been rolled up. */
 const AFRESH_MS = 24 * 3_600_000;
@@ -24,10 +25,12 @@ export class Jobs {
   start(): void {
     void this.run('roll-ups', () => this.rollUpAfresh());
     void this.run('months', () => this.makeMonths());
+    void this.run('nights', () => this.keepNights());
     const each = (expression: string, name: string, work: () => Promise<void>) =>
       cron.schedule(expression, () => void this.run(name, work), { timezone: 'UTC' });
     this.tasks = [
       each('*/1 * * * *', 'roll-ups', () => this.rollUpTouched()),
+      each('*/5 * * * *', 'nights', () => this.keepNights()),
       each('17 3 * * *', 'months', () => this.makeMonths()),
     ];
   }
@@ -67,6 +70,13 @@ export class Jobs {
     for (const house of this.deps.houses.all()) {
       const points = house.record.points.map((point) => point.number);
       await rollUp(this.deps.pool, points, now - AFRESH_MS, now);
+    }
+  }
+
+  private async keepNights(): Promise<void> {
+    const { clock, db, houses } = this.deps;
+    for (const { id, holdingId } of houses.all()) {
+      await refreshNights({ id: holdingId, db }, id, clock.appNow());
     }
   }
 
