@@ -78,16 +78,18 @@ function firstsOf(rows: readonly ReadingRow[]): boolean[] {
   });
 }
 
-const monthsMade = new WeakMap<pg.Pool, Set<string>>();
+/** Days whose month is there: a day is told from a time by a division, a month only by the calendar. */
+const daysMade = new WeakMap<pg.Pool, Set<number>>();
+const DAY_MS = 86_400_000;
 
 async function makeMonths(pool: pg.Pool, rows: readonly ReadingRow[]): Promise<void> {
-  const made = monthsMade.get(pool) ?? new Set();
-  monthsMade.set(pool, made);
+  const made = daysMade.get(pool) ?? new Set();
+  daysMade.set(pool, made);
   for (const row of rows) {
-    const month = new Date(row.at).toISOString().slice(0, 7);
-    if (made.has(month)) continue;
+    const day = Math.floor(row.at / DAY_MS);
+    if (made.has(day)) continue;
     await makeReadingMonth(pool, row.at);
-    made.add(month);
+    made.add(day);
   }
 }
 
