@@ -185,11 +185,11 @@ export const longHouse: DemoHouse = {
         standIns: [{ point: 'house-air', offset: -0.5 }],
         band: [{ from: '00:00', low: 4, high: 7.5 }],
         rest: {
-          longestDraw: 2400,
+          longestDraw: 1200,
           least: 1800,
           most: 5400,
           until: { point: 'gate-base', level: 43 },
-          leastGain: { kelvin: 3, after: 900, intake: 'loop-intake', return: 'loop-return' },
+          leastGain: { kelvin: 3, after: 600, intake: 'loop-intake', return: 'loop-return' },
           frostMayBreak: true,
         },
         season: winter,
@@ -349,8 +349,8 @@ export const propHouse: DemoHouse = {
         point: 'bench-1',
         standIns: [{ point: 'house-air', offset: 0 }],
         band: [
-          { from: '07:00', low: 5, high: 8 },
-          { from: '18:00', low: 6, high: 9 },
+          { from: '07:00', low: 5, high: 9 },
+          { from: '18:00', low: 6, high: 10 },
         ],
         rest: {
           longestDraw: 1800,

@@ -84,7 +84,7 @@ export const beckHouse: DemoHouse = {
       body: {
         purpose: 'warm',
         point: 'house-air',
-        band: [{ from: '00:00', low: 3, high: 5.5 }],
+        band: [{ from: '00:00', low: 3, high: 6.5 }],
         rest: { longestDraw: 2400, least: 1800, frostMayBreak: true },
       },
     },
