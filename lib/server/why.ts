@@ -53,11 +53,11 @@ export async function whyNow(
   house: House,
   channel: Channel,
   now: number,
-): Promise<WhyAnswer | null> {
+): Promise<WhyAnswer> {
   const kept = await readMemory(holding, house.id);
   const state = kept?.state?.channels.find((one) => one.key === channel.key);
   const then = await whyThen(holding, house, channel, now);
-  if (kept === null || state === undefined) return then;
+  if (kept === null || state === undefined) return then ?? unstepped(house, channel, now);
   const explained = await explainNow(holding, house.id, channel.id, kept, now);
   const isSame = explained?.claim === state.claim && explained.state === state.state;
   const told = isSame
@@ -74,6 +74,15 @@ export async function whyNow(
     ladder: told.ladder.map((step) =>
       step.claim === state.claim ? { ...step, because: state.because } : step,
     ),
+  };
+}
+
+/** Control has not looked at this channel yet: it stands as its wiring lets it stand, coil off. */
+function unstepped(house: House, channel: Channel, now: number): WhyAnswer {
+  const state = channel.contact === 'NC' ? 'on' : 'off';
+  return {
+    ...{ at: isoIn(house.zone, now), channel: channel.number, state, claim: 'fail-safe', until: null },
+    ...{ ladder: downTo('fail-safe', state), next: [], version: null },
   };
 }
 

@@ -87,6 +87,8 @@ export class Asker {
 export const NOBODY = new Asker();
 
 afterAll(closePools);
+// Letters of tests that read none go nowhere: nothing listens on this port.
+process.env['MAIL_PORT'] ??= '1';
 
 let hash: string | undefined;
 

@@ -1,0 +1,63 @@
+// A holding with one of everything, so that each path of the interface has something to speak of.
+import type { Holding } from '@/db/client';
+import { raiseAlarm } from '@/db/queries/alarm';
+import type { Asker, Json } from './asker';
+import * as shown from './shown';
+
+export interface Furnished {
+  house: string;
+  ids: Record<string, string>;
+  /** The path with each brace filled by something of this holding. */
+  pathOf: (path: string) => string;
+  /** The same with ids that nothing has. */
+  missingOf: (path: string) => string;
+  /** Texts that no other holding may ever be told. */
+  traces: string[];
+}
+
+const NOTHING = '018f3f3f-0000-7000-8000-000000000000';
+/** What a list or a chart must be asked with. */
+const QUERY: Record<string, string> = { '/houses/{house}/readings': '?points=bench-1' };
+
+export async function furnish(holding: Holding, owner: Asker): Promise<Furnished> {
+  const ids: Record<string, string> = {};
+  const keep = async (name: string, path: string, body: object): Promise<Json> => {
+    const made = await owner.make(path, body);
+    ids[name] = String(made['id']);
+    return made;
+  };
+  await keep('house', '/houses', shown.house);
+  const at = '/houses/long-house';
+  await keep('node', `${at}/nodes`, shown.node);
+  for (const point of shown.otherPoints) await owner.make(`${at}/points`, point);
+  await keep('point', `${at}/points`, shown.bench);
+  await keep('source', `${at}/sources`, shown.source);
+  await owner.make(`${at}/channels`, shown.vent);
+  await keep('channel', `${at}/channels`, shown.fan);
+  await keep('loop', `${at}/loops`, shown.loop);
+  await keep('interlock', `${at}/interlocks`, shown.interlock);
+  await keep('rule', `${at}/rules`, shown.rule);
+  await keep('lockout', `${at}/lockouts`, { channel: 'ridge-vent', why: 'the arm is being mended' });
+  await keep('entry', `${at}/heap-entries`, { source: 'gate-heap', kind: 'watered', text: 'forty litres' });
+  await keep('invitation', '/invitations', { email: 'invited@larkmoor.example', role: 'grower' });
+  await keep('key', '/api-keys', { name: 'a key to end', role: 'grower' });
+  ids['member'] = String(((await owner.get('/people')).body['items'] as Json[])[0]?.['id']);
+  await raiseAlarm(holding, {
+    houseId: ids['house'] ?? null,
+    key: 'frost',
+    kind: 'frost',
+    about: { point: 'bench-1' },
+    data: { value: 0.5 },
+    at: Date.now(),
+  });
+  ids['alarm'] = String(((await owner.get('/alarms')).body['items'] as Json[])[0]?.['id']);
+  const fill = (path: string, of: (name: string) => string) =>
+    path.replace(/\{(\w+)\}/g, (_all, name: string) => of(name)) + (QUERY[path] ?? '');
+  return {
+    house: 'long-house',
+    ids,
+    pathOf: (path) => fill(path, (name) => ids[name] ?? `no ${name} was made`),
+    missingOf: (path) => fill(path, () => NOTHING),
+    traces: [...Object.values(ids), 'Long house', 'larkmoor'],
+  };
+}
