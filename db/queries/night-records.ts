@@ -168,10 +168,11 @@ function isClaim(value: string): value is Claim {
   return (CLAIMS as readonly string[]).includes(value);
 }
 
-async function recordsOf(
+/** What is known of what channels did: decisions, reports, trips, and when their nodes were lost. */
+export async function recordsOf(
   holding: Holding,
   houseId: string,
-  channels: readonly ChannelOfNights[],
+  channels: readonly Pick<ChannelOfNights, 'id' | 'nodeKey' | 'safe'>[],
   from: number,
   to: number,
 ): Promise<Map<string, ChannelRecord>> {

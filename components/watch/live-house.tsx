@@ -1,0 +1,153 @@
+'use client';
+import { QueryClient, QueryClientProvider, useQuery, useQueryClient } from '@tanstack/react-query';
+import { useRouter } from 'next/navigation';
+import { createContext, use, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
+import type { HouseState } from '@/lib/schema/house-state';
+import type { WatchAlarm, WatchView } from '@/lib/live/watch';
+import type { Preferences } from '@/lib/units/preferences';
+import { becauseInstant } from '@/lib/wording/instants';
+import type { Scene } from '@/lib/wording/scene';
+import { joinFeed } from './live-feed';
+
+/** What the browser needs of the view: all but the lines and strips, which the server draws. */
+export type LiveStart = Omit<WatchView, 'lines' | 'strips' | 'nights' | 'others'> & {
+  preferences: Preferences;
+  allowed: string[];
+  coldest: { value: number; at: number } | null;
+};
+
+export type Link = 'joining' | 'live' | 'lost';
+
+export interface LiveHouse extends LiveStart {
+  link: Link;
+  /** False: it is known that no worker leads. Null: the server does not answer, so nothing is known. */
+  controlRuns: boolean | null;
+  scene: Scene;
+  /** Asks anew how things stand, after an order was given. */
+  look: () => Promise<void>;
+}
+
+const House = createContext<LiveHouse | null>(null);
+
+export function useHouse(): LiveHouse {
+  const house = use(House);
+  if (house === null) throw new Error('useHouse stands outside LiveHouse');
+  return house;
+}
+
+type Standing = HouseState & {
+  alarms: (Omit<WatchAlarm, 'raisedAt' | 'acknowledgedAt'> &
+    Record<'raisedAt' | 'acknowledgedAt', string | number | null>)[];
+};
+
+export function LiveHouseProvider({ start, children }: { start: LiveStart; children: ReactNode }) {
+  const [client] = useState(
+    () => new QueryClient({ defaultOptions: { queries: { retry: false, refetchOnWindowFocus: true } } }),
+  );
+  return (
+    <QueryClientProvider client={client}>
+      <Follow start={start}>{children}</Follow>
+    </QueryClientProvider>
+  );
+}
+
+async function ask<Answer>(path: string): Promise<Answer> {
+  const response = await fetch(`/api/v1${path}`, { headers: { accept: 'application/json' } });
+  // health answers 503 with the very body that is asked for
+  if (!response.ok && response.status !== 503) throw new Error(`${path} answered ${response.status}`);
+  return (await response.json()) as Answer;
+}
+
+function Follow({ start, children }: { start: LiveStart; children: ReactNode }) {
+  const { slug, id } = start.house;
+  const client = useQueryClient();
+  const redraw = useRedraw(start.rate);
+  const [link, setLink] = useState<Link>('joining');
+  const key = useMemo(() => ['house', slug], [slug]);
+
+  const { data } = useQuery<Standing | null>({
+    queryKey: key,
+    queryFn: () => ask<Standing>(`/houses/${slug}/state`),
+    initialData: start.state === null ? null : { ...start.state, alarms: start.alarms },
+    staleTime: Infinity,
+    refetchInterval: link === 'live' ? 60_000 : 5000,
+  });
+  const health = useQuery<{ worker: { up: boolean } }>({
+    queryKey: ['health'],
+    queryFn: () => ask('/health'),
+    initialData: { worker: { up: start.control.runs } },
+    staleTime: Infinity,
+    refetchInterval: link === 'live' ? 6000 : 2500,
+  });
+
+  useEffect(
+    () =>
+      joinFeed(id, {
+        link: (is) => {
+          if (typeof is === 'string') return setLink(is);
+          // the session or the house has gone: the server says what to show instead
+          window.location.reload();
+        },
+        frame: (frame) => {
+          if (frame.type === 'state') {
+            client.setQueryData<Standing | null>(key, (before) => ({
+              ...frame.state,
+              alarms: before?.alarms ?? [],
+            }));
+            return;
+          }
+          redraw();
+          if (frame.type !== 'switching') void client.invalidateQueries({ queryKey: key });
+        },
+      }),
+    [client, id, key, redraw],
+  );
+
+  const alarms = useMemo(
+    () =>
+      (data?.alarms ?? []).map((alarm) => ({
+        ...alarm,
+        raisedAt: becauseInstant(alarm.raisedAt) ?? 0,
+        acknowledgedAt: becauseInstant(alarm.acknowledgedAt),
+      })),
+    [data],
+  );
+  const now = data === null ? start.now : (becauseInstant(data.at) ?? start.now);
+  const house: LiveHouse = {
+    ...start,
+    state: data,
+    alarms,
+    link,
+    controlRuns: health.isError ? null : health.data.worker.up,
+    look: () => client.invalidateQueries({ queryKey: key }),
+    scene: {
+      now,
+      zone: start.house.zone,
+      preferences: start.preferences,
+      points: start.points,
+      channels: start.channels,
+      sources: start.sources,
+    },
+  };
+  return <House value={house}>{children}</House>;
+}
+
+/** Has the server draw chart and figures anew: each minute of app time's worth, and soon after something switched. */
+function useRedraw(rate: number): () => void {
+  const router = useRouter();
+  const soon = useRef<ReturnType<typeof setTimeout>>(undefined);
+  const redraw = useMemo(
+    () => () => {
+      clearTimeout(soon.current);
+      soon.current = setTimeout(() => {
+        if (document.visibilityState === 'visible') router.refresh();
+      }, 800);
+    },
+    [router],
+  );
+  useEffect(() => {
+    const timer = setInterval(redraw, Math.max(5000, 60_000 / rate));
+    return () => clearInterval(timer);
+  }, [redraw, rate]);
+  return redraw;
+}
