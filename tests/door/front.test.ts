@@ -132,6 +132,26 @@ describe('a part that is down', () => {
   });
 });
 
+describe('a client that resets its connection', () => {
+  it('loses its pipe, and nobody else does', async () => {
+    const { url, port } = await door();
+    const rude = upgrade(port, '/field/v1');
+    const other = upgrade(port, '/field/v1');
+    await until(
+      'both are upgraded',
+      () => rude.state.text.includes('101') && other.state.text.includes('101'),
+    );
+
+    rude.socket.resetAndDestroy();
+
+    await until('the worker sees one go', () => worker.sockets.some((socket) => socket.destroyed));
+    other.socket.write('reading');
+    await until('the other pipe carries', () => other.state.text.endsWith('worker:reading'));
+    expect((await fetch(url)).status).toBe(200);
+    other.socket.destroy();
+  });
+});
+
 describe('a new leader', () => {
   it('cuts the pipes to every other worker and keeps its own', async () => {
     const { port, front } = await door();

@@ -27,6 +27,8 @@ export function createFront(options: {
   const proxy = createProxyServer({ agent, proxyTimeout: SILENCE_LIMIT_MS });
   const pipes = new Map<Duplex, { workerPort: number; inner: Socket | null }>();
 
+  // the package throws, which would end the door, unless somebody listens; a client that resets its line is a daily thing
+  proxy.on('error', (_error, _request, client) => client.destroy());
   proxy.on('proxyReqWs', (innerRequest, _request, socket) => {
     innerRequest.once('upgrade', (_response, inner) => {
       const pipe = pipes.get(socket);

@@ -80,6 +80,11 @@ async function run(settings: Settings): Promise<void> {
   for (const note of settings.notes) say(note);
 }
 
+// Nobody starts the door again, and without it no node reaches its worker: a fault of one request must not end it.
+process.on('uncaughtException', (error) => {
+  say(`The door met a fault and goes on: ${error.stack ?? error.message}`);
+});
+
 try {
   const settings = readSettings(process.argv.slice(2));
   run(settings).catch((error: unknown) => {
