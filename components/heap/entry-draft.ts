@@ -14,6 +14,8 @@ export interface MaterialDraft {
 
 export interface EntryDraft {
   at: string;
+  /** As the entry had it: a field has no seconds, and an hour that comes twice would else be changed by opening it. */
+  opened: { local: string; at: number } | null;
   text: string;
   materials: MaterialDraft[];
   water: string;
@@ -29,13 +31,21 @@ export const emptyMaterial = (id: number): MaterialDraft => ({ id, material: '',
 
 export function draftOf(entry: HeapEntry | undefined, now: number, zone: string): EntryDraft {
   if (entry === undefined)
-    return { at: toLocal(now, zone), text: '', materials: [emptyMaterial(0)], water: '', volume: '' };
+    return {
+      at: toLocal(now, zone),
+      opened: null,
+      text: '',
+      materials: [emptyMaterial(0)],
+      water: '',
+      volume: '',
+    };
   const materials = entry.materials.map(({ material, kilograms, litres }, id): MaterialDraft => {
     const unit = kilograms === undefined ? 'L' : 'kg';
     return { id, material, amount: String(kilograms ?? litres ?? ''), unit };
   });
   return {
     at: toLocal(Date.parse(entry.at), zone),
+    opened: { local: toLocal(Date.parse(entry.at), zone), at: Date.parse(entry.at) },
     text: entry.text,
     materials: [...materials, emptyMaterial(materials.length)],
     water: entry.litresOfWater === null ? '' : String(entry.litresOfWater),
@@ -58,7 +68,8 @@ export function judge(
     if (value === null) fields[path] = NOT_A_NUMBER;
     return value;
   };
-  const at = fromLocal(draft.at, target.zone);
+  const { opened } = draft;
+  const at = opened?.local === draft.at ? opened.at : fromLocal(draft.at, target.zone);
   if (at === null) fields['at'] = 'Give date and time.';
   // a minute of grace: the field has no seconds
   else if (at > now + 60_000) fields['at'] = 'That is still to come: the book tells what was done.';

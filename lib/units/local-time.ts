@@ -13,5 +13,7 @@ export function toLocal(at: number, zone: string): string {
 export function fromLocal(text: string, zone: string): number | null {
   if (!/^\d{4}-\d\d-\d\dT\d\d:\d\d(:\d\d)?$/.test(text)) return null;
   const read = DateTime.fromISO(text, { zone });
-  return read.isValid ? read.toMillis() : null;
+  if (!read.isValid) return null;
+  // which of two the library takes depends on the season, so the first is asked for
+  return Math.min(...read.getPossibleOffsets().map((one) => one.toMillis()));
 }
