@@ -77,7 +77,8 @@ export function settleCounted(run: Run, index: number): void {
   const next = { ...memory };
   if (known !== memory.known) {
     next.known = known;
-    next.knownSince = run.at;
+    // without memory it has been so for longer than anybody remembers
+    next.knownSince = memory.claim === null ? null : run.at;
   }
   if (counted !== memory.counted) {
     next.counted = counted;
