@@ -11,7 +11,7 @@ const FOLDER = path.join(ROOT, 'tests', 'bench');
 
 async function main() {
   const there = readdirSync(FOLDER)
-    .filter((file) => /^[a-z]+\.[a-z]+\.ts$/.test(file))
+    .filter((file) => /^[a-z]+(\.[a-z]+)?\.ts$/.test(file) && file !== 'support.ts')
     .map((file) => file.slice(0, -'.ts'.length))
     .sort();
   const asked = process.argv.slice(2);
