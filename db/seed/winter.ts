@@ -63,9 +63,7 @@ export const personDeeds: PersonDeed[] = [
     why: 'The heap comes back more slowly since the cold week: shorter draws, and a longer rest after each.',
     body: {
       ...gate,
-      ...(gate.rest === undefined || gate.rest === null
-        ? {}
-        : { rest: { ...gate.rest, longestDraw: 900, least: 2100 } }),
+      ...(gate.rest && { rest: { ...gate.rest, longestDraw: 900, least: 2100 } }),
     },
   },
   {
