@@ -10,7 +10,6 @@ export interface RuleStanding {
   hasDraft: boolean;
   /** Null while the worker has not told. */
   state: 'on' | 'off' | null;
-  claim: string | null;
 }
 
 /** @example "Four rules are in force. The gate-heap fan runs. One draft waits, of the bench mat." */

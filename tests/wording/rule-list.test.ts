@@ -7,7 +7,6 @@ const rule = (channelLabel: string, change: Partial<RuleStanding> = {}): RuleSta
   isInForce: true,
   hasDraft: false,
   state: 'off',
-  claim: 'idle',
   ...change,
 });
 const says = (...rules: RuleStanding[]) => plainText(rulesSentence(rules));

@@ -1,0 +1,24 @@
+import type { Metadata } from 'next';
+import { RulesView } from '@/components/rules/rules-view';
+import { KeepFresh } from '@/components/ui/keep-fresh';
+import { inHolding } from '@/db/client';
+import { readRules } from '@/db/queries/rules-page';
+import { requireViewer, viewerHouse } from '@/lib/server/next-session';
+import { shellFacts } from '@/lib/server/shell';
+
+export const metadata: Metadata = { title: 'Rules' };
+
+export default async function RulesPage({ params }: { params: Promise<{ house: string }> }) {
+  const house = await viewerHouse((await params).house);
+  const viewer = await requireViewer();
+  const [data, { preferences }] = await Promise.all([
+    inHolding(viewer.holdingId, (holding) => readRules(holding, house)),
+    shellFacts(viewer),
+  ]);
+  return (
+    <>
+      <KeepFresh everyS={15} />
+      <RulesView data={data} allowed={viewer.allowed} preferences={preferences} />
+    </>
+  );
+}

@@ -1,0 +1,92 @@
+'use client';
+import { useRouter } from 'next/navigation';
+import { useRef, useState } from 'react';
+import type { FieldPath, UseFormReturn } from 'react-hook-form';
+import { send, type Answer } from '@/components/ui/send';
+import { say } from '@/components/ui/toast';
+import type { RuleBody } from '@/lib/control/rule-body';
+import type { RuleWithVersions } from '@/lib/schema/rule-view';
+import { fieldOfPath, type RuleForm } from './form-values';
+
+/** Save the draft, put it into force, go back. A refusal stands at its field; what was typed stays. */
+export function useRuleActions({
+  rule,
+  form,
+  draftNumber,
+  bodyNow,
+  valuesOf,
+}: {
+  rule: RuleWithVersions;
+  form: UseFormReturn<RuleForm>;
+  draftNumber: number;
+  bodyNow: () => Promise<RuleBody | null>;
+  valuesOf: (body: RuleBody) => RuleForm;
+}) {
+  const router = useRouter();
+  // counted here, since the page is read anew only after the answer; another's change meanwhile is then told as one
+  const revision = useRef(rule.revision);
+  const [failure, setFailure] = useState<string | null>(null);
+
+  async function save(): Promise<Answer<unknown>> {
+    setFailure(null);
+    const body = await bodyNow();
+    if (body === null)
+      return { ok: false, status: 0, fields: {}, message: 'Some fields need another look first.' };
+    const answer = await send('PUT', `/rules/${rule.id}/draft`, body, `"${revision.current}"`);
+    if (answer.ok) {
+      revision.current += 1;
+      form.reset(form.getValues());
+      router.refresh();
+      return answer;
+    }
+    for (const [path, message] of Object.entries(answer.fields))
+      form.setError(
+        fieldOfPath(path) as FieldPath<RuleForm>,
+        { type: 'said', message },
+        { shouldFocus: true },
+      );
+    setFailure(
+      answer.status === 412
+        ? 'Somebody saved this rule since you opened it. Copy what you need, then reload the page to see theirs.'
+        : answer.message,
+    );
+    return answer;
+  }
+
+  async function force(why: string, acceptUnproved: boolean): Promise<Answer<unknown>> {
+    if (form.formState.isDirty || rule.draft === null) {
+      const saved = await save();
+      if (!saved.ok) return saved;
+    }
+    const consent = acceptUnproved ? { acceptUnproved } : {};
+    const answer = await send(
+      'POST',
+      `/rules/${rule.id}/force`,
+      { why, ...consent },
+      `"${revision.current}"`,
+    );
+    if (!answer.ok) return answer;
+    revision.current += 1;
+    router.refresh();
+    say(`Version ${draftNumber} is in force.`);
+    return answer;
+  }
+
+  async function goBack(number: number): Promise<string | null> {
+    const answer = await send(
+      'POST',
+      `/rules/${rule.id}/go-back`,
+      { version: number },
+      `"${revision.current}"`,
+    );
+    if (!answer.ok) return answer.message;
+    revision.current += 1;
+    const older = rule.versions.find((version) => version.number === number);
+    if (older !== undefined) form.reset(valuesOf(older.body));
+    router.refresh();
+    say(`Version ${number} is the draft now. Look at it, then put it into force.`);
+    return null;
+  }
+
+  return { save, force, goBack, failure };
+}
