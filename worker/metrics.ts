@@ -3,6 +3,7 @@
 const HELP = {
   readings_stored_total: 'Readings stored.',
   readings_duplicate_total: 'Readings that were there already.',
+  readings_commits_total: 'Transactions in which readings were committed.',
   readings_refused_total: 'Records of packs refused, each with its reason.',
   frames_malformed_total: 'Frames of nodes that could not be read.',
   commands_sent_total: 'Commands sent to nodes, renewals among them.',

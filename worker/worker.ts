@@ -1,5 +1,6 @@
 /** The worker put together: field, control, alarms, live feed and jobs round one clock, one lead and one database. */
 import type http from 'node:http';
+import { tellOfGap } from './alarms/gap';
 import { AlarmKeeper } from './alarms/keeper';
 import type { Base } from './base';
 import { Journal } from './control/journal';
@@ -51,6 +52,7 @@ export async function startWorker(base: Base, instance: string, port: number): P
     onLead: async (formerHeartbeatAt) => {
       await houses.lead(formerHeartbeatAt);
       jobs.start();
+      await tellOfGap(base, formerHeartbeatAt);
     },
     onLost: () => {
       jobs.stop();

@@ -26,6 +26,7 @@ export class Ingest {
       weigh: (rows) => Math.max(rows.length, 1),
       write: async (packs) => {
         const flags = await storeReadings(base.pool, packs.flat());
+        base.metrics.add('readings_commits_total');
         let first = 0;
         return packs.map((rows) => flags.slice(first, (first += rows.length)));
       },
