@@ -37,7 +37,9 @@ export function silenceIn(
 ): number | null {
   let last = spokeAt(memory);
   if (last === -Infinity) return null;
-  const times = seen === undefined ? [] : [...(seen.between ?? []), seen.at];
+  // what was seen before has been judged: an implausible reading then fills no silence now
+  if (seen === undefined || seen.at <= (memory.lastAt ?? -Infinity)) return null;
+  const times = [...(seen.between ?? []), seen.at];
   for (const time of times) {
     if (time <= last) continue;
     if (time - last > point.staleMs) return last + point.staleMs + 1;
@@ -48,7 +50,8 @@ export function silenceIn(
 
 /** When a point falls silent as far as the times of all its readings tell, those known only now included. */
 export function silenceAhead(point: PlanPoint, memory: PointMemory, seen: ObservedPoint | undefined): number {
-  const newest = Math.max(spokeAt(memory), seen?.at ?? -Infinity);
+  const isNew = seen !== undefined && seen.at > (memory.lastAt ?? -Infinity);
+  const newest = isNew ? Math.max(spokeAt(memory), seen.at) : spokeAt(memory);
   return silenceIn(point, memory, seen) ?? newest + point.staleMs + 1;
 }
 

@@ -40,7 +40,7 @@ async function library(conditions: ConditionTree, values: Record<string, FactVal
   const engine = new Engine();
   // the library's own types want at least one more field that it does not need
   engine.addRule({
-    conditions: conditions as TopLevelCondition & ConditionProperties,
+    conditions: conditions,
     event: { type: 'met' },
   });
   const { events } = await engine.run(values);

@@ -41,7 +41,7 @@ function needs(run: Run, channel: number): InterlockVerdict | null {
     const other = entry(run.channels, lock.other);
     const leaves = run.demandState[lock.other] === 'off' || run.interlocked[lock.other]?.wants === 'off';
     if (leaves || other.known !== 'on') return verdict(run, lock, channel, null);
-    const readyAt = (other.knownSince ?? run.at) + lock.delayMs;
+    const readyAt = other.knownSince === null ? run.at : other.knownSince + lock.delayMs;
     if (run.at >= readyAt) continue;
     wakeAt(run, readyAt);
     return verdict(run, lock, channel, readyAt);
