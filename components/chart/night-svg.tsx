@@ -131,25 +131,6 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
           {label.text}
         </text>
       ))}
-      {layout.strips.map((strip) => (
-        <g key={strip.key}>
-          <line
-            x1={x0}
-            x2={x1}
-            y1={strip.y + frame.stripHeight}
-            y2={strip.y + frame.stripHeight}
-            className="stroke-line"
-          />
-          <Strip id={id} boxes={strip.boxes} y={strip.y} height={frame.stripHeight} />
-          <text
-            x={frame.namesAbove ? x0 : x1 + 6}
-            y={frame.namesAbove ? strip.y - 4 : strip.y + frame.stripHeight - 2}
-            className="fill-ink text-[12px]"
-          >
-            {strip.name.length > 17 && !frame.namesAbove ? `${strip.name.slice(0, 15)}…` : strip.name}
-          </text>
-        </g>
-      ))}
       {layout.now === null ? null : (
         <>
           <line
@@ -170,6 +151,28 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
           </text>
         </>
       )}
+      {layout.strips.map((strip) => (
+        <g key={strip.key}>
+          <line
+            x1={x0}
+            x2={x1}
+            y1={strip.y + frame.stripHeight}
+            y2={strip.y + frame.stripHeight}
+            className="stroke-line"
+          />
+          <Strip id={id} boxes={strip.boxes} y={strip.y} height={frame.stripHeight} />
+          <text
+            x={frame.namesAbove ? x0 : x1 + 6}
+            y={frame.namesAbove ? strip.y - 4 : strip.y + frame.stripHeight - 2}
+            className="fill-ink text-[12px]"
+            stroke="var(--sheet)"
+            strokeWidth="3"
+            paintOrder="stroke"
+          >
+            {strip.name.length > 17 && !frame.namesAbove ? `${strip.name.slice(0, 15)}…` : strip.name}
+          </text>
+        </g>
+      ))}
       <line x1={x0} x2={x1} y1={yBottom} y2={yBottom} className="stroke-line" />
     </svg>
   );

@@ -44,7 +44,7 @@ export function Figures({ rows }: { rows: { name: ReactNode; value: ReactNode; n
       {rows.map((row, place) => (
         <div key={place} className="flex flex-wrap items-baseline justify-between gap-x-4 py-2">
           <dt>{row.name}</dt>
-          <dd className="text-right font-mono text-[0.95rem]">
+          <dd className="ml-auto text-right font-mono text-[0.95rem]">
             {row.value}
             {row.note === undefined ? null : (
               <span className="block font-sans text-[0.85rem] text-soft">{row.note}</span>

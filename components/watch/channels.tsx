@@ -22,7 +22,7 @@ export function Channels() {
   const mayHand = allowed.includes('channel.hand');
   const bar = !mayHand
     ? 'Hand, off and auto are the grower’s and the owner’s; your role may look, and prove channels under Wiring.'
-    : controlRuns === null || controlRuns === false
+    : controlRuns !== true
       ? 'Nothing can be commanded while control does not answer.'
       : null;
   return (

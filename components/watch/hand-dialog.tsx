@@ -64,7 +64,7 @@ export function HandDialog({
     },
     frostLimit: house.house.frostLimit,
     coreUnderFloor:
-      isUnderFloor && source?.coreFloor != null
+      isUnderFloor && source !== undefined && source.coreFloor !== null
         ? {
             floor: source.coreFloor,
             value: house.state?.points.find((one) => one.key === source.core)?.value ?? null,

@@ -31,7 +31,11 @@ export function NightFigures({
     ...drawn.flatMap((night) => [
       {
         name: `Heat from ${nameOf(night.source)}`,
-        value: night.heat === null ? UNKNOWN : energy(night.heat.kWh, 1, night.heat.sd),
+        // a night without a draw is no estimate
+        value:
+          night.heat === null
+            ? UNKNOWN
+            : energy(night.heat.kWh, 1, night.onSeconds === 0 ? null : night.heat.sd),
         ...(night.heat === null ? { note: NO_HEAT[night.missing.heat ?? ''] ?? '' } : {}),
       },
       {
@@ -52,7 +56,12 @@ export function NightFigures({
     },
     ...(house.frostLimit === null
       ? []
-      : [{ name: `Under ${temperature(house.frostLimit, preferences)}`, value: duration(under) }]),
+      : [
+          {
+            name: `Under ${temperature(house.frostLimit, preferences)}`,
+            value: lowest === null ? UNKNOWN : duration(under),
+          },
+        ]),
   ];
   return (
     <Panel

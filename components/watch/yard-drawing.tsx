@@ -33,7 +33,7 @@ export function Section({ facts, preferences }: { facts: YardFacts; preferences:
       <rect x="0" y="136" width="352" height="128" rx="4" className="fill-earth" />
       <House facts={facts} short={short} />
       {ground === null ? null : <Ground ground={ground} short={short} preferences={preferences} />}
-      {heap === null ? null : <Heap heap={heap} short={short} preferences={preferences} />}
+      {heap === null ? null : <Heap heap={heap} short={short} />}
       <text x="156" y="46" className={`fill-outdoors text-[19px] ${figure}`}>
         {short(facts.outdoors)}
       </text>

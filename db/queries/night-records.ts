@@ -1,18 +1,14 @@
 /** What a night is made of: the house's parts as they stand, and what was kept of readings, decisions and reports. */
-import { and, asc, desc, eq, gte, inArray, isNull, lt, or, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import type { AnyPgColumn } from 'drizzle-orm/pg-core';
 import type { Holding } from '@/db/client';
-import { switching } from '@/db/schema/running';
-import { alarm } from '@/db/schema/watch';
 import { calibration, channel, house, loop, node, point, source } from '@/db/schema/yard';
 import type { NightChannel, NightInput } from '@/lib/analysis/nights';
 import type { Night } from '@/lib/analysis/night';
 import type { Series } from '@/lib/analysis/series';
-import type { ChannelRecord } from '@/lib/analysis/spans';
-import { CLAIMS, type Claim } from '@/lib/control/types';
+import { recordsOf } from './channel-records';
 import type { Calibration } from './plan';
 import { correct } from './reading';
-import { listDecisions, listRelayReports } from './running';
 
 export interface YardOfNights {
   house: NightInput['house'] & { id: string };
@@ -164,89 +160,33 @@ export async function nightInputs(
   );
 }
 
-function isClaim(value: string): value is Claim {
-  return (CLAIMS as readonly string[]).includes(value);
-}
-
-/** What is known of what channels did: decisions, reports, trips, and when their nodes were lost. */
-export async function recordsOf(
-  holding: Holding,
-  houseId: string,
-  channels: readonly Pick<ChannelOfNights, 'id' | 'nodeKey' | 'safe'>[],
-  from: number,
-  to: number,
-): Promise<Map<string, ChannelRecord>> {
-  const ids = channels.map((one) => one.id);
-  const decisions = await listDecisions(holding, ids, from, to);
-  const reports = await listRelayReports(holding, ids, from, to);
-  const trips = await tripsOf(holding, ids, from, to);
-  const lost = await nodesLost(holding, houseId, from, to);
-  const mine = <T extends { channelId: string }>(rows: readonly T[], id: string) =>
-    rows.filter((row) => row.channelId === id);
-  return new Map(
-    channels.map((one) => [
-      one.id,
-      {
-        decisions: mine(decisions, one.id).flatMap((row) =>
-          isClaim(row.claim) ? [{ at: row.at, state: row.state, claim: row.claim }] : [],
-        ),
-        reports: mine(reports, one.id),
-        trips: mine(trips, one.id),
-        silences: lost.filter((silence) => silence.node === one.nodeKey),
-        safe: one.safe,
-      },
-    ]),
-  );
-}
-
-/** Lease trips from `from` to before `to`, ascending, led by each channel's last one before. */
-async function tripsOf(holding: Holding, ids: string[], from: number, to: number) {
-  if (ids.length === 0) return [];
-  const mine = and(
-    eq(switching.holdingId, holding.id),
-    inArray(switching.channelId, ids),
-    isNull(switching.number),
-  );
-  const before = await holding.db
-    .selectDistinctOn([switching.channelId], {
-      channelId: switching.channelId,
-      at: switching.at,
-      state: switching.to,
-    })
-    .from(switching)
-    .where(and(mine, lt(switching.at, new Date(from))))
-    .orderBy(switching.channelId, desc(switching.at));
-  const during = await holding.db
-    .select({ channelId: switching.channelId, at: switching.at, state: switching.to })
-    .from(switching)
-    .where(and(mine, gte(switching.at, new Date(from)), lt(switching.at, new Date(to))))
-    .orderBy(asc(switching.at));
-  return [...before, ...during].map((row) => ({ ...row, at: row.at.getTime() }));
-}
-
-/** When nodes of a house were lost: what the alarms of their links say. */
-async function nodesLost(holding: Holding, houseId: string, from: number, to: number) {
-  const rows = await holding.db
-    .select({ about: alarm.about, raisedAt: alarm.raisedAt, clearedAt: alarm.clearedAt })
-    .from(alarm)
-    .where(
-      and(
-        eq(alarm.holdingId, holding.id),
-        eq(alarm.houseId, houseId),
-        eq(alarm.kind, 'node-lost'),
-        lt(alarm.raisedAt, new Date(to)),
-        or(isNull(alarm.clearedAt), gte(alarm.clearedAt, new Date(from))),
-      ),
-    )
-    .orderBy(asc(alarm.raisedAt));
-  return rows.map((row) => ({
-    node: row.about.node ?? '',
-    from: row.raisedAt.getTime(),
-    to: row.clearedAt?.getTime() ?? null,
-  }));
-}
-
 const ROLES_OF_EVERY_NIGHT = ['house-air', 'bench', 'outdoors'];
+
+function pointsOfNights(yard: YardOfNights): PointOfNights[] {
+  const named = new Set([
+    ...yard.sources.flatMap((one) => [one.core, one.base]),
+    ...yard.channels.flatMap((one) => [one.loop?.intake, one.loop?.return]),
+  ]);
+  return yard.points.filter((one) => ROLES_OF_EVERY_NIGHT.includes(one.role) || named.has(one.key));
+}
+
+function numbersOf(points: readonly PointOfNights[]) {
+  return sql.join(
+    points.map((one) => sql`${one.number}`),
+    sql`, `,
+  );
+}
+
+/** How many good readings a whole night would be made of by now. */
+export async function countReadings(holding: Holding, yard: YardOfNights, night: Night): Promise<number> {
+  const points = pointsOfNights(yard);
+  if (points.length === 0) return 0;
+  const { rows } = await holding.db.execute<{ count: number }>(sql`
+    select count(*)::int as count from reading
+    where point in (${numbersOf(points)}) and at >= ${new Date(night.from)} and at < ${new Date(night.to)}
+      and quality = 0`);
+  return rows[0]?.count ?? 0;
+}
 
 /** Good readings of the points that nights need, corrected. Plain rows: a night of a house has some 30 000. */
 async function seriesOf(
@@ -255,11 +195,7 @@ async function seriesOf(
   from: number,
   to: number,
 ): Promise<Map<string, Series>> {
-  const named = new Set([
-    ...yard.sources.flatMap((one) => [one.core, one.base]),
-    ...yard.channels.flatMap((one) => [one.loop?.intake, one.loop?.return]),
-  ]);
-  const wanted = yard.points.filter((one) => ROLES_OF_EVERY_NIGHT.includes(one.role) || named.has(one.key));
+  const wanted = pointsOfNights(yard);
   const series = new Map<number, { from: PointOfNights; line: Series }>(
     wanted.map((one) => {
       const { key, name, role, holdS } = one;
@@ -267,13 +203,10 @@ async function seriesOf(
     }),
   );
   if (wanted.length > 0) {
-    const numbers = sql.join(
-      wanted.map((one) => sql`${one.number}`),
-      sql`, `,
-    );
     const { rows } = await holding.db.execute<{ point: string; at: number; value: number }>(sql`
       select point, (extract(epoch from at) * 1000)::float8 as at, value from reading
-      where point in (${numbers}) and at >= ${new Date(from)} and at < ${new Date(to)} and quality = 0
+      where point in (${numbersOf(wanted)}) and at >= ${new Date(from)} and at < ${new Date(to)}
+        and quality = 0
       order by point, at`);
     for (const row of rows) {
       const one = series.get(Number(row.point));

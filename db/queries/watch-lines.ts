@@ -1,10 +1,10 @@
-/** The temperatures of a night as lines, and what its loads did as strips. */
+/** The temperatures of a night as lines; what its loads did as strips. */
 import type { Holding } from '@/db/client';
 import type { Night } from '@/lib/analysis/night';
 import { channelSpans } from '@/lib/analysis/spans';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { WatchLine, WatchLoop, WatchStrip } from '@/lib/live/watch';
-import { recordsOf } from './night-records';
+import { recordsOf } from './channel-records';
 import type { HouseRecord } from './plan';
 import { readSeries, type SteppedSeries } from './reading';
 
@@ -51,7 +51,7 @@ export async function readLines(
     const line = lineOf(series.get(number), now);
     const newest = state?.points.find((point) => point.key === key);
     // the line ends at the very figure that the sentence says
-    const at = newest?.at == null ? null : Date.parse(newest.at);
+    const at = typeof newest?.at === 'string' ? Date.parse(newest.at) : null;
     if (
       at !== null &&
       typeof newest?.value === 'number' &&

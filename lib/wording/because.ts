@@ -33,11 +33,7 @@ export function isClaim(value: string): value is Claim {
 export function becauseWords(claim: string, because: unknown, scene: Scene): string {
   if (!isClaim(claim)) return '';
   const reason = withInstants(because);
-  const data = typeof reason === 'object' && reason !== null ? reason : {};
-  return wordsOf(claim, data, scene);
-}
-
-/** A reason kept by an older release may lack fields, so every field is optional to the words. */
-function wordsOf<Name extends Claim>(claim: Name, data: object, scene: Scene): string {
-  return WORDS[claim](data as Partial<Reasons[Name]>, scene);
+  // a reason kept by an older release may lack fields, so every field is optional to the words
+  const words: (reason: object, scene: Scene) => string = WORDS[claim];
+  return words(typeof reason === 'object' && reason !== null ? reason : {}, scene);
 }

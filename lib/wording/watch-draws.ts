@@ -27,10 +27,8 @@ export function drawSentence(standing: HouseStanding, scene: Scene): Phrase[] {
 
 /** "rests until 06:06", "runs for the band", "is off" … */
 function doing(channel: StandingChannel, scene: Scene): Phrase[] {
-  const field = (name: string) =>
-    typeof channel.because === 'object' && channel.because !== null
-      ? Object.getOwnPropertyDescriptor(channel.because, name)?.value
-      : undefined;
+  const reason = typeof channel.because === 'object' && channel.because !== null ? channel.because : {};
+  const field = (name: string): unknown => Object.getOwnPropertyDescriptor(reason, name)?.value;
   const till = (name: string) => timeWords(becauseInstant(field(name)), scene);
   const runs = channel.state === 'on';
   if (channel.mode === 'locked') return [coloured('is locked out', 'strong')];
