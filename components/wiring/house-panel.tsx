@@ -1,3 +1,4 @@
+import { ButtonLink } from '@/components/ui/button';
 import { Figures, Panel } from '@/components/ui/panel';
 import type { House } from '@/lib/schema/yard-view';
 import { decimal, length, temperature } from '@/lib/units/format';
@@ -6,7 +7,15 @@ import { LAST_RESORT_CAUTION } from '@/lib/wording/wiring-parts';
 import { ChangeButton } from './editing';
 
 /** Where the house stands, and at what cold it acts and wakes somebody. */
-export function HousePanel({ house, preferences }: { house: House; preferences: Preferences }) {
+export function HousePanel({
+  house,
+  preferences,
+  mayAdd,
+}: {
+  house: House;
+  preferences: Preferences;
+  mayAdd: boolean;
+}) {
   const degree = (value: number, plus: string, minus: string) =>
     `${decimal(Math.abs(value), 2)}° ${value < 0 ? minus : plus}`;
   return (

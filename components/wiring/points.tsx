@@ -32,16 +32,26 @@ function PointRow({
   point,
   now,
   reportEvery,
+  appNow,
   preferences,
 }: {
   point: Point;
   now: StatePoint | undefined;
   reportEvery: number | undefined;
+  /** Epoch ms. */
+  appNow: number;
   preferences: Preferences;
 }) {
-  const doubt = now === undefined ? null : qualityWords(now.quality, now.why);
   const range = (value: number | null) => (value === null ? '' : pointValue(value, point.unit, preferences));
   const stale = point.staleAfter ?? (reportEvery === undefined ? null : reportEvery * 3);
+  const isOld =
+    stale !== null && now !== undefined && now.at !== null && appNow - Date.parse(now.at) > stale * 1000;
+  // the worker says so itself; where it stands still, its last word has grown old too
+  const doubt = isOld
+    ? qualityWords('bad', 'silent')
+    : now === undefined
+      ? null
+      : qualityWords(now.quality, now.why);
   return (
     <Row>
       <RowHead className="min-w-40">
@@ -95,11 +105,14 @@ export function Points({
   points,
   states,
   nodes,
+  now,
   preferences,
 }: {
   points: Point[];
   states: StatePoint[];
   nodes: { key: string; reportEvery: number }[];
+  /** Epoch ms of app time. */
+  now: number;
   preferences: Preferences;
 }) {
   return (
@@ -120,6 +133,7 @@ export function Points({
               point={point}
               now={states.find((one) => one.key === point.key)}
               reportEvery={nodes.find((one) => one.key === point.node)?.reportEvery}
+              appNow={now}
               preferences={preferences}
             />
           ))}

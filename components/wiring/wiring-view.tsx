@@ -2,7 +2,7 @@ import { Notice } from '@/components/ui/notice';
 import { Sentence } from '@/components/ui/sentence';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { Preferences } from '@/lib/units/preferences';
-import { wiringSentence } from '@/lib/wording/wiring';
+import { LEASE_S, wiringSentence } from '@/lib/wording/wiring';
 import { Channels } from './channels';
 import { WiringEditing } from './editing';
 import type { Yard } from './forms/options';
@@ -17,6 +17,9 @@ export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;
   state: HouseState | null;
 }
+
+const isHeard = (node: { lastHeardAt: string | null }, now: number) =>
+  node.lastHeardAt !== null && now - Date.parse(node.lastHeardAt) <= LEASE_S * 1000;
 
 /** The page Wiring: how it stands in a sentence, the boards, then everything that is wired. */
 export function WiringView({
@@ -68,7 +71,13 @@ export function WiringView({
           </Notice>
         )}
         {nodes.map((node) => (
-          <RelayBoard key={node.id} node={node} channels={channels} states={state?.channels ?? []} />
+          <RelayBoard
+            key={node.id}
+            node={node}
+            channels={channels}
+            // what a silent node last said is no longer true: its leases have run out
+            states={isHeard(node, now) ? (state?.channels ?? []) : []}
+          />
         ))}
         <Channels
           channels={channels}
@@ -79,7 +88,13 @@ export function WiringView({
           hasNode={nodes.some((node) => node.channels > 0)}
         />
         <Nodes nodes={nodes} kept={nodeStatus} zone={zone} now={now} preferences={preferences} />
-        <Points points={points} states={state?.points ?? []} nodes={nodes} preferences={preferences} />
+        <Points
+          points={points}
+          states={state?.points ?? []}
+          nodes={nodes}
+          now={now}
+          preferences={preferences}
+        />
         <div className="grid grid-cols-1 gap-5 xl:grid-cols-2">
           <Sources
             sources={sources}
@@ -90,7 +105,7 @@ export function WiringView({
           />
           <div className="flex min-w-0 flex-col gap-5">
             <Interlocks interlocks={yard.interlocks} channels={channels} />
-            <HousePanel house={house} preferences={preferences} />
+            <HousePanel house={house} preferences={preferences} mayAdd={allowed.includes('yard.write')} />
           </div>
         </div>
         <FormerLockOuts

@@ -1,0 +1,47 @@
+'use client';
+import { useRouter } from 'next/navigation';
+import { useEffect } from 'react';
+import { Button } from '@/components/ui/button';
+import { HouseCreate } from '@/lib/schema/yard';
+import type { Preferences } from '@/lib/units/preferences';
+import { houseGroups } from './forms/house';
+import { SpecFields } from './spec-fields';
+import { useSpecForm } from './use-spec-form';
+
+/** A house from nothing: where it stands and at what cold it acts. Its wiring comes next. */
+export function NewHouse({ preferences }: { preferences: Preferences }) {
+  const router = useRouter();
+  const { form, submit, failure } = useSpecForm({
+    groups: houseGroups,
+    schema: HouseCreate,
+    entity: { altitude: 0, frostLimit: 3, frostAlarm: 2 },
+    preferences,
+    method: 'POST',
+    path: '/houses',
+    onAnswer: (answer) => {
+      const slug = typeof answer === 'object' && answer !== null ? Reflect.get(answer, 'slug') : null;
+      router.push(typeof slug === 'string' ? `/${slug}/wiring` : '/');
+      router.refresh();
+    },
+  });
+  useEffect(() => {
+    // only the browser knows it, so it comes after the first paint, and never over what somebody typed
+    if (form.getValues('zone') === '')
+      form.setValue('zone', Intl.DateTimeFormat().resolvedOptions().timeZone);
+  }, [form]);
+  return (
+    <form
+      noValidate
+      onSubmit={submit}
+      className="flex max-w-2xl flex-col gap-4 rounded-lg border border-line bg-sheet p-4"
+    >
+      <SpecFields groups={houseGroups} form={form} preferences={preferences} />
+      <p role="alert" className="font-semibold text-alarm empty:hidden">
+        {failure}
+      </p>
+      <Button type="submit" kind="primary" className="self-start" busy={form.formState.isSubmitting}>
+        Add the house
+      </Button>
+    </form>
+  );
+}
