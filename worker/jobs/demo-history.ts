@@ -250,7 +250,7 @@ class History {
     for (const { holding, record } of runs) await refreshNights(holding, record.id, to);
     saveWorld(stateFile, this.world);
     const { readings, switchings, alarms } = this.kept.counts;
-    console.log(`History: ${readings} readings, ${switchings} switchings and ${alarms} alarms kept.`);
+    console.log(`History kept. Readings: ${readings}. Switchings: ${switchings}. Alarms: ${alarms}.`);
   }
 }
 
