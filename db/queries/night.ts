@@ -8,12 +8,12 @@ import { night as nightTable } from '@/db/schema/study';
 import { house, source } from '@/db/schema/yard';
 import { type Night, nightOf, nightsBetween } from '@/lib/analysis/night';
 import { type NightSummary, SUMMARY_VERSION, summarise } from '@/lib/analysis/nights';
-import { firstKnown, nightInputs, yardOfNights, type YardOfNights } from './night-records';
+import { countReadings, firstKnown, nightInputs, yardOfNights, type YardOfNights } from './night-records';
 
 /** How old a lasting night's summary may be when somebody asks for it, ms of app time. */
 const FRESH_MS = 30_000;
-/** After its noon a node may still send what it kept while it was cut off. */
-const LATE_MS = 6 * 3_600_000;
+/** A node that was cut off sends later what it kept, a day's worth at least: so far back nights are looked at again. */
+const LATE_MS = 3 * 86_400_000;
 
 export interface NightAsk {
   /** Slugs; left out, all sources of the house. */
@@ -109,11 +109,29 @@ async function bringUp(holding: Holding, houseId: string, nowMs: number): Promis
 }
 
 /**
- * Makes every night of a house that is missing, lasts, or ended so short a while ago that late readings may have come.
+ * Makes every night of a house that is missing or lasts, and those of the last days for which readings came in late.
  * @returns how many nights were made
  */
 export async function refreshNights(holding: Holding, houseId: string, nowMs: number): Promise<number> {
-  return makeDue(holding, houseId, nowMs, (night, madeAt) => madeAt < Math.min(night.to + LATE_MS, nowMs));
+  const made = await makeDue(holding, houseId, nowMs, (night, madeAt) => madeAt < Math.min(night.to, nowMs));
+  const late = await nightsGrown(holding, houseId, nowMs);
+  return made + (late.length === 0 ? 0 : await remakeNights(holding, houseId, late, nowMs));
+}
+
+/** Whole nights of the last days that have more readings by now than they were made of. */
+async function nightsGrown(holding: Holding, houseId: string, nowMs: number): Promise<Night[]> {
+  const yard = await yardOfNights(holding, houseId);
+  if (yard === null) return [];
+  const grown: Night[] = [];
+  for (const night of nightsBetween(nowMs - LATE_MS, nowMs, yard.house.zone)) {
+    if (night.to > nowMs) continue;
+    const { rows } = await holding.db.execute<{ readings: number | null }>(sql`
+      select min((body->>'readings')::int) as readings from night
+      where holding_id = ${holding.id} and house_id = ${houseId} and night = ${night.night}`);
+    const kept = rows[0]?.readings;
+    if (kept != null && kept < (await countReadings(holding, yard, night))) grown.push(night);
+  }
+  return grown;
 }
 
 /** Makes nights anew, whatever is kept: after an import, or when their making has changed. */
@@ -195,7 +213,8 @@ async function make(
     .onConflictDoUpdate({
       target: [nightTable.holdingId, nightTable.sourceId, nightTable.night],
       set: { body: sql`excluded.body`, madeAt: sql`excluded.made_at` },
-      // two readers may make the same night at once: the later look stays
-      setWhere: sql`${nightTable.madeAt} <= excluded.made_at`,
+      // two may make the same night at once: what saw more readings stays, of equals the later look
+      setWhere: sql`coalesce((${nightTable.body}->>'readings')::int, 0) < (excluded.body->>'readings')::int
+        or ${nightTable.madeAt} <= excluded.made_at`,
     });
 }

@@ -69,6 +69,8 @@ export interface NightSummary {
   recovery: null;
   /** Share of the time in which the points that matter here had good readings, 0 to 1. */
   coverage: number;
+  /** Good readings that it was made of: where more are kept by now, it is due anew. */
+  readings: number;
   missing: Partial<Record<'heat' | 'electricity' | 'lowest' | 'belowFrostLimit' | 'recovery', Missing>>;
   strips: { channel: number; label: string; spans: StripSpan[] }[];
 }
@@ -125,6 +127,7 @@ export function summarise(input: NightInput): NightSummary {
     coreAtDawn: atDawn && { value: round(atDawn.value, 2), at: atDawn.at },
     recovery: null,
     coverage: round(coverage(input, ofHouse, to), 4),
+    readings: readingsOf(input, to),
     missing: {
       ...('why' in heat ? { heat: heat.why } : {}),
       ...('why' in electricity ? { electricity: electricity.why } : {}),
@@ -138,6 +141,13 @@ export function summarise(input: NightInput): NightSummary {
       spans: stripOf(spans[i] ?? [], night.from),
     })),
   };
+}
+
+function readingsOf({ night, points }: NightInput, to: number): number {
+  let count = 0;
+  for (const { good } of points.values())
+    for (const { at } of good) if (at >= night.from && at < to) count += 1;
+  return count;
 }
 
 function stripOf(spans: readonly Span[], fromMs: number): StripSpan[] {

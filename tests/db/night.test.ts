@@ -155,6 +155,15 @@ describe('nights in the database', () => {
     expect((await gate()).map((night) => night.lowest?.value)).toEqual([3.5, 3.5, 4.5]);
   });
 
+  it('are made anew when a node sends later what it had kept', async () => {
+    await refreshNights(holding, house.houseId, now);
+    const [edge] = await holding.db.select().from(point).where(eq(point.key, 'gate-base'));
+    const at = (nights[1]?.from ?? 0) + 3 * hour;
+    await storeReadings(everyPool(), [{ point: edge?.number ?? 0, at, value: 44, quality: 0 }]);
+    expect(await refreshNights(holding, house.houseId, now)).toBe(1);
+    expect(await refreshNights(holding, house.houseId, now)).toBe(0);
+  });
+
   it('of one holding are none of another', async () => {
     await refreshNights(holding, house.houseId, now);
     expect(await inHolding(stranger.id, gate)).toEqual([]);
