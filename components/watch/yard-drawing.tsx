@@ -118,7 +118,7 @@ function Ground({
   );
 }
 
-function Heap({ heap, short, preferences }: { heap: YardHeap; short: Short; preferences: Preferences }) {
+function Heap({ heap, short }: { heap: YardHeap; short: Short }) {
   const runs = heap.loop?.runs ?? false;
   return (
     <g>

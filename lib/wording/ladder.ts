@@ -53,7 +53,9 @@ function oneNext(next: NextReason, scene: Scene): string {
   if (next.kind === 'then') return `At ${timeWords(next.at, scene) ?? ''}, if no reading changes: ${does}.`;
   const unit = scene.points.find((point) => point.key === next.point)?.unit ?? 'Cel';
   const passes = next.side === 'below' ? 'falls under' : 'rises above';
-  return `${begin(`if ${pointName(next.point, scene)} ${passes}`)} ${pointValue(next.value, unit, scene.preferences)}: ${does}.`;
+  // without a point it is the coldest of the house, which frost looks at
+  const who = next.point === null ? 'the coldest sensor of the house' : pointName(next.point, scene);
+  return `${begin(`if ${who} ${passes}`)} ${pointValue(next.value, unit, scene.preferences)}: ${does}.`;
 }
 
 function isNext(value: unknown): value is NextReason {

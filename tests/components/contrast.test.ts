@@ -7,9 +7,8 @@ const css = readFileSync('app/globals.css', 'utf8');
 function tokens(opening: string): Record<string, string> {
   const from = css.indexOf(opening);
   const block = css.slice(from, css.indexOf('}', from));
-  return Object.fromEntries(
-    [...block.matchAll(/--([a-z]+): (#[0-9a-f]{6});/g)].map((hit) => [hit[1], hit[2]]),
-  );
+  const hits = [...block.matchAll(/--([a-z]+): (#[0-9a-f]{6});/g)];
+  return Object.fromEntries(hits.map((hit) => [hit[1] ?? '', hit[2] ?? '']));
 }
 
 function luminance(colour: string): number {

@@ -38,6 +38,7 @@ it('what comes next is told by the clock and by readings', () =>
       [
         { kind: 'then', at: at('06:06'), state: 'on', claim: 'band' },
         { kind: 'if', point: 'house-air', side: 'below', value: 3, state: 'on', claim: 'frost' },
+        { kind: 'if', point: null, side: 'below', value: 3, state: 'on', claim: 'frost' },
         { kind: 'riddle' },
       ],
       scene,
@@ -45,6 +46,7 @@ it('what comes next is told by the clock and by readings', () =>
   ).toEqual([
     'At 06:06, if no reading changes: the band turns it on.',
     'If the house air falls under 3.0 °C: frost turns it on.',
+    'If the coldest sensor of the house falls under 3.0 °C: frost turns it on.',
   ]));
 
 describe('a load’s state in a word', () => {
