@@ -16,7 +16,6 @@ import { z } from 'zod';
 const OPEN = new Set([
   'POST /sign-in/email',
   'POST /sign-out',
-  'GET /get-session',
   'POST /request-password-reset',
   'POST /reset-password',
   'POST /change-password',
@@ -35,7 +34,6 @@ export async function answerAuth(request: Request): Promise<Response> {
   try {
     const path = new URL(request.url).pathname.replace(/^\/api\/auth/, '');
     if (!OPEN.has(`${request.method} ${path}`)) throw new Problem('not-found');
-    if (request.method === 'GET') return await auth().handler(request);
     const text = await readText(request);
     const fields = check(Fields, text.trim() === '' ? {} : parseJson(text));
     const email = fields.email?.trim().toLowerCase() ?? null;
@@ -51,10 +49,21 @@ export async function answerAuth(request: Request): Promise<Response> {
     const body = text.trim() === '' ? '{}' : text;
     const response = await auth().handler(new Request(request.url, { method: 'POST', headers, body }));
     if (path === '/sign-in/email' && email !== null) await recordSignIn(email, response.ok);
-    return response;
+    return await withoutToken(response);
   } catch (error) {
     return problemResponse(error);
   }
+}
+
+/** The session's token goes out in its HttpOnly cookie only; told in the body too, any script could read it. */
+async function withoutToken(response: Response): Promise<Response> {
+  if (!response.ok) return response;
+  const text = await response.text();
+  const told: unknown = text === '' ? null : JSON.parse(text);
+  if (typeof told === 'object' && told !== null) Reflect.deleteProperty(told, 'token');
+  const headers = new Headers(response.headers);
+  headers.delete('content-length');
+  return new Response(JSON.stringify(told), { status: response.status, headers });
 }
 
 /** Sign-ins and refused ones, in the audit log of the holding that the account belongs to. */

@@ -2,7 +2,18 @@
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import type { Holding } from '@/db/client';
 import { answerAuth } from '@/lib/server/auth-door';
-import { Asker, errorsOf, itemsOf, newHolding, NOBODY, ORIGIN, personOf, signIn, tryToSignIn } from './asker';
+import {
+  Asker,
+  errorsOf,
+  itemsOf,
+  newHolding,
+  NOBODY,
+  ORIGIN,
+  PASSWORD,
+  personOf,
+  signIn,
+  tryToSignIn,
+} from './asker';
 import { openMailbox, type Mailbox } from './mailbox';
 
 let mailbox: Mailbox;
@@ -116,6 +127,16 @@ test('a wrong password and an unknown account are refused alike', async () => {
   const unknown = await tryToSignIn('nobody@larkmoor.example', 'not the password at all');
   expect([wrong.status, unknown.status]).toEqual([401, 401]);
   expect(await wrong.text()).toBe(await unknown.text());
+});
+
+test('the session goes out in a cookie that no script reads, and nowhere else', async () => {
+  const response = await tryToSignIn('owner@larkmoor.example', PASSWORD);
+  const [cookie] = response.headers.getSetCookie();
+  expect(cookie).toMatch(/^middenward\.session=[^;]+;.*HttpOnly/i);
+  expect(cookie).toMatch(/SameSite=Lax/i);
+  const token = decodeURIComponent(/=([^;]+)/.exec(cookie ?? '')?.[1] ?? '').split('.')[0] ?? '';
+  expect(token.length).toBeGreaterThan(20);
+  expect(await response.text()).not.toContain(token);
 });
 
 test('nobody signs up, and what else the sign-in library could do is not there', async () => {

@@ -1,4 +1,3 @@
 import { answerAuth } from '@/lib/server/auth-door';
 
-export const GET = answerAuth;
-export const POST = answerAuth;
+export { answerAuth as GET, answerAuth as POST };
