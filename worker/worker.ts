@@ -49,10 +49,10 @@ export async function startWorker(base: Base, instance: string, port: number): P
   const jobs = new Jobs({ ...base, houses, ingest, isLeading });
   const lead: Lead = new Lead(base, instance, {
     lastStepAt: () => houses.lastStepAt(),
-    onLead: async (formerHeartbeatAt) => {
+    onLead: async ({ formerHeartbeatAt, wasReleased }) => {
       await houses.lead(formerHeartbeatAt);
       jobs.start();
-      await tellOfGap(base, formerHeartbeatAt);
+      await tellOfGap(base, wasReleased ? null : formerHeartbeatAt);
     },
     onLost: () => {
       jobs.stop();

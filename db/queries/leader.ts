@@ -11,6 +11,8 @@ export interface Lead {
   epoch: number;
   /** Real time, epoch ms, of the last heartbeat of whoever led before; null where nobody has. */
   formerHeartbeatAt: number | null;
+  /** Whoever led before gave its lead back: that nobody led since was meant so. */
+  wasReleased: boolean;
 }
 
 export interface LeaderRow {
@@ -39,7 +41,9 @@ export async function takeLead(db: Db, instance: string): Promise<Lead | null> {
         .values({ id: ONLY, epoch: 1, ...taken })
         .onConflictDoNothing()
         .returning({ epoch: leader.epoch });
-      return made[0] === undefined ? null : { epoch: made[0].epoch, formerHeartbeatAt: null };
+      return made[0] === undefined
+        ? null
+        : { epoch: made[0].epoch, formerHeartbeatAt: null, wasReleased: true };
     }
     const free = or(isNull(leader.holder), lt(leader.until, sql`now()`), eq(leader.holder, instance));
     const [row] = await tx
@@ -47,7 +51,9 @@ export async function takeLead(db: Db, instance: string): Promise<Lead | null> {
       .set({ ...taken, epoch: sql`${leader.epoch} + 1` })
       .where(and(eq(leader.id, ONLY), free))
       .returning({ epoch: leader.epoch });
-    return row === undefined ? null : { epoch: row.epoch, formerHeartbeatAt: former.heartbeat.getTime() };
+    if (row === undefined) return null;
+    const wasReleased = former.holder === null;
+    return { epoch: row.epoch, formerHeartbeatAt: former.heartbeat.getTime(), wasReleased };
   });
 }
 

@@ -87,7 +87,7 @@ export class AlarmKeeper {
     for (const key of clear) {
       await clearAlarm(holding, key, this.base.clock.appNow());
       kept.standing.delete(key);
-      this.base.log.info({ house: kept.houseId, key }, 'alarm cleared');
+      this.base.log.info({ house: kept.houseId, alarm: key }, 'alarm cleared');
     }
     if (raise.length + clear.length > 0) this.onChange(kept.houseId);
   }

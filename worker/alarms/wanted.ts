@@ -1,6 +1,6 @@
 /** Which alarms ought to stand in a house: level-triggered, from its faults and its nodes. Pure. */
 import type { AlarmAbout } from '@/db/queries/alarm';
-import type { HouseRecord, NodeWiring } from '@/db/queries/plan';
+import type { HouseRecord, NodeWiring, PointWiring } from '@/db/queries/plan';
 import type { StepResult } from '@/lib/control/step-result';
 import type { Fault } from '@/lib/control/types';
 import type { AlarmKind } from '@/lib/schema/alarm';
@@ -93,21 +93,39 @@ export function wantedAlarms(
     if (!isHere) away.add(node.id);
   }
   for (const fault of result.faults) {
-    const alarm = fromFault(record, fault, away);
-    if (alarm !== null) alarms.push(alarm);
+    const alarm = fromFault(record, fault);
+    const point = waitsFor(record, fault);
+    const node = record.nodes.find((one) => one.id === point?.nodeId);
+    const lastAt = result.points.find((one) => one.id === point?.id)?.at ?? -Infinity;
+    // After a gap of the worker's own a point is uncertain till it speaks again: that is no news of the point.
+    const isSettling =
+      node !== undefined &&
+      lastAt < startedAt &&
+      now < startedAt + SILENT_INTERVALS * node.reportEveryS * 1000;
+    if (node !== undefined && away.has(node.id)) continue;
+    if (isSettling) undecided.add(alarm.key);
+    else alarms.push(alarm);
   }
   return { alarms, undecided };
 }
 
-function fromFault(record: HouseRecord, fault: Fault, away: ReadonlySet<string>): WantedAlarm | null {
+function fromFault(record: HouseRecord, fault: Fault): WantedAlarm {
   const { kind, data, since } = fault;
   const about = named(record, fault.about);
   if (kind !== 'point-bad') return { key: keyOf(kind, record.id, fault.key), kind, about, data, since };
-  const point = record.points.find((one) => one.id === fault.about.point);
-  const isSilent = data['why'] === 'silent' || data['why'] === 'never-spoke';
-  if (isSilent && point !== undefined && point.nodeId !== null && away.has(point.nodeId)) return null;
-  const alarm = isSilent ? 'point-silent' : 'point-not-trusted';
+  const alarm = isSilence(fault) ? 'point-silent' : 'point-not-trusted';
   return { key: keyOf(alarm, record.id, fault.about.point ?? fault.key), kind: alarm, about, data, since };
+}
+
+const isSilence = ({ data }: Fault) => data['why'] === 'silent' || data['why'] === 'never-spoke';
+
+/** The point without whose readings this fault says nothing new; undefined for faults that stand by themselves. */
+function waitsFor(record: HouseRecord, fault: Fault): PointWiring | undefined {
+  const { kind, about } = fault;
+  if (kind === 'point-bad' && isSilence(fault)) return record.points.find((one) => one.id === about.point);
+  if (kind !== 'core-not-good') return undefined;
+  const core = record.config.sources.find((one) => one.id === about.source)?.corePoint;
+  return record.points.find((one) => one.key === core);
 }
 
 /** Ids become what people call the thing: key or slug. */

@@ -1,12 +1,11 @@
 /** Who drives: a lease in the database, renewed each 2 s of real time. A lease alone excludes nobody; nodes fence by epoch. */
-import { raiseEpoch, releaseLead, renewLead, takeLead } from '@/db/queries/leader';
+import { raiseEpoch, releaseLead, renewLead, takeLead, type Lead as TakenLead } from '@/db/queries/leader';
 import type { Base } from '../base';
 
 const EVERY_MS = 2000;
 
 export interface LeadEvents {
-  /** @param formerHeartbeatAt real time, epoch ms, at which some worker last drove; null where none ever did */
-  onLead: (formerHeartbeatAt: number | null) => Promise<void>;
+  onLead: (taken: TakenLead) => Promise<void>;
   onLost: () => void;
   /** App time of the newest step. */
   lastStepAt: () => number | null;
@@ -87,7 +86,7 @@ export class Lead {
     this.leading = lead.epoch;
     this.lastBeatMs = this.base.clock.monotonicMs();
     this.base.log.info({ epoch: lead.epoch }, 'this worker leads');
-    await this.events.onLead(lead.formerHeartbeatAt);
+    await this.events.onLead(lead);
   }
 
   private async renew(epoch: number): Promise<void> {
