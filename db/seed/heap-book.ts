@@ -72,7 +72,7 @@ export const heapBook: HeapDeed[] = [
     entry: {
       source: 'gate-heap',
       kind: 'turned',
-      text: 'Turned with the loader, outside to the inside. Two people; fan locked off by hand meanwhile.',
+      text: 'Turned with the loader, outside to the inside. Two people; fan off by hand meanwhile.',
     },
     effect: { kind: 'turn' },
   },

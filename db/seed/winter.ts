@@ -75,6 +75,10 @@ export const personDeeds: PersonDeed[] = [
     ...{ channel: 'gable-vent', state: 'on', seconds: 1200 },
   },
   {
+    ...{ house: 'long-house', daysAgo: 11, time: '10:05', by: OWNER, does: 'hand' },
+    ...{ channel: 'gate-heap-fan', state: 'off', seconds: 5400 },
+  },
+  {
     ...{ house: 'long-house', daysAgo: 9, time: '08:10', by: OWNER, does: 'hand' },
     ...{ channel: 'ground-fan', state: 'off', seconds: 7200 },
   },
