@@ -83,9 +83,12 @@ export async function removeHalfSeeded(holdings: { slug: string; emails: string[
       .from(organization)
       .where(eq(organization.slug, slug));
     if (found) {
-      const numbers = db.select({ number: point.number }).from(point).where(eq(point.holdingId, found.id));
-      await db.delete(reading).where(inArray(reading.point, numbers));
-      await db.delete(rollup).where(inArray(rollup.point, numbers));
+      const points = await db.select({ number: point.number }).from(point).where(eq(point.holdingId, found.id));
+      // a point at a time: millions of rows in one statement could outlast the pool's limit
+      for (const { number } of points) {
+        await db.delete(reading).where(eq(reading.point, number));
+        await db.delete(rollup).where(eq(rollup.point, number));
+      }
       await db.delete(organization).where(eq(organization.id, found.id));
     }
     await db.delete(user).where(inArray(user.email, emails));
