@@ -83,7 +83,10 @@ export async function removeHalfSeeded(holdings: { slug: string; emails: string[
       .from(organization)
       .where(eq(organization.slug, slug));
     if (found) {
-      const points = await db.select({ number: point.number }).from(point).where(eq(point.holdingId, found.id));
+      const points = await db
+        .select({ number: point.number })
+        .from(point)
+        .where(eq(point.holdingId, found.id));
       // a point at a time: millions of rows in one statement could outlast the pool's limit
       for (const { number } of points) {
         await db.delete(reading).where(eq(reading.point, number));
