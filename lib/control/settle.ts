@@ -31,8 +31,8 @@ export function settle(run: Run): void {
   for (let round = 0; round < plan.channels.length + 4; round += 1) {
     run.wake = wake;
     settleSources(run);
-    settleDemands(run);
-    if (!decideAll(run)) break;
+    const handsEnded = settleDemands(run);
+    if (!decideAll(run) && !handsEnded) break;
   }
   explainSwitchings(run, firstEvent);
 }
@@ -65,13 +65,16 @@ function settleSources(run: Run): void {
   settleFrost(run);
 }
 
-function settleDemands(run: Run): void {
+/** Whether a limit ended a hand on: its end is then no longer waited for. */
+function settleDemands(run: Run): boolean {
+  let handsEnded = false;
   for (let channel = 0; channel < run.plan.channels.length; channel += 1) {
     settleHand(run, channel);
     askLower(run, channel);
     settleLimit(run, channel);
     if (run.channels[channel]?.hand?.state === 'on' && limit.speaks(run, channel) !== null) {
       endHand(run, channel, 'limit');
+      handsEnded = true;
       askLower(run, channel);
       settleLimit(run, channel);
     }
@@ -79,6 +82,7 @@ function settleDemands(run: Run): void {
     askDemand(run, channel);
   }
   settleInterlocks(run);
+  return handsEnded;
 }
 
 /** Whether any load is to change. Channels are asked by number, so the first has the last of a credit. */

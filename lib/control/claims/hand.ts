@@ -47,13 +47,13 @@ export function settleHand(run: Run, channel: number): void {
   if (memory.hand === null) return;
   const until = handUntil(run, channel, memory.hand);
   if (run.at >= until) return endHand(run, channel, until < memory.hand.until ? 'point-dead' : 'time');
-  wakeAt(run, until);
   const frostBegan = run.frost.on && memory.hand.givenAt < (run.frost.since ?? Infinity);
-  if (!frostBegan) return;
   const { inFrost } = entry(run.plan.channels, channel);
-  if (inFrost === 'helps' && memory.hand.state === 'off' && !memory.hand.holdInFrost)
-    endHand(run, channel, 'frost');
-  if (inFrost === 'cools' && memory.hand.state === 'on') endHand(run, channel, 'frost');
+  if (!frostBegan) return wakeAt(run, until);
+  const { state, holdInFrost } = memory.hand;
+  const ends = inFrost === 'helps' ? state === 'off' && !holdInFrost : inFrost === 'cools' && state === 'on';
+  if (ends) endHand(run, channel, 'frost');
+  else wakeAt(run, until);
 }
 
 export function endHand(
