@@ -6,6 +6,7 @@ import { temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock } from '@/lib/units/time';
 import { degreeTicks, hourTicks, spread, type DegreeTick, type HourTick } from './axis';
+import { bandsOf, type DrawnBand, type Scale } from './night-bands';
 import { stripBoxes, type StripBox } from './strip';
 
 export interface NightChart {
@@ -53,17 +54,6 @@ export interface DrawnLine {
   path: string;
 }
 
-export interface DrawnBand {
-  key: string;
-  isMain: boolean;
-  x: number;
-  width: number;
-  y: number;
-  height: number;
-  /** At each threshold, in place; empty where the period is too short for words. */
-  labels: { x: number; y: number; text: string }[];
-}
-
 export interface NightLayout {
   frame: Frame;
   height: number;
@@ -74,14 +64,12 @@ export interface NightLayout {
   hours: (HourTick & { x: number })[];
   degrees: (DegreeTick & { y: number })[];
   bands: DrawnBand[];
-  frost: { y: number; text: string } | null;
+  frost: { x: number; y: number; text: string; anchor: 'start' | 'end' } | null;
   lines: DrawnLine[];
   labels: { key: string; role: string; isMain: boolean; text: string; x: number; y: number }[];
   strips: { key: string; name: string; y: number; boxes: StripBox[] }[];
   now: { x: number; text: string; anchor: 'start' | 'end' } | null;
 }
-
-const INSIDE = ['house-air', 'bench'];
 
 /** °C between which the chart spans: all lines and the bands that warm, never less than 8 K. */
 export function extentOf(chart: Pick<NightChart, 'lines' | 'bands' | 'frostLimit'>): [number, number] {
@@ -107,6 +95,8 @@ export function nightLayout(chart: NightChart, frame: Frame, preferences: Prefer
   const y = scaleLinear([least, greatest], [yBottom, frame.top]);
   const nowIn = chart.now > from && chart.now < to;
   const stripsTop = yBottom + (frame.namesAbove ? 30 : 16);
+  // words stand where the lines are not: early in a night at its end, later at its beginning
+  const calm = nowIn && chart.now - from < (to - from) / 2 ? 'end' : 'start';
   const height = stripsTop + chart.strips.length * frame.stripStep + 18;
   return {
     frame,
@@ -120,11 +110,15 @@ export function nightLayout(chart: NightChart, frame: Frame, preferences: Prefer
       x: x(tick.at),
     })),
     degrees: degreeTicks(least, greatest, 5, preferences).map((tick) => ({ ...tick, y: y(tick.celsius) })),
-    bands: bandsOf(chart, frame, x, y, [least, greatest], preferences),
+    bands: bandsOf({ chart, frame, x, y, extent: [least, greatest], calm }, preferences),
     frost:
       chart.frostLimit === null
         ? null
-        : { y: y(chart.frostLimit), text: `frost limit ${temperatureFigure(chart.frostLimit, preferences)}` },
+        : {
+            ...(calm === 'start' ? { x: x1 - 3, anchor: 'end' } : { x: frame.left + 4, anchor: 'start' }),
+            y: y(chart.frostLimit),
+            text: `frost limit ${temperatureFigure(chart.frostLimit, preferences)}`,
+          },
     lines: chart.lines.map((one) => drawn(one, chart, x, y)),
     labels: labelsOf(chart, x, y, frame, preferences),
     strips: chart.strips.map((strip, place) => ({
@@ -142,8 +136,6 @@ export function nightLayout(chart: NightChart, frame: Frame, preferences: Prefer
       : null,
   };
 }
-
-type Scale = (value: number) => number;
 
 function drawn(one: WatchLine, chart: NightChart, x: Scale, y: Scale): DrawnLine {
   const rank = chart.lines.filter((other) => other.role === one.role).indexOf(one);
@@ -170,72 +162,4 @@ function labelsOf(chart: NightChart, x: Scale, y: Scale, frame: Frame, preferenc
     ];
   });
   return spread(items, 13, frame.top + 6, frame.top + frame.plot - 2);
-}
-
-const NEAR_K = 3;
-
-/** Whether the point that a band goes by came within 3 K of where it begins, in that part of the night. */
-function comesNear(chart: NightChart, band: WatchBand, period: WatchBand['periods'][number]): boolean {
-  const line = chart.lines.find((one) => one.key === band.point);
-  return (line?.at ?? []).some((at, place) => {
-    const value = line?.value[place] ?? null;
-    if (value === null || at < period.from || at >= period.to) return false;
-    return band.purpose === 'warm' ? value < period.low + NEAR_K : value > period.high - NEAR_K;
-  });
-}
-
-function bandsOf(
-  chart: NightChart,
-  frame: Frame,
-  x: Scale,
-  y: Scale,
-  [least, greatest]: [number, number],
-  preferences: Preferences,
-): DrawnBand[] {
-  const known = new Set(chart.lines.filter((one) => INSIDE.includes(one.role)).map((one) => one.key));
-  const main = chart.bands.find((band) => band.point === chart.main && band.purpose === 'warm');
-  let others = 0;
-  return chart.bands
-    .filter((band) => known.has(band.point))
-    .sort((one, other) => Number(other === main) - Number(one === main))
-    .flatMap((band) => {
-      const isMain = band === main;
-      const shift = isMain ? 0 : (others += 1) * 150;
-      return band.periods.flatMap((period, place): DrawnBand[] => {
-        if (period.low > greatest || period.high < least) return [];
-        // a band that nothing came near would only stand in the way of those that decide
-        if (!isMain && !comesNear(chart, band, period)) return [];
-        const [left, right] = [
-          x(Math.max(period.from, chart.night.from)),
-          x(Math.min(period.to, chart.night.to)),
-        ];
-        if (right <= left) return [];
-        const top = Math.max(y(period.high), frame.top);
-        const bottom = Math.min(y(period.low), frame.top + frame.plot);
-        const roomy = right - left > (isMain ? 84 : shift + 84) && !(frame.namesAbove && !isMain);
-        const named = isMain ? '' : `${band.channel}: `;
-        const [over, under] = band.purpose === 'warm' ? ['off above', 'on below'] : ['on above', 'off below'];
-        return [
-          {
-            key: `${band.channel}-${place}`,
-            isMain,
-            ...{ x: left, width: right - left, y: top, height: bottom - top },
-            labels: roomy
-              ? [
-                  {
-                    x: left + 5 + shift,
-                    y: top - 4,
-                    text: `${named}${over} ${temperatureFigure(period.high, preferences)}`,
-                  },
-                  {
-                    x: left + 5 + shift,
-                    y: bottom + 12,
-                    text: `${named}${under} ${temperatureFigure(period.low, preferences)}`,
-                  },
-                ]
-              : [],
-          },
-        ];
-      });
-    });
 }

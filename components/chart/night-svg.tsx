@@ -80,7 +80,12 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
             strokeLinecap="round"
             strokeWidth="1.5"
           />
-          <text x={x1 - 3} y={layout.frost.y + 12} textAnchor="end" className={classes('fill-soft', small)}>
+          <text
+            x={layout.frost.x}
+            y={layout.frost.y + 12}
+            textAnchor={layout.frost.anchor}
+            className={classes('fill-soft', small)}
+          >
             {layout.frost.text}
           </text>
         </>
@@ -102,9 +107,10 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
       {layout.bands.flatMap((band) =>
         band.labels.map((label) => (
           <text
-            key={label.text}
+            key={`${label.text}-${label.x}`}
             x={label.x}
             y={label.y}
+            textAnchor={label.anchor}
             className={classes('fill-house', small)}
             stroke="var(--sheet)"
             strokeWidth="3"

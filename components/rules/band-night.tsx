@@ -1,6 +1,7 @@
 'use client';
 import { useId } from 'react';
-import type { DrawnBand, NightLayout } from '@/components/chart/night-layout';
+import type { DrawnBand } from '@/components/chart/night-bands';
+import type { NightLayout } from '@/components/chart/night-layout';
 import { NightSvg } from '@/components/chart/night-svg';
 import type { RuleBody } from '@/lib/control/rule-body';
 import { temperatureFigure } from '@/lib/units/format';

@@ -31,16 +31,13 @@ export function NightFigures({
     ...drawn.flatMap((night) => [
       {
         name: `Heat from ${nameOf(night.source)}`,
-        // a night without a draw is no estimate
-        value:
-          night.heat === null
-            ? UNKNOWN
-            : energy(night.heat.kWh, 1, night.onSeconds === 0 ? null : night.heat.sd),
+        value: night.heat === null ? UNKNOWN : heatWords(night.heat, night.onSeconds),
         ...(night.heat === null ? { note: NO_HEAT[night.missing.heat ?? ''] ?? '' } : {}),
       },
       {
         name: `${nameOf(night.source)} ran`,
-        value: `${duration(night.onSeconds)}, ${count(night.starts, 'start')}`,
+        value: duration(night.onSeconds),
+        note: count(night.starts, 'start'),
       },
     ]),
     {
@@ -82,6 +79,11 @@ export function NightFigures({
       )}
     </Panel>
   );
+}
+
+/** Without a draw there is nothing to estimate; early in a night a tenth of a kWh would hide the figure in its rounding. */
+function heatWords(heat: { kWh: number; sd: number }, onSeconds: number): string {
+  return energy(heat.kWh, Math.abs(heat.kWh) < 1 ? 2 : 1, onSeconds === 0 ? null : heat.sd);
 }
 
 const NO_HEAT: Record<string, string> = {

@@ -50,13 +50,13 @@ function houseSentence(standing: HouseStanding, scene: Scene): Phrase[] {
       ', so how warm it is cannot be said.',
     );
   }
-  const name =
-    shown.role === 'house-air' ? `The ${house}` : `${begin(pointName(shown.key, scene))} in the ${house}`;
+  const by = shown.role === 'house-air' ? '' : ` by ${pointName(shown.key, scene)}`;
   const doubt = shown.quality === 'uncertain' ? ' (not sure of it)' : '';
   return sentences(
     join(
-      `${name} stands at `,
+      `The ${house} stands at `,
       coloured(temperature(shown.value, scene.preferences), 'house'),
+      by,
       doubt,
       shown === governed ? bandWords(shown.value, standing) : '',
       '.',

@@ -44,11 +44,11 @@ const withFan = (change: Partial<HouseStanding['channels'][number]>) =>
 describe('the sentence of Watch', () => {
   it('says how the house, the heap and the night stand', () =>
     expect(say({})).toBe(
-      'Bench probe 1 in the long house stands at 5.7 °C, inside its band. The gate-heap fan rests until 06:06 at least; the heap beside the pipe is at 39.9 °C. Outdoors −12.3 °C, coldest was −12.7 °C at 04:12.',
+      'The long house stands at 5.7 °C by bench probe 1, inside its band. The gate-heap fan rests until 06:06 at least; the heap beside the pipe is at 39.9 °C. Outdoors −12.3 °C, coldest was −12.7 °C at 04:12.',
     ));
   it('says the same in °F and twelve hours', () =>
     expect(say({}, american)).toBe(
-      'Bench probe 1 in the long house stands at 42.3 °F, inside its band. The gate-heap fan rests until 6:06 am at least; the heap beside the pipe is at 103.8 °F. Outdoors 9.9 °F, coldest was 9.1 °F at 4:12 am.',
+      'The long house stands at 42.3 °F by bench probe 1, inside its band. The gate-heap fan rests until 6:06 am at least; the heap beside the pipe is at 103.8 °F. Outdoors 9.9 °F, coldest was 9.1 °F at 4:12 am.',
     ));
   it('speaks of the house itself when its air is what the band goes by', () =>
     expect(say({ band: { point: 'house-air', low: 4, high: 7.5 } })).toMatch(
@@ -64,7 +64,7 @@ describe('the sentence of Watch', () => {
   );
   it('puts frost in words of its own, with its limit', () =>
     expect(say({ points: withPoint('bench-1', { value: 2.9 }) })).toContain(
-      'stands at 2.9 °C, under its band. Bench probe 1 is at 2.9 °C, under the frost limit of 3.0 °C.',
+      'stands at 2.9 °C by bench probe 1, under its band. Bench probe 1 is at 2.9 °C, under the frost limit of 3.0 °C.',
     ));
   it('says nothing of a band where none is in force', () =>
     expect(say({ band: null })).toMatch(/stands at 6\.1 °C\./));
@@ -85,7 +85,7 @@ describe('what is missing is said', () => {
     ));
   it('of a value that is not sure', () =>
     expect(say({ points: withPoint('bench-1', { quality: 'uncertain', why: 'too-fast' }) })).toContain(
-      '5.7 °C (not sure of it)',
+      '5.7 °C by bench probe 1 (not sure of it)',
     ));
   it('of a house that was never heard', () =>
     expect(plainText(unknownSentence('Long house'))).toBe(
