@@ -26,12 +26,25 @@ export interface TimeFacts {
   sunUp: boolean;
 }
 
-/** Remembers the last answer: a step asks the same stretch of time again and again. */
+const REMEMBERED = 8;
+
+/**
+ * Remembers its last answers: a step asks the same stretch of time again and again, and a look ahead goes through a
+ * day of them and comes back.
+ */
 function remembering<T extends { from: number; until: number }>(ask: (at: number) => T): (at: number) => T {
+  const kept: T[] = [];
   let last: T | null = null;
   return (at) => {
-    if (last === null || at < last.from || at >= last.until) last = ask(at);
-    return last;
+    if (last !== null && at >= last.from && at < last.until) return last;
+    let found = kept.find((one) => at >= one.from && at < one.until);
+    if (found === undefined) {
+      found = ask(at);
+      if (kept.length >= REMEMBERED) kept.shift();
+      kept.push(found);
+    }
+    last = found;
+    return found;
   };
 }
 

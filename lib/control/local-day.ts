@@ -6,6 +6,7 @@ import { DateTime, IANAZone } from 'luxon';
 import { sunOfDay, type SunDay } from './sun';
 
 const DAY = 86_400_000;
+const QUARTER = 900_000;
 const MINUTE = 60_000;
 
 export interface Place {
@@ -14,6 +15,8 @@ export interface Place {
   longitude: number;
   /** Sun by day number, kept: it is asked several times a day and costs some 50 µs. */
   sun: Map<number, SunDay>;
+  /** Minutes from UTC by quarter of an hour, kept likewise: zones change on quarters. */
+  offsets: Map<number, number>;
 }
 
 export function place(house: { zone: string; latitude: number; longitude: number }): Place {
@@ -22,11 +25,23 @@ export function place(house: { zone: string; latitude: number; longitude: number
     latitude: house.latitude,
     longitude: house.longitude,
     sun: new Map(),
+    offsets: new Map(),
   };
 }
 
+function offsetAt({ zone, offsets }: Place, at: number): number {
+  const quarter = Math.floor(at / QUARTER);
+  let offset = offsets.get(quarter);
+  if (offset === undefined) {
+    if (offsets.size > 2000) offsets.clear();
+    offset = zone.offset(quarter * QUARTER);
+    offsets.set(quarter, offset);
+  }
+  return offset;
+}
+
 /** What the wall clock shows at an instant, as if it were UTC, ms. */
-export const wallAt = (where: Place, at: number): number => at + where.zone.offset(at) * MINUTE;
+export const wallAt = (where: Place, at: number): number => at + offsetAt(where, at) * MINUTE;
 
 export const dayNumber = (where: Place, at: number): number => Math.floor(wallAt(where, at) / DAY);
 
@@ -42,8 +57,8 @@ export const monthDay = (day: number): string =>
 export function wallInstant(where: Place, day: number, minutes: number): number {
   const wall = day * DAY + minutes * MINUTE;
   // a zone changes at most once in two days, so the offsets a day before and after are all that can hold
-  const before = wall - where.zone.offset(wall - DAY) * MINUTE;
-  const after = wall - where.zone.offset(wall + DAY) * MINUTE;
+  const before = wall - offsetAt(where, wall - DAY) * MINUTE;
+  const after = wall - offsetAt(where, wall + DAY) * MINUTE;
   const readsRight = [before, after].filter((instant) => wallAt(where, instant) === wall);
   if (readsRight.length > 0) return Math.min(...readsRight);
   let low = Math.min(before, after) - DAY / 4;

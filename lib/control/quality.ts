@@ -39,12 +39,14 @@ export function silenceIn(
   if (last === -Infinity) return null;
   // what was seen before has been judged: an implausible reading then fills no silence now
   if (seen === undefined || seen.at <= (memory.lastAt ?? -Infinity)) return null;
-  const times = [...(seen.between ?? []), seen.at];
-  for (const time of times) {
-    if (time <= last) continue;
-    if (time - last > point.staleMs) return last + point.staleMs + 1;
-    last = time;
+  if (seen.between !== undefined) {
+    for (const time of seen.between) {
+      if (time <= last) continue;
+      if (time - last > point.staleMs) return last + point.staleMs + 1;
+      last = time;
+    }
   }
+  if (seen.at - last > point.staleMs) return last + point.staleMs + 1;
   return null;
 }
 
@@ -83,8 +85,9 @@ export function takeReading(
     : memory.value === null || goodRun >= 3
       ? null
       : memory.dropped;
+  // written out: one is made for every reading, and a spread of it costs ten times as much
   return {
-    ...memory,
+    id: memory.id,
     value: seen.value,
     at: seen.at,
     lastAt: seen.at,
@@ -92,6 +95,11 @@ export function takeReading(
     suspects: 0,
     goodRun,
     dropped,
+    quality: memory.quality,
+    why: memory.why,
+    uncertainSince: memory.uncertainSince,
+    contradictedSince: memory.contradictedSince,
+    trail: memory.trail,
   };
 }
 
