@@ -47,14 +47,15 @@ export type RouteHandler = (request: Request, context: Params) => Promise<Respon
  */
 export function serve<const T extends Operation>(
   operation: T,
-  handle: (asking: Asking<T>) => Promise<Answer>,
+  handle: (asking: Asking<T>) => Promise<Answer> | Answer,
 ): RouteHandler {
   return async (request, context) => {
     let caller: Caller | undefined;
     try {
       caller = await identify(request);
       const who = caller;
-      const params = await context.params;
+      // Next gives a route without a name in its path no params at all
+      const params = ((await context.params) as Record<string, string> | undefined) ?? {};
       const isChange = request.method !== 'GET';
       const text = isChange ? await readText(request) : '';
       const now = await appNow();
