@@ -1,5 +1,6 @@
 'use client';
 import { useState } from 'react';
+import { useAppNow } from '@/components/ui/clock';
 import { ConfirmDialog } from '@/components/ui/dialog';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
@@ -10,6 +11,7 @@ const HOUR_MS = 3_600_000;
 
 export function AllOffDialog({ onClose }: { onClose: () => void }) {
   const { house, channels, state, scene, look } = useHouse();
+  const now = useAppNow(10_000);
   const [busy, setBusy] = useState(false);
   const [failure, setFailure] = useState<string | undefined>();
   const running = channels.filter((one) =>
@@ -35,7 +37,7 @@ export function AllOffDialog({ onClose }: { onClose: () => void }) {
       description={
         <>
           <p>
-            All {channels.length} channels go off by hand till {timeWords(scene.now + HOUR_MS, scene)}
+            All {channels.length} channels go off by hand till {timeWords(now + HOUR_MS, { ...scene, now })}
             {running.length === 0
               ? '; none of them runs now.'
               : `; ${running.map((one) => one.label).join(', ')} ${running.length === 1 ? 'stops' : 'stop'}.`}

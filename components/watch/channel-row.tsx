@@ -52,9 +52,9 @@ export function ChannelRow({
   onWhy: () => void;
   onChoose: (choice: HandChoice) => void;
 }) {
-  const { scene } = useHouse();
+  const { scene, isStale } = useHouse();
   const word = stateWord(standing, channel.loadKind);
-  const report = reportWords(standing);
+  const report = isStale ? null : reportWords(standing);
   const mode: HandChoice = standing.mode === 'hand' ? standing.state : 'auto';
   return (
     <li className="grid grid-cols-[minmax(0,1fr)_auto] items-start gap-x-4 gap-y-2 py-3 md:grid-cols-[minmax(0,10.5rem)_minmax(0,1fr)_auto]">
@@ -72,7 +72,7 @@ export function ChannelRow({
           )}
         >
           <Mark standing={standing} />
-          {word}
+          {isStale ? `Last seen ${word.toLowerCase()}` : word}
         </p>
       </div>
       <div className="order-3 col-span-2 min-w-0 text-[0.95rem] text-soft md:order-none md:col-span-1">

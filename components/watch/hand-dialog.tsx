@@ -1,6 +1,7 @@
 'use client';
 import { useState } from 'react';
 import { Checkbox } from '@/components/ui/check';
+import { useAppNow } from '@/components/ui/clock';
 import { ConfirmDialog } from '@/components/ui/dialog';
 import { Select } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
@@ -21,6 +22,7 @@ export function HandDialog({
   onClose: () => void;
 }) {
   const house = useHouse();
+  const now = useAppNow(10_000);
   const channel = house.channels.find((one) => one.key === channelKey);
   const choices = handChoicesS(channel?.loadKind ?? 'other', choice === 'on' ? 'on' : 'off');
   const inFrost = house.state?.channels.some((one) => one.claim === 'frost') ?? false;
@@ -74,7 +76,7 @@ export function HandDialog({
   const words =
     choice === 'auto'
       ? ['Its rule, its rest and the ladder of claims decide again, at once.']
-      : handWords(ask, house.scene);
+      : handWords(ask, { ...house.scene, now });
   const verb = { on: 'by hand', off: 'off by hand', auto: 'back to auto' }[choice];
   return (
     <ConfirmDialog

@@ -1,13 +1,13 @@
 'use client';
 import { QueryClient, QueryClientProvider, useQuery, useQueryClient } from '@tanstack/react-query';
-import { useRouter } from 'next/navigation';
-import { createContext, use, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
+import { createContext, use, useEffect, useMemo, useState, type ReactNode } from 'react';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { WatchAlarm, WatchView } from '@/lib/live/watch';
 import type { Preferences } from '@/lib/units/preferences';
 import { becauseInstant } from '@/lib/wording/instants';
 import type { Scene } from '@/lib/wording/scene';
 import { joinFeed } from './live-feed';
+import { useRedraw } from './redraw';
 
 /** What the browser needs of the view: all but the lines and strips, which the server draws. */
 export type LiveStart = Omit<WatchView, 'lines' | 'strips' | 'nights' | 'others'> & {
@@ -22,6 +22,8 @@ export interface LiveHouse extends LiveStart {
   link: Link;
   /** False: it is known that no worker leads. Null: the server does not answer, so nothing is known. */
   controlRuns: boolean | null;
+  /** What is shown is what was last known, and relays may stand otherwise by now. */
+  isStale: boolean;
   scene: Scene;
   /** Asks anew how things stand, after an order was given. */
   look: () => Promise<void>;
@@ -119,6 +121,7 @@ function Follow({ start, children }: { start: LiveStart; children: ReactNode }) 
     alarms,
     link,
     controlRuns: health.isError ? null : health.data.worker.up,
+    isStale: health.isError || !health.data.worker.up,
     look: () => client.invalidateQueries({ queryKey: key }),
     scene: {
       now,
@@ -130,24 +133,4 @@ function Follow({ start, children }: { start: LiveStart; children: ReactNode }) 
     },
   };
   return <House value={house}>{children}</House>;
-}
-
-/** Has the server draw chart and figures anew: each minute of app time's worth, and soon after something switched. */
-function useRedraw(rate: number): () => void {
-  const router = useRouter();
-  const soon = useRef<ReturnType<typeof setTimeout>>(undefined);
-  const redraw = useMemo(
-    () => () => {
-      clearTimeout(soon.current);
-      soon.current = setTimeout(() => {
-        if (document.visibilityState === 'visible') router.refresh();
-      }, 800);
-    },
-    [router],
-  );
-  useEffect(() => {
-    const timer = setInterval(redraw, Math.max(5000, 60_000 / rate));
-    return () => clearInterval(timer);
-  }, [redraw, rate]);
-  return redraw;
 }

@@ -15,7 +15,14 @@ const note = 'text-[11.5px] fill-soft';
 export function YardDrawing() {
   const house = useHouse();
   if (house.state === null) return null;
-  const facts = yardFacts(house, house.state);
+  // air is drawn moving only where a relay says so now
+  const known = house.isStale
+    ? {
+        ...house.state,
+        channels: house.state.channels.map((one) => ({ ...one, reported: null, state: 'off' as const })),
+      }
+    : house.state;
+  const facts = yardFacts(house, known);
   return (
     <Panel title="Where the heat is going">
       <Section facts={facts} preferences={house.preferences} />
