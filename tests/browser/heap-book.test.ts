@@ -24,10 +24,16 @@ async function book(who: string, width = 1400): Promise<Page> {
 /** A page is pressed as soon as it shows; what comes before its script is there is pressed again, as a person would. */
 async function openForm(page: Page, button: string): Promise<Locator> {
   const dialog = page.getByRole('dialog');
-  await until(`the form behind ${button}`, async () => {
-    if (!(await dialog.isVisible())) await page.getByRole('button', { name: button, exact: true }).click();
-    return dialog.isVisible();
-  });
+  const press = page.getByRole('button', { name: button, exact: true });
+  await until(
+    `the form behind ${button}`,
+    async () => {
+      // the form may open between the look and the press, and then lies over the button
+      if (!(await dialog.isVisible())) await press.click({ timeout: 1000 }).catch(() => undefined);
+      return dialog.isVisible();
+    },
+    20_000,
+  );
   return dialog;
 }
 
