@@ -23,7 +23,7 @@ export interface RunningWorker {
 }
 
 export async function startWorker(base: Base, instance: string, port: number): Promise<RunningWorker> {
-  const { clock, log, metrics } = base;
+  const { log, metrics } = base;
   const journal = new Journal(base);
   const ingest = new Ingest(base);
   const stall = new Stall(base);

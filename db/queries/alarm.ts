@@ -78,15 +78,15 @@ export async function acknowledgeAlarm(
   at: number,
   note: string | null,
 ): Promise<Alarm | null> {
-  return holding.db.transaction(async (tx) => {
+  await holding.db.transaction(async (tx) => {
     const [taken] = await tx
       .update(alarm)
       .set({ acknowledgedAt: new Date(at), acknowledgedBy: by })
       .where(and(eq(alarm.holdingId, holding.id), eq(alarm.id, id), isNull(alarm.acknowledgedAt)))
       .returning({ id: alarm.id });
     if (taken !== undefined) await addEvent(tx, holding.id, id, { at, kind: 'acknowledged', by, note });
-    return findAlarm({ id: holding.id, db: tx as Db }, id);
   });
+  return findAlarm(holding, id);
 }
 
 export async function findAlarm(holding: Holding, id: string): Promise<Alarm | null> {

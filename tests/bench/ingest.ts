@@ -7,6 +7,7 @@ import path from 'node:path';
 import { WebSocket } from 'ws';
 import { cloneDatabase } from '../support/clone';
 import { makeTemplate, releaseTemplate } from '../support/cluster';
+import { rawText } from '@/worker/raw-text';
 import { ratio, round3 } from './support';
 
 const NODES = 4;
@@ -92,7 +93,7 @@ class Sender {
 
   private constructor(private readonly socket: WebSocket) {
     socket.on('message', (data) => {
-      const frame: unknown = JSON.parse(String(data));
+      const frame: unknown = JSON.parse(rawText(data));
       if (typeof frame === 'object' && frame !== null && 'type' in frame && frame.type === 'ack')
         this.acknowledged();
     });

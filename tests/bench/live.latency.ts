@@ -35,8 +35,7 @@ export function bench() {
         node.sendReadings(pack({ 'bench-1': wanted === 'on' ? 3 : 8 }));
         commanded.push(await node.coil(1, wanted));
         const at = await page.waitForFunction(
-          ([state, since]) =>
-            window.paintedAt.find((one) => one.state === state && one.at > Number(since))?.at,
+          ([state, since]) => window.paintedAt.find((one) => one.state === state && one.at > since)?.at,
           [wanted, sentAt] as const,
         );
         painted.push(Number(await at.jsonValue()) - sentAt);

@@ -2,6 +2,7 @@ import { WebSocket } from 'ws';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { closePools } from '@/db/client';
 import { renewTokens } from '@/db/seed/write-house';
+import { rawText } from '@/worker/raw-text';
 import { makeScene, pack, rows, type Scene } from '../support/field-scene';
 import { OutsideNode } from '../support/outside-node';
 import { ownWorker, type OwnWorker } from '../support/own-worker';
@@ -107,7 +108,7 @@ describe('A malformed frame', () => {
       headers: { authorization: `Bearer ${scene.token}` },
     });
     const said: string[] = [];
-    socket.on('message', (data) => said.push(String(data)));
+    socket.on('message', (data) => said.push(rawText(data)));
     await new Promise((resolve) => socket.once('open', resolve));
     socket.send(JSON.stringify({ type: 'log', seq: 1, level: 'info', text: 'early' }));
     await until('an answer', () => said.length > 0);

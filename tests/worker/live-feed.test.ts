@@ -7,6 +7,7 @@ import { account, member, user } from '@/db/schema/auth';
 import { LIVE_CLOSE, LiveFrame } from '@/lib/live/frames';
 import { auth, hashPassword } from '@/lib/server/auth';
 import { ROLES } from '@/lib/server/permissions';
+import { rawText } from '@/worker/raw-text';
 import { makeScene, pack, type Scene } from '../support/field-scene';
 import { OutsideNode } from '../support/outside-node';
 import { ownWorker, type OwnWorker } from '../support/own-worker';
@@ -58,7 +59,7 @@ function open(house: string, cookie: string, origin = 'http://localhost:3000'): 
     origin,
   });
   const browser: Browser = { frames: [], closed: undefined, refused: undefined, socket };
-  socket.on('message', (data) => browser.frames.push(LiveFrame.parse(JSON.parse(String(data)))));
+  socket.on('message', (data) => browser.frames.push(LiveFrame.parse(JSON.parse(rawText(data)))));
   socket.on('close', (code) => (browser.closed = code));
   socket.on('unexpected-response', (_request, response) => (browser.refused = response.statusCode));
   socket.on('error', () => undefined);

@@ -10,8 +10,8 @@ import {
   type HelloFrame,
   type RelaysFrame,
 } from '@/lib/field/frames';
-import type { HouseState } from '@/lib/live/frames';
-import type { House, HouseDeps } from './house';
+import type { HouseState } from '@/lib/schema/house-state';
+import type { ControlledHouse, HouseDeps } from './house-deps';
 import { reportRows, tripRows } from './house-record';
 import { NodeRelays, loadState, type Order, type Trip } from './node-relays';
 import { houseState, type NodeStanding } from './state';
@@ -49,7 +49,7 @@ export class HouseNodes {
   private readonly nodes = new Map<string, Attached>();
 
   constructor(
-    private readonly house: House,
+    private readonly house: ControlledHouse,
     memory: Memory,
     formerLeaseEnd: number | null,
     private readonly deps: HouseDeps,

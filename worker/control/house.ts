@@ -9,28 +9,14 @@ import type { Memory } from '@/lib/control/memory';
 import type { Plan } from '@/lib/control/plan';
 import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
-import type { Observed, ObservedPoint, PersonCommand, State } from '@/lib/control/types';
-import type { HouseState } from '@/lib/live/frames';
-import type { AlarmKeeper } from '../alarms/keeper';
+import type { Observed, ObservedPoint, PersonCommand } from '@/lib/control/types';
+import type { HouseState } from '@/lib/schema/house-state';
 import { controlFailed, wantedAlarms } from '../alarms/wanted';
-import type { Base } from '../base';
 import type { Cancel } from '../clock';
 import { decisionRows, switchingRows } from './house-record';
+import type { ControlledHouse, HouseDeps } from './house-deps';
 import { HouseNodes } from './house-nodes';
-import type { Entry, Journal } from './journal';
-
-export interface HouseDeps extends Base {
-  journal: Journal;
-  alarms: AlarmKeeper;
-  /** Epoch of this worker's lead. */
-  epoch: () => number;
-  /** A node has seen a later epoch than ours. */
-  raiseEpoch: (seen: number) => void;
-  /** App time at which this worker began to lead. */
-  startedAt: number;
-  onState: (house: House, state: HouseState) => void;
-  onSwitching: (house: House, channel: number, at: number, to: State, claim: string) => void;
-}
+import type { Entry } from './journal';
 
 /** A reading as control takes it. */
 export interface Seen {
@@ -52,7 +38,7 @@ const MEMORY_EVERY_MS = 60_000;
 /** Times of a point's readings that are remembered between two steps. */
 const BETWEEN_MAX = 1000;
 
-export class House {
+export class House implements ControlledHouse {
   readonly nodes: HouseNodes;
   last: StepResult | null = null;
   state: HouseState | null = null;

@@ -8,7 +8,8 @@ import { migrateMemory } from '@/lib/control/memory';
 import { controlFailed } from '../alarms/wanted';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
-import { House, type HouseDeps, type Seen } from './house';
+import { House, type Seen } from './house';
+import type { HouseDeps } from './house-deps';
 
 /** One in case a notification was missed: level, not edge. */
 const LOOK_EVERY_MS = 30_000;

@@ -18,6 +18,7 @@ import type { Base } from '../base';
 import type { Cancel } from '../clock';
 import type { House } from '../control/house';
 import type { CommandLink } from '../control/house-nodes';
+import { rawText } from '../raw-text';
 import type { Ingest } from './ingest';
 import { takePack } from './intake';
 import type { Stall } from './stall';
@@ -53,7 +54,7 @@ export class NodeLink implements CommandLink {
   ) {
     this.heardAtMs = deps.clock.monotonicMs();
     this.cancelWatch = deps.clock.every(pingEveryMs / 4, () => this.watch());
-    socket.on('message', (data, isBinary) => this.guard(() => this.take(String(data), isBinary)));
+    socket.on('message', (data, isBinary) => this.guard(() => this.take(rawText(data), isBinary)));
     socket.on('pong', (data) => this.guard(() => this.takePong(data)));
     socket.on('ping', () => this.guard(() => this.heard()));
     socket.on('error', (error) => deps.log.debug({ err: error, node: nodeId }, 'the line of a node failed'));

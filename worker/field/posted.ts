@@ -60,7 +60,7 @@ async function readBody(request: IncomingMessage, bytesMax: number): Promise<str
   const chunks: Buffer[] = [];
   let bytes = 0;
   for await (const chunk of request) {
-    const part = Buffer.from(chunk);
+    const part = Buffer.from(chunk as Uint8Array); // a request without an encoding yields bytes
     bytes += part.length;
     if (bytes > bytesMax) return null;
     chunks.push(part);

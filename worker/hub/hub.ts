@@ -11,9 +11,11 @@ import type { State } from '@/lib/control/types';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
 import type { House } from '../control/house';
+import type { ControlledHouse } from '../control/house-deps';
 import type { Houses } from '../control/houses';
 import { refuseUpgrade } from '../field/problem';
 import { isoUtc } from '../control/state';
+import { rawText } from '../raw-text';
 import { Reader } from './reader';
 
 /** A revoked session or a lowered role is noticed within this, real time. */
@@ -62,7 +64,7 @@ export class Hub {
   }
 
   /** A house stands as told from now on. */
-  publish(house: House, state: HouseState): void {
+  publish(house: ControlledHouse, state: HouseState): void {
     const readers = this.readers.get(house.id);
     if (readers === undefined) return;
     const text = this.stateFrame(house.id, state);
@@ -76,7 +78,7 @@ export class Hub {
     for (const reader of readers) reader.send(text);
   }
 
-  tellSwitching(house: House, channel: number, at: number, to: State, claim: string): void {
+  tellSwitching(house: ControlledHouse, channel: number, at: number, to: State, claim: string): void {
     this.tell(house.id, { type: 'switching', house: house.id, channel, at: isoUtc(at), to, claim });
   }
 
@@ -104,7 +106,7 @@ export class Hub {
     const readers = this.readers.get(house.id) ?? new Set();
     this.readers.set(house.id, readers.add(reader));
     ws.on('message', (data) => {
-      if (!LiveRequest.safeParse(parse(String(data))).success)
+      if (!LiveRequest.safeParse(parse(rawText(data))).success)
         reader.close(1008, 'only {"type":"here"} may be said');
     });
     ws.on('close', () => {
