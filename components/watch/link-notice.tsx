@@ -8,6 +8,8 @@ import { useHouse, type LiveHouse } from './live-house';
 
 /** A link that is lost for a breath is nobody's business. */
 const PATIENCE_MS = 4000;
+/** A stop of a second must still be read. */
+const SHOWN_MS = 6000;
 
 export function LinkNotice() {
   const house = useHouse();
@@ -19,7 +21,8 @@ export function LinkNotice() {
         What is shown is from <Age at={at} />.
       </>
     );
-  if (house.controlRuns === false) {
+  const isDown = useHeld(house.controlRuns === false, SHOWN_MS);
+  if (isDown) {
     return (
       <Notice tone="alarm" role="alert" title="Control is not running.">
         <p>
@@ -52,6 +55,20 @@ function fallen({ channels }: LiveHouse): string {
     running.length > 0 && `${running.join(', ')} ${running.length === 1 ? 'is' : 'are'} on`,
   ].filter(Boolean);
   return `Every relay is in its safe state, or falls to it within 30 s${states.length === 0 ? '' : `: ${states.join('; ')}`}.`;
+}
+
+/** True while `is`, and for a while after. */
+function useHeld(is: boolean, ms: number): boolean {
+  const [held, setHeld] = useState(is);
+  useEffect(() => {
+    if (is) {
+      setHeld(true);
+      return;
+    }
+    const timer = setTimeout(() => setHeld(false), ms);
+    return () => clearTimeout(timer);
+  }, [is, ms]);
+  return is || held;
 }
 
 /** True once `is` has been true for a while without a break. */

@@ -1,11 +1,12 @@
 'use client';
 import { QueryClient, QueryClientProvider, useQuery, useQueryClient } from '@tanstack/react-query';
-import { createContext, use, useEffect, useMemo, useState, type ReactNode } from 'react';
+import { createContext, use, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { WatchAlarm, WatchView } from '@/lib/live/watch';
 import type { Preferences } from '@/lib/units/preferences';
 import { becauseInstant } from '@/lib/wording/instants';
 import type { Scene } from '@/lib/wording/scene';
+import { ask, askControl, type Control } from './ask';
 import { joinFeed } from './live-feed';
 import { useRedraw } from './redraw';
 
@@ -53,18 +54,12 @@ export function LiveHouseProvider({ start, children }: { start: LiveStart; child
   );
 }
 
-async function ask<Answer>(path: string): Promise<Answer> {
-  const response = await fetch(`/api/v1${path}`, { headers: { accept: 'application/json' } });
-  // health answers 503 with the very body that is asked for
-  if (!response.ok && response.status !== 503) throw new Error(`${path} answered ${response.status}`);
-  return (await response.json()) as Answer;
-}
-
 function Follow({ start, children }: { start: LiveStart; children: ReactNode }) {
   const { slug, id } = start.house;
   const client = useQueryClient();
   const redraw = useRedraw(start.rate);
   const [link, setLink] = useState<Link>('joining');
+  const isLive = useRef(false);
   const key = useMemo(() => ['house', slug], [slug]);
 
   const { data } = useQuery<Standing | null>({
@@ -74,9 +69,9 @@ function Follow({ start, children }: { start: LiveStart; children: ReactNode }) 
     staleTime: Infinity,
     refetchInterval: link === 'live' ? 60_000 : 5000,
   });
-  const health = useQuery<{ worker: { up: boolean } }>({
+  const health = useQuery<Control>({
     queryKey: ['health'],
-    queryFn: () => ask('/health'),
+    queryFn: () => askControl(isLive.current),
     initialData: { worker: { up: start.control.runs } },
     staleTime: Infinity,
     refetchInterval: link === 'live' ? 6000 : 2500,
@@ -86,7 +81,14 @@ function Follow({ start, children }: { start: LiveStart; children: ReactNode }) 
     () =>
       joinFeed(id, {
         link: (is) => {
-          if (typeof is === 'string') return setLink(is);
+          if (typeof is === 'string') {
+            setLink(is);
+            isLive.current = is === 'live';
+            // only a worker that leads lets anybody join; and when it lets go, whether it is gone is asked at once
+            if (is === 'live') client.setQueryData<Control>(['health'], { worker: { up: true } });
+            else void client.invalidateQueries({ queryKey: ['health'] });
+            return;
+          }
           // the session or the house has gone: the server says what to show instead
           window.location.reload();
         },
