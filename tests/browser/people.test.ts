@@ -101,6 +101,8 @@ describe('People in the browser', () => {
     expect(await page.content()).not.toContain(key);
     await page.getByRole('row').filter({ hasText: name }).getByRole('button', { name: /End/ }).click();
     await page.getByRole('button', { name: 'End it' }).click();
+    // under an open dialog the rows are hidden from roles: they would seem gone at once
+    await page.getByRole('dialog').waitFor({ state: 'detached' });
     await page.getByRole('row').filter({ hasText: name }).waitFor({ state: 'detached' });
     expect((await asked()).status).toBe(401);
     await page.context().close();
