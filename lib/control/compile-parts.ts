@@ -101,9 +101,12 @@ export function compileChannel(
     runProofPoint: point(config.runProof?.point ?? null),
     inFrost: config.frostHelp ? 'helps' : cools ? 'cools' : null,
     frostMayBreakRest: own.every((place) => rules[place]?.config.body.rest?.frostMayBreak !== false),
-    interlocks: interlocks.flatMap((lock, place) =>
-      lock.channel === index || lock.other === index ? [place] : [],
-    ),
+    neverWith: interlocks.flatMap((lock) => {
+      if (lock.kind !== 'never-with' || (lock.channel !== index && lock.other !== index)) return [];
+      return [{ lock, other: lock.channel === index ? lock.other : lock.channel }];
+    }),
+    needs: interlocks.filter((lock) => lock.kind === 'needs' && lock.channel === index),
+    neededBy: interlocks.filter((lock) => lock.kind === 'needs' && lock.other === index),
   };
 }
 

@@ -84,7 +84,10 @@ export interface PlanChannel {
   /** On in frost, off in frost, or neither. */
   inFrost: 'helps' | 'cools' | null;
   frostMayBreakRest: boolean;
-  interlocks: number[];
+  /** Interlocks of one kind with the channel at the other end. */
+  neverWith: { lock: PlanInterlock; other: number }[];
+  needs: PlanInterlock[];
+  neededBy: PlanInterlock[];
 }
 
 export interface PlanRule {

@@ -90,7 +90,7 @@ function decideAll(run: Run): boolean {
   let changed = false;
   for (const channel of run.plan.order) {
     // what the channels before it were just given is no longer there for this one
-    askLower(run, channel);
+    if (changed) askLower(run, channel);
     const { claim, state } = decide(run, channel);
     changed = keep(run, channel, claim, state) || changed;
   }

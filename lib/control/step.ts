@@ -20,8 +20,13 @@ export function step(plan: Plan, memory: Memory, observed: Observed, now: number
   return {
     memory: next,
     channels: plan.channels.map((_, index) => channelResult(run, index)),
-    points: plan.points.map((_, index) => pointResult(run, index)),
-    sources: plan.sources.map((_, index) => sourceResult(run, index)),
+    // reckoned when somebody looks: a replay of a winter never does
+    get points() {
+      return plan.points.map((_, index) => pointResult(run, index));
+    },
+    get sources() {
+      return plan.sources.map((_, index) => sourceResult(run, index));
+    },
     faults: next.faults,
     events: run.events.length === 0 ? run.events : tellEvents(run, next),
     wakeAt: next.wakeAt,

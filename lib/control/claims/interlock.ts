@@ -31,13 +31,15 @@ export function settleInterlocks(run: Run): void {
   if (run.plan.interlocks.length === 0) return;
   for (const channel of run.plan.needsOrder) run.interlocked[channel] = needs(run, channel);
   neverWith(run);
-  for (const channel of run.plan.needsOrder.toReversed()) run.interlocked[channel] ??= holds(run, channel);
+  for (let place = run.plan.needsOrder.length - 1; place >= 0; place -= 1) {
+    const channel = entry(run.plan.needsOrder, place);
+    run.interlocked[channel] ??= holds(run, channel);
+  }
 }
 
 /** Off while a needed channel is not yet on for the delay, or is itself to go off. */
 function needs(run: Run, channel: number): InterlockVerdict | null {
-  for (const lock of locksOf(run, channel)) {
-    if (lock.kind !== 'needs' || lock.channel !== channel) continue;
+  for (const lock of entry(run.plan.channels, channel).needs) {
     const other = entry(run.channels, lock.other);
     const leaves = run.demandState[lock.other] === 'off' || run.interlocked[lock.other]?.wants === 'off';
     if (leaves || other.known !== 'on') return verdict(run, lock, channel, null);
@@ -60,7 +62,7 @@ function neverWith(run: Run): void {
     (channel) =>
       run.demandState[channel] === 'on' &&
       run.interlocked[channel] === null &&
-      locksOf(run, channel).some((lock) => lock.kind === 'never-with'),
+      partners(run, channel).length > 0,
   );
   const rank = (channel: number) => CLAIMS.indexOf(entry(run.demandClaim, channel));
   const runs = (channel: number) => (entry(run.channels, channel).counted === 'on' ? 0 : 1);
@@ -105,22 +107,16 @@ function waits(run: Run, channel: number): InterlockVerdict | null {
 function holds(run: Run, channel: number): InterlockVerdict | null {
   if (run.demandState[channel] !== 'off' || entry(run.channels, channel).wanted !== 'on') return null;
   if (run.demandClaim[channel] === 'lock-out' || run.demandClaim[channel] === 'limit') return null;
-  for (const lock of locksOf(run, channel)) {
-    if (lock.kind !== 'needs' || lock.other !== channel || entry(run.channels, lock.channel).known === 'off')
-      continue;
+  for (const lock of entry(run.plan.channels, channel).neededBy) {
+    if (entry(run.channels, lock.channel).known === 'off') continue;
     const { delayMs } = lock;
     return { wants: 'on', kind: 'holds', other: lock.channel, delayMs, until: null, blocksFrost: false };
   }
   return null;
 }
 
-const locksOf = (run: Run, channel: number): PlanInterlock[] =>
-  entry(run.plan.channels, channel).interlocks.map((place) => entry(run.plan.interlocks, place));
-
 const partners = (run: Run, channel: number): { lock: PlanInterlock; other: number }[] =>
-  locksOf(run, channel)
-    .filter((lock) => lock.kind === 'never-with')
-    .map((lock) => ({ lock, other: lock.channel === channel ? lock.other : lock.channel }));
+  entry(run.plan.channels, channel).neverWith;
 
 function verdict(run: Run, lock: PlanInterlock, channel: number, until: number | null): InterlockVerdict {
   const other = lock.channel === channel ? lock.other : lock.channel;
