@@ -1,5 +1,5 @@
 'use client';
-import { useState, type FormEvent } from 'react';
+import { useState, type SubmitEvent } from 'react';
 import { sendAuth, type Refusal } from './send-auth';
 
 /** One form of the door: what is sent, what came back, and whether it is under way. Nothing typed is lost. */
@@ -11,7 +11,7 @@ export function useDoorForm(
   const [refusal, setRefusal] = useState<Refusal | null>(null);
   const [busy, setBusy] = useState(false);
 
-  async function send(event: FormEvent<HTMLFormElement>) {
+  async function send(event: SubmitEvent<HTMLFormElement>) {
     event.preventDefault();
     const form = new FormData(event.currentTarget);
     setBusy(true);
@@ -20,7 +20,7 @@ export function useDoorForm(
     setBusy(false);
     if (refused === null) whenDone(form);
   }
-  return { refusal, busy, onSubmit: (event: FormEvent<HTMLFormElement>) => void send(event) };
+  return { refusal, busy, onSubmit: (event: SubmitEvent<HTMLFormElement>) => void send(event) };
 }
 
 export function text(form: FormData, name: string): string {

@@ -46,7 +46,7 @@ export async function createHolding(name: string, slug: string, db: Db = everyHo
 /** A person with a password. The hash comes from `hashPassword` of lib/server/auth. */
 export async function createUser(
   person: { email: string; name: string; passwordHash: string },
-  db: Db = everyHolding(),
+  db: Pick<Db, 'insert'> = everyHolding(),
 ): Promise<string> {
   const id = uuid();
   await db

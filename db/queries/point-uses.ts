@@ -80,12 +80,12 @@ export async function usesOfPoint(
     if (row.derived?.points.includes(gone.key) === true) uses.push(row.name);
   }
   for (const row of await versionsOf(holding, houseId)) {
-    let isNamed = false;
+    const named = new Set<string>();
     mapRulePoints(row.body, (key) => {
-      isNamed ||= key === gone.key;
+      named.add(key);
       return key;
     });
-    if (isNamed && row.status !== 'retired') uses.push(`rule ${row.name}`);
+    if (named.has(gone.key) && row.status !== 'retired') uses.push(`rule ${row.name}`);
   }
   return [...new Set(uses)];
 }

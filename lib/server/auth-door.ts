@@ -42,7 +42,8 @@ export async function answerAuth(request: Request): Promise<Response> {
       countTry([`address ${path} ${addressOf(request.headers)}`, ...account]);
     }
     if (fields.newPassword !== undefined) check(z.object({ newPassword: Password }), fields);
-    if (fields.organizationId != null && !isId(fields.organizationId)) throw new Problem('not-found');
+    const { organizationId } = fields;
+    if (typeof organizationId === 'string' && !isId(organizationId)) throw new Problem('not-found');
     const headers = new Headers(request.headers);
     headers.set('content-type', 'application/json');
     headers.delete('content-length');

@@ -17,7 +17,7 @@ interface Asking<T extends Operation> {
 /** A route for anybody, signed in or not; what it may tell is its own to know. */
 export function open<const T extends Operation>(
   operation: T,
-  handle: (asking: Asking<T>) => Promise<Response>,
+  handle: (asking: Asking<T>) => Promise<Response> | Response,
 ) {
   return async (request: Request, context: Context): Promise<Response> => {
     try {

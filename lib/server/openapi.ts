@@ -101,8 +101,8 @@ function pathParameter(name: string): Json {
 function queryParameters(operation: Operation): Json[] {
   if (operation.query === undefined) return [];
   const { properties, required } = schemaOf(operation.query, 'input');
-  const needed = Array.isArray(required) ? required : [];
-  return Object.entries(properties ?? {}).map(([name, schema]) => ({
+  const needed: unknown[] = Array.isArray(required) ? required : [];
+  return Object.entries((properties ?? {}) as Json).map(([name, schema]) => ({
     name,
     in: 'query',
     required: needed.includes(name),
@@ -116,13 +116,16 @@ function headers(operation: Operation): Json[] {
 }
 
 function answers(operation: Operation): Json {
-  const entries = Object.entries(operation.answers).map(([status, schema]) => {
+  const entries = Object.entries(operation.answers).map(([status, schema]): [string, Json] => {
     const description = STATUS[Number(status)] ?? 'Answer';
     if (schema === null || schema === undefined) return [status, { description }];
-    const also = (operation.alsoAnswers ?? []).map((type) => [type, { schema: { type: 'string' } }]);
+    const also = (operation.alsoAnswers ?? []).map((type): [string, Json] => [
+      type,
+      { schema: { type: 'string' } },
+    ]);
     const content = {
       'application/json': { schema: schemaOf(schema, 'output') },
-      ...Object.fromEntries(also),
+      ...Object.fromEntries<unknown>(also),
     };
     return [status, { description, content }];
   });

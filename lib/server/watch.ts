@@ -2,7 +2,7 @@ import 'server-only';
 import { inHolding } from '@/db/client';
 import { readPreferences } from '@/db/queries/preferences';
 import { readWatch } from '@/db/queries/watch';
-import type { WatchView } from '@/lib/live/watch';
+import type { WatchView } from '@/lib/schema/watch-view';
 import type { House } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { appClock } from './app-clock';

@@ -11,7 +11,7 @@ async function description(): Promise<Json> {
 
 function everyValue(of: unknown, key: string): unknown[] {
   if (typeof of !== 'object' || of === null) return [];
-  return Object.entries(of).flatMap(([name, value]) => [
+  return Object.entries<unknown>(of as Json).flatMap(([name, value]) => [
     ...(name === key ? [value] : []),
     ...everyValue(value, key),
   ]);

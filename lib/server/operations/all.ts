@@ -9,5 +9,5 @@ import * as yard from './yard';
 
 /** Every route of the interface; a test holds it equal to the route files. */
 export const OPERATIONS: readonly Operation[] = [yard, wiring, running, rules, record, people, open].flatMap(
-  (subject): Operation[] => Object.values(subject),
+  (subject) => Object.values<Operation>(subject),
 );

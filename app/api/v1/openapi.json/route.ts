@@ -2,4 +2,4 @@ import { describe } from '@/lib/server/openapi';
 import { open } from '@/lib/server/open-route';
 import { getDescription } from '@/lib/server/operations/open';
 
-export const GET = open(getDescription, async () => Response.json(describe()));
+export const GET = open(getDescription, () => Response.json(describe()));

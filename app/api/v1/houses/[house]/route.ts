@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendHouse, getHouse, removeHouse } from '@/lib/server/operations/yard';
 
-export const GET = serve(getHouse, async ({ things }) => ({ body: things.house }));
+export const GET = serve(getHouse, ({ things }) => ({ body: things.house }));
 
 export const PATCH = serve(amendHouse, async ({ holding, things, body }) => ({
   body: await houses.amendHouse(holding, things.house.id, merged(HouseCreate, things.house, body)),

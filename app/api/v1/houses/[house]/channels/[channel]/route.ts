@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendChannel, getChannel, removeChannel } from '@/lib/server/operations/wiring';
 
-export const GET = serve(getChannel, async ({ things }) => ({ body: things.channel }));
+export const GET = serve(getChannel, ({ things }) => ({ body: things.channel }));
 
 export const PATCH = serve(amendChannel, async ({ holding, things, body }) => ({
   body: await channels.amendChannel(

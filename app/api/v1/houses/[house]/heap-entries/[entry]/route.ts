@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendHeapEntry, getHeapEntry } from '@/lib/server/operations/record';
 
-export const GET = serve(getHeapEntry, async ({ things }) => ({ body: things.entry }));
+export const GET = serve(getHeapEntry, ({ things }) => ({ body: things.entry }));
 
 export const PATCH = serve(amendHeapEntry, async ({ holding, things, body, caller, now }) => {
   const { house, entry } = things;

@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendInterlock, getInterlock, removeInterlock } from '@/lib/server/operations/wiring';
 
-export const GET = serve(getInterlock, async ({ things }) => ({ body: things.interlock }));
+export const GET = serve(getInterlock, ({ things }) => ({ body: things.interlock }));
 
 export const PATCH = serve(amendInterlock, async ({ holding, things, body }) => ({
   body: await interlocks.amendInterlock(

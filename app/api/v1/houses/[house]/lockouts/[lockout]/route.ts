@@ -3,7 +3,7 @@ import { serve } from '@/lib/server/guard';
 import { getLockout, removeLockout } from '@/lib/server/operations/wiring';
 import { untilTaken } from '@/lib/server/taken';
 
-export const GET = serve(getLockout, async ({ things }) => ({ body: things.lockout }));
+export const GET = serve(getLockout, ({ things }) => ({ body: things.lockout }));
 
 export const DELETE = serve(removeLockout, async ({ holding, things, caller, now }) => {
   const { house, lockout } = things;

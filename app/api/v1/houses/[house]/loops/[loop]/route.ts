@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendLoop, getLoop, removeLoop } from '@/lib/server/operations/yard';
 
-export const GET = serve(getLoop, async ({ things }) => ({ body: things.loop }));
+export const GET = serve(getLoop, ({ things }) => ({ body: things.loop }));
 
 export const PATCH = serve(amendLoop, async ({ holding, things, body }) => ({
   body: await loops.amendLoop(

@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendNode, getNode, removeNode } from '@/lib/server/operations/wiring';
 
-export const GET = serve(getNode, async ({ things }) => ({ body: things.node }));
+export const GET = serve(getNode, ({ things }) => ({ body: things.node }));
 
 export const PATCH = serve(amendNode, async ({ holding, things, body }) => ({
   body: await nodes.amendNode(

@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendPoint, getPoint, removePoint } from '@/lib/server/operations/wiring';
 
-export const GET = serve(getPoint, async ({ things }) => ({ body: things.point }));
+export const GET = serve(getPoint, ({ things }) => ({ body: things.point }));
 
 export const PATCH = serve(amendPoint, async ({ holding, things, body, caller, now }) => ({
   body: await points.amendPoint(

@@ -4,7 +4,7 @@ import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendSource, getSource, removeSource } from '@/lib/server/operations/yard';
 
-export const GET = serve(getSource, async ({ things }) => ({ body: things.source }));
+export const GET = serve(getSource, ({ things }) => ({ body: things.source }));
 
 export const PATCH = serve(amendSource, async ({ holding, things, body }) => ({
   body: await sources.amendSource(
