@@ -1,10 +1,8 @@
 /** The bands of a night with their thresholds labelled in place. Pure. */
-import type { WatchBand } from '@/lib/live/watch';
+import type { WatchBand } from '@/lib/schema/watch-view';
 import { temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import type { Frame, NightChart } from './night-layout';
-
-export type Scale = (value: number) => number;
+import type { Frame, NightChart, Scale } from './night-chart';
 
 export interface DrawnBand {
   key: string;

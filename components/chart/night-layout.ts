@@ -1,49 +1,14 @@
 /** Where everything of a noon-to-noon chart stands, in drawing units. Pure, so that it can be tested without a browser. */
 import { scaleLinear } from 'd3-scale';
 import { line as pathOf } from 'd3-shape';
-import type { WatchBand, WatchLine, WatchStrip } from '@/lib/live/watch';
+import type { WatchLine } from '@/lib/schema/watch-view';
 import { temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock } from '@/lib/units/time';
 import { degreeTicks, hourTicks, spread, type DegreeTick, type HourTick } from './axis';
-import { bandsOf, type DrawnBand, type Scale } from './night-bands';
+import { bandsOf, type DrawnBand } from './night-bands';
+import type { Frame, NightChart, Scale } from './night-chart';
 import { stripBoxes, type StripBox } from './strip';
-
-export interface NightChart {
-  night: { from: number; to: number };
-  now: number;
-  zone: string;
-  lines: WatchLine[];
-  bands: WatchBand[];
-  strips: WatchStrip[];
-  /** The point that the house's main band goes by: drawn strongest. */
-  main: string | null;
-  frostLimit: number | null;
-}
-
-export interface Frame {
-  width: number;
-  left: number;
-  right: number;
-  top: number;
-  /** Height of the part with temperatures. */
-  plot: number;
-  /** From one strip to the next, and how high a strip is. */
-  stripStep: number;
-  stripHeight: number;
-  /** A strip's name stands over it instead of at its right. */
-  namesAbove: boolean;
-  everyHours: number;
-}
-
-export const WIDE: Frame = {
-  ...{ width: 690, left: 38, right: 104, top: 24, plot: 248 },
-  ...{ stripStep: 26, stripHeight: 14, namesAbove: false, everyHours: 3 },
-};
-export const NARROW: Frame = {
-  ...{ width: 348, left: 34, right: 60, top: 24, plot: 196 },
-  ...{ stripStep: 36, stripHeight: 14, namesAbove: true, everyHours: 6 },
-};
 
 export interface DrawnLine {
   key: string;

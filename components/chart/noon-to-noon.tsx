@@ -4,7 +4,8 @@ import { degrees, temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock } from '@/lib/units/time';
 import { hourRows, nightSummary } from '@/lib/wording/night-summary';
-import { NARROW, nightLayout, WIDE, type NightChart } from './night-layout';
+import { NARROW, WIDE, type NightChart } from './night-chart';
+import { nightLayout } from './night-layout';
 import { NightSvg } from './night-svg';
 
 /**

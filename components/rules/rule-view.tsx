@@ -1,5 +1,6 @@
 import Link from 'next/link';
-import { NARROW, nightLayout, WIDE, type NightChart } from '@/components/chart/night-layout';
+import { NARROW, WIDE, type NightChart } from '@/components/chart/night-chart';
+import { nightLayout } from '@/components/chart/night-layout';
 import { compileTimeFacts, place } from '@/lib/control/calendar';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { RuleWithVersions } from '@/lib/schema/rule-view';

@@ -5,7 +5,7 @@ import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
-import type { WatchAlarm } from '@/lib/live/watch';
+import type { WatchAlarm } from '@/lib/schema/watch-view';
 import { alarmWords, byGravity } from '@/lib/wording/alarm';
 import { timeWords } from '@/lib/wording/scene';
 import { useHouse } from './live-house';

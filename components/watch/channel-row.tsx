@@ -1,6 +1,6 @@
 import { classes } from '@/components/ui/classes';
 import { Segmented } from '@/components/ui/segmented';
-import type { WatchChannel } from '@/lib/live/watch';
+import type { WatchChannel } from '@/lib/schema/watch-view';
 import type { StateChannel } from '@/lib/schema/house-state';
 import { becauseWords } from '@/lib/wording/because';
 import { reportWords, stateWord } from '@/lib/wording/channel-state';
@@ -81,10 +81,12 @@ export function ChannelRow({
         <button
           type="button"
           onClick={onWhy}
-          aria-label={`Why is ${channel.label} ${word.toLowerCase()}?`}
           className="-mb-2 inline-flex min-h-11 items-center underline underline-offset-4 hover:text-ink"
         >
           Why, and what next
+          <span className="sr-only">
+            : {channel.label}, {word.toLowerCase()}
+          </span>
         </button>
       </div>
       <div className="md:justify-self-end">

@@ -2,7 +2,7 @@
 import { QueryClient, QueryClientProvider, useQuery, useQueryClient } from '@tanstack/react-query';
 import { createContext, use, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 import type { HouseState } from '@/lib/schema/house-state';
-import type { WatchAlarm, WatchView } from '@/lib/live/watch';
+import type { WatchAlarm, WatchView } from '@/lib/schema/watch-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { becauseInstant } from '@/lib/wording/instants';
 import type { Scene } from '@/lib/wording/scene';

@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { Figures, Panel } from '@/components/ui/panel';
 import { totalOf } from '@/lib/analysis/totals';
 import type { NightSummary } from '@/lib/analysis/nights';
-import type { WatchSource } from '@/lib/live/watch';
+import type { WatchSource } from '@/lib/schema/watch-view';
 import { count, energy, temperature, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock, duration } from '@/lib/units/time';

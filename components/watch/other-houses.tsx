@@ -1,6 +1,6 @@
 import Link from 'next/link';
 import { Panel } from '@/components/ui/panel';
-import type { WatchCard } from '@/lib/live/watch';
+import type { WatchCard } from '@/lib/schema/watch-view';
 import { count, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';

@@ -1,5 +1,5 @@
 /** From how a house stands to what its sentence is made of. */
-import type { WatchBand, WatchChannel, WatchSource } from '@/lib/live/watch';
+import type { WatchBand, WatchChannel, WatchSource } from '@/lib/schema/watch-view';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { HouseStanding } from '@/lib/wording/watch-standing';
 

@@ -3,7 +3,7 @@ import { StripKey } from '@/components/chart/strip';
 import { ButtonLink } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
 import { Empty } from '@/components/ui/states';
-import type { WatchView } from '@/lib/live/watch';
+import type { WatchView } from '@/lib/schema/watch-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { Alarms } from './alarms';
 import { Channels } from './channels';

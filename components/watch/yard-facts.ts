@@ -1,5 +1,5 @@
 /** What the yard drawing shows, from how the house stands. Pure. */
-import type { WatchChannel, WatchLoop, WatchPoint, WatchSource } from '@/lib/live/watch';
+import type { WatchChannel, WatchLoop, WatchPoint, WatchSource } from '@/lib/schema/watch-view';
 import type { HouseState } from '@/lib/schema/house-state';
 
 /** A value that may be shown: null where there is no reading that can be trusted. */

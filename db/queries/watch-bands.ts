@@ -4,7 +4,7 @@ import type { Holding } from '@/db/client';
 import { rule, ruleVersion } from '@/db/schema/rule';
 import { compileCalendar, place } from '@/lib/control/calendar';
 import type { RuleBody } from '@/lib/control/types';
-import type { WatchBand } from '@/lib/live/watch';
+import type { WatchBand } from '@/lib/schema/watch-view';
 
 interface Where {
   id: string;

@@ -3,7 +3,7 @@ import type { Holding } from '@/db/client';
 import type { Night } from '@/lib/analysis/night';
 import { channelSpans } from '@/lib/analysis/spans';
 import type { HouseState } from '@/lib/schema/house-state';
-import type { WatchLine, WatchLoop, WatchStrip } from '@/lib/live/watch';
+import type { WatchLine, WatchLoop, WatchStrip } from '@/lib/schema/watch-view';
 import { recordsOf } from './channel-records';
 import type { HouseRecord } from './plan';
 import { readSeries, type SteppedSeries } from './reading';

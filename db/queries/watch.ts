@@ -7,7 +7,7 @@ import { channel, house as houseTable } from '@/db/schema/yard';
 import { nightOf } from '@/lib/analysis/night';
 import type { HouseConfig } from '@/lib/control/types';
 import type { HouseState } from '@/lib/schema/house-state';
-import type { WatchCard, WatchView } from '@/lib/live/watch';
+import type { WatchCard, WatchView } from '@/lib/schema/watch-view';
 import { heatCapacityFlow, pressureAtAltitude } from '@/lib/physics/air';
 import type { House } from '@/lib/schema/yard-view';
 import { listAlarms } from './alarm';

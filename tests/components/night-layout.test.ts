@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { degreeTicks, hourTicks, spread } from '@/components/chart/axis';
-import { NARROW, nightLayout, WIDE, type NightChart } from '@/components/chart/night-layout';
+import { NARROW, WIDE, type NightChart } from '@/components/chart/night-chart';
+import { nightLayout } from '@/components/chart/night-layout';
 import { stripBoxes } from '@/components/chart/strip';
 import { USUAL } from '@/lib/units/preferences';
 

@@ -1,7 +1,7 @@
 /** What Watch is made of: read once by the server, and kept up to date in the browser by the live feed. */
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { SpanKind } from '@/lib/analysis/spans';
-import type { HouseState } from '@/lib/schema/house-state';
+import type { HouseState } from './house-state';
 
 export interface WatchHouse {
   id: string;
