@@ -129,7 +129,7 @@ async function nightsGrown(holding: Holding, houseId: string, nowMs: number): Pr
       select min((body->>'readings')::int) as readings from night
       where holding_id = ${holding.id} and house_id = ${houseId} and night = ${night.night}`);
     const kept = rows[0]?.readings;
-    if (kept != null && kept < (await countReadings(holding, yard, night))) grown.push(night);
+    if (typeof kept === 'number' && kept < (await countReadings(holding, yard, night))) grown.push(night);
   }
   return grown;
 }
