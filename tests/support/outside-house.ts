@@ -1,6 +1,7 @@
 /** A house made through the interface, as somebody would who knows only its description. */
 import type { Body, OutsideApi } from './outside-api';
 import { OutsideNode } from './outside-node';
+import { until } from './until';
 
 export interface OutsideHouse {
   slug: string;
@@ -14,7 +15,7 @@ let made = 0;
 export async function makeHouse(
   api: OutsideApi,
   rule: Record<string, unknown> = {},
-  fan: Record<string, unknown> = {},
+  { staleAfter = 6 } = {},
 ): Promise<OutsideHouse> {
   const name = `Outside house ${process.pid} ${++made}`;
   const house = await api.make('/houses', {
@@ -32,7 +33,7 @@ export async function makeHouse(
   const node = await api.make(`${at}/nodes`, { key: nodeKey, kind: 'socket', reportEvery: 30, channels: 4 });
   const point = (key: string, role: string, more: object = {}): Promise<Body> =>
     api.make(`${at}/points`, { key, node: nodeKey, name: key, role, unit: 'Cel', ...more });
-  await point('bench-1', 'bench', { staleAfter: 6 });
+  await point('bench-1', 'bench', { staleAfter });
   await point('house-air', 'house-air');
   await point('core', 'heap-core');
   await api.make(`${at}/sources`, { name: `Heap ${process.pid} ${made}`, kind: 'heap', corePoint: 'core' });
@@ -50,7 +51,6 @@ export async function makeHouse(
       load: { kind: 'motor', watts: 12, volts: 24, supply: 'dc', contactAmps: 5 },
       minOn: 0,
       minOff: 0,
-      ...fan,
     });
   await channel(1, 'fan-1');
   await channel(2, 'fan-2');
@@ -74,8 +74,19 @@ export async function putIntoForce(
   return String(rule['id']);
 }
 
+/** Connects as a node does: again and again while the worker is away. */
 export async function joinNode(url: string, house: OutsideHouse): Promise<OutsideNode> {
-  return OutsideNode.connect(url, house.token, house.nodeKey, 4);
+  let node: OutsideNode | undefined;
+  await until(
+    'the node is taken in',
+    async () => {
+      node = await OutsideNode.connect(url, house.token, house.nodeKey, 4).catch(() => undefined);
+      return node !== undefined;
+    },
+    20_000,
+  );
+  if (node === undefined) throw new Error('no node');
+  return node;
 }
 
 /** A pack with one absolute time for all. */

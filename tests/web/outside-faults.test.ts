@@ -10,6 +10,8 @@ let api: OutsideApi;
 
 // Ten times as fast: a lease of 30 s lasts 3 s.
 const RATE = 10;
+/** Readings stay in use through a restart. */
+const STEADY = { staleAfter: 3600 };
 
 beforeAll(async () => {
   app = await startApp({ yard: false, rate: RATE, seed: { nights: 0 } });
@@ -35,7 +37,7 @@ const killed = async (part: 'worker' | 'web') => {
 
 describe('A worker killed in mid-draw', () => {
   it('leaves the coil to its lease, and comes back to rest, credit and latch as they stood', async () => {
-    const house = await makeHouse(api, { rest: { longestDraw: 600, least: 900 } });
+    const house = await makeHouse(api, { rest: { longestDraw: 600, least: 900 } }, STEADY);
     const node = await joinNode(app.url, house);
     // 5 °C lies inside the band: only a latch that was kept runs the fan there
     await node.readings(pack({ 'bench-1': 3, 'house-air': 6 }, await appNowS()));
@@ -60,7 +62,7 @@ describe('A worker killed in mid-draw', () => {
   }, 60_000);
 
   it('does not cut a rest short', async () => {
-    const house = await makeHouse(api, { rest: { longestDraw: 20, least: 400 } });
+    const house = await makeHouse(api, { rest: { longestDraw: 20, least: 400 } }, STEADY);
     const node = await joinNode(app.url, house);
     await node.readings(pack({ 'bench-1': 3, 'house-air': 6 }, await appNowS()));
     await node.coil(1, 'on');
@@ -82,7 +84,7 @@ describe('A worker killed in mid-draw', () => {
 
 describe('A web server killed', () => {
   it('is noticed by no node', async () => {
-    const house = await makeHouse(api);
+    const house = await makeHouse(api, {}, STEADY);
     const node = await joinNode(app.url, house);
     await node.readings(pack({ 'bench-1': 6, 'house-air': 6 }, await appNowS()));
     const t = await appNowS();
