@@ -11,20 +11,15 @@ export function channelResult(run: Run, index: number): ChannelResult {
   const { id, number, safe } = entry(run.plan.channels, index);
   const memory = entry(run.channels, index);
   const claim = memory.claim ?? 'idle';
+  const because = becauseOf(run, index, claim);
   return {
     id,
     number,
     state: memory.wanted,
     coil: (memory.wanted === 'on') === (safe === 'off') ? 'on' : 'off',
     claim,
-    // a reason is asked for seldom, and a replay of a winter has millions: it is told when somebody looks
-    get because() {
-      return becauseOf(run, index, claim);
-    },
-    get until() {
-      const { until } = becauseOf(run, index, claim);
-      return typeof until === 'number' ? until : null;
-    },
+    because,
+    until: typeof because.until === 'number' ? because.until : null,
     mode: memory.lockouts.length > 0 ? 'locked' : memory.hand !== null ? 'hand' : 'auto',
     counted: memory.counted,
   };

@@ -6,7 +6,7 @@ import { play } from './play';
 import { channelResult, pointResult, sourceResult } from './results';
 import type { Run } from './run';
 import type { StepResult } from './step-result';
-import type { ControlEvent, Observed } from './types';
+import type { ChannelResult, ControlEvent, Fault, Observed, PointResult, SourceResult } from './types';
 
 /**
  * Decides every channel of a house at `now` (epoch ms). Level-triggered: the same inputs give the same outputs, a
@@ -17,20 +17,36 @@ import type { ControlEvent, Observed } from './types';
  */
 export function step(plan: Plan, memory: Memory, observed: Observed, now: number): StepResult {
   const { run, memory: next } = play(plan, memory, observed, now, { explains: true });
-  return {
-    memory: next,
-    channels: plan.channels.map((_, index) => channelResult(run, index)),
-    // reckoned when somebody looks: a replay of a winter never does
-    get points() {
-      return plan.points.map((_, index) => pointResult(run, index));
-    },
-    get sources() {
-      return plan.sources.map((_, index) => sourceResult(run, index));
-    },
-    faults: next.faults,
-    events: run.events.length === 0 ? run.events : tellEvents(run, next),
-    wakeAt: next.wakeAt,
-  };
+  return new Answer(run, next);
+}
+
+/** Points and sources are reckoned when somebody looks: a replay of a winter never does. */
+class Answer implements StepResult {
+  readonly memory: Memory;
+  readonly channels: ChannelResult[];
+  readonly faults: Fault[];
+  readonly events: ControlEvent[];
+  readonly wakeAt: number | null;
+  readonly #run: Run;
+
+  constructor(run: Run, memory: Memory) {
+    this.#run = run;
+    this.memory = memory;
+    this.channels = [];
+    for (let index = 0; index < run.channels.length; index += 1)
+      this.channels.push(channelResult(run, index));
+    this.faults = memory.faults;
+    this.events = run.events.length === 0 ? run.events : tellEvents(run, memory);
+    this.wakeAt = memory.wakeAt;
+  }
+
+  get points(): PointResult[] {
+    return this.#run.plan.points.map((_, index) => pointResult(this.#run, index));
+  }
+
+  get sources(): SourceResult[] {
+    return this.#run.plan.sources.map((_, index) => sourceResult(this.#run, index));
+  }
 }
 
 /** Switchings that a later one of the same step overtook are marked; the others learn what comes next. */

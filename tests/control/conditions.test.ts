@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { Engine, type ConditionProperties, type TopLevelCondition } from 'json-rules-engine';
+import { Engine } from 'json-rules-engine';
 import { describe, expect, it } from 'vitest';
 import { canNeverHold } from '@/lib/control/checks/never-holds';
 import { compileConditions, type FactValue, type Verdict } from '@/lib/control/conditions';

@@ -110,19 +110,19 @@ export function ruleStanding(run: Run, index: number): RuleStanding {
   const { point, key, offset } = entry(points, using);
   const value = point === null ? null : entry(run.points, point).value;
   const why = entry(run.standing, index);
-  const unknown =
-    why === 'condition-unknown' ? only?.facts.filter((fact) => readFact(run, fact) === null) : undefined;
-  return {
+  const standing: RuleStanding = {
     rule: config.name,
     version: config.version,
     purpose: warm ? 'warm' : 'cool',
     point: key,
-    ...(using > 0 ? { standInFor: entry(points, 0).key } : {}),
     value: value === null ? null : value + offset,
     low,
     high,
     latch,
     why,
-    ...(unknown === undefined ? {} : { unknown }),
   };
+  if (using > 0) standing.standInFor = entry(points, 0).key;
+  if (why === 'condition-unknown')
+    standing.unknown = only?.facts.filter((fact) => readFact(run, fact) === null) ?? [];
+  return standing;
 }
