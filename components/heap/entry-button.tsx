@@ -2,20 +2,10 @@
 import dynamic from 'next/dynamic';
 import { useState, type ReactNode } from 'react';
 import { Button, type ButtonKind } from '@/components/ui/button';
-import type { HeapEntry } from '@/lib/schema/heap-view';
+import type { EntryTarget } from './entry-target';
 
 /** The form and its schema come when they are asked for: most visits only read. */
 const EntryDialog = dynamic(() => import('./entry-dialog').then((module) => module.EntryDialog));
-
-export interface EntryTarget {
-  house: string;
-  /** Slug of the heap. */
-  heap: string;
-  zone: string;
-  kind: HeapEntry['kind'];
-  /** The one that is amended; left out, a new one is written. */
-  entry?: HeapEntry;
-}
 
 export function EntryButton({
   look = 'plain',

@@ -8,8 +8,8 @@ import { Field, NumberField, TextArea, control } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import { heapCautions, kindWord } from '@/lib/wording/heap';
-import type { EntryTarget } from './entry-button';
 import { draftOf, judge, type EntryDraft } from './entry-draft';
+import type { EntryTarget } from './entry-target';
 import { MaterialFields } from './material-fields';
 
 const HAS_MATERIALS = ['built', 'fed'];

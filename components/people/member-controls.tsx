@@ -7,7 +7,7 @@ import { send, type Answer } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import { capital } from '@/lib/wording/counts';
 import { roleSays, type RoleFacts } from '@/lib/wording/people';
-import type { Member } from './members';
+import type { Member } from './member';
 import { RoleChoice } from './role-choice';
 
 /** Changes a person's role or takes them out, each after a question that says what will happen. */

@@ -2,16 +2,8 @@ import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import { day } from '@/lib/units/time';
 import { capital } from '@/lib/wording/counts';
 import type { RoleFacts } from '@/lib/wording/people';
+import type { Member } from './member';
 import { MemberControls } from './member-controls';
-
-export interface Member {
-  id: string;
-  userId: string;
-  name: string;
-  email: string;
-  role: string;
-  since: number;
-}
 
 export function Members({
   members,

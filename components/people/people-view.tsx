@@ -7,7 +7,8 @@ import { Audit, type AuditEntry } from './audit';
 import { Invitations, type Invitation } from './invitations';
 import { Invite } from './invite';
 import { Keys, type Key } from './keys';
-import { Members, type Member } from './members';
+import type { Member } from './member';
+import { Members } from './members';
 import { NewKey } from './new-key';
 
 export interface PeopleViewData {
