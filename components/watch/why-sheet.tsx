@@ -1,9 +1,9 @@
 'use client';
 import { useQuery } from '@tanstack/react-query';
 import Link from 'next/link';
-import { classes } from '@/components/ui/classes';
 import { Dialog } from '@/components/ui/dialog';
 import { Skeleton } from '@/components/ui/states';
+import { becauseWords } from '@/lib/wording/because';
 import { stateWord } from '@/lib/wording/channel-state';
 import { becauseInstant } from '@/lib/wording/instants';
 import { ladderLines, nextWords, type LadderLine, type Step } from '@/lib/wording/ladder';
@@ -41,7 +41,7 @@ export function WhySheet({ channelKey, onClose }: { channelKey: string; onClose:
       as="sheet"
       onOpenChange={(open) => (open ? undefined : onClose())}
       title={`Why ${channel.label} is ${stateWord(standing, channel.loadKind).toLowerCase()}`}
-      description="Reasons are asked from the top; the first that speaks decides."
+      description={becauseWords(standing.claim, standing.because, scene)}
     >
       {isError ? (
         <p role="alert" className="font-semibold text-alarm">
@@ -51,7 +51,6 @@ export function WhySheet({ channelKey, onClose }: { channelKey: string; onClose:
         <Skeleton className="h-72" />
       ) : (
         <>
-          <Ladder lines={ladderLines(data.ladder, scene)} />
           <section aria-label="What comes next">
             <h3 className="font-semibold">What comes next</h3>
             {next.length === 0 ? (
@@ -63,6 +62,11 @@ export function WhySheet({ channelKey, onClose }: { channelKey: string; onClose:
                 ))}
               </ul>
             )}
+          </section>
+          <section aria-label="The ladder">
+            <h3 className="font-semibold">What was asked, from the top</h3>
+            <p className="mb-2 text-[0.9rem] text-soft">The first that speaks decides.</p>
+            <Ladder lines={ladderLines(data.ladder, scene)} />
           </section>
           <p className="text-[0.9rem] text-soft">
             {data.version === null ? 'No rule in force.' : `By version ${data.version} of its rule.`} As of{' '}
@@ -79,25 +83,20 @@ export function WhySheet({ channelKey, onClose }: { channelKey: string; onClose:
 
 function Ladder({ lines }: { lines: LadderLine[] }) {
   return (
-    <ol className="divide-y divide-line border-y border-line">
-      {lines.map((line) => (
-        <li
-          key={line.claim}
-          className={classes(
-            'grid grid-cols-[1.25rem_minmax(0,1fr)] gap-x-2 py-2',
-            line.decides ? '-mx-2 rounded-md bg-faint px-2' : 'text-soft',
-          )}
-        >
-          <span aria-hidden="true" className="pt-0.5 font-mono">
-            {line.decides ? '▸' : line.speaks ? '·' : ''}
-          </span>
-          <span>
-            <span className={line.decides ? 'font-semibold text-ink' : undefined}>{line.title}</span>
-            {line.decides ? <span className="sr-only"> decides</span> : null}
-            <span className={classes('block text-[0.95rem]', line.decides && 'text-ink')}>{line.words}</span>
-          </span>
-        </li>
-      ))}
+    <ol className="border-y border-line">
+      {lines.map((line) =>
+        line.decides ? (
+          <li key={line.claim} className="-mx-2 rounded-md border-l-4 border-ember bg-faint p-2">
+            <span className="font-semibold">{line.title}</span>
+            <span className="sr-only"> decides</span>
+            <span className="block">{line.words}</span>
+          </li>
+        ) : (
+          <li key={line.claim} className="py-1 text-[0.9rem] text-soft">
+            <span className="text-ink">{line.title}.</span> {line.words}
+          </li>
+        ),
+      )}
     </ol>
   );
 }

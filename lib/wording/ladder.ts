@@ -49,7 +49,8 @@ export function nextWords(next: readonly unknown[], scene: Scene): string[] {
 }
 
 function oneNext(next: NextReason, scene: Scene): string {
-  const does = `${CLAIM_NAMES[next.claim]} turns it ${next.state}`;
+  const does =
+    next.claim === 'idle' ? `it goes ${next.state}` : `${CLAIM_NAMES[next.claim]} turns it ${next.state}`;
   if (next.kind === 'then') return `At ${timeWords(next.at, scene) ?? ''}, if no reading changes: ${does}.`;
   const unit = scene.points.find((point) => point.key === next.point)?.unit ?? 'Cel';
   const passes = next.side === 'below' ? 'falls under' : 'rises above';

@@ -96,7 +96,7 @@ describe('Watch in the browser', () => {
 
   it('says why, down to the claim that decided, and gives focus back', async () => {
     const page = await watch({ width: 360, dark: true });
-    const why = page.getByRole('button', { name: /Why, and what next: Gate-heap fan/ });
+    const why = page.getByRole('button', { name: /Why, and what next\s*: Gate-heap fan/ });
     await why.click();
     const sheet = page.getByRole('dialog');
     await sheet.getByText('Nobody has locked it out.').waitFor();

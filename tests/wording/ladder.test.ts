@@ -39,6 +39,7 @@ it('what comes next is told by the clock and by readings', () =>
         { kind: 'then', at: at('06:06'), state: 'on', claim: 'band' },
         { kind: 'if', point: 'house-air', side: 'below', value: 3, state: 'on', claim: 'frost' },
         { kind: 'if', point: null, side: 'below', value: 3, state: 'on', claim: 'frost' },
+        { kind: 'if', point: 'bench-1', side: 'above', value: 7.5, state: 'off', claim: 'idle' },
         { kind: 'riddle' },
       ],
       scene,
@@ -47,6 +48,7 @@ it('what comes next is told by the clock and by readings', () =>
     'At 06:06, if no reading changes: the band turns it on.',
     'If the house air falls under 3.0 °C: frost turns it on.',
     'If the coldest sensor of the house falls under 3.0 °C: frost turns it on.',
+    'If bench probe 1 rises above 7.5 °C: it goes off.',
   ]));
 
 describe('a load’s state in a word', () => {
