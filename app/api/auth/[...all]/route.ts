@@ -1,3 +1,4 @@
 import { answerAuth } from '@/lib/server/auth-door';
 
-export { answerAuth as GET, answerAuth as POST };
+export const GET = answerAuth;
+export const POST = answerAuth;
