@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import type { ReactNode } from 'react';
 import { ClockProvider } from '@/components/ui/clock';
 import { Toasts } from '@/components/ui/toast';
@@ -35,6 +36,9 @@ function Yours({ data }: { data: ShellData }) {
     <div className="flex flex-col items-start gap-3">
       <Reading preferences={data.preferences} theme={data.theme} />
       <p className="text-[0.9rem] text-soft">Signed in as {data.person}</p>
+      <Link href="/account" className="flex min-h-11 items-center underline underline-offset-4">
+        Your account and password
+      </Link>
       <SignOut />
     </div>
   );
