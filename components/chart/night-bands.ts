@@ -46,7 +46,10 @@ function comesNear(chart: NightChart, band: WatchBand, period: WatchBand['period
 export function bandsOf(ground: Ground, preferences: Preferences): DrawnBand[] {
   const { chart } = ground;
   const known = new Set(chart.lines.filter((one) => INSIDE.includes(one.role)).map((one) => one.key));
-  const isMain = (band: WatchBand) => band.point === chart.main && band.purpose === 'warm';
+  // a point may be governed twice, by a fan and a mat: the first is the house's, with all its versions of the night
+  const leads = chart.bands.find((band) => band.point === chart.main && band.purpose === 'warm')?.channel;
+  const isMain = (band: WatchBand) =>
+    band.channel === leads && band.point === chart.main && band.purpose === 'warm';
   const drawn = chart.bands
     .filter((band) => known.has(band.point))
     .sort((one, other) => Number(isMain(one)) - Number(isMain(other)));

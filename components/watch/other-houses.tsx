@@ -41,7 +41,9 @@ export function OtherHouses({
                   </span>
                 </span>
                 <span className="text-right">
-                  <span className={`font-mono ${isCold ? 'font-semibold text-alarm' : 'text-house'}`}>
+                  <span
+                    className={`font-mono ${isCold ? 'font-semibold text-alarm' : card.coldest === null ? 'text-soft' : 'text-house'}`}
+                  >
                     {temperature(card.coldest, preferences)}
                   </span>
                   {card.alarms === 0 ? null : (

@@ -67,6 +67,19 @@ describe('the chart of a night', () => {
       [value(band?.y ?? 0), value((band?.y ?? 0) + (band?.height ?? 0))].map((one) => one.toFixed(3)),
     ).toEqual(['7.500', '4.000']);
   });
+  it('draws a second band of the same point by name, aside from the first', () => {
+    const mat = {
+      point: 'bench-1',
+      channel: 'Bench mat',
+      purpose: 'warm' as const,
+      periods: [{ ...chart.night, low: 4, high: 5 }],
+    };
+    const both = nightLayout({ ...chart, bands: [...chart.bands, mat] }, WIDE, USUAL).bands;
+    expect(both.map((band) => [band.isMain, band.labels[0]?.text])).toEqual([
+      [false, 'Bench mat: off above 5.0'],
+      [true, 'off above 7.5'],
+    ]);
+  });
   it('leaves out a band that nothing came near', () => expect(layout.bands).toHaveLength(1));
   it('puts the strip of a run under the hours in which it ran', () => {
     const [box] = layout.strips[0]?.boxes ?? [];
