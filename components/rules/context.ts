@@ -1,6 +1,6 @@
 'use client';
 import { createContext, use } from 'react';
-import { useFormContext, type UseFormReturn } from 'react-hook-form';
+import { useFormContext, type FieldPath, type RegisterOptions, type UseFormReturn } from 'react-hook-form';
 import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
@@ -25,8 +25,8 @@ export function useFacts(): EditorFacts {
 }
 
 /** The form, and the error of a field by its dotted name. */
-export function useRuleForm(): UseFormReturn<RuleForm> & { errorOf: (path: string) => string | undefined } {
-  const form = useFormContext<RuleForm>();
+export function useRuleForm() {
+  const form: UseFormReturn<RuleForm> = useFormContext<RuleForm>();
   const errors: unknown = form.formState.errors;
   const errorOf = (path: string) => {
     let at = errors;
@@ -34,5 +34,15 @@ export function useRuleForm(): UseFormReturn<RuleForm> & { errorOf: (path: strin
       at = typeof at === 'object' && at !== null ? Reflect.get(at, key) : undefined;
     return typeof at === 'string' ? at : undefined;
   };
-  return { ...form, errorOf };
+  // the library fills fields when its script runs; the page's first paint must show them filled already
+  const register = (name: FieldPath<RuleForm>, options?: RegisterOptions<RuleForm>) => {
+    const value: unknown = form.getValues(name);
+    return {
+      ...form.register(name, options),
+      ...(typeof value === 'boolean'
+        ? { defaultChecked: value }
+        : { defaultValue: typeof value === 'string' ? value : '' }),
+    };
+  };
+  return { ...form, register, errorOf };
 }

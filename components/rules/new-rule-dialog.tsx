@@ -7,10 +7,19 @@ import { Select, TextField } from '@/components/ui/field';
 import { Phrases } from '@/components/ui/sentence';
 import { send } from '@/components/ui/send';
 import { RuleBody } from '@/lib/schema/rule';
+import type { Channel, Point, Source } from '@/lib/schema/yard-view';
+import type { Preferences } from '@/lib/units/preferences';
 import { ruleSentence } from '@/lib/wording/rule';
 import { midSentence, pointWords } from '@/lib/wording/rule-names';
 import { firstBody } from './first-body';
-import type { NewRuleProps } from './new-rule';
+
+export interface NewRuleProps {
+  house: string;
+  channels: Channel[];
+  points: Point[];
+  sources: Source[];
+  preferences: Preferences;
+}
 
 /** Asks for the channel and the point; everything else has a careful beginning in the draft. */
 export function NewRuleDialog({

@@ -8,6 +8,7 @@ import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
 import { Sentence } from '@/components/ui/sentence';
 import { say } from '@/components/ui/toast';
+import { useAwake } from '@/components/ui/use-awake';
 import type { StatePoint } from '@/lib/schema/house-state';
 import type { RuleWithVersions } from '@/lib/schema/rule-view';
 import type { Point } from '@/lib/schema/yard-view';
@@ -20,7 +21,8 @@ import { BandSection } from './band-section';
 import { EditorFactsProvider } from './context';
 import { Findings } from './findings';
 import { fitsForm, formOf, type RuleForm } from './form-values';
-import { OnlySection, type ClockFacts } from './only-section';
+import type { ClockFacts } from './condition';
+import { OnlySection } from './only-section';
 import { RestSection, type SourceFacts } from './rest-section';
 import { judgeNow, ruleResolver, useFindings, useTypedBody } from './use-judged';
 import { useRuleActions } from './use-rule-actions';
@@ -62,6 +64,7 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
   const { body, isWhole } = useTypedBody(form, rule.body, kept ?? null, unitOf, preferences);
   const findings = useFindings(rule.id, body, mayWrite);
   const leave = useLeaveWarning(isDirty);
+  const isAwake = useAwake();
   const draftNumber = rule.draft?.number ?? (rule.versions[0]?.number ?? 0) + 1;
 
   const { save, force, goBack, failure } = useRuleActions({
@@ -100,7 +103,7 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
             onSubmit={(event) => void form.handleSubmit(saveAndSay)(event)}
             className="min-w-0 rounded-lg border border-line bg-sheet"
           >
-            <fieldset disabled={!mayWrite} className="min-w-0">
+            <fieldset disabled={!mayWrite || !isAwake} className="min-w-0">
               <BandSection />
               <RestSection source={data.source} />
               <OnlySection kept={kept ?? null} clock={data.clock} />
@@ -108,10 +111,14 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
             </fieldset>
             {mayWrite ? (
               <div className="sticky bottom-14 flex flex-wrap items-center gap-2 rounded-b-lg border-t border-line bg-sheet p-4 lg:bottom-0">
-                <Button kind="primary" onClick={() => void form.handleSubmit(() => setForcing(true))()}>
+                <Button
+                  kind="primary"
+                  disabled={!isAwake}
+                  onClick={() => void form.handleSubmit(() => setForcing(true))()}
+                >
                   Put into force…
                 </Button>
-                <Button type="submit" busy={isSubmitting}>
+                <Button type="submit" disabled={!isAwake} busy={isSubmitting}>
                   Save draft
                 </Button>
                 <p role="status" className="text-[0.9rem] text-soft">

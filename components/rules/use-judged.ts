@@ -53,13 +53,16 @@ export function useTypedBody(
   preferences: Preferences,
 ): { body: RuleBody; isWhole: boolean } {
   const [typed, setTyped] = useState({ body: first, isWhole: true });
-  const latest = useRef({ kept, unitOf, preferences });
-  latest.current = { kept, unitOf, preferences };
+  const { isSubmitted } = form.formState;
+  const latest = useRef({ kept, unitOf, preferences, isSubmitted });
+  latest.current = { kept, unitOf, preferences, isSubmitted };
   useEffect(() => {
     let isGone = false;
     const look = async () => {
       const { judge } = await judgeModule();
       const at = latest.current;
+      // the library judges only the field that changed, but a band is judged by both its ends
+      if (at.isSubmitted) void form.trigger();
       const { body } = judge(form.getValues(), at.kept, at.unitOf, at.preferences);
       if (!isGone)
         setTyped((before) =>

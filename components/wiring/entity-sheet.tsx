@@ -1,7 +1,7 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { useState, type ReactNode } from 'react';
-import type { FieldValues, UseFormReturn } from 'react-hook-form';
+import type { UseFormReturn } from 'react-hook-form';
 import type { z } from 'zod';
 import { Dialog } from '@/components/ui/dialog';
 import { say } from '@/components/ui/toast';
@@ -29,7 +29,7 @@ export interface EntitySheetProps {
   onClose: () => void;
   /** Takes the answer before the sheet closes: a node's token is in it. True keeps the sheet's place. */
   onAnswer?: (answer: unknown) => boolean;
-  beside?: (form: UseFormReturn<FieldValues>) => ReactNode;
+  beside?: (form: UseFormReturn) => ReactNode;
 }
 
 /** A form for one thing of the yard, in a sheet. Refusals stand at their fields; what was typed stays. */

@@ -50,6 +50,11 @@ export function HousePanel({
         ]}
       />
       <p className="mt-2 border-l-4 border-warn pl-3 text-[0.9rem] text-soft">{LAST_RESORT_CAUTION}</p>
+      {mayAdd ? (
+        <ButtonLink kind="quiet" href="/new-house" className="-ml-4">
+          Add another house
+        </ButtonLink>
+      ) : null}
     </Panel>
   );
 }

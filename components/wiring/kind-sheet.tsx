@@ -1,6 +1,6 @@
 'use client';
 import { useState } from 'react';
-import type { FieldValues, UseFormReturn } from 'react-hook-form';
+import type { UseFormReturn } from 'react-hook-form';
 import { Notice } from '@/components/ui/notice';
 import { Phrases } from '@/components/ui/sentence';
 import type { Preferences } from '@/lib/units/preferences';
@@ -18,7 +18,7 @@ function LoadEffect({
   preferences,
   yard,
 }: {
-  form: UseFormReturn<FieldValues>;
+  form: UseFormReturn;
   preferences: Preferences;
   yard: Yard;
 }) {
@@ -28,7 +28,8 @@ function LoadEffect({
     return typeof value === 'number' ? value : undefined;
   };
   const supply = at(body, 'load.supply');
-  const kind = String(at(body, 'load.kind') ?? 'other');
+  const said = at(body, 'load.kind');
+  const kind = typeof said === 'string' ? said : 'other';
   const load = {
     kind,
     watts: number('load.watts'),

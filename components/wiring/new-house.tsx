@@ -2,15 +2,18 @@
 import { useRouter } from 'next/navigation';
 import { useEffect } from 'react';
 import { Button } from '@/components/ui/button';
+import { useAwake } from '@/components/ui/use-awake';
 import { HouseCreate } from '@/lib/schema/yard';
 import type { Preferences } from '@/lib/units/preferences';
 import { houseGroups } from './forms/house';
+import { at } from './spec';
 import { SpecFields } from './spec-fields';
 import { useSpecForm } from './use-spec-form';
 
 /** A house from nothing: where it stands and at what cold it acts. Its wiring comes next. */
 export function NewHouse({ preferences }: { preferences: Preferences }) {
   const router = useRouter();
+  const isAwake = useAwake();
   const { form, submit, failure } = useSpecForm({
     groups: houseGroups,
     schema: HouseCreate,
@@ -19,7 +22,7 @@ export function NewHouse({ preferences }: { preferences: Preferences }) {
     method: 'POST',
     path: '/houses',
     onAnswer: (answer) => {
-      const slug = typeof answer === 'object' && answer !== null ? Reflect.get(answer, 'slug') : null;
+      const slug = at(answer, 'slug');
       router.push(typeof slug === 'string' ? `/${slug}/wiring` : '/');
       router.refresh();
     },
@@ -35,11 +38,19 @@ export function NewHouse({ preferences }: { preferences: Preferences }) {
       onSubmit={submit}
       className="flex max-w-2xl flex-col gap-4 rounded-lg border border-line bg-sheet p-4"
     >
-      <SpecFields groups={houseGroups} form={form} preferences={preferences} />
+      <fieldset disabled={!isAwake} className="flex flex-col gap-4">
+        <SpecFields groups={houseGroups} form={form} preferences={preferences} />
+      </fieldset>
       <p role="alert" className="font-semibold text-alarm empty:hidden">
         {failure}
       </p>
-      <Button type="submit" kind="primary" className="self-start" busy={form.formState.isSubmitting}>
+      <Button
+        type="submit"
+        kind="primary"
+        className="self-start"
+        disabled={!isAwake}
+        busy={form.formState.isSubmitting}
+      >
         Add the house
       </Button>
     </form>

@@ -1,5 +1,5 @@
 'use client';
-import type { FieldValues, UseFormReturn } from 'react-hook-form';
+import type { UseFormReturn } from 'react-hook-form';
 import { Checkbox } from '@/components/ui/check';
 import { classes } from '@/components/ui/classes';
 import { NumberField, Select, TextArea, TextField } from '@/components/ui/field';
@@ -8,7 +8,7 @@ import type { Preferences } from '@/lib/units/preferences';
 import { at, type Group, type Spec } from './spec';
 
 interface Props {
-  form: UseFormReturn<FieldValues>;
+  form: UseFormReturn;
   preferences: Preferences;
 }
 

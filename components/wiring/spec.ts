@@ -53,7 +53,7 @@ function put(into: Json, path: string, value: unknown): void {
   for (const key of keys) {
     const next = place[key];
     if (typeof next === 'object' && next !== null) place = next as Json;
-    else place = (place[key] = {}) as Json;
+    else place = place[key] = {};
   }
   place[last] = value;
 }

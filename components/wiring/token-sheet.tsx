@@ -33,7 +33,7 @@ export function TokenSheet({
     setBusy(false);
     if (!answer.ok) return setFailure(answer.message);
     router.refresh();
-    if (doing === 'rotate' && typeof answer.value?.token === 'string') return setToken(answer.value.token);
+    if (doing === 'rotate' && typeof answer.value.token === 'string') return setToken(answer.value.token);
     say('The token is revoked.');
     onClose();
   }

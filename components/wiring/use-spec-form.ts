@@ -1,5 +1,5 @@
 'use client';
-import { useState, type FormEvent } from 'react';
+import { useState, type SyntheticEvent } from 'react';
 import {
   useForm,
   type FieldErrors,
@@ -23,21 +23,21 @@ export function useSpecForm(ask: {
   etag?: string | undefined;
   onAnswer: (answer: unknown) => void;
 }): {
-  form: UseFormReturn<FieldValues>;
-  submit: (event: FormEvent) => void;
+  form: UseFormReturn;
+  submit: (event: SyntheticEvent) => void;
   failure: string | null;
 } {
   const { groups, preferences } = ask;
   const [failure, setFailure] = useState<string | null>(null);
-  const resolver: Resolver<FieldValues> = (values) => {
+  const resolver: Resolver = (values) => {
     const { body, errors } = bodyOf(groups, values, preferences);
     const judged = ask.schema.safeParse(body);
     const all = { ...(judged.success ? {} : issuesOf(judged.error.issues, groups)), ...errors };
     return Object.keys(all).length === 0
       ? { values: body, errors: {} }
-      : { values: {}, errors: nested(all) as FieldErrors<FieldValues> };
+      : { values: {}, errors: nested(all) as FieldErrors };
   };
-  const form = useForm<FieldValues>({ defaultValues: valuesOf(groups, ask.entity, preferences), resolver });
+  const form = useForm({ defaultValues: valuesOf(groups, ask.entity, preferences), resolver });
 
   async function give(body: FieldValues) {
     setFailure(null);
