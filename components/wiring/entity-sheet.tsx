@@ -15,7 +15,7 @@ export interface EntitySheetProps {
   title: string;
   note?: ReactNode;
   groups: Group[];
-  schema: z.ZodType;
+  schema: () => Promise<z.ZodType>;
   /** Null: a new one. */
   entity: unknown;
   preferences: Preferences;

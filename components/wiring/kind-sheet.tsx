@@ -88,7 +88,7 @@ export function KindSheet({
     <EntitySheet
       title={entity === null ? `New ${of.word}` : `Change this ${of.word}`}
       groups={of.groups(yard, entity?.id ?? null)}
-      schema={entity === null ? of.create : of.amend}
+      schema={() => Promise.resolve(entity === null ? of.create : of.amend)}
       entity={entity ?? of.first(yard)}
       preferences={preferences}
       method={entity === null ? 'POST' : 'PATCH'}

@@ -3,7 +3,6 @@ import { useRouter } from 'next/navigation';
 import { useEffect } from 'react';
 import { Button } from '@/components/ui/button';
 import { useAwake } from '@/components/ui/use-awake';
-import { HouseCreate } from '@/lib/schema/yard';
 import type { Preferences } from '@/lib/units/preferences';
 import { houseGroups } from './forms/house';
 import { at } from './spec';
@@ -16,7 +15,7 @@ export function NewHouse({ preferences }: { preferences: Preferences }) {
   const isAwake = useAwake();
   const { form, submit, failure } = useSpecForm({
     groups: houseGroups,
-    schema: HouseCreate,
+    schema: () => import('@/lib/schema/yard').then((module) => module.HouseCreate),
     entity: { altitude: 0, frostLimit: 3, frostAlarm: 2 },
     preferences,
     method: 'POST',

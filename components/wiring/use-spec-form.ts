@@ -15,7 +15,8 @@ import { bodyOf, issuesOf, nested, valuesOf, type Group } from './spec';
 /** A form made of specs that sends itself. Refusals stand at their fields; what was typed stays. */
 export function useSpecForm(ask: {
   groups: Group[];
-  schema: z.ZodType;
+  /** Asked for when it is needed: zod is a fifth of a page's script. */
+  schema: () => Promise<z.ZodType>;
   entity: unknown;
   preferences: Preferences;
   method: 'POST' | 'PATCH';
@@ -29,9 +30,9 @@ export function useSpecForm(ask: {
 } {
   const { groups, preferences } = ask;
   const [failure, setFailure] = useState<string | null>(null);
-  const resolver: Resolver = (values) => {
+  const resolver: Resolver = async (values) => {
     const { body, errors } = bodyOf(groups, values, preferences);
-    const judged = ask.schema.safeParse(body);
+    const judged = (await ask.schema()).safeParse(body);
     const all = { ...(judged.success ? {} : issuesOf(judged.error.issues, groups)), ...errors };
     return Object.keys(all).length === 0
       ? { values: body, errors: {} }

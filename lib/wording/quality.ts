@@ -7,7 +7,7 @@ const causes: Record<string, string> = {
   'too-fast': 'changes too fast to be true',
   frozen: 'has not moved',
   'input-bad': 'a point it is made of is not trusted',
-  'after-gap': 'not heard since the worker began',
+  'worker-was-away': 'not heard since the worker began',
 };
 
 /** @example qualityWords('bad', 'silent') === 'not trusted: silent'; a good reading says nothing */
