@@ -1,6 +1,7 @@
 import 'server-only';
 import { sql } from 'drizzle-orm';
-import { drizzle, type NodePgDatabase } from 'drizzle-orm/node-postgres';
+import { drizzle, type NodePgQueryResultHKT } from 'drizzle-orm/node-postgres';
+import type { PgDatabase } from 'drizzle-orm/pg-core';
 import pg from 'pg';
 import { env } from '@/lib/server/env';
 import * as auth from './schema/auth';
@@ -13,7 +14,8 @@ import * as watch from './schema/watch';
 import * as yard from './schema/yard';
 
 export const schema = { ...auth, ...heap, ...people, ...rule, ...running, ...study, ...watch, ...yard };
-export type Db = NodePgDatabase<typeof schema>;
+/** The pool's handle, or that of one transaction. */
+export type Db = PgDatabase<NodePgQueryResultHKT, typeof schema>;
 
 /**
  * A holding to query in. Every query of tenant tables takes it first, names `id` in its where clause, and is held to it
@@ -72,8 +74,8 @@ export function everyPool(): pg.Pool {
 }
 
 export async function closePools(): Promise<void> {
-  const closing = [pools.tenant, pools.every];
+  const closing = [pools.tenant, pools.every].filter((pool) => pool !== undefined);
   delete pools.tenant;
   delete pools.every;
-  await Promise.all(closing.map((pool) => pool?.end()));
+  await Promise.all(closing.map((pool) => pool.end()));
 }

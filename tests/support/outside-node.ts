@@ -52,7 +52,7 @@ export class OutsideNode {
     this.socket = new WebSocket(`${url.replace('http', 'ws')}/field/v1`, {
       headers: { authorization: `Bearer ${token}` },
     });
-    this.socket.on('message', (raw) => this.take(JSON.parse(String(raw)) as Frame));
+    this.socket.on('message', (raw: Buffer) => this.take(JSON.parse(raw.toString('utf8')) as Frame));
     this.socket.on('close', (code) => {
       this.closed = { code, at: performance.now() };
       clearInterval(this.report);

@@ -8,14 +8,16 @@ import { Metrics } from '@/worker/metrics';
 import { startWorker } from '@/worker/worker';
 import { until } from './until';
 
+interface Health {
+  leader: boolean;
+  epoch: number | null;
+  database: boolean;
+  field: { nodes: number };
+}
+
 export interface OwnWorker {
   url: string;
-  health: () => Promise<{
-    leader: boolean;
-    epoch: number | null;
-    database: boolean;
-    field: { nodes: number };
-  }>;
+  health: () => Promise<Health>;
   metrics: Metrics;
   stop: () => Promise<void>;
 }
@@ -33,7 +35,7 @@ export async function ownWorker(waits = true, instance: string = randomUUID()): 
   const worker = await startWorker(base, instance, 0);
   const { port } = worker.server.address() as AddressInfo;
   const url = `http://127.0.0.1:${port}`;
-  const health = async () => (await fetch(`${url}/health`)).json();
+  const health = async () => (await (await fetch(`${url}/health`)).json()) as Health;
   if (waits) await until('the worker leads', async () => (await health()).leader === true);
   return { url, health, metrics, stop: worker.stop };
 }

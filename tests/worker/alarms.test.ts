@@ -96,7 +96,9 @@ describe('A node that says nothing more', () => {
     const house = await record();
     const { kinds, undecided } = kindsAt(house, away, t0 + 3600 * S, t0 + 3700 * S);
     expect(kinds).not.toContain('node-lost');
-    expect(undecided === 'others' ? [] : [...undecided]).toEqual([`node-lost:${house.id}:${house.nodes[0]?.id}`]);
+    expect(undecided === 'others' ? [] : [...undecided]).toEqual([
+      `node-lost:${house.id}:${house.nodes[0]?.id}`,
+    ]);
     expect(kindsAt(house, away, t0 + 3600 * S, t0 + 3750 * S).kinds).toContain('node-lost');
   });
 });
