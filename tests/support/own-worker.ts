@@ -36,6 +36,6 @@ export async function ownWorker(waits = true, instance: string = randomUUID()): 
   const { port } = worker.server.address() as AddressInfo;
   const url = `http://127.0.0.1:${port}`;
   const health = async () => (await (await fetch(`${url}/health`)).json()) as Health;
-  if (waits) await until('the worker leads', async () => (await health()).leader === true);
+  if (waits) await until('the worker leads', async () => (await health()).leader);
   return { url, health, metrics, stop: worker.stop };
 }
