@@ -8,7 +8,7 @@ import type { HouseAmend, HouseCreate } from '@/lib/schema/yard';
 import type { House } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
 import { isId } from './reference';
-import { freeSlug } from './slug';
+import { freeSlug, NO_HOUSE } from './slug';
 
 type Row = typeof house.$inferSelect;
 
@@ -46,7 +46,7 @@ async function takenSlugs(holding: Holding): Promise<Set<string>> {
     .select({ slug: house.slug })
     .from(house)
     .where(and(eq(house.holdingId, holding.id), isNull(house.removedAt)));
-  return new Set(rows.map((row) => row.slug));
+  return new Set([...NO_HOUSE, ...rows.map((row) => row.slug)]);
 }
 
 export async function createHouse(holding: Holding, given: z.infer<typeof HouseCreate>): Promise<House> {

@@ -1,4 +1,21 @@
 /**
+ * First parts of our addresses that are no house: pages and routes of app/, and what the door sends to the worker. A house
+ * stands at /its-slug, so one that were named like a page could never be opened.
+ */
+export const NO_HOUSE: readonly string[] = [
+  'account',
+  'api',
+  'field',
+  'forgot-password',
+  'invitation',
+  'live',
+  'new-house',
+  'people',
+  'reset-password',
+  'sign-in',
+];
+
+/**
  * A name in kebab case, free among `taken`.
  * @example freeSlug('Long house', new Set(['long-house'])) === 'long-house-2'
  */

@@ -115,6 +115,10 @@ test('the same name twice gives the second its own slug', async () => {
   });
 });
 
+test('a house named like a page gets an address that the page does not have', async () => {
+  expect(await owner.make('/houses', { ...shown.house, name: 'People' })).toMatchObject({ slug: 'people-2' });
+});
+
 test('a list goes on where it was left, and every item comes once', async () => {
   const seen: unknown[] = [];
   let next: string | null = '';
