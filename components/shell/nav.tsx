@@ -1,9 +1,33 @@
 'use client';
-import Link from 'next/link';
+import Link, { useLinkStatus } from 'next/link';
 import { usePathname } from 'next/navigation';
 import type { ReactNode } from 'react';
 import { classes } from '@/components/ui/classes';
 import { badgeOf, hrefInHouse, hrefOf, SECTIONS, whereIs, type Section, type ShellHouse } from './sections';
+
+/**
+ * Says that a page is being fetched, at the link that was pressed. A loading page would stand in its way twice: it puts
+ * the content behind a script, and it answers 200 before anybody looked whether the thing is there.
+ */
+function Opening() {
+  const { pending } = useLinkStatus();
+  return (
+    <>
+      <span
+        aria-hidden="true"
+        className={classes(
+          'absolute inset-x-3 bottom-1.5 h-0.5 rounded-full bg-current',
+          pending ? 'motion-safe:animate-pulse' : 'invisible',
+        )}
+      />
+      {pending ? (
+        <span role="status" className="sr-only">
+          Opening
+        </span>
+      ) : null}
+    </>
+  );
+}
 
 function Entry({
   section,
@@ -22,6 +46,7 @@ function Entry({
   return (
     <Link href={href} aria-current={current ? 'page' : undefined} className={className}>
       {section.label}
+      <Opening />
       {badge === null ? null : (
         <span
           className={classes(
@@ -38,7 +63,7 @@ function Entry({
 }
 
 const line =
-  'flex min-h-11 items-center justify-between rounded-md px-3 text-soft hover:bg-faint hover:text-ink aria-[current=page]:bg-ink aria-[current=page]:text-paper';
+  'relative flex min-h-11 items-center justify-between rounded-md px-3 text-soft hover:bg-faint hover:text-ink aria-[current=page]:bg-ink aria-[current=page]:text-paper';
 
 /** Down the left side of a wide screen. */
 export function SideLinks({ houses }: { houses: ShellHouse[] }) {

@@ -43,13 +43,3 @@ export function Failed({
 export function Skeleton({ className }: { className?: string }) {
   return <div aria-hidden="true" className={classes('breathe rounded-lg bg-faint', className)} />;
 }
-
-/** A page's worth of skeletons, with one line for a screen reader. */
-export function Loading({ what, children }: { what: string; children: ReactNode }) {
-  return (
-    <div role="status" className="flex flex-col gap-4">
-      <span className="sr-only">Loading {what} …</span>
-      {children}
-    </div>
-  );
-}
