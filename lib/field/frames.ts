@@ -87,7 +87,8 @@ export const logFrame = z.strictObject({
   type: z.literal('log'),
   seq,
   level: z.string().min(1).max(20),
-  text: z.string().max(4000),
+  // The frame's own size is the limit; what is kept of it is the reader's business.
+  text: z.string(),
 });
 
 export const nodeFrame = z.discriminatedUnion('type', [helloFrame, readingsFrame, relaysFrame, logFrame]);

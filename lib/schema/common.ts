@@ -95,7 +95,12 @@ export const Cursor = z
 
 /** Paging of every list. */
 export const PageQuery = z.strictObject({
-  limit: z.coerce.number({ error: 'Give a whole number.' }).int().min(1).max(500).default(100),
+  limit: z.coerce
+    .number({ error: 'Give a whole number.' })
+    .int('Give a whole number.')
+    .min(1, 'At least 1.')
+    .max(500, 'At most 500.')
+    .default(100),
   cursor: Cursor.optional(),
 });
 export type PageQuery = z.infer<typeof PageQuery>;

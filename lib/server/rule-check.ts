@@ -79,7 +79,9 @@ export async function refuseForce(
     );
   }
   const stops = (await findingsOf(holding, rule, undefined, now)).filter((one) => one.level === 'stop');
-  if (stops.length > 0) throw conflict(stops.map((one) => one.text).join(' '));
+  if (stops.length === 0) return;
+  const errors = stops.flatMap(({ paths, text }) => paths.map((path) => ({ path, message: text })));
+  throw new Problem('conflict', { detail: stops.map((one) => one.text).join(' '), errors });
 }
 
 function conflict(detail: string): Problem {

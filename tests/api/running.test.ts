@@ -118,7 +118,7 @@ test('in frost a channel that helps is turned off only with holdInFrost', async 
 });
 
 test('given back, and everything off, are orders too', async () => {
-  expect(await owner.ask('DELETE', `${FAN}/hand`)).toMatchObject({ status: 200, body: { until: null } });
+  expect(await owner.ask('DELETE', `${FAN}/hand`)).toMatchObject({ status: 204 });
   expect((await lastOrder())?.body).toMatchObject({ kind: 'auto' });
   expect(await owner.ask('POST', `${AT}/all-off`)).toMatchObject({ status: 200 });
   expect((await lastOrder())?.body).toMatchObject({ kind: 'all-off', seconds: 3600 });

@@ -67,7 +67,7 @@ export function houseState(
         restSince: iso(source.restSince),
         restUntil: iso(source.restUntil),
         restAtMostUntil: iso(source.restAtMostUntil),
-        drawnToday: source.drawnTodayS,
+        drawnToday: Math.round(source.drawnTodayS),
         drawing: source.drawing,
         underFloor: source.underFloor,
       };

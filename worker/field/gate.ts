@@ -58,6 +58,7 @@ export class Gate {
         onHello: (one) => this.greeted(one),
         onClose: (one) => this.closed(one),
       });
+      this.takeOver(link);
       this.open.add(link);
       this.deps.stall.add(link);
     });
@@ -101,14 +102,17 @@ export class Gate {
     return house === undefined || node === undefined ? 'away' : { house, node, tokenHash };
   }
 
+  /** The newest connection is the node's, from when it opens: what the token opens is not shared. */
+  private takeOver(link: NodeLink): void {
+    const former = [...this.open].filter((one) => one.nodeId === link.nodeId);
+    for (const one of former)
+      one.close(closeCode.takenOver, 'another connection with this token took over; wait 60 s');
+    if (former.length > 0) this.countTakeover(link);
+  }
+
   private greeted(link: NodeLink): void {
-    const former = this.links.get(link.nodeId);
-    if (former === link) return;
+    if (this.links.get(link.nodeId) === link) return;
     this.links.set(link.nodeId, link);
-    if (former !== undefined) {
-      former.close(closeCode.takenOver, 'another connection with this token took over; wait 60 s');
-      this.countTakeover(link);
-    }
     link.house.nodes.attach(link.nodeId, link);
   }
 

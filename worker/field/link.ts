@@ -26,6 +26,8 @@ import type { Stall } from './stall';
 /** A command that leaves later than this after it was made is not sent: the state of the house has moved on. */
 const COMMAND_AGE_MS = 2000;
 const MINUTE_MS = 60_000;
+/** What our own log keeps of a node's text. */
+const LOG_TEXT_MAX = 4000;
 
 export interface LinkDeps extends Base {
   ingest: Ingest;
@@ -131,7 +133,10 @@ export class NodeLink implements CommandLink {
         return this.house.nodes.takeRelays(this.nodeId, this, frame, at);
       }
       case 'log':
-        log.info({ node: node.key, level: frame.level, text: frame.text }, 'a node says');
+        log.info(
+          { node: node.key, level: frame.level, text: frame.text.slice(0, LOG_TEXT_MAX) },
+          'a node says',
+        );
         return this.send({ type: 'ack', seq: frame.seq });
       case 'readings': {
         const { seq } = frame;

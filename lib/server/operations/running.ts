@@ -61,7 +61,7 @@ export const giveBack = operation({
   path: '/houses/{house}/channels/{channel}/hand',
   action: 'channel.hand',
   summary: 'Give a channel back to its rules',
-  answers: { 200: OrderAnswer },
+  answers: { 204: null },
 });
 export const allOff = operation({
   id: 'hand.all-off',

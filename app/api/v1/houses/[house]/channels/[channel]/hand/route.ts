@@ -19,8 +19,5 @@ export const DELETE = serve(giveBack, async ({ holding, things, caller, now }) =
   const { house, channel } = things;
   const order = { at: now, by: caller.by, body: { kind: 'auto', channel: channel.id } } as const;
   const number = await addPersonCommand(holding, house.id, order);
-  return {
-    body: { number, at: isoIn(house.zone, now.getTime()), until: null },
-    after: () => untilTaken(holding.id, house.id, number),
-  };
+  return { after: () => untilTaken(holding.id, house.id, number) };
 });
