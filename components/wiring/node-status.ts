@@ -6,17 +6,28 @@ export interface NodeStatus {
   clockErrorS: number | null;
   trips: number | null;
   refused: number | null;
+  /** Why, the newest first. */
+  refusals: { name: string; why: string }[];
 }
 
 const text = (value: unknown) => (typeof value === 'string' && value !== '' ? value : null);
+/** A node may draw an id for each boot or count them. */
+const bootText = (value: unknown) => (typeof value === 'number' ? String(value) : text(value));
 const number = (value: unknown) => (typeof value === 'number' && Number.isFinite(value) ? value : null);
 
 export function nodeStatus(kept: Record<string, unknown> | undefined): NodeStatus {
   return {
     firmware: text(kept?.firmware),
-    boot: text(kept?.boot),
+    boot: bootText(kept?.boot),
     clockErrorS: number(kept?.clockErrorS),
     trips: number(kept?.trips),
     refused: number(kept?.refused),
+    refusals: (Array.isArray(kept?.refusals) ? kept.refusals : []).flatMap(refusal),
   };
+}
+
+function refusal(value: unknown): NodeStatus['refusals'] {
+  if (typeof value !== 'object' || value === null) return [];
+  const { name, why } = value as Record<string, unknown>;
+  return typeof name === 'string' && typeof why === 'string' ? [{ name, why }] : [];
 }

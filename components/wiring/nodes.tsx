@@ -8,7 +8,7 @@ import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 import { NODE_WORDS } from '@/lib/wording/wiring-parts';
 import { AddButton, ChangeButton, TokenButtons } from './editing';
-import { nodeStatus } from './node-status';
+import { nodeStatus, type NodeStatus } from './node-status';
 
 const columns = [
   { key: 'node', label: 'Node' },
@@ -28,6 +28,19 @@ function tokenWords(node: FieldNode, now: number, zone: string, preferences: Pre
   if (node.revokedAt !== null) return `Revoked ${moment(Date.parse(node.revokedAt), now, zone, preferences)}`;
   const until = node.formerTokenUntil === null ? 0 : Date.parse(node.formerTokenUntil);
   return until > now ? `Valid; the one before till ${moment(until, now, zone, preferences)}` : 'Valid';
+}
+
+/** Readings that were not taken: what each calls its point, and what is wrong with it. */
+function Refusals({ refusals }: { refusals: NodeStatus['refusals'] }) {
+  return (
+    <ul className="ml-auto w-52 font-sans text-[0.85rem] whitespace-normal text-soft">
+      {refusals.map(({ name, why }) => (
+        <li key={`${name} ${why}`} className="wrap-anywhere">
+          {name === '' ? 'without a name' : name}: {why}
+        </li>
+      ))}
+    </ul>
+  );
 }
 
 /** Field nodes: when each was last heard, and how it is. */
@@ -85,7 +98,10 @@ export function Nodes({
                 <Cell figure wideOnly>
                   {status.trips ?? unknown}
                 </Cell>
-                <Cell figure>{status.refused ?? unknown}</Cell>
+                <Cell figure>
+                  {status.refused ?? unknown}
+                  {status.refusals.length === 0 ? null : <Refusals refusals={status.refusals} />}
+                </Cell>
                 <Cell>{tokenWords(node, now, zone, preferences)}</Cell>
                 <Cell className="align-middle">
                   <div className="flex justify-end">

@@ -207,6 +207,10 @@ export async function listRelayReports(
   }));
 }
 
+/** A node's text may hold what no database keeps; it must not keep the notes of all others from being written. */
+const storable = (_key: string, value: unknown): unknown =>
+  typeof value === 'string' ? value.replace(/[\0\p{Surrogate}]/gu, '\ufffd') : value;
+
 /** What the link last knew of each node, for the wiring page and for a restarted worker. */
 export async function writeNodeStatus(
   db: Db,
@@ -214,7 +218,7 @@ export async function writeNodeStatus(
 ): Promise<void> {
   for (const node of nodes) {
     await db.execute(sql`
-      update node set status = ${JSON.stringify(node.status)}::jsonb, last_heard_at = ${new Date(node.lastHeardAt)}
+      update node set status = ${JSON.stringify(node.status, storable)}::jsonb, last_heard_at = ${new Date(node.lastHeardAt)}
       where holding_id = ${node.holdingId} and id = ${node.id}`);
   }
 }

@@ -33,7 +33,6 @@ export interface SenmlRecord {
 
 export class OutsideNode {
   readonly frames: { at: number; frame: Frame }[] = [];
-  readonly boot = randomUUID();
   closed: { code: number; at: number } | undefined;
   coils: Record<string, Coil> = {};
   /** Highest command number seen. */
@@ -47,7 +46,12 @@ export class OutsideNode {
   private readonly sentAt = new Map<number, number>();
   private rate = 1;
 
-  private constructor(url: string, token: string, channels: number) {
+  private constructor(
+    url: string,
+    token: string,
+    channels: number,
+    readonly boot: string,
+  ) {
     for (let relay = 1; relay <= channels; relay++) this.coils[String(relay)] = 'off';
     this.socket = new WebSocket(`${url.replace('http', 'ws')}/field/v1`, {
       headers: { authorization: `Bearer ${token}` },
@@ -60,8 +64,15 @@ export class OutsideNode {
     this.socket.on('error', () => undefined);
   }
 
-  static async connect(url: string, token: string, key: string, channels = 8): Promise<OutsideNode> {
-    const node = new OutsideNode(url, token, channels);
+  /** @param boot of a node whose line was lost; else it has just started */
+  static async connect(
+    url: string,
+    token: string,
+    key: string,
+    channels = 8,
+    boot: string = randomUUID(),
+  ): Promise<OutsideNode> {
+    const node = new OutsideNode(url, token, channels, boot);
     await new Promise<void>((resolve, reject) => {
       node.socket.once('open', resolve);
       node.socket.once('unexpected-response', (_request, response) => {

@@ -8,11 +8,13 @@ import {
   type BootId,
   type CommandFrame,
   type HelloFrame,
+  type RefusedRecord,
   type RelaysFrame,
 } from '@/lib/field/frames';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { ControlledHouse, HouseDeps } from './house-deps';
 import { reportRows, tripRows } from './house-record';
+import { refusalsOfBoot, withRefused } from './node-refusals';
 import { NodeRelays, loadState, type Order, type Trip } from './node-relays';
 import { houseState, type NodeStanding } from './state';
 
@@ -106,6 +108,7 @@ export class HouseNodes {
     const { firmware, channels, clock } = hello;
     node.status = {
       ...node.status,
+      ...refusalsOfBoot(node.status, hello.boot),
       firmware,
       channels,
       clockErrorS: clock === null ? null : clock - at / 1000,
@@ -113,6 +116,14 @@ export class HouseNodes {
     node.relayCount = channels;
     node.isNoted = true;
     this.house.step();
+  }
+
+  /** A pack came; what was refused of it is kept where whoever wires the node finds it. */
+  tookPack(nodeId: string, refused: readonly RefusedRecord[]): void {
+    const node = this.nodes.get(nodeId);
+    if (node === undefined) return;
+    this.heard(nodeId);
+    node.status = { ...node.status, ...withRefused(node.status, refused, this.deps.clock.appNow()) };
   }
 
   setCloned(nodeId: string, isCloned: boolean): void {

@@ -24,7 +24,7 @@ export async function takePack(
   const points = pointsOf(house.record.points, node.id);
   const { readings, refused } = readPack(pack, points, base.clock.appNow());
   base.metrics.add('readings_refused_total', refused.length);
-  house.nodes.heard(node.id);
+  house.nodes.tookPack(node.id, refused);
   const known = readings.flatMap((reading) => {
     const point = points.get(reading.key);
     return point === undefined ? [] : [{ point, reading }];

@@ -150,6 +150,8 @@ export class HouseRun {
       firmware: 'yard 1',
       channels: this.node.channels,
       clockErrorS: 0,
+      // take() stops at a refusal
+      refused: 0,
       ...this.relays.status(),
     };
     return { id: this.node.id, holdingId: this.record.holdingId, lastHeardAt: at, status };
