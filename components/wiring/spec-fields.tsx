@@ -5,7 +5,7 @@ import { classes } from '@/components/ui/classes';
 import { NumberField, Select, TextArea, TextField } from '@/components/ui/field';
 import { fieldUnit } from '@/lib/units/fields';
 import type { Preferences } from '@/lib/units/preferences';
-import { at, type Group, type Spec } from './spec';
+import { at, sectionsOf, type Group, type Spec } from './spec';
 
 interface Props {
   form: UseFormReturn;
@@ -59,31 +59,35 @@ function GroupFields({ group, ...props }: Props & { group: Group }) {
   );
 }
 
-/** All groups of a form, each a fieldset with its note; what is folded opens by itself where an error waits inside. */
-export function SpecFields({ groups, ...props }: Props & { groups: Group[] }) {
-  return groups.map((group, place) => {
-    const inside = (
-      <>
+function Fields({ group, isFirst, ...props }: Props & { group: Group; isFirst: boolean }) {
+  return (
+    <fieldset className={isFirst ? '' : 'border-t border-line pt-3'}>
+      {group.title === undefined ? null : (
+        <legend className="float-left mb-2 w-full font-semibold">{group.title}</legend>
+      )}
+      <div className="clear-both">
         {group.note === undefined ? null : <p className="mb-2 text-[0.9rem] text-soft">{group.note}</p>}
         <GroupFields group={group} {...props} />
-      </>
-    );
-    if (group.folded !== undefined) {
-      const hasError = group.specs.some((spec) => at(props.form.formState.errors, spec.path) !== undefined);
-      return (
-        <details key={place} open={hasError || undefined} className="border-t border-line pt-2">
-          <summary className="flex min-h-11 items-center font-semibold">{group.folded}</summary>
-          <div className="pt-1">{inside}</div>
-        </details>
-      );
-    }
+      </div>
+    </fieldset>
+  );
+}
+
+/** All groups of a form, each a fieldset with its note; what is folded opens by itself where an error waits inside. */
+export function SpecFields({ groups, ...props }: Props & { groups: Group[] }) {
+  return sectionsOf(groups).map((section, place) => {
+    const name = section[0]?.folded;
+    const fields = section.map((group, at) => (
+      <Fields key={at} group={group} isFirst={at === 0 && (place === 0 || name !== undefined)} {...props} />
+    ));
+    if (name === undefined) return fields;
+    const specs = section.flatMap((group) => group.specs);
+    const hasError = specs.some((spec) => at(props.form.formState.errors, spec.path) !== undefined);
     return (
-      <fieldset key={place} className={place === 0 ? '' : 'border-t border-line pt-3'}>
-        {group.title === undefined ? null : (
-          <legend className="float-left mb-2 w-full font-semibold">{group.title}</legend>
-        )}
-        <div className="clear-both">{inside}</div>
-      </fieldset>
+      <details key={name} open={hasError || undefined} className="border-t border-line pt-2">
+        <summary className="flex min-h-11 items-center font-semibold">{name}</summary>
+        <div className="flex flex-col gap-4 pt-1">{fields}</div>
+      </details>
     );
   });
 }

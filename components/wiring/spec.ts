@@ -28,7 +28,7 @@ export interface Group {
   columns?: 1 | 2 | 3;
   /** The object at `path` as a whole is null while the field at `unless` is empty. */
   nullUnless?: { path: string; unless: string };
-  /** Folded away until asked for: what a first set-up need not know. */
+  /** Folded away until asked for: what a first set-up need not know. Neighbours of one name fold together. */
   folded?: string;
 }
 
@@ -58,6 +58,17 @@ function put(into: Json, path: string, value: unknown): void {
   place[last] = value;
 }
 
+/** Groups as they are shown: those that fold together are one section, each other stands alone. */
+export function sectionsOf(groups: Group[]): Group[][] {
+  const sections: Group[][] = [];
+  for (const group of groups) {
+    const last = sections.at(-1);
+    if (group.folded !== undefined && last?.[0]?.folded === group.folded) last.push(group);
+    else sections.push([group]);
+  }
+  return sections;
+}
+
 /** What the fields hold at first: the entity as text. */
 export function valuesOf(groups: Group[], entity: unknown, preferences: Preferences): Values {
   const values: Json = {};
@@ -75,17 +86,29 @@ function textOf(spec: Spec, value: unknown, preferences: Preferences): string | 
   return typeof value === 'string' ? value : '';
 }
 
-/** The body to send, and what could not be read. */
+/**
+ * The body to send, and what could not be read.
+ * @param first what the fields held at first: an object that was there is taken away by emptying its first field, while
+ *   one that was not, and has something typed, lacks that field
+ */
 export function bodyOf(
   groups: Group[],
   values: unknown,
   preferences: Preferences,
+  first?: Values,
 ): { body: Json; errors: Errors } {
   const body: Json = {};
   const errors: Errors = {};
   for (const group of groups) {
     const off = group.nullUnless !== undefined && isEmpty(at(values, group.nullUnless.unless));
-    if (group.nullUnless !== undefined && off) put(body, group.nullUnless.path, null);
+    if (group.nullUnless !== undefined && off) {
+      const { path, unless } = group.nullUnless;
+      put(body, path, null);
+      const asked = group.specs.find((spec) => spec.path === unless);
+      const isTyped = group.specs.some((spec) => spec.path !== unless && !isEmpty(at(values, spec.path)));
+      if (asked !== undefined && isTyped && first !== undefined && isEmpty(at(first, unless)))
+        errors[unless] = missing(asked, preferences);
+    }
     for (const spec of group.specs) {
       if (off && group.nullUnless !== undefined && spec.path.startsWith(`${group.nullUnless.path}.`))
         continue;

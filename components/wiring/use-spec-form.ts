@@ -30,15 +30,16 @@ export function useSpecForm(ask: {
 } {
   const { groups, preferences } = ask;
   const [failure, setFailure] = useState<string | null>(null);
+  const first = valuesOf(groups, ask.entity, preferences);
   const resolver: Resolver = async (values) => {
-    const { body, errors } = bodyOf(groups, values, preferences);
+    const { body, errors } = bodyOf(groups, values, preferences, first);
     const judged = (await ask.schema()).safeParse(body);
     const all = { ...(judged.success ? {} : issuesOf(judged.error.issues, groups)), ...errors };
     return Object.keys(all).length === 0
       ? { values: body, errors: {} }
       : { values: {}, errors: nested(all) as FieldErrors };
   };
-  const form = useForm({ defaultValues: valuesOf(groups, ask.entity, preferences), resolver });
+  const form = useForm({ defaultValues: first, resolver });
 
   async function give(body: FieldValues) {
     setFailure(null);

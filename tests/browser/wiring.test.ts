@@ -89,6 +89,32 @@ describe('wiring in the browser', () => {
     await page.context().close();
   });
 
+  it('asks for limits and proofs in one section, and keeps what was typed there when it is refused', async () => {
+    const page = await open('installer');
+    await page.getByRole('button', { name: /^Change Tunnel fan/ }).click();
+    const sheet = page.getByRole('dialog');
+    await sheet.getByText('Limits and proofs').click();
+    await sheet.getByLabel('Goes by').selectOption('bench');
+    await sheet.getByLabel('On below').fill('2');
+    await sheet.getByLabel('Off over').fill('2.2');
+    await sheet.getByLabel('On at a time, at most').fill('20');
+    await sheet.getByLabel('Then off, at least').fill('40');
+    await sheet.getByLabel('On without a break, at most').fill('90');
+    await sheet.getByRole('button', { name: 'Save' }).click();
+    await sheet.getByText('Off over must be at least 0.5 °C over on under.').waitFor();
+    expect(await sheet.getByLabel('Then off, at least').inputValue()).toBe('40');
+    await sheet.getByLabel('Off over').fill('5');
+    await sheet.getByRole('button', { name: 'Save' }).click();
+    await sheet.waitFor({ state: 'detached' });
+    const answer = await page.request.get(`/api/v1/houses/${house.slug}/channels/1`);
+    expect(await answer.json()).toMatchObject({
+      longestOn: 5400,
+      fallback: { point: 'bench', below: 2, above: 5, onFor: 1200, offFor: 2400 },
+      highLimit: null,
+    });
+    await page.context().close();
+  });
+
   it('locks a channel out with a reason; a grower may place it and not remove it', async () => {
     const page = await open('grower');
     await page.getByRole('button', { name: /^Lock out the Tunnel fan/ }).click();

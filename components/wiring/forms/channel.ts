@@ -1,6 +1,7 @@
 import { LOAD_WORDS } from '@/lib/wording/wiring-load';
 import type { Group } from '../spec';
-import { named, nodeOptions, pointOptions, sourceOptions, type Yard } from './options';
+import { limitGroups } from './limits';
+import { named, nodeOptions, sourceOptions, type Yard } from './options';
 
 const load: Group = {
   title: 'Load',
@@ -42,17 +43,9 @@ const load: Group = {
 
 const pace: Group = {
   title: 'How it may switch',
-  columns: 3,
   specs: [
     { as: 'number', path: 'minOn', label: 'Once on, at least', quantity: 'seconds' },
     { as: 'number', path: 'minOff', label: 'Once off, at least', quantity: 'seconds' },
-    {
-      as: 'number',
-      path: 'startsPerHour',
-      label: 'Starts an hour, at most',
-      quantity: 'number',
-      empty: 'null',
-    },
   ],
 };
 
@@ -65,33 +58,6 @@ const helps: Group = {
       label: 'Helps against frost',
       hint: 'Runs when the house falls under its frost limit, whatever the rules say.',
     },
-  ],
-};
-
-const flow: Group = {
-  folded: 'Air it moves',
-  columns: 3,
-  nullUnless: { path: 'flow', unless: 'flow.litresPerSecond' },
-  specs: [
-    {
-      as: 'number',
-      path: 'flow.litresPerSecond',
-      label: 'Flow',
-      quantity: 'litres-per-second',
-      empty: 'null',
-    },
-    {
-      as: 'choice',
-      path: 'flow.from',
-      label: 'Known from',
-      options: [
-        { value: 'measured', label: 'measured here' },
-        { value: 'curve', label: 'the maker’s curve' },
-        { value: 'rated', label: 'the rating plate' },
-        { value: 'guessed', label: 'a guess' },
-      ],
-    },
-    { as: 'number', path: 'flow.sd', label: 'Give or take', quantity: 'litres-per-second', empty: 'omit' },
   ],
 };
 
@@ -129,21 +95,6 @@ export function channelGroups(yard: Yard): Group[] {
     },
     helps,
     pace,
-    {
-      folded: 'Limits and proof of running',
-      nullUnless: { path: 'highLimit', unless: 'highLimit.point' },
-      note: 'A load over its high limit is switched off whatever asks for it.',
-      specs: [
-        {
-          as: 'choice',
-          path: 'highLimit.point',
-          label: 'High limit at',
-          options: pointOptions(yard.points),
-          empty: 'null',
-        },
-        { as: 'number', path: 'highLimit.above', label: 'Off above', quantity: 'temperature' },
-      ],
-    },
-    flow,
+    ...limitGroups(yard),
   ];
 }

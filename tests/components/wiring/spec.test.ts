@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { bodyOf, issuesOf, nested, valuesOf, type Group } from '@/components/wiring/spec';
+import { bodyOf, issuesOf, nested, sectionsOf, valuesOf, type Group } from '@/components/wiring/spec';
 import { USUAL } from '@/lib/units/preferences';
 
 const american = { ...USUAL, temperature: 'F' } as const;
@@ -49,6 +49,25 @@ describe('a form made of specs', () => {
     expect(bodyOf(groups, values, USUAL).errors).toEqual({
       'highLimit.above': 'Give a number in °C, such as 4.5.',
     });
+  });
+
+  it('does not drop what was typed beside a first field that was left empty', () => {
+    const first = valuesOf(groups, { ...entity, highLimit: null }, USUAL);
+    const typed = { ...first, highLimit: { point: '', above: '28' } };
+    expect(bodyOf(groups, typed, USUAL, first).errors).toEqual({ 'highLimit.point': 'Choose one.' });
+  });
+
+  it('takes away what was there when its first field is emptied', () => {
+    const first = valuesOf(groups, entity, USUAL);
+    const emptied = { ...first, highLimit: { point: '', above: '28' } };
+    expect(bodyOf(groups, emptied, USUAL, first)).toMatchObject({ body: { highLimit: null }, errors: {} });
+  });
+
+  it('shows groups that fold together as one section', () => {
+    const [a, b] = groups;
+    if (a === undefined || b === undefined) throw new Error('two groups are needed');
+    const folded = [a, { ...b, folded: 'More' }, { ...a, folded: 'More' }, { ...b, folded: 'Yet more' }];
+    expect(sectionsOf(folded).map((section) => section.length)).toEqual([1, 2, 1]);
   });
 
   it('says what it could not read, and sends no guess of it', () => {
