@@ -1,6 +1,6 @@
 'use client';
 import * as Radix from 'radix-ui/dialog';
-import type { ReactNode } from 'react';
+import { useRef, type ReactNode } from 'react';
 import { Button, type ButtonKind } from './button';
 
 interface DialogProps {
@@ -33,6 +33,8 @@ export function Dialog({
   actions,
   as = 'dialog',
 }: DialogProps) {
+  // Radix gives focus back to its own trigger, which our dialogs do without: what opened them is remembered here
+  const opener = useRef<Element | null>(null);
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
@@ -40,6 +42,13 @@ export function Dialog({
         <Radix.Content
           // without a description Radix warns unless this is said outright
           {...(description === undefined ? { 'aria-describedby': undefined } : {})}
+          onOpenAutoFocus={() => {
+            opener.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault();
+            if (opener.current instanceof HTMLElement) opener.current.focus();
+          }}
           className={`fixed z-50 flex flex-col overflow-y-auto border border-line bg-sheet p-5 text-ink outline-none ${places[as]}`}
         >
           <div className="flex items-start justify-between gap-3">

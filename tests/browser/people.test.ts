@@ -143,13 +143,15 @@ describe('the account in the browser', () => {
   it('tells at its field that the present password is wrong, and keeps what was typed', async () => {
     const page = await at('/account', 'grower');
     await page.getByLabel('Password now').fill('this is not the one');
-    await page.getByLabel('New password').fill('short');
+    await page.getByRole('textbox', { name: 'New password' }).fill('short');
     await page.getByRole('button', { name: 'Change password' }).click();
     await page.getByText('At least 15 characters; a few plain words will do.').nth(1).waitFor();
-    await page.getByLabel('New password').fill('nine damp leaves in a row');
+    await page.getByRole('textbox', { name: 'New password' }).fill('nine damp leaves in a row');
     await page.getByRole('button', { name: 'Change password' }).click();
     await page.getByText('That is not the password of this account.').waitFor();
-    expect(await page.getByLabel('New password').inputValue()).toBe('nine damp leaves in a row');
+    expect(await page.getByRole('textbox', { name: 'New password' }).inputValue()).toBe(
+      'nine damp leaves in a row',
+    );
     await page.context().close();
   });
 
