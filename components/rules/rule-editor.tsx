@@ -15,6 +15,7 @@ import type { Point } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { ruleSentence } from '@/lib/wording/rule';
 import { ruleChanges } from '@/lib/wording/rule-changes';
+import type { RetireFacts } from '@/lib/wording/rule-retire';
 import type { RuleNames } from '@/lib/wording/rule-names';
 import { BandNight, type DrawnNight } from './band-night';
 import { BandSection } from './band-section';
@@ -23,6 +24,7 @@ import { Findings } from './findings';
 import { fitsForm, formOf, type RuleForm } from './form-values';
 import type { ClockFacts } from './condition';
 import { OnlySection } from './only-section';
+import { KeepRule } from './keep-rule';
 import { RestSection, type SourceFacts } from './rest-section';
 import { judgeNow, ruleResolver, useFindings, useTypedBody } from './use-judged';
 import { useRuleActions } from './use-rule-actions';
@@ -46,6 +48,8 @@ export interface RuleEditorData {
   now: number;
   preferences: Preferences;
   mayWrite: boolean;
+  house: string;
+  retiring: RetireFacts;
 }
 
 /** A rule as a form: its sentence on top and its effect at the right change as one types. */
@@ -67,7 +71,7 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
   const isAwake = useAwake();
   const draftNumber = rule.draft?.number ?? (rule.versions[0]?.number ?? 0) + 1;
 
-  const { save, force, goBack, failure } = useRuleActions({
+  const { save, force, goBack, keep, failure } = useRuleActions({
     rule,
     form,
     draftNumber,
@@ -94,6 +98,13 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
           <Notice tone="quiet" title="You can read this rule, not change it.">
             How warm the crop is kept is the grower’s to decide, so a grower or an owner writes rules and puts
             them into force.
+          </Notice>
+        )}
+        {rule.retiredAt === null ? null : (
+          <Notice tone="quiet" title="This rule is retired: nothing runs by it.">
+            {mayWrite
+              ? 'To bring it back, look at it and put it into force, or go back to an older version first.'
+              : 'A grower or an owner can bring it back.'}
           </Notice>
         )}
         <div className="grid grid-cols-1 items-start gap-5 xl:grid-cols-[26rem_minmax(0,1fr)]">
@@ -146,6 +157,9 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
               mayWrite={mayWrite}
               onGoBack={goBack}
             />
+            {mayWrite ? (
+              <KeepRule rule={rule} house={data.house} retiring={data.retiring} onKeep={keep} />
+            ) : null}
           </div>
         </div>
         {isForcing ? (

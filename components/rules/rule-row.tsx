@@ -12,6 +12,7 @@ import { whenWords } from '@/lib/wording/rule-when';
 export interface RulesData {
   house: House;
   rules: Rule[];
+  retired: Rule[];
   points: Point[];
   channels: Channel[];
   sources: Source[];

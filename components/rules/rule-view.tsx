@@ -14,6 +14,7 @@ import { RuleEditor } from './rule-editor';
 export interface RuleData {
   house: House;
   rule: RuleWithVersions;
+  others: string[];
   points: Point[];
   channels: Channel[];
   sources: Source[];
@@ -122,6 +123,14 @@ export function RuleView({
           },
           night: drawNight(data, now, preferences),
           zone: house.zone,
+          house: house.slug,
+          retiring: {
+            channelLabel: channel?.label ?? rule.channel,
+            others: data.others,
+            isInForce: rule.inForce !== null,
+            frostHelp: channel?.frostHelp ?? false,
+            runsWithoutCommand: channel?.contact === 'NC',
+          },
           mayWrite: allowed.includes('rule.write'),
         }}
       />

@@ -5,6 +5,7 @@ import { Empty } from '@/components/ui/states';
 import type { Preferences } from '@/lib/units/preferences';
 import { rulesSentence } from '@/lib/wording/rule-list';
 import { NewRule } from './new-rule';
+import { RetiredRules } from './retired-rules';
 import { RuleRow, type RulesData } from './rule-row';
 
 /** The page Rules: a rule a row, as its sentence. */
@@ -77,6 +78,7 @@ export function RulesView({
           {channels.length === 0 ? 'no channel' : 'no temperature point'} yet.
         </Empty>
       )}
+      <RetiredRules rules={data.retired} channels={channels} house={house.slug} zone={house.zone} />
     </div>
   );
 }

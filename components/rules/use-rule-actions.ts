@@ -8,7 +8,7 @@ import type { RuleBody } from '@/lib/control/rule-body';
 import type { RuleWithVersions } from '@/lib/schema/rule-view';
 import { fieldOfPath, type RuleForm } from './form-values';
 
-/** Save the draft, put it into force, go back. A refusal stands at its field; what was typed stays. */
+/** Save the draft, put it into force, go back, and what is done to the rule as a whole. A refusal stands at its field; what was typed stays. */
 export function useRuleActions({
   rule,
   form,
@@ -88,5 +88,15 @@ export function useRuleActions({
     return null;
   }
 
-  return { save, force, goBack, failure };
+  /** Rename, retire, throw the draft away: null where it went well, else why not. */
+  async function keep(method: 'PATCH' | 'POST' | 'DELETE', under: string, body?: object) {
+    const answer = await send(method, `/rules/${rule.id}${under}`, body, `"${revision.current}"`);
+    if (!answer.ok) return answer.fields.name ?? answer.fields.why ?? answer.message;
+    revision.current += 1;
+    if (method === 'DELETE' && rule.inForce !== null) form.reset(valuesOf(rule.inForce.body));
+    router.refresh();
+    return null;
+  }
+
+  return { save, force, goBack, keep, failure };
 }

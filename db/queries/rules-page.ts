@@ -16,6 +16,8 @@ import { listSources } from './source';
 export interface RulesPage {
   house: House;
   rules: Rule[];
+  /** Taken out of force; each can be brought back from its own page. */
+  retired: Rule[];
   points: Point[];
   channels: Channel[];
   sources: Source[];
@@ -24,9 +26,11 @@ export interface RulesPage {
 }
 
 export async function readRules(holding: Holding, house: House): Promise<RulesPage> {
+  const all = await listRules(holding, house.id, true);
   return {
     house,
-    rules: await listRules(holding, house.id),
+    rules: all.filter((rule) => rule.retiredAt === null),
+    retired: all.filter((rule) => rule.retiredAt !== null),
     points: await listPoints(holding, house.id),
     channels: await listChannels(holding, house.id),
     sources: await listSources(holding, house.id),
@@ -41,8 +45,10 @@ export interface PointNight {
   value: number[];
 }
 
-export interface RulePage extends Omit<RulesPage, 'rules'> {
+export interface RulePage extends Omit<RulesPage, 'rules' | 'retired'> {
   rule: RuleWithVersions;
+  /** Names of the other rules in force on its channel. */
+  others: string[];
   night: { name: string; from: number; to: number };
   /** Of the house's air and benches, of outdoors, and of the point the rule goes by. */
   readings: PointNight[];
@@ -61,7 +67,7 @@ export async function readRule(
 ): Promise<RulePage | null> {
   const found = await findRule(holding, ref);
   if (found === null || found.houseId !== house.id) return null;
-  const { rules: _, ...page } = await readRules(holding, house);
+  const { rules, retired: _, ...page } = await readRules(holding, house);
   const tonight = nightOf(nowMs, house.zone);
   const night =
     nowMs - tonight.from < YOUNG_NIGHT_MS ? nightNamed(nightBefore(tonight.night, 1), house.zone) : tonight;
@@ -71,6 +77,9 @@ export async function readRule(
   return {
     ...page,
     rule: toRuleWithVersions(found),
+    others: rules
+      .filter((one) => one.id !== found.id && one.channel === found.channel && one.inForce !== null)
+      .map((one) => one.name),
     night: { name: night.night, from: night.from, to: night.to },
     readings: [...shown].flatMap(([number, key]) => {
       const one = series.get(number);

@@ -149,11 +149,42 @@ describe('rules in the browser', () => {
     await page.context().close();
   });
 
+  it('are renamed, lose their draft and are retired only after a dialog that says what happens', async () => {
+    const path = await draft('To be retired');
+    const page = await open(path);
+    const dialog = page.getByRole('dialog');
+    await page.getByRole('button', { name: 'Rename…' }).click();
+    await dialog.getByLabel('Name').fill(' ');
+    await dialog.getByRole('button', { name: 'Rename' }).click();
+    await dialog.getByText('Give a name.').waitFor();
+    await dialog.getByLabel('Name').fill('Soon retired');
+    await dialog.getByRole('button', { name: 'Rename' }).click();
+    await page.getByRole('heading', { level: 1 }).getByText('Soon retired').waitFor();
+    await page.getByLabel(/^On below/).fill('5');
+    await page.getByRole('button', { name: 'Save draft' }).click();
+    await page.getByText('The draft is saved.', { exact: false }).waitFor();
+    await page.getByRole('button', { name: 'Retire…' }).click();
+    await dialog.getByText('no load is touched', { exact: false }).waitFor();
+    await dialog.getByRole('button', { name: 'Retire it' }).click();
+    await dialog.getByText('Say why in a few words', { exact: false }).waitFor();
+    await dialog.getByLabel('Why').fill('Never needed.');
+    await dialog.getByRole('button', { name: 'Retire it' }).click();
+    await page.waitForURL(/\/rules$/);
+    await page.getByRole('region', { name: 'Retired' }).getByRole('link', { name: 'Soon retired' }).click();
+    await page.getByText('This rule is retired: nothing runs by it.').waitFor();
+    await page.getByRole('button', { name: 'Go back to version 1' }).click();
+    await page.getByRole('button', { name: 'Throw the draft away…' }).click();
+    await dialog.getByRole('button', { name: 'Throw it away' }).click();
+    await page.getByText('The draft is thrown away.').waitFor();
+    await page.context().close();
+  });
+
   it('are read-only to an installer, who is told why, and whom the route refuses', async () => {
     const page = await open(EDITOR, 'installer');
     await page.getByText('You can read this rule, not change it.').waitFor();
     expect(await page.getByLabel(/^On below/).isDisabled()).toBe(true);
     expect(await page.getByRole('button', { name: 'Put into force…' }).count()).toBe(0);
+    expect(await page.getByRole('button', { name: /^(Rename|Retire|Throw)/ }).count()).toBe(0);
     const answer = await page.request.post('/api/v1/rules/gate-heap-fan-by-the-bench/force', {
       data: { why: 'x' },
       headers: { origin: sharedApp().url },
