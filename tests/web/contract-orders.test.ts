@@ -183,11 +183,12 @@ describe('Looks', () => {
   it('through a list go on by its cursor and come to every item once', async () => {
     const all = listOf((await api.get(`${at}/points?limit=500`)).body).map(({ id }) => id);
     const seen: unknown[] = [];
-    for (let next: unknown = ''; next !== null;) {
-      const page = (await api.get(`${at}/points?limit=2${next === '' ? '' : `&cursor=${next}`}`)).body;
+    let more = '';
+    do {
+      const page = (await api.get(`${at}/points?limit=2${more}`)).body;
       seen.push(...listOf(page).map(({ id }) => id));
-      next = page['next'] as string | null;
-    }
+      more = typeof page['next'] === 'string' ? `&cursor=${page['next']}` : '';
+    } while (more !== '');
     expect(seen).toEqual(all);
     expect(await paths('GET', `${at}/points?limit=501`, undefined)).toEqual([422, 'limit']);
   });
