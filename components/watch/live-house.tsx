@@ -74,7 +74,7 @@ function Follow({ start, children }: { start: LiveStart; children: ReactNode }) 
     queryFn: () => askControl(isLive.current),
     initialData: { worker: { up: start.control.runs } },
     staleTime: Infinity,
-    refetchInterval: link === 'live' ? 6000 : 2500,
+    refetchInterval: link === 'live' ? 4000 : 2500,
   });
 
   useEffect(
