@@ -17,6 +17,8 @@ export interface RulesData {
   channels: Channel[];
   sources: Source[];
   state: HouseState | null;
+  /** False: nobody steps the house, so its state is what was last seen. */
+  controlRuns: boolean;
 }
 
 /** The band on a short scale of the whole house's bands, with where its point stands now. */
@@ -55,7 +57,7 @@ export function RuleRow({
   preferences: Preferences;
   extent: [number, number];
 }) {
-  const { house, points, channels, state } = data;
+  const { house, points, channels, state, controlRuns } = data;
   const channel = channels.find((one) => one.key === rule.channel);
   const names = {
     channel: { label: channel?.label ?? rule.channel, loadKind: channel?.load.kind ?? 'other' },
@@ -92,10 +94,12 @@ export function RuleRow({
         </p>
         <p>
           {channel === undefined ? '' : `Channel ${channel.number}: `}
-          <strong className={standing?.state === 'on' ? 'text-ember' : undefined}>
-            {standing === undefined ? 'not known yet' : standing.state === 'on' ? 'on' : 'off'}
+          <strong className={controlRuns && standing?.state === 'on' ? 'text-ember' : undefined}>
+            {standing === undefined
+              ? 'not known yet'
+              : `${controlRuns ? '' : 'last seen '}${standing.state === 'on' ? 'on' : 'off'}`}
           </strong>
-          {value === null ? '' : `, now ${temperatureFigure(value, preferences)}`}
+          {value === null ? '' : `, ${controlRuns ? 'now' : 'at'} ${temperatureFigure(value, preferences)}`}
         </p>
         <p className="text-soft">
           {rule.inForce === null

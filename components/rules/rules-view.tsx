@@ -45,7 +45,10 @@ export function RulesView({
             channelLabel: channels.find((one) => one.key === rule.channel)?.label ?? rule.channel,
             isInForce: rule.inForce !== null,
             hasDraft: rule.draft !== null,
-            state: state?.channels.find((one) => one.key === rule.channel)?.state ?? null,
+            // words of the present would be untrue of what nobody looks at
+            state: data.controlRuns
+              ? (state?.channels.find((one) => one.key === rule.channel)?.state ?? null)
+              : null,
           })),
         )}
       />
