@@ -5,7 +5,7 @@ import { ConfirmDialog } from '@/components/ui/dialog';
 import { TextArea, TextField } from '@/components/ui/field';
 import { say } from '@/components/ui/toast';
 import { retireWords } from '@/lib/wording/rule-retire';
-import type { KeepRuleProps, Keeping } from './keep-rule';
+import type { Keeping, KeepRuleProps } from './keeping';
 
 /** Asks before a rule is renamed, its draft thrown away, or it is retired. */
 export function KeepDialog({
