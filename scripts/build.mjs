@@ -26,6 +26,7 @@ const PAGE_SOURCES = [
   'public',
   'proxy.ts',
   'instrumentation.ts',
+  'instrumentation-client.ts',
   'next.config.mjs',
   'postcss.config.mjs',
   ...SETTINGS,
