@@ -6,7 +6,6 @@ import { Dialog } from '@/components/ui/dialog';
 import { TextField } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
-import { InvitationCreate } from '@/lib/schema/people';
 import type { RoleFacts } from '@/lib/wording/people';
 import { RoleChoice } from './role-choice';
 
@@ -22,6 +21,8 @@ export function Invite({ roles, isMailHere }: { roles: RoleFacts[]; isMailHere: 
 
   async function invite() {
     const body = { email: email.trim(), role };
+    // with zod inside, so not before it is asked for
+    const { InvitationCreate } = await import('@/lib/schema/people');
     const parsed = InvitationCreate.safeParse(body);
     setFailure(null);
     setFields(Object.fromEntries(parsed.error?.issues.map((one) => [one.path.join('.'), one.message]) ?? []));

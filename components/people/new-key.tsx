@@ -5,7 +5,6 @@ import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { TextField } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
-import { ApiKeyCreate } from '@/lib/schema/people';
 import type { RoleFacts } from '@/lib/wording/people';
 import { RoleChoice } from './role-choice';
 
@@ -30,6 +29,8 @@ export function NewKey({ roles }: { roles: RoleFacts[] }) {
 
   async function make() {
     const body = { name, role };
+    // with zod inside, so not before it is asked for
+    const { ApiKeyCreate } = await import('@/lib/schema/people');
     const parsed = ApiKeyCreate.safeParse(body);
     setFailure(null);
     setFields(Object.fromEntries(parsed.error?.issues.map((one) => [one.path.join('.'), one.message]) ?? []));

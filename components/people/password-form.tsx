@@ -4,7 +4,6 @@ import { Button } from '@/components/ui/button';
 import { Checkbox } from '@/components/ui/check';
 import { TextField } from '@/components/ui/field';
 import { say } from '@/components/ui/toast';
-import { Password } from '@/lib/schema/people';
 import { authenticate } from './authenticate';
 
 /** Asks for the present password, so that a phone left lying does not give the account away. */
@@ -20,6 +19,8 @@ export function PasswordForm() {
   async function change() {
     const wrong: Record<string, string> = {};
     if (current === '') wrong['currentPassword'] = 'Give the password that you use now.';
+    // with zod inside, so not before it is asked for
+    const { Password } = await import('@/lib/schema/people');
     const parsed = Password.safeParse(next);
     if (!parsed.success) wrong['newPassword'] = parsed.error.issues[0]?.message ?? 'Give another.';
     setFields(wrong);
