@@ -31,6 +31,8 @@ const NEAR_K = 3;
 /** Drawing units that a threshold's words take. */
 const WORDS = 84;
 const NAMED_WORDS = 150;
+/** A lower band than this has no room for its two thresholds beside the words of lines and of the main band. */
+const TWO_LINES = 24;
 
 /** Whether the point that a band goes by came within 3 K of where it begins, in that part of the night. */
 function comesNear(chart: NightChart, band: WatchBand, period: WatchBand['periods'][number]): boolean {
@@ -67,7 +69,7 @@ export function bandsOf(ground: Ground, preferences: Preferences): DrawnBand[] {
           isMain: isMain(band),
           ...box,
           labels:
-            isMain(band) || !ground.frame.namesAbove
+            isMain(band) || (!ground.frame.namesAbove && box.height >= TWO_LINES)
               ? labelsOf(ground, band, period, { ...box, shift }, preferences)
               : [],
         },

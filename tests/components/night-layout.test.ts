@@ -72,13 +72,19 @@ describe('the chart of a night', () => {
       point: 'bench-1',
       channel: 'Bench mat',
       purpose: 'warm' as const,
-      periods: [{ ...chart.night, low: 4, high: 5 }],
+      periods: [{ ...chart.night, low: 4, high: 7 }],
     };
     const both = nightLayout({ ...chart, bands: [...chart.bands, mat] }, WIDE, USUAL).bands;
     expect(both.map((band) => [band.isMain, band.labels[0]?.text])).toEqual([
-      [false, 'Bench mat: off above 5.0'],
+      [false, 'Bench mat: off above 7.0'],
       [true, 'off above 7.5'],
     ]);
+  });
+  it('draws a second band without words where it is too low for them', () => {
+    const periods = [{ ...chart.night, low: 4, high: 5 }];
+    const mat = { point: 'bench-1', channel: 'Bench mat', purpose: 'warm' as const, periods };
+    const [second] = nightLayout({ ...chart, bands: [...chart.bands, mat] }, WIDE, USUAL).bands;
+    expect([second?.isMain, second?.labels]).toEqual([false, []]);
   });
   it('leaves out a band that nothing came near', () => expect(layout.bands).toHaveLength(1));
   it('puts the strip of a run under the hours in which it ran', () => {
