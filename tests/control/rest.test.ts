@@ -76,7 +76,7 @@ describe('draw credit', () => {
     expect(player.heap().credit).toBeCloseTo(0.5, 4);
   });
 
-  it('a draw by hand spends it as any other', () => {
+  it('a draw by hand spends it like one by the band', () => {
     const player = new Player(one({}), { ...cold, bench: 9 });
     player.order({ kind: 'hand', channel: 'fan', state: 'on', seconds: 900, holdInFrost: false });
     player.pass(5 * MIN);

@@ -1,11 +1,12 @@
 import { spawn } from 'node:child_process';
-import { mkdtempSync, readdirSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { mkdtempSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { claimFolder, keptSecrets } from '../../scripts/start/kept.mjs';
 
 let dataDir: string;
+const running = (): unknown => JSON.parse(readFileSync(path.join(dataDir, 'running.json'), 'utf8'));
 beforeEach(() => {
   dataDir = mkdtempSync(path.join(tmpdir(), 'middenward kept '));
 });
@@ -56,11 +57,13 @@ describe('a folder from which it runs already', () => {
 
   it('is free when its process id now belongs to another program', () => {
     writeFileSync(path.join(dataDir, 'running.json'), JSON.stringify({ pid: process.ppid, port: 3007 }));
-    expect(() => claimFolder(dataDir, 3000)).not.toThrow();
+    claimFolder(dataDir, 3000);
+    expect(running()).toEqual({ pid: process.pid, port: 3000 });
   });
 
   it('is free again when that process is gone', () => {
     writeFileSync(path.join(dataDir, 'running.json'), JSON.stringify({ pid: 2 ** 22 - 1, port: 3007 }));
-    expect(() => claimFolder(dataDir, 3000)).not.toThrow();
+    claimFolder(dataDir, 3000);
+    expect(running()).toEqual({ pid: process.pid, port: 3000 });
   });
 });
