@@ -4,6 +4,7 @@ import type { AnyPgColumn } from 'drizzle-orm/pg-core';
 import type { Holding } from '@/db/client';
 import { calibration, channel, house, loop, node, point, source } from '@/db/schema/yard';
 import type { NightChannel, NightInput } from '@/lib/analysis/nights';
+import { CALIBRATED_SD_K, classSd } from '@/lib/analysis/sensor-class';
 import type { Night } from '@/lib/analysis/night';
 import type { Series } from '@/lib/analysis/series';
 import { recordsOf } from './channel-records';
@@ -23,6 +24,8 @@ interface PointOfNights {
   name: string;
   role: string;
   holdS: number;
+  /** By its sensor's class; a calibration in force goes first. */
+  sensor: string | null;
   calibrations: Calibration[];
 }
 
@@ -82,6 +85,7 @@ export async function yardOfNights(holding: Holding, houseId: string): Promise<Y
       name: row.name,
       role: row.role,
       holdS: row.staleAfterS ?? REPORTS_HELD * (nodes.get(row.nodeId ?? '')?.reportEveryS ?? 30),
+      sensor: row.sensor,
       calibrations: corrections.get(row.id) ?? [],
     })),
     channels: channels.flatMap((row): ChannelOfNights[] => {
@@ -103,6 +107,7 @@ export async function yardOfNights(holding: Holding, houseId: string): Promise<Y
                   sdM3PerS: row.flow.sd === undefined ? null : row.flow.sd / 1000,
                   from: row.flow.from,
                 },
+          runProof: row.runProof,
           loop: intake === null || back === null ? null : { intake, return: back },
           nodeKey: nodes.get(row.nodeId)?.key ?? '',
           safe: row.contact === 'NC' ? 'on' : 'off',
@@ -160,12 +165,12 @@ export async function nightInputs(
   );
 }
 
-const ROLES_OF_EVERY_NIGHT = ['house-air', 'bench', 'outdoors'];
+const ROLES_OF_EVERY_NIGHT = ['house-air', 'bench', 'outdoors', 'humidity'];
 
 function pointsOfNights(yard: YardOfNights): PointOfNights[] {
   const named = new Set([
     ...yard.sources.flatMap((one) => [one.core, one.base]),
-    ...yard.channels.flatMap((one) => [one.loop?.intake, one.loop?.return]),
+    ...yard.channels.flatMap((one) => [one.loop?.intake, one.loop?.return, one.runProof?.point]),
   ]);
   return yard.points.filter((one) => ROLES_OF_EVERY_NIGHT.includes(one.role) || named.has(one.key));
 }
@@ -175,6 +180,14 @@ function numbersOf(points: readonly PointOfNights[]) {
     points.map((one) => sql`${one.number}`),
     sql`, `,
   );
+}
+
+/** Where a class depends on the temperature: between house air and what comes back from a heap, °C. */
+const USUAL_C = 20;
+
+function calibratedBy({ calibrations }: PointOfNights, at: number): boolean {
+  const inForce = calibrations.findLast((one) => one.from < at);
+  return inForce !== undefined && (inForce.offset !== 0 || inForce.gain !== 1);
 }
 
 /** How many good readings a whole night would be made of by now. */
@@ -199,7 +212,8 @@ async function seriesOf(
   const series = new Map<number, { from: PointOfNights; line: Series }>(
     wanted.map((one) => {
       const { key, name, role, holdS } = one;
-      return [one.number, { from: one, line: { key, name, role, holdS, good: [] } }];
+      const sd = calibratedBy(one, to) ? CALIBRATED_SD_K : classSd(one.sensor, USUAL_C);
+      return [one.number, { from: one, line: { key, name, role, holdS, sd, good: [] } }];
     }),
   );
   if (wanted.length > 0) {

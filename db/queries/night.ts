@@ -7,7 +7,8 @@ import type { Holding } from '@/db/client';
 import { night as nightTable } from '@/db/schema/study';
 import { house, source } from '@/db/schema/yard';
 import { type Night, nightOf, nightsBetween } from '@/lib/analysis/night';
-import { type NightSummary, SUMMARY_VERSION, summarise } from '@/lib/analysis/nights';
+import { type NightSummary, SUMMARY_VERSION } from '@/lib/analysis/nights';
+import { summarise } from '@/lib/analysis/summarise';
 import { countReadings, firstKnown, nightInputs, yardOfNights, type YardOfNights } from './night-records';
 
 /** How old a lasting night's summary may be when somebody asks for it, ms of app time. */

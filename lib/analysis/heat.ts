@@ -5,17 +5,19 @@
  * Volume flow is meant where the fan is, at the intake, so the air's mass is taken at the intake's temperature and at the
  * pressure of the house's altitude. The air counts as dry: at 10 °C and saturated the difference is under 1 %.
  *
- * Uncertainty. Neither a wrong flow nor a sensor's offset averages out over a night: both are the same all the time. So
- * the flow's share is |Q| · sd(V̇)/V̇, the sensors' is (ρ V̇ c_p) · sd(ΔT) · time, and the two, being independent of each
- * other, add in squares. sd(ΔT) = √(sd² + sd²) supposes that the two sensors' offsets are independent; sensors of one
- * batch in one bath share part of it, and the true figure is then smaller. For the same reason sums over nights, and over
- * loops, add these deviations as they are, not in squares.
+ * Uncertainty. None of the three things that may be wrong averages out over a night, since each is wrong all the time: the
+ * flow, |Q| · sd(V̇)/V̇; the two probes, (ρ V̇ c_p) · sd(ΔT) · time, sd(ΔT) = √(sd² + sd²) of their calibrations or classes
+ * (probes of one batch share part of their error: the true figure is then smaller); and what a probe in the return misses
+ * while it follows the first warm air, (ρ V̇ c_p) · ΔT · its delay, once a draw. They are independent of each other and add
+ * in squares; over draws, loops and nights the deviations add as they are.
  */
 import { heatCapacityFlow, pressureAtAltitude } from '@/lib/physics/air';
 import { type Extent, liner, type Series } from './series';
 
-/** K, one sensor, where no calibration says better: a digital probe within ±0.5 K taken as evenly spread. */
-export const SENSOR_SD_K = 0.3;
+/** s by which a probe in a pipe lags behind the air that moves past it: a minute or two, by its sleeve; common practice. */
+const PROBE_DELAY_S = 60;
+
+const J_PER_KWH = 3_600_000;
 
 /** Relative deviation of a flow whose own is not given, by where it comes from. Ours: a rated flow is a free-air one. */
 const FLOW_SD: Record<string, number> = { measured: 0.1, curve: 0.15, rated: 0.3, guessed: 0.4 };
@@ -32,10 +34,39 @@ export interface Heat {
   sd: number;
   /** Seconds of the run in which both temperatures were good. */
   measuredS: number;
+  /** kWh that the deviation is made of; the flow's has the sign of the heat. */
+  parts: HeatParts;
+}
+
+export interface HeatParts {
+  flow: number;
+  probes: number;
+  delay: number;
+}
+
+export const NO_HEAT: Heat = { kWh: 0, sd: 0, measuredS: 0, parts: { flow: 0, probes: 0, delay: 0 } };
+
+/** Heat of two draws, loops or nights together: a wrong flow and wrong probes are as wrong in the one as in the other. */
+export function heatSum(one: Heat, other: Heat): Heat {
+  const parts = {
+    flow: one.parts.flow + other.parts.flow,
+    probes: one.parts.probes + other.parts.probes,
+    delay: one.parts.delay + other.parts.delay,
+  };
+  return {
+    kWh: one.kWh + other.kWh,
+    sd: deviation(parts),
+    measuredS: one.measuredS + other.measuredS,
+    parts,
+  };
+}
+
+function deviation({ flow, probes, delay }: HeatParts): number {
+  return Math.hypot(flow, probes, delay);
 }
 
 /**
- * Heat over the extents in which the fan ran.
+ * Heat over the extents of one draw in which the fan ran.
  * @returns kWh with its standard deviation, and how much of the run had readings; zeros where the fan did not run
  * @example 0.042475 m³/s at sea level and 20 °C, 5.556 K apart: 0.286 kWh an hour, a quarter less at 2400 m
  */
@@ -53,6 +84,7 @@ export function loopHeat(
   let joule = 0;
   let perKelvinJ = 0;
   let measuredMs = 0;
+  let greatestW = 0;
   for (const [from, to] of pieces(runs, intake, back)) {
     // both points silent together: the lines that meet at its ends must not bridge it
     if (to - from > longestMs) continue;
@@ -64,10 +96,15 @@ export function loopHeat(
     joule += (wattPerK * seconds * (start.gain + end.gain)) / 2;
     perKelvinJ += wattPerK * seconds;
     measuredMs += to - from;
+    greatestW = Math.max(greatestW, Math.abs(wattPerK * end.gain));
   }
   const ofFlow = flow.sdM3PerS === null ? (FLOW_SD[flow.from] ?? 0.4) : flow.sdM3PerS / flow.m3PerS;
-  const sdJ = Math.hypot(joule * ofFlow, perKelvinJ * Math.SQRT2 * SENSOR_SD_K);
-  return { kWh: joule / 3_600_000, sd: sdJ / 3_600_000, measuredS: measuredMs / 1000 };
+  const parts = {
+    flow: (joule * ofFlow) / J_PER_KWH,
+    probes: (perKelvinJ * Math.hypot(intake.sd, back.sd)) / J_PER_KWH,
+    delay: (greatestW * PROBE_DELAY_S) / J_PER_KWH,
+  };
+  return { kWh: joule / J_PER_KWH, sd: deviation(parts), measuredS: measuredMs / 1000, parts };
 }
 
 function difference(

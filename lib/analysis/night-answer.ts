@@ -20,7 +20,7 @@ export interface NightAnswer {
 }
 
 export function nightAnswer(summary: NightSummary, zone: string): NightAnswer {
-  const { lowest } = summary;
+  const { lowest, recovery } = summary;
   return {
     night: summary.night,
     source: summary.source,
@@ -30,11 +30,16 @@ export function nightAnswer(summary: NightSummary, zone: string): NightAnswer {
     dutyOfNight: summary.dutyOfNight,
     dutyOfDraw: summary.dutyOfDraw,
     starts: summary.starts,
-    heat: summary.heat,
+    heat: summary.heat && { kWh: summary.heat.kWh, sd: summary.heat.sd },
     electricity: summary.electricity,
     lowest: lowest && { point: lowest.point, value: lowest.value, at: isoIn(lowest.at, zone) },
     belowFrostLimitSeconds: summary.belowFrostLimitSeconds,
-    recovery: summary.recovery,
+    recovery: recovery && {
+      tau: recovery.tau,
+      tauSd: recovery.tauSd,
+      level: recovery.level,
+      rests: recovery.rests,
+    },
     coverage: summary.coverage,
   };
 }

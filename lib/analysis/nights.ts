@@ -1,15 +1,18 @@
 /**
- * One source over one night: what it gave, for how long, for how much power, and how low the house came. Made of what
- * was kept, so making it again gives the same; Watch, Duty, the CSV and the interface all read this one summary.
+ * Nights as they are kept and shown: the shapes that Watch, Duty, CSV, reports and the interface all read. They are made by
+ * summarise.ts and house-night.ts from what was recorded, so making one again gives the same.
  */
-import { dawnOf } from './dawn';
-import { type Flow, type Heat, loopHeat } from './heat';
-import { hoursBetween, type Night } from './night';
-import { coverageOf, lowestOf, nearest, secondsUnder, type Series } from './series';
-import { channelSpans, type ChannelRecord, secondsOf, type Span, type SpanKind, startsOf } from './spans';
+import type { Flow } from './heat';
+import type { Night } from './night';
+import type { RestFit } from './rest-fit';
+import type { Series } from './series';
+import type { ChannelRecord, SpanKind } from './spans';
 
 /** How a summary is made; a summary of an older make is made anew. */
-export const SUMMARY_VERSION = 1;
+export const SUMMARY_VERSION = 2;
+
+/** Below this share of good readings a night says so; its sums are of what was read, and never scaled up. */
+export const LEAST_COVERAGE = 0.9;
 
 export interface NightChannel {
   number: number;
@@ -19,14 +22,24 @@ export interface NightChannel {
   flow: Flow | null;
   /** Keys of the points of its loop. */
   loop: { intake: string; return: string } | null;
+  /** The point whose reading above this, in the point's unit, shows that the load runs. */
+  runProof: { point: string; above: number } | null;
   record: ChannelRecord;
+}
+
+export interface NightHouse {
+  zone: string;
+  latitude: number;
+  longitude: number;
+  altitudeM: number;
+  frostLimitC: number | null;
 }
 
 export interface NightInput {
   night: Night;
   /** Epoch ms; a night is summed up to here while it lasts. */
   nowMs: number;
-  house: { zone: string; latitude: number; longitude: number; altitudeM: number; frostLimitC: number | null };
+  house: NightHouse;
   source: { slug: string; core: string | null; base: string | null };
   channels: NightChannel[];
   /** Every point of the house that the summary may need, by key. */
@@ -34,10 +47,82 @@ export interface NightInput {
 }
 
 export type Missing =
-  'no-channel' | 'no-loop' | 'no-flow' | 'no-readings' | 'no-power' | 'no-limit' | 'not-fitted';
+  | 'no-channel'
+  | 'no-loop'
+  | 'no-flow'
+  | 'no-readings'
+  | 'no-power'
+  | 'no-limit'
+  | 'no-outdoors'
+  | 'no-humidity'
+  | 'no-base'
+  | 'no-rest'
+  | 'not-fitted';
 
-/** °C, s, kWh; instants epoch ms. Nulls have their reason in `missing`. */
-export interface NightSummary {
+export interface NightHeat {
+  kWh: number;
+  sd: number;
+  /** No run proof shows that the load ran: it is taken to have run whenever its relay was on. */
+  assumedRunning: boolean;
+}
+
+/** kWh of heat for 1 kWh of electricity. */
+export interface HeatForPower {
+  ratio: number;
+  sd: number;
+}
+
+/** One channel over one night. Seconds are of the channel, shares of the night or of what has passed of it. */
+export interface ChannelNight {
+  number: number;
+  label: string;
+  onSeconds: number;
+  restSeconds: number;
+  /** Kept off, or on, by a lock-out, an interlock, a limit, a source guard or a missing sensor. */
+  heldSeconds: number;
+  /** By hand, on or off. */
+  handSeconds: number;
+  dutyOfNight: number;
+  dutyOfDraw: number | null;
+  starts: number;
+  /** Seconds on in which the run proof said that the load stands: no heat is booked for them. */
+  standingSeconds: number;
+  heat: NightHeat | null;
+  electricity: { kWh: number } | null;
+}
+
+/** Heat of one run of one channel. Epoch ms. */
+export interface DrawHeat {
+  channel: number;
+  from: number;
+  to: number;
+  heat: NightHeat | null;
+  /** Share of the run in which both ends of the loop were read. */
+  measured: number;
+  standingSeconds: number;
+}
+
+/** How the house kept over a night; each null has its reason in `missing`. */
+export interface NightClimate {
+  /** Sum of how much warmer the house was than outdoors, over time, K·h; below nothing where it was colder. */
+  liftDegreeHours: number | null;
+  /** Hours in which a humidity point was over 90 %. */
+  over90Hours: number | null;
+  /** Hours in which a point of the house was at or under the dew point of its air: leaves are wet. */
+  underDewPointHours: number | null;
+}
+
+/** τ of a night's rests taken together, s, and where they would come back to, °C. */
+export interface NightRecovery {
+  tau: number;
+  tauSd: number;
+  level: number;
+  levelSd: number;
+  rests: number;
+}
+
+/** One source over one night. °C, s, kWh; instants epoch ms. Nulls have their reason in `missing`. */
+export interface NightSummary extends NightClimate {
   version: number;
   night: string;
   source: string;
@@ -52,162 +137,78 @@ export interface NightSummary {
   /** Channel-seconds, of all channels of the source. */
   onSeconds: number;
   restSeconds: number;
+  heldSeconds: number;
+  handSeconds: number;
   /** Share of the channels' time that they ran, 0 to 1. */
   dutyOfNight: number;
   /** Run ÷ (run + rest); null on a night with neither. */
   dutyOfDraw: number | null;
   starts: number;
-  heat: { kWh: number; sd: number } | null;
+  heat: NightHeat | null;
   /** Share of the run in which both ends of the loop were read. */
   heatMeasured: number | null;
   electricity: { kWh: number } | null;
+  heatForPower: HeatForPower | null;
   lowest: { point: string; name: string; value: number; at: number } | null;
   belowFrostLimitSeconds: number;
   outdoorsLowest: { value: number; at: number } | null;
   coreAtDawn: { value: number; at: number } | null;
-  /** A fit of the rests; none is made yet. */
-  recovery: null;
+  recovery: NightRecovery | null;
+  rests: RestFit[];
+  draws: DrawHeat[];
+  channels: ChannelNight[];
   /** Share of the time in which the points that matter here had good readings, 0 to 1. */
   coverage: number;
+  /** Under LEAST_COVERAGE. */
+  coverageLow: boolean;
   /** Good readings that it was made of: where more are kept by now, it is due anew. */
   readings: number;
-  missing: Partial<Record<'heat' | 'electricity' | 'lowest' | 'belowFrostLimit' | 'recovery', Missing>>;
+  missing: Partial<
+    Record<
+      | 'heat'
+      | 'electricity'
+      | 'lowest'
+      | 'belowFrostLimit'
+      | 'recovery'
+      | 'liftDegreeHours'
+      | 'over90Hours'
+      | 'underDewPointHours',
+      Missing
+    >
+  >;
   strips: { channel: number; label: string; spans: StripSpan[] }[];
+}
+
+/** One house over one night, whatever heats it. */
+export interface HouseNight extends NightClimate {
+  version: number;
+  night: string;
+  from: number;
+  to: number;
+  ends: number;
+  complete: boolean;
+  hours: number;
+  lowest: { point: string; name: string; value: number; at: number } | null;
+  /** Null where the house has no such limit. */
+  belowFrostLimitSeconds: number | null;
+  belowFrostAlarmSeconds: number | null;
+  outdoorsLowest: { value: number; at: number } | null;
+  /** Sums of the channels that are known; null where none is. */
+  heat: NightHeat | null;
+  electricity: { kWh: number } | null;
+  heatForPower: HeatForPower | null;
+  /** Every channel of the house, those that draw on nothing included. */
+  channels: ChannelNight[];
+  coverage: number;
+  coverageLow: boolean;
+  readings: number;
+  missing: Partial<
+    Record<
+      'lowest' | 'heat' | 'electricity' | 'liftDegreeHours' | 'over90Hours' | 'underDewPointHours',
+      Missing
+    >
+  >;
 }
 
 /** Kind, begin and end in whole seconds from the night's first noon, and whether the load ran. */
 export type StripSpan = [kind: SpanKind, from: number, to: number, on: boolean];
-
-const round = (value: number, decimals: number) => Number(value.toFixed(decimals));
-
-/**
- * Sums one source's night up.
- * @returns figures cut to what they can bear: kWh to 1 Wh, shares to a thousandth, seconds whole
- */
-export function summarise(input: NightInput): NightSummary {
-  const { night, house, source, channels, points } = input;
-  const to = Math.max(night.from, Math.min(night.to, input.nowMs));
-  const spans = channels.map((channel) => channelSpans(channel.record, night.from, to));
-  const all = spans.flat();
-  const onSeconds = Math.round(secondsOf(all, (span) => span.on));
-  const restSeconds = Math.round(secondsOf(all, (span) => span.kind === 'rest'));
-  const passedS = ((to - night.from) / 1000) * Math.max(channels.length, 1);
-
-  const ofHouse = [...points.values()].filter(({ role }) => role === 'house-air' || role === 'bench');
-  const outdoors = [...points.values()].filter(({ role }) => role === 'outdoors');
-  const lowest = lowestOf(ofHouse, night.from, to);
-  const coldest = lowestOf(outdoors, night.from, to);
-  const heat = heatOf(input, spans);
-  const electricity = electricityOf(channels, spans);
-  const core = source.core === null ? undefined : points.get(source.core);
-  const dawn = dawnOf(night, house.zone, house.latitude, house.longitude);
-  const atDawn = core === undefined || dawn > to ? null : nearest(core, dawn);
-
-  return {
-    version: SUMMARY_VERSION,
-    night: night.night,
-    source: source.slug,
-    from: night.from,
-    to,
-    ends: night.to,
-    complete: to === night.to,
-    hours: round(hoursBetween(night.from, to), 4),
-    onSeconds,
-    restSeconds,
-    dutyOfNight: passedS === 0 ? 0 : round(onSeconds / passedS, 4),
-    dutyOfDraw: onSeconds + restSeconds === 0 ? null : round(onSeconds / (onSeconds + restSeconds), 4),
-    starts: spans.reduce((sum, one) => sum + startsOf(one), 0),
-    heat: 'why' in heat ? null : { kWh: round(heat.kWh, 3), sd: round(heat.sd, 3) },
-    heatMeasured: 'why' in heat || onSeconds === 0 ? null : round(Math.min(1, heat.measuredS / onSeconds), 3),
-    electricity: 'why' in electricity ? null : { kWh: round(electricity.kWh, 4) },
-    lowest: lowest && { ...lowest, value: round(lowest.value, 2) },
-    belowFrostLimitSeconds:
-      house.frostLimitC === null ? 0 : Math.round(secondsUnder(ofHouse, house.frostLimitC, night.from, to)),
-    outdoorsLowest: coldest && { value: round(coldest.value, 2), at: coldest.at },
-    coreAtDawn: atDawn && { value: round(atDawn.value, 2), at: atDawn.at },
-    recovery: null,
-    coverage: round(coverage(input, ofHouse, to), 4),
-    readings: readingsOf(input, to),
-    missing: {
-      ...('why' in heat ? { heat: heat.why } : {}),
-      ...('why' in electricity ? { electricity: electricity.why } : {}),
-      ...(lowest === null ? { lowest: 'no-readings' as const } : {}),
-      ...(house.frostLimitC === null ? { belowFrostLimit: 'no-limit' as const } : {}),
-      recovery: 'not-fitted',
-    },
-    strips: channels.map((channel, i) => ({
-      channel: channel.number,
-      label: channel.label,
-      spans: stripOf(spans[i] ?? [], night.from),
-    })),
-  };
-}
-
-function readingsOf({ night, points }: NightInput, to: number): number {
-  let count = 0;
-  for (const { good } of points.values())
-    for (const { at } of good) if (at >= night.from && at < to) count += 1;
-  return count;
-}
-
-function stripOf(spans: readonly Span[], fromMs: number): StripSpan[] {
-  const whole = (at: number) => Math.round((at - fromMs) / 1000);
-  // what is plainly off is the strip's ground; a strip holds what is drawn on it
-  return spans
-    .filter((span) => span.kind !== 'off')
-    .map((span) => [span.kind, whole(span.from), whole(span.to), span.on] satisfies StripSpan);
-}
-
-/** Heat of all loops of the source; their deviations add as they are, since a wrong probe is wrong for each. */
-function heatOf(input: NightInput, spans: readonly Span[][]): Heat | { why: Missing } {
-  if (input.channels.length === 0) return { why: 'no-channel' };
-  const sum: Heat = { kWh: 0, sd: 0, measuredS: 0 };
-  let ranS = 0;
-  for (const [i, channel] of input.channels.entries()) {
-    if (channel.loop === null) return { why: 'no-loop' };
-    if (channel.flow === null || channel.flow.m3PerS <= 0) return { why: 'no-flow' };
-    const intake = input.points.get(channel.loop.intake);
-    const back = input.points.get(channel.loop.return);
-    if (intake === undefined || back === undefined) return { why: 'no-readings' };
-    const runs = (spans[i] ?? []).filter((span) => span.on);
-    const one = loopHeat(runs, intake, back, channel.flow, input.house.altitudeM);
-    sum.kWh += one.kWh;
-    sum.sd += one.sd;
-    sum.measuredS += one.measuredS;
-    ranS += secondsOf(runs, () => true);
-  }
-  // a figure from less than half of the run would pass for the whole of it
-  return sum.measuredS < ranS / 2 ? { why: 'no-readings' } : sum;
-}
-
-function electricityOf(
-  channels: readonly NightChannel[],
-  spans: readonly Span[][],
-): { kWh: number } | { why: Missing } {
-  if (channels.length === 0) return { why: 'no-channel' };
-  let kWh = 0;
-  for (const [i, channel] of channels.entries()) {
-    if (channel.powerW === null) return { why: 'no-power' };
-    kWh += (channel.powerW * secondsOf(spans[i] ?? [], (span) => span.on)) / 3_600_000;
-  }
-  return { kWh };
-}
-
-/** Mean over the house's own points, the source's and its loops': those that the figures above are made of. */
-function coverage(input: NightInput, ofHouse: readonly Series[], to: number): number {
-  const { source, channels, points, night } = input;
-  const keys = new Set(ofHouse.map((series) => series.key));
-  for (const key of [
-    source.core,
-    source.base,
-    ...channels.flatMap(({ loop }) => [loop?.intake, loop?.return]),
-  ])
-    if (typeof key === 'string') keys.add(key);
-  if (keys.size === 0) return 0;
-  let sum = 0;
-  for (const key of keys) {
-    const series = points.get(key);
-    sum += series === undefined ? 0 : coverageOf(series, night.from, to);
-  }
-  return sum / keys.size;
-}

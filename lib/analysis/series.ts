@@ -12,6 +12,8 @@ export interface Series {
   role: string;
   /** Seconds for which a reading holds if no other follows: beyond, the point is silent. */
   holdS: number;
+  /** Deviation of its own constant error, in its unit: by its calibration, or by the class of its sensor. */
+  sd: number;
   /** Good readings only, ascending, beginning a little before the span that is asked for. */
   good: Reading[];
 }
@@ -22,7 +24,7 @@ export interface Extent {
 }
 
 /** Spans in which each reading held, cut to [fromMs, toMs), with its value. */
-function holds(series: Series, fromMs: number, toMs: number): (Extent & { value: number })[] {
+export function holds(series: Series, fromMs: number, toMs: number): (Extent & { value: number })[] {
   return series.good.flatMap((reading, i) => {
     const next = series.good[i + 1]?.at ?? Infinity;
     const from = Math.max(reading.at, fromMs);
@@ -61,7 +63,8 @@ export function secondsUnder(all: readonly Series[], limit: number, fromMs: numb
   return unionMs(under) / 1000;
 }
 
-function unionMs(extents: Extent[]): number {
+/** ms that the extents cover together; sorts them. */
+export function unionMs(extents: Extent[]): number {
   let sum = 0;
   let reached = -Infinity;
   for (const { from, to } of extents.sort((a, b) => a.from - b.from)) {

@@ -148,7 +148,11 @@ const missingWords: Record<Missing, string> = {
   'no-readings': 'too little of it was read',
   'no-power': 'no watts are entered for its load',
   'no-limit': 'the house has no frost limit',
-  'not-fitted': 'its rests are not fitted yet',
+  'no-outdoors': 'the house has no point outdoors',
+  'no-humidity': 'the house has no humidity point',
+  'no-base': 'it has no point beside the pipe',
+  'no-rest': 'it did not rest',
+  'not-fitted': 'no rest was long enough to tell',
 };
 
 /** Why a figure is not there, in half a sentence. */

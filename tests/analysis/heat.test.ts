@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { loopHeat } from '@/lib/analysis/heat';
+import { loopHeat, NO_HEAT } from '@/lib/analysis/heat';
 import type { Series } from '@/lib/analysis/series';
 import { thumbRule, thumbRuleAt2400 } from '../checks/nights';
 
@@ -14,6 +14,7 @@ function line(key: string, value: (at: number) => number | null): Series {
     name: key,
     role: 'other',
     holdS: 90,
+    sd: 0.3,
     good: good.flatMap(({ at, value: v }) => (v === null ? [] : [{ at, value: v }])),
   };
 }
@@ -75,11 +76,12 @@ describe('heat of a loop', () => {
     expect(heat.measuredS).toBe(3600 - 1200);
   });
 
-  it('has the deviation of its flow and of two probes of 0.3 K, in squares', () => {
+  it('has the deviation of its flow, of two probes of 0.3 K and of a minute's delay, in squares', () => {
     const heat = loopHeat(anHour, intake, warmer, flow, 0);
     const ofFlow = (heat.kWh * 0.004) / thumbRule.m3PerS;
     const ofProbes = (heat.kWh / thumbRule.kelvin) * Math.sqrt(2) * 0.3;
-    expect(heat.sd).toBeCloseTo(Math.sqrt(ofFlow ** 2 + ofProbes ** 2), 12);
+    const ofDelay = heat.kWh / 60;
+    expect(heat.sd).toBeCloseTo(Math.sqrt(ofFlow ** 2 + ofProbes ** 2 + ofDelay ** 2), 12);
   });
 
   it('is uncertain by its probes even where it moves nothing', () => {
@@ -89,6 +91,6 @@ describe('heat of a loop', () => {
   });
 
   it('is nothing, for sure, while the fan stands', () => {
-    expect(loopHeat([], intake, warmer, flow, 0)).toEqual({ kWh: 0, sd: 0, measuredS: 0 });
+    expect(loopHeat([], intake, warmer, flow, 0)).toEqual(NO_HEAT);
   });
 });

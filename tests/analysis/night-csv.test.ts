@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { nightAnswer } from '@/lib/analysis/night-answer';
 import { nightsCsv } from '@/lib/analysis/night-csv';
-import { summarise } from '@/lib/analysis/nights';
+import { summarise } from '@/lib/analysis/summarise';
 import { scene } from './scene';
 
 const night = summarise(scene());

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { nightAnswer } from '@/lib/analysis/night-answer';
-import { summarise } from '@/lib/analysis/nights';
+import { summarise } from '@/lib/analysis/summarise';
 import { fanDay } from '../checks/nights';
 import { after, minute, night, scene, series } from './scene';
 

@@ -14,7 +14,7 @@ export function series(key: string, role: string, value: (minutes: number) => nu
     const v = value(m);
     if (v !== null) good.push({ at: after(m), value: v });
   }
-  return { key, name: key, role, holdS: 180, good };
+  return { key, name: key, role, holdS: 180, sd: 0.3, good };
 }
 
 /** A night with two draws of 40 min, each followed by 40 min of rest. */
@@ -45,6 +45,7 @@ export function scene(change: Partial<NightInput> = {}): NightInput {
         powerW: 12,
         flow: { m3PerS: 0.0425, sdM3PerS: 0.004, from: 'measured' },
         loop: { intake: 'loop-intake', return: 'loop-return' },
+        runProof: null,
         record: {
           decisions: [
             { at: after(-60), state: 'off', claim: 'idle' },

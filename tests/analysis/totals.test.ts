@@ -1,10 +1,14 @@
 import { describe, expect, it } from 'vitest';
-import { summarise, type NightSummary } from '@/lib/analysis/nights';
+import type { NightSummary } from '@/lib/analysis/nights';
+import { summarise } from '@/lib/analysis/summarise';
 import { totalOf } from '@/lib/analysis/totals';
 import { scene } from './scene';
 
 const one = summarise(scene());
-const withHeat = (kWh: number, sd: number): NightSummary => ({ ...one, heat: { kWh, sd } });
+const withHeat = (kWh: number, sd: number): NightSummary => ({
+  ...one,
+  heat: { kWh, sd, assumedRunning: false },
+});
 
 describe('nights taken together', () => {
   it('add up to what a reader gets from the rows at a tenth of a kilowatt hour', () => {

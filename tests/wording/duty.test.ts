@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { summarise, type NightSummary } from '@/lib/analysis/nights';
+import type { NightSummary } from '@/lib/analysis/nights';
+import { summarise } from '@/lib/analysis/summarise';
 import { totalOf } from '@/lib/analysis/totals';
 import { USUAL } from '@/lib/units/preferences';
 import { decisionWords, dutySentence, nightTitle } from '@/lib/wording/duty';
@@ -24,7 +25,10 @@ const said = (nights: NightSummary[], preferences = USUAL, frostLimitC: number |
 
 describe('the sentence over Duty', () => {
   it('tells run, heat and fan power as the table under it sums them', () => {
-    const nights = many(10, () => ({ heat: { kWh: 4.04, sd: 0.5 }, electricity: { kWh: 0.04 } }));
+    const nights = many(10, () => ({
+      heat: { kWh: 4.04, sd: 0.5, assumedRunning: false },
+      electricity: { kWh: 0.04 },
+    }));
     expect(said(nights)).toContain(
       'Over 10 nights the gate heap ran 6 % of the time and moved 40.0 ± 5.0 kWh of heat on 0.400 kWh of fan power: 101 kWh of heat for 1 kWh of fan.',
     );
@@ -55,7 +59,7 @@ describe('the sentence over Duty', () => {
   });
 
   it('says that heat went out of the house where it did', () => {
-    const nights = many(2, () => ({ heat: { kWh: -1, sd: 0.2 } }));
+    const nights = many(2, () => ({ heat: { kWh: -1, sd: 0.2, assumedRunning: false } }));
     expect(said(nights)).toContain('took 2.0 ± 0.4 kWh of heat out of the house');
   });
 
