@@ -76,7 +76,7 @@ describe('heat of a loop', () => {
     expect(heat.measuredS).toBe(3600 - 1200);
   });
 
-  it('has the deviation of its flow, of two probes of 0.3 K and of a minute's delay, in squares', () => {
+  it('has the deviation of its flow, of two probes of 0.3 K and of a delay of 60 s, in squares', () => {
     const heat = loopHeat(anHour, intake, warmer, flow, 0);
     const ofFlow = (heat.kWh * 0.004) / thumbRule.m3PerS;
     const ofProbes = (heat.kWh / thumbRule.kelvin) * Math.sqrt(2) * 0.3;
