@@ -12,7 +12,9 @@ import {
   type StripSpan,
   SUMMARY_VERSION,
 } from './nights';
-import { coverageOf, lowestOf, nearest, secondsUnder, type Series } from './series';
+import { coverageOf, type Extent, lowestOf, nearest, secondsUnder, type Series } from './series';
+import type { RestFit } from './rest-fit';
+import { nightRecovery, restsOf } from './rests';
 import type { Span } from './spans';
 
 /**
@@ -46,6 +48,8 @@ export function summarise(input: NightInput): NightSummary {
   const dawn = dawnOf(night, house.zone, house.latitude, house.longitude);
   const atDawn = core === undefined || dawn > to ? null : nearest(core, dawn);
   const covered = round(coverage(input, ofHouse, to), 4);
+  const rests = restsOfNight(input, work, extent);
+  const recovery = nightRecovery(rests);
   const { missing: climateMissing, ...climate } = climateOf(points, night.from, to);
 
   return {
@@ -73,8 +77,8 @@ export function summarise(input: NightInput): NightSummary {
       house.frostLimitC === null ? 0 : Math.round(secondsUnder(ofHouse, house.frostLimitC, night.from, to)),
     outdoorsLowest: coldest && { value: round(coldest.value, 2), at: coldest.at },
     coreAtDawn: atDawn && { value: round(atDawn.value, 2), at: atDawn.at },
-    recovery: null,
-    rests: [],
+    recovery,
+    rests,
     draws: work.flatMap((one) => one.draws),
     channels,
     ...climate,
@@ -87,7 +91,7 @@ export function summarise(input: NightInput): NightSummary {
       ...(lowest === null ? { lowest: 'no-readings' as const } : {}),
       ...(house.frostLimitC === null ? { belowFrostLimit: 'no-limit' as const } : {}),
       ...climateMissing,
-      recovery: 'not-fitted',
+      ...(recovery === null ? { recovery: whyNotRecovered(rests, source.base) } : {}),
     },
     strips: input.channels.map((channel, i) => ({
       channel: channel.number,
@@ -95,6 +99,23 @@ export function summarise(input: NightInput): NightSummary {
       spans: stripOf(work[i]?.spans ?? [], night.from),
     })),
   };
+}
+
+function restsOfNight(
+  { source, points }: NightInput,
+  work: readonly ChannelWork[],
+  extent: Extent,
+): RestFit[] {
+  const base = source.base === null ? undefined : points.get(source.base);
+  if (base === undefined) return [];
+  const core = source.core === null ? undefined : points.get(source.core);
+  const spans = work.map((one) => one.spans);
+  return restsOf(spans, base, core ?? null, extent);
+}
+
+function whyNotRecovered(rests: readonly RestFit[], base: string | null): Missing {
+  if (base === null) return 'no-base';
+  return rests.length === 0 ? 'no-rest' : 'not-fitted';
 }
 
 /** Good readings of [fromMs, toMs), of all points. */
