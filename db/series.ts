@@ -31,3 +31,13 @@ export const rollup = pgTable(
   },
   (table) => [primaryKey({ columns: [table.point, table.stepS, table.at] })],
 );
+
+/**
+ * Hours into which readings came late: their roll-ups, and the nights that hold them, are made anew. Written before the
+ * readings are, so that a worker that is killed between the two leaves an hour too much rather than one too few.
+ */
+export const readingDue = pgTable(
+  'reading_due',
+  { point: bigint('point', { mode: 'number' }).notNull(), hour: instant('hour').notNull() },
+  (table) => [primaryKey({ columns: [table.point, table.hour] })],
+);

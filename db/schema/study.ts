@@ -23,3 +23,22 @@ export const night = pgTable(
     index('night_house').on(table.holdingId, table.houseId, table.night),
   ],
 );
+
+/** The same of a house, whatever heats it. */
+export const houseNight = pgTable(
+  'house_night',
+  {
+    holdingId: holdingId(),
+    houseId: uuid('house_id').notNull(),
+    night: date('night', { mode: 'string' }).notNull(),
+    body: jsonb('body').$type<Record<string, unknown>>().notNull(),
+    madeAt: instant('made_at').notNull(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.houseId, table.night] }),
+    foreignKey({
+      columns: [table.holdingId, table.houseId],
+      foreignColumns: [house.holdingId, house.id],
+    }).onDelete('cascade'),
+  ],
+);

@@ -5,7 +5,7 @@
  * One estimate that lies far from the others counts for less (Huber 1964), so that a rest disturbed by a watering cannot
  * carry a week away.
  */
-import { tQuantile } from './t-quantile';
+import { t95 } from './student';
 
 export interface Measured {
   value: number;
@@ -44,7 +44,7 @@ export function pool(all: readonly Measured[], ownT = 1.959964): Pooled | null {
   const mean = all.reduce((sum, { value }, i) => sum + value * (weights[i] ?? 0), 0) / total;
   const spread = all.reduce((sum, { value }, i) => sum + (weights[i] ?? 0) * (value - mean) ** 2, 0);
   const sd = Math.sqrt(spread / (all.length - 1) / total);
-  const half = tQuantile(all.length - 1) * sd;
+  const half = t95(all.length - 1) * sd;
   return {
     value: mean,
     sd,

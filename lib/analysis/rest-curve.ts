@@ -20,7 +20,7 @@
  */
 import { inverse, normal } from './linear';
 import type { Reading } from './series';
-import { tQuantile } from './t-quantile';
+import { t95 } from './student';
 
 export interface Drift {
   /** K/s of the level, and its deviation. */
@@ -81,12 +81,12 @@ export function fitCurve(readings: readonly Reading[], fromMs: number, drift: Dr
   const best = search(problem);
   const errors = errorsOf(problem, best);
   const variance = Math.max(best.rss / freedom, 1e-12) * excess(errors);
-  const t95 = tQuantile(freedom);
-  const limit = best.rss + t95 ** 2 * variance;
+  const deviations = t95(freedom);
+  const limit = best.rss + deviations ** 2 * variance;
   const [low, high] = [edge(problem, best, -1, limit), edge(problem, best, 1, limit)];
   return {
     rate: best.rate / lengthS,
-    rateSd: (high - low) / (2 * t95) / lengthS,
+    rateSd: (high - low) / (2 * deviations) / lengthS,
     rateLow: low / lengthS,
     rateHigh: high / lengthS,
     start: best.linear[0],

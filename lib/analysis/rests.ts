@@ -9,7 +9,7 @@ import type { RestFit, RestWhy } from './rest-fit';
 import { runsOf } from './running';
 import type { Extent, Reading, Series } from './series';
 import type { Span } from './spans';
-import { tQuantile } from './t-quantile';
+import { t95 } from './student';
 
 /** Longest part of a rest that is looked at: later the heap's own day is what is seen. */
 const LONGEST_MS = 4 * 3_600_000;
@@ -74,7 +74,7 @@ function fitRest(pause: Extent, base: Series, core: Series | null): RestFit {
   };
   if (level === null || depth === null || rateLow <= 0 || lengthS * rate < LEAST_TAUS)
     return { ...no('too-short'), ...known };
-  if (depth.value < tQuantile(Math.max(1, used.length - 3)) * depth.sd) return no('no-return');
+  if (depth.value < t95(Math.max(1, used.length - 3)) * depth.sd) return no('no-return');
   return {
     ...pause,
     ...known,

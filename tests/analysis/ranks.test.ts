@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { shiftOf, theilSen } from '@/lib/analysis/ranks';
-import { tQuantile } from '@/lib/analysis/t-quantile';
-import { fullyApart, t975 } from '../checks/ranks';
+import { fullyApart } from '../checks/ranks';
 import { chance } from './chance';
 
 const upTo = (n: number, from = 0) => Array.from({ length: n }, (_, i) => from + i);
@@ -57,8 +56,4 @@ describe('a slope by the median of pairs', () => {
     }
     expect(hits / 1000).toBeGreaterThanOrEqual(0.94);
   });
-});
-
-it.each(t975)('Student’s t of %i degrees of freedom is %f', (freedom, t) => {
-  expect(tQuantile(freedom)).toBeCloseTo(t, 3);
 });

@@ -8,17 +8,3 @@ export const fullyApart = [
   { before: 7, after: 7, p: 2 / 3432 },
   { before: 2, after: 7, p: 2 / 36 },
 ];
-
-/**
- * Student's t, 97.5 %: Abramowitz and Stegun, Handbook of Mathematical Functions, table 26.10.
- */
-export const t975: readonly (readonly [freedom: number, t: number])[] = [
-  [1, 12.706],
-  [2, 4.303],
-  [8, 2.306],
-  [12, 2.179],
-  [20, 2.086],
-  [30, 2.042],
-  [60, 2.0],
-  [120, 1.98],
-];
