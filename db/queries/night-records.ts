@@ -5,6 +5,7 @@ import type { Holding } from '@/db/client';
 import { calibration, channel, house, loop, node, point, source } from '@/db/schema/yard';
 import type { NightChannel, NightInput } from '@/lib/analysis/nights';
 import { CALIBRATED_SD_K, classSd } from '@/lib/analysis/sensor-class';
+import type { HouseNightInput } from '@/lib/analysis/house-night';
 import type { Night } from '@/lib/analysis/night';
 import type { Series } from '@/lib/analysis/series';
 import { recordsOf } from './channel-records';
@@ -12,7 +13,7 @@ import type { Calibration } from './plan';
 import { correct } from './reading';
 
 export interface YardOfNights {
-  house: NightInput['house'] & { id: string };
+  house: HouseNightInput['house'] & { id: string };
   sources: (NightInput['source'] & { id: string })[];
   points: PointOfNights[];
   channels: ChannelOfNights[];
@@ -31,7 +32,8 @@ interface PointOfNights {
 
 interface ChannelOfNights extends Omit<NightChannel, 'record'> {
   id: string;
-  sourceId: string;
+  /** Null for what draws on nothing. */
+  sourceId: string | null;
   nodeKey: string;
   safe: 'on' | 'off';
   removedAt: number | null;
@@ -72,7 +74,10 @@ export async function yardOfNights(holding: Holding, houseId: string): Promise<Y
   const channels = await db.select().from(channel).where(of(channel)).orderBy(asc(channel.number));
   const { zone, latitude, longitude } = head;
   return {
-    house: { id: head.id, zone, latitude, longitude, altitudeM: head.altitude, frostLimitC: head.frostLimit },
+    house: {
+      ...{ id: head.id, zone, latitude, longitude, altitudeM: head.altitude },
+      ...{ frostLimitC: head.frostLimit, frostAlarmC: head.frostAlarm },
+    },
     sources: sources.map((row) => ({
       id: row.id,
       slug: row.slug,
@@ -88,32 +93,29 @@ export async function yardOfNights(holding: Holding, houseId: string): Promise<Y
       sensor: row.sensor,
       calibrations: corrections.get(row.id) ?? [],
     })),
-    channels: channels.flatMap((row): ChannelOfNights[] => {
-      if (row.sourceId === null) return [];
+    channels: channels.map((row): ChannelOfNights => {
       const own = loops.find((one) => one.channelId === row.id && one.sourceId === row.sourceId);
       const [intake, back] = [keyOf(own?.intakePointId ?? null), keyOf(own?.returnPointId ?? null)];
-      return [
-        {
-          id: row.id,
-          sourceId: row.sourceId,
-          number: row.number,
-          label: row.label,
-          powerW: row.load.watts ?? null,
-          flow:
-            row.flow === null
-              ? null
-              : {
-                  m3PerS: row.flow.litresPerSecond / 1000,
-                  sdM3PerS: row.flow.sd === undefined ? null : row.flow.sd / 1000,
-                  from: row.flow.from,
-                },
-          runProof: row.runProof,
-          loop: intake === null || back === null ? null : { intake, return: back },
-          nodeKey: nodes.get(row.nodeId)?.key ?? '',
-          safe: row.contact === 'NC' ? 'on' : 'off',
-          removedAt: row.removedAt?.getTime() ?? null,
-        },
-      ];
+      return {
+        id: row.id,
+        sourceId: row.sourceId,
+        number: row.number,
+        label: row.label,
+        powerW: row.load.watts ?? null,
+        flow:
+          row.flow === null
+            ? null
+            : {
+                m3PerS: row.flow.litresPerSecond / 1000,
+                sdM3PerS: row.flow.sd === undefined ? null : row.flow.sd / 1000,
+                from: row.flow.from,
+              },
+        runProof: row.runProof,
+        loop: intake === null || back === null ? null : { intake, return: back },
+        nodeKey: nodes.get(row.nodeId)?.key ?? '',
+        safe: row.contact === 'NC' ? 'on' : 'off',
+        removedAt: row.removedAt?.getTime() ?? null,
+      };
     }),
   };
 }
@@ -134,35 +136,33 @@ async function calibrationsOf(holding: Holding, pointIds: string[]): Promise<Map
   return found;
 }
 
-/** One night of every source of a house, ready to be summed up; by the source's id. */
+export interface InputsOfNight {
+  house: HouseNightInput;
+  /** By the source's id. */
+  sources: Map<string, NightInput>;
+}
+
+/** One night of a house and of every source of it, ready to be summed up. */
 export async function nightInputs(
   holding: Holding,
   yard: YardOfNights,
   night: Night,
   nowMs: number,
-): Promise<Map<string, NightInput>> {
+): Promise<InputsOfNight> {
   const to = Math.min(night.to, nowMs);
   const channels = yard.channels.filter((one) => one.removedAt === null || one.removedAt > night.from);
   const records = await recordsOf(holding, yard.house.id, channels, night.from, to);
   const points = await seriesOf(holding, yard, night.from - LEAD_MS, to);
-  return new Map(
-    yard.sources.map(({ id, ...own }) => [
-      id,
-      {
-        night,
-        nowMs,
-        house: yard.house,
-        source: own,
-        channels: channels
-          .filter((one) => one.sourceId === id)
-          .flatMap((one) => {
-            const record = records.get(one.id);
-            return record === undefined ? [] : [{ ...one, record }];
-          }),
-        points,
-      },
-    ]),
-  );
+  const recorded = channels.flatMap((one) => {
+    const record = records.get(one.id);
+    return record === undefined ? [] : [{ ...one, record }];
+  });
+  const common = { night, nowMs, house: yard.house, points };
+  const sources = yard.sources.map(({ id, ...source }) => {
+    const own = recorded.filter((one) => one.sourceId === id);
+    return [id, { ...common, source, channels: own }] as const;
+  });
+  return { house: { ...common, channels: recorded }, sources: new Map(sources) };
 }
 
 const ROLES_OF_EVERY_NIGHT = ['house-air', 'bench', 'outdoors', 'humidity'];
@@ -247,4 +247,14 @@ export async function firstKnown(holding: Holding, houseId: string): Promise<Map
     from source s
     where s.holding_id = ${holding.id} and s.house_id = ${houseId} and s.removed_at is null`);
   return new Map(rows.flatMap((row) => (row.at === null ? [] : [[row.id, row.at] as const])));
+}
+
+/** Epoch ms of the first reading of a house; null without any. */
+export async function firstReading(holding: Holding, houseId: string): Promise<number | null> {
+  const { rows } = await holding.db.execute<{ at: number | null }>(sql`
+    select (extract(epoch from min(first.at)) * 1000)::float8 as at
+    from point p cross join lateral
+      (select at from reading where point = p.number order by at limit 1) first
+    where p.holding_id = ${holding.id} and p.house_id = ${houseId}`);
+  return rows[0]?.at ?? null;
 }

@@ -1,20 +1,14 @@
 /**
  * Nights as they are kept. A row is a summary that can be made anew at any time from what was recorded; everybody who
- * shows a night reads its row, so that pages, CSV and interface agree.
+ * shows a night reads its row, so that pages, CSV and interface agree. night-making.ts makes them.
  */
-import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, gte, inArray, isNull, lt, lte, or, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { night as nightTable } from '@/db/schema/study';
+import { houseNight as houseNightTable, night as nightTable } from '@/db/schema/study';
 import { house, source } from '@/db/schema/yard';
-import { type Night, nightOf, nightsBetween } from '@/lib/analysis/night';
-import { type NightSummary, SUMMARY_VERSION } from '@/lib/analysis/nights';
-import { summarise } from '@/lib/analysis/summarise';
-import { countReadings, firstKnown, nightInputs, yardOfNights, type YardOfNights } from './night-records';
-
-/** How old a lasting night's summary may be when somebody asks for it, ms of app time. */
-const FRESH_MS = 30_000;
-/** A node that was cut off sends later what it kept, a day's worth at least: so far back nights are looked at again. */
-const LATE_MS = 3 * 86_400_000;
+import { nightOf } from '@/lib/analysis/night';
+import { type HouseNight, type NightSummary, SUMMARY_VERSION } from '@/lib/analysis/nights';
+import { bringUp, zoneOf } from './night-making';
 
 export interface NightAsk {
   /** Slugs; left out, all sources of the house. */
@@ -87,135 +81,49 @@ export async function nightsKept(
 
 /** A row of an older make is not shown: it is made anew by the next look. */
 function asSummary(body: Record<string, unknown>): NightSummary | null {
-  // written below and nowhere else, in this shape when the version agrees
+  // written by night-making.ts and nowhere else, in this shape when the version agrees
   return body['version'] === SUMMARY_VERSION ? (body as unknown as NightSummary) : null;
 }
 
-async function zoneOf(holding: Holding, houseId: string): Promise<string | null> {
-  const [row] = await holding.db
-    .select({ zone: house.zone })
-    .from(house)
-    .where(and(eq(house.holdingId, holding.id), eq(house.id, houseId)));
-  return row?.zone ?? null;
-}
-
-/** Makes what a reader would find missing or stale: the lasting night, and the one before it just after noon. */
-async function bringUp(holding: Holding, houseId: string, nowMs: number): Promise<void> {
-  const zone = await zoneOf(holding, houseId);
-  if (zone === null) return;
-  const present = nightOf(nowMs, zone);
-  await makeDue(holding, houseId, nowMs, (night, madeAt) => madeAt < Math.min(night.to, nowMs - FRESH_MS), {
-    nights: [nightOf(present.from - 1, zone), present],
-  });
+export interface HouseNightOf {
+  /** Slug. */
+  house: string;
+  night: HouseNight;
 }
 
 /**
- * Makes every night of a house that is missing or lasts, and those of the last days for which readings came in late.
- * @returns how many nights were made
+ * Nights of a house, or with null of all houses of the holding that are in use, in the range of names, both included:
+ * ascending by night, houses by slug within one. The lasting night is as fresh as its last look, some minutes.
  */
-export async function refreshNights(holding: Holding, houseId: string, nowMs: number): Promise<number> {
-  const made = await makeDue(holding, houseId, nowMs, (night, madeAt) => madeAt < Math.min(night.to, nowMs));
-  const late = await nightsGrown(holding, houseId, nowMs);
-  return made + (late.length === 0 ? 0 : await remakeNights(holding, houseId, late, nowMs));
-}
-
-/** Whole nights of the last days that have more readings by now than they were made of. */
-async function nightsGrown(holding: Holding, houseId: string, nowMs: number): Promise<Night[]> {
-  const yard = await yardOfNights(holding, houseId);
-  if (yard === null) return [];
-  const grown: Night[] = [];
-  for (const night of nightsBetween(nowMs - LATE_MS, nowMs, yard.house.zone)) {
-    if (night.to > nowMs) continue;
-    const { rows } = await holding.db.execute<{ readings: number | null }>(sql`
-      select min((body->>'readings')::int) as readings from night
-      where holding_id = ${holding.id} and house_id = ${houseId} and night = ${night.night}`);
-    const kept = rows[0]?.readings;
-    if (typeof kept === 'number' && kept < (await countReadings(holding, yard, night))) grown.push(night);
-  }
-  return grown;
-}
-
-/** Makes nights anew, whatever is kept: after an import, or when their making has changed. */
-export async function remakeNights(
+export async function listHouseNights(
   holding: Holding,
-  houseId: string,
-  nights: readonly Night[],
-  nowMs: number,
-): Promise<number> {
-  return makeDue(holding, houseId, nowMs, () => true, { nights });
+  houseId: string | null,
+  ask: { from: string; to: string },
+): Promise<HouseNightOf[]> {
+  const rows = await holding.db
+    .select({ house: house.slug, body: houseNightTable.body })
+    .from(houseNightTable)
+    .innerJoin(
+      house,
+      and(eq(house.holdingId, houseNightTable.holdingId), eq(house.id, houseNightTable.houseId)),
+    )
+    .where(
+      and(
+        eq(houseNightTable.holdingId, holding.id),
+        houseId === null ? isNull(house.removedAt) : eq(houseNightTable.houseId, houseId),
+        gte(houseNightTable.night, ask.from),
+        lte(houseNightTable.night, ask.to),
+      ),
+    )
+    .orderBy(asc(houseNightTable.night), asc(house.slug));
+  return rows.flatMap((row) => {
+    const night = asHouseNight(row.body);
+    return night === null ? [] : [{ house: row.house, night }];
+  });
 }
 
-/** @param isDue told when the night was last made, −∞ where it never was */
-async function makeDue(
-  holding: Holding,
-  houseId: string,
-  nowMs: number,
-  isDue: (night: Night, madeAt: number) => boolean,
-  only?: { nights: readonly Night[] },
-): Promise<number> {
-  const zone = await zoneOf(holding, houseId);
-  const known = [...(await firstKnown(holding, houseId))].filter(([, first]) => first <= nowMs);
-  if (zone === null || known.length === 0) return 0;
-  const nights = only?.nights ?? nightsBetween(Math.min(...known.map(([, first]) => first)), nowMs, zone);
-  const made = await madeAtOf(holding, houseId, nights);
-  let yard: YardOfNights | null = null;
-  let count = 0;
-  for (const night of nights) {
-    if (night.from > nowMs) continue;
-    // a source has no nights from before anything was known of it
-    const sources = known.filter(([, first]) => first < night.to).map(([id]) => id);
-    if (!sources.some((id) => isDue(night, made.get(`${night.night} ${id}`) ?? -Infinity))) continue;
-    yard ??= await yardOfNights(holding, houseId);
-    if (yard === null) return 0;
-    await make(holding, yard, night, new Set(sources), nowMs);
-    count += 1;
-  }
-  return count;
-}
-
-/** When each row of this make was made, epoch ms, by the night's name and the source's id. */
-async function madeAtOf(
-  holding: Holding,
-  houseId: string,
-  nights: readonly Night[],
-): Promise<Map<string, number>> {
-  const names = nights.map((one) => one.night).sort();
-  const { rows } = await holding.db.execute<{ night: string; source: string; at: number }>(sql`
-    select night::text as night, source_id as source, (extract(epoch from made_at) * 1000)::float8 as at
-    from night
-    where holding_id = ${holding.id} and house_id = ${houseId}
-      and night between ${names[0] ?? null}::date and ${names.at(-1) ?? null}::date
-      and (body->>'version')::int = ${SUMMARY_VERSION}`);
-  return new Map(rows.map((row) => [`${row.night} ${row.source}`, row.at]));
-}
-
-async function make(
-  holding: Holding,
-  yard: YardOfNights,
-  night: Night,
-  sources: ReadonlySet<string>,
-  nowMs: number,
-): Promise<void> {
-  const inputs = await nightInputs(holding, yard, night, nowMs);
-  const rows = [...inputs]
-    .filter(([sourceId]) => sources.has(sourceId))
-    .map(([sourceId, input]) => ({
-      holdingId: holding.id,
-      houseId: yard.house.id,
-      sourceId,
-      night: night.night,
-      body: { ...summarise(input) },
-      madeAt: new Date(nowMs),
-    }));
-  if (rows.length === 0) return;
-  await holding.db
-    .insert(nightTable)
-    .values(rows)
-    .onConflictDoUpdate({
-      target: [nightTable.holdingId, nightTable.sourceId, nightTable.night],
-      set: { body: sql`excluded.body`, madeAt: sql`excluded.made_at` },
-      // two may make the same night at once: what saw more readings stays, of equals the later look
-      setWhere: sql`coalesce((${nightTable.body}->>'readings')::int, 0) < (excluded.body->>'readings')::int
-        or ${nightTable.madeAt} <= excluded.made_at`,
-    });
+/** As `asSummary`, of a house. */
+function asHouseNight(body: Record<string, unknown>): HouseNight | null {
+  // written by night-making.ts and nowhere else, in this shape when the version agrees
+  return body['version'] === SUMMARY_VERSION ? (body as unknown as HouseNight) : null;
 }

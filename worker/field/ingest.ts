@@ -1,4 +1,5 @@
 /** From packs to the table of readings: many packs a commit, an answer for each. */
+import { noteLate } from '@/db/queries/late-readings';
 import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
 import type { Base } from '../base';
 import { GroupWriter } from '../group-writer';
@@ -6,6 +7,8 @@ import { GroupWriter } from '../group-writer';
 /** Some forty bytes each; a thousand houses' readings of ten minutes. Beyond it nodes keep theirs, unacknowledged. */
 const HELD_ROWS = 500_000;
 const GROUP_ROWS = 20_000;
+/** Older readings find their roll-ups and nights made: within it the roll-ups of a start afresh reach them. */
+export const LATE_MS = 20 * 3_600_000;
 
 export interface Stored {
   stored: number;
@@ -25,7 +28,12 @@ export class Ingest {
       // An empty pack weighs too: it waits for its turn, so acknowledgements keep their order.
       weigh: (rows) => Math.max(rows.length, 1),
       write: async (packs) => {
-        const flags = await storeReadings(base.pool, packs.flat());
+        const rows = packs.flat();
+        const late = base.clock.appNow() - LATE_MS;
+        // before, or a worker killed in between would forget them; after, or the job may have looked too early
+        await noteLate(base.pool, rows, late);
+        const flags = await storeReadings(base.pool, rows);
+        await noteLate(base.pool, rows, late);
         base.metrics.add('readings_commits_total');
         let first = 0;
         return packs.map((rows) => flags.slice(first, (first += rows.length)));

@@ -1,5 +1,6 @@
 /** What is done by the clock: roll-ups, night summaries, months of readings made ahead. The leader alone does them. */
 import cron, { type ScheduledTask } from 'node-cron';
+import { makeLate } from '@/db/queries/late-readings';
 import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
 import type { Base } from '../base';
 import type { Houses } from '../control/houses';
@@ -30,6 +31,7 @@ export class Jobs {
       cron.schedule(expression, () => void this.run(name, work), { timezone: 'UTC' });
     this.tasks = [
       each('*/1 * * * *', 'roll-ups', () => this.rollUpTouched()),
+      each('*/1 * * * *', 'late readings', () => this.makeLate()),
       each('*/5 * * * *', 'nights', () => this.keepNights()),
       each('17 3 * * *', 'months', () => this.makeMonths()),
     ];
@@ -59,10 +61,15 @@ export class Jobs {
     // Points of which the same hour was touched go together: most packs are of now.
     const hours = new Map<number, number[]>();
     for (const [point, from] of touched) {
-      const hour = Math.floor(from / 3_600_000);
+      // what is older is noted as late, hour by hour
+      const hour = Math.floor(Math.max(from, to - AFRESH_MS) / 3_600_000);
       hours.set(hour, [...(hours.get(hour) ?? []), point]);
     }
     for (const [hour, points] of hours) await rollUp(this.deps.pool, points, hour * 3_600_000, to);
+  }
+
+  private async makeLate(): Promise<void> {
+    await makeLate(this.deps.pool, this.deps.db);
   }
 
   private async rollUpAfresh(): Promise<void> {

@@ -1,5 +1,5 @@
 import type { Holding } from '@/db/client';
-import { refreshNights as refresh } from '@/db/queries/night';
+import { refreshNights as refresh } from '@/db/queries/night-making';
 
 /**
  * Keeps the nights of one house: called every few minutes, it makes what is missing and the lasting night. Readers bring
