@@ -1,5 +1,5 @@
 /** How a house kept over a night: how much warmer than outdoors, how damp, and whether leaves were wet. */
-import { dewPoint } from '@/lib/physics/air';
+import { saturationPressure } from '@/lib/physics/air';
 import type { Missing, NightClimate } from './nights';
 import { type Extent, holds, liner, type Series, unionMs } from './series';
 
@@ -68,8 +68,9 @@ function wetMs(
     const [tempC, percent] = [meanOf(air)(from), meanOf(humidity)(from)];
     const values = inside.flatMap((one) => one(from) ?? []);
     if (tempC === null || percent === null || values.length === 0) return sum;
-    const dew = dewPoint(tempC, Math.min(100, Math.max(0, percent)) / 100);
-    return dew !== null && Math.min(...values) <= dew ? sum + to - from : sum;
+    // at or under the dew point is where the air's vapour saturates: so compared, no dew point need be searched for
+    const vapourPa = (Math.min(100, Math.max(0, percent)) / 100) * saturationPressure(tempC);
+    return saturationPressure(Math.min(...values)) <= vapourPa ? sum + to - from : sum;
   }, 0);
 }
 
