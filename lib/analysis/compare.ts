@@ -1,0 +1,173 @@
+/**
+ * Two sets of nights side by side, and of each figure whether it differs by more than chance. A set is nights of one source
+ * or of a house; figures are of a night, so that sets of unlike length can be compared.
+ */
+import { meanOfNights, type NightsMean } from './mean-of-nights';
+import type { HouseNight, NightSummary } from './nights';
+import { t95 } from './student';
+
+export const COMPARED = [
+  'ran',
+  'heat',
+  'electricity',
+  'forPower',
+  'core',
+  'lowest',
+  'underLimit',
+  'lift',
+  'humid',
+  'outdoors',
+] as const;
+/**
+ * Shares 0 to 1; kWh a night; kWh for 1 kWh; °C; hours a night under the frost limit; K that the house was warmer than
+ * outdoors on the mean; hours a night over 90 %.
+ */
+export type FigureKey = (typeof COMPARED)[number];
+
+export interface ComparableNight {
+  night: string;
+  values: Partial<Record<FigureKey, number>>;
+  /** Deviation of a figure that is the same every night, from sensors and flow; null: taken as none. */
+  lasting: Partial<Record<FigureKey, number>>;
+}
+
+export interface ComparedMean extends NightsMean {
+  /** Of the mean, with what sensors and flow may be wrong by. */
+  sdWhole: number;
+}
+
+export interface ComparedFigure {
+  key: FigureKey;
+  /** Null under three nights that have it. */
+  chosen: ComparedMean | null;
+  other: ComparedMean | null;
+  /** Chosen less other, with its 95 % interval; null where either is not known. */
+  difference: { value: number; low: number; high: number } | null;
+  /** The interval leaves none out; null where no difference is known. */
+  isBeyondChance: boolean | null;
+}
+
+export interface Comparison {
+  figures: ComparedFigure[];
+  /** Nights of each that count: whole ones, read well enough. */
+  chosen: { nights: number; leftOut: number };
+  other: { nights: number; leftOut: number };
+  /** The same nights were compared one by one, so that what the weather did to both cancels. */
+  isPaired: boolean;
+}
+
+interface Set {
+  all: number;
+  nights: ComparableNight[];
+}
+
+/** Nights that last or of which under 90 % was read say too little to be compared. */
+export function comparable(nights: readonly (NightSummary | HouseNight)[]): Set {
+  const whole = nights.filter((night) => night.complete && !night.coverageLow);
+  return {
+    all: nights.length,
+    nights: whole.map((night) => ({
+      night: night.night,
+      values: valuesOf(night),
+      lasting: {
+        ...(night.heat === null ? {} : { heat: night.heat.sd }),
+        ...(night.heatForPower === null ? {} : { forPower: night.heatForPower.sd }),
+      },
+    })),
+  };
+}
+
+function valuesOf(night: NightSummary | HouseNight): ComparableNight['values'] {
+  const { heat, electricity, heatForPower, lowest, liftDegreeHours, over90Hours, outdoorsLowest } = night;
+  const known: [FigureKey, number | null | undefined][] = [
+    ['ran', 'dutyOfNight' in night ? night.dutyOfNight : null],
+    ['heat', heat?.kWh],
+    ['electricity', electricity?.kWh],
+    ['forPower', heatForPower?.ratio],
+    ['core', 'coreAtDawn' in night ? night.coreAtDawn?.value : null],
+    ['lowest', lowest?.value],
+    ['underLimit', underLimitHours(night)],
+    ['lift', liftDegreeHours === null ? null : liftDegreeHours / night.hours],
+    ['humid', over90Hours],
+    ['outdoors', outdoorsLowest?.value],
+  ];
+  return Object.fromEntries(known.filter(([, value]) => typeof value === 'number'));
+}
+
+function underLimitHours(night: NightSummary | HouseNight): number | null {
+  if (night.lowest === null || ('source' in night && night.missing.belowFrostLimit !== undefined))
+    return null;
+  return night.belowFrostLimitSeconds === null ? null : night.belowFrostLimitSeconds / 3600;
+}
+
+/**
+ * @param how 'ranges': other nights of the same source, whose sensors and flow are then as wrong in both and cancel;
+ * 'places': another source or house, of which the same nights are compared one with the other
+ */
+export function compareNights(chosen: Set, other: Set, how: 'ranges' | 'places'): Comparison {
+  const figures = COMPARED.map((key) => compareFigure(key, chosen.nights, other.nights, how));
+  return {
+    figures: figures.filter((figure) => figure.chosen !== null || figure.other !== null),
+    chosen: { nights: chosen.nights.length, leftOut: chosen.all - chosen.nights.length },
+    other: { nights: other.nights.length, leftOut: other.all - other.nights.length },
+    isPaired: how === 'places',
+  };
+}
+
+function compareFigure(
+  key: FigureKey,
+  chosen: readonly ComparableNight[],
+  other: readonly ComparableNight[],
+  how: 'ranges' | 'places',
+): ComparedFigure {
+  const [one, two] = [meanOf(key, chosen), meanOf(key, other)];
+  const gap = how === 'ranges' ? betweenMeans(one, two) : betweenPairs(key, chosen, other);
+  if (one === null || two === null || gap === null)
+    return { key, chosen: one, other: two, difference: null, isBeyondChance: null };
+  const lasting = how === 'ranges' ? 0 : Math.hypot(lastingOf(key, chosen), lastingOf(key, other));
+  const { mean: value, degrees } = gap;
+  const sd = Math.hypot(gap.sd, lasting);
+  // the part that lasts is known, so it brings no doubt about itself (Welch–Satterthwaite)
+  const half = sd === 0 ? 0 : t95(Math.min(1e6, degrees * (sd / Math.max(gap.sd, sd * 1e-3)) ** 4)) * sd;
+  const [low, high] = [value - half, value + half];
+  return {
+    key,
+    chosen: one,
+    other: two,
+    difference: { value, low, high },
+    isBeyondChance: value !== 0 && (low > 0 || high < 0),
+  };
+}
+
+function meanOf(key: FigureKey, nights: readonly ComparableNight[]): ComparedMean | null {
+  const mean = meanOfNights(nights.flatMap(({ values }) => values[key] ?? []));
+  return mean === null ? null : { ...mean, sdWhole: Math.hypot(mean.sd, lastingOf(key, nights)) };
+}
+
+/** The sensors are as wrong in every night, so that the mean is as wrong as a night is on the mean. */
+function lastingOf(key: FigureKey, nights: readonly ComparableNight[]): number {
+  const known = nights.flatMap(({ values, lasting }) => (key in values ? [lasting[key] ?? 0] : []));
+  return known.length === 0 ? 0 : known.reduce((sum, one) => sum + one, 0) / known.length;
+}
+
+/** Welch: the two scatter each in its own way. */
+function betweenMeans(one: NightsMean | null, two: NightsMean | null) {
+  if (one === null || two === null) return null;
+  const [a, b] = [one.sd ** 2, two.sd ** 2];
+  const degrees = a + b === 0 ? 1 : (a + b) ** 2 / (a ** 2 / one.degrees + b ** 2 / two.degrees);
+  return { mean: one.mean - two.mean, sd: Math.sqrt(a + b), degrees };
+}
+
+function betweenPairs(
+  key: FigureKey,
+  chosen: readonly ComparableNight[],
+  other: readonly ComparableNight[],
+): NightsMean | null {
+  const theirs = new Map(other.map(({ night, values }) => [night, values[key]]));
+  return meanOfNights(
+    chosen.flatMap(({ night, values }) => {
+      const [one, two] = [values[key], theirs.get(night)];
+      return one === undefined || two === undefined ? [] : [one - two];
+    }),
+  );
+}
