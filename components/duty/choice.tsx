@@ -4,18 +4,22 @@ import { Select } from '@/components/ui/field';
 import { Button } from '@/components/ui/button';
 import type { DutyAddress } from './address';
 
-/** Which source and how many nights. It is a form of the address: it works before its script, by its button. */
+/** Which source, how many nights, and beside what. It is a form of the address: it works before its script, by its button. */
 export function Choice({
   house,
   address,
   sources,
   ranges,
+  others,
 }: {
   house: string;
   address: DutyAddress;
   sources: { slug: string; name: string }[];
   ranges: { nights: number; label: string }[];
+  /** What the nights can be compared with, in groups. */
+  others: { group: string; choices: { value: string; label: string }[] }[];
 }) {
+  const { from, to } = address;
   return (
     <Form
       action={`/${house}/duty`}
@@ -26,7 +30,7 @@ export function Choice({
         label="Source"
         name="source"
         defaultValue={address.source ?? sources[0]?.slug ?? ''}
-        className="w-44"
+        className="w-40"
       >
         {sources.map((source) => (
           <option key={source.slug} value={source.slug}>
@@ -41,6 +45,24 @@ export function Choice({
           </option>
         ))}
       </Select>
+      <Select label="Compare with" name="against" defaultValue={address.against ?? ''} className="w-56">
+        <option value="">Nothing</option>
+        {others.map(({ group, choices }) => (
+          <optgroup key={group} label={group}>
+            {choices.map((choice) => (
+              <option key={choice.value} value={choice.value}>
+                {choice.label}
+              </option>
+            ))}
+          </optgroup>
+        ))}
+      </Select>
+      {from === undefined || to === undefined ? null : (
+        <>
+          <input type="hidden" name="from" value={from} />
+          <input type="hidden" name="to" value={to} />
+        </>
+      )}
       {address.sort === 'night' ? null : <input type="hidden" name="sort" value={address.sort} />}
       {address.order === 'up' ? null : <input type="hidden" name="order" value={address.order} />}
       <noscript>

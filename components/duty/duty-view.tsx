@@ -1,29 +1,22 @@
 import { StripKey } from '@/components/chart/strip';
 import { ButtonLink } from '@/components/ui/button';
-import { Figures, Panel } from '@/components/ui/panel';
+import { Panel } from '@/components/ui/panel';
 import { Sentence } from '@/components/ui/sentence';
 import { Empty } from '@/components/ui/states';
-import type { NightSummary } from '@/lib/analysis/nights';
 import { totalOf } from '@/lib/analysis/totals';
 import type { Preferences } from '@/lib/units/preferences';
-import { dutySentence, nightDate } from '@/lib/wording/duty';
-import { type DutyAddress, RANGES } from './address';
-import { Choice } from './choice';
-import { CoreAtDawn, dawnsOf } from './core-at-dawn';
-import { nightFigures } from './figures';
+import { dutySentence } from '@/lib/wording/duty';
+import { recoverySentence } from '@/lib/wording/duty-recovery';
+import { sentences } from '@/lib/wording/join';
+import { addressOf, type DutyAddress } from './address';
+import { Beside } from './beside';
+import { Controls } from './controls';
+import type { DutyHouse, DutyViewData } from './duty-data';
 import { SharedPatterns } from './night-strip';
 import { NightsTable } from './nights-table';
-import { OpenedNight, type OpenedDecision } from './opened-night';
-import { PrintButton } from './print-button';
-
-export interface DutyViewData {
-  sources: { slug: string; name: string }[];
-  source: { slug: string; name: string } | null;
-  kept: { first: string; last: string; count: number } | null;
-  nights: NightSummary[];
-  marks: { at: number; kind: string }[];
-  opened: { summary: NightSummary; decisions: OpenedDecision[] } | null;
-}
+import { OpenedNight } from './opened-night';
+import { SideColumn } from './side-column';
+import { YearCalendar } from './year-calendar';
 
 export function DutyView({
   house,
@@ -31,46 +24,34 @@ export function DutyView({
   data,
   preferences,
 }: {
-  house: { slug: string; name: string; zone: string; frostLimit: number | null };
+  house: DutyHouse;
   address: DutyAddress;
   data: DutyViewData;
   preferences: Preferences;
 }) {
-  const { source, nights } = data;
+  const { source, chosen, opened, recovery } = data;
   if (source === null) return <NoSource house={house} />;
-  const totals = totalOf(nights);
-  const standing = { source: source.name, nights, totals, frostLimitC: house.frostLimit };
-  const shared = { house: house.slug, address, frostLimitC: house.frostLimit, preferences };
-  const dawns = dawnsOf(nights);
+  const totals = totalOf(chosen);
+  const isPart = chosen.length < data.nights.length;
+  const standing = { source: source.name, nights: chosen, totals, frostLimitC: house.frostLimit, isPart };
+  const shared = { house, address, source, data, preferences };
+  const bare = addressOf(house.slug, address, { night: undefined });
   return (
     <div className="flex flex-col gap-4">
       <SharedPatterns />
-      <Sentence phrases={dutySentence(standing, preferences)} before="Duty" />
-      <div className="not-on-paper flex flex-wrap items-end justify-between gap-3">
-        <Choice
-          key={`${source.slug} ${address.nights}`}
-          house={house.slug}
-          address={{ ...address, source: source.slug }}
-          sources={data.sources}
-          ranges={rangesOf(data)}
-        />
-        <div className="flex flex-wrap gap-2">
-          {/* a file, not a page: the browser must ask for it itself */}
-          <ButtonLink href={csvOf(house.slug, source.slug, nights)} prefetch={false} download>
-            Download CSV
-          </ButtonLink>
-          <PrintButton />
-        </div>
-      </div>
-      {data.opened === null ? null : (
-        <OpenedNight
-          {...shared}
-          {...data.opened}
-          zone={house.zone}
-          nights={nights.map((night) => night.night)}
-        />
+      <Sentence
+        phrases={sentences(
+          dutySentence(standing, preferences),
+          recovery === null ? [] : recoverySentence(recovery.weeks, recovery.trend, preferences),
+        )}
+        before="Duty"
+      />
+      <Controls {...shared} />
+      {opened === null ? null : (
+        <OpenedNight {...shared} opened={opened} nights={chosen.map((night) => night.night)} />
       )}
-      {nights.length === 0 ? (
+      {data.other === null ? null : <Beside {...shared} other={data.other} />}
+      {chosen.length === 0 ? (
         <Empty title="No night yet.">
           <p>
             A night runs from noon to noon and is summed up from its first reading on. Connect a field node on
@@ -80,30 +61,30 @@ export function DutyView({
       ) : (
         <div className="grid gap-4 lg:grid-cols-[minmax(0,1fr)_20.5rem] lg:items-start print:block">
           <Panel title="Every night, noon to noon" note={<StripKey id="duty-key" />}>
-            <NightsTable {...shared} nights={nights} totals={totals} />
+            <NightsTable
+              house={house.slug}
+              {...{ address, totals, preferences }}
+              nights={chosen}
+              frostLimitC={house.frostLimit}
+            />
           </Panel>
-          <div className="flex flex-col gap-4">
-            {dawns.length === 0 ? null : (
-              <Panel title="Core at dawn">
-                <CoreAtDawn dawns={dawns} marks={data.marks} zone={house.zone} preferences={preferences} />
-              </Panel>
-            )}
-            <Panel title={nights.length === 1 ? 'This night' : 'Together'}>
-              <Figures rows={nightFigures(nights, house.zone, house.frostLimit, preferences)} />
-            </Panel>
-          </div>
+          <SideColumn {...shared} />
         </div>
+      )}
+      {data.year.length < 2 ? null : (
+        <Panel
+          title="The year"
+          note="a square is as large as the night was run; outlined where the house came under its frost limit"
+        >
+          <YearCalendar
+            days={data.year}
+            to={`${bare}${bare.includes('?') ? '&' : '?'}night=`}
+            preferences={preferences}
+          />
+        </Panel>
       )}
     </div>
   );
-}
-
-/** The very nights of the table, from the interface. */
-function csvOf(house: string, source: string, nights: readonly NightSummary[]): string {
-  const query = new URLSearchParams({ format: 'csv', source, limit: '500' });
-  const first = nights[0];
-  if (first !== undefined) query.set('from', first.night);
-  return `/api/v1/houses/${house}/nights?${query}`;
 }
 
 function NoSource({ house }: { house: { slug: string; name: string } }) {
@@ -121,19 +102,4 @@ function NoSource({ house }: { house: { slug: string; name: string } }) {
       </Empty>
     </div>
   );
-}
-
-/** Ranges that are longer than what is kept say the same as the first that holds it all, so they are left out. */
-function rangesOf({ kept, nights }: DutyViewData): { nights: number; label: string }[] {
-  const count = kept?.count ?? 0;
-  const useful = RANGES.filter((range, i) => i === 0 || (RANGES[i - 1] ?? 0) < count);
-  const span = (range: number) => {
-    const first = nights[0];
-    const last = nights.at(-1);
-    const isShown = first !== undefined && last !== undefined && nights.length === Math.min(range, count);
-    return isShown
-      ? `${nightDate(first.night)} – ${nightDate(last.night)}, ${nights.length} nights`
-      : `Last ${range} nights`;
-  };
-  return useful.map((range) => ({ nights: range, label: span(range) }));
 }

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import type { NightSummary } from '@/lib/analysis/nights';
 import { totalOf } from '@/lib/analysis/totals';
-import { count, decimal, energy, share, temperature } from '@/lib/units/format';
+import { count, decimal, difference, energy, share, temperature, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock, duration } from '@/lib/units/time';
 import { nightDate, whyMissing } from '@/lib/wording/duty';
@@ -12,10 +12,7 @@ export interface FigureRow {
   note?: ReactNode;
 }
 
-/**
- * The figures of one night or of several, from the very totals that the table and the sentence show. Watch's "This night
- * so far" takes them for one night.
- */
+/** The figures of one night or of several, from the very totals that the table and the sentence show. */
 export function nightFigures(
   nights: readonly NightSummary[],
   zone: string,
@@ -32,16 +29,18 @@ export function nightFigures(
   const rows: (FigureRow | null)[] = [
     { name: 'Ran', value: `${hours(totals.onSeconds)}, ${count(totals.starts, 'start')}` },
     { name: 'Rested', value: hours(totals.restSeconds) },
+    totals.heldSeconds === 0 ? null : { name: 'Held', value: hours(totals.heldSeconds) },
+    totals.handSeconds === 0 ? null : { name: 'By hand', value: hours(totals.handSeconds) },
     totals.dutyOfDraw === null ? null : { name: 'Ran, of run and rest', value: share(totals.dutyOfDraw) },
     heat === null
-      ? { name: 'Heat', value: 'not known', ...(why === undefined ? {} : { note: whyMissing(why) }) }
+      ? { name: 'Heat', value: UNKNOWN, ...(why === undefined ? {} : { note: whyMissing(why) }) }
       : { name: 'Heat', value: energy(heat.kWh, 1, heat.sd) },
     electricity === null ? null : { name: 'Electricity', value: energy(electricity.kWh, 3) },
     gain === null
       ? null
       : { name: 'Heat for 1 kWh of fan', value: `${decimal(gain.value, 0)} ± ${decimal(gain.sd, 0)} kWh` },
     lowest === null
-      ? { name: 'Lowest in the house', value: 'not read' }
+      ? { name: 'Lowest in the house', value: UNKNOWN, note: whyMissing('no-readings') }
       : {
           name: 'Lowest in the house',
           value: `${temperature(lowest.value, preferences)}, ${when(lowest.at, lowest.night)}`,
@@ -57,6 +56,48 @@ export function nightFigures(
       : { name: 'Lowest outdoors', value: temperature(outdoorsLowest.value, preferences) },
   ];
   return rows.filter((row) => row !== null);
+}
+
+/** What only an opened night tells; what is not known says why. */
+export function openedFigures(night: NightSummary, zone: string, preferences: Preferences): FigureRow[] {
+  const { coreAtDawn: core, recovery, missing } = night;
+  const known = (
+    name: string,
+    value: string | null,
+    why: keyof NightSummary['missing'],
+    note?: string,
+  ): FigureRow => {
+    const reason = missing[why];
+    if (value !== null) return { name, value, ...(note === undefined ? {} : { note }) };
+    return { name, value: UNKNOWN, ...(reason === undefined ? {} : { note: whyMissing(reason) }) };
+  };
+  const hoursOf = (value: number | null) => (value === null ? null : hours(value * 3600));
+  return [
+    ...(core === null
+      ? []
+      : [
+          {
+            name: 'Core at dawn',
+            value: `${temperature(core.value, preferences)}, ${clock(core.at, zone, preferences)}`,
+          },
+        ]),
+    known(
+      'Regains two thirds in',
+      recovery === null ? null : `${duration(recovery.tau)} ± ${duration(recovery.tauSd)}`,
+      'recovery',
+      recovery === null ? undefined : `from ${count(recovery.rests, 'rest')}`,
+    ),
+    known(
+      'Warmer than outdoors by',
+      night.liftDegreeHours === null || night.hours === 0
+        ? null
+        : `${difference(night.liftDegreeHours / night.hours, preferences)} on the mean`,
+      'liftDegreeHours',
+    ),
+    known('Over 90\u00a0% humidity', hoursOf(night.over90Hours), 'over90Hours'),
+    known('At or under the dew point', hoursOf(night.underDewPointHours), 'underDewPointHours'),
+    { name: 'Read', value: share(night.coverage, 1), note: 'of what was to be read' },
+  ];
 }
 
 /** Many nights are told in hours throughout: "5 days" of a fan would not be read as a sum of runs. */

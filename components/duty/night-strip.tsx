@@ -1,53 +1,73 @@
-import { StripPatterns } from '@/components/chart/strip';
-import type { StripSpan } from '@/lib/analysis/nights';
+import type { StripPaths } from './strip-paths';
 
-/** Once on the page: four hundred strips share one pair of patterns. */
+/**
+ * The two patterns of all strips of the page. A strip is drawn in seconds by its own height and then stretched, so each
+ * pattern is pressed together by as much: for a strip of 450 px, and for one of 150 px on a phone.
+ */
 export function SharedPatterns() {
   return (
     <svg aria-hidden="true" className="absolute size-0">
-      <StripPatterns id="duty" />
+      <defs>
+        {[
+          ['duty', 192],
+          ['duty-narrow', 576],
+        ].map(([id, secondsAPixel]) => (
+          <g key={id}>
+            <pattern
+              id={`${id}-rest`}
+              width="6"
+              height="6"
+              patternUnits="userSpaceOnUse"
+              patternTransform={`scale(${secondsAPixel} 0.0714) rotate(45)`}
+            >
+              <rect width="1.8" height="6" className="fill-ember" />
+            </pattern>
+            <pattern
+              id={`${id}-held`}
+              width="5"
+              height="5"
+              patternUnits="userSpaceOnUse"
+              patternTransform={`scale(${secondsAPixel} 0.0714)`}
+            >
+              <circle cx="2.5" cy="2.5" r="1.1" className="fill-ink" />
+            </pattern>
+          </g>
+        ))}
+      </defs>
     </svg>
   );
 }
 
-function Spans({ spans, length, className }: { spans: StripSpan[]; length: number; className: string }) {
-  const part = (seconds: number) => `${Math.round((seconds / length) * 10_000) / 100}%`;
-  if (spans.length === 0) return null;
-  return (
-    <g className={className}>
-      {spans.map(([, from, to]) => (
-        <rect key={from} x={part(from)} width={part(to - from)} />
-      ))}
-    </g>
-  );
-}
+const REST = 'stroke-[url(#duty-narrow-rest)] sm:stroke-[url(#duty-rest)]';
+const HELD = 'stroke-[url(#duty-narrow-held)] sm:stroke-[url(#duty-held)]';
 
-/**
- * One channel's night from noon to noon. `length` is the whole night's, s: one that lasts ends early. Its words stand
- * beside it in the table, so to a reader that cannot see it it is nothing.
- */
-export function NightStrip({
-  spans,
-  length,
-  tall = false,
-}: {
-  spans: StripSpan[];
-  length: number;
-  tall?: boolean;
-}) {
-  const of = (kind: StripSpan[0], on?: boolean) =>
-    spans.filter((span) => span[0] === kind && (on === undefined || span[3] === on));
+/** One channel's night from noon to noon. Its words stand beside it, so to a reader that cannot see it it is nothing. */
+export function NightStrip({ strip, tall = false }: { strip: StripPaths; tall?: boolean }) {
+  const { length, run, rest, held, handOn, handOff } = strip;
   return (
     <svg
       aria-hidden="true"
-      className={`block w-full overflow-visible [&_rect]:h-full ${tall ? 'h-7' : 'h-3.5'}`}
+      viewBox={`0 -0.5 ${length} 1`}
       preserveAspectRatio="none"
+      className={tall ? 'block h-7 w-full' : 'block h-3.5 w-full'}
     >
-      <Spans spans={of('rest')} length={length} className="fill-[url(#duty-rest)]" />
-      <Spans spans={of('held')} length={length} className="fill-[url(#duty-held)]" />
-      <Spans spans={of('run')} length={length} className="fill-ember" />
-      <Spans spans={of('hand', true)} length={length} className="fill-ember/45 stroke-ink stroke-[1.5]" />
-      <Spans spans={of('hand', false)} length={length} className="fill-transparent stroke-ink stroke-[1.5]" />
+      {rest === '' ? null : <path d={rest} className={REST} />}
+      {held === '' ? null : <path d={held} className={HELD} />}
+      {run === '' ? null : <path d={run} className="stroke-ember" />}
+      {handOn === '' ? null : (
+        <path
+          d={handOn}
+          vectorEffect="non-scaling-stroke"
+          className="fill-ember/45 stroke-ink stroke-[1.5]"
+        />
+      )}
+      {handOff === '' ? null : (
+        <path
+          d={handOff}
+          vectorEffect="non-scaling-stroke"
+          className="fill-transparent stroke-ink stroke-[1.5]"
+        />
+      )}
     </svg>
   );
 }

@@ -1,138 +1,100 @@
+import { NoonToNoon } from '@/components/chart/noon-to-noon';
 import { ButtonLink } from '@/components/ui/button';
 import { Figures, Panel } from '@/components/ui/panel';
 import type { NightSummary } from '@/lib/analysis/nights';
-import { share, temperature } from '@/lib/units/format';
+import type { WatchBand, WatchLine, WatchStrip } from '@/lib/schema/watch-view';
 import type { Preferences } from '@/lib/units/preferences';
-import { clock } from '@/lib/units/time';
-import { decisionWords, nightTitle } from '@/lib/wording/duty';
+import { nightTitle } from '@/lib/wording/duty';
+import { nightNotes } from '@/lib/wording/duty-notes';
+import type { Scene } from '@/lib/wording/scene';
 import { addressOf, type DutyAddress } from './address';
-import { nightFigures } from './figures';
-import { NightStrip, QUARTERS, StripAxis } from './night-strip';
+import { nightFigures, openedFigures } from './figures';
+import { Decisions, type OpenedDecision } from './opened-decisions';
+import { Draws } from './opened-draws';
+import { Happenings, type OpenedAlarm, type OpenedEntry } from './opened-happenings';
 
-export interface OpenedDecision {
-  channel: string;
-  at: number;
-  state: 'on' | 'off';
-  claim: string;
+export interface OpenedData {
+  summary: NightSummary;
+  lines: WatchLine[];
+  strips: WatchStrip[];
+  bands: WatchBand[];
+  decisions: OpenedDecision[];
+  alarms: OpenedAlarm[];
+  entries: OpenedEntry[];
+  names: Pick<Scene, 'points' | 'channels' | 'sources'>;
 }
 
-/** One night, larger: its strips, its figures, and every decision with what decided it. */
+/** One night whole: its lines and strips, its figures, each draw, every decision, what rang and what was done. */
 export function OpenedNight({
   house,
-  zone,
   address,
-  summary,
-  decisions,
+  opened,
   nights,
-  frostLimitC,
   preferences,
 }: {
-  house: string;
-  zone: string;
+  house: { slug: string; zone: string; frostLimit: number | null };
   address: DutyAddress;
-  summary: NightSummary;
-  decisions: OpenedDecision[];
+  opened: OpenedData;
   /** Names of the nights in the table, ascending. */
   nights: string[];
-  frostLimitC: number | null;
   preferences: Preferences;
 }) {
+  const { summary, lines, strips, bands, names } = opened;
+  const { zone, frostLimit } = house;
   const place = nights.indexOf(summary.night);
   const [before, after] = [nights[place - 1], place < 0 ? undefined : nights[place + 1]];
-  const to = (night: string | undefined) => `${addressOf(house, address, { night })}#night`;
-  const core = summary.coreAtDawn;
+  const to = (night: string | undefined) => `${addressOf(house.slug, address, { night })}#night`;
+  const own = new Set(summary.channels.map((channel) => channel.label));
+  const main = bands.find((band) => band.purpose === 'warm' && own.has(band.channel)) ?? bands[0];
+  const night = { from: summary.from, to: summary.ends };
+  // an instant is told with its date where it is not of this night
+  const scene: Scene = { ...names, now: summary.to, zone, preferences };
   return (
     <div id="night" className="scroll-mt-4">
       <Panel
         title={`The night of ${nightTitle(summary.night)}${summary.complete ? '' : ', so far'}`}
         actions={
-          <>
+          <span className="not-on-paper flex flex-wrap gap-2">
             {before === undefined ? null : <ButtonLink href={to(before)}>Night before</ButtonLink>}
             {after === undefined ? null : <ButtonLink href={to(after)}>Night after</ButtonLink>}
-            <ButtonLink href={addressOf(house, address, { night: undefined })}>Close</ButtonLink>
-          </>
+            <ButtonLink href={addressOf(house.slug, address, { night: undefined })}>Close</ButtonLink>
+          </span>
         }
       >
         <div className="grid gap-x-8 gap-y-4 lg:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
-          <div className="flex min-w-0 flex-col gap-3">
-            {summary.strips.map((strip) => (
-              <div key={strip.channel}>
-                <p className="pb-1 text-[0.9rem]">{strip.label}</p>
-                <div className={`border-y border-line py-1 ${QUARTERS}`}>
-                  <NightStrip spans={strip.spans} length={(summary.ends - summary.from) / 1000} tall />
-                </div>
-              </div>
+          <div className="flex min-w-0 flex-col gap-5">
+            <NoonToNoon
+              preferences={preferences}
+              chart={{
+                ...{ night, now: summary.to, zone, lines, strips, bands, frostLimit },
+                main: main?.point ?? null,
+              }}
+            />
+            <Draws draws={summary.draws} channels={summary.channels} zone={zone} preferences={preferences} />
+          </div>
+          <div className="flex min-w-0 flex-col gap-4">
+            <Figures
+              rows={[
+                ...nightFigures([summary], zone, frostLimit, preferences),
+                ...openedFigures(summary, zone, preferences),
+              ]}
+            />
+            {nightNotes([summary]).map((note) => (
+              <p key={note} className="text-[0.85rem] text-soft">
+                {note}
+              </p>
             ))}
-            <StripAxis clock={preferences.clock} />
+            <Happenings alarms={opened.alarms} entries={opened.entries} scene={scene} />
             <Decisions
-              decisions={decisions}
+              decisions={opened.decisions}
               from={summary.from}
               zone={zone}
               preferences={preferences}
-              many={summary.strips.length > 1}
+              many={summary.channels.length > 1}
             />
           </div>
-          <Figures
-            rows={[
-              ...nightFigures([summary], zone, frostLimitC, preferences),
-              ...(core === null
-                ? []
-                : [
-                    {
-                      name: 'Core at dawn',
-                      value: `${temperature(core.value, preferences)}, ${clock(core.at, zone, preferences)}`,
-                    },
-                  ]),
-              { name: 'Read', value: share(summary.coverage, 1), note: 'of what was to be read' },
-            ]}
-          />
         </div>
       </Panel>
     </div>
-  );
-}
-
-function Decisions({
-  decisions,
-  from,
-  zone,
-  preferences,
-  many,
-}: {
-  decisions: OpenedDecision[];
-  /** The night's first noon: what stood then was decided before. */
-  from: number;
-  zone: string;
-  preferences: Preferences;
-  many: boolean;
-}) {
-  if (decisions.length === 0)
-    return (
-      <p className="text-soft">Nothing was decided in this night: no worker ran, or the channel is newer.</p>
-    );
-  return (
-    <ol
-      className="max-h-96 overflow-y-auto border-t border-line"
-      tabIndex={0}
-      aria-label="Decisions of the night"
-    >
-      {decisions.map((decision) => (
-        <li
-          key={`${decision.at} ${decision.channel} ${decision.claim} ${decision.state}`}
-          className="flex gap-3 border-b border-faint py-1.5"
-        >
-          <time
-            dateTime={new Date(decision.at).toISOString()}
-            className="w-20 shrink-0 font-mono text-[0.95rem] text-soft"
-          >
-            {decision.at < from ? 'at noon' : clock(decision.at, zone, preferences)}
-          </time>
-          <span>
-            {many ? `${decision.channel}: ` : null}
-            {decisionWords(decision.state, decision.claim)}
-          </span>
-        </li>
-      ))}
-    </ol>
   );
 }

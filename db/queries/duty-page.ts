@@ -1,19 +1,24 @@
-/** What the page Duty shows: the nights of one source, and the one that is opened. */
-import { and, asc, eq, gte, inArray, isNull, lt } from 'drizzle-orm';
+/** What the page Duty shows: the nights of one source, those that are chosen among them, and what they are compared with. */
+import { and, asc, eq, gte, inArray, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { heapEntry } from '@/db/schema/heap';
-import { channel, source } from '@/db/schema/yard';
-import { nightNamed } from '@/lib/analysis/night';
+import { source } from '@/db/schema/yard';
+import { nightBefore, nightNamed, nightOf } from '@/lib/analysis/night';
 import type { NightSummary } from '@/lib/analysis/nights';
-import type { State } from '@/lib/control/types';
+import { openNight, type OpenedNightData } from './duty-night';
+import { type Against, type Place, placesOf, readOther, type Other } from './duty-other';
 import { listNights, nightsKept } from './night';
-import { listDecisions } from './running';
+import { type DutyRecovery, readRecovery } from './duty-recovery';
+import { type NightDay, readDays } from './night-days';
 
 export interface DutyAsk {
   /** Slug; left out or unknown, the first source of the house. */
   source?: string | undefined;
   /** How many of the newest nights. */
   nights: number;
+  /** Names of the nights chosen among those, both included; all of them where left out. */
+  from?: string | undefined;
+  to?: string | undefined;
   /** Name of the night that is opened. */
   night?: string | undefined;
 }
@@ -30,47 +35,108 @@ export interface HeapMark {
   kind: string;
 }
 
-export interface OpenedDecision {
-  channel: string;
-  at: number;
-  state: State;
-  claim: string;
-}
-
 export interface DutyData {
   sources: DutySource[];
   /** Null in a house without any. */
   source: DutySource | null;
   kept: { first: string; last: string; count: number } | null;
-  /** Ascending. */
+  /** Ascending, of all that may be chosen. */
   nights: NightSummary[];
+  /** Of these, those that are. */
+  chosen: NightSummary[];
   marks: HeapMark[];
-  opened: { summary: NightSummary; decisions: OpenedDecision[] } | null;
+  opened: OpenedNightData | null;
+  /** Houses of the holding with their sources, for the choice of what to compare with. */
+  places: Place[];
+  other: Other | null;
+  /** Null for what is no store: a heater does not come back. */
+  recovery: DutyRecovery | null;
+  /** A year of the source's nights, ascending. */
+  year: NightDay[];
 }
 
 /** A page never shows more: past a year a line a night is no longer read, and the export has them all. */
 export const MOST_NIGHTS = 400;
+/** Kinds of source that come back by themselves. */
+const STORES: ReadonlySet<string> = new Set(['heap', 'ground']);
+/** Whole weeks, so that the first column is no stump. */
+const YEAR = 53 * 7;
+
+interface HouseOfDuty {
+  id: string;
+  slug: string;
+  zone: string;
+  latitude: number;
+  longitude: number;
+}
 
 export async function readDuty(
   holding: Holding,
-  house: { id: string; zone: string },
+  house: HouseOfDuty,
   ask: DutyAsk,
+  against: Against | null,
   nowMs: number,
 ): Promise<DutyData> {
   const sources = await sourcesOf(holding, house.id);
   const shown = sources.find((one) => one.slug === ask.source) ?? sources[0] ?? null;
-  if (shown === null) return { sources, source: null, kept: null, nights: [], marks: [], opened: null };
-  const limit = Math.min(Math.max(1, ask.nights), MOST_NIGHTS);
-  const nights = (await listNights(holding, house.id, { sources: [shown.slug], limit }, nowMs)).reverse();
-  const first = nights[0];
+  const empty = {
+    kept: null,
+    nights: [],
+    chosen: [],
+    marks: [],
+    opened: null,
+    places: [],
+    other: null,
+    recovery: null,
+    year: [],
+  };
+  if (shown === null) return { sources, source: null, ...empty };
+  const nights = await nightsOf(holding, house, shown, ask, nowMs);
+  const chosen = chosenOf(nights, ask);
+  const first = chosen[0];
+  const places = await placesOf(holding);
+  const marks = first === undefined ? [] : await marksOf(holding, shown.id, first.from);
   return {
     sources,
     source: shown,
     kept: await nightsKept(holding, shown.id),
     nights,
-    marks: first === undefined ? [] : await marksOf(holding, shown.id, first.from),
+    chosen,
+    marks,
     opened: await open(holding, house, shown, ask.night, nights, nowMs),
+    places,
+    other:
+      against === null || first === undefined
+        ? null
+        : await readOther(holding, { house, source: shown, chosen, places }, against, nowMs),
+    recovery: STORES.has(shown.kind) ? await readRecovery(holding, shown.id, chosen, marks) : null,
+    year: await readDays(holding, shown.id, nightBefore(nightOf(nowMs, house.zone).night, YEAR - 1)),
   };
+}
+
+/** The newest that were asked for; more where what is chosen began before them. */
+async function nightsOf(
+  holding: Holding,
+  house: HouseOfDuty,
+  shown: DutySource,
+  ask: DutyAsk,
+  nowMs: number,
+): Promise<NightSummary[]> {
+  const limit = Math.min(Math.max(1, ask.nights), MOST_NIGHTS);
+  const last = nightOf(nowMs, house.zone).night;
+  const from = ask.from !== undefined && ask.from < nightBefore(last, limit - 1) ? ask.from : undefined;
+  const wanted = {
+    sources: [shown.slug],
+    ...(from === undefined ? { limit } : { from, limit: MOST_NIGHTS }),
+  };
+  return (await listNights(holding, house.id, wanted, nowMs)).reverse();
+}
+
+/** An address that was kept may name nights that are none of these; all are shown then. */
+function chosenOf(nights: NightSummary[], { from, to }: DutyAsk): NightSummary[] {
+  if (from === undefined || to === undefined) return nights;
+  const chosen = nights.filter(({ night }) => night >= from && night <= to);
+  return chosen.length === 0 ? nights : chosen;
 }
 
 async function sourcesOf(holding: Holding, houseId: string): Promise<DutySource[]> {
@@ -99,40 +165,17 @@ async function marksOf(holding: Holding, sourceId: string, from: number): Promis
 
 async function open(
   holding: Holding,
-  house: { id: string; zone: string },
+  house: HouseOfDuty,
   shown: DutySource,
   name: string | undefined,
   nights: readonly NightSummary[],
   nowMs: number,
-): Promise<DutyData['opened']> {
+): Promise<OpenedNightData | null> {
   if (name === undefined || !isNight(name, house.zone)) return null;
-  const [summary] =
-    nights.filter((night) => night.night === name).length > 0
-      ? nights.filter((night) => night.night === name)
-      : await listNights(holding, house.id, { sources: [shown.slug], from: name, to: name, limit: 1 }, nowMs);
-  if (summary === undefined) return null;
-  const channels = await holding.db
-    .select({ id: channel.id, label: channel.label })
-    .from(channel)
-    .where(
-      and(
-        eq(channel.holdingId, holding.id),
-        eq(channel.sourceId, shown.id),
-        lt(channel.createdAt, new Date(summary.to)),
-      ),
-    )
-    .orderBy(asc(channel.number));
-  const labels = new Map(channels.map((row) => [row.id, row.label]));
-  const decisions = await listDecisions(holding, [...labels.keys()], summary.from, summary.to);
-  return {
-    summary,
-    decisions: decisions.map(({ channelId, at, state, claim }) => ({
-      channel: labels.get(channelId) ?? '',
-      at,
-      state,
-      claim,
-    })),
-  };
+  const wanted = { sources: [shown.slug], from: name, to: name, limit: 1 };
+  const summary =
+    nights.find(({ night }) => night === name) ?? (await listNights(holding, house.id, wanted, nowMs))[0];
+  return summary === undefined ? null : openNight(holding, house, shown, summary, nowMs);
 }
 
 function isNight(name: string, zone: string): boolean {

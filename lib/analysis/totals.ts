@@ -6,6 +6,8 @@ export interface NightTotals {
   hours: number;
   onSeconds: number;
   restSeconds: number;
+  heldSeconds: number;
+  handSeconds: number;
   /** Weighted by the nights' lengths. */
   dutyOfNight: number;
   dutyOfDraw: number | null;
@@ -44,6 +46,8 @@ export function totalOf(nights: readonly NightSummary[]): NightTotals {
     hours: sum((night) => night.hours),
     onSeconds,
     restSeconds,
+    heldSeconds: sum((night) => night.heldSeconds),
+    handSeconds: sum((night) => night.handSeconds),
     dutyOfNight: channelSeconds === 0 ? 0 : onSeconds / channelSeconds,
     dutyOfDraw: onSeconds + restSeconds === 0 ? null : onSeconds / (onSeconds + restSeconds),
     starts: sum((night) => night.starts),

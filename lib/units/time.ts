@@ -70,6 +70,11 @@ export function day(at: number, zone: string): string {
   return `${there.day} ${MONTHS[there.month - 1] ?? ''}`;
 }
 
+/** A night by its evening's date. @example nightLabel('2026-11-26') === '26 Nov' */
+export function nightLabel(night: string): string {
+  return day(Date.parse(`${night}T12:00:00Z`), 'UTC');
+}
+
 /** A clock time with as much of the date as makes it plain beside `now`. */
 export function moment(at: number, now: number, zone: string, preferences: Preferences): string {
   const time = clock(at, zone, preferences);

@@ -17,6 +17,8 @@ export interface DutyStanding {
   nights: readonly NightSummary[];
   totals: NightTotals;
   frostLimitC: number | null;
+  /** They were chosen among more, so that which they are must be said. */
+  isPart?: boolean;
 }
 
 /** @example nightDate('2026-11-26') === '26 Nov' */
@@ -53,14 +55,16 @@ export function dutySentence(standing: DutyStanding, preferences: Preferences): 
   );
 }
 
-function ranSentence({ nights, totals }: DutyStanding, name: string): Phrase[] {
+function ranSentence({ nights, totals, isPart }: DutyStanding, name: string): Phrase[] {
   const last = nights.at(-1);
   const span =
     nights.length === 1
       ? last?.complete === false
         ? 'This night so far'
         : `In the night of ${nightTitle(last?.night ?? '')}`
-      : `Over ${nights.length} nights`;
+      : isPart === true
+        ? `Over the ${nights.length} nights from ${nightDate(nights[0]?.night ?? '')} to ${nightDate(last?.night ?? '')}`
+        : `Over ${nights.length} nights`;
   if (totals.onSeconds === 0)
     return join(`${span} the ${name} `, { text: 'did not run', tone: 'strong' }, '.');
   const ran = join(

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
-import { readAddress } from '@/components/duty/address';
+import { readAddress } from '@/components/duty/read-address';
+import { readAgainst } from '@/components/duty/against';
 import { DutyView } from '@/components/duty/duty-view';
 import { inHolding } from '@/db/client';
 import { readDuty } from '@/db/queries/duty-page';
@@ -20,6 +21,7 @@ export default async function DutyPage({
   const house = await viewerHouse((await params).house);
   const address = readAddress(await searchParams);
   const now = (await appNow()).getTime();
-  const data = await inHolding(holdingId, (holding) => readDuty(holding, house, address, now));
+  const against = address.against === undefined ? null : readAgainst(address.against);
+  const data = await inHolding(holdingId, (holding) => readDuty(holding, house, address, against, now));
   return <DutyView house={house} address={address} data={data} preferences={await readPreferences(userId)} />;
 }

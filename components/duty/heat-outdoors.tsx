@@ -1,0 +1,25 @@
+'use client';
+import { lazy, Suspense } from 'react';
+import { Skeleton } from '@/components/ui/states';
+import { WhenSeen } from '@/components/ui/when-seen';
+import type { OutdoorsChartProps } from './heat-outdoors-chart';
+
+// the chart's library is larger than all of the page before it
+const Chart = lazy(() => import('./heat-outdoors-chart'));
+
+const place = <Skeleton className="h-52" />;
+
+/** The scatter of heat against the cold outdoors, fetched when somebody scrolls to it. */
+export function HeatOutdoors(props: OutdoorsChartProps) {
+  return (
+    <div role="img" aria-label={props.said} className="h-52">
+      <WhenSeen instead={place}>
+        {() => (
+          <Suspense fallback={place}>
+            <Chart {...props} />
+          </Suspense>
+        )}
+      </WhenSeen>
+    </div>
+  );
+}

@@ -1,0 +1,139 @@
+'use client';
+import { useRouter } from 'next/navigation';
+import { memo, startTransition, useCallback, useEffect, useState, type MouseEvent } from 'react';
+import { flushSync } from 'react-dom';
+import { classes } from '@/components/ui/classes';
+import type { NightLine } from './night-line';
+import { NightStrip, QUARTERS } from './night-strip';
+
+/** What the server draws: more than any screen shows at once. */
+const AT_ONCE = 60;
+/** So many more whenever the browser has nothing else to do: some 10 ms of a slow phone. */
+const AT_IDLE = 24;
+
+/** Open a night without losing the page; whoever wants it elsewhere gets a plain link. */
+function useOpening(): (event: MouseEvent<HTMLAnchorElement>) => void {
+  const router = useRouter();
+  return useCallback(
+    (event) => {
+      if (event.metaKey || event.ctrlKey || event.shiftKey || event.altKey || event.button !== 0) return;
+      event.preventDefault();
+      const href = event.currentTarget.getAttribute('href') ?? '';
+      startTransition(() => router.push(href));
+    },
+    [router],
+  );
+}
+
+/** @returns how to call it off */
+function whenIdle(work: () => void): () => void {
+  // Safari has no idle callback
+  if (typeof requestIdleCallback !== 'function') {
+    const timer = setTimeout(work, 50);
+    return () => clearTimeout(timer);
+  }
+  const handle = requestIdleCallback(work);
+  return () => cancelIdleCallback(handle);
+}
+
+/** How many rows stand by now. All of them stand on paper, and for a search in the page, as soon as there was time. */
+function useGrowing(all: number): number {
+  const [many, setMany] = useState(AT_ONCE);
+  useEffect(() => {
+    if (many >= all) return;
+    const grow = () => startTransition(() => setMany((had) => had + AT_IDLE));
+    const stop = whenIdle(grow);
+    const forPaper = () => flushSync(() => setMany(all));
+    addEventListener('beforeprint', forPaper);
+    return () => {
+      removeEventListener('beforeprint', forPaper);
+      stop();
+    };
+  }, [many, all]);
+  return Math.min(many, all);
+}
+
+/** The rows of the table of nights. @param to the address of an opened night, but for its name */
+export function NightRows({
+  lines,
+  to,
+  opened,
+  hasHeat,
+}: {
+  lines: NightLine[];
+  to: string;
+  opened: string | null;
+  hasHeat: boolean;
+}) {
+  const many = useGrowing(lines.length);
+  const onOpen = useOpening();
+  const left = lines.slice(many);
+  return (
+    <>
+      {lines.slice(0, many).map((line) => (
+        <NightRow
+          key={line.night}
+          line={line}
+          href={`${to}${line.night}#night`}
+          isOpen={line.night === opened}
+          hasHeat={hasHeat}
+          onOpen={onOpen}
+        />
+      ))}
+      {left.length === 0 ? null : (
+        <tr aria-hidden="true" style={{ height: `${left.length * 1.55}rem` }}>
+          <td colSpan={7} />
+        </tr>
+      )}
+    </>
+  );
+}
+
+const cell = 'whitespace-nowrap px-2 py-0 text-right font-mono text-[0.9rem]';
+const unknown = <span className="font-sans text-[0.8rem] text-soft">not known</span>;
+
+const NightRow = memo(function NightRow({
+  line,
+  href,
+  isOpen,
+  hasHeat,
+  onOpen,
+}: {
+  line: NightLine;
+  href: string;
+  isOpen: boolean;
+  hasHeat: boolean;
+  onOpen: (event: MouseEvent<HTMLAnchorElement>) => void;
+}) {
+  return (
+    <tr className={classes('border-b border-faint hover:bg-faint', isOpen && 'bg-faint')}>
+      <th scope="row" className="whitespace-nowrap px-2 py-0 text-left font-mono text-[0.9rem] font-normal">
+        <a
+          href={href}
+          onClick={onOpen}
+          aria-current={isOpen ? 'true' : undefined}
+          className="flex min-h-6 items-center underline decoration-line underline-offset-4 hover:decoration-ink aria-[current=true]:font-semibold"
+        >
+          {line.date}
+          {line.isThin ? <span aria-hidden="true">*</span> : null}
+          {line.note === null ? null : <span className="sr-only"> ({line.note})</span>}
+        </a>
+      </th>
+      <td className={classes('w-1/2 min-w-32 px-0 py-0.5', QUARTERS)}>
+        <span className="flex flex-col gap-0.5">
+          {line.strips.map((strip, place) => (
+            <NightStrip key={place} strip={strip} />
+          ))}
+        </span>
+      </td>
+      <td className={cell}>{line.ran}</td>
+      {hasHeat ? <td className={cell}>{line.heat ?? unknown}</td> : null}
+      <td className={classes(cell, 'max-sm:hidden')}>{line.starts}</td>
+      <td className={classes(cell, 'max-sm:hidden', line.isCold && 'font-semibold text-alarm')}>
+        {line.lowest ?? unknown}
+        {line.isCold ? <span className="sr-only"> under the frost limit</span> : null}
+      </td>
+      <td className={classes(cell, 'text-outdoors max-sm:hidden')}>{line.outdoors ?? unknown}</td>
+    </tr>
+  );
+});
