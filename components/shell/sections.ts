@@ -15,6 +15,7 @@ export const SECTIONS: readonly Section[] = [
   { key: 'heap-book', label: 'Heap book', of: 'house', onBar: true },
   { key: 'duty', label: 'Duty', of: 'house', onBar: true },
   { key: 'alarms', label: 'Alarms', of: 'house', onBar: true },
+  { key: 'houses', label: 'All houses', of: 'holding', onBar: false },
   { key: 'people', label: 'People', of: 'holding', onBar: false },
 ];
 

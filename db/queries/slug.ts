@@ -7,6 +7,7 @@ export const NO_HOUSE: readonly string[] = [
   'api',
   'field',
   'forgot-password',
+  'houses',
   'invitation',
   'live',
   'new-house',

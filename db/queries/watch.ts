@@ -109,8 +109,8 @@ async function controlOf(holding: Holding, realAt: number): Promise<WatchView['c
   };
 }
 
-/** The other houses of the holding, in one line each. */
-async function readCards(holding: Holding, houseId: string): Promise<WatchCard[]> {
+/** The houses of the holding in one line each, all or all but one. */
+export async function readCards(holding: Holding, butHouseId: string | null): Promise<WatchCard[]> {
   const rows = await holding.db
     .select({ house: houseTable, state: controlMemory.state, stateAt: controlMemory.stateAt })
     .from(houseTable)
@@ -119,7 +119,11 @@ async function readCards(holding: Holding, houseId: string): Promise<WatchCard[]
       and(eq(controlMemory.holdingId, houseTable.holdingId), eq(controlMemory.houseId, houseTable.id)),
     )
     .where(
-      and(eq(houseTable.holdingId, holding.id), isNull(houseTable.removedAt), ne(houseTable.id, houseId)),
+      and(
+        eq(houseTable.holdingId, holding.id),
+        isNull(houseTable.removedAt),
+        butHouseId === null ? undefined : ne(houseTable.id, butHouseId),
+      ),
     )
     .orderBy(asc(houseTable.id));
   const alarms = await holding.db

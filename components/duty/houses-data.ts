@@ -1,0 +1,17 @@
+import type { CoreTrend } from '@/lib/analysis/core';
+import type { HouseNight, NightSummary } from '@/lib/analysis/nights';
+import type { NightTotals } from '@/lib/analysis/totals';
+import type { WatchCard } from '@/lib/schema/watch-view';
+
+export interface SourceOfHouse {
+  slug: string;
+  name: string;
+  week: NightTotals | null;
+  missing: NightSummary['missing']['heat'];
+  core: { trend: CoreTrend | null; last: { value: number; at: number } } | null;
+}
+
+export interface HouseWeek extends WatchCard {
+  lastNight: Pick<HouseNight, 'night' | 'lowest' | 'coverageLow' | 'coverage'> | null;
+  sources: SourceOfHouse[];
+}
