@@ -1,5 +1,7 @@
 'use client';
 import Link from 'next/link';
+import { useEffect } from 'react';
+import { forgetBook } from '@/components/heap/book-facts';
 import { Button } from '@/components/ui/button';
 import { TextField } from '@/components/ui/field';
 import { DoorSheet } from './door-frame';
@@ -15,6 +17,8 @@ export function SignInForm({
   email: string;
   isPasswordNew: boolean;
 }) {
+  // whoever comes in next finds nothing of whoever was here before
+  useEffect(forgetBook, []);
   const { refusal, busy, onSubmit } = useDoorForm(
     '/auth/sign-in/email',
     (form) => ({ email: text(form, 'email').trim(), password: text(form, 'password') }),

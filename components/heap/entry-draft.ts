@@ -20,6 +20,8 @@ export interface EntryDraft {
   materials: MaterialDraft[];
   water: string;
   volume: string;
+  smell: HeapEntry['smell'];
+  squeeze: HeapEntry['squeeze'];
 }
 
 export type Judged =
@@ -38,6 +40,7 @@ export function draftOf(entry: HeapEntry | undefined, now: number, zone: string)
       materials: [emptyMaterial(0)],
       water: '',
       volume: '',
+      ...{ smell: null, squeeze: null },
     };
   const materials = entry.materials.map(({ material, kilograms, litres }, id): MaterialDraft => {
     const unit = kilograms === undefined ? 'L' : 'kg';
@@ -50,6 +53,7 @@ export function draftOf(entry: HeapEntry | undefined, now: number, zone: string)
     materials: [...materials, emptyMaterial(materials.length)],
     water: entry.litresOfWater === null ? '' : String(entry.litresOfWater),
     volume: entry.volume === null ? '' : String(entry.volume),
+    ...{ smell: entry.smell, squeeze: entry.squeeze },
   };
 }
 
@@ -87,11 +91,16 @@ export function judge(
     materials,
     ...(litresOfWater === null ? {} : { litresOfWater }),
     ...(volume === null ? {} : { volume }),
+    ...(draft.smell === null ? {} : { smell: draft.smell }),
+    ...(draft.squeeze === null ? {} : { squeeze: draft.squeeze }),
   });
   for (const issue of parsed.error?.issues ?? []) fields[issue.path.join('.')] ??= issue.message;
   if (!parsed.success || Object.keys(fields).length > 0) return { ok: false, fields };
   const { source, ...rest } = parsed.data;
-  return { ok: true, body: target.isAmended ? { ...rest, litresOfWater, volume } : { source, ...rest } };
+  const { smell, squeeze } = draft;
+  // what was taken out is sent as null, or it would stay
+  const cleared = { litresOfWater, volume, smell, squeeze };
+  return { ok: true, body: target.isAmended ? { ...rest, ...cleared } : { source, ...rest } };
 }
 
 export function filled(draft: EntryDraft): MaterialDraft[] {

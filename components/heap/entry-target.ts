@@ -6,6 +6,8 @@ export interface EntryTarget {
   heap: string;
   zone: string;
   kind: HeapEntry['kind'];
+  /** Of the outbox: holding and person. */
+  owner: string;
   /** The one that is amended; left out, a new one is written. */
   entry?: HeapEntry;
 }

@@ -1,49 +1,65 @@
 import { ButtonLink } from '@/components/ui/button';
-import { Figures, Panel } from '@/components/ui/panel';
+import { Panel } from '@/components/ui/panel';
 import { Sentence } from '@/components/ui/sentence';
 import { Empty } from '@/components/ui/states';
 import { TabLinks } from '@/components/ui/tabs';
-import type { CoreTrend } from '@/lib/analysis/core';
-import type { HeapEntry } from '@/lib/schema/heap-view';
-import { temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { HEAP_KINDS, HOT_CORE_C, heapSentence, longDay } from '@/lib/wording/heap';
+import { heapSentence } from '@/lib/wording/heap';
 import { Book } from './book';
 import { CoreCurve } from './core-curve';
-import { EntryButton } from './entry-button';
+import { FindingList } from './finding-list';
+import { HeapFigures } from './heap-figures';
+import { HeapActions } from './heap-actions';
+import { HeatPanel } from './heat-panel';
+import type { HeapOnPage, HeapViewData, HeapViewHouse } from './heap-view-data';
+import { JobsPanel } from './jobs-panel';
+import { MixPanel } from './mix-panel';
+import { ProbeRounds } from './probe-rounds';
 
-export interface HeapViewData {
-  heaps: { slug: string; name: string }[];
-  heap: { slug: string; name: string } | null;
-  coreFloor: number | null;
-  hasCorePoint: boolean;
-  core: { value: number; at: number } | null;
-  trend: CoreTrend | null;
-  entries: HeapEntry[];
-  curve: { at: number; value: number }[];
-}
-
-export function HeapView({
-  house,
-  data,
-  allowed,
-  preferences,
-  now,
-}: {
-  house: { slug: string; name: string; zone: string };
+export interface HeapViewProps {
+  house: HeapViewHouse;
   data: HeapViewData;
   allowed: readonly string[];
+  /** Of the outbox, and the reader's name. */
+  reader: { owner: string; person: string };
   preferences: Preferences;
   now: number;
-}) {
-  const { heap, entries } = data;
-  if (heap === null) return <NoHeap house={house} />;
+  /** YYYY-MM-DD in the house's zone. */
+  today: string;
+}
+
+export function HeapView({ data, ...rest }: HeapViewProps) {
+  if (data.heap === null) return <NoHeap house={rest.house} />;
+  return <OneHeap data={data} heap={data.heap} {...rest} />;
+}
+
+function OneHeap({
+  house,
+  data,
+  heap,
+  allowed,
+  reader,
+  preferences,
+  now,
+  today,
+}: HeapViewProps & { heap: HeapOnPage }) {
   const { slug, zone } = house;
   const mayWrite = allowed.includes('heap.write');
-  const standing = { ...data, name: heap.name, zone, now };
+  const { entries, mix } = heap;
+  const target = { house: slug, heap: heap.slug, zone };
+  const start = {
+    parts: (mix?.parts ?? []).flatMap(({ name, massKg }) =>
+      massKg === null ? [] : [{ material: name, kilograms: massKg }],
+    ),
+    waterL: mix?.waterL ?? 0,
+    own: heap.materials.map(({ name, density, moisture, carbon, nitrogen }) => ({
+      ...{ name, density, moisture, carbon, nitrogen },
+    })),
+    mayWrite,
+  };
   return (
     <div className="flex flex-col gap-5">
-      <Sentence phrases={heapSentence(standing, preferences)} before="Heap book" />
+      <Sentence phrases={heapSentence({ ...heap, zone, now }, preferences)} before="Heap book" />
       {data.heaps.length < 2 ? null : (
         <TabLinks
           label="Heaps"
@@ -54,35 +70,20 @@ export function HeapView({
           }))}
         />
       )}
-      {mayWrite ? (
-        <div className="not-on-paper flex flex-wrap gap-2">
-          {HEAP_KINDS.map(({ kind, label }, place) => (
-            <EntryButton
-              key={kind}
-              house={slug}
-              heap={heap.slug}
-              zone={zone}
-              kind={kind}
-              look={place === 0 ? 'primary' : 'plain'}
-            >
-              {label}
-            </EntryButton>
-          ))}
-        </div>
-      ) : (
-        <p className="text-soft">Growers and owners write in this book; you can read it.</p>
-      )}
+      <HeapActions {...{ house, data, heap, mayWrite, reader, preferences }} />
+      <FindingList {...target} findings={heap.findings} mayWrite={mayWrite} preferences={preferences} />
       <div className="grid gap-5 lg:grid-cols-[minmax(0,1.35fr)_minmax(0,1fr)] lg:items-start">
         <div className="flex min-w-0 flex-col gap-5">
+          <ProbeRounds rounds={heap.rounds} zone={zone} preferences={preferences} />
           <Panel title="Core, and what was done">
-            {data.hasCorePoint ? (
+            {heap.hasCorePoint ? (
               <CoreCurve
-                curve={data.curve}
+                curve={heap.curve}
                 marks={entries
                   .filter((entry) => entry.kind !== 'note')
                   .map((entry) => ({ at: Date.parse(entry.at), kind: entry.kind }))
                   .reverse()}
-                floor={data.coreFloor}
+                floor={heap.coreFloor}
                 zone={zone}
                 preferences={preferences}
               />
@@ -92,61 +93,28 @@ export function HeapView({
               </p>
             )}
           </Panel>
-          <CoreFigures data={data} zone={zone} preferences={preferences} />
+          <HeapFigures heap={heap} zone={zone} preferences={preferences} />
+          <JobsPanel
+            {...{ house: slug, heap: heap.slug, today, jobs: heap.jobs, links: data.links, mayWrite }}
+            latitude={house.latitude}
+          />
         </div>
-        <Panel title="Book">
-          {entries.length === 0 ? (
-            <p className="text-soft">
-              Nothing is written yet.
-              {mayWrite ? ' Press Built to begin: of what, how much, how large.' : null}
-            </p>
-          ) : (
-            <Book
-              house={slug}
-              heap={heap.slug}
-              zone={zone}
-              entries={entries}
-              mayWrite={mayWrite}
-              preferences={preferences}
-            />
-          )}
-        </Panel>
+        <div className="flex min-w-0 flex-col gap-5">
+          <MixPanel mix={mix} start={start} />
+          <HeatPanel heat={heap.heat} zone={zone} preferences={preferences} />
+          <Panel title="Book">
+            {entries.length === 0 ? (
+              <p className="text-soft">
+                Nothing is written yet.
+                {mayWrite ? ' Press Built to begin: of what, how much, how large.' : null}
+              </p>
+            ) : (
+              <Book {...target} owner={reader.owner} {...{ entries, mayWrite, preferences }} />
+            )}
+          </Panel>
+        </div>
       </div>
     </div>
-  );
-}
-
-function CoreFigures({
-  data: { curve, coreFloor, entries },
-  zone,
-  preferences,
-}: {
-  data: HeapViewData;
-  zone: string;
-  preferences: Preferences;
-}) {
-  const first = curve[0];
-  if (first === undefined) return null;
-  const hottest = curve.reduce((top, step) => (step.value > top.value ? step : top), first);
-  const count = (kind: string) => entries.filter((entry) => entry.kind === kind).length;
-  return (
-    <Panel title="The heap so far">
-      <Figures
-        rows={[
-          {
-            name: 'Hottest hour of the core',
-            value: `${temperature(hottest.value, preferences)}, ${longDay(hottest.at, zone)}`,
-            ...(hottest.value >= HOT_CORE_C ? { note: 'too hot: see above' } : {}),
-          },
-          ...(coreFloor === null
-            ? []
-            : [{ name: 'Not drawn on under', value: temperature(coreFloor, preferences) }]),
-          { name: 'Fed', value: `${count('fed')}×` },
-          { name: 'Watered', value: `${count('watered')}×` },
-          { name: 'Turned', value: `${count('turned')}×` },
-        ]}
-      />
-    </Panel>
   );
 }
 

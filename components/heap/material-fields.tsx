@@ -2,29 +2,20 @@
 import { useId } from 'react';
 import { Button } from '@/components/ui/button';
 import { NumberField, Select, TextField } from '@/components/ui/field';
+import { COMMON_MATERIALS } from '@/lib/analysis/common-materials';
 import { emptyMaterial, type MaterialDraft } from './entry-draft';
-
-/** Offered while typing; any other name is as good. */
-const USUAL_MATERIALS = [
-  'Horse bedding',
-  'Dry leaves',
-  'Straw',
-  'Wood chip',
-  'Grass, greens',
-  'Kitchen scraps',
-  'Coffee grounds',
-  'Manure',
-  'Finished compost',
-];
 
 export function MaterialFields({
   rows,
   errors,
+  own = [],
   onChange,
 }: {
   rows: MaterialDraft[];
   /** By path of the body, whose rows are those that were filled in. */
   errors: Record<string, string>;
+  /** Materials of the holding's own, offered first. */
+  own?: readonly { name: string }[];
   onChange: (rows: MaterialDraft[]) => void;
 }) {
   const list = useId();
@@ -35,7 +26,8 @@ export function MaterialFields({
     <fieldset className="flex flex-col gap-2">
       <legend className="pb-1 font-semibold">Materials</legend>
       <datalist id={list}>
-        {USUAL_MATERIALS.map((name) => (
+        {/* offered while typing; any other name is as good */}
+        {[...own, ...COMMON_MATERIALS].map(({ name }) => (
           <option key={name} value={name} />
         ))}
       </datalist>

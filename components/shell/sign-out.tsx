@@ -1,6 +1,7 @@
 'use client';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { forgetBook } from '@/components/heap/book-facts';
 
 /** Leaves by a whole page load, so that nothing of the holding stays in the browser's memory. */
 export function SignOut() {
@@ -11,8 +12,9 @@ export function SignOut() {
       headers: { 'content-type': 'application/json' },
       body: '{}',
     }).catch(() => null);
-    if (response?.ok === true) window.location.assign('/sign-in');
-    else setFailed(true);
+    if (response?.ok !== true) return setFailed(true);
+    forgetBook();
+    window.location.assign('/sign-in');
   }
   return (
     <>

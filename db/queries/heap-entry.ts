@@ -6,17 +6,19 @@ import type { Holding } from '@/db/client';
 import { heapEntry } from '@/db/schema/heap';
 import { source } from '@/db/schema/yard';
 import type { HeapEntryCreate } from '@/lib/schema/heap';
-import { HeapEntry } from '@/lib/schema/heap-view';
+import { HeapEntry, type Photograph } from '@/lib/schema/heap-view';
+import { photographsOf } from './attachment';
 import { cut, type Listed, type Page } from './page';
 import { houseNames, isId } from './reference';
+import { Refusal } from './refusal';
 
 type Given = z.infer<typeof HeapEntryCreate>;
 type Row = { entry: typeof heapEntry.$inferSelect; slug: string };
 
-function toEntry({ entry, slug }: Row): HeapEntry {
-  const { id, revision, kind, text, materials, litresOfWater, by, amendedBy } = entry;
+function toEntry({ entry, slug }: Row, photographs: Photograph[]): HeapEntry {
+  const { id, revision, kind, text, materials, litresOfWater, smell, squeeze, by, amendedBy } = entry;
   return HeapEntry.parse({
-    ...{ id, revision, kind, text, materials, litresOfWater, by, amendedBy },
+    ...{ id, revision, kind, text, materials, litresOfWater, smell, squeeze, photographs, by, amendedBy },
     source: slug,
     at: entry.at.toISOString(),
     volume: entry.volumeM3,
@@ -56,7 +58,14 @@ export async function listHeapEntries(
   const ofHeap = heap === undefined ? undefined : isId(heap) ? eq(source.id, heap) : eq(source.slug, heap);
   const rows = await select(holding, houseId, and(behind, ofHeap), page.limit + 1);
   const listed = cut(rows, page.limit, ({ entry }) => ({ id: entry.id, at: entry.at.getTime() }));
-  return { items: listed.items.map(toEntry), next: listed.next };
+  const photographs = await photographsOf(
+    holding,
+    listed.items.map(({ entry }) => entry.id),
+  );
+  return {
+    items: listed.items.map((row) => toEntry(row, photographs.get(row.entry.id) ?? [])),
+    next: listed.next,
+  };
 }
 
 export async function findHeapEntry(
@@ -66,10 +75,11 @@ export async function findHeapEntry(
 ): Promise<HeapEntry | null> {
   if (!isId(id)) return null;
   const row = (await select(holding, houseId, eq(heapEntry.id, id), 1))[0];
-  return row === undefined ? null : toEntry(row);
+  if (row === undefined) return null;
+  return toEntry(row, (await photographsOf(holding, [row.entry.id])).get(row.entry.id) ?? []);
 }
 
-function columns(given: Omit<Given, 'source'>) {
+function columns(given: Omit<Given, 'source' | 'id'>) {
   return {
     kind: given.kind,
     text: given.text,
@@ -80,6 +90,8 @@ function columns(given: Omit<Given, 'source'>) {
     })),
     litresOfWater: given.litresOfWater ?? null,
     volumeM3: given.volume ?? null,
+    smell: given.smell ?? null,
+    squeeze: given.squeeze ?? null,
   };
 }
 
@@ -88,20 +100,31 @@ interface Act {
   now: Date;
 }
 
+/**
+ * Writes an entry; one that its sender gave an id is written once, however often it is sent.
+ * @returns the entry, and whether it was there before
+ * @throws Refusal where the id is that of an entry of another house
+ */
 export async function createHeapEntry(
   holding: Holding,
   houseId: string,
   given: Given,
   act: Act,
-): Promise<HeapEntry> {
+): Promise<{ entry: HeapEntry; isRepeat: boolean }> {
   const sourceId = (await houseNames(holding, houseId)).sources.find(given.source, 'source').id;
-  const id = uuid();
-  await holding.db.insert(heapEntry).values({
-    ...columns(given),
-    ...{ id, sourceId, holdingId: holding.id, by: act.by, enteredAt: act.now },
-    at: given.at === undefined ? act.now : new Date(given.at),
-  });
-  return again(holding, houseId, id);
+  const id = given.id ?? uuid();
+  const written = await holding.db
+    .insert(heapEntry)
+    .values({
+      ...columns(given),
+      ...{ id, sourceId, holdingId: holding.id, by: act.by, enteredAt: act.now },
+      at: given.at === undefined ? act.now : new Date(given.at),
+    })
+    .onConflictDoNothing()
+    .returning({ id: heapEntry.id });
+  const entry = await findHeapEntry(holding, houseId, id);
+  if (entry === null) throw new Refusal('id', 'This id was used for something else; make a new one.');
+  return { entry, isRepeat: written.length === 0 };
 }
 
 /** Who amended it and when stays beside the entry. */
@@ -109,7 +132,7 @@ export async function amendHeapEntry(
   holding: Holding,
   houseId: string,
   id: string,
-  given: Omit<Given, 'source'>,
+  given: Omit<Given, 'source' | 'id'>,
   act: Act,
 ): Promise<HeapEntry> {
   await holding.db

@@ -1,7 +1,7 @@
 /** What is known of a heap, and what a finding about it is made of. */
 import type { CoreTrend, Dawn } from './core';
 import type { HeapMix } from './material-book';
-import type { WeekOfRests } from './slower-recovery';
+import type { RecoveryHistory } from './slower-recovery';
 
 export const SMELLS = ['earthy', 'ammonia', 'rotten-egg', 'sour'] as const;
 export type Smell = (typeof SMELLS)[number];
@@ -23,7 +23,7 @@ export interface HeapFacts {
   trend: CoreTrend | null;
   /** One a day, oldest first. */
   dawns: readonly Dawn[];
-  weeks: readonly WeekOfRests[];
+  recovery: RecoveryHistory | null;
   mix: HeapMix | null;
   /** Newest first. */
   entries: readonly BookEntry[];

@@ -87,7 +87,7 @@ function coreFalls(facts: HeapFacts): Finding | null {
 }
 
 function recoverySlows(facts: HeapFacts): Finding | null {
-  const slower = recoverySlower(facts.weeks);
+  const slower = facts.recovery === null ? null : recoverySlower(facts.recovery);
   if (slower === null) return null;
   const worked = lastWork(facts, ['built', 'turned']);
   return {

@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { finite, Instant, Text } from './common';
+import { SMELLS, SQUEEZES } from '@/lib/analysis/heap-facts';
+import { finite, Instant, Text, Uuid } from './common';
 
 export const HEAP_ENTRY_KINDS = ['built', 'fed', 'watered', 'turned', 'covered', 'note'] as const;
 
@@ -16,8 +17,13 @@ const fields = {
   materials: z.array(HeapMaterial).max(20),
   litresOfWater: finite(0, 100_000, 'L'),
   volume: finite(0, 10_000, 'm³'),
+  /** What nose and hand found. */
+  smell: z.enum(SMELLS),
+  squeeze: z.enum(SQUEEZES),
 };
 export const HeapEntryCreate = z.strictObject({
+  /** Made by whoever sends it: sent twice under one id, it is written once. */
+  id: Uuid.optional(),
   /** Slug or id of the source. */
   source: z.string().min(1, 'Choose the heap.').max(140),
   kind: fields.kind,
@@ -26,6 +32,8 @@ export const HeapEntryCreate = z.strictObject({
   materials: fields.materials.default([]),
   litresOfWater: fields.litresOfWater.optional(),
   volume: fields.volume.optional(),
+  smell: fields.smell.optional(),
+  squeeze: fields.squeeze.optional(),
 });
 // Made of the bare fields: a default inside would be filled in, and wipe what the change does not speak of.
 export const HeapEntryAmend = z
@@ -33,5 +41,7 @@ export const HeapEntryAmend = z
     ...fields,
     litresOfWater: fields.litresOfWater.nullable(),
     volume: fields.volume.nullable(),
+    smell: fields.smell.nullable(),
+    squeeze: fields.squeeze.nullable(),
   })
   .partial();

@@ -11,7 +11,7 @@ import { check } from './check';
 import { Problem, problemResponse } from './errors';
 import { paramsOf, type Operation, type ParamsOf } from './operation';
 import { may } from './permissions';
-import { parseJson, readText } from './request-body';
+import { LARGEST_BODY, parseJson, readBytes } from './request-body';
 import { seal, unseal } from './seal';
 import { FIND, isThingName, type Things } from './things';
 
@@ -22,6 +22,8 @@ export interface Asking<T extends Operation> {
   things: Pick<Things, ParamsOf<T['path']> & keyof Things>;
   body: T['body'] extends z.ZodType ? z.output<T['body']> : undefined;
   query: T['query'] extends z.ZodObject ? z.output<T['query']> : undefined;
+  /** As they came, for a route that takes bytes; empty for any other. */
+  bytes: Buffer;
   /** App time. */
   now: Date;
 }
@@ -31,9 +33,13 @@ export interface Answer {
   body?: unknown;
   /** An answer that is not JSON. */
   file?: { type: string; name: string; text: string };
+  /** An answer to be shown where it stands, such as a picture. */
+  inline?: { type: string; bytes: Uint8Array<ArrayBuffer> };
   headers?: Record<string, string>;
   /** What the audit row is about, where the path and the body do not say it. */
   subject?: string;
+  /** The change had been made before under the same id, and was not made again. */
+  isRepeat?: boolean;
   /** Runs once the change is committed, before the answer goes out. */
   after?: () => Promise<void>;
 }
@@ -57,29 +63,30 @@ export function serve<const T extends Operation>(
       // Next gives a route without a name in its path no params at all
       const params = ((await context.params) as Record<string, string> | undefined) ?? {};
       const isChange = request.method !== 'GET';
-      const text = isChange ? await readText(request) : '';
+      const bytes = isChange ? await readBytes(request, operation.takes?.mostBytes ?? LARGEST_BODY) : NOTHING;
+      const text = operation.takes === undefined ? bytes.toString('utf8') : '';
       const now = await appNow();
       const { response, after } = await inHolding(who.holdingId, async (holding) => {
         // Changes of one holding go one after another: slugs, rings of interlocks and the last owner stay true.
         if (isChange) await lockHolding(holding);
-        const asked = askedOf(operation, request, who, text);
+        const asked = askedOf(operation, request, who, bytes);
         const kept = asked === null ? null : await takeKey(holding, asked);
         if (asked !== null && kept !== null)
           return { response: repeat(operation, asked, kept, who), after: null };
         const things = await findThings(holding, operation, params);
         if (operation.action !== null && !may(who.role, operation.action)) throw new Problem('not-allowed');
-        const asking = { holding, caller: who, things, now, ...parse(operation, request, text) };
+        const asking = { holding, caller: who, things, now, bytes, ...parse(operation, request, text) };
         refuseStale(request, things);
         // The shape that the types above promise is what findThings and parse have just made.
         const answer = await handle(asking as unknown as Asking<T>);
-        if (isChange && operation.unrecorded !== true) {
+        if (isChange && operation.unrecorded !== true && answer.isRepeat !== true) {
           await addAudit(holding, {
             at: now,
             by: who.by,
             ...auditOf(operation, params, asking.body, answer),
           });
         }
-        const status = answer.status ?? (answer.body === undefined && answer.file === undefined ? 204 : 200);
+        const status = answer.status ?? (isEmpty(answer) ? 204 : 200);
         if (asked !== null) await keepAnswer(holding, asked, status, { sealed: seal(answer.body ?? null) });
         return { response: respond(status, answer), after: answer.after ?? null };
       });
@@ -146,7 +153,7 @@ function etag(revision: number): string {
   return `"${revision}"`;
 }
 
-function askedOf(operation: Operation, request: Request, caller: Caller, text: string): Asked | null {
+function askedOf(operation: Operation, request: Request, caller: Caller, bytes: Buffer): Asked | null {
   const key = request.headers.get('idempotency-key');
   if (key === null || operation.method === 'GET') return null;
   if (!/^[\x21-\x7e]{1,200}$/.test(key)) {
@@ -154,8 +161,8 @@ function askedOf(operation: Operation, request: Request, caller: Caller, text: s
       errors: [{ path: 'Idempotency-Key', message: 'At most 200 plain characters, without spaces.' }],
     });
   }
-  const asked = `${request.method} ${new URL(request.url).pathname}\n${text}`;
-  return { key, caller: caller.id, requestHash: createHash('sha256').update(asked).digest('hex') };
+  const asked = createHash('sha256').update(`${request.method} ${new URL(request.url).pathname}\n`);
+  return { key, caller: caller.id, requestHash: asked.update(bytes).digest('hex') };
 }
 
 function repeat(
@@ -177,9 +184,19 @@ function repeat(
   return respond(kept.status, opened === null ? {} : { body: opened });
 }
 
+const NOTHING = Buffer.alloc(0);
+
+const isEmpty = ({ body, file, inline }: Answer) =>
+  body === undefined && file === undefined && inline === undefined;
+
 function respond(status: number, answer: Answer): Response {
   const headers = new Headers({ 'cache-control': 'no-store', ...answer.headers });
-  const { body, file } = answer;
+  const { body, file, inline } = answer;
+  if (inline !== undefined) {
+    headers.set('content-type', inline.type);
+    headers.set('content-disposition', 'inline');
+    return new Response(inline.bytes, { status, headers });
+  }
   if (file !== undefined) {
     headers.set('content-type', `${file.type}; charset=utf-8`);
     headers.set('content-disposition', `attachment; filename="${file.name}"`);

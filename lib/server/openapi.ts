@@ -76,6 +76,7 @@ function described(operation: Operation): Json {
       ...queryParameters(operation),
       ...headers(operation),
     ],
+    ...(operation.takes === undefined ? {} : { requestBody: bytesOf(operation.takes.types) }),
     ...(body === undefined
       ? {}
       : {
@@ -86,6 +87,10 @@ function described(operation: Operation): Json {
         }),
     responses: { ...answers(operation), ...problems(operation) },
   };
+}
+
+function bytesOf(types: readonly string[]): Json {
+  return { required: true, content: Object.fromEntries(types.map((type) => [type, {}])) };
 }
 
 function pathParameter(name: string): Json {
@@ -129,7 +134,10 @@ function answers(operation: Operation): Json {
     };
     return [status, { description, content }];
   });
-  return Object.fromEntries(entries);
+  const { onlyAnswers } = operation;
+  if (onlyAnswers === undefined) return Object.fromEntries(entries);
+  const whole: [string, Json] = ['200', { description: 'Done', content: { [onlyAnswers]: {} } }];
+  return Object.fromEntries([...entries, whole]);
 }
 
 const STATUS: Record<number, string> = {
@@ -145,8 +153,10 @@ function problems(operation: Operation): Json {
     ...(isOpen ? [] : [401, 403]),
     ...(paramsOf(operation.path).length > 0 ? [404] : []),
     ...(operation.method === 'GET' || isOpen ? [] : [409, 412]),
-    ...(operation.body === undefined && operation.query === undefined ? [] : [422]),
-    ...(operation.body === undefined ? [] : [413]),
+    ...(operation.body === undefined && operation.query === undefined && operation.takes === undefined
+      ? []
+      : [422]),
+    ...(operation.body === undefined && operation.takes === undefined ? [] : [413]),
   ];
   const content = { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } };
   return Object.fromEntries(codes.map((code) => [code, { description: PROBLEMS[code] ?? '', content }]));

@@ -18,10 +18,14 @@ export interface Operation {
   summary: string;
   query?: z.ZodObject;
   body?: z.ZodType;
+  /** It takes bytes instead of a body in JSON: of these media types, and at most so many. */
+  takes?: { types: readonly string[]; mostBytes: number };
   /** What it answers, by status; null for an answer without a body. */
   answers: Partial<Record<number, z.ZodType | null>>;
   /** Other than JSON, by media type. */
   alsoAnswers?: readonly string[];
+  /** It answers no JSON but this media type. */
+  onlyAnswers?: string;
   /** The answer carries a token that is shown once. */
   secret?: boolean;
   /** A change that leaves no row in the audit log, because it changes nothing: a check of a draft. */

@@ -2,18 +2,30 @@ import { Problem } from './errors';
 
 export const LARGEST_BODY = 1024 * 1024;
 
-/** The body as text. @throws Problem `too-large` as soon as it is, without reading on */
-export async function readText(request: Request): Promise<string> {
-  if (Number(request.headers.get('content-length') ?? 0) > LARGEST_BODY) throw new Problem('too-large');
-  if (request.body === null) return '';
+/** The body as bytes. @throws Problem `too-large` as soon as it is, without reading on */
+export async function readBytes(request: Request, most: number): Promise<Buffer> {
+  if (Number(request.headers.get('content-length') ?? 0) > most) throw tooLarge(most);
+  if (request.body === null) return Buffer.alloc(0);
   const parts: Uint8Array[] = [];
   let size = 0;
   for await (const part of request.body) {
     size += part.byteLength;
-    if (size > LARGEST_BODY) throw new Problem('too-large');
+    if (size > most) throw tooLarge(most);
     parts.push(part);
   }
-  return Buffer.concat(parts).toString('utf8');
+  return Buffer.concat(parts);
+}
+
+function tooLarge(most: number): Problem {
+  return new Problem(
+    'too-large',
+    most === LARGEST_BODY ? {} : { detail: `This is over ${Math.round(most / 1024 ** 2)} MiB.` },
+  );
+}
+
+/** The body as text. @throws Problem `too-large` as soon as it is */
+export async function readText(request: Request): Promise<string> {
+  return (await readBytes(request, LARGEST_BODY)).toString('utf8');
 }
 
 /** @throws Problem `not-valid` at path '' for what is no JSON, and for text that no database keeps */

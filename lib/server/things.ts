@@ -1,20 +1,30 @@
 import 'server-only';
 import type { Holding } from '@/db/client';
 import { findAlarm, type Alarm } from '@/db/queries/alarm';
+import { findPhotograph } from '@/db/queries/attachment';
+import { findCalendarLink, type OwnLink } from '@/db/queries/calendar-link';
 import { findChannel } from '@/db/queries/channel';
+import { findDismissal } from '@/db/queries/finding-dismissal';
 import { findHeapEntry } from '@/db/queries/heap-entry';
+import { findHeapJob } from '@/db/queries/heap-job';
 import { findHouse } from '@/db/queries/house';
 import { findInterlock } from '@/db/queries/interlock';
 import { findKey, type KeyRow } from '@/db/queries/key';
 import { findLockout } from '@/db/queries/lockout';
 import { findLoop } from '@/db/queries/loop';
+import { findOwnMaterial } from '@/db/queries/material';
 import { findNode } from '@/db/queries/node';
 import { findMember, listInvitations, type InvitationRow, type MemberRow } from '@/db/queries/people';
 import { findPoint } from '@/db/queries/point';
+import { findProbeSet } from '@/db/queries/probe-set';
 import { isId } from '@/db/queries/reference';
 import { findRule, type FoundRule } from '@/db/queries/rule';
 import { findSource } from '@/db/queries/source';
-import type { HeapEntry } from '@/lib/schema/heap-view';
+import type { Dismissal } from '@/lib/schema/heap-finding';
+import type { HeapJob } from '@/lib/schema/heap-job';
+import type { HeapEntry, Photograph } from '@/lib/schema/heap-view';
+import type { Material } from '@/lib/schema/material';
+import type { ProbeSet } from '@/lib/schema/probe-set';
 import type {
   Channel,
   FieldNode,
@@ -37,6 +47,12 @@ export interface Things {
   interlock: Interlock;
   lockout: Lockout;
   entry: HeapEntry;
+  photograph: Photograph;
+  round: ProbeSet;
+  job: HeapJob;
+  dismissal: Dismissal;
+  material: Material;
+  calendar: OwnLink;
   rule: FoundRule;
   alarm: Alarm;
   member: MemberRow;
@@ -58,6 +74,12 @@ export const FIND: { [K in ThingName]: Find<Things[K]> } = {
   interlock: (holding, ref, house) => findInterlock(holding, house, ref),
   lockout: (holding, ref, house) => findLockout(holding, house, ref),
   entry: (holding, ref, house) => findHeapEntry(holding, house, ref),
+  photograph: (holding, ref, house) => findPhotograph(holding, house, ref),
+  round: (holding, ref, house) => findProbeSet(holding, house, ref),
+  job: (holding, ref, house) => findHeapJob(holding, house, ref),
+  dismissal: (holding, ref, house) => findDismissal(holding, house, ref),
+  material: findOwnMaterial,
+  calendar: findCalendarLink,
   rule: findRule,
   alarm: async (holding, ref) => (isId(ref) ? findAlarm(holding, ref) : null),
   member: findMember,

@@ -166,7 +166,7 @@ export function whatWent(entry: Pick<HeapEntry, 'materials' | 'litresOfWater' | 
 }
 
 /** What to mind while doing it, shown where it is entered. */
-export function heapCautions(kind: HeapKind): string[] {
+export function heapCautions(kind: HeapKind | 'probed'): string[] {
   const gases =
     'Gases gather in an opened heap and over its pit: carbon dioxide, carbon monoxide, ammonia. Work upwind, never with your head in the pit, and with a certified carbon monoxide alarm in the house.';
   const hot =
@@ -187,6 +187,10 @@ export function heapCautions(kind: HeapKind): string[] {
       return [gases, hygiene];
     case 'watered':
       return [hot];
+    case 'probed':
+      return [
+        'The probe comes out hot: wear gloves. Steam that rises along it carries gases; keep your face away from the hole, and close it behind you.',
+      ];
     default:
       return [];
   }

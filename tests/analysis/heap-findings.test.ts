@@ -9,7 +9,7 @@ import { selfHeating } from '../checks/heap-book';
 const DAY = 86_400_000;
 const now = Date.parse('2026-12-01T09:00:00Z');
 const nothing: HeapFacts = {
-  ...{ now, core: null, trend: null, dawns: [], weeks: [], mix: null, entries: [], probes: null },
+  ...{ now, core: null, trend: null, dawns: [], recovery: null, mix: null, entries: [], probes: null },
 };
 const entry = (id: string, daysAgo: number, kind: string, more: Partial<BookEntry> = {}): BookEntry => ({
   ...{ id, at: now - daysAgo * DAY, kind, smell: null, squeeze: null },
@@ -123,17 +123,21 @@ it('a round with 25 degrees between its places is uneven, until the heap is turn
 });
 
 describe('coming back more slowly', () => {
-  const weeks = (...tau: number[]) => tau.map((tauS, i) => ({ at: now + i * 7 * DAY, tauS, tauSdS: 120 }));
+  const history = (low: number, value: number, ...tau: number[]) => ({
+    weeks: tau.map((tauS, i) => ({ at: now + i * 7 * DAY, tauS, tauSdS: 120 })),
+    ratioPerWeek: { value, low, high: 2 * value - low },
+  });
 
-  it('is found where the weeks rise beyond their scatter', () => {
-    expect(recoverySlower(weeks(1700, 1900, 2150, 2400))?.body).toMatchObject({ weeks: 4 });
-    expect(kinds({ weeks: weeks(1700, 1900, 2150, 2400) })).toEqual(['recovery-slower']);
+  it('is found where the interval of the weeks’ trend leaves out no change', () => {
+    const slower = history(1.03, 1.08, 1700, 1850, 1980, 2150, 2310);
+    expect(recoverySlower(slower)?.body).toMatchObject({ fromS: 1700, toS: 2310, weeks: 5 });
+    expect(kinds({ recovery: slower })).toEqual(['recovery-slower']);
   });
 
   it.each([
-    ['too few weeks', weeks(1700, 2400)],
-    ['weeks that only scatter', weeks(1700, 2300, 1750, 2250, 1720)],
-    ['a rise that nobody would feel', weeks(1700, 1720, 1740, 1760, 1780)],
-    ['weeks that fall', weeks(2400, 2100, 1800)],
+    ['an interval that holds no change', history(0.99, 1.08, 1700, 1850, 1980, 2150, 2310)],
+    ['a rise that nobody would feel', history(1.005, 1.01, 1700, 1720, 1740, 1760, 1780)],
+    ['too few weeks for a trend', { ...history(1, 1, 1700, 2400), ratioPerWeek: null }],
+    ['no weeks', history(1.1, 1.2)],
   ])('is not found in %s', (_, of) => expect(recoverySlower(of)).toBeNull());
 });

@@ -47,6 +47,11 @@ function match(path: string): { load: Loader; params: Record<string, string> } {
   throw new Error(`no route file answers ${path}`);
 }
 
+function asBody(body: unknown): string | Uint8Array<ArrayBuffer> {
+  if (typeof body === 'string') return body;
+  return body instanceof Uint8Array ? new Uint8Array(body) : JSON.stringify(body);
+}
+
 /** Somebody, or nobody, who asks; `headers` carry the session or the key. */
 export class Asker {
   constructor(readonly headers: Record<string, string> = {}) {}
@@ -59,7 +64,7 @@ export class Asker {
     const request = new Request(url, {
       method,
       headers: { origin: ORIGIN, ...this.headers, ...more },
-      ...(body === undefined ? {} : { body: typeof body === 'string' ? body : JSON.stringify(body) }),
+      ...(body === undefined ? {} : { body: asBody(body) }),
     });
     const response = await handler(request, { params: Promise.resolve(params) });
     const text = await response.text();

@@ -2,6 +2,7 @@
 import type { Holding } from '@/db/client';
 import { raiseAlarm } from '@/db/queries/alarm';
 import type { Asker, Json } from './asker';
+import { picture } from './picture';
 import * as shown from './shown';
 
 export interface Furnished {
@@ -17,11 +18,14 @@ export interface Furnished {
 
 const NOTHING = '018f3f3f-0000-7000-8000-000000000000';
 /** What a list or a chart must be asked with. */
-const QUERY: Record<string, string> = { '/houses/{house}/readings': '?points=bench-1' };
+const QUERY: Record<string, string> = {
+  '/houses/{house}/readings': '?points=bench-1',
+  '/houses/{house}/heap-findings': '?source=gate-heap',
+};
 
 export async function furnish(holding: Holding, owner: Asker): Promise<Furnished> {
   const ids: Record<string, string> = {};
-  const keep = async (name: string, path: string, body: object): Promise<Json> => {
+  const keep = async (name: string, path: string, body: object | Uint8Array): Promise<Json> => {
     const made = await owner.make(path, body);
     ids[name] = String(made['id']);
     return made;
@@ -39,6 +43,14 @@ export async function furnish(holding: Holding, owner: Asker): Promise<Furnished
   await keep('rule', `${at}/rules`, shown.rule);
   await keep('lockout', `${at}/lockouts`, { channel: 'ridge-vent', why: 'the arm is being mended' });
   await keep('entry', `${at}/heap-entries`, { source: 'gate-heap', kind: 'watered', text: 'forty litres' });
+  await keep('photograph', `${at}/heap-entries/${ids['entry']}/photographs`, await picture());
+  await keep('round', `${at}/probe-sets`, shown.round);
+  await keep('job', `${at}/heap-jobs`, { source: 'gate-heap', title: 'Build', dueOn: '2027-09-15' });
+  await keep('dismissal', `${at}/heap-dismissals`, {
+    ...{ source: 'gate-heap', kind: 'dry', mark: 'since x', level: 1, why: 'the hose is frozen' },
+  });
+  await keep('material', '/materials', shown.material);
+  await keep('calendar', '/calendar-links', {});
   await keep('invitation', '/invitations', { email: 'invited@larkmoor.example', role: 'grower' });
   await keep('key', '/api-keys', { name: 'a key to end', role: 'grower' });
   ids['member'] = String(((await owner.get('/people')).body['items'] as Json[])[0]?.['id']);

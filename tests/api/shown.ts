@@ -116,3 +116,23 @@ export const rule = {
     hours: { from: 'sunset-01:00', to: 'sunrise+01:00' },
   },
 };
+
+// What follows is of our own making: the description leaves it out.
+export const round = {
+  source: 'gate-heap',
+  at: '2026-12-01T08:20:00.000Z',
+  section: { widthM: 3, heightM: 1.2, sunkM: 0.5, columns: 4, rows: 3, left: 'N', right: 'S' },
+  places: [
+    { column: 0, row: 0, celsius: 14.8 },
+    { column: 2, row: 1, celsius: 45.4 },
+  ],
+  text: 'North edge dry to the hand.',
+};
+export const material = {
+  name: 'Gate stable bedding',
+  density: 420,
+  moisture: 0.61,
+  carbon: 0.42,
+  nitrogen: 0.015,
+  from: 'Weighed and dried in the oven.',
+};

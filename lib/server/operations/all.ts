@@ -1,4 +1,6 @@
 import type { Operation } from '../operation';
+import * as heap from './heap';
+import * as heapYear from './heap-year';
 import * as open from './open';
 import * as people from './people';
 import * as record from './record';
@@ -8,6 +10,14 @@ import * as wiring from './wiring';
 import * as yard from './yard';
 
 /** Every route of the interface; a test holds it equal to the route files. */
-export const OPERATIONS: readonly Operation[] = [yard, wiring, running, rules, record, people, open].flatMap(
-  (subject) => Object.values<Operation>(subject),
-);
+export const OPERATIONS: readonly Operation[] = [
+  yard,
+  wiring,
+  running,
+  rules,
+  record,
+  heap,
+  heapYear,
+  people,
+  open,
+].flatMap((subject) => Object.values<Operation>(subject));

@@ -28,3 +28,12 @@ export const acceptInvitation = operation({
   body: InvitationAccept,
   answers: { 204: null },
 });
+export const getCalendar = operation({
+  id: 'calendar.get',
+  method: 'GET',
+  path: '/calendar/{feed}',
+  action: null,
+  summary: 'The jobs as a calendar (RFC 5545), for who has the secret address',
+  answers: {},
+  onlyAnswers: 'text/calendar',
+});

@@ -1,8 +1,6 @@
 import { AlarmAcknowledge, AlarmQuery } from '@/lib/schema/alarm';
 import { Alarm, AlarmWithEvents } from '@/lib/schema/alarm-view';
 import { listOf } from '@/lib/schema/common';
-import { HeapEntryAmend, HeapEntryCreate } from '@/lib/schema/heap';
-import { HeapEntry, HeapEntryQuery } from '@/lib/schema/heap-view';
 import { NightList, NightsQuery } from '@/lib/schema/night';
 import { operation } from '../operation';
 
@@ -50,39 +48,4 @@ export const acknowledgeAlarm = operation({
   summary: 'Say "I\'ve got it"',
   body: AlarmAcknowledge,
   answers: { 200: AlarmWithEvents },
-});
-export const listHeapEntries = operation({
-  id: 'heap-entry.list',
-  method: 'GET',
-  path: '/houses/{house}/heap-entries',
-  action: 'holding.see',
-  summary: 'The heap book, newest first',
-  query: HeapEntryQuery,
-  answers: { 200: listOf(HeapEntry) },
-});
-export const createHeapEntry = operation({
-  id: 'heap-entry.create',
-  method: 'POST',
-  path: '/houses/{house}/heap-entries',
-  action: 'heap.write',
-  summary: 'A new entry in the heap book',
-  body: HeapEntryCreate,
-  answers: { 201: HeapEntry },
-});
-export const getHeapEntry = operation({
-  id: 'heap-entry.get',
-  method: 'GET',
-  path: '/houses/{house}/heap-entries/{entry}',
-  action: 'holding.see',
-  summary: 'One entry',
-  answers: { 200: HeapEntry },
-});
-export const amendHeapEntry = operation({
-  id: 'heap-entry.amend',
-  method: 'PATCH',
-  path: '/houses/{house}/heap-entries/{entry}',
-  action: 'heap.write',
-  summary: 'Amend an entry; who and when stays beside it',
-  body: HeapEntryAmend,
-  answers: { 200: HeapEntry },
 });

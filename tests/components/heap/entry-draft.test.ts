@@ -22,7 +22,8 @@ const entry: HeapEntry = {
     { material: 'Dry leaves', litres: 400 },
     { material: 'Straw', kilograms: 12.5 },
   ],
-  ...{ litresOfWater: 40, volume: null, by: 'g', enteredAt: '', amendedBy: null, amendedAt: null },
+  ...{ litresOfWater: 40, volume: null, smell: null, squeeze: null, photographs: [] },
+  ...{ by: 'g', enteredAt: '', amendedBy: null, amendedAt: null },
 };
 
 describe('an entry that is typed', () => {
@@ -59,12 +60,20 @@ describe('an entry that is typed', () => {
     const judged = judge(draftOf(entry, now, zone), { ...target, isAmended: true }, now);
     expect(judged.ok && judged.body).toEqual({
       ...{ kind: 'fed', at: entry.at, text: 'Leaves.', materials: entry.materials },
-      ...{ litresOfWater: 40, volume: null },
+      ...{ litresOfWater: 40, volume: null, smell: null, squeeze: null },
     });
   });
 
   it('clears a quantity that is taken out while amending', () => {
     const judged = judge({ ...draftOf(entry, now, zone), water: '' }, { ...target, isAmended: true }, now);
     expect(judged.ok && judged.body['litresOfWater']).toBeNull();
+  });
+
+  it('carries what nose and hand found, and takes it out again while amending', () => {
+    const felt = judge(draft({ smell: 'ammonia', squeeze: 'drops' }), target, now);
+    expect(felt).toMatchObject({ ok: true, body: { smell: 'ammonia', squeeze: 'drops' } });
+    const opened = draftOf({ ...entry, smell: 'sour' }, now, zone);
+    const cleared = judge({ ...opened, smell: null }, { ...target, isAmended: true }, now);
+    expect(cleared).toMatchObject({ ok: true, body: { smell: null } });
   });
 });

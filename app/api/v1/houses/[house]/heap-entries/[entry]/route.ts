@@ -2,7 +2,7 @@ import * as book from '@/db/queries/heap-entry';
 import { HeapEntryCreate } from '@/lib/schema/heap';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
-import { amendHeapEntry, getHeapEntry } from '@/lib/server/operations/record';
+import { amendHeapEntry, getHeapEntry } from '@/lib/server/operations/heap';
 
 export const GET = serve(getHeapEntry, ({ things }) => ({ body: things.entry }));
 

@@ -1,0 +1,69 @@
+import { Figures, Panel } from '@/components/ui/panel';
+import { shrinkage } from '@/lib/analysis/heap-volume';
+import { decimal, share, temperature } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { HOT_CORE_C, longDay } from '@/lib/wording/heap';
+import type { HeapOnPage } from './heap-view-data';
+
+/** The heap so far: hottest, how it sinks, what was done how often. */
+export function HeapFigures({
+  heap: { curve, coreFloor, entries },
+  zone,
+  preferences,
+}: {
+  heap: HeapOnPage;
+  zone: string;
+  preferences: Preferences;
+}) {
+  const first = curve[0];
+  const built = entries.find((entry) => entry.kind === 'built');
+  const since = entries.filter((entry) => built === undefined || entry.at >= built.at);
+  const sunk = shrinkage(
+    since.flatMap(({ at, volume }) => (volume === null ? [] : [{ at: Date.parse(at), volumeM3: volume }])),
+    since.filter((entry) => entry.kind === 'fed').map((entry) => Date.parse(entry.at)),
+  );
+  const count = (kind: string) => since.filter((entry) => entry.kind === kind).length;
+  const hottest = first && curve.reduce((top, step) => (step.value > top.value ? step : top), first);
+  return (
+    <Panel title="The heap so far">
+      <Figures
+        rows={[
+          ...(hottest === undefined
+            ? []
+            : [
+                {
+                  name: 'Hottest hour of the core',
+                  value: `${temperature(hottest.value, preferences)}, ${longDay(hottest.at, zone)}`,
+                  ...(hottest.value >= HOT_CORE_C ? { note: 'too hot: see above' } : {}),
+                },
+              ]),
+          ...(coreFloor === null
+            ? []
+            : [{ name: 'Not drawn on under', value: temperature(coreFloor, preferences) }]),
+          sunk === null
+            ? {
+                name: 'How it sinks',
+                value: 'not known yet',
+                note: 'give its size with two entries, and this tells',
+              }
+            : {
+                name:
+                  sunk.share < 0 ? 'Grown since it was measured first' : 'Sunk since it was measured first',
+                value: `${share(Math.abs(sunk.share))}, ${decimal(sunk.first.volumeM3, 1)} to ${decimal(sunk.last.volumeM3, 1)} m³`,
+                note: [
+                  sunk.aWeek === null ? null : `${share(sunk.aWeek, 1)} a week`,
+                  sunk.fedMeanwhile === 0
+                    ? null
+                    : `fed ${sunk.fedMeanwhile}× meanwhile, so it sank by more than that`,
+                ]
+                  .filter((part) => part !== null)
+                  .join('; '),
+              },
+          { name: 'Fed', value: `${count('fed')}×` },
+          { name: 'Watered', value: `${count('watered')}×` },
+          { name: 'Turned', value: `${count('turned')}×` },
+        ]}
+      />
+    </Panel>
+  );
+}

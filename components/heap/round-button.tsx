@@ -1,0 +1,29 @@
+'use client';
+import { useState, type ComponentType } from 'react';
+import { Button, type ButtonKind } from '@/components/ui/button';
+import { offlineBook } from './offline-book-address';
+import type { RoundTarget } from './round-form';
+
+type Form = ComponentType<RoundTarget & { onClose: () => void }>;
+
+/** As EntryButton: the form comes when it is asked for, or from the page that is kept on the device. */
+export function RoundButton({ look = 'plain', ...target }: RoundTarget & { look?: ButtonKind }) {
+  const [isOpen, setOpen] = useState(false);
+  const [Form, setForm] = useState<Form | null>(null);
+  function open() {
+    setOpen(true);
+    if (Form !== null) return;
+    import('./round-dialog').then(
+      (module) => setForm(() => module.RoundDialog),
+      () => window.location.assign(offlineBook(target.house, target.heap)),
+    );
+  }
+  return (
+    <>
+      <Button kind={look} onClick={open} aria-haspopup="dialog" className="shrink-0">
+        Probe round …
+      </Button>
+      {isOpen && Form !== null ? <Form {...target} onClose={() => setOpen(false)} /> : null}
+    </>
+  );
+}

@@ -1,0 +1,96 @@
+import { spotOf, surfaceM, type ProbePlace, type Section, type Spot } from '@/lib/analysis/probe-section';
+import { fahrenheit } from '@/lib/units/conversion';
+import { decimal, degrees, temperatureFigure } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { isothermsOf } from './isotherms';
+
+const wide = 640;
+const pad = { side: 46, top: 30, foot: 34 };
+
+/** The heap in section with what the probe read, warmer between warm places; drawn on the server. */
+export function SectionDrawing({
+  id,
+  section,
+  places,
+  preferences,
+}: {
+  /** Of the round: names its clip. */
+  id: string;
+  section: Section;
+  places: ProbePlace[];
+  preferences: Preferences;
+}) {
+  const scale = (wide - 2 * pad.side) / section.widthM;
+  const tall = Math.max(section.heightM + section.sunkM, 0.2) * scale;
+  // a flat, broad heap is drawn higher than it is, or its figures would stand on each other
+  const up = Math.max(1, 190 / tall) * scale;
+  const deep = (section.heightM + section.sunkM) * up;
+  const high = pad.top + deep + pad.foot;
+  const at = ({ x, y }: Spot): [number, number] => [pad.side + x * scale, pad.top + deep - y * up];
+  const step = preferences.temperature === 'F' ? 10 : 5;
+  const shown = (celsius: number) => (preferences.temperature === 'F' ? fahrenheit(celsius) : celsius);
+  const { lines, hull } = isothermsOf(section, places, at, shown, step);
+  const rim = Array.from({ length: 41 }, (_, i) => (section.widthM * i) / 40).map((x) =>
+    at({ x, y: surfaceM(section, x) }),
+  );
+  const text = rim.map(([x, y]) => `${x.toFixed(1)},${y.toFixed(1)}`).join('L');
+  const [, ground] = at({ x: 0, y: section.sunkM });
+  const [right] = at({ x: section.widthM, y: 0 });
+  const foot = pad.top + deep;
+  const clip = `hull-${id}`;
+  return (
+    <svg
+      role="img"
+      aria-label={saidOf(section, places, preferences)}
+      viewBox={`0 0 ${wide} ${high}`}
+      className="w-full min-w-[30rem] font-mono text-[13px]"
+    >
+      <defs>
+        <clipPath id={clip}>
+          <path d={hull} />
+        </clipPath>
+      </defs>
+      <path
+        d={`M0,${ground}H${pad.side}V${foot}H${right}V${ground}H${wide}V${high}H0Z`}
+        className="fill-earth"
+      />
+      <path d={`M${pad.side},${foot}L${text}L${right},${foot}Z`} className="fill-faint stroke-line" />
+      <g clipPath={`url(#${clip})`}>
+        {lines.map(({ level, path }) => (
+          <path key={level} d={path} className="fill-ember/15 stroke-core/60" strokeWidth="0.8" />
+        ))}
+      </g>
+      <path d={`M${text}`} fill="none" strokeWidth="3.5" strokeLinecap="round" className="stroke-ink" />
+      <text x={pad.side / 2} y={foot - 8} textAnchor="middle" className="fill-soft font-sans">
+        {section.left}
+      </text>
+      <text x={wide - pad.side / 2} y={foot - 8} textAnchor="middle" className="fill-soft font-sans">
+        {section.right}
+      </text>
+      {places.map((place) => {
+        const [x, y] = at(spotOf(section, place));
+        return (
+          <g key={`${place.column} ${place.row}`}>
+            <rect x={x - 22} y={y - 11} width="44" height="20" rx="4" className="fill-sheet/90" />
+            <text x={x} y={y + 4} textAnchor="middle" className="fill-ink">
+              {temperatureFigure(place.celsius, preferences)}
+            </text>
+          </g>
+        );
+      })}
+      <text x={pad.side} y={high - 10} className="fill-soft font-sans">
+        {lines.length === 0
+          ? 'Three places that lie in no line are needed before lines can be drawn between them.'
+          : `Lines every ${step} ${degrees(preferences)}`}
+      </text>
+    </svg>
+  );
+}
+
+function saidOf(section: Section, places: readonly ProbePlace[], preferences: Preferences): string {
+  const rows = places.map(
+    ({ column, row, celsius }) =>
+      `column ${column + 1}, row ${row + 1}: ${temperatureFigure(celsius, preferences)}`,
+  );
+  return `Heap in section, ${decimal(section.widthM, 1)} m wide, ${section.left} at the left. In ${degrees(preferences)}, columns from the left, rows from the top: ${rows.join('; ')}.`;
+}
