@@ -11,6 +11,7 @@ export const NO_HOUSE: readonly string[] = [
   'invitation',
   'live',
   'new-house',
+  'offline-book',
   'people',
   'reset-password',
   'sign-in',

@@ -41,6 +41,8 @@ export const heapBook: HeapDeed[] = [
       source: 'gate-heap',
       kind: 'note',
       text: 'Smells sweet, steams where the probe goes in. Lower edge feels dry to the hand.',
+      smell: 'earthy',
+      squeeze: 'crumbles',
     },
   },
   {
@@ -73,6 +75,9 @@ export const heapBook: HeapDeed[] = [
       source: 'gate-heap',
       kind: 'turned',
       text: 'Turned with the loader, outside to the inside. Two people; fan off by hand meanwhile.',
+      volume: 9.6,
+      smell: 'earthy',
+      squeeze: 'drops',
     },
     effect: { kind: 'turn' },
   },
@@ -88,6 +93,16 @@ export const heapBook: HeapDeed[] = [
       ],
     },
     effect: { kind: 'feed', massKg: 400, ...freshMix },
+  },
+  {
+    ...{ house: 'long-house', daysAgo: 1, time: '08:40', by: GROWER },
+    entry: {
+      source: 'gate-heap',
+      kind: 'note',
+      text: 'North edge dry to the hand: a fistful falls apart. The middle is well.',
+      smell: 'earthy',
+      squeeze: 'crumbles',
+    },
   },
   {
     ...{ house: 'prop-house', daysAgo: 43, time: '12:00', by: OWNER },
@@ -120,6 +135,9 @@ export const heapBook: HeapDeed[] = [
       source: 'yew-heap',
       kind: 'note',
       text: 'Sunk a hand’s breadth on the east side since the feed. Cover drawn tight again.',
+      volume: 6.9,
+      smell: 'earthy',
+      squeeze: 'drops',
     },
   },
   {

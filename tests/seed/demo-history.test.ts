@@ -6,6 +6,7 @@ import { listHeapEntries } from '@/db/queries/heap-entry';
 import { releaseLead, takeLead } from '@/db/queries/leader';
 import { listNights } from '@/db/queries/night';
 import { loadHouse } from '@/db/queries/plan';
+import { listProbeSets } from '@/db/queries/probe-set';
 import { listDecisions, listSwitchings, readMemory } from '@/db/queries/running';
 import { compile } from '@/lib/control/compile';
 import { migrateMemory } from '@/lib/control/memory';
@@ -181,3 +182,17 @@ it('a history played again is the same history', async () => {
   const again = await playDemo(14);
   expect(await fingerprint(again)).toEqual(await fingerprint(first));
 }, 120_000);
+
+it('the round of the last morning reads what the yard’s core and air were then', async () => {
+  const rounds = await listProbeSets(holdingOf('long-house'), houseId(played, 'long-house'), { limit: 10 });
+  expect(rounds.items.map((round) => [round.source, round.places.length])).toEqual([['gate-heap', 12]]);
+  const celsius = (rounds.items[0]?.places ?? []).map((place) => place.celsius);
+  const [core] = await rowsOf<{ value: number }>(
+    played,
+    'long-house',
+    `select r.value from reading r join point p on p.number = r.point where p.house_id = $1 and p.key = 'gate-core'
+       order by abs(extract(epoch from r.at - '${rounds.items[0]?.at ?? ''}'::timestamptz)) limit 1`,
+  );
+  // its hottest place is the core's own, within what a hand-held probe shows
+  expect(Math.abs(Math.max(...celsius) - (core?.value ?? 0))).toBeLessThan(1);
+});

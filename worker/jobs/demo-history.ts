@@ -9,10 +9,12 @@ import { releaseLead, takeLead } from '@/db/queries/leader';
 import { addPersonCommand } from '@/db/queries/person-command';
 import { loadHouse, type HouseRecord } from '@/db/queries/plan';
 import { rollUp } from '@/db/queries/reading-write';
+import { createProbeSet } from '@/db/queries/probe-set';
 import { findRule } from '@/db/queries/rule';
 import { forceDraft, writeDraft } from '@/db/queries/rule-version';
 import { writeNodeStatus, writeRunning } from '@/db/queries/running';
 import { commandsAfter } from '@/db/queries/waiting-command';
+import { roundOf, type RoundDeed } from '@/db/seed/heap-rounds';
 import { readyBy, type HeapEffect, type PersonDeed } from '@/db/seed/winter';
 import type { SeededHouse } from '@/db/seed/write-house';
 import { HeapEntryCreate } from '@/lib/schema/heap';
@@ -179,6 +181,7 @@ class History {
     const place = this.places.get(house);
     if (place === undefined) return;
     if (deed.what === 'person') return this.actPerson(place, deed.deed, at);
+    if (deed.what === 'round') return this.actRound(place, deed.deed, at);
     const { entry, by, effect } = deed.deed;
     const given = HeapEntryCreate.parse({ ...entry, at: new Date(at).toISOString() });
     // what was built before the controller came was written down when it came
@@ -187,6 +190,18 @@ class History {
     if (effect === undefined || at < this.span.from) return;
     this.advance(at);
     this.world = changed(this.world, house, effect);
+  }
+
+  /** A round reads what the yard's physics has just then; before the history there is none to read. */
+  private async actRound({ run, holding, record }: Place, deed: RoundDeed, at: number): Promise<void> {
+    if (at < this.span.from) return;
+    this.advance(at);
+    const read = sensorReadings(this.world, run.slug, Math.floor(at / 1000) * 1000);
+    const valueOf = (key: string) => read.find((one) => one.key === key)?.value;
+    const [core, outdoors] = [valueOf(deed.corePoint), valueOf('outdoors')];
+    if (core === undefined || outdoors === undefined) return;
+    const given = roundOf(deed, { core, outdoors }, new Date(at));
+    await createProbeSet(holding, record.id, given, { by: deed.by, now: new Date(at) });
   }
 
   private async actPerson({ run, holding, record }: Place, deed: PersonDeed, at: number): Promise<void> {

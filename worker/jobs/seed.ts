@@ -6,6 +6,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
 import { closePools } from '@/db/client';
+import { writeHeapYear, writeMaterials } from '@/db/seed/heap-year';
 import { longHouse, propHouse, type DemoHouse } from '@/db/seed/larkmoor';
 import {
   markReady,
@@ -69,7 +70,13 @@ async function seedAll(password: string): Promise<void> {
     const holding = await writeHolding(given.name, given.slug, given.people, password, new Date(from));
     const by = given.people[0]?.email ?? given.slug;
     const houses: SeededHouse[] = [];
-    for (const house of given.houses) houses.push(await writeHouse(holding, house, by, new Date(from)));
+    const act = { by, now: new Date(from) };
+    await writeMaterials(holding, given.slug, by, act.now);
+    for (const house of given.houses) {
+      const seeded = await writeHouse(holding, house, by, act.now);
+      houses.push(seeded);
+      await writeHeapYear(holding, { id: seeded.houseId, of: house.house }, act, to);
+    }
     secrets.push(...houses.flatMap((house) => house.secrets));
     holdings.push({ holdingId: holding.id, houses });
   }

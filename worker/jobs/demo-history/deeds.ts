@@ -1,10 +1,11 @@
 /** The winter's deeds in order of time, each as what has to be done when the history comes to it. */
 import { DateTime } from 'luxon';
 import { heapBook } from '@/db/seed/heap-book';
+import { heapRounds, type RoundDeed } from '@/db/seed/heap-rounds';
 import { personDeeds, plugsOut, type HeapDeed, type PersonDeed } from '@/db/seed/winter';
 
 export type Deed = { at: number; house: string } & (
-  { what: 'heap'; deed: HeapDeed } | { what: 'person'; deed: PersonDeed }
+  { what: 'heap'; deed: HeapDeed } | { what: 'round'; deed: RoundDeed } | { what: 'person'; deed: PersonDeed }
 );
 
 interface When {
@@ -27,6 +28,7 @@ export function deedsUntil(to: number, zoneOf: (house: string) => string): Deed[
   const at = (deed: When & { house: string }) => instantOf(deed, to, zoneOf(deed.house));
   const deeds: Deed[] = [
     ...heapBook.map((deed) => ({ at: at(deed), house: deed.house, what: 'heap' as const, deed })),
+    ...heapRounds.map((deed) => ({ at: at(deed), house: deed.house, what: 'round' as const, deed })),
     ...personDeeds.map((deed) => ({ at: at(deed), house: deed.house, what: 'person' as const, deed })),
   ];
   return deeds.filter((one) => one.at < to).sort((a, b) => a.at - b.at);
