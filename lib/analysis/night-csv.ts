@@ -24,6 +24,20 @@ const COLUMNS: [head: string, of: (night: NightSummary, time: (at: number) => st
   ['outdoors_lowest_C', (night) => night.outdoorsLowest?.value ?? null],
   ['core_at_dawn_C', (night) => night.coreAtDawn?.value ?? null],
   ['coverage', (night) => night.coverage],
+  ['held_s', (night) => night.heldSeconds],
+  ['hand_s', (night) => night.handSeconds],
+  ['heat_assumed_running', (night) => night.heat?.assumedRunning ?? null],
+  ['heat_measured', (night) => night.heatMeasured],
+  ['heat_for_power', (night) => night.heatForPower?.ratio ?? null],
+  ['heat_for_power_sd', (night) => night.heatForPower?.sd ?? null],
+  ['lift_K_h', (night) => night.liftDegreeHours],
+  ['over_90_percent_h', (night) => night.over90Hours],
+  ['under_dew_point_h', (night) => night.underDewPointHours],
+  ['tau_s', (night) => night.recovery?.tau ?? null],
+  ['tau_sd_s', (night) => night.recovery?.tauSd ?? null],
+  ['level_C', (night) => night.recovery?.level ?? null],
+  ['level_sd_C', (night) => night.recovery?.levelSd ?? null],
+  ['rests_fitted', (night) => night.recovery?.rests ?? null],
 ];
 
 /** What a spreadsheet would take for a formula is quoted out of it: keys are people's own text. */

@@ -25,3 +25,9 @@ export const thumbRuleAt2400 = 212.6;
 
 /** A 12 W fan all day: 0.288 kWh, by definition of the kilowatt hour. */
 export const fanDay = { powerW: 12, kWh: 0.288 };
+
+/**
+ * Heat for each watt of a 12 W fan that moves 90 cfm by 10 °F (common practice: "24 to 1"), and the same at 2400 m: the
+ * rule of thumb ÷ 12 W, recomputed.
+ */
+export const gain = { seaLevel: 23.74, at2400m: 17.72 };
