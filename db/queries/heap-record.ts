@@ -75,11 +75,12 @@ export async function readHeapRecord(
   const rounds = (await listProbeSets(holding, houseId, { limit: MOST_ROUNDS, source: row.id })).items;
   const materials = await listMaterials(holding);
   const built = entries.find((entry) => entry.kind === 'built');
-  const since = built === undefined ? [] : entries.filter((entry) => entry.at >= built.at);
-  const mix = since.length === 0 ? null : heapMix(since, materials);
+  const went = built === undefined ? [] : entries.filter((entry) => entry.at >= built.at);
+  const mix = went.length === 0 ? null : heapMix(went, materials);
   const measured = await readCore(holding, houseId, row, built, entries, nowMs);
   const facts = factsOf({ now: nowMs, ...measured, mix, entries, rounds });
-  const recovery = await recoveryOfHeap(holding, houseId, row.slug, nowMs);
+  const since = built === undefined ? null : Date.parse(built.at);
+  const recovery = await recoveryOfHeap(holding, houseId, { slug: row.slug, since }, nowMs);
   const dismissals = await listDismissals(holding, houseId, row.id);
   const findings = heapFindings(
     { ...facts, recovery },
