@@ -1,4 +1,4 @@
-import { comparable, compareNights } from '@/lib/analysis/compare';
+import { comparable, compareNights, type How } from '@/lib/analysis/compare';
 import type { Preferences } from '@/lib/units/preferences';
 import { compareNames } from './compare-choices';
 import { ComparePanel } from './compare-panel';
@@ -19,11 +19,7 @@ export function Beside({
   preferences: Preferences;
 }) {
   const chosen = other.kind === 'house' ? other.chosen : data.chosen;
-  const comparison = compareNights(
-    comparable(chosen),
-    comparable(other.nights),
-    other.kind === 'ranges' ? 'ranges' : 'places',
-  );
+  const comparison = compareNights(comparable(chosen), comparable(other.nights), howOf(other));
   return (
     <ComparePanel
       {...compareNames(house, source, data.chosen, other)}
@@ -31,4 +27,9 @@ export function Beside({
       preferences={preferences}
     />
   );
+}
+
+function howOf(other: OtherNights): How {
+  if (other.kind === 'source') return other.house === null ? 'sources' : 'houses';
+  return other.kind === 'house' ? 'houses' : 'ranges';
 }

@@ -1,10 +1,10 @@
 import { Panel } from '@/components/ui/panel';
 import { Phrases } from '@/components/ui/sentence';
-import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import type { Comparison } from '@/lib/analysis/compare';
-import type { Preferences } from '@/lib/units/preferences';
-import { compareSentence, figureName, gapWords, meanWords, verdictWords } from '@/lib/wording/duty-compare';
 import { count } from '@/lib/units/format';
+import type { Preferences } from '@/lib/units/preferences';
+import { compareSentence } from '@/lib/wording/duty-compare';
+import { CompareTable } from './compare-table';
 
 export interface ComparePanelProps {
   comparison: Comparison;
@@ -26,49 +26,11 @@ export function ComparePanel({ comparison, what, than, heads, preferences }: Com
         <Phrases phrases={compareSentence(comparison, what, than)} />
       </p>
       {figures.length === 0 ? null : (
-        <Table
-          caption="Side by side, a night"
-          captionHidden
-          columns={[
-            { key: 'figure', label: 'a night, on the mean' },
-            { key: 'chosen', label: heads.chosen, figure: true },
-            { key: 'other', label: heads.other, figure: true },
-            { key: 'gap', label: 'difference (95\u00a0% interval)', figure: true },
-            { key: 'verdict', label: 'is it chance?', wideOnly: true },
-          ]}
-        >
-          {figures.map((figure) => (
-            <Row key={figure.key}>
-              <RowHead className="py-2! font-normal!">
-                {figureName(figure.key)}
-                <span
-                  className={`block text-[0.85rem] sm:hidden ${figure.isBeyondChance === true ? 'font-semibold' : 'text-soft'}`}
-                >
-                  {verdictWords(figure)}
-                </span>
-              </RowHead>
-              <Cell figure className="py-2!">
-                {meanWords(figure.key, figure.chosen, preferences)}
-              </Cell>
-              <Cell figure className="py-2!">
-                {meanWords(figure.key, figure.other, preferences)}
-              </Cell>
-              <Cell figure className="py-2!">
-                {figure.difference === null ? '' : gapWords(figure.key, figure.difference, preferences)}
-              </Cell>
-              <Cell
-                wideOnly
-                className={figure.isBeyondChance === true ? 'py-2! font-semibold' : 'py-2! text-soft'}
-              >
-                {verdictWords(figure)}
-              </Cell>
-            </Row>
-          ))}
-        </Table>
+        <CompareTable figures={figures} heads={heads} preferences={preferences} />
       )}
       <p className="max-w-prose pt-2 text-[0.85rem] text-soft">
-        ± is one standard deviation of the mean: by which nights they were, and for heat by sensors and flow
-        too. {count(chosen.nights, 'night')} beside {count(other.nights, 'night')}
+        ± is one standard deviation of the mean: by which nights they were, and by what probes and flow may be
+        wrong. {count(chosen.nights, 'night')} beside {count(other.nights, 'night')}
         {left === 0 ? '' : `, ${left} left out that last or of which under 90\u00a0% was read`}.{' '}
         {isPaired
           ? 'Night is compared with the same night, so that the weather counts for neither.'

@@ -4,6 +4,7 @@
  */
 import { meanOfNights, type NightsMean } from './mean-of-nights';
 import type { HouseNight, NightSummary } from './nights';
+import { classSd } from './sensor-class';
 import { t95 } from './student';
 
 export const COMPARED = [
@@ -27,7 +28,7 @@ export type FigureKey = (typeof COMPARED)[number];
 export interface ComparableNight {
   night: string;
   values: Partial<Record<FigureKey, number>>;
-  /** Deviation of a figure that is the same every night, from sensors and flow; null: taken as none. */
+  /** Deviation of a figure that is the same every night, from probes and flow; left out: none is known. */
   lasting: Partial<Record<FigureKey, number>>;
 }
 
@@ -46,6 +47,16 @@ export interface ComparedFigure {
   /** The interval leaves none out; null where no difference is known. */
   isBeyondChance: boolean | null;
 }
+
+/**
+ * 'ranges': other nights of the same source, whose probes and flow are then as wrong in both and cancel. 'sources': the same
+ * nights of another source of the house, night with night; what is the house's own is the same and left out. 'houses': the
+ * same nights elsewhere, night with night, by other probes.
+ */
+export type How = 'ranges' | 'sources' | 'houses';
+
+/** Of the house, not of a source. */
+const HOUSE_FIGURES: ReadonlySet<FigureKey> = new Set(['lowest', 'underLimit', 'lift', 'humid', 'outdoors']);
 
 export interface Comparison {
   figures: ComparedFigure[];
@@ -70,12 +81,22 @@ export function comparable(nights: readonly (NightSummary | HouseNight)[]): Set 
       night: night.night,
       values: valuesOf(night),
       lasting: {
+        ...PROBES,
         ...(night.heat === null ? {} : { heat: night.heat.sd }),
         ...(night.heatForPower === null ? {} : { forPower: night.heatForPower.sd }),
       },
     })),
   };
 }
+
+/** One probe's, and for the lift that of two. A summary does not carry what its probes are; a digital one is supposed. */
+const PROBE_SD_K = classSd(null, 0);
+const PROBES = {
+  core: PROBE_SD_K,
+  lowest: PROBE_SD_K,
+  outdoors: PROBE_SD_K,
+  lift: Math.SQRT2 * PROBE_SD_K,
+} as const;
 
 function valuesOf(night: NightSummary | HouseNight): ComparableNight['values'] {
   const { heat, electricity, heatForPower, lowest, liftDegreeHours, over90Hours, outdoorsLowest } = night;
@@ -100,17 +121,14 @@ function underLimitHours(night: NightSummary | HouseNight): number | null {
   return night.belowFrostLimitSeconds === null ? null : night.belowFrostLimitSeconds / 3600;
 }
 
-/**
- * @param how 'ranges': other nights of the same source, whose sensors and flow are then as wrong in both and cancel;
- * 'places': another source or house, of which the same nights are compared one with the other
- */
-export function compareNights(chosen: Set, other: Set, how: 'ranges' | 'places'): Comparison {
-  const figures = COMPARED.map((key) => compareFigure(key, chosen.nights, other.nights, how));
+export function compareNights(chosen: Set, other: Set, how: How): Comparison {
+  const keys = COMPARED.filter((key) => how !== 'sources' || !HOUSE_FIGURES.has(key));
+  const figures = keys.map((key) => compareFigure(key, chosen.nights, other.nights, how));
   return {
     figures: figures.filter((figure) => figure.chosen !== null || figure.other !== null),
     chosen: { nights: chosen.nights.length, leftOut: chosen.all - chosen.nights.length },
     other: { nights: other.nights.length, leftOut: other.all - other.nights.length },
-    isPaired: how === 'places',
+    isPaired: how !== 'ranges',
   };
 }
 
@@ -118,7 +136,7 @@ function compareFigure(
   key: FigureKey,
   chosen: readonly ComparableNight[],
   other: readonly ComparableNight[],
-  how: 'ranges' | 'places',
+  how: How,
 ): ComparedFigure {
   const [one, two] = [meanOf(key, chosen), meanOf(key, other)];
   const gap = how === 'ranges' ? betweenMeans(one, two) : betweenPairs(key, chosen, other);
