@@ -8,7 +8,7 @@ import type { Preferences } from '@/lib/units/preferences';
 import { dutySentence } from '@/lib/wording/duty';
 import { recoverySentence } from '@/lib/wording/duty-recovery';
 import { sentences } from '@/lib/wording/join';
-import { addressOf, type DutyAddress } from './address';
+import type { DutyAddress } from './address';
 import { Beside } from './beside';
 import { Controls } from './controls';
 import type { DutyHouse, DutyViewData } from './duty-data';
@@ -16,7 +16,8 @@ import { SharedPatterns } from './night-strip';
 import { NightsTable } from './nights-table';
 import { OpenedNight } from './opened-night';
 import { SideColumn } from './side-column';
-import { YearCalendar } from './year-calendar';
+import { OutdoorsPanel } from './outdoors-panel';
+import { Year } from './year';
 
 export function DutyView({
   house,
@@ -35,7 +36,6 @@ export function DutyView({
   const isPart = chosen.length < data.nights.length;
   const standing = { source: source.name, nights: chosen, totals, frostLimitC: house.frostLimit, isPart };
   const shared = { house, address, source, data, preferences };
-  const bare = addressOf(house.slug, address, { night: undefined });
   return (
     <div className="flex flex-col gap-4">
       <SharedPatterns />
@@ -60,28 +60,20 @@ export function DutyView({
         </Empty>
       ) : (
         <div className="grid gap-4 lg:grid-cols-[minmax(0,1fr)_20.5rem] lg:items-start print:block">
-          <Panel title="Every night, noon to noon" note={<StripKey id="duty-key" />}>
-            <NightsTable
-              house={house.slug}
-              {...{ address, totals, preferences }}
-              nights={chosen}
-              frostLimitC={house.frostLimit}
-            />
-          </Panel>
+          <div className="flex min-w-0 flex-col gap-4">
+            <Panel title="Every night, noon to noon" note={<StripKey id="duty-key" />}>
+              <NightsTable
+                house={house.slug}
+                {...{ address, totals, preferences }}
+                nights={chosen}
+                frostLimitC={house.frostLimit}
+              />
+            </Panel>
+            <OutdoorsPanel source={source.name} nights={chosen} preferences={preferences} />
+            <Year {...shared} />
+          </div>
           <SideColumn {...shared} />
         </div>
-      )}
-      {data.year.length < 2 ? null : (
-        <Panel
-          title="The year"
-          note="a square is as large as the night was run; outlined where the house came under its frost limit"
-        >
-          <YearCalendar
-            days={data.year}
-            to={`${bare}${bare.includes('?') ? '&' : '?'}night=`}
-            preferences={preferences}
-          />
-        </Panel>
       )}
     </div>
   );

@@ -44,7 +44,7 @@ export function RecoveryCurves({ groups, preferences }: { groups: CurveGroup[]; 
     ...readings.map((one) => one.value),
   ]);
   const x = scaleLinear([0, longest], [box.left, box.right]);
-  const y = scaleLinear([Math.min(...values) - 0.5, Math.max(...values) + 0.5], [box.bottom, box.top]);
+  const y = scaleLinear([Math.min(...values) - 0.5, Math.max(...values) + 0.9], [box.bottom, box.top]);
   const ticks = degreeTicks(y.invert(box.bottom), y.invert(box.top), 5, preferences);
   const said = groups
     .flatMap((group) => {
@@ -98,7 +98,9 @@ function Group({
   x: (seconds: number) => number;
   y: (celsius: number) => number;
 }) {
-  const last = group.rests.at(-1)?.fit;
+  const ends = group.rests.map(({ fit }) => y(curveAt(fit, lengthOf(fit))));
+  // the name stands clear of its curves, on the side where the other group is not
+  const nameY = group.tone === 'core' ? Math.max(...ends) + 15 : Math.min(...ends) - 6;
   const path = ({ fit }: RestCurve) =>
     line().digits(1)(
       Array.from({ length: CURVE_STEPS + 1 }, (_, step): [number, number] => {
@@ -129,10 +131,10 @@ function Group({
           className={STROKES[group.tone]}
         />
       ))}
-      {last === undefined ? null : (
+      {ends.length === 0 ? null : (
         <text
           x={box.right}
-          y={y(curveAt(last, lengthOf(last))) + (group.tone === 'core' ? 14 : -7)}
+          y={nameY}
           textAnchor="end"
           className={`font-sans font-semibold ${FILLS[group.tone]}`}
           stroke="var(--sheet)"

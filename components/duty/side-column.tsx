@@ -3,18 +3,15 @@ import type { Preferences } from '@/lib/units/preferences';
 import { CoreAtDawn, dawnsOf } from './core-at-dawn';
 import type { DutyHouse, DutyViewData } from './duty-data';
 import { nightFigures } from './figures';
-import { OutdoorsPanel } from './outdoors-panel';
 import { RecoveryPanel } from './recovery-panel';
 
-/** Beside the nights: how the heap comes back, its core, what a cold night brings, and all of them together. */
+/** Beside the nights: how the heap comes back, its core, and all of them together. */
 export function SideColumn({
   house,
-  source,
   data,
   preferences,
 }: {
   house: DutyHouse;
-  source: { name: string };
   data: DutyViewData;
   preferences: Preferences;
 }) {
@@ -33,7 +30,6 @@ export function SideColumn({
       <Panel title={chosen.length === 1 ? 'This night' : 'Together'}>
         <Figures rows={nightFigures(chosen, house.zone, house.frostLimit, preferences)} />
       </Panel>
-      <OutdoorsPanel source={source.name} nights={chosen} preferences={preferences} />
     </div>
   );
 }

@@ -7,8 +7,10 @@ import type { Preferences } from '@/lib/units/preferences';
 import { nightLabel } from '@/lib/units/time';
 import { arrowStep, dayAt, type YearDay, yearLayout } from './year-layout';
 
-const CELL_PX = 15;
+const CELL_PX = 13;
+/** Cells' widths left of the weeks for their days' names, and right for the last month's. */
 const LEFT = 2.1;
+const RIGHT = 1;
 const TOP = 1.2;
 
 /** @param to the address of an opened night, but for its name */
@@ -27,7 +29,7 @@ export function YearCalendar({
   const router = useRouter();
   // the newest nights stand at the right end, where a narrow screen would not show them
   useEffect(() => {
-    void scroller.current?.scrollTo({ left: scroller.current.scrollWidth });
+    scroller.current?.scrollTo({ left: scroller.current.scrollWidth });
   }, []);
   const day = days[place];
   if (day === undefined) return null;
@@ -37,7 +39,7 @@ export function YearCalendar({
 
   const under = (event: PointerEvent<SVGSVGElement>) => {
     const box = event.currentTarget.getBoundingClientRect();
-    const unit = box.width / (LEFT + layout.weeks);
+    const unit = box.width / (LEFT + layout.weeks + RIGHT);
     const [x, y] = [(event.clientX - box.left) / unit - LEFT, (event.clientY - box.top) / unit - TOP];
     return dayAt(layout, Math.floor(x), Math.floor(y));
   };
@@ -66,8 +68,8 @@ export function YearCalendar({
             const at = under(event as unknown as PointerEvent<SVGSVGElement>);
             if (at !== null) router.push(`${to}${days[at]?.night ?? ''}#night`);
           }}
-          viewBox={`0 0 ${LEFT + layout.weeks} ${TOP + 7.2}`}
-          style={{ width: (LEFT + layout.weeks) * CELL_PX }}
+          viewBox={`0 0 ${LEFT + layout.weeks + RIGHT} ${TOP + 7.2}`}
+          style={{ width: (LEFT + layout.weeks + RIGHT) * CELL_PX }}
           className="block max-w-none cursor-pointer select-none text-[0.72px]"
         >
           {layout.months.map((month) => (

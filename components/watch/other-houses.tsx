@@ -6,8 +6,8 @@ import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 
 /** Worst first: open alarms, then how near the frost limit. */
-export function worstFirst<Card extends WatchCard>(cards: readonly Card[]): Card[] {
-  const room = (card: Card) =>
+export function worstFirst(cards: readonly WatchCard[]): WatchCard[] {
+  const room = (card: WatchCard) =>
     card.coldest === null ? -Infinity : card.coldest - (card.frostLimit ?? 0);
   return [...cards].sort((one, other) => other.alarms - one.alarms || room(one) - room(other));
 }

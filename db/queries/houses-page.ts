@@ -1,7 +1,8 @@
 /** What the page of all houses shows: how each stands, its last night, and what its sources gave in a week. */
-import { and, asc, eq, gte, isNull, sql } from 'drizzle-orm';
+import { and, asc, count, eq, gte, isNull, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { night as nightTable } from '@/db/schema/study';
+import { alarm } from '@/db/schema/watch';
 import { house, source } from '@/db/schema/yard';
 import { type CoreTrend, coreTrend } from '@/lib/analysis/core';
 import { nightBefore, nightOf } from '@/lib/analysis/night';
@@ -31,7 +32,13 @@ export interface HouseStanding extends WatchCard {
 /** Dawns for the trend of a core need a day more than the nights of a week. */
 const DAYS = 8;
 
-export async function readHouses(holding: Holding, nowMs: number): Promise<HouseStanding[]> {
+export interface HousesPage {
+  houses: HouseStanding[];
+  /** Open alarms that are no house's own. */
+  ofHolding: number;
+}
+
+export async function readHouses(holding: Holding, nowMs: number): Promise<HousesPage> {
   const cards = await readCards(holding, null);
   const rows = await holding.db
     .select({ house: house.slug, zone: house.zone, id: source.id, slug: source.slug, name: source.name })
@@ -43,7 +50,7 @@ export async function readHouses(holding: Holding, nowMs: number): Promise<House
   const from = nightBefore(nightOf(nowMs, 'UTC').night, DAYS + 1);
   const nights = await lightNights(holding, from);
   const houseNights = await listHouseNights(holding, null, { from, to: nightBefore(from, -DAYS - 2) });
-  return cards.map((card) => {
+  const houses = cards.map((card) => {
     const own = rows.filter((row) => row.house === card.slug);
     const last = nightBefore(nightOf(nowMs, card.zone).night, 1);
     const sources = own.map(({ id, slug, name }) => sourceWeek({ slug, name }, nights.get(id) ?? [], last));
@@ -57,6 +64,11 @@ export async function readHouses(holding: Holding, nowMs: number): Promise<House
       sources,
     };
   });
+  const [whole] = await holding.db
+    .select({ many: count() })
+    .from(alarm)
+    .where(and(eq(alarm.holdingId, holding.id), isNull(alarm.houseId), isNull(alarm.clearedAt)));
+  return { houses, ofHolding: whole?.many ?? 0 };
 }
 
 function sourceWeek(

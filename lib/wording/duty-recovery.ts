@@ -14,7 +14,8 @@ import type { Phrase } from './phrase';
 
 const space = '\u00a0';
 
-const minutes = (seconds: number) => decimal(seconds / 60, 0);
+/** A tenth: over many rests the interval is under a minute. */
+const minutes = (seconds: number) => decimal(seconds / 60, 1);
 
 /** @example interval(tau, minutes) === '28 to 35', 'at least 28' where nothing bounds it above */
 function interval({ low, high }: Estimate, figure: (value: number) => string): string {
@@ -23,7 +24,7 @@ function interval({ low, high }: Estimate, figure: (value: number) => string): s
   return high === null ? 'no bound known' : `at most ${figure(high)}`;
 }
 
-/** Minutes with their interval. @example tauWords(tau) === '31 min (28 to 35)' */
+/** Minutes with their interval. @example tauWords(tau) === '31.2 min (28.4 to 34.6)' */
 export function tauWords(tau: Estimate): string {
   return `${minutes(tau.value)}${space}min (${interval(tau, minutes)})`;
 }

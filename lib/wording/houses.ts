@@ -18,15 +18,53 @@ export interface HouseFacts {
   fallingCores: string[];
 }
 
+/** Worst first: open alarms, then under the frost limit now or last night, falling cores, and how near the limit is. */
+export function worstOf<House extends HouseFacts>(houses: readonly House[]): House[] {
+  const under = ({ frostLimit }: House, value: number | null) =>
+    Number(value !== null && frostLimit !== null && value < frostLimit);
+  const room = ({ coldest, frostLimit }: House) =>
+    coldest === null ? -Infinity : coldest - (frostLimit ?? 0);
+  const weights = (house: House) => [
+    house.alarms,
+    under(house, house.coldest),
+    under(house, house.lastLowest),
+    house.fallingCores.length,
+    -room(house),
+  ];
+  return houses.toSorted((one, other) => {
+    const [a, b] = [weights(one), weights(other)];
+    return a.map((weight, place) => (b[place] ?? 0) - weight).find((gap) => gap !== 0) ?? 0;
+  });
+}
+
 /**
+ * @param ofHolding open alarms that are no house's own
  * @param houses worst first
  * @example "The prop house asks for you first: one open alarm, and it came down to 1.2 °C last night. The other house holds."
  */
-export function housesSentence(houses: readonly HouseFacts[], preferences: Preferences): Phrase[] {
+export function housesSentence(
+  houses: readonly HouseFacts[],
+  ofHolding: number,
+  preferences: Preferences,
+): Phrase[] {
   if (houses.length === 0) return [{ text: 'There is no house yet.', tone: 'strong' }];
+  return sentences(
+    ofHolding === 0
+      ? []
+      : [
+          {
+            text: `${capital(counted(ofHolding, 'alarm'))} ${ofHolding === 1 ? 'is' : 'are'} of the holding as a whole.`,
+            tone: 'alarm',
+          },
+        ],
+    ofHouses(houses, ofHolding, preferences),
+  );
+}
+
+function ofHouses(houses: readonly HouseFacts[], ofHolding: number, preferences: Preferences): Phrase[] {
   const wanting = houses.filter((house) => needs(house, preferences).length > 0);
   const [worst] = wanting;
-  if (worst === undefined) return allHold(houses, preferences);
+  if (worst === undefined) return allHold(houses, ofHolding, preferences);
   const others = wanting.slice(1).map((house) => midSentence(house.name));
   const rest = houses.length - wanting.length;
   return sentences(
@@ -46,7 +84,7 @@ export function housesSentence(houses: readonly HouseFacts[], preferences: Prefe
   );
 }
 
-function allHold(houses: readonly HouseFacts[], preferences: Preferences): Phrase[] {
+function allHold(houses: readonly HouseFacts[], ofHolding: number, preferences: Preferences): Phrase[] {
   const lows = houses.flatMap((house) => house.lastLowest ?? []);
   const all =
     houses.length === 1
@@ -56,7 +94,7 @@ function allHold(houses: readonly HouseFacts[], preferences: Preferences): Phras
         : `All ${houses.length} houses hold.`;
   return join(
     { text: all, tone: 'strong' },
-    ' No alarm stands',
+    ofHolding === 0 ? ' No alarm stands' : ' None of them has an alarm of its own',
     lows.length === 0
       ? '.'
       : join(
@@ -69,24 +107,25 @@ function allHold(houses: readonly HouseFacts[], preferences: Preferences): Phras
 
 function needs(house: HouseFacts, preferences: Preferences): Phrase[] {
   const { alarms, coldest, frostLimit, lastLowest, fallingCores } = house;
-  const isUnder = (value: number | null): value is number =>
-    value !== null && frostLimit !== null && value < frostLimit;
+  const under = (value: number | null) =>
+    value !== null && frostLimit !== null && value < frostLimit ? temperature(value, preferences) : null;
+  const [now, night] = [under(coldest), under(lastLowest)];
   return [
     ...(alarms === 0 ? [] : [{ text: counted(alarms, 'open alarm'), tone: 'alarm' } satisfies Phrase]),
-    ...(isUnder(coldest)
+    ...(now !== null
       ? [
           {
-            text: `${temperature(coldest, preferences)} now, under its frost limit`,
+            text: `${now} now, under its frost limit`,
             tone: 'alarm',
           } satisfies Phrase,
         ]
       : coldest === null
         ? ['no good reading of it now']
         : []),
-    ...(isUnder(lastLowest)
+    ...(night !== null
       ? [
           {
-            text: `${temperature(lastLowest, preferences)} at its lowest last night`,
+            text: `${night} at its lowest last night`,
             tone: 'alarm',
           } satisfies Phrase,
         ]

@@ -11,11 +11,11 @@ export const metadata: Metadata = { title: 'All houses' };
 export default async function HousesPage() {
   const viewer = await requireViewer();
   const { preferences, now } = await shellFacts(viewer);
-  const houses = await inHolding(viewer.holdingId, (holding) => readHouses(holding, now));
+  const page = await inHolding(viewer.holdingId, (holding) => readHouses(holding, now));
   return (
     <>
       <KeepFresh everyS={15} />
-      <HousesView houses={houses} now={now} preferences={preferences} />
+      <HousesView {...page} now={now} preferences={preferences} />
     </>
   );
 }
