@@ -41,7 +41,7 @@ export function CalendarLinks({ links }: { links: Link[] }) {
     });
   return (
     <details className="border-t border-line">
-      <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft">
+      <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft underline underline-offset-4">
         In your calendar
       </summary>
       <div className="flex flex-col items-start gap-2 pb-1">

@@ -2,15 +2,9 @@
 import dynamic from 'next/dynamic';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import type { DismissTarget } from './dismiss-target';
 
 const DismissDialog = dynamic(() => import('./dismiss-dialog').then((module) => module.DismissDialog));
-
-export interface DismissTarget {
-  house: string;
-  heap: string;
-  title: string;
-  evidence: { kind: string; mark: string; level: number };
-}
 
 export function DismissButton(target: DismissTarget) {
   const [isOpen, setOpen] = useState(false);

@@ -5,7 +5,7 @@ import { ConfirmDialog } from '@/components/ui/dialog';
 import { TextArea } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
-import type { DismissTarget } from './dismiss-button';
+import type { DismissTarget } from './dismiss-target';
 
 export function DismissDialog({
   house,

@@ -69,7 +69,7 @@ export function FindingList({
       })}
       {dismissed.length === 0 ? null : (
         <details className="rounded-lg border border-line px-4">
-          <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft">
+          <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft underline underline-offset-4">
             Set aside: {dismissed.map(({ finding }) => lower(titleOf(finding, preferences))).join('; ')}
           </summary>
           <ul className="flex flex-col gap-3 pb-3">

@@ -25,7 +25,7 @@ export function HeatPanel({
         <>
           <Figures rows={heatRows(heat, zone, preferences)} />
           <details className="mt-1">
-            <summary className="flex min-h-11 cursor-pointer items-center text-[0.9rem] text-soft">
+            <summary className="flex min-h-11 cursor-pointer items-center text-[0.9rem] text-soft underline underline-offset-4">
               Beside the published rules
             </summary>
             <ul className="flex flex-col gap-3 border-t border-line pt-2">

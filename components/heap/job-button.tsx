@@ -2,14 +2,9 @@
 import dynamic from 'next/dynamic';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import type { JobTarget } from './job-target';
 
 const JobDialog = dynamic(() => import('./job-dialog').then((module) => module.JobDialog));
-
-export interface JobTarget {
-  house: string;
-  heap: string;
-  today: string;
-}
 
 export function JobButton(target: JobTarget) {
   const [isOpen, setOpen] = useState(false);

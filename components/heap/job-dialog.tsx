@@ -6,7 +6,7 @@ import { Dialog } from '@/components/ui/dialog';
 import { Field, TextArea, TextField, control } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
-import type { JobTarget } from './job-button';
+import type { JobTarget } from './job-target';
 
 export function JobDialog({ house, heap, today, onClose }: JobTarget & { onClose: () => void }) {
   const router = useRouter();

@@ -46,7 +46,7 @@ export function JobsPanel({
           <li key={job.id}>
             <details>
               <summary className="flex min-h-11 cursor-pointer flex-wrap items-baseline justify-between gap-x-4 py-2">
-                <span className="font-semibold">{job.title}</span>
+                <span className="font-semibold underline underline-offset-4">{job.title}</span>
                 <span className={job.dueOn < today ? 'font-semibold text-warn' : 'text-soft'}>
                   {dueWord(job.dueOn)}, {daysWord(job.dueOn, today)}
                   {job.checklist.length === 0
@@ -61,7 +61,7 @@ export function JobsPanel({
       </ul>
       {done.length === 0 ? null : (
         <details className="border-t border-line">
-          <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft">
+          <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft underline underline-offset-4">
             Done: {done.length}
           </summary>
           <ul className="flex flex-col gap-1 pb-2">

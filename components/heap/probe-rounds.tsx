@@ -39,7 +39,7 @@ export function ProbeRounds({
       </div>
       {last.text === '' ? null : <p className="mt-2 max-w-prose whitespace-pre-line">{last.text}</p>}
       <details className="mt-2">
-        <summary className="flex min-h-11 cursor-pointer items-center text-[0.9rem] text-soft">
+        <summary className="flex min-h-11 cursor-pointer items-center text-[0.9rem] text-soft underline underline-offset-4">
           Rounds as a table
         </summary>
         <Table

@@ -25,7 +25,7 @@ export function SectionFields({
   );
   return (
     <details open={isWrong || undefined} className="rounded-lg border border-line px-3">
-      <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft">
+      <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft underline underline-offset-4">
         The section: {draft.columns} × {draft.rows} places, {draft.widthM} m wide
       </summary>
       <div className="grid grid-cols-2 gap-3 pb-3">

@@ -4,7 +4,7 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { send } from '@/components/ui/send';
 import { JOB_TEMPLATES, nextDay } from '@/lib/wording/heap-jobs';
-import type { JobTarget } from './job-button';
+import type { JobTarget } from './job-target';
 
 /** Sets down the four jobs of a heap's year, each on the next such day; days and lists are then the holding's own. */
 export function YearButton({ house, heap, today, latitude }: JobTarget & { latitude: number }) {
