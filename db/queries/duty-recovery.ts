@@ -80,20 +80,16 @@ async function readingsOf(holding: Holding, sourceId: string, rests: readonly Fi
       .where(and(eq(calibration.holdingId, holding.id), eq(calibration.pointId, base.id)))
       .orderBy(asc(calibration.from))
   ).map((row) => ({ from: row.from.getTime(), offset: row.offset, gain: row.gain }));
-  const spans = sql.join(
-    rests.map(
-      (rest) => sql`(${rest.from}::float8, ${new Date(rest.from)}::timestamptz, ${end(rest)}::timestamptz)`,
-    ),
-    sql`, `,
+  // a branch a rest: with bounds as constants the planner leaves out the partitions of all other months
+  const branches = rests.map(
+    (rest) => sql`
+      (select ${rest.from}::float8 as rest, (extract(epoch from at) * 1000)::float8 as at, value from reading
+        where point = ${base.number} and at >= ${new Date(rest.from)} and at < ${end(rest)} and quality = 0
+        order by at)`,
   );
-  const { rows } = await holding.db.execute<{ rest: number; at: number; value: number }>(sql`
-    select span.rest, (extract(epoch from r.at) * 1000)::float8 as at, r.value
-    from (values ${spans}) as span (rest, since, until)
-    cross join lateral (
-      select at, value from reading
-      where point = ${base.number} and at >= span.since and at < span.until and quality = 0
-    ) r
-    order by span.rest, r.at`);
+  const { rows } = await holding.db.execute<{ rest: number; at: number; value: number }>(
+    sql.join(branches, sql` union all `),
+  );
   for (const { rest, at, value } of rows)
     found.set(rest, [...(found.get(rest) ?? []), { at, value: correct(calibrations, at, value) }]);
   for (const [rest, all] of found) found.set(rest, some(all, MOST_DOTS));

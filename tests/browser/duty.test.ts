@@ -98,6 +98,7 @@ describe('Duty in the browser', () => {
     await page.keyboard.press('Enter');
     await page.waitForURL(/night=/);
     await page.getByRole('heading', { name: /The night of/ }).waitFor();
+    await page.getByRole('list', { name: 'Decisions of the night' }).waitFor();
     expect(await accessibilityFaults(page)).toEqual([]);
     await page.getByRole('link', { name: 'Close' }).click();
     await page.getByRole('heading', { name: /The night of/ }).waitFor({ state: 'detached' });

@@ -174,21 +174,20 @@ describe.each(SOURCES)('The nights of %s, %s', (house, source) => {
 
   it('are drawn as long as they ran', async () => {
     await page.goto(duty);
+    // strokes of the runs, and boxes of what was on by hand, in seconds
     const drawn = await page.locator('tbody tr:has(th a)').evaluateAll((rows) =>
       rows.map((row) => {
-        const runs = [...row.querySelectorAll('g.fill-ember rect, g[class*="fill-ember/"] rect')];
-        return {
-          share: runs.reduce((sum, run) => sum + Number.parseFloat(run.getAttribute('width') ?? ''), 0),
-          runs: runs.length,
-        };
+        const paths = row.querySelectorAll('path[class~="stroke-ember"], path[class*="fill-ember"]');
+        const lengths = [...paths].flatMap((path) =>
+          [...(path.getAttribute('d') ?? '').matchAll(/h(\d+)/g)].map((match) => Number(match[1])),
+        );
+        return lengths.reduce((sum, seconds) => sum + seconds, 0);
       }),
     );
     const nights = await nightsOf(house, source);
     expect(drawn).toHaveLength(nights.length);
-    for (const [i, night] of nights.slice(0, -1).entries()) {
-      // a run's width is rounded to a hundredth of a per cent
-      const slack = 0.01 + 0.005 * (drawn[i]?.runs ?? 0);
-      expect(Math.abs((drawn[i]?.share ?? -1) - 100 * night.dutyOfNight), night.night).toBeLessThan(slack);
-    }
+    for (const [i, night] of nights.slice(0, -1).entries())
+      // each end of a run is a whole second
+      expect(Math.abs((drawn[i] ?? -1) - night.onSeconds), night.night).toBeLessThanOrEqual(1 + night.starts);
   });
 });
