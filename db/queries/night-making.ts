@@ -47,15 +47,25 @@ export async function zoneOf(holding: Holding, houseId: string): Promise<string 
   return row?.zone ?? null;
 }
 
-/** Makes what a reader would find missing or stale: the lasting night, and the one before it just after noon. */
+/**
+ * Makes what a reader would find missing or stale: the lasting night, and the one before it just after noon. Every page
+ * comes through here, so where all is fresh one small query says so: a house's row is made with those of its sources.
+ */
 export async function bringUp(holding: Holding, houseId: string, nowMs: number): Promise<void> {
   const zone = await zoneOf(holding, houseId);
   if (zone === null) return;
   const present = nightOf(nowMs, zone);
   const nights = [nightOf(present.from - 1, zone), present];
-  await makeDue(holding, houseId, nowMs, nights, (night, kept) =>
-    kept === undefined ? true : kept.madeAt < Math.min(night.to, nowMs - FRESH_MS),
-  );
+  const { rows } = await holding.db.execute<{ night: string; at: number }>(sql`
+    select night::text as night, (extract(epoch from made_at) * 1000)::float8 as at from house_night
+    where holding_id = ${holding.id} and house_id = ${houseId}
+      and night between ${nights[0]?.night ?? null}::date and ${present.night}::date
+      and (body->>'version')::int = ${SUMMARY_VERSION}`);
+  const madeAt = new Map(rows.map((row) => [row.night, row.at]));
+  const isStale = (night: Night) =>
+    (madeAt.get(night.night) ?? -Infinity) < Math.min(night.to, nowMs - FRESH_MS);
+  const stale = nights.filter(isStale);
+  if (stale.length > 0) await makeDue(holding, houseId, nowMs, stale, () => true);
 }
 
 /**
