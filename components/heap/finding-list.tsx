@@ -31,42 +31,11 @@ export function FindingList({
       <h2 id="findings" className="sr-only">
         What to do about the heap
       </h2>
-      {open.map((finding) => {
-        const words = findingWords(finding, preferences);
-        return (
-          <article
-            key={finding.kind}
-            className={classes(
-              'rounded-lg border border-l-4 border-line bg-sheet p-4',
-              finding.urgency === 'act' ? 'border-l-alarm' : 'border-l-warn',
-            )}
-          >
-            <h3 className="font-semibold">
-              <span className={finding.urgency === 'act' ? 'text-alarm' : 'text-warn'}>
-                {WHEN[finding.urgency]}:
-              </span>{' '}
-              {words.title}
-            </h3>
-            <p className="max-w-prose">{words.why}</p>
-            <p className="mt-1 max-w-prose">
-              <strong className="font-semibold">Next:</strong> {words.next}
-            </p>
-            <div className="mt-1 flex flex-wrap items-end justify-between gap-2">
-              <p className="text-[0.9rem] text-soft">
-                {words.sure} After: {words.source}.
-              </p>
-              {mayWrite ? (
-                <DismissButton
-                  house={house}
-                  heap={heap}
-                  title={words.title}
-                  evidence={{ kind: finding.kind, mark: finding.mark, level: finding.level }}
-                />
-              ) : null}
-            </div>
-          </article>
-        );
-      })}
+      <div className="grid gap-3 empty:hidden lg:grid-cols-2 lg:items-start">
+        {open.map((finding) => (
+          <OpenFinding key={finding.kind} {...{ finding, house, heap, mayWrite, preferences }} />
+        ))}
+      </div>
       {dismissed.length === 0 ? null : (
         <details className="rounded-lg border border-line px-4">
           <summary className="flex min-h-11 cursor-pointer items-center text-[0.95rem] text-soft underline underline-offset-4">
@@ -89,6 +58,54 @@ export function FindingList({
         </details>
       )}
     </section>
+  );
+}
+
+/** What presses stands open; what is only to be looked at is folded, so that a phone shows the heap sooner. */
+function OpenFinding({
+  finding,
+  house,
+  heap,
+  mayWrite,
+  preferences,
+}: {
+  finding: Finding;
+  house: string;
+  heap: string;
+  mayWrite: boolean;
+  preferences: Preferences;
+}) {
+  const { urgency, kind, mark, level } = finding;
+  const words = findingWords(finding, preferences);
+  return (
+    <details
+      open={urgency !== 'look'}
+      className={classes(
+        'rounded-lg border border-l-4 border-line bg-sheet px-4',
+        urgency === 'act' ? 'border-l-alarm' : urgency === 'soon' ? 'border-l-warn' : 'border-l-edge',
+      )}
+    >
+      <summary className="min-h-11 cursor-pointer py-2.5">
+        <h3 className="inline font-semibold">
+          <span className={urgency === 'act' ? 'text-alarm' : urgency === 'soon' ? 'text-warn' : 'text-soft'}>
+            {WHEN[urgency]}:
+          </span>{' '}
+          {words.title}
+        </h3>
+      </summary>
+      <p className="max-w-prose">{words.why}</p>
+      <p className="mt-1 max-w-prose">
+        <strong className="font-semibold">Next:</strong> {words.next}
+      </p>
+      <div className="mt-1 flex flex-wrap items-end justify-between gap-2 pb-3">
+        <p className="min-w-0 flex-1 basis-60 text-[0.9rem] text-soft">
+          {words.sure} After: {words.source}.
+        </p>
+        {mayWrite ? (
+          <DismissButton house={house} heap={heap} title={words.title} evidence={{ kind, mark, level }} />
+        ) : null}
+      </div>
+    </details>
   );
 }
 

@@ -4,8 +4,9 @@ import { decimal, degrees, temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { isothermsOf } from './isotherms';
 
-const wide = 640;
-const pad = { side: 46, top: 30, foot: 34 };
+// narrow, so that figures can still be read where the drawing is as wide as a phone
+const wide = 480;
+const pad = { side: 34, top: 22, foot: 28 };
 
 /** The heap in section with what the probe read, warmer between warm places; drawn on the server. */
 export function SectionDrawing({
@@ -23,7 +24,7 @@ export function SectionDrawing({
   const scale = (wide - 2 * pad.side) / section.widthM;
   const tall = Math.max(section.heightM + section.sunkM, 0.2) * scale;
   // a flat, broad heap is drawn higher than it is, or its figures would stand on each other
-  const up = Math.max(1, 190 / tall) * scale;
+  const up = Math.max(1, 170 / tall) * scale;
   const deep = (section.heightM + section.sunkM) * up;
   const high = pad.top + deep + pad.foot;
   const at = ({ x, y }: Spot): [number, number] => [pad.side + x * scale, pad.top + deep - y * up];
@@ -43,7 +44,7 @@ export function SectionDrawing({
       role="img"
       aria-label={saidOf(section, places, preferences)}
       viewBox={`0 0 ${wide} ${high}`}
-      className="w-full min-w-[30rem] font-mono text-[13px]"
+      className="w-full font-mono text-[16px] sm:text-[12px]"
     >
       <defs>
         <clipPath id={clip}>
@@ -70,17 +71,23 @@ export function SectionDrawing({
       {places.map((place) => {
         const [x, y] = at(spotOf(section, place));
         return (
-          <g key={`${place.column} ${place.row}`}>
-            <rect x={x - 22} y={y - 11} width="44" height="20" rx="4" className="fill-sheet/90" />
-            <text x={x} y={y + 4} textAnchor="middle" className="fill-ink">
-              {temperatureFigure(place.celsius, preferences)}
-            </text>
-          </g>
+          <text
+            key={`${place.column} ${place.row}`}
+            x={x}
+            y={y + 4}
+            textAnchor="middle"
+            strokeWidth="5"
+            strokeLinejoin="round"
+            style={{ paintOrder: 'stroke' }}
+            className="fill-ink stroke-sheet/85"
+          >
+            {temperatureFigure(place.celsius, preferences)}
+          </text>
         );
       })}
-      <text x={pad.side} y={high - 10} className="fill-soft font-sans">
+      <text x={pad.side} y={high - 8} className="fill-soft font-sans">
         {lines.length === 0
-          ? 'Three places that lie in no line are needed before lines can be drawn between them.'
+          ? 'Lines need three places that do not lie in one line.'
           : `Lines every ${step} ${degrees(preferences)}`}
       </text>
     </svg>
