@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { accessibilityFaults, faultsOf, launchBrowser, signedIn } from '../support/browser';
 import { sharedApp } from '../support/shared-app';
 import { until } from '../support/until';
+import { picture } from '../api/picture';
 
 let browser: Browser;
 
@@ -64,6 +65,8 @@ describe('the heap book in the browser', () => {
     await page.keyboard.press('Enter');
     await page.getByLabel('What you saw').focus();
     await page.keyboard.type(words);
+    // past the photographs to the button
+    await page.keyboard.press('Tab');
     await page.keyboard.press('Tab');
     await page.keyboard.press('Enter');
     await page.getByRole('dialog').waitFor({ state: 'detached' });
@@ -124,6 +127,59 @@ describe('the heap book in the browser', () => {
     const page = await book('installer');
     expect(await page.getByText('Growers and owners write in this book').isVisible()).toBe(true);
     expect(await page.getByRole('button', { name: 'Fed', exact: true }).count()).toBe(0);
+    await page.context().close();
+  });
+
+  it('draws a round in section as soon as it is typed, place after place', async () => {
+    const page = await book('grower');
+    const dialog = await openForm(page, 'Probe round …');
+    await dialog.getByRole('button', { name: 'Column 1, row 1: empty' }).focus();
+    // each figure is whole with its decimal, so the next place comes by itself
+    await page.keyboard.type('21.430.525.141.252.349.9');
+    await dialog.getByRole('button', { name: 'Column 2, row 3: 49.9' }).waitFor();
+    expect(await accessibilityFaults(page)).toEqual([]);
+    await dialog.getByRole('button', { name: 'Write the round down' }).click();
+    await dialog.waitFor({ state: 'detached' });
+    const drawing = page.getByRole('img', { name: /^Heap in section/ });
+    await drawing.waitFor();
+    await until('the round is drawn', async () =>
+      /column 2, row 2: 52\.3/.test((await drawing.getAttribute('aria-label')) ?? ''),
+    );
+    expect(await drawing.locator('g path').count()).toBeGreaterThan(3);
+    await page.context().close();
+  });
+
+  it('takes a photograph with an entry, shows it small and whole, and takes it out again', async () => {
+    const page = await book('grower');
+    const words = `With a picture ${Date.now()}`;
+    const dialog = await openForm(page, 'Note');
+    await dialog.getByLabel('What you saw').fill(words);
+    const buffer = Buffer.from(await picture());
+    await dialog
+      .getByLabel('Photographs')
+      .setInputFiles({ name: 'heap.jpg', mimeType: 'image/jpeg', buffer });
+    await dialog.getByRole('button', { name: 'Write it down' }).click();
+    await dialog.waitFor({ state: 'detached' });
+    const entry = page.getByRole('listitem').filter({ hasText: words }).last();
+    const small = entry.getByRole('button', { name: /^Photograph 1 of 1/ });
+    await small.click();
+    const whole = page.getByRole('dialog').getByRole('img');
+    await until('the picture is loaded', () =>
+      whole.evaluate((image) => image instanceof HTMLImageElement && image.naturalWidth === 640),
+    );
+    await page.getByRole('button', { name: 'Take it out …' }).click();
+    await page.getByRole('button', { name: 'Take it out for good' }).click();
+    await small.waitFor({ state: 'detached' });
+    await page.context().close();
+  });
+
+  it('reckons a mix while it is typed, and says when both goals cannot be met', async () => {
+    const page = await book('grower');
+    const dialog = await openForm(page, 'Mix calculator');
+    await dialog.getByLabel('Material', { exact: true }).selectOption('sawdust');
+    await dialog.getByLabel(/^Wanted C:N/).fill('20');
+    await dialog.getByText(/No amount of sawdust brings C:N to 20/).waitFor();
+    expect(await accessibilityFaults(page)).toEqual([]);
     await page.context().close();
   });
 });

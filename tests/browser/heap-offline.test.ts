@@ -109,6 +109,7 @@ describe('the heap book without a line', () => {
     );
     await page.getByLabel('What you saw').fill(words);
     await page.getByRole('button', { name: 'Write it down' }).click();
+    await page.getByRole('dialog').waitFor({ state: 'detached' });
     await page.getByText('Waiting to be sent: 1').waitFor();
     expect(await entriesWith(page, words)).toBe(1);
     await page.getByRole('button', { name: 'Send now' }).click();
