@@ -2,24 +2,22 @@
 import type { NightSummary } from '@/lib/analysis/nights';
 import { decimal, share, temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { nightDate } from '@/lib/wording/duty';
 import { type StripPaths, stripPaths } from './strip-paths';
 
 export interface NightLine {
   night: string;
-  date: string;
   /** What must be said of it beside its date: that it lasts, or how little of it was read. */
-  note: string | null;
+  note?: string;
   /** Under 90 % was read: the row is marked. */
-  isThin: boolean;
+  isThin?: true;
   strips: StripPaths[];
-  /** Null where it is not known. */
   ran: string;
-  heat: string | null;
-  starts: string;
-  lowest: string | null;
-  isCold: boolean;
-  outdoors: string | null;
+  starts: number;
+  /** Left out where it is not known. */
+  heat?: string;
+  lowest?: string;
+  outdoors?: string;
+  isCold?: true;
 }
 
 export function nightLine(
@@ -27,23 +25,23 @@ export function nightLine(
   frostLimitC: number | null,
   preferences: Preferences,
 ): NightLine {
-  const figure = (one: { value: number } | null) =>
-    one === null ? null : temperatureFigure(one.value, preferences);
+  const figure = (one: { value: number }) => temperatureFigure(one.value, preferences);
   const notes = [
     ...(night.complete ? [] : ['so far']),
     ...(night.coverageLow ? [`${share(night.coverage)} of it was read`] : []),
   ];
+  const isCold = frostLimitC !== null && night.lowest !== null && night.lowest.value < frostLimitC;
   return {
     night: night.night,
-    date: nightDate(night.night),
-    note: notes.length === 0 ? null : notes.join(', '),
-    isThin: night.coverageLow,
     strips: night.strips.map(({ spans }) => stripPaths(spans, (night.ends - night.from) / 1000)),
     ran: share(night.dutyOfNight),
-    heat: night.heat === null ? null : decimal(night.heat.kWh, 1),
-    starts: String(night.starts),
-    lowest: figure(night.lowest),
-    isCold: frostLimitC !== null && night.lowest !== null && night.lowest.value < frostLimitC,
-    outdoors: figure(night.outdoorsLowest),
+    starts: night.starts,
+    // what there is not is not sent: it would be sent four hundred times
+    ...(notes.length === 0 ? {} : { note: notes.join(', ') }),
+    ...(night.coverageLow ? { isThin: true } : {}),
+    ...(night.heat === null ? {} : { heat: decimal(night.heat.kWh, 1) }),
+    ...(night.lowest === null ? {} : { lowest: figure(night.lowest) }),
+    ...(night.outdoorsLowest === null ? {} : { outdoors: figure(night.outdoorsLowest) }),
+    ...(isCold ? { isCold: true } : {}),
   };
 }

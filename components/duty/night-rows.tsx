@@ -3,6 +3,7 @@ import { useRouter } from 'next/navigation';
 import { memo, startTransition, useCallback, useEffect, useState, type MouseEvent } from 'react';
 import { flushSync } from 'react-dom';
 import { classes } from '@/components/ui/classes';
+import { nightLabel } from '@/lib/units/time';
 import type { NightLine } from './night-line';
 import { NightStrip, QUARTERS } from './night-strip';
 
@@ -114,9 +115,9 @@ const NightRow = memo(function NightRow({
           aria-current={isOpen ? 'true' : undefined}
           className="flex min-h-6 items-center underline decoration-line underline-offset-4 hover:decoration-ink aria-[current=true]:font-semibold"
         >
-          {line.date}
-          {line.isThin ? <span aria-hidden="true">*</span> : null}
-          {line.note === null ? null : <span className="sr-only"> ({line.note})</span>}
+          {nightLabel(line.night)}
+          {line.isThin === true ? <span aria-hidden="true">*</span> : null}
+          {line.note === undefined ? null : <span className="sr-only"> ({line.note})</span>}
         </a>
       </th>
       <td className={classes('w-1/2 min-w-32 px-0 py-0.5', QUARTERS)}>
@@ -129,9 +130,9 @@ const NightRow = memo(function NightRow({
       <td className={cell}>{line.ran}</td>
       {hasHeat ? <td className={cell}>{line.heat ?? unknown}</td> : null}
       <td className={classes(cell, 'max-sm:hidden')}>{line.starts}</td>
-      <td className={classes(cell, 'max-sm:hidden', line.isCold && 'font-semibold text-alarm')}>
+      <td className={classes(cell, 'max-sm:hidden', line.isCold === true && 'font-semibold text-alarm')}>
         {line.lowest ?? unknown}
-        {line.isCold ? <span className="sr-only"> under the frost limit</span> : null}
+        {line.isCold === true ? <span className="sr-only"> under the frost limit</span> : null}
       </td>
       <td className={classes(cell, 'text-outdoors max-sm:hidden')}>{line.outdoors ?? unknown}</td>
     </tr>

@@ -1,4 +1,4 @@
-import type { StripPaths } from './strip-paths';
+import { type StripPaths, USUAL_LENGTH } from './strip-paths';
 
 /**
  * The two patterns of all strips of the page. A strip is drawn in seconds by its own height and then stretched, so each
@@ -43,7 +43,7 @@ const HELD = 'stroke-[url(#duty-narrow-held)] sm:stroke-[url(#duty-held)]';
 
 /** One channel's night from noon to noon. Its words stand beside it, so to a reader that cannot see it it is nothing. */
 export function NightStrip({ strip, tall = false }: { strip: StripPaths; tall?: boolean }) {
-  const { length, run, rest, held, handOn, handOff } = strip;
+  const { length = USUAL_LENGTH, run, rest, held, handOn, handOff } = strip;
   return (
     <svg
       aria-hidden="true"
@@ -51,17 +51,17 @@ export function NightStrip({ strip, tall = false }: { strip: StripPaths; tall?: 
       preserveAspectRatio="none"
       className={tall ? 'block h-7 w-full' : 'block h-3.5 w-full'}
     >
-      {rest === '' ? null : <path d={rest} className={REST} />}
-      {held === '' ? null : <path d={held} className={HELD} />}
-      {run === '' ? null : <path d={run} className="stroke-ember" />}
-      {handOn === '' ? null : (
+      {rest === undefined ? null : <path d={rest} className={REST} />}
+      {held === undefined ? null : <path d={held} className={HELD} />}
+      {run === undefined ? null : <path d={run} className="stroke-ember" />}
+      {handOn === undefined ? null : (
         <path
           d={handOn}
           vectorEffect="non-scaling-stroke"
           className="fill-ember/45 stroke-ink stroke-[1.5]"
         />
       )}
-      {handOff === '' ? null : (
+      {handOff === undefined ? null : (
         <path
           d={handOff}
           vectorEffect="non-scaling-stroke"

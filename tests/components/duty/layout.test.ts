@@ -3,6 +3,7 @@ import { barsPath, BARS_HIGH, overviewTicks } from '@/components/duty/overview-l
 import { stripPaths } from '@/components/duty/strip-paths';
 import { arrowStep, dayAt, type YearDay, yearLayout } from '@/components/duty/year-layout';
 import { nightBefore } from '@/lib/analysis/night';
+import type { StripSpan } from '@/lib/analysis/nights';
 
 /** Seconds from the night's noon at which strokes of a path begin and end. */
 function strokesOf(path: string): [number, number][] {
@@ -25,13 +26,22 @@ describe('a strip', () => {
       ],
       86_400,
     );
-    expect(strokesOf(strip.run)).toEqual([
+    expect(strokesOf(strip.run ?? '')).toEqual([
       [600, 1800],
       [3600, 4200],
     ]);
-    expect(strokesOf(strip.rest)).toEqual([[1800, 3600]]);
-    expect(strokesOf(strip.held)).toEqual([[4200, 9000]]);
-    expect(strip.handOn + strip.handOff).toBe('');
+    expect(strokesOf(strip.rest ?? '')).toEqual([[1800, 3600]]);
+    expect(strokesOf(strip.held ?? '')).toEqual([[4200, 9000]]);
+    expect(Object.keys(strip).sort()).toEqual(['held', 'rest', 'run']);
+  });
+
+  it('draws spans that meet as one, and none of no length', () => {
+    const spans: StripSpan[] = [
+      ['run', 60, 120, true],
+      ['run', 120, 120, true],
+      ['run', 120, 300, true],
+    ];
+    expect(stripPaths(spans, 82_800)).toEqual({ length: 82_800, run: 'm60 0h240' });
   });
 
   it('outlines what was by hand, on apart from off', () => {
