@@ -143,12 +143,15 @@ async function keptSteps(
   step: 300 | 3600,
 ): Promise<Map<number, SteppedSeries>> {
   if (numbers.length === 0) return new Map();
+  // ordered once before they are gathered, not once a column; date_part reckons in floats, extract in decimals
   const { rows } = await db.execute<StepsRow>(sql`
-    select point, json_agg((extract(epoch from at) * 1000)::bigint order by at) as at,
-      json_agg(least order by at) as least, json_agg(mean order by at) as mean,
-      json_agg(greatest order by at) as greatest
-    from rollup
-    where point in (${listed(numbers)}) and step_s = ${step} and at >= ${new Date(begin)} and at < ${new Date(to)}
+    select point, json_agg(ms) as at, json_agg(least) as least, json_agg(mean) as mean, json_agg(greatest) as greatest
+    from (
+      select point, (date_part('epoch', at) * 1000)::bigint as ms, least, mean, greatest from rollup
+      where point in (${listed(numbers)}) and step_s = ${step}
+        and at >= ${new Date(begin)} and at < ${new Date(to)}
+      order by point, at
+    ) steps
     group by point`);
   return new Map(rows.map(({ point: number, ...series }) => [Number(number), series]));
 }
