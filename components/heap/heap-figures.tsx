@@ -18,8 +18,11 @@ export function HeapFigures({
   const first = curve[0];
   const built = entries.find((entry) => entry.kind === 'built');
   const since = entries.filter((entry) => built === undefined || entry.at >= built.at);
+  const sizes = since.flatMap(({ at, volume }) =>
+    volume === null ? [] : [{ at: Date.parse(at), volumeM3: volume }],
+  );
   const sunk = shrinkage(
-    since.flatMap(({ at, volume }) => (volume === null ? [] : [{ at: Date.parse(at), volumeM3: volume }])),
+    sizes,
     since.filter((entry) => entry.kind === 'fed').map((entry) => Date.parse(entry.at)),
   );
   const count = (kind: string) => since.filter((entry) => entry.kind === kind).length;
@@ -64,6 +67,19 @@ export function HeapFigures({
           { name: 'Turned', value: `${count('turned')}×` },
         ]}
       />
+      {sizes.length < 3 ? null : (
+        <details className="border-t border-line">
+          <summary className="flex min-h-11 cursor-pointer items-center text-[0.9rem] text-soft underline underline-offset-4">
+            Its size over time
+          </summary>
+          <Figures
+            rows={sizes.map(({ at, volumeM3 }) => ({
+              name: longDay(at, zone),
+              value: `${decimal(volumeM3, 1)} m³`,
+            }))}
+          />
+        </details>
+      )}
     </Panel>
   );
 }

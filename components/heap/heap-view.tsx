@@ -52,8 +52,8 @@ function OneHeap({
       massKg === null ? [] : [{ material: name, kilograms: massKg }],
     ),
     waterL: mix?.waterL ?? 0,
-    own: heap.materials.map(({ name, density, moisture, carbon, nitrogen }) => ({
-      ...{ name, density, moisture, carbon, nitrogen },
+    own: heap.materials.map(({ id, name, density, moisture, carbon, nitrogen }) => ({
+      ...{ id, name, density, moisture, carbon, nitrogen },
     })),
     mayWrite,
   };

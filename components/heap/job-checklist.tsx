@@ -3,6 +3,7 @@ import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Checkbox } from '@/components/ui/check';
+import { Field, control } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import type { HeapJob } from '@/lib/schema/heap-job';
@@ -40,7 +41,24 @@ export function JobChecklist({ house, job, mayWrite }: { house: string; job: Hea
         />
       ))}
       {mayWrite ? (
-        <div className="mt-1 flex flex-wrap gap-2">
+        <div className="mt-1 flex flex-wrap items-end gap-2">
+          <Field label="Its day" className="w-44">
+            {(links) => (
+              <input
+                type="date"
+                className={control}
+                defaultValue={job.dueOn}
+                disabled={isBusy}
+                // a day that is still being typed is no day yet
+                onBlur={({ target: { value } }) =>
+                  value !== '' && value !== job.dueOn
+                    ? void change('PATCH', { dueOn: value }, 'Moved.')
+                    : undefined
+                }
+                {...links}
+              />
+            )}
+          </Field>
           <Button busy={isBusy} onClick={() => void change('PATCH', { done: true }, `Done: ${job.title}.`)}>
             Done
           </Button>

@@ -1,6 +1,5 @@
 'use client';
 import { useState } from 'react';
-import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { NumberField } from '@/components/ui/field';
 import { Figures } from '@/components/ui/panel';
@@ -8,12 +7,11 @@ import { decimal, share } from '@/lib/units/format';
 import { MaterialFields } from './material-fields';
 import { MaterialPicker } from './material-picker';
 import { mixDraft, reckon, type MixDraft, type MixStart } from './mix-draft';
-import { OwnMaterialForm } from './own-material-form';
+import { OwnMaterials } from './own-materials';
 
 /** Reckons while it is typed: nothing is sent, and nothing in the book is changed. */
 export function MixDialog({ start, onClose }: { start: MixStart; onClose: () => void }) {
   const [draft, setDraft] = useState<MixDraft>(() => mixDraft(start));
-  const [isOwnOpen, setOwnOpen] = useState(false);
   const put = (change: Partial<MixDraft>) => setDraft((before) => ({ ...before, ...change }));
   const { mix, words, errors } = reckon(draft, start.own);
   const rowErrors = Object.fromEntries(
@@ -90,13 +88,7 @@ export function MixDialog({ start, onClose }: { start: MixStart; onClose: () => 
           ))}
         </ul>
       </fieldset>
-      {!start.mayWrite ? null : isOwnOpen ? (
-        <OwnMaterialForm onClose={() => setOwnOpen(false)} />
-      ) : (
-        <Button className="self-start" onClick={() => setOwnOpen(true)}>
-          A material of your own …
-        </Button>
-      )}
+      {start.mayWrite ? <OwnMaterials own={start.own} /> : null}
     </Dialog>
   );
 }

@@ -15,7 +15,7 @@ export interface MixStart {
   /** What the heap is made of, to begin with. */
   parts: { material: string; kilograms: number }[];
   waterL: number;
-  own: OwnMaterial[];
+  own: (OwnMaterial & { id: string })[];
   mayWrite: boolean;
 }
 
