@@ -13,7 +13,8 @@ import {
   trendWords,
 } from '@/lib/wording/duty-recovery';
 import { kindWord } from '@/lib/wording/heap';
-import { RecoveryCurves, type RestCurve } from './recovery-curves';
+import { RecoveryCurves } from './recovery-curves';
+import type { RestCurve } from './recovery-group';
 
 export interface RecoveryData {
   weeks: RecoveryWeek[];

@@ -18,6 +18,7 @@ const PAGES = {
   wiring: '/long-house/wiring',
   heapBook: '/long-house/heap-book',
   duty: '/long-house/duty',
+  houses: '/houses',
   alarms: '/long-house/alarms',
   people: '/people',
   account: '/account',
@@ -81,6 +82,15 @@ async function gzipped(context: BrowserContext, urls: string[]): Promise<number>
   return round3(bytes / 1000);
 }
 
+export async function onSlowPhone(context: BrowserContext): Promise<Page> {
+  const page = await context.newPage();
+  const line = await context.newCDPSession(page);
+  await line.send('Network.enable');
+  await line.send('Network.emulateNetworkConditions', SLOW_LINE);
+  await line.send('Emulation.setCPUThrottlingRate', { rate: SLOWER });
+  return page;
+}
+
 async function speedOf(browser: Browser, app: RunningApp, at: string) {
   const paint: number[] = [];
   const blocked: number[] = [];
@@ -88,12 +98,8 @@ async function speedOf(browser: Browser, app: RunningApp, at: string) {
     // a context of its own: nothing is in its cache
     const context = await signedIn(browser, app, OWNER, { viewport: { width: 360, height: 740 } });
     try {
-      const page = await context.newPage();
+      const page = await onSlowPhone(context);
       await page.addInitScript(watchLoad);
-      const line = await context.newCDPSession(page);
-      await line.send('Network.enable');
-      await line.send('Network.emulateNetworkConditions', SLOW_LINE);
-      await line.send('Emulation.setCPUThrottlingRate', { rate: SLOWER });
       await page.goto(at, { waitUntil: 'load' });
       await quiet(page);
       const { paintMs, firstPaintMs, tasks } = await page.evaluate(() => window.budget);
