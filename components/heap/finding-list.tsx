@@ -31,10 +31,16 @@ export function FindingList({
       <h2 id="findings" className="sr-only">
         What to do about the heap
       </h2>
-      <div className="grid gap-3 empty:hidden lg:grid-cols-2 lg:items-start">
-        {open.map((finding) => (
-          <OpenFinding key={finding.kind} {...{ finding, house, heap, mayWrite, preferences }} />
-        ))}
+      <div className="grid gap-3 lg:grid-cols-2 lg:items-start">
+        {[open.filter((one) => one.urgency !== 'look'), open.filter((one) => one.urgency === 'look')].map(
+          (column, place) => (
+            <div key={place} className="flex flex-col gap-3 empty:hidden">
+              {column.map((finding) => (
+                <OpenFinding key={finding.kind} {...{ finding, house, heap, mayWrite, preferences }} />
+              ))}
+            </div>
+          ),
+        )}
       </div>
       {dismissed.length === 0 ? null : (
         <details className="rounded-lg border border-line px-4">

@@ -1,10 +1,11 @@
 import { Panel } from '@/components/ui/panel';
 import type { HeapJob } from '@/lib/schema/heap-job';
+import { JOB_TEMPLATES, nextDay } from '@/lib/wording/heap-jobs';
 import { daysWord, dueWord } from '@/lib/wording/heap-job-days';
 import { CalendarLinks } from './calendar-links';
 import { JobButton } from './job-button';
 import { JobChecklist } from './job-checklist';
-import { YearButton } from './year-button';
+import { YearButton, type YearJob } from './year-button';
 
 /** The heap's year: what is due when, with its list; and the calendar that carries it. */
 export function JobsPanel({
@@ -38,7 +39,7 @@ export function JobsPanel({
             None yet. A heap has four: build it, make it ready for the first frost, let it go in spring,
             rebuild it.
           </p>
-          {mayWrite ? <YearButton house={house} heap={heap} today={today} latitude={latitude} /> : null}
+          {mayWrite ? <YearButton house={house} heap={heap} jobs={yearOf(today, latitude)} /> : null}
         </div>
       ) : null}
       <ul className="divide-y divide-line border-t border-line empty:hidden">
@@ -76,4 +77,11 @@ export function JobsPanel({
       <CalendarLinks links={links} />
     </Panel>
   );
+}
+
+function yearOf(today: string, latitude: number): YearJob[] {
+  return JOB_TEMPLATES.map(({ kind, title, day, checklist }) => ({
+    ...{ kind, title, dueOn: nextDay(day, today, latitude) },
+    checklist: checklist.map((text) => ({ text })),
+  }));
 }

@@ -3,21 +3,23 @@ import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { send } from '@/components/ui/send';
-import { JOB_TEMPLATES, nextDay } from '@/lib/wording/heap-jobs';
-import type { JobTarget } from './job-target';
+
+export interface YearJob {
+  kind: string;
+  title: string;
+  dueOn: string;
+  checklist: { text: string }[];
+}
 
 /** Sets down the four jobs of a heap's year, each on the next such day; days and lists are then the holding's own. */
-export function YearButton({ house, heap, today, latitude }: JobTarget & { latitude: number }) {
+export function YearButton({ house, heap, jobs }: { house: string; heap: string; jobs: YearJob[] }) {
   const router = useRouter();
   const [isBusy, setBusy] = useState(false);
   const [failure, setFailure] = useState<string | null>(null);
   async function setDown() {
     setBusy(true);
-    for (const { kind, title, day, checklist } of JOB_TEMPLATES) {
-      const answer = await send('POST', `/houses/${house}/heap-jobs`, {
-        ...{ source: heap, kind, title, dueOn: nextDay(day, today, latitude) },
-        checklist: checklist.map((text) => ({ text })),
-      });
+    for (const job of jobs) {
+      const answer = await send('POST', `/houses/${house}/heap-jobs`, { source: heap, ...job });
       if (answer.ok) continue;
       setFailure(answer.message);
       break;
