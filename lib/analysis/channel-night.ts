@@ -1,6 +1,7 @@
 /** One channel over one night: its seconds, its draws, and the heat and electricity of each. */
 import { type Heat, heatSum, loopHeat, NO_HEAT } from './heat';
 import type { ChannelNight, DrawHeat, HeatForPower, Missing, NightChannel, NightHeat } from './nights';
+import { round } from './rounding';
 import { running, type Running, runsOf } from './running';
 import type { Extent, Series } from './series';
 import { channelSpans, secondsOf, type Span, startsOf } from './spans';
@@ -13,8 +14,6 @@ export interface ChannelWork {
   heat: (Heat & { assumed: boolean; ranS: number }) | { why: Missing };
   powerKWh: number | { why: Missing };
 }
-
-export const round = (value: number, decimals: number) => Number(value.toFixed(decimals));
 
 /** @returns a channel's night over [night.from, to); figures are cut to what they can bear */
 export function channelNight(

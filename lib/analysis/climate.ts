@@ -1,6 +1,7 @@
 /** How a house kept over a night: how much warmer than outdoors, how damp, and whether leaves were wet. */
 import { saturationPressure } from '@/lib/physics/air';
 import type { Missing, NightClimate } from './nights';
+import { round } from './rounding';
 import { type Extent, holds, liner, type Series, unionMs } from './series';
 
 const HIGH_HUMIDITY = 90;
@@ -23,7 +24,7 @@ export function climateOf(points: ReadonlyMap<string, Series>, fromMs: number, t
   else if (air.length === 0) missing.underDewPointHours = 'no-readings';
   const hours = (ms: number) => Math.round(ms / 3600) / 1000;
   return {
-    liftDegreeHours: missing.liftDegreeHours ? null : round(liftOf(air, outdoors, fromMs, toMs)),
+    liftDegreeHours: missing.liftDegreeHours ? null : round(liftOf(air, outdoors, fromMs, toMs), 2),
     over90Hours: missing.over90Hours ? null : hours(over(humidity, fromMs, toMs)),
     underDewPointHours: missing.underDewPointHours
       ? null
@@ -31,8 +32,6 @@ export function climateOf(points: ReadonlyMap<string, Series>, fromMs: number, t
     missing,
   };
 }
-
-const round = (value: number) => Number(value.toFixed(2));
 
 /** K·h between two straight lines, the mean of several points on each side. */
 function liftOf(air: readonly Series[], outdoors: readonly Series[], fromMs: number, toMs: number): number {

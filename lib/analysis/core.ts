@@ -1,4 +1,5 @@
 /** How a heap's core goes from dawn to dawn. */
+import { median } from './median';
 
 export interface Dawn {
   /** Epoch ms. */
@@ -41,11 +42,4 @@ export function coreTrend(dawns: readonly Dawn[]): CoreTrend | null {
     days: Math.round((last.at - first.at) / 86_400_000),
     isLastingFall: changeK < -LEAST_FALL_K && -changeK > 3 * wander,
   };
-}
-
-function median(values: readonly number[]): number {
-  const sorted = values.toSorted((a, b) => a - b);
-  const middle = Math.floor(sorted.length / 2);
-  const upper = sorted[middle] ?? 0;
-  return sorted.length % 2 === 1 ? upper : (upper + (sorted[middle - 1] ?? upper)) / 2;
 }

@@ -1,5 +1,5 @@
 /** A night of a whole house, with every channel of it: of one without any source as well. */
-import { channelNight, heatForPower, round, shownHeat } from './channel-night';
+import { channelNight, heatForPower, shownHeat } from './channel-night';
 import { climateOf } from './climate';
 import { type Heat, heatSum, NO_HEAT } from './heat';
 import { hoursBetween, type Night } from './night';
@@ -10,6 +10,7 @@ import {
   type NightHouse,
   SUMMARY_VERSION,
 } from './nights';
+import { round } from './rounding';
 import { coverageOf, lowestOf, secondsUnder, type Series } from './series';
 import { readingsOf } from './summarise';
 

@@ -5,6 +5,7 @@
  * One estimate that lies far from the others counts for less (Huber 1964), so that a rest disturbed by a watering cannot
  * carry a week away.
  */
+import { median } from './median';
 import { t95 } from './student';
 
 export interface Measured {
@@ -87,11 +88,4 @@ function betweenVariance(all: readonly Measured[], limits: readonly number[]): n
     else high = middle;
   }
   return (low + high) / 2;
-}
-
-export function median(values: readonly number[]): number {
-  const sorted = values.toSorted((a, b) => a - b);
-  const middle = Math.floor(sorted.length / 2);
-  const upper = sorted[middle] ?? 0;
-  return sorted.length % 2 === 1 ? upper : (upper + (sorted[middle - 1] ?? upper)) / 2;
 }

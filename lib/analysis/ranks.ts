@@ -1,6 +1,6 @@
 /** Comparisons by rank alone, with exact chances: no figure's distribution is supposed, and no dice are thrown. */
 import type { Estimate } from './recovery';
-import { median } from './pool';
+import { median } from './median';
 
 /** Two-sided, so a fortieth on either side. */
 const TAIL = 0.025;

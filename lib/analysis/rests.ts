@@ -6,6 +6,7 @@ import type { NightRecovery } from './nights';
 import { LEAST_TAUS, pooledRecovery } from './recovery';
 import { type Drift, fitCurve, LEAST_READINGS } from './rest-curve';
 import type { RestFit, RestWhy } from './rest-fit';
+import { round } from './rounding';
 import { runsOf } from './running';
 import type { Extent, Reading, Series } from './series';
 import type { Span } from './spans';
@@ -90,8 +91,6 @@ function fitRest(pause: Extent, base: Series, core: Series | null): RestFit {
 
 /** Six figures: a rate is a small number, and rounding must not be seen in what is pooled from it. */
 const figures = (value: number) => Number(value.toPrecision(6));
-const round = (value: number, decimals: number) => Number(value.toFixed(decimals));
-
 function within(series: Series, { from, to }: Extent): Reading[] {
   return series.good.filter(({ at }) => at >= from && at < to);
 }

@@ -1,5 +1,5 @@
 /** Sums a night of a source up from what was recorded: making it again gives the same. */
-import { channelNight, type ChannelWork, heatForPower, round, shownHeat } from './channel-night';
+import { channelNight, type ChannelWork, heatForPower, shownHeat } from './channel-night';
 import { climateOf } from './climate';
 import { dawnOf } from './dawn';
 import { type Heat, heatSum, NO_HEAT } from './heat';
@@ -15,6 +15,7 @@ import {
 import { coverageOf, type Extent, lowestOf, nearest, secondsUnder, type Series } from './series';
 import type { RestFit } from './rest-fit';
 import { nightRecovery, restsOf } from './rests';
+import { round } from './rounding';
 import type { Span } from './spans';
 
 /**
