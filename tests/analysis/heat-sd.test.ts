@@ -31,7 +31,7 @@ function measured(flowError = 0, intakeError = 0, backError = 0, delayS = 0) {
 }
 
 describe('the deviation of heat', () => {
-  it('is what 2,000 wrong flows and probes make of it', () => {
+  it('is what 2,000 wrong flows and probes make of it', { timeout: 60_000 }, () => {
     const { normal } = chance(17);
     const kWh = Array.from({ length: 2000 }, () =>
       measured(SD.flow * normal(), SD.probe * normal(), SD.probe * normal()),

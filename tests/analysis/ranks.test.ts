@@ -23,7 +23,7 @@ describe('two groups by their ranks', () => {
     expect(shiftOf([1, 1, 1, 1], [1, 1, 1, 1])?.p).toBe(1);
   });
 
-  it('are found different in one of twenty cases at most where nothing is', () => {
+  it('are found different in one of twenty cases at most where nothing is', { timeout: 60_000 }, () => {
     const { normal } = chance(7);
     let found = 0;
     for (let run = 0; run < 2000; run += 1) {
@@ -47,7 +47,7 @@ describe('a slope by the median of pairs', () => {
     expect(line(5)).toMatchObject({ low: 1, high: 7 });
   });
 
-  it('holds the true slope in 95 % of cases at least', () => {
+  it('holds the true slope in 95 % of cases at least', { timeout: 60_000 }, () => {
     const { normal } = chance(11);
     let hits = 0;
     for (let run = 0; run < 1000; run += 1) {
