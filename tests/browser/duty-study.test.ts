@@ -176,8 +176,11 @@ describe('The year', () => {
 
 describe('Heat against outdoors', () => {
   it('fetches its chart only when it is seen', async () => {
-    const page = await opened(DUTY);
+    const page = await context.newPage();
     const faults = faultsOf(page);
+    // a phone, where the nights above fill more than the screen
+    await page.setViewportSize({ width: 360, height: 600 });
+    await page.goto(DUTY);
     await page.waitForLoadState('networkidle');
     expect(await page.locator('.recharts-surface').count()).toBe(0);
     await page.getByRole('heading', { name: 'Heat against outdoors' }).scrollIntoViewIfNeeded();
