@@ -1,5 +1,6 @@
 'use client';
 import { Area, ComposedChart, ErrorBar, Line, Scatter, XAxis, YAxis } from 'recharts';
+import { scaleLinear } from 'd3-scale';
 import { useEffect, useRef, useState } from 'react';
 
 export interface OutdoorsChartProps {
@@ -16,6 +17,9 @@ const AXIS = { fontSize: 10.5, fontFamily: 'var(--face-figure)', fill: 'var(--so
 /** Nights as dots with their deviation; the line, its interval darker, that of a single night lighter. */
 export default function HeatOutdoorsChart({ unit, nights, curve }: OutdoorsChartProps) {
   const place = useRef<HTMLDivElement>(null);
+  const cold = nights.map((night) => night.outdoors);
+  // whole degrees beyond the outermost nights, so that round figures stand on the axis
+  const ends = [Math.floor(Math.min(...cold)), Math.ceil(Math.max(...cold))];
   const [width, setWidth] = useState(0);
   useEffect(() => {
     const element = place.current;
@@ -30,14 +34,14 @@ export default function HeatOutdoorsChart({ unit, nights, curve }: OutdoorsChart
         <ComposedChart
           width={width}
           height={208}
-          margin={{ top: 14, right: 8, bottom: 2, left: -22 }}
+          margin={{ top: 14, right: 22, bottom: 2, left: -22 }}
           accessibilityLayer={false}
         >
           <XAxis
             dataKey="outdoors"
             type="number"
-            domain={['dataMin - 0.5', 'dataMax + 0.5']}
-            tickCount={6}
+            domain={ends}
+            ticks={scaleLinear(ends, [0, 1]).ticks(6)}
             tickFormatter={figure}
             tick={AXIS}
             stroke="var(--line)"
@@ -69,13 +73,18 @@ export default function HeatOutdoorsChart({ unit, nights, curve }: OutdoorsChart
             dot={false}
             isAnimationActive={false}
           />
-          <Scatter data={nights} dataKey="kWh" fill="var(--ink)" isAnimationActive={false}>
+          <Scatter data={nights} dataKey="kWh" shape={<Dot />} isAnimationActive={false}>
             <ErrorBar dataKey="sd" direction="y" width={0} strokeWidth={1} stroke="var(--soft)" />
           </Scatter>
         </ComposedChart>
       )}
     </div>
   );
+}
+
+/** Small: a winter's nights lie close together. */
+function Dot({ cx, cy }: { cx?: number; cy?: number }) {
+  return <circle cx={cx} cy={cy} r="2" className="fill-ink" />;
 }
 
 /** With a true minus, as everywhere. */

@@ -1,5 +1,5 @@
 /** Where the nights of the overview stand: a bar a night, and dates under them. Pure. */
-import { nightDate } from '@/lib/wording/duty';
+import { nightLabel } from '@/lib/units/time';
 
 export interface OverviewNight {
   night: string;
@@ -43,7 +43,7 @@ export function overviewTicks(nights: readonly string[], most = 8): OverviewTick
     .filter((_, which) => which % every === 0)
     .map((place) => ({
       left: round((100 * (place + 0.5)) / nights.length),
-      label: isMonths ? monthOf(nights[place] ?? '') : nightDate(nights[place] ?? ''),
+      label: isMonths ? monthOf(nights[place] ?? '') : nightLabel(nights[place] ?? ''),
     }));
 }
 
@@ -51,4 +51,4 @@ function isMark(night: string, isMonths: boolean): boolean {
   return isMonths ? night.endsWith('-01') : new Date(`${night}T12:00:00Z`).getUTCDay() === 0;
 }
 
-const monthOf = (night: string) => nightDate(night).split(' ')[1] ?? '';
+const monthOf = (night: string) => nightLabel(night).split(' ')[1] ?? '';

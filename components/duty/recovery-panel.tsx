@@ -36,12 +36,12 @@ export function RecoveryPanel({
   preferences: Preferences;
 }) {
   const ends = endsOf(recovery.weeks);
-  const title = 'How the heap comes back after a draw';
+  const title = 'How it comes back after a draw';
   if (ends === null)
     return (
       <Panel title={title}>
         <p className="text-soft">
-          Not known yet: no rest was long enough, or the heap is not read beside the pipe.
+          Not known yet: no rest was long enough, or it is not read beside the pipe.
         </p>
       </Panel>
     );
@@ -49,7 +49,7 @@ export function RecoveryPanel({
   const isOne = first.week === last.week;
   return (
     <Panel title={title}>
-      <p className="text-[0.9rem] text-soft">Each line is one rest; the heap beside the pipe</p>
+      <p className="text-[0.9rem] text-soft">Each line is one rest; beside the pipe</p>
       <RecoveryCurves
         preferences={preferences}
         groups={[

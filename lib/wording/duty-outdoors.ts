@@ -11,7 +11,7 @@ const why: Record<NoLine, string> = {
   'like-nights': 'all nights were about as cold as each other',
 };
 
-/** @example "For each degree colder outdoors the gate heap brings 0.31 kWh (0.22 to 0.40) more a night." */
+/** @example "Each °C colder outdoors goes with 0.31 kWh (0.22 to 0.40) more a night from the gate heap, over 34 nights; …" */
 export function outdoorsWords(
   line: HeatLine | { why: NoLine },
   nights: readonly HeatNight[],
@@ -27,5 +27,5 @@ export function outdoorsWords(
   const interval = `${perDegree(value)}${space}kWh (${perDegree(low)} to ${perDegree(high)})`;
   if (low <= 0 && high >= 0)
     return `Over ${nights.length} nights, no heat that goes with the cold outdoors can be told from chance: ${interval} for each ${degrees(preferences)} colder.`;
-  return `For each ${degrees(preferences)} colder outdoors the ${source} brings ${interval} ${value > 0 ? 'more' : 'less'} a night, over ${nights.length} nights; single nights scatter by ${decimal(line.scatterKWh, 1)}${space}kWh.`;
+  return `Each ${degrees(preferences)} colder outdoors goes with ${interval} ${value > 0 ? 'more' : 'less'} a night from the ${source}, over ${nights.length} nights; single nights scatter by ${decimal(line.scatterKWh, 1)}${space}kWh.`;
 }

@@ -123,7 +123,9 @@ describe('heat against outdoors in words', () => {
   it('speaks in the reader’s degrees, and of no heat that chance would bring', () => {
     const line = { perColderK: { value: 0.36, low: 0.18, high: 0.54 }, scatterKWh: 0.4, curve: [] };
     const inF = { ...USUAL, temperature: 'F' as const };
-    expect(plain(outdoorsWords(line, [], 'gate heap', inF))).toContain('brings 0.20 kWh (0.10 to 0.30) more');
+    expect(plain(outdoorsWords(line, [], 'gate heap', inF))).toContain(
+      'goes with 0.20 kWh (0.10 to 0.30) more',
+    );
     const unsure = { ...line, perColderK: { value: 0.36, low: -0.1, high: 0.8 } };
     expect(outdoorsWords(unsure, [], 'gate heap', USUAL)).toContain('can be told from chance');
   });
