@@ -1,0 +1,1 @@
+-- Custom SQL migration file, put your code below! --
