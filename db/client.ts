@@ -6,14 +6,27 @@ import pg from 'pg';
 import { env } from '@/lib/server/env';
 import * as auth from './schema/auth';
 import * as heap from './schema/heap';
+import * as money from './schema/money';
 import * as people from './schema/people';
+import * as report from './schema/report';
 import * as rule from './schema/rule';
 import * as running from './schema/running';
 import * as study from './schema/study';
 import * as watch from './schema/watch';
 import * as yard from './schema/yard';
 
-export const schema = { ...auth, ...heap, ...people, ...rule, ...running, ...study, ...watch, ...yard };
+export const schema = {
+  ...auth,
+  ...heap,
+  ...money,
+  ...people,
+  ...report,
+  ...rule,
+  ...running,
+  ...study,
+  ...watch,
+  ...yard,
+};
 /** The pool's handle, or that of one transaction. */
 export type Db = PgDatabase<NodePgQueryResultHKT, typeof schema>;
 

@@ -8,23 +8,29 @@ import { findDismissal } from '@/db/queries/finding-dismissal';
 import { findHeapEntry } from '@/db/queries/heap-entry';
 import { findHeapJob } from '@/db/queries/heap-job';
 import { findHouse } from '@/db/queries/house';
+import { findImport } from '@/db/queries/import';
 import { findInterlock } from '@/db/queries/interlock';
 import { findKey, type KeyRow } from '@/db/queries/key';
 import { findLockout } from '@/db/queries/lockout';
 import { findLoop } from '@/db/queries/loop';
 import { findOwnMaterial } from '@/db/queries/material';
+import { findHeapCost } from '@/db/queries/money';
 import { findNode } from '@/db/queries/node';
 import { findMember, listInvitations, type InvitationRow, type MemberRow } from '@/db/queries/people';
 import { findPoint } from '@/db/queries/point';
 import { findProbeSet } from '@/db/queries/probe-set';
 import { isId } from '@/db/queries/reference';
+import { findReportSchedule } from '@/db/queries/report-schedule';
 import { findRule, type FoundRule } from '@/db/queries/rule';
 import { findSource } from '@/db/queries/source';
 import type { Dismissal } from '@/lib/schema/heap-finding';
 import type { HeapJob } from '@/lib/schema/heap-job';
 import type { HeapEntry, Photograph } from '@/lib/schema/heap-view';
+import type { Import } from '@/lib/schema/import';
 import type { Material } from '@/lib/schema/material';
+import type { HeapCost } from '@/lib/schema/money';
 import type { ProbeSet } from '@/lib/schema/probe-set';
+import type { ReportSchedule } from '@/lib/schema/report';
 import type {
   Channel,
   FieldNode,
@@ -49,10 +55,13 @@ export interface Things {
   entry: HeapEntry;
   photograph: Photograph;
   round: ProbeSet;
+  import: Import;
   job: HeapJob;
   dismissal: Dismissal;
   material: Material;
   calendar: OwnLink;
+  cost: HeapCost;
+  schedule: ReportSchedule;
   rule: FoundRule;
   alarm: Alarm;
   member: MemberRow;
@@ -75,11 +84,14 @@ export const FIND: { [K in ThingName]: Find<Things[K]> } = {
   lockout: (holding, ref, house) => findLockout(holding, house, ref),
   entry: (holding, ref, house) => findHeapEntry(holding, house, ref),
   photograph: (holding, ref, house) => findPhotograph(holding, house, ref),
+  import: (holding, ref, house) => findImport(holding, house, ref),
   round: (holding, ref, house) => findProbeSet(holding, house, ref),
   job: (holding, ref, house) => findHeapJob(holding, house, ref),
   dismissal: (holding, ref, house) => findDismissal(holding, house, ref),
   material: findOwnMaterial,
   calendar: findCalendarLink,
+  cost: (holding, ref, house) => findHeapCost(holding, house, ref),
+  schedule: (holding, ref, house) => findReportSchedule(holding, house, ref),
   rule: findRule,
   alarm: async (holding, ref) => (isId(ref) ? findAlarm(holding, ref) : null),
   member: findMember,

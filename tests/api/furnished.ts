@@ -50,6 +50,13 @@ export async function furnish(holding: Holding, owner: Asker): Promise<Furnished
     ...{ source: 'gate-heap', kind: 'dry', mark: 'since x', level: 1, why: 'the hose is frozen' },
   });
   await keep('material', '/materials', shown.material);
+  await keep('cost', `${at}/heap-costs`, {
+    source: 'gate-heap',
+    kind: 'pipe',
+    on: '2026-10-03',
+    amount: '85',
+  });
+  await keep('schedule', `${at}/report-schedules`, { span: 'week', to: ['owner@larkmoor.example'] });
   await keep('calendar', '/calendar-links', {});
   await keep('invitation', '/invitations', { email: 'invited@larkmoor.example', role: 'grower' });
   await keep('key', '/api-keys', { name: 'a key to end', role: 'grower' });

@@ -1,6 +1,8 @@
 import type { Operation } from '../operation';
+import * as files from './files';
 import * as heap from './heap';
 import * as heapYear from './heap-year';
+import * as money from './money';
 import * as open from './open';
 import * as people from './people';
 import * as record from './record';
@@ -18,6 +20,7 @@ export const OPERATIONS: readonly Operation[] = [
   record,
   heap,
   heapYear,
+  money,
   people,
   open,
 ].flatMap((subject) => Object.values<Operation>(subject));
