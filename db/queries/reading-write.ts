@@ -42,6 +42,23 @@ export async function storeReadings(pool: pg.Pool, rows: readonly ReadingRow[]):
   }
 }
 
+/**
+ * Stores readings, each point and time once among them, within the caller's transaction.
+ * @returns those that were new
+ */
+export async function copyStored<Row extends ReadingRow>(
+  client: pg.PoolClient,
+  rows: readonly Row[],
+): Promise<readonly Row[]> {
+  if (rows.length === 0) return rows;
+  await client.query('savepoint straight');
+  if (await copyStraight(client, rows)) return rows;
+  await client.query('rollback to savepoint straight');
+  const stored = await insertAround(client, rows);
+  await client.query('drop table arrival');
+  return rows.filter((row) => stored.has(keyOf(row)));
+}
+
 async function copyStraight(client: pg.PoolClient, rows: readonly ReadingRow[]): Promise<boolean> {
   try {
     await pipeline(binaryRows(rows), client.query(copyFrom(INTO_READING)));
@@ -55,6 +72,12 @@ async function copyStraight(client: pg.PoolClient, rows: readonly ReadingRow[]):
 /** @returns keys of the rows that were new */
 async function copyAround(client: pg.PoolClient, rows: readonly ReadingRow[]): Promise<Set<string>> {
   await client.query('begin');
+  const stored = await insertAround(client, rows);
+  await client.query('commit');
+  return stored;
+}
+
+async function insertAround(client: pg.PoolClient, rows: readonly ReadingRow[]): Promise<Set<string>> {
   await client.query('create temporary table arrival (like reading) on commit drop');
   await pipeline(
     binaryRows(rows),
@@ -64,7 +87,6 @@ async function copyAround(client: pg.PoolClient, rows: readonly ReadingRow[]): P
     `insert into reading (point, at, value, quality) select point, at, value, quality from arrival
      on conflict do nothing returning point, (extract(epoch from at) * 1000)::bigint as at`,
   );
-  await client.query('commit');
   return new Set(added.map((row) => `${row.point} ${row.at}`));
 }
 
@@ -82,7 +104,8 @@ function firstsOf(rows: readonly ReadingRow[]): boolean[] {
 const daysMade = new WeakMap<pg.Pool, Set<number>>();
 const DAY_MS = 86_400_000;
 
-async function makeMonths(pool: pg.Pool, rows: readonly ReadingRow[]): Promise<void> {
+/** Makes the partitions that rows need, each looked for once a process. */
+export async function makeMonths(pool: pg.Pool, rows: readonly { at: number }[]): Promise<void> {
   const made = daysMade.get(pool) ?? new Set();
   daysMade.set(pool, made);
   for (const row of rows) {

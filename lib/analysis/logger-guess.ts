@@ -99,9 +99,21 @@ function timed(table: Table, order: DateOrder): Timed | null {
 /**
  * @param text the file's beginning, decoded
  * @param zone of the house, in which times without an offset are read unless somebody says otherwise
+ * @param given what a person chose instead; then only heads and samples are looked for
  * @returns null where no line begins with a time
  */
-export function guessLayout(text: string, encoding: Encoding, zone: string): Guess | null {
+export function guessLayout(
+  text: string,
+  encoding: Encoding,
+  zone: string,
+  given?: FileLayout,
+): Guess | null {
+  if (given !== undefined) {
+    const { rows } = tableOf(text, given.delimiter);
+    const data = rows.slice(given.headLines).filter((cells) => cells.length > 1);
+    const columns = columnsOf(rows, given.headLines, data, given.timeColumns);
+    return { layout: given, columns, doubts: [] };
+  }
   const found = DELIMITERS.flatMap((delimiter) => {
     const table = tableOf(text, delimiter);
     return DATE_ORDERS.flatMap((order) => timed(table, order) ?? []);
@@ -140,7 +152,7 @@ function columnsOf(
   data: readonly string[][],
   timeColumns: readonly number[],
 ): GuessedColumn[] {
-  const width = Math.max(...data.slice(0, 50).map((cells) => cells.length));
+  const width = Math.max(0, ...data.slice(0, 50).map((cells) => cells.length));
   // names, and often a line of units under them; what stands above is the logger's own story
   const heads = rows.slice(Math.max(0, first - 3), first).filter((cells) => cells.length >= width - 1);
   return Array.from({ length: width }, (_, column) => {

@@ -1,10 +1,9 @@
 /** Nights as comma-separated values (RFC 4180), for a spreadsheet: one row a night and source, units in the heads. */
 import { DateTime } from 'luxon';
+import { csvLine, type CsvCell } from '@/lib/units/csv';
 import type { NightSummary } from './nights';
 
-type Cell = string | number | boolean | null;
-
-const COLUMNS: [head: string, of: (night: NightSummary, time: (at: number) => string) => Cell][] = [
+const COLUMNS: [head: string, of: (night: NightSummary, time: (at: number) => string) => CsvCell][] = [
   ['night', (night) => night.night],
   ['source', (night) => night.source],
   ['complete', (night) => night.complete],
@@ -40,17 +39,9 @@ const COLUMNS: [head: string, of: (night: NightSummary, time: (at: number) => st
   ['rests_fitted', (night) => night.recovery?.rests ?? null],
 ];
 
-/** What a spreadsheet would take for a formula is quoted out of it: keys are people's own text. */
-function cell(value: Cell): string {
-  if (value === null) return '';
-  if (typeof value !== 'string') return String(value);
-  const safe = /^[=+\-@\t\r]/.test(value) ? `'${value}` : value;
-  return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
-}
-
 /** Figures exactly as the interface tells them; what is not known is empty. Lines end in CR LF. */
 export function nightsCsv(nights: readonly NightSummary[], zone: string): string {
   const time = (at: number) => DateTime.fromMillis(at, { zone }).toISO({ suppressMilliseconds: true }) ?? '';
-  const rows = nights.map((night) => COLUMNS.map(([, of]) => cell(of(night, time))).join(','));
-  return [COLUMNS.map(([head]) => head).join(','), ...rows, ''].join('\r\n');
+  const rows = nights.map((night) => csvLine(COLUMNS.map(([, of]) => of(night, time))));
+  return csvLine(COLUMNS.map(([head]) => head)) + rows.join('');
 }

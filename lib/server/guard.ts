@@ -13,6 +13,7 @@ import { paramsOf, type Operation, type ParamsOf } from './operation';
 import { may } from './permissions';
 import { LARGEST_BODY, parseJson, readBytes } from './request-body';
 import { seal, unseal } from './seal';
+import { streamed } from './streamed';
 import { FIND, isThingName, type Things } from './things';
 
 /** What a handler is given: everything looked up, checked and parsed. */
@@ -33,6 +34,8 @@ export interface Answer {
   body?: unknown;
   /** An answer that is not JSON. */
   file?: { type: string; name: string; text: string };
+  /** The same of any length, made while it is sent: it reads in transactions of its own, after this one has ended. */
+  stream?: { type: string; name: string; parts: AsyncIterable<string> };
   /** An answer to be shown where it stands, such as a picture. */
   inline?: { type: string; bytes: Uint8Array<ArrayBuffer> };
   headers?: Record<string, string>;
@@ -186,12 +189,12 @@ function repeat(
 
 const NOTHING = Buffer.alloc(0);
 
-const isEmpty = ({ body, file, inline }: Answer) =>
-  body === undefined && file === undefined && inline === undefined;
+const isEmpty = ({ body, file, inline, stream }: Answer) =>
+  body === undefined && file === undefined && inline === undefined && stream === undefined;
 
 function respond(status: number, answer: Answer): Response {
   const headers = new Headers({ 'cache-control': 'no-store', ...answer.headers });
-  const { body, file, inline } = answer;
+  const { body, file, inline, stream } = answer;
   if (inline !== undefined) {
     headers.set('content-type', inline.type);
     headers.set('content-disposition', 'inline');
@@ -201,6 +204,11 @@ function respond(status: number, answer: Answer): Response {
     headers.set('content-type', `${file.type}; charset=utf-8`);
     headers.set('content-disposition', `attachment; filename="${file.name}"`);
     return new Response(file.text, { status, headers });
+  }
+  if (stream !== undefined) {
+    headers.set('content-type', `${stream.type}; charset=utf-8`);
+    headers.set('content-disposition', `attachment; filename="${stream.name}"`);
+    return new Response(streamed(stream.parts), { status, headers });
   }
   if (body === undefined) return new Response(null, { status, headers });
   if (typeof body === 'object' && body !== null && 'revision' in body && typeof body.revision === 'number') {

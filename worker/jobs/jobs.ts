@@ -3,12 +3,16 @@ import cron, { type ScheduledTask } from 'node-cron';
 import { makeLate } from '@/db/queries/late-readings';
 import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
 import type { Base } from '../base';
+import type { Cancel } from '../clock';
 import type { Houses } from '../control/houses';
 import type { Ingest } from '../field/ingest';
+import { runImports } from './import-run';
 import { refreshNights } from './nights';
 
 /** At the start the last day is reckoned afresh: what came just before the end may not have been rolled up. */
 const AFRESH_MS = 24 * 3_600_000;
+/** Somebody sits before the page and waits for the file that was sent. */
+const IMPORTS_MS = 2000;
 const MONTH_MS = 31 * 86_400_000;
 
 export interface JobDeps extends Base {
@@ -19,6 +23,7 @@ export interface JobDeps extends Base {
 
 export class Jobs {
   private tasks: ScheduledTask[] = [];
+  private cancelImports: Cancel = () => undefined;
   private readonly running = new Set<string>();
 
   constructor(private readonly deps: JobDeps) {}
@@ -27,6 +32,10 @@ export class Jobs {
     void this.run('roll-ups', () => this.rollUpAfresh());
     void this.run('months', () => this.makeMonths());
     void this.run('nights', () => this.keepNights());
+    this.cancelImports = this.deps.clock.every(
+      IMPORTS_MS,
+      () => void this.run('imports', () => this.bringIn()),
+    );
     const each = (expression: string, name: string, work: () => Promise<void>) =>
       cron.schedule(expression, () => void this.run(name, work), { timezone: 'UTC' });
     this.tasks = [
@@ -40,6 +49,7 @@ export class Jobs {
   stop(): void {
     for (const task of this.tasks) void task.stop();
     this.tasks = [];
+    this.cancelImports();
   }
 
   /** One at a time of a kind; a failure is logged, and the next turn tries again. */
@@ -66,6 +76,10 @@ export class Jobs {
       hours.set(hour, [...(hours.get(hour) ?? []), point]);
     }
     for (const [hour, points] of hours) await rollUp(this.deps.pool, points, hour * 3_600_000, to);
+  }
+
+  private async bringIn(): Promise<void> {
+    await runImports(this.deps);
   }
 
   private async makeLate(): Promise<void> {

@@ -1,0 +1,7 @@
+import { heapBookFile } from '@/lib/server/exports';
+import { serve } from '@/lib/server/guard';
+import { exportHeapBook } from '@/lib/server/operations/files';
+
+export const GET = serve(exportHeapBook, ({ holding, things, query }) =>
+  heapBookFile(holding, things.house, query),
+);
