@@ -14,7 +14,10 @@ export const SECTIONS: readonly Section[] = [
   { key: 'wiring', label: 'Wiring', of: 'house', onBar: false },
   { key: 'heap-book', label: 'Heap book', of: 'house', onBar: true },
   { key: 'duty', label: 'Duty', of: 'house', onBar: true },
+  { key: 'money', label: 'Money', of: 'house', onBar: false },
+  { key: 'reports', label: 'Reports', of: 'house', onBar: false },
   { key: 'alarms', label: 'Alarms', of: 'house', onBar: true },
+  { key: 'files', label: 'Files', of: 'house', onBar: false },
   { key: 'houses', label: 'All houses', of: 'holding', onBar: false },
   { key: 'people', label: 'People', of: 'holding', onBar: false },
 ];

@@ -187,9 +187,10 @@ export function matchColumns(
   const taken = new Set<string>();
   return columns.flatMap(({ column, head, unit, isTime }) => {
     if (isTime) return [];
-    const named = plain(head);
+    // the last word is often the unit, from a line of its own
+    const named = [head, head.replace(/\s\S+$/, '')].map(plain).filter((text) => text !== '');
     const point = points.find(
-      (one) => !taken.has(one.key) && named !== '' && [plain(one.key), plain(one.name)].includes(named),
+      (one) => !taken.has(one.key) && [one.key, one.name].some((text) => named.includes(plain(text))),
     );
     if (point === undefined || unit === null || !fileUnitsOf(point.unit).includes(unit)) return [];
     taken.add(point.key);

@@ -3,6 +3,8 @@ import { createReadStream } from 'node:fs';
 import { mkdir, open, rm, stat, truncate } from 'node:fs/promises';
 import path from 'node:path';
 import type { Encoding } from '@/lib/analysis/logger-layout';
+import type { FileFault } from '@/lib/analysis/logger-reader';
+import { csvLine } from '@/lib/units/csv';
 import { env } from './env';
 
 const folder = () => path.resolve(env().DATA_DIR, 'imports');
@@ -73,10 +75,18 @@ export async function addFaults(id: string, from: number, text: string): Promise
   }
 }
 
-/** Null where nothing was wrong. */
-export async function faultText(id: string): Promise<AsyncIterable<string> | null> {
+const FAULT_HEAD = csvLine(['line', 'what_is_wrong', 'text']);
+
+export function faultLines(faults: readonly FileFault[]): string {
+  return faults.map(({ line, why, text }) => csvLine([line, why, text])).join('');
+}
+
+/** The lines that could not be read, under a head; the head alone where every line could be. */
+export async function* faultText(id: string): AsyncGenerator<string> {
+  yield FAULT_HEAD;
   const found = await stat(faultFile(id)).catch(() => null);
-  return found === null || found.size === 0 ? null : createReadStream(faultFile(id), { encoding: 'utf8' });
+  if (found === null) return;
+  for await (const part of createReadStream(faultFile(id), { encoding: 'utf8' })) yield String(part);
 }
 
 /** The file itself; that of faults stays, to be fetched. */

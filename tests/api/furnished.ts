@@ -21,6 +21,9 @@ const NOTHING = '018f3f3f-0000-7000-8000-000000000000';
 const QUERY: Record<string, string> = {
   '/houses/{house}/readings': '?points=bench-1',
   '/houses/{house}/heap-findings': '?source=gate-heap',
+  '/houses/{house}/imports/{import}/piece': '?from=0',
+  '/houses/{house}/export/readings': '?points=bench-1&from=2026-11-01T00:00:00Z&to=2026-11-02T00:00:00Z',
+  '/houses/{house}/export/switchings': '?from=2026-11-01T00:00:00Z&to=2026-11-02T00:00:00Z',
 };
 
 export async function furnish(holding: Holding, owner: Asker): Promise<Furnished> {
@@ -49,6 +52,7 @@ export async function furnish(holding: Holding, owner: Asker): Promise<Furnished
   await keep('dismissal', `${at}/heap-dismissals`, {
     ...{ source: 'gate-heap', kind: 'dry', mark: 'since x', level: 1, why: 'the hose is frozen' },
   });
+  await keep('import', `${at}/imports`, { name: 'bench.csv', bytes: 100 });
   await keep('material', '/materials', shown.material);
   await keep('cost', `${at}/heap-costs`, {
     source: 'gate-heap',

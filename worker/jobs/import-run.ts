@@ -22,8 +22,7 @@ import {
   type TargetPoint,
 } from '@/lib/analysis/logger-reader';
 import type { ImportFound } from '@/lib/schema/import';
-import { addFaults, dropAll, dropFile, textOf } from '@/lib/server/import-file';
-import { csvLine } from '@/lib/units/csv';
+import { addFaults, dropAll, dropFile, faultLines, textOf } from '@/lib/server/import-file';
 import type { Base } from '../base';
 
 /** The longest age at which any point may still be taken for fresh. */
@@ -124,7 +123,7 @@ async function bring(deps: ImportDeps, work: ImportWork): Promise<void> {
     if (!(await storing)) return false;
     const kept = faults.slice(0, Math.max(0, MOST_FAULTS - step.faults));
     if (kept.length > 0 || step.faultBytes === 0)
-      step.faultBytes = await addFaults(work.id, step.faultBytes, faultLines(kept, step.faultBytes === 0));
+      step.faultBytes = await addFaults(work.id, step.faultBytes, faultLines(kept));
     Object.assign(step, { doneBytes, doneLines: lines, faults: step.faults + faults.length });
     storing = bringPart(deps.pool, work, rows, { ...step, doubled });
     // heard of at the next batch; until then it must not count as unheard
@@ -157,12 +156,6 @@ function onceEach(readings: readonly FileReading[]): FileReading[] {
     newest.set(point, Math.max(at, last));
     return true;
   });
-}
-
-function faultLines(faults: readonly FileFault[], isFirst: boolean): string {
-  if (faults.length === 0) return '';
-  const head = isFirst ? csvLine(['line', 'what_is_wrong', 'text']) : '';
-  return head + faults.map(({ line, why, text }) => csvLine([line, why, text])).join('');
 }
 
 async function undo(deps: ImportDeps, work: ImportWork): Promise<void> {
