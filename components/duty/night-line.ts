@@ -1,22 +1,17 @@
 /** A night as its row shows it: words and paths, ready for the browser, which knows no analysis and no units. */
 import type { NightSummary } from '@/lib/analysis/nights';
-import { decimal, share, temperatureFigure } from '@/lib/units/format';
+import { share } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
+import { type NightCells, nightCells } from '@/lib/wording/duty-figures';
 import { type StripPaths, stripPaths } from './strip-paths';
 
-export interface NightLine {
+export interface NightLine extends NightCells {
   night: string;
   /** What must be said of it beside its date: that it lasts, or how little of it was read. */
   note?: string;
   /** Under 90 % was read: the row is marked. */
   isThin?: true;
   strips: StripPaths[];
-  ran: string;
-  starts: number;
-  /** Left out where it is not known. */
-  heat?: string;
-  lowest?: string;
-  outdoors?: string;
   isCold?: true;
 }
 
@@ -25,7 +20,6 @@ export function nightLine(
   frostLimitC: number | null,
   preferences: Preferences,
 ): NightLine {
-  const figure = (one: { value: number }) => temperatureFigure(one.value, preferences);
   const notes = [
     ...(night.complete ? [] : ['so far']),
     ...(night.coverageLow ? [`${share(night.coverage)} of it was read`] : []),
@@ -34,14 +28,10 @@ export function nightLine(
   return {
     night: night.night,
     strips: night.strips.map(({ spans }) => stripPaths(spans, (night.ends - night.from) / 1000)),
-    ran: share(night.dutyOfNight),
-    starts: night.starts,
+    ...nightCells(night, preferences),
     // what there is not is not sent: it would be sent four hundred times
     ...(notes.length === 0 ? {} : { note: notes.join(', ') }),
     ...(night.coverageLow ? { isThin: true } : {}),
-    ...(night.heat === null ? {} : { heat: decimal(night.heat.kWh, 1) }),
-    ...(night.lowest === null ? {} : { lowest: figure(night.lowest) }),
-    ...(night.outdoorsLowest === null ? {} : { outdoors: figure(night.outdoorsLowest) }),
     ...(isCold ? { isCold: true } : {}),
   };
 }

@@ -8,7 +8,7 @@ import { nightTitle } from '@/lib/wording/duty';
 import { nightNotes } from '@/lib/wording/duty-notes';
 import type { Scene } from '@/lib/wording/scene';
 import { addressOf, type DutyAddress } from './address';
-import { nightFigures, openedFigures } from './figures';
+import { nightFigures, openedFigures } from '@/lib/wording/duty-figures';
 import { Decisions, type OpenedDecision } from './opened-decisions';
 import { Draws } from './opened-draws';
 import { Happenings, type OpenedAlarm, type OpenedEntry } from './opened-happenings';

@@ -2,7 +2,7 @@ import { Figures, Panel } from '@/components/ui/panel';
 import type { Preferences } from '@/lib/units/preferences';
 import { CoreAtDawn, dawnsOf } from './core-at-dawn';
 import type { DutyHouse, DutyViewData } from './duty-data';
-import { nightFigures } from './figures';
+import { nightFigures } from '@/lib/wording/duty-figures';
 import { RecoveryPanel } from './recovery-panel';
 
 /** Beside the nights: how the heap comes back, its core, and all of them together. */

@@ -29,7 +29,7 @@ export interface OpenedNightData {
   decisions: OpenedDecision[];
   /** That stood in some part of the night, in the order in which they began. */
   alarms: Pick<Alarm, 'id' | 'kind' | 'about' | 'data' | 'raisedAt' | 'clearedAt'>[];
-  entries: { id: string; at: number; kind: string; text: string }[];
+  entries: { id: string; at: number; kind: string; text: string; by: string }[];
   names: AlarmNames;
 }
 
@@ -79,7 +79,8 @@ function loopsOf(loops: readonly ConfigLoop[]) {
   }));
 }
 
-async function alarmsIn(holding: Holding, houseId: string, from: number, to: number) {
+/** Alarms of the house, and of the whole holding, that stood in some part of [from, to), epoch ms; oldest first. */
+export async function alarmsIn(holding: Holding, houseId: string, from: number, to: number) {
   const rows = await holding.db
     .select()
     .from(alarm)
@@ -99,9 +100,16 @@ async function alarmsIn(holding: Holding, houseId: string, from: number, to: num
   }));
 }
 
-async function entriesIn(holding: Holding, sourceId: string, from: number, to: number) {
+/** Entries of a source's book in [from, to), epoch ms; oldest first. */
+export async function entriesIn(holding: Holding, sourceId: string, from: number, to: number) {
   const rows = await holding.db
-    .select({ id: heapEntry.id, at: heapEntry.at, kind: heapEntry.kind, text: heapEntry.text })
+    .select({
+      id: heapEntry.id,
+      at: heapEntry.at,
+      kind: heapEntry.kind,
+      text: heapEntry.text,
+      by: heapEntry.by,
+    })
     .from(heapEntry)
     .where(
       and(

@@ -7,6 +7,8 @@ export interface Letter {
   to: string;
   subject: string;
   text: string;
+  /** The same for readers that show it; the text stands for itself. */
+  html?: string;
 }
 
 let transport: Transporter | undefined;

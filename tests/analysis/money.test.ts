@@ -5,6 +5,7 @@ import { allInPrice, seasonOf, shareOfSeason } from '@/lib/analysis/money-season
 import type { Tariff } from '@/lib/analysis/money-tariff';
 import { nightNamed } from '@/lib/analysis/night';
 import { MICROS, microsOf, microsText, money, perKWh } from '@/lib/units/money';
+import { chance } from './chance';
 import { FAN, HEAT_PRICE, LOOP_AT_2400_M, LOOP_AT_SEA } from '@/tests/checks/money';
 
 const price = (text: string) => microsOf(text) ?? Number.NaN;
@@ -119,28 +120,14 @@ it('a season runs from July to June in the north and through the year in the sou
   expect(seasonOf('2026-06-30', -42)).toMatchObject({ name: '2026', from: '2026-01-01', to: '2026-12-31' });
 });
 
-/** Mulberry32: the same chances every time. */
-function chances(seed: number): () => number {
-  let state = seed;
-  return () => {
-    state = (state + 0x6d2b79f5) | 0;
-    let mixed = Math.imul(state ^ (state >>> 15), 1 | state);
-    mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed;
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296;
-  };
-}
-
 it.each([0.05, 0.13, 0.2])(
   "the deviation and the range of a price agree with chance where heat's is %f of it",
   (share) => {
     const heat = { kWh: 140, sd: 140 * share };
     const told = allInPrice(heat, price('60'));
     if (typeof told === 'string') throw new Error(told);
-    const chance = chances(20_261_201);
-    const prices = Array.from({ length: 100_000 }, () => {
-      const normal = Math.sqrt(-2 * Math.log(1 - chance())) * Math.cos(2 * Math.PI * chance());
-      return price('60') / (heat.kWh + heat.sd * normal);
-    });
+    const { normal } = chance(20_261_201);
+    const prices = Array.from({ length: 100_000 }, () => price('60') / (heat.kWh + heat.sd * normal()));
     const mean = prices.reduce((a, b) => a + b) / prices.length;
     const sd = Math.sqrt(prices.reduce((sum, one) => sum + (one - mean) ** 2, 0) / prices.length);
     expect(Math.abs(told.sd / sd - 1)).toBeLessThan(0.06);

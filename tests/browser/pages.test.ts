@@ -32,6 +32,8 @@ const YARD: Record<string, Shown> = {
   '[house]/wiring/page.tsx': { at: '/long-house/wiring', heading: /node|channel|relay/i },
   '[house]/heap-book/page.tsx': { at: '/long-house/heap-book', heading: /heap/i, drawn: true },
   '[house]/duty/page.tsx': { at: '/long-house/duty', heading: /ran .* of the time/, drawn: true },
+  '[house]/money/page.tsx': { at: '/long-house/money', heading: /heat/ },
+  '[house]/reports/page.tsx': { at: '/long-house/reports', heading: /Long house: Week of/, drawn: true },
   '[house]/alarms/page.tsx': { at: '/long-house/alarms', heading: /alarm/i },
   'people/page.tsx': { at: '/people', heading: /Larkmoor Growers/ },
   'people/mail/page.tsx': {

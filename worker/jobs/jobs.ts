@@ -2,12 +2,15 @@
 import cron, { type ScheduledTask } from 'node-cron';
 import { makeLate } from '@/db/queries/late-readings';
 import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
+import { env } from '@/lib/server/env';
+import { sendLetter } from '@/lib/server/mail';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
 import type { Houses } from '../control/houses';
 import type { Ingest } from '../field/ingest';
 import { runImports } from './import-run';
 import { refreshNights } from './nights';
+import { sendReports } from './reports';
 
 /** At the start the last day is reckoned afresh: what came just before the end may not have been rolled up. */
 const AFRESH_MS = 24 * 3_600_000;
@@ -42,6 +45,7 @@ export class Jobs {
       each('*/1 * * * *', 'roll-ups', () => this.rollUpTouched()),
       each('*/1 * * * *', 'late readings', () => this.makeLate()),
       each('*/5 * * * *', 'nights', () => this.keepNights()),
+      each('*/5 * * * *', 'reports', () => this.sendReports()),
       each('17 3 * * *', 'months', () => this.makeMonths()),
     ];
   }
@@ -99,6 +103,11 @@ export class Jobs {
     for (const { id, holdingId } of houses.all()) {
       await refreshNights({ id: holdingId, db }, id, clock.appNow());
     }
+  }
+
+  private async sendReports(): Promise<void> {
+    const { clock, db } = this.deps;
+    await sendReports({ db, now: clock.appNow(), url: env().PUBLIC_URL, send: sendLetter });
   }
 
   private async makeMonths(): Promise<void> {

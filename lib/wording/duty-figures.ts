@@ -1,15 +1,24 @@
-import type { ReactNode } from 'react';
+/** The figures of nights as pages, reports and letters show them, from one place, so that they agree. */
 import type { NightSummary } from '@/lib/analysis/nights';
 import { totalOf } from '@/lib/analysis/totals';
-import { count, decimal, difference, energy, share, temperature, UNKNOWN } from '@/lib/units/format';
+import {
+  count,
+  decimal,
+  difference,
+  energy,
+  share,
+  temperature,
+  temperatureFigure,
+  UNKNOWN,
+} from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock, duration } from '@/lib/units/time';
-import { nightDate, whyMissing } from '@/lib/wording/duty';
+import { nightDate, whyMissing } from './duty';
 
 export interface FigureRow {
-  name: ReactNode;
-  value: ReactNode;
-  note?: ReactNode;
+  name: string;
+  value: string;
+  note?: string;
 }
 
 /** The figures of one night or of several, from the very totals that the table and the sentence show. */
@@ -103,4 +112,25 @@ export function openedFigures(night: NightSummary, zone: string, preferences: Pr
 /** Many nights are told in hours throughout: "5 days" of a fan would not be read as a sum of runs. */
 function hours(seconds: number): string {
   return seconds < 48 * 3600 ? duration(seconds) : `${decimal(seconds / 3600, 0)}\u00a0h`;
+}
+
+export interface NightCells {
+  ran: string;
+  starts: number;
+  /** Left out where it is not known. */
+  heat?: string;
+  lowest?: string;
+  outdoors?: string;
+}
+
+/** A night's figures as they stand in its row. */
+export function nightCells(night: NightSummary, preferences: Preferences): NightCells {
+  const figure = (one: { value: number }) => temperatureFigure(one.value, preferences);
+  return {
+    ran: share(night.dutyOfNight),
+    starts: night.starts,
+    ...(night.heat === null ? {} : { heat: decimal(night.heat.kWh, 1) }),
+    ...(night.lowest === null ? {} : { lowest: figure(night.lowest) }),
+    ...(night.outdoorsLowest === null ? {} : { outdoors: figure(night.outdoorsLowest) }),
+  };
 }
