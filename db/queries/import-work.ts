@@ -34,8 +34,6 @@ export interface ImportStep {
   doneLines: number;
   faults: number;
   faultBytes: number;
-  /** Readings whose point and time stood on an earlier line of the same batch. */
-  doubled: number;
 }
 
 /** @returns whether it is still wanted */
@@ -56,7 +54,7 @@ export async function endCheck(pool: pg.Pool, id: string, found: ImportFound): P
   );
 }
 
-/** @param rows each point and time once @returns false where the import was taken back meanwhile: nothing was stored */
+/** @returns false where the import was taken back meanwhile: nothing was stored */
 export async function bringPart(
   pool: pg.Pool,
   work: Pick<ImportWork, 'id' | 'holdingId'>,
@@ -86,7 +84,7 @@ export async function bringPart(
       [
         work.id,
         ...[step.doneBytes, step.doneLines, step.faults, step.faultBytes],
-        ...[stored.length, rows.length - stored.length + step.doubled],
+        ...[stored.length, rows.length - stored.length],
       ],
     );
     await client.query('commit');
@@ -106,19 +104,20 @@ async function keepPart(
   part: number,
   stored: readonly { point: number; at: number }[],
 ): Promise<void> {
+  if (stored.length === 0) return;
   const times = new Map<number, number[]>();
   for (const { point, at } of stored) {
     const list = times.get(point);
     if (list === undefined) times.set(point, [at]);
     else list.push(at);
   }
-  for (const [point, list] of times) {
-    await client.query(
-      `insert into import_part (holding_id, batch_id, part, point, times) values ($1, $2, $3, $4, $5)`,
-      [work.holdingId, work.id, part, point, `{${list.join()}}`],
-    );
-    await markDue(client, point, list);
-  }
+  // one statement whatever the number of points: the line to the database is the slow part
+  const values = [...times].map((_, place) => `($1, $2, $3, $${place * 2 + 4}, $${place * 2 + 5})`);
+  await client.query(
+    `insert into import_part (holding_id, batch_id, part, point, times) values ${values.join()}`,
+    [work.holdingId, work.id, part, ...[...times].flatMap(([point, list]) => [point, `{${list.join()}}`])],
+  );
+  await markDue(client, times);
 }
 
 const HOUR_MS = 3_600_000;
@@ -127,12 +126,22 @@ const HOUR_MS = 3_600_000;
  * In the transaction of the readings themselves, and over a row that is there already: that locks it, so that whoever takes
  * it away to reckon its hour afresh has looked either before it was written again or after these readings are seen.
  */
-async function markDue(client: pg.PoolClient, point: number, times: readonly number[]): Promise<void> {
-  const hours = [...new Set(times.map((at) => Math.floor(at / HOUR_MS)))].sort((a, b) => b - a);
+async function markDue(client: pg.PoolClient, times: ReadonlyMap<number, readonly number[]>): Promise<void> {
+  const points: number[] = [];
+  const hours: number[] = [];
+  for (const [point, list] of times) {
+    for (const hour of new Set(list.map((at) => Math.floor(at / HOUR_MS)))) {
+      points.push(point);
+      hours.push(hour);
+    }
+  }
+  // in the order in which the hours are taken away, so that the two do not wait for each other
   await client.query(
-    `insert into reading_due (point, hour) select $1, to_timestamp(hour * 3600) from unnest($2::bigint[]) hour
+    `insert into reading_due (point, hour)
+     select point, to_timestamp(hour * 3600) from unnest($1::bigint[], $2::bigint[]) as due (point, hour)
+     order by hour desc, point
      on conflict (point, hour) do update set hour = excluded.hour`,
-    [point, `{${hours.join()}}`],
+    [`{${points.join()}}`, `{${hours.join()}}`],
   );
 }
 
@@ -163,6 +172,7 @@ export async function undoPart(pool: pg.Pool, work: Pick<ImportWork, 'id' | 'hol
       [work.holdingId, work.id],
     );
     let gone = 0;
+    const taken = new Map<number, number[]>();
     for (const { point, times } of rows) {
       const { rowCount } = await client.query(
         `delete from reading using unnest($2::bigint[]) ms
@@ -171,8 +181,9 @@ export async function undoPart(pool: pg.Pool, work: Pick<ImportWork, 'id' | 'hol
         [point, `{${times.join()}}`, ...endsOf(times)],
       );
       gone += rowCount ?? 0;
-      await markDue(client, Number(point), times.map(Number));
+      taken.set(Number(point), times.map(Number));
     }
+    await markDue(client, taken);
     await client.query(`update import_batch set brought = greatest(0, brought - $2) where id = $1`, [
       work.id,
       gone,

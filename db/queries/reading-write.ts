@@ -43,7 +43,7 @@ export async function storeReadings(pool: pg.Pool, rows: readonly ReadingRow[]):
 }
 
 /**
- * Stores readings, each point and time once among them, within the caller's transaction.
+ * Stores readings within the caller's transaction, each point and time once: the first that came stays.
  * @returns those that were new
  */
 export async function copyStored<Row extends ReadingRow>(
@@ -56,7 +56,8 @@ export async function copyStored<Row extends ReadingRow>(
   await client.query('rollback to savepoint straight');
   const stored = await insertAround(client, rows);
   await client.query('drop table arrival');
-  return rows.filter((row) => stored.has(keyOf(row)));
+  // a key is taken out with its first row: of two rows of one time the second was not stored
+  return rows.filter((row) => stored.delete(keyOf(row)));
 }
 
 async function copyStraight(client: pg.PoolClient, rows: readonly ReadingRow[]): Promise<boolean> {

@@ -33,9 +33,12 @@ const NOTHING = new Set(['', '-', '--', '---', 'nan', 'n/a', 'na', 'null', 'none
 /** Null where the cell says that there is no value; NaN where it is no number. @example cellNumber('−4,5', ',') === -4.5 */
 export function cellNumber(cell: string, decimal: '.' | ','): number | null {
   const plain = cell.trim();
+  // where the comma parts decimals a point parts thousands, and 1.234 would be read as another number than it is
+  if (decimal === ',' && plain.includes('.')) return NOTHING.has(plain.toLowerCase()) ? null : Number.NaN;
+  const point = decimal === ',' ? plain.replace(',', '.') : plain;
   // a plain number is by far the commonest, and Number alone takes spaces, hexadecimals and Infinity too
-  if (decimal === '.' && /^-?\d+(\.\d+)?$/.test(plain)) return Number(plain);
+  if (/^-?\d+(\.\d+)?$/.test(point)) return Number(point);
   if (NOTHING.has(plain.toLowerCase())) return null;
-  const point = (decimal === ',' ? plain.replace(',', '.') : plain).replace(/^[−–]/, '-');
-  return /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d{1,3})?$/i.test(point) ? Number(point) : Number.NaN;
+  const signed = point.replace(/^[−–]/, '-');
+  return /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d{1,3})?$/i.test(signed) ? Number(signed) : Number.NaN;
 }

@@ -115,8 +115,7 @@ async function bring(deps: ImportDeps, work: ImportWork): Promise<void> {
   /** A batch is stored while the next one is read: the database and this process are two. */
   let storing: Promise<boolean> = Promise.resolve(true);
   const store = async (doneBytes: number): Promise<boolean> => {
-    const rows = onceEach(reader.readings);
-    const doubled = reader.readings.length - rows.length;
+    const rows = reader.readings;
     const faults = reader.faults;
     [reader.readings, reader.faults, reader.doubts] = [[], [], []];
     const lines = reader.lines;
@@ -125,7 +124,7 @@ async function bring(deps: ImportDeps, work: ImportWork): Promise<void> {
     if (kept.length > 0 || step.faultBytes === 0)
       step.faultBytes = await addFaults(work.id, step.faultBytes, faultLines(kept));
     Object.assign(step, { doneBytes, doneLines: lines, faults: step.faults + faults.length });
-    storing = bringPart(deps.pool, work, rows, { ...step, doubled });
+    storing = bringPart(deps.pool, work, rows, { ...step });
     // heard of at the next batch; until then it must not count as unheard
     storing.catch(() => undefined);
     return true;
@@ -141,21 +140,6 @@ async function bring(deps: ImportDeps, work: ImportWork): Promise<void> {
   if (!(await store(work.bytes)) || !(await storing)) return;
   await endImport(deps.pool, work, 'done', { now: deps.clock.appNow() });
   await dropFile(work.id);
-}
-
-/** Of readings of one point and time the first stays, as it does among batches. */
-function onceEach(readings: readonly FileReading[]): FileReading[] {
-  const newest = new Map<number, number>();
-  const older = new Map<number, Set<number>>();
-  return readings.filter(({ point, at }) => {
-    const last = newest.get(point) ?? Number.NEGATIVE_INFINITY;
-    let times = older.get(point);
-    if (times === undefined) older.set(point, (times = new Set()));
-    if (at <= last && times.has(at)) return false;
-    times.add(at);
-    newest.set(point, Math.max(at, last));
-    return true;
-  });
 }
 
 async function undo(deps: ImportDeps, work: ImportWork): Promise<void> {

@@ -20,6 +20,7 @@ export const OPERATIONS: readonly Operation[] = [
   record,
   heap,
   heapYear,
+  files,
   money,
   people,
   open,
