@@ -5,7 +5,7 @@ import { ClockTime, finite, listOf } from './common';
 
 export const Day = z.iso
   .date({ error: 'Give a day as YYYY-MM-DD.' })
-  .refine((value) => value >= '1970' && value < '2200', { message: 'Give a day between 1970 and 2200.' });
+  .refine((value) => value >= '1970' && value < '2200', { error: 'Give a day between 1970 and 2200.' });
 
 /** As text, so that no binary fraction comes between what is entered and what is kept. */
 export const Price = z
@@ -36,7 +36,7 @@ export const FuelBody = z
   })
   .refine(({ fuel, unit }) => FUEL_UNITS[fuel].some((one) => one.unit === unit), {
     path: ['unit'],
-    message: 'This fuel is not sold in that unit here.',
+    error: 'This fuel is not sold in that unit here.',
   });
 export type FuelBody = z.infer<typeof FuelBody>;
 
@@ -82,9 +82,9 @@ export const HeapCostCreate = z
   })
   .refine(({ amount, work }) => (amount === null) !== (work === null), {
     path: ['amount'],
-    message: 'Give an amount, or hours and a rate.',
+    error: 'Give an amount, or hours and a rate.',
   })
-  .refine((given) => (amountOf(given) ?? 0) <= 1e15, { path: ['amount'], message: 'Under 1 000 000 000.' });
+  .refine((given) => (amountOf(given) ?? 0) <= 1e15, { path: ['amount'], error: 'Under 1 000 000 000.' });
 
 /** Whole micros, half a micro up. Hours have two places at most, so that the product is whole before it is divided. */
 export function amountOf(given: {
