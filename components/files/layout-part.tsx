@@ -38,7 +38,6 @@ export function LayoutPart({
   useEffect(() => {
     void show(one.layout ?? undefined);
     // once for a file: afterwards each change asks by itself
-    // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [one.id]);
 
   async function check(layout: ImportPreview['layout']) {

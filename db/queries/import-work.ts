@@ -3,7 +3,8 @@
  * transaction: an end at any moment leaves a file that is read on where it was left, each reading once.
  */
 import type pg from 'pg';
-import { type FileReading } from '@/lib/analysis/logger-reader';
+import type { FileReading } from '@/lib/analysis/logger-reader';
+import { timeRuns, timesOfRuns } from '@/lib/analysis/time-runs';
 import type { ImportFound, ImportLayout } from '@/lib/schema/import';
 import { copyStored, makeMonths } from './reading-write';
 
@@ -115,7 +116,12 @@ async function keepPart(
   const values = [...times].map((_, place) => `($1, $2, $3, $${place * 2 + 4}, $${place * 2 + 5})`);
   await client.query(
     `insert into import_part (holding_id, batch_id, part, point, times) values ${values.join()}`,
-    [work.holdingId, work.id, part, ...[...times].flatMap(([point, list]) => [point, `{${list.join()}}`])],
+    [
+      work.holdingId,
+      work.id,
+      part,
+      ...[...times].flatMap(([point, list]) => [point, `{${timeRuns(list).join()}}`]),
+    ],
   );
   await markDue(client, times);
 }
@@ -173,7 +179,8 @@ export async function undoPart(pool: pg.Pool, work: Pick<ImportWork, 'id' | 'hol
     );
     let gone = 0;
     const taken = new Map<number, number[]>();
-    for (const { point, times } of rows) {
+    for (const { point, times: runs } of rows) {
+      const times = timesOfRuns(runs.map(Number));
       const { rowCount } = await client.query(
         `delete from reading using unnest($2::bigint[]) ms
          where point = $1 and at = timestamptz 'epoch' + ms * interval '1 millisecond'
@@ -181,7 +188,7 @@ export async function undoPart(pool: pg.Pool, work: Pick<ImportWork, 'id' | 'hol
         [point, `{${times.join()}}`, ...endsOf(times)],
       );
       gone += rowCount ?? 0;
-      taken.set(Number(point), times.map(Number));
+      taken.set(Number(point), times);
     }
     await markDue(client, taken);
     await client.query(`update import_batch set brought = greatest(0, brought - $2) where id = $1`, [
@@ -199,11 +206,11 @@ export async function undoPart(pool: pg.Pool, work: Pick<ImportWork, 'id' | 'hol
 }
 
 /** The partitions that a part lies in, so that the others are not looked at. */
-function endsOf(times: readonly string[]): [Date, Date] {
+function endsOf(times: readonly number[]): [Date, Date] {
   let [least, most] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
   for (const time of times) {
-    least = Math.min(least, Number(time));
-    most = Math.max(most, Number(time));
+    least = Math.min(least, time);
+    most = Math.max(most, time);
   }
   return [new Date(least), new Date(most)];
 }

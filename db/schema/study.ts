@@ -99,7 +99,7 @@ export const importPart = pgTable(
     batchId: uuid('batch_id').notNull(),
     part: integer('part').notNull(),
     point: bigint('point', { mode: 'number' }).notNull(),
-    /** Epoch ms. */
+    /** Epoch ms, as runs of first, step and count (lib/analysis/time-runs). */
     times: bigint('times', { mode: 'number' }).array().notNull(),
   },
   (table) => [

@@ -45,7 +45,7 @@ export function readTime(text: string, order: DateOrder): ReadTime {
     Number(day),
     hourOf(Number(hour ?? 0), half?.toLowerCase()),
     Number(minute ?? 0),
-    Number(second ?? 0) * 1000 + Math.floor(Number(`0.${part ?? 0}`) * 1000),
+    Number(second ?? 0) * 1000 + Number((part ?? '').padEnd(3, '0').slice(0, 3)),
   );
   if (wall === null) return null;
   return offset === undefined ? { wall } : { instant: wall - offsetMs(offset) };

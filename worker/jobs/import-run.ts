@@ -15,12 +15,7 @@ import {
   undoPart,
 } from '@/db/queries/import-work';
 import { listPoints, pointNumbers } from '@/db/queries/point';
-import {
-  type FileFault,
-  type FileReading,
-  LoggerReader,
-  type TargetPoint,
-} from '@/lib/analysis/logger-reader';
+import { LoggerReader, type TargetPoint } from '@/lib/analysis/logger-reader';
 import type { ImportFound } from '@/lib/schema/import';
 import { addFaults, dropAll, dropFile, faultLines, textOf } from '@/lib/server/import-file';
 import type { Base } from '../base';
