@@ -5,6 +5,8 @@ export interface ReportAddress {
   span: ReportSpan;
   night?: string | undefined;
   sections: ReportSection[];
+  /** All houses of the holding, one after another. */
+  isOfAll: boolean;
 }
 
 type Params = Record<string, string | string[] | undefined>;
@@ -18,11 +20,13 @@ export function readReportAddress(params: Params): ReportAddress {
     night: one('night'),
     // none chosen is a bare address: all of them
     sections: sections.length === 0 ? [...SECTIONS] : sections,
+    isOfAll: one('of') === 'all',
   };
 }
 
-export function reportHref(house: string, { span, night, sections }: ReportAddress): string {
+export function reportHref(house: string, { span, night, sections, isOfAll }: ReportAddress): string {
   const query = new URLSearchParams({ span });
+  if (isOfAll) query.set('of', 'all');
   if (night !== undefined) query.set('night', night);
   if (sections.length < SECTIONS.length) for (const section of sections) query.append('section', section);
   return `/${house}/reports?${query.toString()}`;

@@ -3,15 +3,16 @@ import { Phrases } from '@/components/ui/sentence';
 import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import type { ReportBlock } from '@/lib/wording/report';
 
-/** Columns of the heap's nights are figures; those of alarms and the book are words. */
-const isFigures = (block: ReportBlock) => block.key === 'nights';
+/** Columns of nights and of houses are figures; those of alarms and the book are words. */
+const isFigures = (block: ReportBlock) => block.key === 'nights' || block.key === 'houses';
 
-export function Block({ block }: { block: ReportBlock }) {
+export function Block({ block, level = 2 }: { block: ReportBlock; level?: 2 | 3 }) {
+  const Title = level === 2 ? 'h2' : 'h3';
   const { title, sentence, rows, table, notes } = block;
   const figure = isFigures(block);
   return (
     <section className="flex min-w-0 flex-col gap-2 print:mt-5">
-      <h2 className="text-[1.1rem] font-semibold print:break-after-avoid">{title}</h2>
+      <Title className="text-[1.1rem] font-semibold print:break-after-avoid">{title}</Title>
       {sentence === undefined ? null : (
         <p className="max-w-[70ch] font-serif text-[1.05rem]">
           <Phrases phrases={sentence} />

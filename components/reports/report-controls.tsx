@@ -19,7 +19,7 @@ export function ReportControls({
   report: { before: SpanOfNights; after: SpanOfNights | null };
 }) {
   const { before, after } = report;
-  const { span, night, sections } = address;
+  const { span, night, sections, isOfAll } = address;
   const to = (change: Partial<ReportAddress>) => reportHref(house, { ...address, ...change });
   return (
     <Panel title="What to report" actions={<PrintButton />}>
@@ -34,11 +34,15 @@ export function ReportControls({
         />
         <div className="flex flex-wrap gap-2">
           <ButtonLink href={to({ night: before.from })}>The {span} before</ButtonLink>
+          <ButtonLink href={to({ isOfAll: !isOfAll })}>
+            {isOfAll ? 'This house only' : 'All houses'}
+          </ButtonLink>
           {after === null ? null : <ButtonLink href={to({ night: after.from })}>The {span} after</ButtonLink>}
         </div>
       </div>
       <form action={`/${house}/reports`} className="mt-3">
         <input type="hidden" name="span" value={span} />
+        {isOfAll ? <input type="hidden" name="of" value="all" /> : null}
         {night === undefined ? null : <input type="hidden" name="night" value={night} />}
         <fieldset className="flex flex-wrap items-center gap-x-5">
           <legend className="text-[0.9rem] text-soft">Sections</legend>

@@ -1,59 +1,69 @@
-import type { NightSummary } from '@/lib/analysis/nights';
 import type { SpanOfNights } from '@/lib/analysis/report-span';
 import type { ReportSchedule } from '@/lib/schema/report';
-import type { ReportBlock } from '@/lib/wording/report';
+import type { Preferences } from '@/lib/units/preferences';
+import { housesBlock } from '@/lib/wording/report';
 import type { ReportAddress } from './address';
 import { Block } from './block';
-import { HeatChart } from './heat-chart';
+import { HouseReport, type HouseReportData } from './house-report';
 import { ReportControls } from './report-controls';
 import { SchedulesPanel } from './schedules-panel';
 
-export interface ReportViewData {
+export interface ReportViewData extends HouseReportData {
   title: string;
-  house: { slug: string; name: string };
   before: SpanOfNights;
   after: SpanOfNights | null;
-  blocks: ReportBlock[];
-  sources: { slug: string; name: string; nights: NightSummary[] }[];
 }
 
-/** A report as it will lie on paper; above it, and not on paper, what it is of, and to whom it is sent. */
+/** A report as it will lie on paper; above it, and not on paper, what it is of; below, to whom it is sent. */
 export function ReportView({
   house,
+  holding,
   address,
   report,
+  reports,
   schedules,
   members,
+  preferences,
   mayWrite,
 }: {
   house: { slug: string; name: string };
+  holding: string;
   address: ReportAddress;
+  /** Of this house. */
   report: ReportViewData;
+  /** Of all houses, where that is asked for. */
+  reports: ReportViewData[] | null;
   schedules: ReportSchedule[];
   members: { name: string; email: string }[];
+  preferences: Preferences;
   mayWrite: boolean;
 }) {
-  const charts = report.sources.filter((source) => source.nights.some((night) => night.heat !== null));
+  const shown = reports ?? [report];
+  const isAmong = reports !== null;
   return (
     <div className="flex flex-col gap-4">
       <h1 className="font-serif text-[1.4rem] leading-[1.38] sm:text-[1.7rem]">
-        {house.name}: {report.title}
+        {isAmong ? holding : house.name}: {report.title}
       </h1>
       <div className="not-on-paper">
         <ReportControls house={house.slug} address={address} report={report} />
       </div>
-      <article
-        aria-label="Report"
-        className="flex flex-col gap-5 rounded-lg border border-line bg-sheet p-4 print:block print:border-0 print:p-0"
-      >
-        {address.sections.includes('figures')
-          ? charts.map((source) => <HeatChart key={source.slug} name={source.name} nights={source.nights} />)
-          : null}
-        {report.blocks.map((block, at) => (
-          <Block key={at} block={block} />
-        ))}
-        {report.blocks.length === 0 ? <p>There is nothing to tell of these nights.</p> : null}
-      </article>
+      {isAmong ? (
+        <Block
+          block={housesBlock(
+            shown.map((one) => ({ name: one.house.name, sources: one.sources })),
+            preferences,
+          )}
+        />
+      ) : null}
+      {shown.map((one) => (
+        <HouseReport
+          key={one.house.slug}
+          report={one}
+          hasCharts={address.sections.includes('figures')}
+          isAmong={isAmong}
+        />
+      ))}
       <div className="not-on-paper">
         <SchedulesPanel
           house={house.slug}

@@ -23,6 +23,7 @@ import { listChannels } from './channel';
 import { alarmsIn, entriesIn } from './duty-night';
 import { readRecovery } from './duty-recovery';
 import { readMoney } from './money-page';
+import { listHouses } from './house';
 import { listNights } from './night';
 import { listSources } from './source';
 
@@ -123,6 +124,19 @@ async function alarmsOf(holding: Holding, house: House, from: number, to: number
     ...{ label, provedAt: provedAt === null ? null : Date.parse(provedAt) },
   }));
   return { ...block, rows: [...provingRows(channels, scene), ...(block.rows ?? [])] };
+}
+
+/** The same of every house that is in use, in the order of the menus. */
+export async function readReports(
+  holding: Holding,
+  ask: ReportAsk,
+  preferences: Preferences,
+  nowMs: number,
+): Promise<Report[]> {
+  const reports = [];
+  for (const house of await listHouses(holding))
+    reports.push(await readReport(holding, house, ask, preferences, nowMs));
+  return reports;
 }
 
 async function sceneOf(

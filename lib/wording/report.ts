@@ -4,7 +4,7 @@ import type { SpanOfNights } from '@/lib/analysis/report-span';
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { EntryEffect, RecoveryTrend, RecoveryWeek } from '@/lib/analysis/recovery';
 import { totalOf } from '@/lib/analysis/totals';
-import { decimal, degrees, share, temperatureFigure } from '@/lib/units/format';
+import { decimal, degrees, share, temperatureFigure, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { dutySentence, nightDate } from './duty';
 import { type FigureRow, nightCells, nightFigures } from './duty-figures';
@@ -103,5 +103,31 @@ export function recoveryBlock(
     key: 'recovery',
     title: `How ${name} comes back`,
     sentence: sentence.length === 0 ? ['Not known yet: no week has rests enough.'] : sentence,
+  };
+}
+
+/** Every source of every house on one line, for a report of the whole holding. */
+export function housesBlock(
+  houses: readonly { name: string; sources: readonly { name: string; nights: NightSummary[] }[] }[],
+  preferences: Preferences,
+): ReportBlock {
+  return {
+    key: 'houses',
+    title: 'All houses',
+    table: {
+      head: ['house and source', 'ran', 'heat, kWh', 'electricity, kWh', `lowest ${degrees(preferences)}`],
+      rows: houses.flatMap((house) =>
+        house.sources.map(({ name, nights }) => {
+          const { heat, electricity, lowest, dutyOfNight } = totalOf(nights);
+          return [
+            `${house.name}, ${name}`,
+            nights.length === 0 ? '' : share(dutyOfNight),
+            heat === null ? UNKNOWN : `${decimal(heat.kWh, 1)}\u00a0±\u00a0${decimal(heat.sd, 1)}`,
+            electricity === null ? UNKNOWN : decimal(electricity.kWh, 3),
+            lowest === null ? UNKNOWN : temperatureFigure(lowest.value, preferences),
+          ];
+        }),
+      ),
+    },
   };
 }

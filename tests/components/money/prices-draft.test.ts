@@ -37,15 +37,14 @@ it('what is wrong with a fuel is told at that fuel, whichever others have a pric
 });
 it('a report’s address says what it is of, and none of its sections means all', () => {
   const address = {
-    span: 'month' as const,
-    night: '2026-11-26',
+    ...{ span: 'month' as const, night: '2026-11-26', isOfAll: true },
     sections: ['alarms' as const, 'book' as const],
   };
   expect(reportHref('long-house', address)).toBe(
-    '/long-house/reports?span=month&night=2026-11-26&section=alarms&section=book',
+    '/long-house/reports?span=month&of=all&night=2026-11-26&section=alarms&section=book',
   );
   expect(readReportAddress({ span: 'month', section: ['alarms', 'book', 'x'] })).toEqual({
-    ...{ span: 'month', night: undefined, sections: ['book', 'alarms'] },
+    ...{ span: 'month', night: undefined, sections: ['book', 'alarms'], isOfAll: false },
   });
   expect(readReportAddress({ span: 'decade' })).toEqual({
     span: 'week',

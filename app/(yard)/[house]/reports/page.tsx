@@ -4,7 +4,7 @@ import { ReportView } from '@/components/reports/report-view';
 import { inHolding } from '@/db/client';
 import { listMembers } from '@/db/queries/people';
 import { readPreferences } from '@/db/queries/preferences';
-import { readReport } from '@/db/queries/report-page';
+import { readReport, readReports } from '@/db/queries/report-page';
 import { listReportSchedules } from '@/db/queries/report-schedule';
 import { appNow } from '@/lib/server/app-clock';
 import { requireViewer, viewerHouse } from '@/lib/server/next-session';
@@ -19,14 +19,16 @@ export default async function ReportsPage({
   searchParams: Promise<Record<string, string | string[] | undefined>>;
 }) {
   const house = await viewerHouse((await params).house);
-  const { holdingId, userId, allowed } = await requireViewer();
+  const { holdingId, holdingName, userId, allowed } = await requireViewer();
   const address = readReportAddress(await searchParams);
   const preferences = await readPreferences(userId);
   const now = (await appNow()).getTime();
   const data = await inHolding(holdingId, async (holding) => ({
     report: await readReport(holding, house, address, preferences, now),
+    reports: address.isOfAll ? await readReports(holding, address, preferences, now) : null,
     schedules: await listReportSchedules(holding, house.id),
     members: (await listMembers(holding)).map(({ name, email }) => ({ name, email })),
   }));
-  return <ReportView {...{ house, address, ...data }} mayWrite={allowed.includes('report.write')} />;
+  const mayWrite = allowed.includes('report.write');
+  return <ReportView {...{ house, address, preferences, mayWrite, ...data }} holding={holdingName} />;
 }
