@@ -50,5 +50,6 @@ it('a report’s address says what it is of, and none of its sections means all'
     span: 'week',
     night: undefined,
     sections: [...SECTIONS],
+    isOfAll: false,
   });
 });
