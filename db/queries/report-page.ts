@@ -76,7 +76,9 @@ export async function readReport(
     const source: ReportSource = { name: one.name, nights, recovery };
     sources.push({ slug: one.slug, name: one.name, nights });
     if (has('figures')) blocks.push(figuresBlock(source, house, preferences));
-    if (has('nights') && nights.length > 0) blocks.push(nightsBlock(source, preferences));
+    // of a source that did nothing there is nothing more to say
+    if (nights.length === 0) continue;
+    if (has('nights')) blocks.push(nightsBlock(source, preferences));
     if (has('recovery')) blocks.push(recoveryBlock(source, preferences));
     if (has('money')) blocks.push(await moneyOf(holding, house, one, nowMs, Math.min(to - 1, nowMs)));
   }

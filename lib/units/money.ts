@@ -41,6 +41,16 @@ export function money(micros: number | null, currency: string, sd?: number): str
   return `${decimal(micros / MICROS, places)}${give}${space}${currency}`;
 }
 
+/** Without its currency, for a table whose head has it. */
+export function moneyFigure(micros: number, currency: string): string {
+  return decimal(micros / MICROS, minorPlaces(currency));
+}
+
+/** A price of a kWh as a figure, for a table whose head has the unit. */
+export function priceFigure(micros: number, currency: string): string {
+  return decimal(micros / MICROS, minorPlaces(currency) + 1);
+}
+
 /** A price of a kWh, to a tenth of the smallest coin. @example perKWh(148_000, 'EUR') === '0.148 EUR/kWh' */
 export function perKWh(micros: number | null, currency: string, sd?: number): string {
   if (micros === null) return UNKNOWN;

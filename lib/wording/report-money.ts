@@ -18,7 +18,7 @@ export function seasonRows({ totals, fan, own, allIn }: Balance, currency: strin
     { name: 'Electricity', value: energy(electricity?.kWh ?? null, 3) },
     {
       name: 'Its cost',
-      value: money(fan.micros, currency),
+      value: money(electricity === null ? null : fan.micros, currency),
       ...(fan.missing === null ? {} : { note: whyNoPrice(fan.missing) }),
     },
     {
