@@ -36,7 +36,7 @@ export function ColumnsTable({
       captionHidden
       columns={[
         { key: 'head', label: 'Column' },
-        { key: 'sample', label: 'First lines' },
+        { key: 'sample', label: 'First lines', wideOnly: true },
         { key: 'point', label: 'Goes to' },
         { key: 'unit', label: 'Its unit in the file' },
       ]}
@@ -49,8 +49,11 @@ export function ColumnsTable({
         const shown = isTime && layout.timeColumns[0] === column ? times : sample;
         return (
           <Row key={column}>
-            <RowHead className="max-w-48 break-words">{name}</RowHead>
-            <Cell className="font-mono text-[0.85rem]">
+            <RowHead className="max-w-48 break-words">
+              {name}
+              <span className="block font-mono text-[0.85rem] font-normal sm:hidden">{shown[0]}</span>
+            </RowHead>
+            <Cell wideOnly className="font-mono text-[0.85rem]">
               {shown.slice(0, 3).map((cell, place) => (
                 <span key={place} className="block whitespace-nowrap">
                   {cell}

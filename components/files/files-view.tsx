@@ -33,7 +33,12 @@ export function FilesView({
       <Sentence phrases={fileSentence(imports, house.name)} before="Files" />
       <Panel title={open === null ? 'Bring in a logger’s file' : open.name}>
         {mayImport ? (
-          <ImportPanel key={open?.id ?? 'new'} open={open} points={points} scene={scene} />
+          <ImportPanel
+            key={open === null ? 'new' : `${open.id} ${open.state}`}
+            open={open}
+            points={points}
+            scene={scene}
+          />
         ) : (
           <p className="max-w-prose text-soft">An owner or a grower can bring files in.</p>
         )}

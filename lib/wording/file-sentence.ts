@@ -23,6 +23,6 @@ export function fileSentence(
   return [
     `${count(done.length, 'file')} brought `,
     { text: count(readings, 'reading'), tone: 'strong' },
-    ` into ${house}; each can be taken back whole.`,
+    ` into ${house}; ${done.length === 1 ? 'it' : 'each'} can be taken back whole.`,
   ];
 }

@@ -25,10 +25,10 @@ beforeAll(async () => {
 });
 
 const clock = clockFrom({ rate: 1, realAt: 0, appAt: 0 });
-const work = () =>
+const work = (isLeading = () => true) =>
   runImports({
     ...{ pool: everyPool(), db: everyHolding(), clock, log: pino({ level: 'silent' }) },
-    isLeading: () => true,
+    isLeading,
   });
 
 /** Sends a file in two pieces. @returns the import's path */
@@ -45,13 +45,19 @@ async function sent(text: string | Buffer): Promise<string> {
 const previewed = async (path: string, layout?: unknown) =>
   (await grower.ask('POST', `${path}/preview`, layout === undefined ? {} : { layout })).body;
 
-async function brought(text: string): Promise<{ path: string; one: Json }> {
+/** Sent, looked through, and waiting for the worker to bring it in. */
+async function waiting(text: string): Promise<string> {
   const path = await sent(text);
   const { layout } = await previewed(path);
   expect((await grower.ask('PUT', `${path}/layout`, layout)).status).toBe(200);
   await work();
   expect((await grower.get(path)).body).toMatchObject({ state: 'checked' });
   expect((await grower.ask('POST', `${path}/bring`)).status).toBe(200);
+  return path;
+}
+
+async function brought(text: string): Promise<{ path: string; one: Json }> {
+  const path = await waiting(text);
   await work();
   return { path, one: (await grower.get(path)).body };
 }
@@ -66,6 +72,15 @@ async function stored(): Promise<[string, number][]> {
 const due = async () =>
   (await everyPool().query<{ hour: Date }>('select hour from reading_due where point = $1', [bench])).rows
     .length;
+
+/** Lines a minute apart with their offset; one in a thousand is wrong. */
+function minutes(from: string, many: number): string {
+  const first = Date.parse(from);
+  return Array.from({ length: many }, (_, i) => {
+    const time = new Date(first + i * 60_000).toISOString();
+    return `${time};${i % 1000 === 500 ? 'x' : `${i % 40},${i % 10}`}\n`;
+  }).join('');
+}
 
 const HEAD = 'Time;Bench probe 1 [°C]\n';
 
@@ -93,6 +108,31 @@ describe('a file that is brought in', () => {
     expect((await grower.get(path)).body).toMatchObject({ state: 'undone', brought: 0 });
     expect(await stored()).toEqual([['2026-01-10T18:00:00.000Z', 7]]);
     expect(await due()).toBe(2);
+  });
+
+  it('and broken off goes on where it was, each reading and each wrong line once; or is cancelled whole', async () => {
+    const before = (await stored()).length;
+    const path = await waiting(HEAD + minutes('2026-03-01T00:00:00Z', 40_000));
+    const onceOnly = (turns: number) => () => (turns -= 1) >= 0;
+    // asked when the work is taken, and again at each batch
+    await work(onceOnly(3));
+    const half = (await grower.get(path)).body;
+    expect(half['state']).toBe('to-bring');
+    expect(half['brought']).toBeGreaterThan(0);
+    expect(half['brought']).toBeLessThan(40_000);
+    await work();
+    expect((await grower.get(path)).body).toMatchObject({
+      ...{ state: 'done', brought: 39_960, duplicates: 0, faults: 40 },
+    });
+    expect((await grower.get(`${path}/faults`)).text.trim().split('\r\n')).toHaveLength(41);
+    await grower.ask('DELETE', path);
+    await work();
+    const again = await waiting(HEAD + minutes('2026-03-01T00:00:00Z', 40_000));
+    await work(onceOnly(3));
+    await grower.ask('DELETE', again);
+    await work();
+    expect((await grower.get(again)).body).toMatchObject({ state: 'undone', brought: 0 });
+    expect(await stored()).toHaveLength(before);
   });
 
   it('in thousands of lines comes in whole, and again not at all', async () => {
