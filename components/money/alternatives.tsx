@@ -4,7 +4,8 @@ import type { Balance } from '@/lib/analysis/money-balance';
 import { energyOf } from '@/lib/analysis/money-fuels';
 import type { FuelBody } from '@/lib/schema/money';
 import { decimal, share, UNKNOWN } from '@/lib/units/format';
-import { money, perKWh } from '@/lib/units/money';
+import { moneyFigure, priceFigure } from '@/lib/units/money';
+import { capital } from '@/lib/wording/counts';
 import { ALTERNATIVE_WORDS } from '@/lib/wording/money';
 
 /** The same heat from what is bought, cheapest first, the heap among them. */
@@ -20,17 +21,17 @@ export function Alternatives({
   const { allIn, alternatives, own, fan } = balance;
   const rows = alternatives.map(({ kind, perKWh: price, same }) => ({
     name: ALTERNATIVE_WORDS[kind],
-    price: perKWh(price, currency),
+    price: priceFigure(price, currency),
     sort: price,
-    same: same === null ? UNKNOWN : money(same.micros, currency, same.sd),
+    same: same === null ? UNKNOWN : give(moneyFigure(same.micros, currency), moneyFigure(same.sd, currency)),
     note: noteOf(fuels.find((one) => one.fuel === kind)),
   }));
   if (typeof allIn !== 'string')
     rows.push({
       name: 'this source, all in',
-      price: perKWh(allIn.perKWh, currency, allIn.sd),
+      price: give(priceFigure(allIn.perKWh, currency), priceFigure(allIn.sd, currency)),
       sort: allIn.perKWh,
-      same: money((own ?? 0) + (fan.micros ?? 0), currency),
+      same: moneyFigure((own ?? 0) + (fan.micros ?? 0), currency),
       note: 'what was paid',
     });
   rows.sort((a, b) => a.sort - b.sort);
@@ -44,25 +45,31 @@ export function Alternatives({
           captionHidden
           columns={[
             { key: 'from', label: 'from' },
-            { key: 'price', label: 'a kWh of heat', figure: true },
-            { key: 'same', label: 'the same heat', figure: true },
+            { key: 'price', label: `${currency} for 1 kWh`, figure: true },
+            { key: 'same', label: `${currency} for the same heat`, figure: true },
           ]}
         >
           {rows.map((row) => (
             <Row key={row.name}>
-              <RowHead>
-                {row.name}
-                <span className="block text-[0.85rem] font-normal text-soft">{row.note}</span>
-              </RowHead>
+              <RowHead>{row.name}</RowHead>
               <Cell figure>{row.price}</Cell>
               <Cell figure>{row.same}</Cell>
             </Row>
           ))}
         </Table>
       )}
+      <ul className="flex flex-col gap-1 pt-2 text-[0.85rem] text-soft empty:hidden">
+        {rows.map((row) => (
+          <li key={row.name}>
+            {capital(row.name)}: {row.note}.
+          </li>
+        ))}
+      </ul>
     </Panel>
   );
 }
+
+const give = (value: string, sd: string) => `${value}\u00a0±\u00a0${sd}`;
 
 function noteOf(fuel: FuelBody | undefined): string {
   if (fuel === undefined) return 'at what its hours cost on the mean, 1 kWh of heat for 1 kWh';

@@ -2,7 +2,7 @@ import { Panel } from '@/components/ui/panel';
 import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import type { HeapCost } from '@/lib/schema/money';
 import { count } from '@/lib/units/format';
-import { money, microsOf } from '@/lib/units/money';
+import { microsOf, moneyFigure } from '@/lib/units/money';
 import { CostForm } from './cost-form';
 import { COST_WORDS } from './cost-words';
 import { RemoveButton } from './remove-button';
@@ -37,7 +37,7 @@ export function CostsPanel({
           captionHidden
           columns={[
             { key: 'what', label: 'what' },
-            { key: 'amount', label: 'paid', figure: true },
+            { key: 'amount', label: `paid, ${currency}`, figure: true },
             { key: 'share', label: 'this season', figure: true },
             ...(mayWrite ? [{ key: 'remove', label: 'take out', labelHidden: true }] : []),
           ]}
@@ -52,8 +52,8 @@ export function CostsPanel({
                     .join(', ')}
                 </span>
               </RowHead>
-              <Cell figure>{money(microsOf(cost.amount), currency)}</Cell>
-              <Cell figure>{money(cost.share, currency)}</Cell>
+              <Cell figure>{moneyFigure(microsOf(cost.amount) ?? 0, currency)}</Cell>
+              <Cell figure>{moneyFigure(cost.share, currency)}</Cell>
               {mayWrite ? (
                 <Cell className="text-right">
                   <RemoveButton
