@@ -23,7 +23,8 @@ export function Alternatives({
     name: ALTERNATIVE_WORDS[kind],
     price: priceFigure(price, currency),
     sort: price,
-    same: same === null ? UNKNOWN : give(moneyFigure(same.micros, currency), moneyFigure(same.sd, currency)),
+    same: same === null ? UNKNOWN : moneyFigure(same.micros, currency),
+    sd: same === null ? '' : `\u00a0±\u00a0${moneyFigure(same.sd, currency)}`,
     note: noteOf(fuels.find((one) => one.fuel === kind)),
   }));
   if (typeof allIn !== 'string')
@@ -32,6 +33,7 @@ export function Alternatives({
       price: give(priceFigure(allIn.perKWh, currency), priceFigure(allIn.sd, currency)),
       sort: allIn.perKWh,
       same: moneyFigure((own ?? 0) + (fan.micros ?? 0), currency),
+      sd: '',
       note: 'what was paid',
     });
   rows.sort((a, b) => a.sort - b.sort);
@@ -46,14 +48,18 @@ export function Alternatives({
           columns={[
             { key: 'from', label: 'from' },
             { key: 'price', label: `${currency} for 1 kWh`, figure: true },
-            { key: 'same', label: `${currency} for the same heat`, figure: true },
+            { key: 'same', label: `the same, ${currency}`, figure: true },
           ]}
         >
           {rows.map((row) => (
             <Row key={row.name}>
               <RowHead>{row.name}</RowHead>
               <Cell figure>{row.price}</Cell>
-              <Cell figure>{row.same}</Cell>
+              <Cell figure>
+                {row.same}
+                {/* on a phone there is room for the deviation of the price alone, which is the same share */}
+                <span className="max-sm:hidden">{row.sd}</span>
+              </Cell>
             </Row>
           ))}
         </Table>
