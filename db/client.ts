@@ -8,12 +8,23 @@ import * as auth from './schema/auth';
 import * as heap from './schema/heap';
 import * as people from './schema/people';
 import * as rule from './schema/rule';
+import * as nodeLog from './schema/node-log';
 import * as running from './schema/running';
 import * as study from './schema/study';
 import * as watch from './schema/watch';
 import * as yard from './schema/yard';
 
-export const schema = { ...auth, ...heap, ...people, ...rule, ...running, ...study, ...watch, ...yard };
+export const schema = {
+  ...auth,
+  ...heap,
+  ...people,
+  ...rule,
+  ...nodeLog,
+  ...running,
+  ...study,
+  ...watch,
+  ...yard,
+};
 /** The pool's handle, or that of one transaction. */
 export type Db = PgDatabase<NodePgQueryResultHKT, typeof schema>;
 
