@@ -8,6 +8,7 @@ import type { InterlockVerdict, PlanInterlock } from '../interlocks';
 import { entry, wakeAt, type Run } from '../run';
 import { CLAIMS } from '../types';
 import type { ClaimRung } from './claim';
+import { shortCycle } from './short-cycle';
 
 export const interlock: ClaimRung<'interlock'> = {
   claim: 'interlock',
@@ -37,11 +38,13 @@ export function settleInterlocks(run: Run): void {
   }
 }
 
-/** Off while a needed channel is not yet on for the delay, or is itself to go off. */
+/** Off while a needed channel is not yet on for the delay, or is itself to go off now: not while its least on holds it. */
 function needs(run: Run, channel: number): InterlockVerdict | null {
   for (const lock of entry(run.plan.channels, channel).needs) {
     const other = entry(run.channels, lock.other);
-    const leaves = run.demandState[lock.other] === 'off' || run.interlocked[lock.other]?.wants === 'off';
+    const leaves =
+      (run.demandState[lock.other] === 'off' && !isHeldOn(run, lock.other)) ||
+      run.interlocked[lock.other]?.wants === 'off';
     if (leaves || other.known !== 'on') return verdict(run, lock, channel, null);
     const readyAt = other.knownSince === null ? run.at : other.knownSince + lock.delayMs;
     if (run.at >= readyAt) continue;
@@ -78,7 +81,11 @@ function neverWith(run: Run): void {
   }
   for (const channel of order) {
     if (keeps.has(channel) || run.interlocked[channel] !== null) continue;
+    // one that only its least on keeps running gives way to one that wants to, and does so till that one runs
+    const { claim, wanted: own } = entry(run.channels, channel);
+    const givesWay = isHeldOn(run, channel) || (own === 'off' && claim === 'interlock');
     const on = partners(run, channel).find(({ other }) => {
+      if (givesWay && keeps.has(other)) return true;
       const { wanted, known } = entry(run.channels, other);
       return known === 'on' || (wanted === 'on' && run.demandState[other] === 'on');
     });
@@ -114,6 +121,10 @@ function holds(run: Run, channel: number): InterlockVerdict | null {
   }
   return null;
 }
+
+/** Nothing but the least on time keeps it running. */
+const isHeldOn = (run: Run, channel: number): boolean =>
+  run.demandClaim[channel] === run.lowerClaim[channel] && shortCycle.speaks(run, channel) === 'on';
 
 const partners = (run: Run, channel: number): { lock: PlanInterlock; other: number }[] =>
   entry(run.plan.channels, channel).neverWith;
