@@ -49,4 +49,9 @@ export const RuleListQuery = z.strictObject({
   /** Retired ones too. */
   retired: z.enum(['true', 'false']).default('false'),
 });
-export const Findings = z.strictObject({ findings: z.array(Finding) });
+export const Findings = z.strictObject({
+  findings: z.array(Finding),
+  /** What could not be looked at yet, for want of readings. */
+  notKnown: z.array(z.string()),
+});
+export type Findings = z.infer<typeof Findings>;
