@@ -12,7 +12,7 @@ export function settleProof(run: Run, channel: number): void {
   if (config.runProof === null || runProofPoint === null) return;
   const memory = entry(run.channels, channel);
   let { standing } = memory;
-  if (memory.counted === 'off') standing = false;
+  if (memory.counted === 'off' || run.usable[runProofPoint] === 'bad') standing = false;
   else if (run.usable[runProofPoint] === 'good') {
     const { value, at } = entry(run.points, runProofPoint);
     const says = at !== null && at >= (memory.countedSince ?? -Infinity) + SPIN_UP_MS;

@@ -6,7 +6,7 @@
 import type { FrostReason } from '../because';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
-import { restForbids } from './rest';
+import { rest, restForbids } from './rest';
 
 const ENDS_K = 1;
 const BLIND_MS = 1_800_000;
@@ -23,7 +23,7 @@ export const frost: ClaimRung<'frost'> = {
     if (inFrost === null) return null;
     if (inFrost === 'cools') return 'off';
     if (config.loadKind === 'heater' && run.frost.blindSince !== null) return null;
-    if (!frostMayBreakRest && restForbids(run, channel) !== null) return null;
+    if (!frostMayBreakRest && rest.speaks(run, channel) !== null) return null;
     return 'on';
   },
   because: (run, channel): FrostReason => {
