@@ -1,6 +1,7 @@
 /** What control did and how it stands: written by the worker in batches, read by pages and the interface. */
 import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm';
 import type { Db, Holding } from '@/db/client';
+import { nodeLog } from '@/db/schema/node-log';
 import { controlMemory, decision, relayReport, switching } from '@/db/schema/running';
 import type { Explanation, State } from '@/lib/control/types';
 import type { HouseState } from '@/lib/schema/house-state';
@@ -8,6 +9,7 @@ import type { HouseState } from '@/lib/schema/house-state';
 export type SwitchingRow = typeof switching.$inferInsert;
 export type DecisionRow = typeof decision.$inferInsert;
 export type RelayReportRow = typeof relayReport.$inferInsert;
+export type NodeLogRow = typeof nodeLog.$inferInsert;
 export type MemoryRow = typeof controlMemory.$inferInsert;
 
 /** Rows of any number of houses and holdings, in the order in which they came to be. */
@@ -15,6 +17,8 @@ export interface RunningBatch {
   switchings: SwitchingRow[];
   decisions: DecisionRow[];
   reports: RelayReportRow[];
+  /** What nodes said of themselves. */
+  logs?: NodeLogRow[];
   /** One a house at most: the newest. */
   memories: MemoryRow[];
 }
@@ -29,6 +33,8 @@ export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
       await tx.insert(switching).values(batch.switchings).onConflictDoNothing();
     if (batch.decisions.length > 0) await tx.insert(decision).values(batch.decisions).onConflictDoNothing();
     if (batch.reports.length > 0) await tx.insert(relayReport).values(batch.reports).onConflictDoNothing();
+    if (batch.logs !== undefined && batch.logs.length > 0)
+      await tx.insert(nodeLog).values(batch.logs).onConflictDoNothing();
     for (const row of batch.memories) {
       const { holdingId: _holding, houseId: _house, ...changed } = row;
       await tx
@@ -208,8 +214,9 @@ export async function listRelayReports(
 }
 
 /** A node's text may hold what no database keeps; it must not keep the notes of all others from being written. */
+export const storableText = (text: string): string => text.replace(/[\0\p{Surrogate}]/gu, '\ufffd');
 const storable = (_key: string, value: unknown): unknown =>
-  typeof value === 'string' ? value.replace(/[\0\p{Surrogate}]/gu, '\ufffd') : value;
+  typeof value === 'string' ? storableText(value) : value;
 
 /** What the link last knew of each node, for the wiring page and for a restarted worker. */
 export async function writeNodeStatus(

@@ -94,6 +94,8 @@ function channelFaults(run: Run, index: number, stand: Stand): void {
   if (memory.noGainUntil !== null && run.at < memory.noGainUntil) stand('no-gain', { channel: id }, named);
   if (memory.standing) stand('fan-standing', { channel: id }, named);
   // an order given in this very step cannot have been followed yet, and `counted` then goes by what is wanted
-  if (relay !== null && memory.counted === relay.reported && memory.counted !== memory.wanted)
+  // and while its node's fallback runs it, nobody has told the node yet
+  const follows = relay === null || memory.counted !== relay.reported || memory.counted === memory.wanted;
+  if (!follows && relay.isAlone !== true)
     stand('relay-does-not-follow', { channel: id }, () => ({ key, wanted: memory.wanted }));
 }

@@ -96,6 +96,8 @@ export interface RelayMemory {
   reportedAt: number | null;
   acknowledges: boolean;
   leaseEndsAt: number | null;
+  /** Its node's fallback has it on, and nobody commands the node. */
+  isAlone?: boolean;
   /** The step that was told this. */
   seenAt: number;
 }
@@ -127,6 +129,8 @@ export interface ChannelMemory {
   pointDeadSince: number | null;
   gainLowSince: number | null;
   noGainUntil: number | null;
+  /** What its node's fallback ran up to then has been taken in; absent: nothing was ever told. */
+  aloneTill?: number;
   /** Ordered on, but its proof point shows nothing. */
   standing: boolean;
 }

@@ -6,6 +6,7 @@ import { fit } from './fit';
 import { MEMORY_VERSION, type Memory } from './memory';
 import type { Plan } from './plan';
 import { silenceAhead, takeReading } from './quality';
+import { takeRunsAlone } from './ran-alone';
 import { entry, type Run } from './run';
 import { settle, settleUndriven } from './settle';
 import type { Observed } from './types';
@@ -48,7 +49,10 @@ export function play(
     if (seen !== undefined && point.derived === null)
       run.points[index] = takeReading(point, entry(run.points, index), seen, stepAt);
   }
-  for (let index = 0; index < plan.channels.length; index += 1) noteRelay(run, index);
+  for (let index = 0; index < plan.channels.length; index += 1) {
+    noteRelay(run, index);
+    takeRunsAlone(run, index);
+  }
   const taken = takeCommands(run, memory.taken);
   settle(run);
   const faults = faultsNow(run, memory.faults);

@@ -165,6 +165,10 @@ export interface ObservedRelay {
   acknowledges: boolean;
   /** Latest instant at which a lease given so far can end; null: none was given. */
   leaseEndsAt: number | null;
+  /** Nobody commanded the node when it reported, and its fallback has this coil on. */
+  isAlone?: boolean;
+  /** When this load ran by its node's own fallback, told since the step before; over, epoch ms. */
+  ranAlone?: { from: number; to: number }[];
 }
 
 export type PersonCommand = { number: number; at: number; by: string } & (
@@ -257,6 +261,8 @@ export type ControlEvent = { at: number } & (
   /** Another claim decides, the state stays; a switching tells its claim itself. `before` is null at a channel's first step. */
   | { kind: 'decision'; channel: string; state: State; claim: Claim; before: Claim | null }
   | { kind: 'rest-begun' | 'rest-ended'; source: string; why: Data }
+  /** Told afterwards: a node ran its fallback while nobody commanded it. */
+  | { kind: 'ran-alone'; channel: string; from: number; to: number }
   | { kind: 'latch'; rule: string; on: boolean }
   | { kind: 'hand-begun' | 'hand-ended'; channel: string; why: Data }
   | { kind: 'lock-out-begun' | 'lock-out-ended'; channel: string; why: Data }

@@ -48,7 +48,7 @@ export function readFallbackText(text: string): FallbackEntry | null {
   const [, what, rest = ''] = LINE.exec(text.trim()) ?? [];
   if (what === undefined) return null;
   const pairs = new Map(rest.split(' ').flatMap((pair) => (pair === '' ? [] : [splitPair(pair)])));
-  const at = Number(pairs.get('at') ?? NaN) * MS;
+  const at = Math.round(Number(pairs.get('at') ?? NaN) * MS);
   if (!Number.isFinite(at) || at < 0) return null;
   if (what === 'begun' || what === 'ended') return { what, at };
   const relay = Number(pairs.get('relay') ?? NaN);

@@ -23,10 +23,10 @@ export interface OwnWorker {
 }
 
 /** @param waits for it to lead; a stand-by does not */
-export async function ownWorker(waits = true, instance: string = randomUUID()): Promise<OwnWorker> {
+export async function ownWorker(waits = true, instance: string = randomUUID(), rate = 1): Promise<OwnWorker> {
   const metrics = new Metrics();
   const base = {
-    clock: await startClock({ rate: 1 }),
+    clock: await startClock({ rate }),
     log: log(),
     db: everyHolding(),
     pool: everyPool(),

@@ -2,7 +2,8 @@
 import { v7 } from 'uuid';
 import type { HouseHead, ChannelWiring } from '@/db/queries/plan';
 import type { DecisionRow, RelayReportRow, SwitchingRow } from '@/db/queries/running';
-import type { ControlEvent, Explanation } from '@/lib/control/types';
+import type { ControlEvent, Data, Explanation, State } from '@/lib/control/types';
+import type { AloneChange } from './node-fallback';
 import { loadState, type Report, type Trip } from './node-relays';
 
 export function switchingRows(
@@ -50,30 +51,41 @@ export function reportRows(
 
 /** Coils that dropped with their lease: switchings of their own, that no command made. */
 export function tripRows(house: HouseHead, { trip, dropped }: Trip, at: number): SwitchingRow[] {
-  return dropped.map((channel) => {
-    const from = loadState(channel, 'on');
-    const to = loadState(channel, 'off');
-    const because = { safe: to, points: [], trip };
-    const explanation: Explanation = {
-      channel: channel.id,
-      at,
-      state: to,
-      claim: 'fail-safe',
-      until: null,
-      ladder: [{ claim: 'fail-safe', speaks: true, wants: to, because }],
-      next: [],
-      rule: null,
-    };
-    return {
-      ...headOf(house, channel.id, at),
-      from,
-      to,
-      claim: 'fail-safe',
-      number: null,
-      trip,
-      explanation,
-    };
+  return dropped.map((channel) => uncommanded(house, channel, 'off', at, trip, {}));
+}
+
+/** What a node's fallback did: switchings of their own too, each told once by its time. */
+export function aloneRows(house: HouseHead, changes: readonly AloneChange[]): SwitchingRow[] {
+  return changes.map(({ channel, at, coil, told }) => {
+    const { below, above } = channel.fallback ?? { below: null, above: null };
+    const point = told?.point ?? channel.fallback?.point ?? null;
+    const fallback = { point, value: told?.value ?? null, why: told?.why ?? null, below, above };
+    return uncommanded(house, channel, coil, at, `fallback/${told?.at ?? at}/${coil}`, { fallback });
   });
+}
+
+function uncommanded(
+  house: HouseHead,
+  channel: ChannelWiring,
+  coil: State,
+  at: number,
+  trip: string,
+  more: Data,
+): SwitchingRow {
+  const to = loadState(channel, coil);
+  const because = { safe: loadState(channel, 'off'), points: [], trip, ...more };
+  const explanation: Explanation = {
+    channel: channel.id,
+    at,
+    state: to,
+    claim: 'fail-safe',
+    until: null,
+    ladder: [{ claim: 'fail-safe', speaks: true, wants: to, because }],
+    next: [],
+    rule: null,
+  };
+  const from = to === 'on' ? 'off' : 'on';
+  return { ...headOf(house, channel.id, at), from, to, claim: 'fail-safe', number: null, trip, explanation };
 }
 
 function headOf(house: HouseHead, channelId: string, at: number) {

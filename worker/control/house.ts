@@ -169,6 +169,7 @@ export class House implements ControlledHouse {
     this.commands = this.commands.filter((one) => one.number > result.memory.taken);
     for (const point of this.points.values()) delete point.between;
     this.untold.clear();
+    this.nodes.told();
 
     const orders = this.nodes.order(result);
     const entry: Entry = {
