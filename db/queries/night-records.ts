@@ -28,6 +28,7 @@ interface PointOfNights {
 
 interface ChannelOfNights extends Omit<NightChannel, 'record'> {
   id: string;
+  key: string;
   sourceId: string;
   nodeKey: string;
   safe: 'on' | 'off';
@@ -91,6 +92,7 @@ export async function yardOfNights(holding: Holding, houseId: string): Promise<Y
       return [
         {
           id: row.id,
+          key: row.key,
           sourceId: row.sourceId,
           number: row.number,
           label: row.label,
