@@ -6,7 +6,8 @@ import { Skeleton } from '@/components/ui/states';
 import { becauseWords } from '@/lib/wording/because';
 import { stateWord } from '@/lib/wording/channel-state';
 import { becauseInstant } from '@/lib/wording/instants';
-import { ladderLines, nextWords, type LadderLine, type Step } from '@/lib/wording/ladder';
+import { ladderLines, type LadderLine, type Step } from '@/lib/wording/ladder';
+import { nextWords } from '@/lib/wording/next';
 import { timeWords } from '@/lib/wording/scene';
 import { useHouse } from './live-house';
 

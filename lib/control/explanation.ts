@@ -1,5 +1,5 @@
 /** Why a channel is as it is, at an instant that is settled. */
-import { becauseOf, ladderOf } from './ladder';
+import { becauseOf, ladderOf, ladderUnder } from './ladder';
 import { entry, type Run } from './run';
 import type { Explanation } from './types';
 
@@ -16,6 +16,7 @@ export function explainSettled(run: Run, channel: number): Explanation {
     claim: decided,
     until: typeof because.until === 'number' ? because.until : null,
     ladder: ladderOf(run, channel, decided),
+    under: ladderUnder(run, channel, decided),
     next: [],
     rule,
   };

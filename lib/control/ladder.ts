@@ -97,3 +97,16 @@ export function ladderOf(run: Run, channel: number, decided: Claim): LadderStep[
   }
   return steps;
 }
+
+/** Claims under the one that decided that would speak if it did not, from short-cycle down; nothing else is no claim. */
+export function ladderUnder(run: Run, channel: number, decided: Claim): LadderStep[] {
+  const { wake } = run;
+  const place = LADDER.findIndex((one) => one.claim === decided);
+  const steps = LADDER.slice(place + 1).flatMap(({ claim, speaks, because }): LadderStep[] => {
+    const wants = claim === 'idle' ? null : speaks(run, channel);
+    return wants === null ? [] : [{ claim, speaks: true, wants, because: because(run, channel) }];
+  });
+  // asking is no reason to wake
+  run.wake = wake;
+  return steps;
+}

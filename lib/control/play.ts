@@ -3,7 +3,7 @@ import { takeCommands } from './commands';
 import { extendLease, noteRelay } from './counting';
 import { faultsNow } from './faults';
 import { fit } from './fit';
-import { MEMORY_VERSION, type Memory } from './memory';
+import { MEMORY_VERSION, type Memory, type PointMemory } from './memory';
 import type { Plan } from './plan';
 import { silenceAhead, takeReading } from './quality';
 import { takeRunsAlone } from './ran-alone';
@@ -19,7 +19,7 @@ export interface Played {
 export interface PlayOptions {
   /** Whether switchings carry their ladder. */
   explains: boolean;
-  /** A look ahead: the readings stay as they are and no point falls silent. */
+  /** A look ahead: the readings stay as they are, no point falls silent and none that is silent speaks. */
   readingsHold?: boolean;
 }
 
@@ -68,7 +68,7 @@ function begin(plan: Plan, memory: Memory, observed: Observed, stepAt: number, o
     stepAt,
     undriven: false,
     awayFrom: null,
-    silentAt: options.readingsHold === true ? plan.points.map(() => Infinity) : null,
+    silentAt: options.readingsHold === true ? memory.points.map(heldSilence) : null,
     wake: Infinity,
     points: memory.points.slice(),
     rules: memory.rules.slice(),
@@ -89,6 +89,9 @@ function begin(plan: Plan, memory: Memory, observed: Observed, stepAt: number, o
     explains: options.explains,
   };
 }
+
+const heldSilence = ({ why }: PointMemory): number =>
+  why === 'silent' || why === 'worker-was-away' ? -Infinity : Infinity;
 
 /** Through the instants between, under what the last step knew; but leases were renewed and readings fill silences. */
 function pass(run: Run, first: number): void {

@@ -14,7 +14,7 @@ import { askDemand, askLower, decide } from './ladder';
 import { settleGain, settleProof } from './least-gain';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
-import type { Claim, State } from './types';
+import type { Claim, Explanation, State } from './types';
 
 /** Settles `run.at`; afterwards `run.wake` is the earliest instant at which something changes by itself. */
 export function settle(run: Run): void {
@@ -34,7 +34,7 @@ export function settle(run: Run): void {
     const handsEnded = settleDemands(run);
     if (!decideAll(run) && !handsEnded) break;
   }
-  explainSwitchings(run, firstEvent);
+  explainDecisions(run, firstEvent);
 }
 
 /** While nobody drove: loads dropped with their leases, time went on, and that is all that can be said. */
@@ -101,22 +101,15 @@ function keep(run: Run, channel: number, claim: Claim, state: State): boolean {
   const memory = entry(run.channels, channel);
   if (state === memory.wanted) {
     if (claim === memory.claim) return false;
-    run.events.push({ kind: 'decision', at: run.at, channel: memory.id, state, claim, before: memory.claim });
+    const { id, claim: before } = memory;
+    const explanation = unexplained(id, run.at, state, claim);
+    run.events.push({ kind: 'decision', at: run.at, channel: id, state, claim, before, explanation });
     run.channels[channel] = { ...memory, claim };
     return false;
   }
   countDraw(run, channel, state);
   run.channels[channel] = { ...memory, wanted: state, claim, orderedAt: run.stepAt };
-  const explanation = {
-    channel: memory.id,
-    at: run.at,
-    state,
-    claim,
-    until: null,
-    ladder: [],
-    next: [],
-    rule: null,
-  };
+  const explanation = unexplained(memory.id, run.at, state, claim);
   run.events.push({
     kind: 'switching',
     at: run.at,
@@ -129,6 +122,11 @@ function keep(run: Run, channel: number, claim: Claim, state: State): boolean {
   return true;
 }
 
+const unexplained = (channel: string, at: number, state: State, claim: Claim): Explanation => ({
+  ...{ channel, at, state, claim },
+  ...{ until: null, ladder: [], next: [], rule: null },
+});
+
 function countDraw(run: Run, channel: number, state: State): void {
   const { source } = entry(run.plan.channels, channel);
   if (source === null || entry(run.channels, channel).counted === state) return;
@@ -137,14 +135,17 @@ function countDraw(run: Run, channel: number, state: State): void {
   run.drawCount[source] = Math.max(0, (run.drawCount[source] ?? 0) + sign);
 }
 
-/** A switching's ladder is taken once the instant is settled, so that what follows it can be foreseen. */
-function explainSwitchings(run: Run, firstEvent: number): void {
+/** A decision's ladder is taken once the instant is settled, so that what follows it can be foreseen. */
+function explainDecisions(run: Run, firstEvent: number): void {
+  if (!run.explains) return;
   for (let place = firstEvent; place < run.events.length; place += 1) {
     const event = entry(run.events, place);
-    if (event.kind !== 'switching') continue;
+    if (event.kind !== 'switching' && event.kind !== 'decision') continue;
     const channel = run.channels.findIndex((one) => one.id === event.channel);
-    if (!run.explains) continue;
     const explanation = explainSettled(run, channel);
+    // a decision that a later round of the same instant overtook has no ladder of its own
+    if (event.kind === 'decision' && (event.claim !== explanation.claim || event.state !== explanation.state))
+      continue;
     run.events[place] = { ...event, claim: explanation.claim, explanation };
   }
 }

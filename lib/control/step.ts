@@ -49,13 +49,20 @@ class Answer implements StepResult {
   }
 }
 
-/** Switchings that a later one of the same step overtook are marked; the others learn what comes next. */
+/** Decisions that a later one of the same step overtook are marked; the others learn what comes next. */
 function tellEvents(run: Run, memory: Memory): ControlEvent[] {
-  const last = new Map<string, ControlEvent>();
-  for (const event of run.events) if (event.kind === 'switching') last.set(event.channel, event);
+  const switched = new Map<string, ControlEvent>();
+  const decided = new Map<string, ControlEvent>();
+  for (const event of run.events) {
+    if (event.kind === 'switching') switched.set(event.channel, event);
+    if (event.kind === 'switching' || event.kind === 'decision') decided.set(event.channel, event);
+  }
   return run.events.map((event) => {
-    if (event.kind !== 'switching') return event;
-    if (last.get(event.channel) !== event) return { ...event, overtaken: true };
+    if (event.kind !== 'switching' && event.kind !== 'decision') return event;
+    if (event.kind === 'switching' && switched.get(event.channel) !== event)
+      return { ...event, overtaken: true };
+    // what comes next is reckoned from where the step ends, so only for what still holds there
+    if (decided.get(event.channel) !== event) return event;
     return { ...event, explanation: addLookAhead(run, memory, event.explanation) };
   });
 }

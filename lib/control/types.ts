@@ -234,7 +234,7 @@ export interface LadderStep {
   because?: Data;
 }
 
-/** The ladder down to the claim that decided, and what would follow it. */
+/** The ladder down to the claim that decided, what stands under it, and what would follow it. */
 export interface Explanation {
   channel: string;
   at: number;
@@ -242,6 +242,8 @@ export interface Explanation {
   claim: Claim;
   until: number | null;
   ladder: LadderStep[];
+  /** Claims under the one that decided that speak too, highest first; absent in what was stored before they were told. */
+  under?: LadderStep[];
   /** What comes next, earliest first: when known, the claim that then decides, and what would bring it sooner. */
   next: Data[];
   rule: { id: string; version: number } | null;
@@ -259,7 +261,14 @@ export type ControlEvent = { at: number } & (
       overtaken?: true;
     }
   /** Another claim decides, the state stays; a switching tells its claim itself. `before` is null at a channel's first step. */
-  | { kind: 'decision'; channel: string; state: State; claim: Claim; before: Claim | null }
+  | {
+      kind: 'decision';
+      channel: string;
+      state: State;
+      claim: Claim;
+      before: Claim | null;
+      explanation: Explanation;
+    }
   | { kind: 'rest-begun' | 'rest-ended'; source: string; why: Data }
   /** Told afterwards: a node ran its fallback while nobody commanded it. */
   | { kind: 'ran-alone'; channel: string; from: number; to: number }
