@@ -58,6 +58,10 @@ export class Play {
       expect(this.player.switchings(key, this.start), `${key}, ${this.way}`).toEqual(list);
   }
 
+  reads(values: Record<string, number>): void {
+    for (const [key, value] of Object.entries(values)) this.values.set(key, value);
+  }
+
   order(order: Order): void {
     const { player } = this;
     const number = player.observed.commands.length + 1;
@@ -91,7 +95,7 @@ export class Play {
     if (!isLate) this.stepUpTo(instant - 1);
     player.now = instant;
     if (typeof what === 'function') what(this);
-    else if (what !== null) for (const [key, value] of Object.entries(what)) this.values.set(key, value);
+    else if (what !== null) this.reads(what);
     if (isLate) this.readLate(spoke, instant);
     else this.read(instant);
     this.step();

@@ -1,0 +1,278 @@
+/** What people order: hand, lock-out, proving. On paper; a frost limit of 3 °C where there is one. */
+import { describe, expect, it } from 'vitest';
+import type { ChannelConfig, HouseConfig } from '@/lib/control/types';
+import { body, channel, house, Player, rule, S, source } from './house';
+import { hand, holds, lockOut, prove, silent, unlock, type Play } from './table';
+
+const warm = { bench: 9, air: 9, core: 50, base: 45 };
+const cold = { ...warm, bench: 3.5 };
+const H12 = 43_200;
+const fan = (
+  more: Partial<ChannelConfig> = {},
+  house_: Partial<HouseConfig> & { frostLimit?: number } = {},
+) => house({ channels: [channel('fan', 1, more)], rules: [rule('fan', body())], ...house_ });
+const cools = rule('fan', body({ purpose: 'cool', band: [{ from: '00:00', low: 20, high: 25 }] }));
+const vent = fan({ loadKind: 'vent' }, { frostLimit: 3, rules: [cools] });
+const auto = (play: Play) => play.order({ kind: 'auto', channel: 'fan' });
+
+describe('hand', () => {
+  holds('ends by its time, is renewed by another, and is given back', {
+    config: fan(),
+    reads: cold,
+    rows: [
+      [10, hand('off', 100), 'off hand'],
+      [109.999, null, 'off hand'],
+      [110, null, 'on band'],
+      [200, hand('off', 100), 'off hand'],
+      [290, hand('off', 100), 'off hand'],
+      [389.999, null, 'off hand'],
+      [390, null, 'on band'],
+      [400, hand('off', H12), 'off hand'],
+      [43_500, auto, 'on band'],
+    ],
+  });
+
+  holds('off breaks least on, on waits for least off', {
+    config: fan({ minOnS: 120, minOffS: 180 }),
+    reads: cold,
+    rows: [
+      [10, hand('off', 5), 'off hand'],
+      [15, null, 'off short-cycle'],
+      [20, hand('on', 600), 'off short-cycle'],
+      [189.999, null, 'off short-cycle'],
+      [190, null, 'on hand'],
+    ],
+  });
+
+  holds('off ends when frost begins on a channel that helps, not on one that does not', {
+    config: fan(
+      { frostHelp: true },
+      { frostLimit: 3, channels: [channel('fan', 1, { frostHelp: true }), channel('lamp', 2)] },
+    ),
+    reads: warm,
+    rows: [
+      [10, hand('off', H12), 'off hand'],
+      [20, hand('off', H12, { channel: 'lamp' }), { lamp: 'off hand' }],
+      [7200, { air: 2.9 }, { fan: 'on frost', lamp: 'off hand' }],
+      [7300, { air: 9 }, { fan: 'off idle', lamp: 'off hand' }],
+    ],
+  });
+
+  holds('off that holds in frost goes on through it', {
+    config: fan({ frostHelp: true }, { frostLimit: 3 }),
+    reads: warm,
+    rows: [
+      [10, hand('off', H12, { holdInFrost: true }), 'off hand'],
+      [7200, { air: 2.9 }, 'off hand'],
+      [43_209.999, null, 'off hand'],
+      [43_210, null, 'on frost'],
+    ],
+  });
+
+  holds(
+    'off given in frost without saying that it holds is not taken, even in the instant at which it begins',
+    {
+      config: fan({ frostHelp: true }, { frostLimit: 3 }),
+      reads: warm,
+      rows: [
+        [
+          60,
+          (play: Play) => {
+            play.reads({ air: 2 });
+            hand('off', 600)(play);
+          },
+          'on frost',
+        ],
+        [120, hand('off', 600), 'on frost'],
+        [180, hand('off', 600, { holdInFrost: true }), 'off hand'],
+      ],
+    },
+  );
+
+  holds('on of what cools ends when frost begins', {
+    config: vent,
+    reads: warm,
+    rows: [
+      [10, hand('on', H12), 'on hand'],
+      [7200, { air: 2.9 }, 'off frost'],
+      [7300, { air: 9 }, 'off idle'],
+    ],
+  });
+
+  holds('on of what cools that is given in frost lasts 30 min, though the frost is over before', {
+    config: vent,
+    reads: { ...warm, air: 2 },
+    rows: [
+      [100, hand('on', H12), 'on hand'],
+      [600, { air: 9 }, 'on hand'],
+      [1899.999, null, 'on hand'],
+      [1900, null, 'off idle'],
+    ],
+  });
+
+  holds('and ends before them when another frost begins', {
+    config: vent,
+    reads: { ...warm, air: 2 },
+    rows: [
+      [100, hand('on', H12), 'on hand'],
+      [600, { air: 9 }, 'on hand'],
+      [900, { air: 2 }, 'off frost'],
+    ],
+  });
+
+  // silent from 60 s on: dead at 150 s, and 30 min from there
+  holds('on lasts 30 min from the death of its point', {
+    config: fan(),
+    reads: warm,
+    rows: [
+      [10, hand('on', H12), 'on hand'],
+      [60, silent('bench'), 'on hand'],
+      [1949.999, null, 'on hand'],
+      [1950, null, 'off fail-safe'],
+    ],
+  });
+
+  holds('on is itself again where its point comes back before', {
+    config: fan(),
+    reads: warm,
+    rows: [
+      [10, hand('on', 7200), 'on hand'],
+      [60, silent('bench'), 'on hand'],
+      [1900, (play: Play) => play.wake('bench'), 'on hand'],
+      [7209.999, null, 'on hand'],
+      [7210, null, 'off idle'],
+    ],
+  });
+
+  holds('on lasts 30 min from the command while its point is dead', {
+    config: fan(),
+    reads: warm,
+    rows: [
+      [60, silent('bench'), 'off idle'],
+      [1000, hand('on', H12), 'on hand'],
+      [2799.999, null, 'on hand'],
+      [2800, null, 'off fail-safe'],
+    ],
+  });
+
+  holds('on of a heater ends with its point, is not taken while it is dead, and not for more than an hour', {
+    config: fan({ loadKind: 'heater' }),
+    reads: warm,
+    rows: [
+      [10, hand('on', 3601), 'off idle'],
+      [20, hand('on', 3600), 'on hand'],
+      [60, silent('bench'), 'on hand'],
+      [149.999, null, 'on hand'],
+      [150, null, 'off fail-safe'],
+      [200, hand('on', 60), 'off fail-safe'],
+    ],
+  });
+
+  holds('for more than 12 h is not taken', {
+    config: fan(),
+    reads: warm,
+    rows: [
+      [10, hand('on', H12 + 1), 'off idle'],
+      [20, hand('on', H12), 'on hand'],
+      [30, hand('off', H12 + 1), 'on hand'],
+    ],
+  });
+
+  it('on of a heater goes on over a restart of the worker', () => {
+    const player = new Player(fan({ loadKind: 'heater' }), warm);
+    player.order({ kind: 'hand', channel: 'fan', state: 'on', seconds: 3600, holdInFrost: false });
+    player.now += 10 * S;
+    player.observed.workerStartedAt = player.now - S;
+    player.restart().step();
+    expect(player.says()).toBe('on hand');
+  });
+});
+
+describe('lock-out', () => {
+  holds('ends a hand on and a pulse for good: taking it off starts nothing', {
+    config: fan({ minOnS: 600 }),
+    reads: warm,
+    rows: [
+      [10, hand('on', 7200), 'on hand'],
+      [20, lockOut(), 'off lock-out'],
+      [30, unlock(), 'off idle'],
+      [40, prove(60), 'on proving'],
+      [50, lockOut(), 'off lock-out'],
+      [60, unlock(), 'off idle'],
+    ],
+  });
+
+  holds('takes no hand on and no pulse; a hand off stays', {
+    config: fan(),
+    reads: cold,
+    rows: [
+      [10, lockOut(), 'off lock-out'],
+      [20, hand('on', 7200), 'off lock-out'],
+      [30, prove(60), 'off lock-out'],
+      [40, hand('off', 600), 'off lock-out'],
+      [50, unlock(), 'off hand'],
+      [640, null, 'on band'],
+    ],
+  });
+
+  holds('of two is off till both are taken off, frost or not, and then waits for least off', {
+    config: fan({ frostHelp: true, minOffS: 180 }, { frostLimit: 3 }),
+    reads: { ...warm, air: 2 },
+    rows: [
+      [10, lockOut('fan', 'a'), 'off lock-out'],
+      [20, lockOut('fan', 'b'), 'off lock-out'],
+      [30, unlock('fan', 'a'), 'off lock-out'],
+      [40, unlock('fan', 'b'), 'off short-cycle'],
+      [190, null, 'on frost'],
+    ],
+  });
+});
+
+describe('proving', () => {
+  holds('begins no least on, breaks least off, and its end begins least off', {
+    config: fan({ minOnS: 120, minOffS: 180 }),
+    reads: warm,
+    rows: [
+      [10, prove(10), 'on proving'],
+      [20, null, 'off idle'],
+      [30, prove(60), 'on proving'],
+      [90, null, 'off idle'],
+      [95, { bench: 3.5 }, 'off short-cycle'],
+      [269.999, null, 'off short-cycle'],
+      [270, null, 'on band'],
+    ],
+  });
+
+  holds('goes over into the band’s draw where that wants it, with its least on from there', {
+    config: fan({ minOnS: 120 }),
+    reads: warm,
+    rows: [
+      [10, prove(60), 'on proving'],
+      [40, { bench: 3.5 }, 'on proving'],
+      [70, { bench: 9 }, 'off idle'],
+      [100, prove(10), 'on proving'],
+      [105, { bench: 3.5 }, 'on proving'],
+      [110, null, 'on band'],
+      [120, { bench: 9 }, 'on short-cycle'],
+      [229.999, null, 'on short-cycle'],
+      [230, null, 'off idle'],
+    ],
+  });
+
+  holds('is 60 s at most, of a channel that draws 600 s, and nothing on a load that runs', {
+    config: fan(
+      {},
+      { sources: [source('heap')], channels: [channel('fan', 1, { source: 'heap' }), channel('lamp', 2)] },
+    ),
+    reads: warm,
+    rows: [
+      [10, prove(61, 'lamp'), { lamp: 'off idle' }],
+      [20, prove(60, 'lamp'), { lamp: 'on proving' }],
+      [30, prove(601), 'off idle'],
+      [40, prove(600), 'on proving'],
+      [639.999, null, 'on proving'],
+      [640, { bench: 3.5 }, 'on band'],
+      [650, prove(60), 'on band'],
+    ],
+  });
+});

@@ -1,0 +1,114 @@
+/** One that needs another, on paper: a (bench) needs b (air), on for 5 s before. */
+import { describe } from 'vitest';
+import type { ChannelConfig } from '@/lib/control/types';
+import { body, channel, house, rule } from './house';
+import { hand, holds, lockOut } from './table';
+
+const pair = (
+  a: Partial<ChannelConfig> = {},
+  b: Partial<ChannelConfig> = {},
+  frostLimit: number | null = null,
+) =>
+  house({
+    frostLimit,
+    channels: [channel('a', 1, a), channel('b', 2, b)],
+    rules: [rule('a', body()), rule('b', body({ point: 'air' }))],
+    interlocks: [{ id: 'lock', channel: 'a', kind: 'needs', other: 'b', delayS: 5, frostMayBreak: false }],
+  });
+
+describe('needs', () => {
+  holds('does not start the other, starts its delay after it, and goes before it', {
+    config: pair(),
+    reads: { bench: 3, air: 9 },
+    rows: [
+      [60, null, { a: 'off interlock', b: 'off idle' }],
+      [90, { air: 3 }, { a: 'off interlock', b: 'on band' }],
+      [94.999, null, { a: 'off interlock', b: 'on band' }],
+      [95, null, { a: 'on band', b: 'on band' }],
+      [150, { air: 9 }, { a: 'off interlock', b: 'off idle' }],
+    ],
+    switches: {
+      a: [
+        [95, 'on', 'band'],
+        [150, 'off', 'interlock'],
+      ],
+      b: [
+        [90, 'on', 'band'],
+        [150, 'off', 'idle'],
+      ],
+    },
+  });
+
+  holds('by hand too', {
+    config: pair(),
+    reads: { bench: 9, air: 9 },
+    rows: [
+      [10, hand('on', 600, { channel: 'a' }), { a: 'off interlock' }],
+      [20, hand('on', 300, { channel: 'b' }), { a: 'off interlock', b: 'on hand' }],
+      [25, null, { a: 'on hand', b: 'on hand' }],
+      [320, null, { a: 'off interlock', b: 'off idle' }],
+    ],
+  });
+
+  holds('breaks least on when the other goes, which its own least on holds before', {
+    config: pair({ minOnS: 900 }, { minOnS: 300 }),
+    reads: { bench: 3, air: 3 },
+    rows: [
+      [5, null, { a: 'on band', b: 'on band' }],
+      [60, { air: 9 }, { a: 'on band', b: 'on interlock' }],
+      [299.999, null, { a: 'on band', b: 'on interlock' }],
+      [300, null, { a: 'off interlock', b: 'off idle' }],
+    ],
+  });
+
+  holds('never breaks least off', {
+    config: pair({ minOffS: 300 }),
+    reads: { bench: 3, air: 3 },
+    rows: [
+      [5, null, { a: 'on band' }],
+      [60, { air: 9 }, { a: 'off interlock', b: 'off idle' }],
+      [70, { air: 3 }, { a: 'off interlock', b: 'on band' }],
+      [75, null, { a: 'off short-cycle' }],
+      [360, null, { a: 'on band' }],
+    ],
+  });
+
+  holds('a lock-out of the other does not wait, nor does its high limit', {
+    config: pair({}, { highLimit: { point: 'core', above: 60 } }),
+    reads: { bench: 3, air: 3, core: 50 },
+    rows: [
+      [5, null, { a: 'on band', b: 'on band' }],
+      [60, { core: 61 }, { a: 'off interlock', b: 'off limit' }],
+      [120, { core: 50 }, { b: 'on band' }],
+      [125, null, { a: 'on band' }],
+      [180, lockOut('b'), { a: 'off interlock', b: 'off lock-out' }],
+    ],
+  });
+
+  holds('frost waits for it as well', {
+    config: pair({ frostHelp: true }, {}, 3),
+    reads: { bench: 9, air: 2 },
+    rows: [
+      [0, null, { a: 'off interlock', b: 'on band' }],
+      [5, null, { a: 'on frost', b: 'on band' }],
+    ],
+  });
+
+  holds('through a chain: the last goes first', {
+    config: house({
+      channels: [channel('a', 1), channel('b', 2), channel('c', 3)],
+      rules: [rule('a', body()), rule('b', body()), rule('c', body({ point: 'air' }))],
+      interlocks: [
+        { id: '1', channel: 'a', kind: 'needs', other: 'b', delayS: 5, frostMayBreak: false },
+        { id: '2', channel: 'b', kind: 'needs', other: 'c', delayS: 10, frostMayBreak: false },
+      ],
+    }),
+    reads: { bench: 3, air: 3 },
+    rows: [
+      [9.999, null, { a: 'off interlock', b: 'off interlock', c: 'on band' }],
+      [10, null, { a: 'off interlock', b: 'on band', c: 'on band' }],
+      [15, null, { a: 'on band', b: 'on band', c: 'on band' }],
+      [60, { air: 9 }, { a: 'off interlock', b: 'off interlock', c: 'off idle' }],
+    ],
+  });
+});
