@@ -6,6 +6,7 @@ import { Empty } from '@/components/ui/states';
 import type { WatchView } from '@/lib/schema/watch-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { Alarms } from './alarms';
+import { AloneNotice } from './alone-notice';
 import { Channels } from './channels';
 import { HouseSentence } from './house-sentence';
 import { LinkNotice } from './link-notice';
@@ -25,7 +26,7 @@ export function Watch({
   preferences: Preferences;
   allowed: string[];
 }) {
-  const { lines, strips, nights, others, ...start } = view;
+  const { lines, strips, nights, alone, others, ...start } = view;
   const cold = nights.flatMap((night) => (night.outdoorsLowest === null ? [] : [night.outdoorsLowest]));
   const coldest = cold.reduce<(typeof cold)[number] | null>(
     (low, one) => (low === null || one.value < low.value ? one : low),
@@ -37,6 +38,12 @@ export function Watch({
         <div className="flex flex-col gap-2 empty:hidden">
           <LinkNotice />
           <Alarms />
+          <AloneNotice
+            alone={alone}
+            zone={view.house.zone}
+            many={(view.state?.nodes.length ?? 0) > 1}
+            preferences={preferences}
+          />
         </div>
         <HouseSentence />
         {view.state === null ? (

@@ -8,6 +8,7 @@ import { WiringEditing } from './editing';
 import type { Yard } from './forms/options';
 import { HousePanel } from './house-panel';
 import { FormerLockOuts, StandingLockOuts } from './lock-outs';
+import { canFallback } from './node-status';
 import { Nodes } from './nodes';
 import { Points } from './points';
 import { RelayBoard } from './relay-board';
@@ -15,6 +16,7 @@ import { Interlocks, Sources } from './sources';
 
 export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;
+  ranAlone: Record<string, number>;
   state: HouseState | null;
 }
 
@@ -33,7 +35,7 @@ export function WiringView({
   preferences: Preferences;
   now: number;
 }) {
-  const { nodeStatus, state, ...yard } = data;
+  const { nodeStatus, ranAlone, state, ...yard } = data;
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
   const isLocked = (key: string) => lockouts.some((one) => one.channel === key && one.removedAt === null);
@@ -83,8 +85,9 @@ export function WiringView({
           channels={channels}
           sources={sources}
           lockouts={lockouts}
-          zone={zone}
           house={house.slug}
+          alone={{ can: canFallback(nodes, nodeStatus), ran: ranAlone }}
+          {...{ points, zone, now, preferences }}
           hasNode={nodes.some((node) => node.channels > 0)}
         />
         <Nodes nodes={nodes} kept={nodeStatus} zone={zone} now={now} preferences={preferences} />
