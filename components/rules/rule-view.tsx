@@ -103,6 +103,7 @@ export function RuleView({
             points: points.map(({ key, name, role, unit }) => ({ key, name, role, unit })),
           },
           channel: {
+            key: rule.channel,
             label: channel?.label ?? rule.channel,
             isProved: channel !== undefined && channel.provedAt !== null,
           },

@@ -6,7 +6,8 @@ import { send, type Answer } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import type { RuleBody } from '@/lib/control/rule-body';
 import type { RuleWithVersions } from '@/lib/schema/rule-view';
-import { fieldOfPath, type RuleForm } from './form-values';
+import { fieldOfPath } from './field-paths';
+import type { RuleForm } from './form-values';
 
 /** Save the draft, put it into force, go back, and what is done to the rule as a whole. A refusal stands at its field; what was typed stays. */
 export function useRuleActions({
@@ -15,12 +16,15 @@ export function useRuleActions({
   draftNumber,
   bodyNow,
   valuesOf,
+  onGo,
 }: {
   rule: RuleWithVersions;
   form: UseFormReturn<RuleForm>;
   draftNumber: number;
   bodyNow: () => Promise<RuleBody | null>;
   valuesOf: (body: RuleBody) => RuleForm;
+  /** Brings the focus to the field of a path. */
+  onGo: (path: string) => void;
 }) {
   const router = useRouter();
   // counted here, since the page is read anew only after the answer; another's change meanwhile is then told as one
@@ -40,11 +44,9 @@ export function useRuleActions({
       return answer;
     }
     for (const [path, message] of Object.entries(answer.fields))
-      form.setError(
-        fieldOfPath(path) as FieldPath<RuleForm>,
-        { type: 'said', message },
-        { shouldFocus: true },
-      );
+      form.setError(fieldOfPath(path) as FieldPath<RuleForm>, { type: 'said', message });
+    const [first] = Object.keys(answer.fields);
+    if (first !== undefined) onGo(first);
     setFailure(
       answer.status === 412
         ? 'Somebody saved this rule since you opened it. Copy what you need, then reload the page to see theirs.'
@@ -72,19 +74,25 @@ export function useRuleActions({
     return answer;
   }
 
+  /** An older version becomes the draft; of a retired rule, which comes back by it. */
   async function goBack(number: number): Promise<string | null> {
-    const answer = await send(
+    const how = rule.retiredAt === null ? 'go-back' : 'restore';
+    const answer = await send<{ revision?: number }>(
       'POST',
-      `/rules/${rule.id}/go-back`,
+      `/rules/${rule.id}/${how}`,
       { version: number },
       `"${revision.current}"`,
     );
-    if (!answer.ok) return answer.message;
-    revision.current += 1;
+    if (!answer.ok) return answer.fields.version ?? answer.message;
+    revision.current = answer.value.revision ?? revision.current + 1;
     const older = rule.versions.find((version) => version.number === number);
     if (older !== undefined) form.reset(valuesOf(older.body));
     router.refresh();
-    say(`Version ${number} is the draft now. Look at it, then put it into force.`);
+    say(
+      how === 'restore'
+        ? `The rule is back, with version ${number} as its draft. Nothing runs by it until you put it into force.`
+        : `Version ${number} is the draft now. Look at it, then put it into force.`,
+    );
     return null;
   }
 
@@ -100,3 +108,5 @@ export function useRuleActions({
 
   return { save, force, goBack, keep, failure };
 }
+
+export type RuleActions = ReturnType<typeof useRuleActions>;

@@ -35,7 +35,7 @@ const kept = new Map<string, { at: number; answers: HouseAnswers }>();
 export async function answersOf(
   holding: Holding,
   config: HouseConfig,
-  channel: Pick<Channel, 'id' | 'node' | 'contact'>,
+  channel: Pick<Channel, 'id' | 'key' | 'node' | 'contact'>,
   pointKey: string,
   nowMs: number,
 ): Promise<HouseAnswers> {
@@ -51,7 +51,7 @@ export async function answersOf(
 async function measure(
   holding: Holding,
   config: HouseConfig,
-  channel: Pick<Channel, 'id' | 'node' | 'contact'>,
+  channel: Pick<Channel, 'id' | 'key' | 'node' | 'contact'>,
   pointKey: string,
   nowMs: number,
 ): Promise<HouseAnswers> {
@@ -62,7 +62,7 @@ async function measure(
   if (point === undefined) return NOTHING;
   const from = nowMs - NIGHTS_MS;
   const safe = channel.contact === 'NC' ? 'on' : 'off';
-  const recorded = { id: channel.id, nodeKey: channel.node, safe } as const;
+  const recorded = { id: channel.id, key: channel.key, nodeKey: channel.node, safe } as const;
   const record = (await recordsOf(holding, house.id, [recorded], from, nowMs)).get(channel.id);
   if (record === undefined) return NOTHING;
   const runs = runsOf(channelSpans(record, from, nowMs));
