@@ -98,8 +98,17 @@ function reckon(derived: PlanDerived, memory: PointMemory, inputs: PointMemory[]
   if (derived.of === 'trend') {
     trail = extendTrail(memory.trail ?? [], [at, values[0] ?? NaN], derived.windowMs);
     value = trend(trail, derived.windowMs);
-  } else value = formula(derived, values);
+  } else value = formulaWithinRange(derived, values);
   return { ...memory, value: value !== null && Number.isFinite(value) ? value : null, at, lastAt: at, trail };
+}
+
+/** The handbook's equations throw outside their range; a reading must not stop a house, so there the value is unknown. */
+function formulaWithinRange(derived: PlanDerived, values: number[]): number | null {
+  try {
+    return formula(derived, values);
+  } catch {
+    return null;
+  }
 }
 
 /**
