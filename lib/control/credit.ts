@@ -103,8 +103,8 @@ function spentAt(memory: SourceMemory): number | null {
 
 function slopeOf(run: Run, source: PlanSource, memory: SourceMemory, number: number, cost: number): number {
   if (memory.resting || !source.hasRest) return 0;
-  // a draw that costs nothing still keeps the credit from coming back
-  if (number > 0) return -cost;
+  // a draw that costs nothing still keeps the credit from coming back; 0 − 0 is 0, where −0 would not survive JSON
+  if (number > 0) return 0 - cost;
   return 1 / Math.max(1, leastRestMs(run, source));
 }
 

@@ -13,7 +13,7 @@ import { rest } from './claims/rest';
 import { shortCycle } from './claims/short-cycle';
 import { sourceGuard } from './claims/source-guard';
 import type { Run } from './run';
-import type { Claim, Data, LadderStep, State } from './types';
+import { CLAIMS, type Claim, type Data, type LadderStep, type State } from './types';
 
 /** A rung without its own name: what all of them have in common. */
 interface Rung {
@@ -82,6 +82,12 @@ export function decide(run: Run, channel: number): { claim: Claim; state: State 
 
 export const becauseOf = (run: Run, channel: number, claim: Claim): Data =>
   BY_CLAIM.get(claim)?.because(run, channel) ?? {};
+
+/** The same by names alone, of a decision that did not outlast its instant. */
+export const bareLadder = (decided: Claim, wants: State): LadderStep[] => [
+  ...CLAIMS.slice(0, CLAIMS.indexOf(decided)).map((claim) => ({ claim, speaks: false })),
+  { claim: decided, speaks: true, wants },
+];
 
 /** The ladder down to the claim that decided, as data. */
 export function ladderOf(run: Run, channel: number, decided: Claim): LadderStep[] {

@@ -10,7 +10,7 @@ import { settleCounted } from './counting';
 import { drawCost, settleSource } from './credit';
 import { settleDerived } from './derived';
 import { explainSettled } from './explanation';
-import { askDemand, askLower, decide } from './ladder';
+import { askDemand, askLower, bareLadder, decide } from './ladder';
 import { settleGain, settleProof } from './least-gain';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
@@ -124,7 +124,7 @@ function keep(run: Run, channel: number, claim: Claim, state: State): boolean {
 
 const unexplained = (channel: string, at: number, state: State, claim: Claim): Explanation => ({
   ...{ channel, at, state, claim },
-  ...{ until: null, ladder: [], next: [], rule: null },
+  ...{ until: null, ladder: bareLadder(claim, state), next: [], rule: null },
 });
 
 function countDraw(run: Run, channel: number, state: State): void {
@@ -143,9 +143,10 @@ function explainDecisions(run: Run, firstEvent: number): void {
     if (event.kind !== 'switching' && event.kind !== 'decision') continue;
     const channel = run.channels.findIndex((one) => one.id === event.channel);
     const explanation = explainSettled(run, channel);
-    // a decision that a later round of the same instant overtook has no ladder of its own
+    // what a later round of the same instant overtook has the names of its ladder alone
     if (event.kind === 'decision' && (event.claim !== explanation.claim || event.state !== explanation.state))
       continue;
+    if (event.kind === 'switching' && event.to !== explanation.state) continue;
     run.events[place] = { ...event, claim: explanation.claim, explanation };
   }
 }
