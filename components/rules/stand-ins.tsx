@@ -28,7 +28,7 @@ export function StandIns() {
             error={form.errorOf(`standIns.${place}.offset`)}
             {...form.register(`standIns.${place}.offset`)}
           />
-          <div className="col-span-2 -mt-1 flex gap-2">
+          <div className="col-span-2 -my-2 flex gap-2">
             {place === 0 ? null : (
               <Button kind="quiet" className="-ml-4" onClick={() => standIns.swap(place, place - 1)}>
                 <span>

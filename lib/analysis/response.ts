@@ -13,7 +13,7 @@ import { stepsWithin, type LoadRun, type Stepped } from './runs';
 /** Looked at before a start, for the slope, and after it. */
 const BEFORE_MS = 30 * 60_000;
 const AFTER_MS = 90 * 60_000;
-const LEAST_RUN_MS = 25 * 60_000;
+const LEAST_RUN_MS = 8 * 60_000;
 const LEAST_STARTS = 6;
 const LEAST_STEPS = 4;
 const TAU_S = { least: 300, most: 12 * 3600, steps: 90 };
@@ -25,7 +25,7 @@ type Start = { afterS: number; value: number }[];
 
 /**
  * @param runs of the channel, ascending
- * @param point what the rule goes by, °C; steps of five minutes or less
+ * @param point what the rule goes by, °C; the shorter its steps, the better a start is seen
  * @returns time constant, s, and rise, K; null where too few starts stood alone, or the point hardly answers
  */
 export function responseOf(

@@ -68,7 +68,7 @@ function notKnownOf(
       ? ['How much warmer than outdoors this gets: that takes some nights of draws that a rest ended.']
       : []),
     ...(response === null && isRated
-      ? ['How often it would start: that takes some nights of starts, half an hour apart or more.']
+      ? ['How often it would start: that takes some nights of starts that stand half an hour apart.']
       : []),
     ...(greatest === null && body.rest?.until !== undefined
       ? ['Whether a rest would ever reach its temperature: its point has no readings yet.']

@@ -43,12 +43,12 @@ const isOrNot: Partial<Record<Operator, string>> = { equal: 'is', notEqual: 'is 
 const WORDS: Record<FactKind, Partial<Record<Operator, string>>> = {
   number: OPERATOR_WORDS,
   hour: {
-    greaterThanInclusive: 'from … o’clock on',
-    lessThan: 'before … o’clock',
-    equal: 'within the hour from',
-    notEqual: 'not within the hour from',
-    in: 'within one of the hours from',
-    notIn: 'within none of the hours from',
+    greaterThanInclusive: 'at or after',
+    lessThan: 'before',
+    equal: 'in the hour from',
+    notEqual: 'not in the hour from',
+    in: 'in one of the hours from',
+    notIn: 'in none of the hours from',
     greaterThan: 'after the hour from',
     lessThanInclusive: 'up to the end of the hour from',
   },

@@ -85,9 +85,9 @@ function Days({
 }) {
   const chosen = new Set(leaf.value.split(/[;\s]+/).filter((one) => one !== ''));
   return (
-    <fieldset>
+    <fieldset className="col-span-2">
       <legend className="sr-only">{field.label}</legend>
-      <div className="grid grid-cols-2 gap-x-3">
+      <div className="grid grid-cols-2 gap-x-3 sm:grid-cols-3">
         {all.map((one) => (
           <Checkbox
             key={one}
