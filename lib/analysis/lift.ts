@@ -8,8 +8,8 @@
 import { stepsWithin, type LoadRun, type Stepped } from './runs';
 
 /** Of a run's end, and of each hour of a long one. */
-const WINDOW_MS = 15 * 60_000;
-const LEAST_RUN_MS = 20 * 60_000;
+const WINDOW_MS = 5 * 60_000;
+const LEAST_RUN_MS = 8 * 60_000;
 /** From here on a run counts as settled, whatever ends it. */
 const LONG_MS = 2 * 3_600_000;
 const HOUR_MS = 3_600_000;

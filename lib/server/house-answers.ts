@@ -2,7 +2,7 @@ import 'server-only';
 import type { Holding } from '@/db/client';
 import { recordsOf } from '@/db/queries/channel-records';
 import { pointNumbers } from '@/db/queries/point';
-import { readSeries, type SeriesStep } from '@/db/queries/reading';
+import { readSeries } from '@/db/queries/reading';
 import { liftOf } from '@/lib/analysis/lift';
 import { responseOf } from '@/lib/analysis/response';
 import { runsOf, type Stepped } from '@/lib/analysis/runs';
@@ -21,6 +21,8 @@ export interface HouseAnswers {
 
 const DAY_MS = 86_400_000;
 const NIGHTS_MS = 14 * DAY_MS;
+/** Many a draw lasts a quarter of an hour: five-minute means would see little of it. */
+const STEP_S = 60;
 const YEAR_MS = 400 * DAY_MS;
 const LEAST_OF_YEAR_MS = 300 * DAY_MS;
 
@@ -65,18 +67,17 @@ async function measure(
   const record = (await recordsOf(holding, house.id, [recorded], from, nowMs)).get(channel.id);
   if (record === undefined) return NOTHING;
   const runs = runsOf(channelSpans(record, from, nowMs));
-  const steps = async (number: number | undefined, stepS: SeriesStep): Promise<Stepped> => {
-    const one =
-      number === undefined
-        ? undefined
-        : (await readSeries(holding, [number], from, nowMs, stepS)).get(number);
-    return { stepMs: stepS * 1000, at: one?.at ?? [], mean: one?.mean ?? [] };
+  const wanted = outdoors === undefined ? [point] : [point, outdoors];
+  const series = await readSeries(holding, wanted, from, nowMs, STEP_S);
+  const steps = (number: number | undefined): Stepped => {
+    const one = number === undefined ? undefined : series.get(number);
+    return { stepMs: STEP_S * 1000, at: one?.at ?? [], mean: one?.mean ?? [] };
   };
   const facts = compileTimeFacts(place(house));
   const isDark = (at: number) => !facts(at).sunUp;
   return {
-    liftK: liftOf(runs, await steps(point, 300), await steps(outdoors, 300), isDark),
-    response: responseOf(runs, await steps(point, 60), isDark),
+    liftK: liftOf(runs, steps(point), steps(outdoors), isDark),
+    response: responseOf(runs, steps(point), isDark),
     coldestOutdoors: outdoors === undefined ? null : await coldestOf(holding, outdoors, nowMs),
   };
 }

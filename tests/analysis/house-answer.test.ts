@@ -65,7 +65,7 @@ describe('how much warmer than outdoors a house gets', () => {
   it('is the top of the saw-tooth that draws and rests settle at', () => {
     const house = { tauS: 7200, onK: 16, offK: 4, drawMin: 40, restMin: 30 };
     const { runs, point, outdoors } = made(house);
-    // the last quarter of an hour of a draw lies a little under its very end
+    // the last minutes of a draw lie a little under its very end
     const top = peak(7200, 16, 4, 2400, 1800);
     const lift = liftOf(runs, point, outdoors, always) ?? NaN;
     expect(lift).toBeLessThan(top);

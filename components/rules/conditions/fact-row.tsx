@@ -75,7 +75,7 @@ export function FactRow({ leaf, path, number }: { leaf: DraftFact; path: string;
         </Select>
         <FactValue leaf={leaf} path={own} name={name} onValue={(value) => change({ value })} />
       </div>
-      <div className="flex flex-wrap items-center justify-between gap-x-3">
+      <div className="flex items-center justify-between gap-x-2">
         <Verdict standing={standing} now={now} />
         <ToolsButton node={leaf} name={name.toLowerCase()} />
       </div>

@@ -23,11 +23,11 @@ export function GroupBox({ group, path, number }: { group: DraftGroup; path: str
   return (
     <div role="group" aria-label={name} className={classes(!isRoot && 'rounded-md border border-line p-3')}>
       {group.nodes.length === 0 ? null : (
-        <div className="flex flex-wrap items-center justify-between gap-x-3 gap-y-1">
+        <div className="flex items-start gap-x-2">
           <Select
             label={`${name}: how many must hold`}
             labelHidden
-            className="min-w-0 grow"
+            className="min-w-0 flex-1"
             value={modeName(group)}
             error={error}
             onChange={(event) => {

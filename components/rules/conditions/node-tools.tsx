@@ -19,6 +19,7 @@ export function ToolsButton({ node, name }: { node: DraftNode; name: string }) {
   return (
     <Button
       kind="quiet"
+      className="-mr-3 shrink-0 px-3"
       data-part={acts.part(node.id, 'tools')}
       aria-expanded={acts.open === node.id}
       onClick={() => acts.toggle(node.id)}
