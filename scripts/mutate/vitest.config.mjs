@@ -10,7 +10,7 @@ export default defineConfig({
   resolve: { alias: [{ find: /^@\//, replacement: `${root}/` }] },
   test: {
     include: ['tests/control/**/*.test.ts'],
-    exclude: ['tests/control/model*.test.ts', 'tests/control/differential*.test.ts'],
+    exclude: ['model', 'differential', 'look-ahead', 'night'].map((name) => `tests/control/${name}*.test.ts`),
     testTimeout: 20_000,
   },
 });
