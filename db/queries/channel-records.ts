@@ -5,7 +5,8 @@ import { switching } from '@/db/schema/running';
 import { alarm } from '@/db/schema/watch';
 import type { ChannelRecord } from '@/lib/analysis/spans';
 import { CLAIMS, type Claim } from '@/lib/control/types';
-import { listDecisions, listRelayReports } from './running';
+import { listDecisions } from './decision';
+import { listRelayReports } from './running';
 
 interface RecordedChannel {
   id: string;

@@ -7,7 +7,7 @@ import { nightNamed } from '@/lib/analysis/night';
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { State } from '@/lib/control/types';
 import { listNights, nightsKept } from './night';
-import { listDecisions } from './running';
+import { listDecisions } from './decision';
 
 export interface DutyAsk {
   /** Slug; left out or unknown, the first source of the house. */

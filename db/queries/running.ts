@@ -119,64 +119,9 @@ export async function listSwitchings(
   return rows.map(asSwitching);
 }
 
-/** The switching that a channel stood under at a time: the newest at or before it. */
-export async function switchingAt(
-  holding: Holding,
-  channelId: string,
-  at: number,
-): Promise<Switching | null> {
-  const [row] = await holding.db
-    .select()
-    .from(switching)
-    .where(
-      and(
-        eq(switching.holdingId, holding.id),
-        eq(switching.channelId, channelId),
-        lte(switching.at, new Date(at)),
-      ),
-    )
-    .orderBy(desc(switching.at), desc(switching.id))
-    .limit(1);
-  return row === undefined ? null : asSwitching(row);
-}
-
-function asSwitching(row: typeof switching.$inferSelect): Switching {
+export function asSwitching(row: typeof switching.$inferSelect): Switching {
   const { id, channelId, from, to, claim, number, ruleId, version, explanation } = row;
   return { id, channelId, at: row.at.getTime(), from, to, claim, number, ruleId, version, explanation };
-}
-
-export interface Decision {
-  channelId: string;
-  at: number;
-  state: State;
-  claim: string;
-}
-
-/** Decisions from `from` to before `to`, ascending, led by the one of each channel that stood at `from`. */
-export async function listDecisions(
-  holding: Holding,
-  channelIds: readonly string[],
-  from: number,
-  to: number,
-): Promise<Decision[]> {
-  if (channelIds.length === 0) return [];
-  const mine = and(eq(decision.holdingId, holding.id), inArray(decision.channelId, [...channelIds]));
-  const standing = await holding.db
-    .selectDistinctOn([decision.channelId])
-    .from(decision)
-    .where(and(mine, lt(decision.at, new Date(from))))
-    .orderBy(decision.channelId, desc(decision.at), desc(decision.id));
-  const during = await holding.db
-    .select()
-    .from(decision)
-    .where(and(mine, gte(decision.at, new Date(from)), lt(decision.at, new Date(to))))
-    .orderBy(asc(decision.at), asc(decision.id));
-  return [...standing, ...during].map((row) => ({
-    channelId: row.channelId,
-    at: row.at.getTime(),
-    state: row.state,
-    claim: row.claim,
-  }));
 }
 
 export interface RelayReport {

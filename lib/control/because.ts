@@ -107,6 +107,15 @@ export interface FailSafeReason {
   trip?: string;
   /** The same, known only from control not running since. */
   stoppedAt?: number;
+  /** Its node's own fallback switched it while nobody commanded the node; °C. */
+  fallback?: {
+    state: State;
+    point: string | null;
+    value: number | null;
+    why: string | null;
+    below: number | null;
+    above: number | null;
+  };
 }
 
 export interface RestReason {

@@ -9,7 +9,7 @@ import type { Memory } from './memory';
 import { entry, type Run } from './run';
 import { moved } from './moved';
 import { thresholdsOf, type Threshold } from './thresholds';
-import type { Data, Explanation } from './types';
+import { CLAIMS, type Data, type Explanation } from './types';
 import { asItIs, changesBy, ifInstead, type Future, type Told } from './what-if';
 
 const AHEAD_MS = 24 * 3_600_000;
@@ -47,18 +47,21 @@ function whatNext(run: Run, memory: Memory, { channel: id, state, claim }: Expla
 
 /** What a reading past the threshold would bring; null: nothing. */
 function tried(base: Future, flip: Told | null, threshold: Threshold): NextIf | null {
-  const { point, side, value, of } = threshold;
-  const beyond = value + (side === 'above' ? 1 : -1) * 1e-6 * Math.max(1, Math.abs(value));
-  const outcome = outcomeOf(base, flip, threshold, beyond);
+  const { point, side, value, orAt, of } = threshold;
+  const step = (side === 'above' ? 1 : -1) * 1e-6 * Math.max(1, Math.abs(value));
+  const outcome = outcomeOf(base, flip, threshold, orAt ? value : value + step);
   if (outcome === null) return null;
   const keepsState = outcome.state === base.state;
-  // another claim for the same state is news only of the claim that decides now, or where something was to come
-  if (keepsState && of !== base.claim && flip === null) return null;
-  const exactly = outcomeOf(base, flip, { ...threshold, overTime: true }, value);
+  // with nothing else to come, another claim for the same state is news only where it is the deciding one that lets go
+  const letsGo = of === base.claim && CLAIMS.indexOf(outcome.claim) > CLAIMS.indexOf(base.claim);
+  if (keepsState && flip === null && !letsGo) return null;
+  // what a threshold on the way there brings already is told of that one
+  const before = outcomeOf(base, flip, { ...threshold, overTime: true }, orAt ? value - step : value);
+  if (isSame(before, outcome)) return null;
   const key = point === null ? null : entry(base.plan.points, point).key;
   return {
     ...{ kind: 'if', point: key, side, value },
-    ...(isSame(exactly, outcome) ? { orAt: true } : {}),
+    ...(orAt ? { orAt } : {}),
     ...(outcome.at > base.at ? { at: outcome.at } : {}),
     ...(flip !== null && outcome.at > flip.at ? { later: true } : {}),
     ...{ state: outcome.state, claim: outcome.claim },
@@ -74,21 +77,23 @@ function outcomeOf(base: Future, flip: Told | null, threshold: Threshold, value:
   const horizon = base.at + AHEAD_MS;
   const other = changesBy(future, flip?.at ?? horizon);
   if (other.flip !== null && isSame(other.flip, flip)) return null;
-  if (other.flip !== null || flip === null) return other.flip;
+  if (other.flip !== null || flip === null || !other.isKnown) return other.flip;
   // what was to come by the clock does not: later, or not at all
-  if (future.claim !== base.claim) return future;
-  return changesBy(future, horizon).flip ?? { at: flip.at, state: base.state, claim: other.claim };
+  const later = changesBy(future, horizon);
+  return later.flip ?? { at: flip.at, state: base.state, claim: other.claim };
 }
 
 const isSame = (a: Told | null, b: Told | null): boolean =>
   a !== null && b !== null && a.at === b.at && a.state === b.state && a.claim === b.claim;
 
-/** Whether a reading has turned anything that bears on the channel, or its source, beside its own value. */
+/** Whether a reading has turned anything in the house that bears on the channel, beside its own value. */
 function isMoved(base: Future, { run, claim }: Future): boolean {
-  const { source, rules } = entry(base.plan.channels, base.channel);
+  const { source } = entry(base.plan.channels, base.channel);
   const before = base.run;
-  if (claim !== base.claim || run.lowerClaim[base.channel] !== before.lowerClaim[base.channel]) return true;
-  if (rules.some((rule) => run.standing[rule] !== before.standing[rule])) return true;
+  if (claim !== base.claim || run.frost.on !== before.frost.on) return true;
+  if (run.standing.some((standing, rule) => standing !== before.standing[rule])) return true;
+  if (run.channels.some((one, place) => one.overHighLimit !== before.channels[place]?.overHighLimit))
+    return true;
   return source !== null && entry(run.sources, source) !== entry(before.sources, source);
 }
 

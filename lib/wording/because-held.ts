@@ -1,7 +1,8 @@
 /** Why a load is held: the claims that stand above the night's own business. */
-import type { Reasons } from '@/lib/control/because';
+import type { LockOutPlaced, Reasons } from '@/lib/control/because';
 import { duration } from '@/lib/units/time';
 import { temperature } from '@/lib/units/format';
+import { fallbackReason } from './alone';
 import { begin, channelName, pointName, said, sourceName, timeWords, type Scene } from './scene';
 import { CLAIM_NAMES } from './claims';
 import { level } from './settings';
@@ -9,15 +10,27 @@ import { level } from './settings';
 type Reason<Claim extends keyof Reasons> = Partial<Reasons[Claim]>;
 
 export function lockOutWords(reason: Reason<'lock-out'>, scene: Scene): string {
-  const [first, ...others] = reason.lockouts ?? [];
-  if (first === undefined) return 'Locked out. Only a person removes it.';
-  const since = timeWords(first.placedAt, scene);
+  const lockouts = reason.lockouts ?? [];
+  if (lockouts.length === 0) return 'Locked out. Only a person removes it.';
+  return said(...lockouts.map((one) => lockOutOf(one, scene)));
+}
+
+function lockOutOf({ by, placedAt, why, removedAt, removedBy }: LockOutPlaced, scene: Scene): string {
+  const since = timeWords(placedAt, scene);
+  const removed = timeWords(removedAt, scene);
   return said(
-    `Locked out by ${first.by}${since === null ? '' : ` since ${since}`}: ${first.why.replace(/\.$/, '')}.`,
-    others.length > 0 && `${others.length} more lock-out${others.length === 1 ? '' : 's'} stand on it.`,
-    'Only a person removes it.',
+    `Locked out by ${by}${since === null ? '' : ` since ${since}`}: ${ended(why)}`,
+    removed === null
+      ? 'Only a person removes it.'
+      : `Removed at ${removed}${removedBy === undefined ? '' : ` by ${removedBy}`}.`,
   );
 }
+
+/** What somebody wrote, as a sentence of its own. */
+const ended = (text: string): string => {
+  const plain = text.replace(/\s+/g, ' ').trim();
+  return /[.!?…]$/.test(plain) ? plain : `${plain}.`;
+};
 
 export function interlockWords(reason: Reason<'interlock'>, scene: Scene): string {
   const other = channelName(reason.other ?? '', scene);
@@ -92,7 +105,8 @@ export function sourceGuardWords(reason: Reason<'source-guard'>, scene: Scene): 
 
 const FAULTS: Record<string, string> = {
   silent: 'silent',
-  'never-heard': 'never heard',
+  'never-spoke': 'never heard',
+  unsteady: 'coming and going',
   'out-of-range': 'out of its range',
   'one-wire-fault': 'its probe answers with a fault',
   'too-fast': 'changing faster than it can',
@@ -107,6 +121,15 @@ export function faultWords(why: string | null | undefined): string {
 }
 
 export function failSafeWords(reason: Reason<'fail-safe'>, scene: Scene): string {
+  const { fallback } = reason;
+  if (fallback !== undefined) {
+    const on = fallback.state === 'on';
+    return fallbackReason(fallback, on, (key) => pointName(key, scene), scene.preferences);
+  }
+  if (reason.trip !== undefined)
+    return `Nobody commanded it for longer than its relay waits, so it fell to ${reason.safe ?? 'its safe state'} by itself.`;
+  if (reason.stoppedAt !== undefined)
+    return `Control did not run from ${timeWords(reason.stoppedAt, scene) ?? ''} on, so it fell to ${reason.safe ?? 'its safe state'} by itself.`;
   const points = (reason.points ?? []).map((one) => {
     const since = timeWords(one.lastAt, scene);
     return `${pointName(one.point, scene)}, ${faultWords(one.why)}${since === null ? '' : ` since ${since}`}`;

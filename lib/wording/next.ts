@@ -23,7 +23,7 @@ export function nextWords(next: readonly unknown[], scene: Scene, present?: Stat
   return readNext(next).map((one) => {
     const does = doesWords(one, scene, present);
     if (one.kind === 'then') return `At ${timeWords(one.at, scene) ?? ''}, if no reading changes: ${does}.`;
-    const earliest = one.at === undefined ? '' : atEarliest(one, one.at, scene);
+    const earliest = one.at === undefined ? '' : whenWords(one, one.at, scene, present);
     const asked = one.kind === 'if' ? `if ${passes(one, scene)}` : `when ${happens(one, scene)}`;
     return `${begin(asked)}: ${does}${earliest}.`;
   });
@@ -53,8 +53,9 @@ export function nextSentence(next: readonly unknown[], scene: Scene, present: St
   return 'Nothing is due by the clock within a day; a reading or a person may change it.';
 }
 
-function atEarliest(one: NextIf | NextWhen, at: number, scene: Scene): string {
+function whenWords(one: NextIf | NextWhen, at: number, scene: Scene, present: State | undefined): string {
   const time = timeWords(at, scene) ?? '';
+  if (one.state === present) return ` beyond ${time}`;
   return one.kind === 'if' && one.later === true
     ? `, but not before ${time}`
     : `, at ${time} at the earliest`;

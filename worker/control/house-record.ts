@@ -17,7 +17,15 @@ export function switchingRows(
     // One that a later switching of the same step overtook is carried by no command.
     const number = event.overtaken === true ? null : numberOf(channel);
     return [
-      { ...headOf(house, channel, event.at), from, to, claim, number, ...ruleOf(explanation), explanation },
+      {
+        ...headOf(house, channel, event.at),
+        from,
+        to,
+        claim,
+        number,
+        ...ruleOf(explanation),
+        explanation: { ...explanation },
+      },
     ];
   });
 }
@@ -25,8 +33,13 @@ export function switchingRows(
 export function decisionRows(house: HouseHead, events: readonly ControlEvent[]): DecisionRow[] {
   return events.flatMap((event) => {
     if (event.kind !== 'switching' && event.kind !== 'decision') return [];
-    const state = event.kind === 'switching' ? event.to : event.state;
-    return [{ ...headOf(house, event.channel, event.at), state, claim: event.claim }];
+    const head = headOf(house, event.channel, event.at);
+    // a switching has a row of its own that carries its ladder
+    if (event.kind === 'switching') return [{ ...head, state: event.to, claim: event.claim }];
+    const { state, claim, explanation } = event;
+    // one that was overtaken within its own instant never had a ladder
+    const isTold = explanation.ladder.length > 0;
+    return [{ ...head, state, claim, explanation: isTold ? { ...explanation } : null }];
   });
 }
 

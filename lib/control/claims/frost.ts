@@ -8,7 +8,7 @@ import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 import { rest, restForbids } from './rest';
 
-const ENDS_K = 1;
+export const ENDS_K = 1;
 const BLIND_MS = 1_800_000;
 /** Wet things freezing stand still at 0 °C, so a frozen point is believed in the cold … */
 const STILL_TRUE_C = 2;

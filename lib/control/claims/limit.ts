@@ -7,7 +7,7 @@ import type { LimitReason } from '../because';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 
-const AGAIN_K = 1;
+export const AGAIN_K = 1;
 
 export const limit: ClaimRung<'limit'> = {
   claim: 'limit',

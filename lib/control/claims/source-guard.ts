@@ -3,7 +3,7 @@ import type { SourceGuardReason } from '../because';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 
-const AGAIN_K = 1;
+export const AGAIN_K = 1;
 
 export const sourceGuard: ClaimRung<'source-guard'> = {
   claim: 'source-guard',
