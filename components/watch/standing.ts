@@ -3,6 +3,9 @@ import type { WatchBand, WatchChannel, WatchSource } from '@/lib/schema/watch-vi
 import type { HouseState } from '@/lib/schema/house-state';
 import type { HouseStanding } from '@/lib/wording/watch-standing';
 
+/** Of a bad cable a night has dozens; the wiring page tells each point's latest. */
+const DOUBTS_SHOWN = 4;
+
 interface Parts {
   house: { name: string; frostLimit: number | null };
   channels: WatchChannel[];
@@ -43,4 +46,17 @@ export function standingOf(parts: Parts, state: HouseState, now: number): HouseS
     }),
     coldest: parts.coldest,
   };
+}
+
+/** Points that were in doubt since `from` and are good again, the latest first. Epoch ms. */
+export function pastDoubts(state: HouseState | null, from: number) {
+  return (state?.points ?? [])
+    .flatMap(({ name, quality, lastDoubt }) =>
+      quality === 'good' && lastDoubt
+        ? [{ name, ...lastDoubt, from: Date.parse(lastDoubt.from), to: Date.parse(lastDoubt.to) }]
+        : [],
+    )
+    .filter(({ to }) => to >= from)
+    .sort((one, other) => other.to - one.to)
+    .slice(0, DOUBTS_SHOWN);
 }

@@ -13,7 +13,7 @@ import { LinkNotice } from './link-notice';
 import { LiveHouseProvider } from './live-house';
 import { NightFigures } from './night-figures';
 import { OtherHouses } from './other-houses';
-import { mainBand } from './standing';
+import { mainBand, pastDoubts } from './standing';
 import { YardDrawing } from './yard-drawing';
 
 /** How the house stands now: alarms, the sentence, the night, the yard, each load and why. */
@@ -73,6 +73,7 @@ export function Watch({
               house={view.house}
               sources={view.sources}
               nights={nights}
+              doubts={pastDoubts(view.state, view.night.from)}
               preferences={preferences}
             />
             <OtherHouses cards={others} now={view.now} preferences={preferences} />

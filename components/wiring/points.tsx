@@ -6,7 +6,7 @@ import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { qualityWords } from '@/lib/wording/quality';
+import { backWords, qualityWords, UNSTEADY_WORDS } from '@/lib/wording/quality';
 import { exactly } from '@/lib/wording/settings';
 import { AddButton, ChangeButton } from './editing';
 import { roleWords } from './forms/options';
@@ -22,6 +22,11 @@ const columns = [
   { key: 'act', label: 'Change', labelHidden: true },
 ];
 
+/** That a point was away is news for a day. */
+const TOLD_MS = 86_400_000;
+
+const instant = (iso: string | null | undefined) => (typeof iso === 'string' ? Date.parse(iso) : null);
+
 function calibrationWords(point: Point): string {
   const gain = point.gain === 1 ? '' : `× ${decimal(point.gain, 3)} `;
   const offset = point.offset === 0 ? '' : `${point.offset > 0 ? '+' : ''}${decimal(point.offset, 2)}`;
@@ -33,6 +38,7 @@ function PointRow({
   now,
   reportEvery,
   appNow,
+  zone,
   preferences,
 }: {
   point: Point;
@@ -40,18 +46,22 @@ function PointRow({
   reportEvery: number | undefined;
   /** Epoch ms. */
   appNow: number;
+  zone: string;
   preferences: Preferences;
 }) {
+  const scene = { now: appNow, zone, preferences };
   const range = (value: number | null) => (value === null ? '' : pointValue(value, point.unit, preferences));
   const stale = point.staleAfter ?? (reportEvery === undefined ? null : reportEvery * 3);
   const isOld =
     stale !== null && now !== undefined && now.at !== null && appNow - Date.parse(now.at) > stale * 1000;
   // the worker says so itself; where it stands still, its last word has grown old too
   const doubt = isOld
-    ? qualityWords('bad', 'silent')
+    ? qualityWords({ quality: 'bad', why: 'silent' }, scene)
     : now === undefined
       ? null
-      : qualityWords(now.quality, now.why);
+      : qualityWords({ ...now, since: instant(now.doubtSince) }, scene);
+  const last = now?.lastDoubt ?? null;
+  const isBack = doubt === null && last !== null && appNow - Date.parse(last.to) < TOLD_MS;
   return (
     <Row>
       <RowHead className="min-w-40">
@@ -67,6 +77,16 @@ function PointRow({
           pointValue(now.value, point.unit, preferences)
         )}
         {doubt === null ? null : <span className="block font-sans text-[0.85rem] text-warn">{doubt}</span>}
+        {isBack ? (
+          <span className="block font-sans text-[0.85rem] text-soft">
+            {backWords({ why: last.why, from: Date.parse(last.from), to: Date.parse(last.to) }, scene)}
+          </span>
+        ) : null}
+        {now?.why === 'unsteady' ? (
+          <span className="ml-auto block max-w-56 font-sans text-[0.85rem] whitespace-normal text-soft">
+            {UNSTEADY_WORDS}
+          </span>
+        ) : null}
       </Cell>
       <Cell className="whitespace-nowrap">
         {now?.at === null || now === undefined ? (
@@ -106,6 +126,7 @@ export function Points({
   states,
   nodes,
   now,
+  zone,
   preferences,
 }: {
   points: Point[];
@@ -113,6 +134,7 @@ export function Points({
   nodes: { key: string; reportEvery: number }[];
   /** Epoch ms of app time. */
   now: number;
+  zone: string;
   preferences: Preferences;
 }) {
   return (
@@ -134,6 +156,7 @@ export function Points({
               now={states.find((one) => one.key === point.key)}
               reportEvery={nodes.find((one) => one.key === point.node)?.reportEvery}
               appNow={now}
+              zone={zone}
               preferences={preferences}
             />
           ))}

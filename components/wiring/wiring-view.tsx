@@ -91,13 +91,7 @@ export function WiringView({
           hasNode={nodes.some((node) => node.channels > 0)}
         />
         <Nodes nodes={nodes} kept={nodeStatus} zone={zone} now={now} preferences={preferences} />
-        <Points
-          points={points}
-          states={state?.points ?? []}
-          nodes={nodes}
-          now={now}
-          preferences={preferences}
-        />
+        <Points points={points} states={state?.points ?? []} nodes={nodes} {...{ now, zone, preferences }} />
         <div className="grid grid-cols-1 gap-5 xl:grid-cols-2">
           <Sources
             sources={sources}

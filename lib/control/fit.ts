@@ -60,6 +60,7 @@ const newPoint = (id: string): PointMemory => ({
   quality: 'bad',
   why: 'never-spoke',
   uncertainSince: null,
+  doubts: null,
   contradictedSince: null,
   trail: null,
 });

@@ -26,8 +26,8 @@ export function channelResult(run: Run, index: number): ChannelResult {
 }
 
 export function pointResult(run: Run, index: number): PointResult {
-  const { id, value, at, quality, why } = entry(run.points, index);
-  return { id, value, at, quality, why };
+  const { id, value, at, quality, why, doubts = null } = entry(run.points, index);
+  return { id, value, at, quality, why, doubtSince: doubts?.since ?? null, lastDoubt: doubts?.last ?? null };
 }
 
 export function sourceResult(run: Run, index: number): SourceResult {

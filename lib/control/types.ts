@@ -206,8 +206,12 @@ export interface PointResult {
   value: number | null;
   at: number | null;
   quality: Quality;
-  /** Why it is not good: silent, out-of-range, one-wire-fault, too-fast, frozen, input-bad … */
+  /** Why it is not good: silent, out-of-range, one-wire-fault, too-fast, frozen, unsteady, input-bad … */
   why: string | null;
+  /** Since when it is in doubt; null while it is good, and for a derived point. */
+  doubtSince: number | null;
+  /** The last time of doubt that is over: what dropped it, and when it came back. */
+  lastDoubt: { why: string | null; from: number; to: number } | null;
 }
 
 export interface SourceResult {
@@ -287,6 +291,7 @@ export interface Fault {
   kind:
     | 'frost'
     | 'point-bad'
+    | 'point-unsteady'
     | 'core-under-floor'
     | 'core-not-good'
     | 'frost-without-reading'
@@ -298,6 +303,7 @@ export interface Fault {
     | 'daily-limit'
     | 'rest-ran-to-most'
     | 'fan-standing'
+    | 'runs-though-off'
     | 'relay-does-not-follow'
     | 'frozen-point-in-frost';
   about: { point?: string; channel?: string; source?: string };

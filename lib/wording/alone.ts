@@ -1,6 +1,7 @@
 /** What a field box did by itself while nobody commanded it, and what it is to do then. */
 import { clock, duration } from '@/lib/units/time';
 
+import { temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { join } from './join';
 import type { Phrase } from './phrase';
@@ -63,4 +64,38 @@ export function fallbackDoubt(can: CanFallback, node: string): string | null {
   return can === 'cannot'
     ? `Field box ${node} cannot run it: without a server the load falls to its safe state.`
     : `Field box ${node} has not yet said whether it can run it.`;
+}
+
+/** Why a switching of a fallback was made, as it was stored. */
+export interface FallbackReason {
+  point: string | null;
+  value: number | null;
+  why: string | null;
+  below: number | null;
+  above: number | null;
+}
+
+/**
+ * @param on whether the load runs from then on
+ * @param name how a point is called in mid-sentence
+ * @example "The field box ran it by itself: the bench at 1.9 °C was under 2 °C."
+ */
+export function fallbackReason(
+  reason: FallbackReason,
+  on: boolean,
+  name: (key: string) => string,
+  preferences: Preferences,
+): string {
+  const point = reason.point === null ? 'its point' : name(reason.point);
+  const value = reason.value === null ? '' : ` at ${temperature(reason.value, preferences)}`;
+  const limit = (celsius: number | null) => (celsius === null ? 'its limit' : level(celsius, preferences));
+  const because: Record<string, string> = {
+    below: `${point}${value} was under ${limit(reason.below)}`,
+    above: `${point}${value} was over ${limit(reason.above)}`,
+    longest: 'it had run for as long as it may, and rests',
+    'dead-point': `${point} could not be read`,
+    command: 'it is commanded again',
+  };
+  const why = because[reason.why ?? ''];
+  return `The field box ${on ? 'ran' : 'stopped'} it by itself, while nobody commanded it${why === undefined ? '' : `: ${why}`}.`;
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { aloneSentence, fallbackDoubt, fallbackWords } from '@/lib/wording/alone';
+import { aloneSentence, fallbackDoubt, fallbackReason, fallbackWords } from '@/lib/wording/alone';
 import { plainText } from '@/lib/wording/phrase';
 import { american, scene, spaced } from './scene';
 
@@ -41,4 +41,31 @@ describe('A fallback in words', () => {
     expect(fallbackDoubt('cannot', 'LH-1')).toMatch(/^Field box LH-1 cannot run it/);
     expect(fallbackDoubt('not-told', 'LH-1')).toMatch(/has not yet said/);
   });
+});
+
+describe('A switching of a fallback', () => {
+  const reason = { point: 'bench-1', value: 1.94, why: 'below', below: 2, above: 5 };
+  const said = (more: Partial<typeof reason> | { value: null; why: null }, on: boolean) =>
+    spaced(fallbackReason({ ...reason, ...more }, on, () => 'the bench', scene.preferences));
+
+  it.each([
+    [{}, true, 'ran it by itself, while nobody commanded it: the bench at 1.9 °C was under 2 °C.'],
+    [
+      { why: 'above', value: 5.1 },
+      false,
+      'stopped it by itself, while nobody commanded it: the bench at 5.1 °C was over 5 °C.',
+    ],
+    [
+      { why: 'longest' },
+      false,
+      'stopped it by itself, while nobody commanded it: it had run for as long as it may, and rests.',
+    ],
+    [
+      { why: 'dead-point' },
+      false,
+      'stopped it by itself, while nobody commanded it: the bench could not be read.',
+    ],
+    [{ why: 'command' }, false, 'stopped it by itself, while nobody commanded it: it is commanded again.'],
+    [{ why: null, value: null }, true, 'ran it by itself, while nobody commanded it.'],
+  ] as const)('%o', (more, on, words) => expect(said(more, on)).toBe(`The field box ${words}`));
 });

@@ -72,7 +72,8 @@ export function aloneRows(house: HouseHead, changes: readonly AloneChange[]): Sw
   return changes.map(({ channel, at, coil, told }) => {
     const { below, above } = channel.fallback ?? { below: null, above: null };
     const point = told?.point ?? channel.fallback?.point ?? null;
-    const fallback = { point, value: told?.value ?? null, why: told?.why ?? null, below, above };
+    const state = loadState(channel, coil);
+    const fallback = { state, point, value: told?.value ?? null, why: told?.why ?? null, below, above };
     return uncommanded(house, channel, coil, at, `fallback/${told?.at ?? at}/${coil}`, { fallback });
   });
 }

@@ -31,12 +31,16 @@ export function houseState(
     at: isoIn(zone, now),
     points: record.points.map(({ id, key, name, role, unit }) => {
       const point = points.get(id);
+      const last = point?.lastDoubt ?? null;
       return {
         ...{ key, name, role, unit },
         value: point?.value ?? null,
         at: iso(point?.at ?? null),
         quality: point?.quality ?? 'bad',
         why: point?.why ?? null,
+        doubtSince: iso(point?.doubtSince ?? null),
+        lastDoubt:
+          last === null ? null : { why: last.why, from: isoIn(zone, last.from), to: isoIn(zone, last.to) },
       };
     }),
     channels: record.channels.flatMap((wiring) => {
