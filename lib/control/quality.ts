@@ -98,6 +98,7 @@ export function takeReading(
     quality: memory.quality,
     why: memory.why,
     uncertainSince: memory.uncertainSince,
+    doubts: memory.doubts,
     contradictedSince: memory.contradictedSince,
     trail: memory.trail,
   };

@@ -3,7 +3,6 @@ import type { LockOutPlaced, Reasons } from '@/lib/control/because';
 import { duration } from '@/lib/units/time';
 import { temperature } from '@/lib/units/format';
 import { fallbackReason } from './alone';
-import { fallbackReason } from './alone';
 import { begin, channelName, pointName, said, sourceName, timeWords, type Scene } from './scene';
 import { CLAIM_NAMES } from './claims';
 import { level } from './settings';
@@ -122,11 +121,6 @@ export function faultWords(why: string | null | undefined): string {
 }
 
 export function failSafeWords(reason: Reason<'fail-safe'>, scene: Scene): string {
-  const { fallback } = reason;
-  if (fallback !== undefined) {
-    const on = fallback.state === 'on';
-    return fallbackReason(fallback, on, (key) => pointName(key, scene), scene.preferences);
-  }
   const { fallback } = reason;
   if (fallback !== undefined) {
     const on = fallback.state === 'on';
