@@ -116,15 +116,6 @@ export interface FailSafeReason {
     below: number | null;
     above: number | null;
   };
-  /** Its node's own fallback switched it while nobody commanded the node; °C. */
-  fallback?: {
-    state: State;
-    point: string | null;
-    value: number | null;
-    why: string | null;
-    below: number | null;
-    above: number | null;
-  };
 }
 
 export interface RestReason {

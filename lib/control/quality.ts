@@ -98,7 +98,6 @@ export function takeReading(
     quality: memory.quality,
     why: memory.why,
     uncertainSince: memory.uncertainSince,
-    doubts: memory.doubts,
     contradictedSince: memory.contradictedSince,
     trail: memory.trail,
   };

@@ -14,7 +14,6 @@ import { askDemand, askLower, bareLadder, decide } from './ladder';
 import { settleGain, settleProof } from './least-gain';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
-import { settleUnbidden } from './unbidden';
 import type { Claim, Explanation, State } from './types';
 
 /** Settles `run.at`; afterwards `run.wake` is the earliest instant at which something changes by itself. */
@@ -56,7 +55,6 @@ function settleSources(run: Run): void {
   for (let channel = 0; channel < channels.length; channel += 1) {
     settleCounted(run, channel);
     settleProof(run, channel);
-    settleUnbidden(run, channel);
   }
   for (let source = 0; source < sources.length; source += 1) {
     settleSource(run, source);
