@@ -76,7 +76,8 @@ function outcomeOf(base: Future, flip: Told | null, threshold: Threshold, value:
   if (!threshold.overTime && !isMoved(base, future)) return null;
   const horizon = base.at + AHEAD_MS;
   const other = changesBy(future, flip?.at ?? horizon);
-  if (other.flip !== null && isSame(other.flip, flip)) return null;
+  // that another claim does the same at the same time is no news
+  if (other.flip !== null && other.flip.at === flip?.at) return null;
   if (other.flip !== null || flip === null || !other.isKnown) return other.flip;
   // what was to come by the clock does not: later, or not at all
   const later = changesBy(future, horizon);
