@@ -4,7 +4,8 @@
  */
 import type { SourceMemory } from './memory';
 import { settleDay, usedMs } from './day';
-import { entry, wakeAt, type Run } from './run';
+import { isUnder } from './lines';
+import { dueAt, entry, wakeAt, type Run } from './run';
 import type { PlanRule, PlanSource } from './plan';
 
 /** Credit of a source at an instant, 0 to 1. */
@@ -85,6 +86,7 @@ export function settleSource(run: Run, index: number): void {
   if (slope !== memory.slope)
     memory = { ...memory, credit: creditAt(memory, run.at), creditAt: run.at, slope };
   memory = settleDay(memory, number, run.at);
+  if (memory.day.nextAt !== null) dueAt(run, memory.day.nextAt);
   const spends = spentAt(memory);
   if (spends !== null) wakeAt(run, spends);
   if (source.dailyLimitMs !== null && number > 0) {
@@ -169,5 +171,5 @@ function restEnd(
 /** At or above its level, by a good reading, at the instant of looking. */
 export function recovered(run: Run, until: { point: number | null; level: number }): boolean {
   if (until.point === null || run.usable[until.point] !== 'good') return false;
-  return (entry(run.points, until.point).value ?? -Infinity) >= until.level;
+  return !isUnder(run, until.point, until.level);
 }

@@ -3,6 +3,7 @@ import { coldestPoint } from './claims/frost';
 import { isUnderFloor } from './claims/source-guard';
 import { restForbids } from './claims/rest';
 import { entry, type Run } from './run';
+import { isUnsteady } from './steady';
 import type { Data, Fault } from './types';
 
 type About = Fault['about'];
@@ -50,11 +51,15 @@ function houseFaults(run: Run, stand: Stand): void {
 }
 
 function pointFaults(run: Run, index: number, stand: Stand): void {
-  const { id, quality, why, at, contradictedSince } = entry(run.points, index);
+  const memory = entry(run.points, index);
+  const { id, quality, why, at, contradictedSince } = memory;
   const { derived, key } = entry(run.plan.points, index);
   // a derived point is bad by its inputs, which stand in this list themselves
   const tells = why !== 'never-spoke' || run.plan.usedPoints.has(index);
-  if (quality === 'bad' && derived === null && tells)
+  // one that comes and goes is one fault, however it stands just now
+  if (isUnsteady(memory))
+    stand('point-unsteady', { point: id }, () => ({ key, why: memory.doubts?.why ?? null, lastAt: at }));
+  else if (quality === 'bad' && derived === null && tells)
     stand('point-bad', { point: id }, () => ({ key, why, lastAt: at }));
   if (contradictedSince !== null && run.at >= contradictedSince + CONTRADICTED_MS)
     stand('frozen-point-in-frost', { point: id }, () => ({ key, contradictedSince }));
@@ -93,6 +98,7 @@ function channelFaults(run: Run, index: number, stand: Stand): void {
   if (memory.overHighLimit) stand('high-limit', { channel: id }, named);
   if (memory.noGainUntil !== null && run.at < memory.noGainUntil) stand('no-gain', { channel: id }, named);
   if (memory.standing) stand('fan-standing', { channel: id }, named);
+  if (memory.unbidden === true) stand('runs-though-off', { channel: id }, named);
   // an order given in this very step cannot have been followed yet, and `counted` then goes by what is wanted
   // and while its node's fallback runs it, nobody has told the node yet
   const follows = relay === null || memory.counted !== relay.reported || memory.counted === memory.wanted;

@@ -18,8 +18,15 @@ export interface Run {
   awayFrom: number | null;
   /** When each point falls silent, where that is not to be read from its memory alone. */
   silentAt: number[] | null;
-  /** Earliest later instant at which something changes by itself; Infinity: none. */
+  /** Earliest later instant at which something changes by itself, silence and doubt of readings apart; Infinity: none. */
   wake: number;
+  /** The same for silence and doubt, which every reading puts off. */
+  readingsWake: number;
+  /** Something kept is to be looked at then, though nobody need be woken for it. */
+  due: number;
+  /** By point: what was found holds while its value stays between these two (lines.ts). */
+  over: number[];
+  under: number[];
   points: PointMemory[];
   rules: RuleMemory[];
   sources: SourceMemory[];
@@ -46,6 +53,27 @@ export interface Run {
   explains: boolean;
 }
 
+/** What an instant's settling finds, before it has found anything. */
+export function nothingFound({ points, channels, sources }: Plan) {
+  const forEach = <T>(list: readonly unknown[], value: T): T[] => new Array<T>(list.length).fill(value);
+  return {
+    wake: Infinity,
+    due: Infinity,
+    over: forEach(points, -Infinity),
+    under: forEach(points, Infinity),
+    usable: forEach<Quality>(points, 'bad'),
+    calendars: [] as RuleCalendar[],
+    standing: [] as RuleCode[],
+    lowerClaim: forEach<Claim>(channels, 'idle'),
+    lowerState: forEach<State>(channels, 'off'),
+    demandClaim: forEach<Claim>(channels, 'idle'),
+    demandState: forEach<State>(channels, 'off'),
+    interlocked: forEach<InterlockVerdict | null>(channels, null),
+    drawRate: forEach(sources, 0),
+    drawCount: forEach(sources, 0),
+  };
+}
+
 /** Why a rule wants its channel on, or not. */
 export type RuleCode =
   | 'wants'
@@ -67,3 +95,15 @@ export function entry<T>(list: readonly T[], index: number): T {
 export function wakeAt(run: Run, instant: number): void {
   if (instant > run.at && instant < run.wake) run.wake = instant;
 }
+
+/** As `wakeAt`, for what every reading puts off. */
+export function wakeForReadings(run: Run, instant: number): void {
+  if (instant > run.at && instant < run.readingsWake) run.readingsWake = instant;
+}
+
+/** What was found at `run.at` need not hold from `instant` on, but it can wait for the next step. */
+export function dueAt(run: Run, instant: number): void {
+  if (instant > run.at && instant < run.due) run.due = instant;
+}
+
+export const nextWake = (run: Run): number => Math.min(run.wake, run.readingsWake);

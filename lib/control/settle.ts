@@ -14,14 +14,29 @@ import { askDemand, askLower, bareLadder, decide } from './ladder';
 import { settleGain, settleProof } from './least-gain';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
+import { settleUnbidden } from './unbidden';
 import type { Claim, Explanation, State } from './types';
 
-/** Settles `run.at`; afterwards `run.wake` is the earliest instant at which something changes by itself. */
+/** Settles `run.at`; afterwards `nextWake(run)` is the earliest instant at which something changes by itself. */
 export function settle(run: Run): void {
-  const { plan } = run;
-  run.wake = Infinity;
+  settleReadings(run);
+  settleDecisions(run);
+}
+
+/** How good every point is, and what the derived ones are. */
+export function settleReadings(run: Run): void {
+  run.readingsWake = Infinity;
   settlePoints(run);
   settleDerived(run);
+}
+
+/** Everything that follows from the readings. */
+export function settleDecisions(run: Run): void {
+  const { plan } = run;
+  run.wake = Infinity;
+  run.due = Infinity;
+  run.over.fill(-Infinity);
+  run.under.fill(Infinity);
   for (let rule = 0; rule < plan.rules.length; rule += 1)
     run.calendars[rule] = entry(plan.rules, rule).calendar(run.at);
   if (plan.usesTimeFacts) run.wake = Math.min(run.wake, plan.timeFacts(run.at).until);
@@ -40,6 +55,7 @@ export function settle(run: Run): void {
 /** While nobody drove: loads dropped with their leases, time went on, and that is all that can be said. */
 export function settleUndriven(run: Run): void {
   run.wake = Infinity;
+  run.readingsWake = Infinity;
   for (let rule = 0; rule < run.plan.rules.length; rule += 1)
     run.calendars[rule] = entry(run.plan.rules, rule).calendar(run.at);
   for (let channel = 0; channel < run.plan.channels.length; channel += 1) settleCounted(run, channel);
@@ -55,6 +71,7 @@ function settleSources(run: Run): void {
   for (let channel = 0; channel < channels.length; channel += 1) {
     settleCounted(run, channel);
     settleProof(run, channel);
+    settleUnbidden(run, channel);
   }
   for (let source = 0; source < sources.length; source += 1) {
     settleSource(run, source);

@@ -1,5 +1,6 @@
 /** The heart: what runs now, why, and when to look again. */
 import { addLookAhead } from './look-ahead';
+import { rememberStep } from './lull';
 import type { Memory } from './memory';
 import type { Plan } from './plan';
 import { play } from './play';
@@ -17,6 +18,7 @@ import type { ChannelResult, ControlEvent, Fault, Observed, PointResult, SourceR
  */
 export function step(plan: Plan, memory: Memory, observed: Observed, now: number): StepResult {
   const { run, memory: next } = play(plan, memory, observed, now, { explains: true });
+  rememberStep(run, next);
   return new Answer(run, next);
 }
 
