@@ -1,5 +1,6 @@
 /** What is done by the clock: roll-ups, night summaries, months of readings made ahead. The leader alone does them. */
 import cron, { type ScheduledTask } from 'node-cron';
+import { forgetNodeLogs } from '@/db/queries/node-log';
 import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
 import type { Base } from '../base';
 import type { Houses } from '../control/houses';
@@ -9,6 +10,8 @@ import { refreshNights } from './nights';
 /** At the start the last day is reckoned afresh: what came just before the end may not have been rolled up. */
 const AFRESH_MS = 24 * 3_600_000;
 const MONTH_MS = 31 * 86_400_000;
+/** What nodes said is asked for while a fault is looked for; what their fallbacks did is kept with the switchings. */
+const NODE_LOGS_MS = 90 * 86_400_000;
 
 export interface JobDeps extends Base {
   houses: Houses;
@@ -32,6 +35,7 @@ export class Jobs {
       each('*/1 * * * *', 'roll-ups', () => this.rollUpTouched()),
       each('*/5 * * * *', 'nights', () => this.keepNights()),
       each('17 3 * * *', 'months', () => this.makeMonths()),
+      each('27 3 * * *', 'node logs', () => this.forgetNodeLogs()),
     ];
   }
 
@@ -78,6 +82,11 @@ export class Jobs {
     for (const { id, holdingId } of houses.all()) {
       await refreshNights({ id: holdingId, db }, id, clock.appNow());
     }
+  }
+
+  private async forgetNodeLogs(): Promise<void> {
+    const gone = await forgetNodeLogs(this.deps.db, new Date(this.deps.clock.appNow() - NODE_LOGS_MS));
+    if (gone > 0) this.deps.log.info({ gone }, 'old logs of nodes are forgotten');
   }
 
   private async makeMonths(): Promise<void> {
