@@ -42,7 +42,8 @@ export function steadied(run: Run, index: number, quality: Quality, why: string 
     }
   }
   const { since } = doubts;
-  const last = since === null ? doubts.last : { why: doubts.why, from: since, to: run.at };
+  const isOurs = since === null || doubts.why === 'worker-was-away';
+  const last = isOurs ? doubts.last : { why: doubts.why, from: since, to: run.at };
   note(run, index, { ...doubts, since: null, why: null, last, goodSince: null });
   return now;
 }

@@ -106,7 +106,7 @@ describe('A point that comes and goes', () => {
       expect(quality(player)?.why).toBe('worker-was-away');
       player.silent.delete('bench');
       player.pass(60 * S);
-      expect(quality(player)?.quality).toBe('good');
+      expect(quality(player)).toMatchObject({ quality: 'good', doubtSince: null, lastDoubt: null });
     }
   });
 
