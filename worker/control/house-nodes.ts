@@ -147,7 +147,8 @@ export class HouseNodes {
     this.heard(nodeId);
     const { changed, trip } = node.relays.take(link.boot, frame, at, link.canFallback);
     const report = node.relays.lastReport;
-    const alone = node.fallback.takeReport(frame.channels, report?.isAlone === true, at);
+    const turned = new Set([...changed, ...(trip?.dropped ?? [])].map(({ relay }) => relay));
+    const alone = node.fallback.takeReport(frame.channels, report?.isAlone === true, at, turned);
     if (alone.length > 0) void this.deps.journal.append(this.noteAlone(node, alone));
     if (report !== null && changed.length > 0) {
       void this.deps.journal.append({ reports: reportRows(this.house.record, changed, report) });

@@ -27,12 +27,16 @@ export interface AloneRun {
 export type AloneSince = Record<string, number>;
 
 const NEARLY_MS = 60_000;
+/** A node that logs says at once that it is commanded again; one that does not, never. */
+const SAYS_WITHIN_MS = 15_000;
 
 export class NodeFallback {
   private readonly since: Map<number, number>;
   /** Coils that a report showed on by themselves, and of which no log has told. */
   private readonly seen = new Map<number, number>();
   private ran: AloneRun[] = [];
+  /** Since when its reports show that it is commanded, while a coil is still on that was on by itself. */
+  private commandedAt: number | null = null;
   /** When its coils last dropped with a lease, as near as we know. */
   private droppedAt = -Infinity;
 
@@ -66,12 +70,29 @@ export class NodeFallback {
   }
 
   /**
-   * Takes a `relays` frame.
-   * @param isAlone nobody commanded the node when it sent this
+   * Takes a `relays` frame. It may have waited on the way, so when it came says little of when it was sent.
+   * @param isAlone nobody commanded the node when it sent this, as far as can be told
+   * @param turned relays whose coil is another than before, or dropped in between: only these can have begun by themselves
    */
-  takeReport(coils: Coils, isAlone: boolean, at: number): AloneChange[] {
-    // logs that a node kept arrive after its first report and before its next: by then they have told, or there are none
-    const changes = [...this.seen].flatMap(([relay, from]) => {
+  takeReport(coils: Coils, isAlone: boolean, at: number, turned: ReadonlySet<number>): AloneChange[] {
+    const changes = this.tellSeen(coils, at);
+    this.commandedAt = isAlone ? null : (this.commandedAt ?? at);
+    for (const [relay, from] of this.since) {
+      if (coils[String(relay)] === 'off') changes.push(...this.end(relay, at, null));
+      else if (this.commandedAt !== null && at - this.commandedAt > SAYS_WITHIN_MS)
+        this.close(relay, from, this.commandedAt);
+    }
+    if (!isAlone) return changes;
+    for (const { relay, fallback } of this.channels()) {
+      const isOn = fallback !== null && coils[String(relay)] === 'on';
+      if (isOn && turned.has(relay) && !this.since.has(relay)) this.seen.set(relay, at);
+    }
+    return changes;
+  }
+
+  /** Logs that a node kept arrive after its first report and before its next: by then they have told, or there are none. */
+  private tellSeen(coils: Coils, at: number): AloneChange[] {
+    return [...this.seen].flatMap(([relay, from]) => {
       this.seen.delete(relay);
       const hasTold =
         this.since.has(relay) || this.ran.some((run) => this.isOf(relay, run) && run.to >= from);
@@ -81,16 +102,6 @@ export class NodeFallback {
         ...(coils[String(relay)] === 'on' ? [] : this.end(relay, at, null)),
       ];
     });
-    for (const [relay, from] of this.since) {
-      if (coils[String(relay)] === 'off') changes.push(...this.end(relay, at, null));
-      else if (!isAlone) this.close(relay, from, at);
-    }
-    if (!isAlone) return changes;
-    for (const { relay, fallback } of this.channels()) {
-      if (fallback !== null && coils[String(relay)] === 'on' && !this.since.has(relay))
-        this.seen.set(relay, at);
-    }
-    return changes;
   }
 
   /** Runs that no step has been told of yet. */
