@@ -7,6 +7,7 @@ import { count, energy, temperature, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock, duration } from '@/lib/units/time';
 import { causeWords } from '@/lib/wording/quality';
+import type { NightDoubt } from './standing';
 
 /** This night so far, from the very rows that Duty shows; a figure that cannot be had says why. */
 export function NightFigures({
@@ -19,8 +20,8 @@ export function NightFigures({
   house: { slug: string; zone: string; frostLimit: number | null };
   sources: WatchSource[];
   nights: NightSummary[];
-  /** Points that were in doubt this night and are good again. Epoch ms. */
-  doubts: { name: string; why: string | null; from: number; to: number }[];
+  /** Points that were in doubt this night and are good again. */
+  doubts: NightDoubt[];
   preferences: Preferences;
 }) {
   const nameOf = (slug: string) => sources.find((source) => source.slug === slug)?.name ?? slug;

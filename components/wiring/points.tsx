@@ -24,6 +24,8 @@ const columns = [
 
 /** That a point was away is news for a day. */
 const TOLD_MS = 86_400_000;
+/** A report that came late is none. */
+const SHORT_MS = 60_000;
 
 const instant = (iso: string | null | undefined) => (typeof iso === 'string' ? Date.parse(iso) : null);
 
@@ -61,7 +63,11 @@ function PointRow({
       ? null
       : qualityWords({ ...now, since: instant(now.doubtSince) }, scene);
   const last = now?.lastDoubt ?? null;
-  const isBack = doubt === null && last !== null && appNow - Date.parse(last.to) < TOLD_MS;
+  const isBack =
+    doubt === null &&
+    last !== null &&
+    appNow - Date.parse(last.to) < TOLD_MS &&
+    Date.parse(last.to) - Date.parse(last.from) >= SHORT_MS;
   return (
     <Row>
       <RowHead className="min-w-40">
