@@ -82,9 +82,13 @@ function PointRow({
         ) : (
           pointValue(now.value, point.unit, preferences)
         )}
-        {doubt === null ? null : <span className="block font-sans text-[0.85rem] text-warn">{doubt}</span>}
+        {doubt === null ? null : (
+          <span className="ml-auto block max-w-44 font-sans text-[0.85rem] whitespace-normal text-warn">
+            {doubt}
+          </span>
+        )}
         {isBack ? (
-          <span className="block font-sans text-[0.85rem] text-soft">
+          <span className="ml-auto block max-w-44 font-sans text-[0.85rem] whitespace-normal text-soft">
             {backWords({ why: last.why, from: Date.parse(last.from), to: Date.parse(last.to) }, scene)}
           </span>
         ) : null}
