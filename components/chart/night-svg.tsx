@@ -177,6 +177,15 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
           >
             {strip.name.length > 17 && !frame.namesAbove ? `${strip.name.slice(0, 15)}…` : strip.name}
           </text>
+          {/* over the whole strip, with half the gap to its neighbours, for whoever wants to press it */}
+          <rect
+            data-strip={strip.key}
+            x={x0}
+            width={x1 - x0}
+            y={strip.y - (frame.stripStep - frame.stripHeight) / 2}
+            height={frame.stripStep}
+            className="cursor-pointer fill-transparent"
+          />
         </g>
       ))}
       <line x1={x0} x2={x1} y1={yBottom} y2={yBottom} className="stroke-line" />

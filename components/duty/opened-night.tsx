@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import { ButtonLink } from '@/components/ui/button';
 import { Figures, Panel } from '@/components/ui/panel';
 import type { NightSummary } from '@/lib/analysis/nights';
@@ -10,7 +11,9 @@ import { nightFigures } from './figures';
 import { NightStrip, QUARTERS, StripAxis } from './night-strip';
 
 export interface OpenedDecision {
+  /** The channel's label, and its key. */
   channel: string;
+  key: string;
   at: number;
   state: 'on' | 'off';
   claim: string;
@@ -65,6 +68,7 @@ export function OpenedNight({
             ))}
             <StripAxis clock={preferences.clock} />
             <Decisions
+              house={house}
               decisions={decisions}
               from={summary.from}
               zone={zone}
@@ -93,12 +97,14 @@ export function OpenedNight({
 }
 
 function Decisions({
+  house,
   decisions,
   from,
   zone,
   preferences,
   many,
 }: {
+  house: string;
   decisions: OpenedDecision[];
   /** The night's first noon: what stood then was decided before. */
   from: number;
@@ -127,10 +133,14 @@ function Decisions({
           >
             {decision.at < from ? 'at noon' : clock(decision.at, zone, preferences)}
           </time>
-          <span>
+          <Link
+            href={`/${house}/watch?why=${decision.key}&at=${new Date(Math.max(decision.at, from)).toISOString()}`}
+            className="underline decoration-line underline-offset-4 hover:decoration-ink"
+          >
             {many ? `${decision.channel}: ` : null}
             {decisionWords(decision.state, decision.claim)}
-          </span>
+            <span className="sr-only">: why</span>
+          </Link>
         </li>
       ))}
     </ol>

@@ -14,6 +14,7 @@ import { LiveHouseProvider } from './live-house';
 import { NightFigures } from './night-figures';
 import { OtherHouses } from './other-houses';
 import { mainBand, pastDoubts } from './standing';
+import { WhyChart } from './why-chart';
 import { YardDrawing } from './yard-drawing';
 
 /** How the house stands now: alarms, the sentence, the night, the yard, each load and why. */
@@ -52,18 +53,20 @@ export function Watch({
         <div className="grid items-start gap-5 xl:grid-cols-[minmax(0,13fr)_minmax(0,6fr)]">
           <div className="flex min-w-0 flex-col gap-5">
             <Panel title="Noon to noon" note={<StripKey id="key" />}>
-              <NoonToNoon
-                preferences={preferences}
-                chart={{
-                  ...{
-                    night: view.night,
-                    now: view.now,
-                    zone: view.house.zone,
-                    frostLimit: view.house.frostLimit,
-                  },
-                  ...{ lines, strips, bands: view.bands, main: mainBand(view)?.point ?? null },
-                }}
-              />
+              <WhyChart night={view.night} now={view.now}>
+                <NoonToNoon
+                  preferences={preferences}
+                  chart={{
+                    ...{
+                      night: view.night,
+                      now: view.now,
+                      zone: view.house.zone,
+                      frostLimit: view.house.frostLimit,
+                    },
+                    ...{ lines, strips, bands: view.bands, main: mainBand(view)?.point ?? null },
+                  }}
+                />
+              </WhyChart>
             </Panel>
             <Channels />
           </div>

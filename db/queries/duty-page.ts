@@ -32,6 +32,7 @@ export interface HeapMark {
 
 export interface OpenedDecision {
   channel: string;
+  key: string;
   at: number;
   state: State;
   claim: string;
@@ -112,7 +113,7 @@ async function open(
       : await listNights(holding, house.id, { sources: [shown.slug], from: name, to: name, limit: 1 }, nowMs);
   if (summary === undefined) return null;
   const channels = await holding.db
-    .select({ id: channel.id, label: channel.label })
+    .select({ id: channel.id, key: channel.key, label: channel.label })
     .from(channel)
     .where(
       and(
@@ -122,12 +123,13 @@ async function open(
       ),
     )
     .orderBy(asc(channel.number));
-  const labels = new Map(channels.map((row) => [row.id, row.label]));
-  const decisions = await listDecisions(holding, [...labels.keys()], summary.from, summary.to);
+  const named = new Map(channels.map((row) => [row.id, row]));
+  const decisions = await listDecisions(holding, [...named.keys()], summary.from, summary.to);
   return {
     summary,
     decisions: decisions.map(({ channelId, at, state, claim }) => ({
-      channel: labels.get(channelId) ?? '',
+      channel: named.get(channelId)?.label ?? '',
+      key: named.get(channelId)?.key ?? '',
       at,
       state,
       claim,

@@ -3,9 +3,9 @@ import type { LockOutPlaced, Reasons } from '@/lib/control/because';
 import { duration } from '@/lib/units/time';
 import { temperature } from '@/lib/units/format';
 import { fallbackReason } from './alone';
-import { begin, channelName, pointName, said, sourceName, timeWords, type Scene } from './scene';
+import { begin, channelName, pointName, said, sourceName, timeWords, valueOf, type Scene } from './scene';
 import { CLAIM_NAMES } from './claims';
-import { level } from './settings';
+import { level, withoutZero } from './settings';
 
 type Reason<Claim extends keyof Reasons> = Partial<Reasons[Claim]>;
 
@@ -57,12 +57,13 @@ export function limitWords(reason: Reason<'limit'>, scene: Scene): string {
       return said(
         `Has run for its longest time, ${duration(reason.longestOnS ?? 0)}.`,
         until !== null && `Off at least till ${until}.`,
+        'It must have been wanted off once before it runs again.',
       );
     default:
       return said(
-        `${begin(pointName(reason.point ?? '', scene))} is at ${temperature(reason.value ?? null, scene.preferences)}, over the limit of ${level(reason.above ?? 0, scene.preferences)}.`,
+        `${begin(pointName(reason.point ?? '', scene))} is at ${valueOf(reason.point ?? null, reason.value ?? null, scene)}, over the limit of ${withoutZero(valueOf(reason.point ?? null, reason.above ?? 0, scene))}.`,
         reason.againAtOrBelow !== undefined &&
-          `Again from ${level(reason.againAtOrBelow, scene.preferences)} down.`,
+          `Again from ${withoutZero(valueOf(reason.point ?? null, reason.againAtOrBelow, scene))} down.`,
       );
   }
 }
@@ -106,12 +107,18 @@ export function sourceGuardWords(reason: Reason<'source-guard'>, scene: Scene): 
 const FAULTS: Record<string, string> = {
   silent: 'silent',
   'never-spoke': 'never heard',
-  unsteady: 'coming and going',
+  'never-heard': 'never heard',
+  'no-such-point': 'no longer there',
   'out-of-range': 'out of its range',
   'one-wire-fault': 'its probe answers with a fault',
   'too-fast': 'changing faster than it can',
   frozen: 'frozen at one value',
+  unsteady: 'coming and going',
   'input-bad': 'made of a sensor that cannot be trusted',
+  'input-uncertain': 'made of a sensor in doubt',
+  'window-not-full': 'not read for long enough yet',
+  'cannot-be-reckoned': 'not to be reckoned from what its sensors say',
+  'worker-was-away': 'not heard again yet',
   contradicted: 'contradicted by its neighbours',
 };
 
@@ -126,17 +133,18 @@ export function failSafeWords(reason: Reason<'fail-safe'>, scene: Scene): string
     const on = fallback.state === 'on';
     return fallbackReason(fallback, on, (key) => pointName(key, scene), scene.preferences);
   }
+  const safe = reason.safe ?? 'its safe state';
   if (reason.trip !== undefined)
-    return `Nobody commanded it for longer than its relay waits, so it fell to ${reason.safe ?? 'its safe state'} by itself.`;
+    return `Nobody commanded it for longer than its relay waits, so it fell to ${safe} by itself.`;
   if (reason.stoppedAt !== undefined)
-    return `Control did not run from ${timeWords(reason.stoppedAt, scene) ?? ''} on, so it fell to ${reason.safe ?? 'its safe state'} by itself.`;
+    return `Control did not run from ${timeWords(reason.stoppedAt, scene) ?? ''} on, so it fell to ${safe} by itself.`;
   const points = (reason.points ?? []).map((one) => {
-    const since = timeWords(one.lastAt, scene);
+    // the newest reading's time is the beginning of nothing but a silence
+    const since = one.why === 'silent' ? timeWords(one.lastAt, scene) : null;
     return `${pointName(one.point, scene)}, ${faultWords(one.why)}${since === null ? '' : ` since ${since}`}`;
   });
-  const [what, is] = points.length > 1 ? ['Its sensors are', ''] : ['Its sensor is', ''];
   return said(
-    `${what} missing${is}${points.length === 0 ? '' : `: ${points.join('; ')}`}.`,
+    `${points.length > 1 ? 'Its sensors are' : 'Its sensor is'} missing${points.length === 0 ? '' : `: ${points.join('; ')}`}.`,
     reason.safe === 'on' && 'Runs, as its wiring makes it when nothing commands it.',
   );
 }

@@ -1,10 +1,18 @@
 /** What comes next for a load: line by line, and the nearest of it in one sentence. */
 import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/because';
 import type { Claim, State } from '@/lib/control/types';
-import { pointValue } from '@/lib/units/format';
 import { isClaim } from './because';
 import { CLAIM_NAMES } from './claims';
-import { begin, channelName, pointName, sourceName, timeWords, withInstants, type Scene } from './scene';
+import {
+  begin,
+  channelName,
+  pointName,
+  sourceName,
+  timeWords,
+  valueOf,
+  withInstants,
+  type Scene,
+} from './scene';
 
 /** Reasons as they came off the wire; what this release does not know is left out. */
 export function readNext(next: readonly unknown[]): NextReason[] {
@@ -69,12 +77,11 @@ function doesWords({ state, claim }: NextReason, scene: Scene, present: State | 
 }
 
 function passes({ point, side, value, orAt }: NextIf, scene: Scene): string {
-  const unit = scene.points.find((one) => one.key === point)?.unit ?? 'Cel';
   // without a point it is the coldest of the house, which frost looks at
   const who = point === null ? 'the coldest sensor of the house' : pointName(point, scene);
   const moves = side === 'below' ? 'falls' : 'rises';
   const past = orAt === true ? 'to' : side === 'below' ? 'under' : 'above';
-  return `${who} ${moves} ${past} ${pointValue(value, unit, scene.preferences)}`;
+  return `${who} ${moves} ${past} ${valueOf(point, value, scene)}`;
 }
 
 function happens({ what, other = '', source = '', point = '' }: NextWhen, scene: Scene): string {

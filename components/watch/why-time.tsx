@@ -1,0 +1,64 @@
+'use client';
+import { useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { TextField } from '@/components/ui/field';
+import { fromLocal, toLocal } from '@/lib/units/local-time';
+import { becauseInstant } from '@/lib/wording/instants';
+import { useHouse } from './live-house';
+
+/** Another moment: the switching before or after, or any time of the house's clock. */
+export function WhyTime({
+  at,
+  earlier,
+  later,
+  onAsk,
+}: {
+  at: number | null;
+  earlier: string | null;
+  later: string | null;
+  onAsk: (at: number | null) => void;
+}) {
+  const { house, scene } = useHouse();
+  const now = at === null ? scene.now : Math.max(at, scene.now);
+  const [typed, setTyped] = useState(() => toLocal(at ?? scene.now, house.zone));
+  const [fault, setFault] = useState<string | undefined>();
+  const [before, after] = [becauseInstant(earlier), becauseInstant(later)];
+  return (
+    <form
+      className="flex flex-col gap-3 border-t border-line pt-4"
+      onSubmit={(event) => {
+        event.preventDefault();
+        const asked = fromLocal(typed, house.zone);
+        if (asked === null) return setFault('Give a day and a time.');
+        if (asked > now + 60_000) return setFault('That is yet to come.');
+        setFault(undefined);
+        onAsk(asked);
+      }}
+    >
+      <div className="grid grid-cols-2 gap-2">
+        <Button disabled={before === null} onClick={() => onAsk(before)} className="whitespace-normal">
+          Switching before
+        </Button>
+        <Button disabled={after === null} onClick={() => onAsk(after)} className="whitespace-normal">
+          Switching after
+        </Button>
+      </div>
+      <div className="grid grid-cols-[minmax(0,1fr)_auto] items-end gap-2">
+        <TextField
+          type="datetime-local"
+          label="Why was it so at"
+          value={typed}
+          error={fault}
+          max={toLocal(now, house.zone)}
+          onChange={(event) => setTyped(event.target.value)}
+        />
+        <Button type="submit">Ask</Button>
+      </div>
+      {at === null ? null : (
+        <Button kind="quiet" className="self-start" onClick={() => onAsk(null)}>
+          Back to now
+        </Button>
+      )}
+    </form>
+  );
+}
