@@ -24,22 +24,24 @@ function counts(run: Run, rules: readonly number[], rule: number): boolean {
   return inSeason(run, rule) || !rules.some((one) => inSeason(run, one));
 }
 
-/** What a channel's draw costs its source, share a ms: by the smallest longest draw of its rules in season. */
+/**
+ * What a channel's draw costs its source, share a ms: by the smallest longest draw of its rules in season, of all if
+ * none is. With a rule in season and no rest among those that are, it costs nothing: a summer rule has no winter's rest.
+ */
 export function drawCost(run: Run, channel: number): number {
   let cost = 0;
+  let costOfAll = 0;
   let anyInSeason = false;
   const { rules } = entry(run.plan.channels, channel);
   for (const index of rules) {
     const { rest } = entry(run.plan.rules, index);
-    if (rest === null) continue;
     const now = inSeason(run, index);
-    if (now && !anyInSeason) {
-      anyInSeason = true;
-      cost = 0;
-    }
-    if (now || !anyInSeason) cost = Math.max(cost, 1 / rest.longestDrawMs);
+    anyInSeason ||= now;
+    if (rest === null) continue;
+    costOfAll = Math.max(costOfAll, 1 / rest.longestDrawMs);
+    if (now) cost = Math.max(cost, 1 / rest.longestDrawMs);
   }
-  return cost;
+  return anyInSeason ? cost : costOfAll;
 }
 
 /** The largest least rest of the rules that count, ms. */

@@ -1,7 +1,7 @@
 /** Standing conditions that somebody should know of: the whole list at every step, told when one begins or ends. */
 import { coldestPoint } from './claims/frost';
 import { isUnderFloor } from './claims/source-guard';
-import { restForbids } from './claims/rest';
+import { usedMs } from './day';
 import { entry, type Run } from './run';
 import { isUnsteady } from './steady';
 import type { Data, Fault } from './types';
@@ -66,7 +66,7 @@ function pointFaults(run: Run, index: number, stand: Stand): void {
 }
 
 function sourceFaults(run: Run, index: number, stand: Stand): void {
-  const { id, config, core, slug, dailyLimitMs, channels } = entry(run.plan.sources, index);
+  const { id, config, core, slug, dailyLimitMs } = entry(run.plan.sources, index);
   const memory = entry(run.sources, index);
   const value = core === null ? null : entry(run.points, core).value;
   if (isUnderFloor(run, index))
@@ -74,8 +74,8 @@ function sourceFaults(run: Run, index: number, stand: Stand): void {
   const needsCore = config.coreFloor !== null || (config.ready !== null && !memory.ready);
   if (needsCore && (core === null || run.usable[core] !== 'good'))
     stand('core-not-good', { source: id }, () => ({ source: slug, point: config.corePoint }));
-  const first = channels[0];
-  if (dailyLimitMs !== null && first !== undefined && restForbids(run, first) === 'daily-limit')
+  // spent is spent, though the source rests besides
+  if (dailyLimitMs !== null && usedMs(memory, run.at) >= dailyLimitMs)
     stand('daily-limit', { source: id }, () => ({ source: slug, limitS: dailyLimitMs / 1000 }));
   if (memory.ranToMost) stand('rest-ran-to-most', { source: id }, () => ({ source: slug }));
 }

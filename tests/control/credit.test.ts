@@ -182,6 +182,39 @@ describe('two fans on one heap', () => {
 });
 
 describe('several rules of one fan', () => {
+  // the summer rule has no rest, and is the one in season: the winter's, which would end it at 600 s, does not count
+  holds('a rule in season without a rest is not ended by one that is out of season', {
+    config: house({
+      sources: [source('heap')],
+      channels: [fan('fan', 1)],
+      rules: [
+        rule('fan', body({ rest: rest(600, 1200), season: { from: '03-01', to: '04-30' } }), 'spring'),
+        rule('fan', body({ season: { from: '12-01', to: '02-28' } }), 'winter'),
+      ],
+    }),
+    reads: cold,
+    rows: [[7200, null, 'on band']],
+  });
+
+  // out of season the hand draws at the smallest of all
+  holds('with none in season all count', {
+    config: house({
+      sources: [source('heap')],
+      channels: [fan('fan', 1)],
+      rules: [
+        rule('fan', body({ rest: rest(1200, 600), season: { from: '03-01', to: '04-30' } }), 'spring'),
+        rule('fan', body({ rest: rest(600, 1200), season: { from: '05-01', to: '06-30' } }), 'summer'),
+      ],
+    }),
+    reads: cold,
+    rows: [
+      [0, hand('on', 7200), 'on hand'],
+      [600, (play) => play.order({ kind: 'auto', channel: 'fan' }), 'off rest'],
+      [1799.999, null, 'off rest'],
+      [1800, null, 'off idle'],
+    ],
+  });
+
   const season = { from: '10-01', to: '01-10' };
   const config = house({
     sources: [source('heap')],
