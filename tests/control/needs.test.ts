@@ -2,7 +2,7 @@
 import { describe } from 'vitest';
 import type { ChannelConfig } from '@/lib/control/types';
 import { body, channel, house, rule } from './house';
-import { hand, holds, lockOut } from './table';
+import { hand, holds, lockOut, reports } from './table';
 
 const pair = (
   a: Partial<ChannelConfig> = {},
@@ -91,6 +91,32 @@ describe('needs', () => {
     rows: [
       [0, null, { a: 'off interlock', b: 'on band' }],
       [5, null, { a: 'on frost', b: 'on band' }],
+    ],
+  });
+
+  // b is ordered on at 10 s and reported so at 12 s: a from 17 s on; a is reported off at 63 s, and b follows
+  holds('counts from the report, and the other follows the report', {
+    config: pair(),
+    reads: { bench: 3, air: 9 },
+    rows: [
+      [1, reports({ a: 'off', b: 'off' }), { a: 'off interlock', b: 'off idle' }],
+      [10, { air: 3 }, { a: 'off interlock', b: 'on band' }],
+      [12, reports({ a: 'off', b: 'on' }), { a: 'off interlock', b: 'on band' }],
+      [16.999, null, { a: 'off interlock', b: 'on band' }],
+      [17, null, { a: 'on band', b: 'on band' }],
+      [20, reports({ a: 'on', b: 'on' }), { a: 'on band', b: 'on band' }],
+      [40, reports({ a: 'on', b: 'on' }), { a: 'on band', b: 'on band' }],
+      [60, { air: 9 }, { a: 'off interlock', b: 'on interlock' }],
+      [63, reports({ a: 'off', b: 'on' }), { a: 'off interlock', b: 'off idle' }],
+    ],
+  });
+
+  holds('waits for one that is ordered on and does not come', {
+    config: pair(),
+    reads: { bench: 3, air: 3 },
+    rows: [
+      [1, reports({ a: 'off', b: 'off' }), { a: 'off interlock', b: 'on band' }],
+      [20, reports({ a: 'off', b: 'off' }), { a: 'off interlock' }],
     ],
   });
 

@@ -65,10 +65,7 @@ export class Play {
   order(order: Order): void {
     const { player } = this;
     const number = player.observed.commands.length + 1;
-    player.observed.commands = [
-      ...player.observed.commands,
-      { ...order, number, at: player.now, by: 'Ann' } as PersonCommand,
-    ];
+    player.observed.commands = [...player.observed.commands, { ...order, number, at: player.now, by: 'Ann' }];
   }
 
   report(states: Record<string, State>, acknowledges = true): void {
