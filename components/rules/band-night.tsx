@@ -6,14 +6,7 @@ import { NightSvg } from '@/components/chart/night-svg';
 import type { RuleBody } from '@/lib/control/rule-body';
 import { temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-
-/** What the server drew of the night, on a wide and a narrow frame; the band is laid over it as it is typed. */
-export interface DrawnNight {
-  title: string;
-  wide: NightLayout;
-  narrow: NightLayout;
-  summary: string;
-}
+import type { DrawnNight } from './draw-night';
 
 /** y of a temperature, from two of the axis's own ticks. */
 function heightOf(layout: NightLayout): ((celsius: number) => number) | null {

@@ -1,42 +1,45 @@
 'use client';
+import dynamic from 'next/dynamic';
+import type { ReactNode } from 'react';
 import { Panel } from '@/components/ui/panel';
 import type { RuleBody } from '@/lib/control/rule-body';
-import { BandNight } from './band-night';
 import type { RuleEditorData } from './editor-data';
-import { Findings } from './findings';
+import type { DrawnNight } from './draw-night';
 import { KeepRule } from './keep-rule';
 import { useFindings } from './use-judged';
 import type { RuleActions } from './use-rule-actions';
-import { Versions } from './versions';
+
+// each comes with what it shows: the night's drawing after the form can be used, the findings with the first answer
+const BandNight = dynamic(() => import('./band-night').then((module) => module.BandNight), { ssr: false });
+const Findings = dynamic(() => import('./findings').then((module) => module.Findings), { ssr: false });
 
 /** Beside the form: what the band would be on a night, things to look at, the versions, and the rule as a whole. */
 export function EditorSide({
   data,
+  versions,
   body,
   actions,
   onGo,
 }: {
   data: RuleEditorData;
+  versions: ReactNode;
   body: RuleBody;
   actions: RuleActions;
   onGo: (path: string) => void;
 }) {
-  const { rule, names, points, preferences, mayWrite, house } = data;
+  const { rule, points, preferences, mayWrite, house, night } = data;
   const findings = useFindings(rule.id, body, mayWrite);
   return (
     <div className="flex min-w-0 flex-col gap-5">
-      {data.night === null ? null : (
-        <Panel title="The band on a night" note={data.night.title}>
-          <BandNight night={data.night} body={body} preferences={preferences} />
+      {night === null ? null : (
+        <Panel title="The band on a night" note={night.title}>
+          <NightFrame night={night}>
+            <BandNight {...{ night, body, preferences }} />
+          </NightFrame>
         </Panel>
       )}
-      <Findings told={findings} house={house} onGo={onGo} />
-      <Versions
-        {...{ rule, names, preferences, mayWrite }}
-        zone={data.zone}
-        now={data.now}
-        onGoBack={actions.goBack}
-      />
+      {findings === null ? null : <Findings told={findings} house={house} onGo={onGo} />}
+      {versions}
       {mayWrite ? (
         <KeepRule
           {...{ rule, house, points }}
@@ -45,6 +48,18 @@ export function EditorSide({
           onKeep={actions.keep}
         />
       ) : null}
+    </div>
+  );
+}
+
+/** Keeps the drawing's place, so that nothing jumps when it comes. */
+function NightFrame({ night, children }: { night: DrawnNight; children: ReactNode }) {
+  const shape = ({ frame, height }: DrawnNight['wide']) => ({ aspectRatio: `${frame.width} / ${height}` });
+  return (
+    <div className="@container grid *:[grid-area:1/1]">
+      <div aria-hidden="true" className="hidden @[34rem]:block" style={shape(night.wide)} />
+      <div aria-hidden="true" className="@[34rem]:hidden" style={shape(night.narrow)} />
+      <div className="min-w-0">{children}</div>
     </div>
   );
 }

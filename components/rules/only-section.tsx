@@ -1,9 +1,8 @@
 'use client';
 import dynamic from 'next/dynamic';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { useWatch } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
-import { Reading } from './conditions/reading';
 import { useFacts, useRuleForm } from './context';
 import { Section } from './section';
 
@@ -12,7 +11,16 @@ const ConditionBuilder = dynamic(() =>
 );
 
 /** Extra conditions, each with how it stands now; to be read at first, and built anew after a press. */
-export function OnlySection({ isBuilding, onBuild }: { isBuilding: boolean; onBuild: () => void }) {
+export function OnlySection({
+  reading,
+  isBuilding,
+  onBuild,
+}: {
+  /** The conditions as they are saved. */
+  reading: ReactNode;
+  isBuilding: boolean;
+  onBuild: () => void;
+}) {
   const form = useRuleForm();
   const { mayWrite } = useFacts();
   const root = useWatch({ control: form.control, name: 'only' });
@@ -27,7 +35,7 @@ export function OnlySection({ isBuilding, onBuild }: { isBuilding: boolean; onBu
         <ConditionBuilder isFirst={wasEmpty} />
       ) : (
         <>
-          {isEmpty ? null : <Reading node={root} />}
+          {isEmpty ? null : reading}
           {mayWrite ? (
             <Button kind="quiet" className="-ml-4 self-start" data-field="only" onClick={onBuild}>
               {isEmpty ? 'Add a condition' : 'Change the conditions'}

@@ -7,12 +7,10 @@ import { Sentence } from '@/components/ui/sentence';
 import { say } from '@/components/ui/toast';
 import { useAwake } from '@/components/ui/use-awake';
 import { ruleSentence } from '@/lib/wording/rule';
-import { ruleChanges } from '@/lib/wording/rule-changes';
 import { BandSection } from './band-section';
 import { EditorFactsProvider } from './context';
-import type { RuleEditorData } from './editor-data';
+import type { RuleEditorData, RuleEditorParts } from './editor-data';
 import { EditorFoot } from './editor-foot';
-import { EditorNotices } from './editor-notices';
 import { EditorSide } from './editor-side';
 import { fieldOfPath, focusField } from './field-paths';
 import type { RuleForm } from './form-values';
@@ -21,13 +19,14 @@ import { RestSection } from './rest-section';
 import { useEditedRule } from './use-edited-rule';
 import { useLeaveWarning } from './use-leave-warning';
 import { useRuleActions } from './use-rule-actions';
+import { VersionActsProvider } from './version-acts';
 import { WhenSection } from './when-section';
 
 const ForceDialog = dynamic(() => import('./force-dialog').then((module) => module.ForceDialog));
 const LeaveDialog = dynamic(() => import('./leave-dialog').then((module) => module.LeaveDialog));
 
 /** A rule as a form: its sentence on top and its effect at the right change as one types. */
-export function RuleEditor({ data }: { data: RuleEditorData }) {
+export function RuleEditor({ data, parts }: { data: RuleEditorData; parts: RuleEditorParts }) {
   const { rule, points, names, clock, preferences, mayWrite } = data;
   const router = useRouter();
   const [isForcing, setForcing] = useState(false);
@@ -63,7 +62,7 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
             As it was before the field that cannot be read yet.
           </p>
         )}
-        <EditorNotices {...{ rule, mayWrite, preferences }} now={data.now} zone={data.zone} />
+        {parts.notices}
         <div className="grid grid-cols-1 items-start gap-5 xl:grid-cols-[26rem_minmax(0,1fr)]">
           <form
             noValidate
@@ -74,7 +73,11 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
             <fieldset disabled={!mayWrite || !isAwake} className="min-w-0">
               <BandSection />
               <RestSection source={data.source} />
-              <OnlySection isBuilding={isBuilding} onBuild={() => setBuilding(true)} />
+              <OnlySection
+                reading={parts.conditions}
+                isBuilding={isBuilding}
+                onBuild={() => setBuilding(true)}
+              />
               <WhenSection zone={data.zone} />
             </fieldset>
             {mayWrite ? (
@@ -85,12 +88,16 @@ export function RuleEditor({ data }: { data: RuleEditorData }) {
               />
             ) : null}
           </form>
-          <EditorSide data={data} body={body} actions={actions} onGo={goTo} />
+          <VersionActsProvider
+            value={{ rule, ...actions.going, goBack: (number) => void actions.goBack(number) }}
+          >
+            <EditorSide {...{ data, body, actions }} versions={parts.versions} onGo={goTo} />
+          </VersionActsProvider>
         </div>
         {isForcing ? (
           <ForceDialog
             {...{ body, names, preferences }}
-            changes={rule.inForce === null ? null : ruleChanges(rule.inForce.body, body, names, preferences)}
+            inForce={rule.inForce?.body ?? null}
             version={draftNumber}
             channelLabel={data.channel.label}
             isProved={data.channel.isProved}

@@ -4,30 +4,30 @@ import { useForm, type UseFormReturn } from 'react-hook-form';
 import type { RuleBody } from '@/lib/control/rule-body';
 import type { FactOf } from './conditions/condition-text';
 import type { RuleEditorData } from './editor-data';
-import { formOf, type RuleForm } from './form-values';
+import type { RuleForm } from './form-values';
 import { judgeNow, ruleResolver, useTypedBody } from './use-judged';
 
 /** The form of a rule, and what stands in it as a body whenever it is one. */
-export function useEditedRule({ rule, points, preferences }: RuleEditorData): {
+export function useEditedRule({ rule, values, points, preferences }: RuleEditorData): {
   form: UseFormReturn<RuleForm>;
   factOf: FactOf;
   body: RuleBody;
   isWhole: boolean;
   bodyNow: () => Promise<RuleBody | null>;
-  valuesOf: (body: RuleBody) => RuleForm;
+  valuesOf: (body: RuleBody) => Promise<RuleForm>;
 } {
   const factOf = useMemo<FactOf>(() => {
     const byKey = new Map(points.map(({ key, unit, role }) => [key, { unit, role }]));
     return (fact) => byKey.get(fact);
   }, [points]);
   const form = useForm<RuleForm>({
-    defaultValues: formOf(rule.body, factOf, preferences),
+    defaultValues: values,
     resolver: ruleResolver(factOf, preferences),
   });
   const { body, isWhole } = useTypedBody(form, rule.body, factOf, preferences);
   return {
     ...{ form, factOf, body, isWhole },
     bodyNow: () => judgeNow(form, factOf, preferences),
-    valuesOf: (older) => formOf(older, factOf, preferences),
+    valuesOf: async (older) => (await import('./form-values')).formOf(older, factOf, preferences),
   };
 }

@@ -22,7 +22,7 @@ export function useRuleActions({
   form: UseFormReturn<RuleForm>;
   draftNumber: number;
   bodyNow: () => Promise<RuleBody | null>;
-  valuesOf: (body: RuleBody) => RuleForm;
+  valuesOf: (body: RuleBody) => Promise<RuleForm>;
   /** Brings the focus to the field of a path. */
   onGo: (path: string) => void;
 }) {
@@ -30,6 +30,10 @@ export function useRuleActions({
   // counted here, since the page is read anew only after the answer; another's change meanwhile is then told as one
   const revision = useRef(rule.revision);
   const [failure, setFailure] = useState<string | null>(null);
+  const [going, setGoing] = useState<{ busy: number | null; failure: string | null }>({
+    busy: null,
+    failure: null,
+  });
 
   async function save(): Promise<Answer<unknown>> {
     setFailure(null);
@@ -75,7 +79,12 @@ export function useRuleActions({
   }
 
   /** An older version becomes the draft; of a retired rule, which comes back by it. */
-  async function goBack(number: number): Promise<string | null> {
+  async function goBack(number: number): Promise<void> {
+    setGoing({ busy: number, failure: null });
+    setGoing({ busy: null, failure: await bringBack(number) });
+  }
+
+  async function bringBack(number: number): Promise<string | null> {
     const how = rule.retiredAt === null ? 'go-back' : 'restore';
     const answer = await send<{ revision?: number }>(
       'POST',
@@ -86,7 +95,7 @@ export function useRuleActions({
     if (!answer.ok) return answer.fields.version ?? answer.message;
     revision.current = answer.value.revision ?? revision.current + 1;
     const older = rule.versions.find((version) => version.number === number);
-    if (older !== undefined) form.reset(valuesOf(older.body));
+    if (older !== undefined) form.reset(await valuesOf(older.body));
     router.refresh();
     say(
       how === 'restore'
@@ -101,12 +110,12 @@ export function useRuleActions({
     const answer = await send(method, `/rules/${rule.id}${under}`, body, `"${revision.current}"`);
     if (!answer.ok) return answer.fields.name ?? answer.fields.why ?? answer.message;
     revision.current += 1;
-    if (method === 'DELETE' && rule.inForce !== null) form.reset(valuesOf(rule.inForce.body));
+    if (method === 'DELETE' && rule.inForce !== null) form.reset(await valuesOf(rule.inForce.body));
     router.refresh();
     return null;
   }
 
-  return { save, force, goBack, keep, failure };
+  return { save, force, goBack, going, keep, failure };
 }
 
 export type RuleActions = ReturnType<typeof useRuleActions>;

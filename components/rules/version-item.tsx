@@ -1,4 +1,3 @@
-'use client';
 import type { ReactNode } from 'react';
 import type { RuleVersion } from '@/lib/schema/rule-view';
 import type { Preferences } from '@/lib/units/preferences';
