@@ -77,7 +77,7 @@ export class Fallback {
 
   /** @param read the node's own point, °C; null where it has no reading */
   look(nowMs: number, read: (point: string) => number | null): FallbackChange[] {
-    let hasRested = false;
+    const before = this.relays.size;
     const changes = Object.entries(this.settings).flatMap(([key, setting]): FallbackChange[] => {
       const told = read(setting.point);
       const value = told === null || !Number.isFinite(told) || notReadings.includes(told) ? null : told;
@@ -89,12 +89,13 @@ export class Fallback {
         return [changed(key, 'off', why, setting, value)];
       }
       if (relay !== undefined && nowMs < relay.restsTillMs) return [];
-      if (relay !== undefined) hasRested = this.relays.delete(key);
+      this.relays.delete(key);
       if (value === null || value >= setting.below) return [];
       this.relays.set(key, { coil: 'on', sinceMs: nowMs, restsTillMs: nowMs });
       return [changed(key, 'on', 'below', setting, value)];
     });
-    if (changes.length > 0 || hasRested) this.keepNow();
+    // a rest that is over is no longer to be remembered
+    if (changes.length > 0 || this.relays.size !== before) this.keepNow();
     return changes;
   }
 
