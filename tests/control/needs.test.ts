@@ -2,7 +2,7 @@
 import { describe } from 'vitest';
 import type { ChannelConfig } from '@/lib/control/types';
 import { body, channel, house, rule } from './house';
-import { hand, holds, lockOut, reports } from './table';
+import { hand, holds, lockOut, reports, type Row } from './table';
 
 const pair = (
   a: Partial<ChannelConfig> = {},
@@ -117,6 +117,60 @@ describe('needs', () => {
     rows: [
       [1, reports({ a: 'off', b: 'off' }), { a: 'off interlock', b: 'on band' }],
       [20, reports({ a: 'off', b: 'off' }), { a: 'off interlock' }],
+    ],
+  });
+
+  const chain = house({
+    channels: [channel('a', 1), channel('b', 2), channel('c', 3)],
+    rules: [rule('a', body()), rule('b', body()), rule('c', body({ point: 'air' }))],
+    interlocks: [
+      { id: '1', channel: 'a', kind: 'needs', other: 'b', delayS: 0, frostMayBreak: false },
+      { id: '2', channel: 'b', kind: 'needs', other: 'c', delayS: 0, frostMayBreak: false },
+    ],
+  });
+  const running: Row[] = [
+    [1, reports({ a: 'off', b: 'off', c: 'on' }), { a: 'off interlock', b: 'on band', c: 'on band' }],
+    [2, reports({ a: 'off', b: 'on', c: 'on' }), { a: 'on band', b: 'on band', c: 'on band' }],
+    [3, reports({ a: 'on', b: 'on', c: 'on' }), { a: 'on band', b: 'on band', c: 'on band' }],
+  ];
+
+  holds('in a chain each waits for the report of the one before', {
+    config: chain,
+    reads: { bench: 3, air: 3 },
+    rows: [
+      ...running,
+      [10, { air: 9 }, { a: 'off interlock', b: 'on interlock', c: 'on interlock' }],
+      [
+        12,
+        reports({ a: 'off', b: 'on', c: 'on' }),
+        { a: 'off interlock', b: 'off interlock', c: 'on interlock' },
+      ],
+      [
+        14,
+        reports({ a: 'off', b: 'off', c: 'on' }),
+        { a: 'off interlock', b: 'off interlock', c: 'off idle' },
+      ],
+    ],
+  });
+
+  holds('a lock-out at its end cuts the whole chain at once', {
+    config: chain,
+    reads: { bench: 3, air: 3 },
+    rows: [...running, [10, lockOut('c'), { a: 'off interlock', b: 'off interlock', c: 'off lock-out' }]],
+  });
+
+  holds('a lock-out or a limit of the other does not wait for the report', {
+    config: pair({}, { highLimit: { point: 'core', above: 60 } }),
+    reads: { bench: 3, air: 3, core: 50 },
+    rows: [
+      [1, reports({ a: 'off', b: 'on' }), { a: 'off interlock', b: 'on band' }],
+      [6, reports({ a: 'on', b: 'on' }), { a: 'on band', b: 'on band' }],
+      [10, { core: 61 }, { a: 'off interlock', b: 'off limit' }],
+      [11, reports({ a: 'off', b: 'off' }), { b: 'off limit' }],
+      [20, { core: 50 }, { b: 'on band' }],
+      [21, reports({ a: 'off', b: 'on' }), { b: 'on band' }],
+      [26, reports({ a: 'on', b: 'on' }), { a: 'on band', b: 'on band' }],
+      [30, lockOut('b'), { a: 'off interlock', b: 'off lock-out' }],
     ],
   });
 

@@ -127,6 +127,30 @@ describe('frost', () => {
     ],
   });
 
+  holds('that may break it stays on where the band takes over within the delay', {
+    config: {
+      ...vent(true),
+      rules: [
+        rule('a', body({ band: [{ from: '00:00', low: 6, high: 8 }] })),
+        rule('b', body({ point: 'air' })),
+      ],
+    },
+    reads: { bench: 9, air: 3.5 },
+    rows: [
+      [60, { air: 2, bench: 5 }, { a: 'on frost', b: 'off interlock' }],
+      [62, { air: 9 }, { a: 'on band', b: 'off interlock' }],
+    ],
+  });
+
+  holds('alone may break it: the band waits', {
+    config: vent(true),
+    reads: { bench: 9, air: 3.5 },
+    rows: [
+      [60, { air: 9, bench: 3.5 }, { a: 'off interlock', b: 'off idle' }],
+      [65, null, { a: 'on band', b: 'off interlock' }],
+    ],
+  });
+
   holds('starts at once where it may break the interlock', {
     config: vent(true),
     reads: { bench: 9, air: 3.5 },
@@ -134,6 +158,23 @@ describe('frost', () => {
       [0, null, { a: 'off interlock', b: 'on band' }],
       [60, { air: 2 }, { a: 'on frost', b: 'off interlock' }],
     ],
+  });
+});
+
+describe('its reason', () => {
+  it.each(['a', 'b'])('names the other, what it is known to be, and until when, written at %s', (from) => {
+    const lock = { channel: from, other: from === 'a' ? 'b' : 'a' };
+    const player = new Player(pair({ lock }), { bench: 9, air: 3 });
+    expect(player.of('a').because).toEqual({
+      ...{ kind: 'never-with', other: 'b', otherState: 'on', delayS: 5, until: null },
+    });
+    player.at({ bench: 3, air: 9 });
+    const until = player.now + 5 * S;
+    expect(player.of('a').because).toMatchObject({ other: 'b', otherState: 'off', until });
+    expect(player.of('a').until).toBe(until);
+    expect(player.faults()).not.toContain('interlock-blocks-frost');
+    player.until(until);
+    expect(player.of('b').because).toMatchObject({ kind: 'never-with', other: 'a', otherState: 'on' });
   });
 });
 

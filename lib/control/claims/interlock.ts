@@ -34,7 +34,9 @@ export function settleInterlocks(run: Run): void {
   neverWith(run);
   for (let place = run.plan.needsOrder.length - 1; place >= 0; place -= 1) {
     const channel = entry(run.plan.needsOrder, place);
-    run.interlocked[channel] ??= holds(run, channel);
+    const verdict = entry(run.interlocked, channel);
+    if (verdict === null) run.interlocked[channel] = holds(run, channel);
+    else if (verdict.kind === 'needs') run.interlocked[channel] = lastInChain(run, channel) ?? verdict;
   }
 }
 
@@ -112,8 +114,27 @@ function waits(run: Run, channel: number): InterlockVerdict | null {
 
 /** On: a channel that is to go off waits for those that need it; lock-out, limit and never-with do not wait. */
 function holds(run: Run, channel: number): InterlockVerdict | null {
-  if (run.demandState[channel] !== 'off' || entry(run.channels, channel).wanted !== 'on') return null;
-  if (run.demandClaim[channel] === 'lock-out' || run.demandClaim[channel] === 'limit') return null;
+  if (run.demandState[channel] !== 'off' || isCutShort(run, channel)) return null;
+  return waitsForDependants(run, channel);
+}
+
+/** In a chain too: one that goes because what it needs is to go waits for its own dependants, if that one still waits. */
+function lastInChain(run: Run, channel: number): InterlockVerdict | null {
+  const stillOn = ({ other }: { other: number }) => entry(run.channels, other).known === 'on';
+  if (partners(run, channel).some(stillOn)) return null;
+  const { needs: needed } = entry(run.plan.channels, channel);
+  if (!needed.every((lock) => stillOn(lock) && !isCutShort(run, lock.other))) return null;
+  return waitsForDependants(run, channel);
+}
+
+/** Goes off at once, whoever needs it. */
+const isCutShort = (run: Run, channel: number): boolean =>
+  run.demandClaim[channel] === 'lock-out' ||
+  run.demandClaim[channel] === 'limit' ||
+  run.interlocked[channel]?.kind === 'never-with';
+
+function waitsForDependants(run: Run, channel: number): InterlockVerdict | null {
+  if (entry(run.channels, channel).wanted !== 'on') return null;
   for (const lock of entry(run.plan.channels, channel).neededBy) {
     if (entry(run.channels, lock.channel).known === 'off') continue;
     const { delayMs } = lock;
