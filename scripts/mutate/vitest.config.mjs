@@ -4,13 +4,17 @@ import { defineConfig } from 'vitest/config';
 
 const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '../..');
 
-/** The core's tests alone, without those that play thousands of random cases: each of 3,000 changes runs them again. */
+/** Those that play thousands of cases or long times: each of thousands of changes would run them again. */
+const LONG = ['model', 'differential', 'look-ahead', 'calendar-edges', 'cycle', 'day-limit'];
+const { MUTATE_TESTS: only } = process.env;
+
+/** The core's tests; by `MUTATE_TESTS=needs,golden` those alone, which is faster where one knows who should notice. */
 export default defineConfig({
   root,
   resolve: { alias: [{ find: /^@\//, replacement: `${root}/` }] },
   test: {
-    include: ['tests/control/**/*.test.ts'],
-    exclude: ['model', 'differential', 'look-ahead', 'night'].map((name) => `tests/control/${name}*.test.ts`),
+    include: (only?.split(',') ?? ['*']).map((name) => `tests/control/${name}.test.ts`),
+    exclude: only === undefined ? LONG.map((name) => `tests/control/${name}*.test.ts`) : [],
     testTimeout: 20_000,
   },
 });

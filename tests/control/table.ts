@@ -137,8 +137,11 @@ export class Play {
   }
 }
 
+/** A mutation run by chosen tests (scripts/mutate) plays the way of the fewest steps, which goes through all instants too. */
+const USUAL_WAYS = process.env['MUTATE_TESTS'] === undefined ? WAYS : WAYS.slice(-1);
+
 /** A table as a test: it holds whichever way it is stepped. */
-export function holds(name: string, table: Table, ways: readonly (typeof WAYS)[number][] = WAYS): void {
+export function holds(name: string, table: Table, ways: readonly (typeof WAYS)[number][] = USUAL_WAYS): void {
   it(name, () => {
     for (const way of ways) new Play(table, way).run();
   });
