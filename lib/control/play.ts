@@ -8,9 +8,9 @@ import { MEMORY_VERSION, type Memory, type PointMemory } from './memory';
 import type { Plan } from './plan';
 import { silenceAhead, takeReading } from './quality';
 import { takeRunsAlone } from './ran-alone';
-import { entry, nextWake, nothingFound, type Run } from './run';
+import { entry, filled, nextWake, nothingFound, type Run } from './run';
 import { settle, settleDecisions, settleReadings, settleUndriven } from './settle';
-import type { Observed } from './types';
+import type { Observed, Quality } from './types';
 
 export interface Played {
   run: Run;
@@ -51,7 +51,7 @@ export function play(
     if (seen !== undefined && point.derived === null)
       run.points[index] = takeReading(point, entry(run.points, index), seen, stepAt);
   }
-  for (let index = 0; index < plan.channels.length; index += 1) {
+  for (let index = 0; before === null && index < plan.channels.length; index += 1) {
     noteRelay(run, index);
     takeRunsAlone(run, index);
   }
@@ -60,7 +60,7 @@ export function play(
   if (before !== null) {
     if (isLull(run, before)) return { run, memory: remember(run, memory, taken, memory.faults) };
     // from here on everything is found anew, and the step before keeps what it found
-    Object.assign(run, nothingFound(plan), { usable: run.usable });
+    Object.assign(run, nothingFound(plan));
     ownLists(run);
   }
   settleDecisions(run);
@@ -95,7 +95,7 @@ function begin(
     due: found.due,
     over: found.over,
     under: found.under,
-    usable: found.usable.slice(),
+    usable: before === null ? filled<Quality>(plan.points.length, 'bad') : before.usable.slice(),
     calendars: found.calendars,
     standing: found.standing,
     lowerClaim: found.lowerClaim,

@@ -19,6 +19,7 @@ interface Draw {
 export function takeRunsAlone(run: Run, channel: number): void {
   const memory = entry(run.channels, channel);
   const told = run.observed.relays[memory.id]?.ranAlone ?? [];
+  if (told.length === 0) return;
   let till = memory.aloneTill ?? -Infinity;
   const fresh: { from: number; to: number }[] = [];
   for (const { from, to } of [...told].sort((one, other) => one.from - other.from)) {

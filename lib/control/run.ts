@@ -53,26 +53,44 @@ export interface Run {
   explains: boolean;
 }
 
-/** What an instant's settling finds, before it has found anything. */
-export function nothingFound({ points, channels, sources }: Plan) {
-  const forEach = <T>(list: readonly unknown[], value: T): T[] => new Array<T>(list.length).fill(value);
+/** What an instant's settling finds. */
+type Found = Pick<
+  Run,
+  | 'wake'
+  | 'due'
+  | 'over'
+  | 'under'
+  | 'calendars'
+  | 'standing'
+  | 'lowerClaim'
+  | 'lowerState'
+  | 'demandClaim'
+  | 'demandState'
+  | 'interlocked'
+  | 'drawRate'
+  | 'drawCount'
+>;
+
+/** Before it has found anything. */
+export function nothingFound({ points, channels, sources }: Plan): Found {
   return {
     wake: Infinity,
     due: Infinity,
-    over: forEach(points, -Infinity),
-    under: forEach(points, Infinity),
-    usable: forEach<Quality>(points, 'bad'),
-    calendars: [] as RuleCalendar[],
-    standing: [] as RuleCode[],
-    lowerClaim: forEach<Claim>(channels, 'idle'),
-    lowerState: forEach<State>(channels, 'off'),
-    demandClaim: forEach<Claim>(channels, 'idle'),
-    demandState: forEach<State>(channels, 'off'),
-    interlocked: forEach<InterlockVerdict | null>(channels, null),
-    drawRate: forEach(sources, 0),
-    drawCount: forEach(sources, 0),
+    over: filled(points.length, -Infinity),
+    under: filled(points.length, Infinity),
+    calendars: [],
+    standing: [],
+    lowerClaim: filled<Claim>(channels.length, 'idle'),
+    lowerState: filled<State>(channels.length, 'off'),
+    demandClaim: filled<Claim>(channels.length, 'idle'),
+    demandState: filled<State>(channels.length, 'off'),
+    interlocked: filled<InterlockVerdict | null>(channels.length, null),
+    drawRate: filled(sources.length, 0),
+    drawCount: filled(sources.length, 0),
   };
 }
+
+export const filled = <T>(length: number, value: T): T[] => new Array<T>(length).fill(value);
 
 /** Why a rule wants its channel on, or not. */
 export type RuleCode =

@@ -22,24 +22,29 @@ export function step(plan: Plan, memory: Memory, observed: Observed, now: number
   return new Answer(run, next);
 }
 
-/** Points and sources are reckoned when somebody looks: a replay of a winter never does. */
+/**
+ * Reasons, points and sources are reckoned when somebody looks: a replay of a winter never does. What each channel is to
+ * do and by which claim stands in the memory as well.
+ */
 class Answer implements StepResult {
   readonly memory: Memory;
-  readonly channels: ChannelResult[];
   readonly faults: Fault[];
   readonly events: ControlEvent[];
   readonly wakeAt: number | null;
   readonly #run: Run;
+  #channels: ChannelResult[] | null = null;
 
   constructor(run: Run, memory: Memory) {
     this.#run = run;
     this.memory = memory;
-    this.channels = [];
-    for (let index = 0; index < run.channels.length; index += 1)
-      this.channels.push(channelResult(run, index));
     this.faults = memory.faults;
     this.events = run.events.length === 0 ? run.events : tellEvents(run, memory);
     this.wakeAt = memory.wakeAt;
+  }
+
+  get channels(): ChannelResult[] {
+    this.#channels ??= this.#run.channels.map((_, index) => channelResult(this.#run, index));
+    return this.#channels;
   }
 
   get points(): PointResult[] {

@@ -67,7 +67,11 @@ function settleLatch(run: Run, index: number, using: number, latch: boolean): bo
   const quality = run.usable[point];
   if (quality === 'bad') return false;
   if (quality === 'uncertain') return latch;
-  if (offset === 0) return isUnder(run, point, low) ? warm : isOver(run, point, high) ? !warm : latch;
+  // a latch turns on at one end of the band and off at the other: only that end is looked at
+  if (offset === 0) {
+    const turns = warm === latch ? isOver(run, point, high) : isUnder(run, point, low);
+    return turns ? !latch : latch;
+  }
   // to the last digit it is the sum that counts, so no line can be drawn for the reading itself
   const value = (exactly(run, point) ?? NaN) + offset;
   return value < low ? warm : value > high ? !warm : latch;
