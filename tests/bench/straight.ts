@@ -1,15 +1,33 @@
-// The demo's Long house written out by hand: what a programmer would write who knew this one house and no other. It must
-// give the core's states, claims and wakeAt at every step of the benchmark's night; there it leaves out what that night
-// does not have (bad readings, hands, lock-outs, frost without readings), and throws rather than guess if one comes.
-import type { Claim, State } from '@/lib/control/types';
+// The demo's Long house written out by hand: what a programmer would write who knew this one house and no other. It is
+// given what the core is given and must give the core's states, claims and wakeAt at every step of the benchmark's night,
+// the calendar's part in them included. It leaves out what that night does not have (bad readings, hands, lock-outs, frost
+// without readings) and throws rather than guess if one comes; it keeps its state in place, as nobody asks it for the old.
+import type { Claim, Observed, State } from '@/lib/control/types';
 
-/** Order of the demo's points. */
+/** The demo's points in order. */
+const IDS = [
+  'point-house-air',
+  'point-bench-1',
+  'point-bench-2',
+  'point-humidity',
+  'point-outdoors',
+  'point-light',
+  'point-loop-intake',
+  'point-loop-return',
+  'point-gate-core',
+  'point-gate-base',
+  'point-gate-edge',
+  'point-ground',
+  'point-ground-return',
+  'point-fan-amps',
+];
 const P = { air: 0, bench1: 1, bench2: 2, intake: 6, back: 7, core: 8, base: 9, amps: 13 } as const;
 const MAX_RATE = [0.5, 0.5, 0.5, 0, 0.5, 0, 1, 2, 0.1, 0.2, 0.2, 0.2, 2, 0];
 const LEAST = [-40, -40, -40, 0, -40, 0, -40, -40, -40, -40, -40, -40, -40, 0];
 const MOST = [85, 85, 85, 110, 85, 1400, 85, 85, 85, 85, 85, 85, 85, 5];
 const STALE_MS = 90_001;
 const DAY_MS = 86_400_000;
+const HOUR_MS = 3_600_000;
 
 interface Load {
   state: State;
@@ -63,20 +81,18 @@ export interface Answer {
   wakeAt: number;
 }
 
-/** One step; `edges` is when the calendar next changes anything, `hours` whether the vent's hours are on. */
-export function straight(
-  s: StraightState,
-  values: readonly number[],
-  at: number,
-  now: number,
-  edges: number,
-  hours: boolean,
-): Answer {
-  let wake = edges;
+/** One step. In winter London's clock is UTC: the vent's hours are 9 to 17, and seasons can change at midnight. */
+export function straight(s: StraightState, observed: Observed, now: number): Answer {
+  const today = now - (now % DAY_MS);
+  const opens = today + 9 * HOUR_MS;
+  const closes = today + 17 * HOUR_MS;
+  const hours = now >= opens && now < closes;
+  let wake = now < opens ? opens : now < closes ? closes : today + DAY_MS;
   for (let point = 0; point < 14; point += 1) {
-    const value = values[point] ?? NaN;
+    const seen = observed.points[IDS[point] ?? ''];
     const last = s.times[point] ?? 0;
-    if (at > last) {
+    if (seen !== undefined && seen.at > last) {
+      const { value, at } = seen;
       const rate = MAX_RATE[point] ?? 0;
       const jump = Math.abs(value - (s.values[point] ?? NaN));
       if (value < (LEAST[point] ?? 0) || value > (MOST[point] ?? 0) || value === 85 || value === -127)
