@@ -13,6 +13,8 @@ import { CLAIMS, type Data, type Explanation } from './types';
 import { asItIs, changesBy, ifInstead, type Future, type Told } from './what-if';
 
 const AHEAD_MS = 24 * 3_600_000;
+/** What a reading sets going comes within a few instants: a least time, two minutes without gain, a delay. */
+const NEAR_WAKES = 5;
 
 /**
  * Adds what follows to an explanation of the instant at which `run` stands. It costs some dozens of steps, so it is
@@ -41,12 +43,13 @@ function whatNext(run: Run, memory: Memory, { channel: id, state, claim }: Expla
   const thens = [change, flip].flatMap((one, place, both): NextThen[] =>
     one === null || (place === 1 && both[0]?.at === one.at) ? [] : [{ kind: 'then', ...one }],
   );
-  const ifs = thresholdsOf(run, channel, flip?.at ?? null).flatMap((one) => tried(base, flip, one) ?? []);
+  const thresholds = thresholdsOf(run, channel, flip?.at ?? null);
+  const ifs = thresholds.flatMap((one) => tried(base, flip, one, isAlone(run, one, thresholds)) ?? []);
   return [...thens, ...nearest(ifs, base.at), ...events];
 }
 
 /** What a reading past the threshold would bring; null: nothing. */
-function tried(base: Future, flip: Told | null, threshold: Threshold): NextIf | null {
+function tried(base: Future, flip: Told | null, threshold: Threshold, alone: boolean): NextIf | null {
   const { point, side, value, orAt, of } = threshold;
   const step = (side === 'above' ? 1 : -1) * 1e-6 * Math.max(1, Math.abs(value));
   const outcome = outcomeOf(base, flip, threshold, orAt ? value : value + step);
@@ -56,8 +59,9 @@ function tried(base: Future, flip: Told | null, threshold: Threshold): NextIf | 
   const letsGo = of === base.claim && CLAIMS.indexOf(outcome.claim) > CLAIMS.indexOf(base.claim);
   if (keepsState && flip === null && !letsGo) return null;
   // what a threshold on the way there brings already is told of that one
-  const before = outcomeOf(base, flip, { ...threshold, overTime: true }, orAt ? value - step : value);
-  if (isSame(before, outcome)) return null;
+  const near = orAt ? value - step : value;
+  const isSure = alone && outcome.at === base.at;
+  if (!isSure && isSame(outcomeOf(base, flip, { ...threshold, overTime: true }, near), outcome)) return null;
   const key = point === null ? null : entry(base.plan.points, point).key;
   return {
     ...{ kind: 'if', point: key, side, value },
@@ -68,6 +72,12 @@ function tried(base: Future, flip: Told | null, threshold: Threshold): NextIf | 
   };
 }
 
+/** No other threshold lies on the way to it: none of its point, of the coldest, or of a point made of others. */
+function isAlone(run: Run, one: Threshold, all: readonly Threshold[]): boolean {
+  const isMade = ({ point }: Threshold) => point === null || entry(run.plan.points, point).derived !== null;
+  return all.every((other) => other === one || (other.point !== one.point && !isMade(other) && !isMade(one)));
+}
+
 /** What a channel does differently when a reading is `value`. */
 function outcomeOf(base: Future, flip: Told | null, threshold: Threshold, value: number): Told | null {
   const future = ifInstead(base, moved(base, threshold, value));
@@ -75,12 +85,12 @@ function outcomeOf(base: Future, flip: Told | null, threshold: Threshold, value:
   if (flip === null && future.claim !== base.claim) return future;
   if (!threshold.overTime && !isMoved(base, future)) return null;
   const horizon = base.at + AHEAD_MS;
-  const other = changesBy(future, flip?.at ?? horizon);
+  const other = flip === null ? changesBy(future, horizon, NEAR_WAKES) : changesBy(future, flip.at);
   // that another claim does the same at the same time is no news
   if (other.flip !== null && other.flip.at === flip?.at) return null;
   if (other.flip !== null || flip === null || !other.isKnown) return other.flip;
   // what was to come by the clock does not: later, or not at all
-  const later = changesBy(future, horizon);
+  const later = changesBy(other.end, horizon, NEAR_WAKES);
   return later.flip ?? { at: flip.at, state: base.state, claim: other.claim };
 }
 

@@ -19,6 +19,8 @@ export interface Changes {
   flip: Told | null;
   claim: Claim;
   isKnown: boolean;
+  /** Where the look ended, to go on from. */
+  end: Future;
 }
 
 /** How a channel stands in a future that is settled at one instant. */
@@ -77,16 +79,17 @@ function settled(plan: Plan, before: Memory, channel: number, at: number, starte
  * force at the first change of state, or at `until`.
  * @returns null for what does not come by then; `isKnown` is false where it was not looked that far
  */
-export function changesBy(future: Future, until: number): Changes {
+export function changesBy(future: Future, until: number, wakes = WAKES): Changes {
   let change: Told | null = null;
   let now = future;
   for (let look = 0; ; look += 1) {
     const { wakeAt } = now.memory;
-    if (wakeAt === null || wakeAt > until) return { change, flip: null, claim: now.claim, isKnown: true };
-    if (look === WAKES) return { change, flip: null, claim: now.claim, isKnown: false };
+    if (wakeAt === null || wakeAt > until)
+      return { change, flip: null, claim: now.claim, isKnown: true, end: now };
+    if (look === wakes) return { change, flip: null, claim: now.claim, isKnown: false, end: now };
     now = settled(now.plan, now.memory, now.channel, wakeAt, now.startedAt);
     const { at, state, claim } = now;
     if (claim !== future.claim || state !== future.state) change ??= { at, state, claim };
-    if (state !== future.state) return { change, flip: { at, state, claim }, claim, isKnown: true };
+    if (state !== future.state) return { change, flip: { at, state, claim }, claim, isKnown: true, end: now };
   }
 }
