@@ -1,5 +1,6 @@
 /** Standing conditions that somebody should know of: the whole list at every step, told when one begins or ends. */
 import { coldestPoint } from './claims/frost';
+import { wakeForDay } from './claims/rest';
 import { isUnderFloor } from './claims/source-guard';
 import { usedMs } from './day';
 import { entry, type Run } from './run';
@@ -75,8 +76,10 @@ function sourceFaults(run: Run, index: number, stand: Stand): void {
   if (needsCore && (core === null || run.usable[core] !== 'good'))
     stand('core-not-good', { source: id }, () => ({ source: slug, point: config.corePoint }));
   // spent is spent, though the source rests besides
-  if (dailyLimitMs !== null && usedMs(memory, run.at) >= dailyLimitMs)
+  if (dailyLimitMs !== null && usedMs(memory, run.at) >= dailyLimitMs) {
+    wakeForDay(run, index, dailyLimitMs);
     stand('daily-limit', { source: id }, () => ({ source: slug, limitS: dailyLimitMs / 1000 }));
+  }
   if (memory.ranToMost) stand('rest-ran-to-most', { source: id }, () => ({ source: slug }));
 }
 

@@ -91,3 +91,18 @@ describe('a point that never spoke', () => {
     expect(dead.sort()).toEqual(['air', 'amps', 'back', 'base', 'fact', 'input', 'limit']);
   });
 });
+
+it('of a spent day ends by itself while the heap still rests', () => {
+  // drawn from 0 to 600 s, at rest till 86,600 s; from 86,400 s on the first of it leaves the day
+  const player = new Player(config({ rules: [rule('fan', body({ rest: rest(600, 86_000) }))] }), cold);
+  player.pass(86_390 * S, MIN);
+  const ended = player.events.find(
+    (event) => event.kind === 'fault-ended' && event.fault.kind === 'daily-limit',
+  );
+  expect(ended).toBeUndefined();
+  player.pass(20 * S, MIN);
+  const at = player.events.find(
+    (event) => event.kind === 'fault-ended' && event.fault.kind === 'daily-limit',
+  )?.at;
+  expect(at).toBe(player.now - 10 * S + 1);
+});

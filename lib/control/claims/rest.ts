@@ -85,7 +85,7 @@ function worth(run: Run, channel: number, source: number, cost: number): { credi
 }
 
 /** Wakes when the rolling day has let its use fall to `targetMs`, or when its slope changes before. */
-function wakeForDay(run: Run, source: number, targetMs: number): void {
+export function wakeForDay(run: Run, source: number, targetMs: number): void {
   const memory = entry(run.sources, source);
   const { slope, nextAt } = memory.day;
   if (nextAt !== null) wakeAt(run, nextAt);
