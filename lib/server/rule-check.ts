@@ -1,6 +1,7 @@
 import 'server-only';
 import type { Holding } from '@/db/client';
 import { listChannels } from '@/db/queries/channel';
+import { findHouse } from '@/db/queries/house';
 import { loadHouseConfig } from '@/db/queries/plan';
 import { pointNumbers } from '@/db/queries/point';
 import { readSeries } from '@/db/queries/reading';
@@ -43,8 +44,10 @@ export async function findingsOf(
   const answers =
     own === undefined ? NOTHING : await answersOf(holding, config, own, body.point, now.getTime());
   const { liftK, response, coldestOutdoors } = answers;
+  const resort = (await findHouse(holding, houseId))?.lastResort ?? null;
   const context: CheckContext = {
     channels: factsOf(channels),
+    lastResort: resort === null ? null : { below: resort.below, isProved: resort.provedOn !== null },
     ...(greatest === null ? {} : { greatest }),
     ...(liftK === null ? {} : { liftK }),
     ...(response === null ? {} : { response }),

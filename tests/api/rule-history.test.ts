@@ -132,6 +132,26 @@ test('conditions beyond a hundred, or twelve groups deep, are refused at their p
   });
 });
 
+test('a thermostat of last resort that somebody saw work answers what the check asks for', async () => {
+  const rule = await freshRule();
+  const fan = '/houses/long-house/channels/1';
+  await owner.ask('PATCH', fan, { fallback: null });
+  const kinds = async () => {
+    const { findings } = (await owner.ask('POST', `${rule}/check`, {})).body as { findings: Json[] };
+    return findings.map((one) => one['kind']);
+  };
+  const house = (lastResort: object | null) => owner.ask('PATCH', '/houses/long-house', { lastResort });
+  expect(await kinds()).toContain('no-last-resort');
+  expect(await house({ below: 1 })).toMatchObject({ body: { lastResort: { below: 1, provedOn: null } } });
+  expect(await kinds()).toContain('no-last-resort');
+  await house({ below: 1, provedOn: '2026-10-01' });
+  expect(await kinds()).not.toContain('no-last-resort');
+  await house({ below: 5, provedOn: '2026-10-01' });
+  expect(await kinds()).toContain('last-resort-over-band');
+  const wrong = await house({ below: 1, provedOn: 'last autumn' });
+  expect(errorsOf(wrong)).toMatchObject([{ path: 'lastResort.provedOn' }]);
+});
+
 test('a derived point is not amended into a ring', async () => {
   const at = '/houses/long-house/points';
   const mean = (key: string, points: string[]) => ({

@@ -119,6 +119,18 @@ const CASES: Case[] = [
     not: () => kinds(body(), long({ frostLimit: 3 }), { channels: { vent: { hasFallback: true } } }),
   },
   {
+    kind: 'look no-last-resort',
+    fires: () =>
+      kinds(body(), long({ frostLimit: 3 }), { channels: {}, lastResort: { below: 1, isProved: false } }),
+    not: () =>
+      kinds(body(), long({ frostLimit: 3 }), { channels: {}, lastResort: { below: 1, isProved: true } }),
+  },
+  {
+    kind: 'look last-resort-over-band',
+    fires: () => kinds(body(), long(), { lastResort: { below: 4, isProved: true } }),
+    not: () => kinds(body(), long(), { lastResort: { below: 3.9, isProved: true } }),
+  },
+  {
     // F-NMAX, recomputed: K/(4τd) with K 40, τ 3600 s, d 1 is 10 starts an hour
     kind: 'look starts-too-often',
     fires: () =>

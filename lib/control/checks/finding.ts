@@ -20,8 +20,8 @@ export interface CheckContext {
   channels?: Record<string, ChannelFacts>;
   /** By point key: the greatest value of the last 14 nights. */
   greatest?: Record<string, number>;
-  /** A thermostat of last resort is wired and proved. */
-  lastResort?: boolean;
+  /** The thermostat of last resort: what it is set to, °C, and whether somebody saw it work. Null: there is none. */
+  lastResort?: { below: number; isProved: boolean } | null;
   /** How much warmer than outdoors the rule's point gets at most while the channel runs, K. */
   liftK?: number;
   /** The coldest outdoors that is to be expected, °C. */

@@ -14,6 +14,7 @@ export function wiringChecks(input: CheckInput): Finding[] {
     ...conditionChecks(input),
     ...contactOverloaded(input),
     ...proofAndFallback(input),
+    ...lastResortOverBand(input),
   ];
 }
 
@@ -151,15 +152,34 @@ function proofAndFallback({ config, rule, channel, context }: CheckInput): Findi
       ),
     );
   if (context.channels === undefined || config.house.frostLimit === null || channel === null) return found;
-  const guarded =
-    context.lastResort === true || Object.values(context.channels).some((one) => one.hasFallback === true);
-  if (!guarded)
+  const { lastResort } = context;
+  const hasFallback = Object.values(context.channels).some((one) => one.hasFallback === true);
+  if (!hasFallback && lastResort?.isProved !== true)
     found.push(
       look(
         'no-last-resort',
         [],
-        'This house has a frost limit, but nothing keeps it when the network or this program fails: set a fallback on a channel, or wire a thermostat of last resort under the lowest band and prove it.',
+        lastResort === null || lastResort === undefined
+          ? 'This house has a frost limit, but nothing keeps it when the network or this program fails: set a fallback on a channel, or wire a thermostat of last resort under the lowest band and prove it.'
+          : 'Nobody has seen the thermostat of last resort work: try it, and write the day down in Wiring.',
       ),
     );
   return found;
+}
+
+/** It would run before the rule does, and hide that the rule does not. */
+function lastResortOverBand({ rule, context, say }: CheckInput): Finding[] {
+  const { lastResort } = context;
+  if (lastResort === null || lastResort === undefined || rule.body.purpose !== 'warm') return [];
+  return rule.body.band.flatMap(({ low }, index) =>
+    lastResort.below < low
+      ? []
+      : [
+          look(
+            'last-resort-over-band',
+            [`band.${index}.low`],
+            `The thermostat of last resort is set to ${say.temperature(lastResort.below)}, not under “on below” (${say.temperature(low)}): it would run first. Set it lower, or raise “on below”.`,
+          ),
+        ],
+  );
 }
