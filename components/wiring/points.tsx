@@ -6,10 +6,10 @@ import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { backWords, qualityWords, UNSTEADY_WORDS } from '@/lib/wording/quality';
 import { exactly } from '@/lib/wording/settings';
 import { AddButton, ChangeButton } from './editing';
 import { roleWords } from './forms/options';
+import { PointDoubt } from './point-doubt';
 
 const columns = [
   { key: 'point', label: 'Point' },
@@ -21,13 +21,6 @@ const columns = [
   { key: 'calibration', label: 'Calibration', figure: true },
   { key: 'act', label: 'Change', labelHidden: true },
 ];
-
-/** That a point was away is news for a day. */
-const TOLD_MS = 86_400_000;
-/** A report that came late is none. */
-const SHORT_MS = 60_000;
-
-const instant = (iso: string | null | undefined) => (typeof iso === 'string' ? Date.parse(iso) : null);
 
 function calibrationWords(point: Point): string {
   const gain = point.gain === 1 ? '' : `× ${decimal(point.gain, 3)} `;
@@ -51,23 +44,8 @@ function PointRow({
   zone: string;
   preferences: Preferences;
 }) {
-  const scene = { now: appNow, zone, preferences };
   const range = (value: number | null) => (value === null ? '' : pointValue(value, point.unit, preferences));
   const stale = point.staleAfter ?? (reportEvery === undefined ? null : reportEvery * 3);
-  const isOld =
-    stale !== null && now !== undefined && now.at !== null && appNow - Date.parse(now.at) > stale * 1000;
-  // the worker says so itself; where it stands still, its last word has grown old too
-  const doubt = isOld
-    ? qualityWords({ quality: 'bad', why: 'silent' }, scene)
-    : now === undefined
-      ? null
-      : qualityWords({ ...now, since: instant(now.doubtSince) }, scene);
-  const last = now?.lastDoubt ?? null;
-  const isBack =
-    doubt === null &&
-    last !== null &&
-    appNow - Date.parse(last.to) < TOLD_MS &&
-    Date.parse(last.to) - Date.parse(last.from) >= SHORT_MS;
   return (
     <Row>
       <RowHead className="min-w-40">
@@ -82,21 +60,9 @@ function PointRow({
         ) : (
           pointValue(now.value, point.unit, preferences)
         )}
-        {doubt === null ? null : (
-          <span className="ml-auto block max-w-44 font-sans text-[0.85rem] whitespace-normal text-warn">
-            {doubt}
-          </span>
+        {now === undefined ? null : (
+          <PointDoubt point={now} staleS={stale} now={appNow} {...{ zone, preferences }} />
         )}
-        {isBack ? (
-          <span className="ml-auto block max-w-44 font-sans text-[0.85rem] whitespace-normal text-soft">
-            {backWords({ why: last.why, from: Date.parse(last.from), to: Date.parse(last.to) }, scene)}
-          </span>
-        ) : null}
-        {now?.why === 'unsteady' ? (
-          <span className="ml-auto block max-w-56 font-sans text-[0.85rem] whitespace-normal text-soft">
-            {UNSTEADY_WORDS}
-          </span>
-        ) : null}
       </Cell>
       <Cell className="whitespace-nowrap">
         {now?.at === null || now === undefined ? (
