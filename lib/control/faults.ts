@@ -54,7 +54,7 @@ function houseFaults(run: Run, stand: Stand): void {
 function pointFaults(run: Run, index: number, stand: Stand): void {
   const memory = entry(run.points, index);
   const { id, quality, why, at, contradictedSince } = memory;
-  const { derived, key } = entry(run.plan.points, index);
+  const { derived, key, isHouse } = entry(run.plan.points, index);
   // a derived point is bad by its inputs, which stand in this list themselves
   const tells = why !== 'never-spoke' || run.plan.usedPoints.has(index);
   // one that comes and goes is one fault, however it stands just now
@@ -62,7 +62,9 @@ function pointFaults(run: Run, index: number, stand: Stand): void {
     stand('point-unsteady', { point: id }, () => ({ key, why: memory.doubts?.why ?? null, lastAt: at }));
   else if (quality === 'bad' && derived === null && tells)
     stand('point-bad', { point: id }, () => ({ key, why, lastAt: at }));
-  if (contradictedSince !== null && run.at >= contradictedSince + CONTRADICTED_MS)
+  const { frostLimit } = run.plan.house;
+  const inFrost = isHouse && frostLimit !== null && contradictedSince !== null;
+  if (inFrost && run.at >= contradictedSince + CONTRADICTED_MS)
     stand('frozen-point-in-frost', { point: id }, () => ({ key, contradictedSince }));
 }
 

@@ -10,9 +10,13 @@ const SPIN_UP_MS = 15_000;
 /** A load that is ordered on and whose proof shows nothing counts as not drawing. */
 export function settleProof(run: Run, channel: number): void {
   const { config, runProofPoint } = entry(run.plan.channels, channel);
-  if (config.runProof === null || runProofPoint === null) return;
   const memory = entry(run.channels, channel);
   let { standing } = memory;
+  if (config.runProof === null || runProofPoint === null) {
+    // a proof that was taken away denies nothing any more
+    if (standing) run.channels[channel] = { ...memory, standing: false };
+    return;
+  }
   if (memory.counted === 'off' || run.usable[runProofPoint] === 'bad') standing = false;
   else if (run.usable[runProofPoint] === 'good') {
     const { value, at } = entry(run.points, runProofPoint);

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { compile } from '@/lib/control/compile';
 import { MEMORY_VERSION, migrateMemory } from '@/lib/control/memory';
 import type { HouseConfig } from '@/lib/control/types';
-import { body, channel, house, MIN, Player, rest, rule, S, source, START } from './house';
+import { body, channel, house, MIN, Player, point, rest, rule, S, source, START } from './house';
 
 const cold = { bench: 3, air: 10, core: 50, base: 40 };
 const config = (more: Partial<HouseConfig> = {}, own = rest(600, 1200)) =>
@@ -48,6 +48,22 @@ describe('a change in mid-draw', () => {
     expect(player.says()).toBe('on short-cycle');
     player.pass(MIN);
     expect(player.switchings().at(-1)).toEqual([60, 'off', 'idle']);
+  });
+
+  it('that takes away a high limit that is passed, or a proof that denies the fan, leaves nothing of it', () => {
+    const points = [...house().points, point('amps', 'current')];
+    const limited = { highLimit: { point: 'air', above: 20 }, runProof: { point: 'amps', above: 0.2 } };
+    const fan = (more: object) => [channel('fan', 1, { source: 'heap', ...more })];
+    const over = new Player(config({ points, channels: fan(limited) }), { ...cold, air: 21, amps: 0 });
+    expect(over.says()).toBe('off limit');
+    change(over, config({ points, channels: fan({}) }));
+    expect(over.says()).toBe('on band');
+    const standing = new Player(config({ points, channels: fan(limited) }), { ...cold, amps: 0 });
+    standing.pass(MIN);
+    expect(standing.faults()).toContain('fan-standing');
+    change(standing, config({ points, channels: fan({}) }));
+    expect(standing.faults()).not.toContain('fan-standing');
+    expect(standing.heap().drawing).toBe(true);
   });
 
   it('of the frost limit acts at once', () => {

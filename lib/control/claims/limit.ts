@@ -47,9 +47,15 @@ export function settleLimit(run: Run, channel: number): void {
     const memory = entry(run.channels, channel);
     const over = isOver(run, highLimitPoint, memory.overHighLimit ? above - AGAIN_K : above);
     if (over !== memory.overHighLimit) run.channels[channel] = { ...memory, overHighLimit: over };
-  }
+  } else if (config.highLimit === null) forgetHighLimit(run, channel);
   if (config.longestOnS !== null || entry(run.channels, channel).ranLongest !== null)
     settleLongest(run, channel);
+}
+
+/** Taken away while it was passed, nothing would end it. */
+function forgetHighLimit(run: Run, channel: number): void {
+  const memory = entry(run.channels, channel);
+  if (memory.overHighLimit) run.channels[channel] = { ...memory, overHighLimit: false };
 }
 
 function settleLongest(run: Run, channel: number): void {
