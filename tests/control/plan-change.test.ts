@@ -66,6 +66,19 @@ describe('a change in mid-draw', () => {
     expect(standing.heap().drawing).toBe(true);
   });
 
+  it('that takes the longest run away lets its end pass as it was given', () => {
+    const fan = (longestOnS: number | null) => [
+      channel('fan', 1, { source: 'heap', minOffS: 120, longestOnS }),
+    ];
+    const player = new Player(config({ channels: fan(300) }), cold);
+    player.until(START + 310 * S);
+    change(player, config({ channels: fan(null) }));
+    player.until(START + 500 * S);
+    expect(player.says()).toBe('off limit');
+    player.at({ bench: 8 }).at({ bench: 3 });
+    expect(player.says()).toBe('on band');
+  });
+
   it('of the frost limit acts at once', () => {
     const helped = [channel('fan', 1, { source: 'heap', frostHelp: true })];
     const player = new Player(config({ channels: helped }), { ...cold, bench: 5, air: 5 });

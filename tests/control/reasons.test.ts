@@ -33,6 +33,14 @@ describe('the reason of', () => {
     expect(reason(player)).toEqual(['off limit', { cause: 'high-limit', value: 20.5, ...over }, null]);
   });
 
+  it('limit: a point that is dead, or is not there', () => {
+    const dead = { cause: 'high-limit-point-bad', value: null, above: 20, againAtOrBelow: 19 };
+    for (const key of ['base', 'nobody']) {
+      const player = new Player(config({}, { highLimit: { point: key, above: 20 } }), { bench: 3, core: 50 });
+      expect(reason(player)).toEqual(['off limit', { ...dead, point: key }, null]);
+    }
+  });
+
   it('limit: the longest run, and the end of its least off', () => {
     const player = played({ bench: 3 }, {}, { longestOnS: 600, minOffS: 60 });
     player.pass(610 * S);
