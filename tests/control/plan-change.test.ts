@@ -104,6 +104,35 @@ describe('what is kept with its id', () => {
     expect(player.says()).toBe('on band');
   });
 
+  it('a channel that is gone while it runs goes off there, and has its least off to pass', () => {
+    const player = new Player(config(), cold);
+    player.pass(100 * S);
+    expect(player.says()).toBe('on band');
+    change(player, config({ channels: [channel('lamp', 2)], rules: [] }));
+    // 100 of 600 s are drawn, and without a rule there is no rest that would bring them back
+    player.until(START + 160 * S);
+    expect(player.heap()).toMatchObject({ drawing: false, drawnTodayS: 100 });
+    expect(player.heap().credit).toBeCloseTo(1 - 100 / 600, 6);
+    change(player, config());
+    expect(player.says()).toBe('off short-cycle');
+    player.until(START + 219.999 * S);
+    expect(player.says()).toBe('off short-cycle');
+    player.until(START + 220 * S);
+    expect(player.says()).toBe('on band');
+    expect(player.switchings().at(-1)).toEqual([220, 'on', 'band']);
+  });
+
+  it('a source that is gone while it is drawn on, as it was left', () => {
+    const player = new Player(config(), cold);
+    player.pass(300 * S);
+    const free = [channel('fan', 1), channel('lamp', 2)];
+    change(player, config({ sources: [], channels: free, rules: [rule('fan', body())] }));
+    player.pass(5000 * S, MIN);
+    change(player, config());
+    expect(player.heap()).toMatchObject({ drawing: true, drawnTodayS: 300 });
+    expect(player.heap().credit).toBeCloseTo(0.5, 6);
+  });
+
   it('a latch, through a new version of its rule', () => {
     const player = new Player(config(), { ...cold, bench: 3 });
     player.at({ bench: 5 });
