@@ -13,6 +13,7 @@ export function WhyBody({ why, at }: { why: Why; at: number | null }) {
   const scene = at === null ? house.scene : { ...house.scene, now: at };
   const because = why.ladder.find((step) => step.speaks)?.because;
   const since = timeWords(becauseInstant(why.since), scene);
+  const ended = timeWords(becauseInstant(why.ended?.at), scene);
   const foreseen = timeWords(becauseInstant(why.foreseenAt), scene);
   const next = nextWords(why.next, scene, why.state);
   return (
@@ -23,9 +24,11 @@ export function WhyBody({ why, at }: { why: Why; at: number | null }) {
         </p>
       ))}
       <div aria-live="polite">
-        {since === null ? null : <p className="text-soft">Since {since}</p>}
+        {since === null ? null : (
+          <p className="text-soft">{ended === null ? `Since ${since}` : `From ${since} to ${ended}`}</p>
+        )}
         <p className="font-serif text-[1.35rem] leading-snug text-pretty">
-          {whySentence(why.claim, because ?? {}, scene)} {followedWords(why, scene)}
+          {whySentence(why.claim, because ?? {}, scene, at !== null)} {followedWords(why, scene)}
         </p>
       </div>
       {next.length === 0 ? null : (

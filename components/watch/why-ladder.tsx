@@ -14,7 +14,7 @@ export function Ladder({ ladder, under, scene }: Pick<Why, 'ladder' | 'under'> &
       <h3 className="font-semibold">What was asked, from the top</h3>
       {silent.length === 0 ? null : (
         <details className="border-t border-line">
-          <summary className="flex min-h-11 cursor-pointer items-center text-soft">
+          <summary className="flex min-h-11 cursor-pointer items-center text-soft underline underline-offset-4 hover:text-ink">
             {silent.length === 1
               ? 'One claim above it kept still'
               : `${silent.length} claims above it kept still`}

@@ -21,44 +21,54 @@ export function WhyTime({
   const { house, scene } = useHouse();
   const now = at === null ? scene.now : Math.max(at, scene.now);
   const [typed, setTyped] = useState(() => toLocal(at ?? scene.now, house.zone));
+  const [isOpen, setIsOpen] = useState(false);
   const [fault, setFault] = useState<string | undefined>();
   const [before, after] = [becauseInstant(earlier), becauseInstant(later)];
   return (
-    <form
-      className="flex flex-col gap-3 border-t border-line pt-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        const asked = fromLocal(typed, house.zone);
-        if (asked === null) return setFault('Give a day and a time.');
-        if (asked > now + 60_000) return setFault('That is yet to come.');
-        setFault(undefined);
-        onAsk(asked);
-      }}
-    >
-      <div className="grid grid-cols-2 gap-2">
-        <Button disabled={before === null} onClick={() => onAsk(before)} className="whitespace-normal">
+    <div className="sticky -bottom-5 -mx-5 -mb-5 flex flex-col gap-3 border-t border-line bg-sheet px-5 py-3">
+      {isOpen ? (
+        <form
+          className="grid grid-cols-[minmax(0,1fr)_auto] items-end gap-2"
+          onSubmit={(event) => {
+            event.preventDefault();
+            const asked = fromLocal(typed, house.zone);
+            if (asked === null) return setFault('Give a day and a time.');
+            if (asked > now + 60_000) return setFault('That is yet to come.');
+            setFault(undefined);
+            onAsk(asked);
+          }}
+        >
+          <TextField
+            type="datetime-local"
+            label="Why was it so at"
+            value={typed}
+            error={fault}
+            max={toLocal(now, house.zone)}
+            onChange={(event) => setTyped(event.target.value)}
+          />
+          <Button type="submit">Ask</Button>
+          {at === null ? null : (
+            <Button kind="quiet" className="col-span-2 justify-self-start" onClick={() => onAsk(null)}>
+              Back to now
+            </Button>
+          )}
+        </form>
+      ) : null}
+      <div className="grid grid-cols-3 gap-2">
+        <Button disabled={before === null} onClick={() => onAsk(before)} className="px-2 whitespace-normal">
           Switching before
         </Button>
-        <Button disabled={after === null} onClick={() => onAsk(after)} className="whitespace-normal">
+        <Button
+          aria-expanded={isOpen}
+          onClick={() => setIsOpen((open) => !open)}
+          className="px-2 whitespace-normal"
+        >
+          Other time
+        </Button>
+        <Button disabled={after === null} onClick={() => onAsk(after)} className="px-2 whitespace-normal">
           Switching after
         </Button>
       </div>
-      <div className="grid grid-cols-[minmax(0,1fr)_auto] items-end gap-2">
-        <TextField
-          type="datetime-local"
-          label="Why was it so at"
-          value={typed}
-          error={fault}
-          max={toLocal(now, house.zone)}
-          onChange={(event) => setTyped(event.target.value)}
-        />
-        <Button type="submit">Ask</Button>
-      </div>
-      {at === null ? null : (
-        <Button kind="quiet" className="self-start" onClick={() => onAsk(null)}>
-          Back to now
-        </Button>
-      )}
-    </form>
+    </div>
   );
 }

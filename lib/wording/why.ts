@@ -4,7 +4,7 @@ import { becauseWords, isClaim } from './because';
 import { stateWord } from './channel-state';
 import { CLAIM_NAMES } from './claims';
 import { becauseInstant } from './instants';
-import { nextSentence } from './next';
+import { nextSentence, readNext } from './next';
 import { channelName, timeWords, type Scene } from './scene';
 
 export interface Asked {
@@ -23,20 +23,29 @@ export function whyTitle({ channel, state, claim, at }: Asked, scene: Scene): st
   return at === null ? `Why ${name} is ${word}` : `Why ${name} was ${word} at ${timeWords(at, scene) ?? ''}`;
 }
 
-/** What is, in the words of its reason. What frost would do is told with what comes next. */
-export function whySentence(claim: string, because: unknown, scene: Scene): string {
+/**
+ * What is, in the words of its reason. What frost would do is told with what comes next.
+ * @param isPast of a moment that is over, what was read "now" was read then
+ */
+export function whySentence(claim: string, because: unknown, scene: Scene, isPast = false): string {
   if (typeof because !== 'object' || because === null) return becauseWords(claim, because, scene);
   const { frostBreaksBelow: _sooner, ...reason } = because as Record<string, unknown>;
-  return becauseWords(claim, reason, scene);
+  const words = becauseWords(claim, reason, scene);
+  return isPast ? words.replaceAll(' now)', ' then)') : words;
 }
 
 /** What comes next, or came: "It ended at 02:14: the band turned it on." */
 export function followedWords(
-  told: { state: State; next: readonly unknown[]; ended: Followed | null },
+  told: { state: State; claim: string; next: readonly unknown[]; ended: Followed | null },
   scene: Scene,
 ): string {
   if (told.ended !== null) return endedWords(told.ended, told.state, scene);
-  return nextSentence(told.next, scene, told.state);
+  const isBand = told.claim === 'band' || told.claim === 'idle';
+  // where a band starts and stops its own reason says
+  const news = readNext(told.next).filter(
+    (one) => !(isBand && one.kind === 'if' && (one.claim === 'band' || one.claim === 'idle')),
+  );
+  return isBand && news.length === 0 ? '' : nextSentence(news, scene, told.state);
 }
 
 export interface Followed {

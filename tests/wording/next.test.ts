@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { NextReason } from '@/lib/control/because';
+import type { NextIf, NextReason } from '@/lib/control/because';
 import type { State } from '@/lib/control/types';
 import { nextSentence, nextWords } from '@/lib/wording/next';
 import { american, at, scene, spaced } from './scene';
@@ -7,9 +7,11 @@ import { american, at, scene, spaced } from './scene';
 const words = (one: NextReason, present?: State, to = scene): string =>
   nextWords([one], to, present).map(spaced).join('|');
 const restThen: NextReason = { kind: 'then', at: at('02:14'), state: 'on', claim: 'band' };
-const frostIf: NextReason = {
+const frostIf: NextIf = {
   ...{ kind: 'if', point: null, side: 'below', value: 3, state: 'on', claim: 'frost' },
 };
+
+const reading = (more: Partial<NextIf>): NextIf => ({ ...frostIf, ...more });
 
 describe('a line of what comes next says', () => {
   it.each<[string, NextReason, State]>([
@@ -24,38 +26,22 @@ describe('a line of what comes next says', () => {
     ['If the coldest sensor of the house falls under 3.0 °C: frost turns it on.', frostIf, 'off'],
     [
       'If the coldest sensor of the house rises to 4.0 °C: the band keeps it on.',
-      { ...frostIf, side: 'above', value: 4, orAt: true, claim: 'band' },
+      reading({ side: 'above', value: 4, orAt: true, claim: 'band' }),
       'on',
     ],
     [
       'If the heap beside the pipe rises to 43.0 °C: the band turns it on, at 02:14 at the earliest.',
-      {
-        ...frostIf,
-        point: 'gate-base',
-        side: 'above',
-        value: 43,
-        orAt: true,
-        at: at('02:14'),
-        claim: 'band',
-      },
+      reading({ point: 'gate-base', side: 'above', value: 43, orAt: true, at: at('02:14'), claim: 'band' }),
       'off',
     ],
     [
       'If the heap beside the pipe falls under 43.0 °C: the band turns it on, but not before 03:00.',
-      { ...frostIf, point: 'gate-base', value: 43, at: at('03:00'), later: true, claim: 'band' },
+      reading({ point: 'gate-base', value: 43, at: at('03:00'), later: true, claim: 'band' }),
       'off',
     ],
     [
       'If bench probe 1 rises above 7.5 °C: it stays off beyond 02:14.',
-      {
-        ...frostIf,
-        point: 'bench-1',
-        side: 'above',
-        value: 7.5,
-        at: at('02:14'),
-        state: 'off',
-        claim: 'idle',
-      },
+      reading({ point: 'bench-1', side: 'above', value: 7.5, at: at('02:14'), state: 'off', claim: 'idle' }),
       'off',
     ],
     [
@@ -99,7 +85,7 @@ describe('a line of what comes next says', () => {
 
   it('a point’s own unit', () => {
     const humid = { ...scene, points: [{ key: 'rh', name: 'Humidity', role: 'humidity', unit: '%RH' }] };
-    const one: NextReason = { ...frostIf, point: 'rh', side: 'above', value: 90, claim: 'band' };
+    const one: NextIf = reading({ point: 'rh', side: 'above', value: 90, claim: 'band' });
     expect(words(one, 'off', humid)).toContain('rises above 90 % RH');
   });
 
@@ -115,11 +101,11 @@ describe('the nearest of it in one sentence', () => {
       'At 02:14 the band turns it on; sooner if the coldest sensor of the house falls under 3.0 °C.',
     ));
   it('leaves out what comes no sooner', () =>
-    expect(sentence([restThen, { ...frostIf, at: at('03:00'), later: true }], 'off')).toBe(
+    expect(sentence([restThen, reading({ at: at('03:00'), later: true })], 'off')).toBe(
       'At 02:14 the band turns it on, if no reading changes.',
     ));
   it('is a reading where the clock brings nothing', () =>
-    expect(sentence([{ ...frostIf, point: 'bench-1', value: 4, claim: 'band' }], 'off')).toBe(
+    expect(sentence([reading({ point: 'bench-1', value: 4, claim: 'band' })], 'off')).toBe(
       'The band turns it on if bench probe 1 falls under 4.0 °C.',
     ));
   it('is a deed where one is waited for', () =>

@@ -38,6 +38,7 @@ describe('the panel', () => {
   it('says what ended a decision that is over', () => {
     const told = {
       state: 'off',
+      claim: 'rest',
       next: [],
       ended: { at: '2026-11-27T02:14:00Z', state: 'on', claim: 'band' },
     } as const;
@@ -48,6 +49,19 @@ describe('the panel', () => {
       'at 2:14\u00a0am: it went off',
     );
   });
+
+  it('does not say twice where a band starts, but what else would turn it', () => {
+    const band = { kind: 'if', point: 'bench-1', side: 'below', value: 4, state: 'on', claim: 'band' };
+    const frost = { ...band, point: null, value: 3, claim: 'frost' };
+    const idle = { state: 'off', claim: 'idle', ended: null } as const;
+    expect(followedWords({ ...idle, next: [band] }, scene)).toBe('');
+    expect(spaced(followedWords({ ...idle, next: [band, frost] }, scene))).toBe(
+      'Frost turns it on if the coldest sensor of the house falls under 3.0 °C.',
+    );
+  });
+
+  it('tells what was read at the time as read then', () =>
+    expect(spaced(whySentence('rest', rest, scene, true))).toContain('(39.9 °C then)'));
 
   it('says when control did not run, and that it does not', () => {
     const gap = { from: '2026-11-27T02:10:00Z', to: '2026-11-27T03:40:00Z' };
