@@ -38,12 +38,16 @@ export function WiringView({
   const { nodeStatus, ranAlone, state, ...yard } = data;
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
+  const can = canFallback(nodes, nodeStatus);
   const isLocked = (key: string) => lockouts.some((one) => one.channel === key && one.removedAt === null);
   const standing = {
     nodes: nodes.map((node) => ({
       key: node.key,
       lastHeardAt: node.lastHeardAt === null ? null : Date.parse(node.lastHeardAt),
       isRevoked: node.revokedAt !== null,
+      keeps: channels
+        .filter((one) => one.node === node.key && one.fallback !== null && can[node.key] === 'can')
+        .map((one) => one.label),
     })),
     points: points.map((point) => ({
       name: point.name,
@@ -86,7 +90,7 @@ export function WiringView({
           sources={sources}
           lockouts={lockouts}
           house={house.slug}
-          alone={{ can: canFallback(nodes, nodeStatus), ran: ranAlone }}
+          alone={{ can, ran: ranAlone }}
           {...{ points, zone, now, preferences }}
           hasNode={nodes.some((node) => node.channels > 0)}
         />
