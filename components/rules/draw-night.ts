@@ -5,7 +5,9 @@ import type { RuleWithVersions } from '@/lib/schema/rule-view';
 import type { House, Point } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { day } from '@/lib/units/time';
+import { dayNumber, instantOf, parseDayTime, place } from '@/lib/control/local-day';
 import { nightSummary } from '@/lib/wording/night-summary';
+import type { NightSun } from './drawn-band';
 
 /** What the server drew of the night, on a wide and a narrow frame; the band is laid over it as it is typed. */
 export interface DrawnNight {
@@ -13,6 +15,7 @@ export interface DrawnNight {
   wide: NightLayout;
   narrow: NightLayout;
   summary: string;
+  sun: NightSun;
 }
 
 export interface NightOfRule {
@@ -63,5 +66,16 @@ export function drawNight(data: NightOfRule, now: number, preferences: Preferenc
     wide: frame(WIDE),
     narrow: frame(NARROW),
     summary: nightSummary(chart, preferences),
+    sun: sunOf(house, from),
   };
+}
+
+function sunOf(house: House, from: number): NightSun {
+  const where = place(house);
+  const evening = dayNumber(where, from);
+  const after = (day: number, what: 'sunset' | 'sunrise') => {
+    const at = instantOf(where, day, parseDayTime(what));
+    return at === null ? null : (at - from) / 60_000;
+  };
+  return { sunset: after(evening, 'sunset'), sunrise: after(evening + 1, 'sunrise') };
 }

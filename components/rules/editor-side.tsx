@@ -3,32 +3,33 @@ import dynamic from 'next/dynamic';
 import type { ReactNode } from 'react';
 import { Panel } from '@/components/ui/panel';
 import type { RuleBody } from '@/lib/control/rule-body';
+import type { Findings } from '@/lib/schema/rule-view';
 import type { RuleEditorData } from './editor-data';
 import type { DrawnNight } from './draw-night';
 import { KeepRule } from './keep-rule';
-import { useFindings } from './use-judged';
 import type { RuleActions } from './use-rule-actions';
 
 // each comes with what it shows: the night's drawing after the form can be used, the findings with the first answer
 const BandNight = dynamic(() => import('./band-night').then((module) => module.BandNight), { ssr: false });
-const Findings = dynamic(() => import('./findings').then((module) => module.Findings), { ssr: false });
+const ToLookAt = dynamic(() => import('./findings').then((module) => module.Findings), { ssr: false });
 
 /** Beside the form: what the band would be on a night, things to look at, the versions, and the rule as a whole. */
 export function EditorSide({
   data,
   versions,
   body,
+  findings,
   actions,
   onGo,
 }: {
   data: RuleEditorData;
   versions: ReactNode;
   body: RuleBody;
+  findings: Findings | null;
   actions: RuleActions;
   onGo: (path: string) => void;
 }) {
   const { rule, points, preferences, mayWrite, house, night } = data;
-  const findings = useFindings(rule.id, body, mayWrite);
   return (
     <div className="flex min-w-0 flex-col gap-5">
       {night === null ? null : (
@@ -38,7 +39,7 @@ export function EditorSide({
           </NightFrame>
         </Panel>
       )}
-      {findings === null ? null : <Findings told={findings} house={house} onGo={onGo} />}
+      {findings === null ? null : <ToLookAt told={findings} house={house} onGo={onGo} />}
       {versions}
       {mayWrite ? (
         <KeepRule

@@ -25,6 +25,7 @@ export function Findings({
   const hasStop = findings.some((finding) => finding.level === 'stop');
   return (
     <section
+      id="look-at"
       aria-label="Things to look at"
       aria-live="polite"
       className={classes(

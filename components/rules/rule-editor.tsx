@@ -16,6 +16,7 @@ import { fieldOfPath, focusField } from './field-paths';
 import type { RuleForm } from './form-values';
 import { OnlySection } from './only-section';
 import { RestSection } from './rest-section';
+import { useFindings } from './use-judged';
 import { useEditedRule } from './use-edited-rule';
 import { useLeaveWarning } from './use-leave-warning';
 import { useRuleActions } from './use-rule-actions';
@@ -33,6 +34,7 @@ export function RuleEditor({ data, parts }: { data: RuleEditorData; parts: RuleE
   const [isBuilding, setBuilding] = useState(false);
   const { form, factOf, body, isWhole, bodyNow, valuesOf } = useEditedRule(data);
   const { isDirty, isSubmitting } = form.formState;
+  const findings = useFindings(rule.id, body, mayWrite);
   const leave = useLeaveWarning(isDirty);
   const isAwake = useAwake();
   const draftNumber = rule.draft?.number ?? (rule.versions[0]?.number ?? 0) + 1;
@@ -84,6 +86,7 @@ export function RuleEditor({ data, parts }: { data: RuleEditorData; parts: RuleE
               <EditorFoot
                 {...{ isAwake, isSubmitting, isDirty }}
                 failure={actions.failure}
+                toLookAt={findings?.findings.length ?? 0}
                 onForce={() => void form.handleSubmit(() => setForcing(true), onInvalid)()}
               />
             ) : null}
@@ -91,7 +94,7 @@ export function RuleEditor({ data, parts }: { data: RuleEditorData; parts: RuleE
           <VersionActsProvider
             value={{ rule, ...actions.going, goBack: (number) => void actions.goBack(number) }}
           >
-            <EditorSide {...{ data, body, actions }} versions={parts.versions} onGo={goTo} />
+            <EditorSide {...{ data, body, findings, actions }} versions={parts.versions} onGo={goTo} />
           </VersionActsProvider>
         </div>
         {isForcing ? (
