@@ -1,6 +1,7 @@
 /** Bands on paper: strict thresholds, the latch, periods, hours, conditions, several rules. */
 import { describe, expect, it } from 'vitest';
 import type { RuleBody } from '@/lib/control/rule-body';
+import { NIGHT_PERIODS } from '../checks/control';
 import { body, channel, house, Player, rule } from './house';
 import { holds, silent, speaking } from './table';
 
@@ -129,6 +130,23 @@ describe('the latch', () => {
       [240, { bench: 8 }, 'off idle'],
     ],
   });
+});
+
+describe('across a change of the clock', () => {
+  it.each(NIGHT_PERIODS)(
+    'in %s a fan within hours of the night runs from %s to %s (F-PERIOD)',
+    (zone, from, to) => {
+      const config = fan({ hours: { from: '18:00', to: '07:00' } });
+      config.house.zone = zone;
+      const start = Date.parse(from) - 3_600_000;
+      const player = new Player(config, { bench: 3 }, undefined, start);
+      player.until(Date.parse(to) + 3_600_000, 60_000);
+      expect(player.switchings('fan', 0)).toEqual([
+        [Date.parse(from) / 1000, 'on', 'band'],
+        [Date.parse(to) / 1000, 'off', 'idle'],
+      ]);
+    },
+  );
 });
 
 describe('by facts of time', () => {
