@@ -168,6 +168,32 @@ describe('hand', () => {
     ],
   });
 
+  holds('off goes on however dead its point is', {
+    config: fan(),
+    reads: warm,
+    rows: [
+      [10, hand('off', 7200), 'off hand'],
+      [60, silent('bench'), 'off hand'],
+      [7209.999, null, 'off hand'],
+      [7210, null, 'off fail-safe'],
+    ],
+  });
+
+  it('and a pulse that waited for a worker have used up their time meanwhile', () => {
+    const player = new Player(fan(), warm);
+    player.now += 400 * S;
+    const given = { channel: 'fan', at: player.now - 100 * S, by: 'Ann' };
+    player.observed.commands = [
+      { ...given, number: 1, kind: 'prove', seconds: 60 },
+      { ...given, number: 2, kind: 'hand', state: 'on', seconds: 300, holdInFrost: false },
+    ];
+    player.step();
+    expect(player.events).toContainEqual(
+      expect.objectContaining({ kind: 'command-refused', why: 'too-late' }),
+    );
+    expect(player.of().until).toBe(player.now + 200 * S);
+  });
+
   holds('for more than 12 h is not taken', {
     config: fan(),
     reads: warm,

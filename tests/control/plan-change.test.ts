@@ -2,6 +2,7 @@
 import { describe, expect, it } from 'vitest';
 import { compile } from '@/lib/control/compile';
 import { MEMORY_VERSION, migrateMemory } from '@/lib/control/memory';
+import { step } from '@/lib/control/step';
 import type { HouseConfig } from '@/lib/control/types';
 import { body, channel, house, MIN, Player, point, rest, rule, S, source, START } from './house';
 
@@ -148,6 +149,15 @@ describe('what is kept with its id', () => {
     change(player, { ...config(), channels: config().channels.toReversed() });
     expect([player.says('fan'), player.says('lamp')]).toEqual(['on band', 'on hand']);
   });
+});
+
+it('a clock that goes back stands still for control, and nothing is forgotten', () => {
+  const player = new Player(config(), cold);
+  player.pass(300 * S);
+  const before = player.memory;
+  const back = step(player.plan, before, player.observed, player.now - 3600 * S);
+  expect(back.events).toEqual([]);
+  expect(back.memory).toEqual(before);
 });
 
 describe('a memory from storage', () => {

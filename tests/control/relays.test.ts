@@ -59,6 +59,22 @@ describe('what counts', () => {
     expect(player.faults()).toContain('relay-does-not-follow');
   });
 
+  it('is the report for less than 25 s', () => {
+    const player = new Player(config(), { ...cold, bench: 9 });
+    follow(player, [
+      [10, { reported: 'on' }, 'off idle, counts as on'],
+      [34.999, null, 'off idle, counts as on'],
+      [35, null, 'off idle, counts as off'],
+    ]);
+  });
+
+  it('a load that does not follow its order is not held in it by its least on', () => {
+    const player = new Player(config({ minOnS: 300 }), cold);
+    follow(player, [[10, { reported: 'off' }, 'on band, counts as off']]);
+    player.say({ bench: 9 });
+    follow(player, [[20, { reported: 'off' }, 'off idle, counts as off']]);
+  });
+
   it('spends the credit of a welded relay, and its rest begins when it opens', () => {
     const player = new Player(config(), { ...cold, bench: 9 });
     const welded: Said[] = Array.from({ length: 64 }, (_, index) => [

@@ -157,6 +157,13 @@ describe('times', () => {
     const speaks = gone();
     expect(speaks.result.points[0]).toMatchObject({ quality: 'uncertain', why: 'worker-was-away' });
     expect(at(speaks, 1030, 5)).toBe('off idle, good');
+    // one that was silent before is not excused
+    const silent = played({}, 5);
+    expect(at(silent, 100)).toBe('off fail-safe, bad, silent');
+    silent.now = START + 1000 * S;
+    silent.observed.workerStartedAt = START + 990 * S;
+    silent.step();
+    expect(silent.result.points[0]).toMatchObject({ quality: 'bad', why: 'silent' });
     const dead = gone();
     expect(at(dead, 1080)).toBe('off idle, uncertain, worker-was-away');
     expect(at(dead, 1080.001)).toBe('off fail-safe, bad, silent');
