@@ -35,7 +35,12 @@ export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
     if (batch.reports.length > 0) await tx.insert(relayReport).values(batch.reports).onConflictDoNothing();
     if (batch.logs !== undefined && batch.logs.length > 0)
       await tx.insert(nodeLog).values(batch.logs).onConflictDoNothing();
+    await writeStates(
+      tx,
+      batch.memories.filter((row) => isStateAlone(row)),
+    );
     for (const row of batch.memories) {
+      if (isStateAlone(row)) continue;
       const { holdingId: _holding, houseId: _house, ...changed } = row;
       await tx
         .insert(controlMemory)
@@ -43,6 +48,29 @@ export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
         .onConflictDoUpdate({ target: [controlMemory.holdingId, controlMemory.houseId], set: changed });
     }
   });
+}
+
+/** Nothing happened in the house but readings. */
+const isStateAlone = ({ state, stateAt, ...rest }: MemoryRow): boolean =>
+  state !== undefined && stateAt !== undefined && Object.keys(rest).length === 2;
+
+/** Each house writes its state at each report: a statement a house would cost many times what the rows do. */
+async function writeStates(db: Db, rows: MemoryRow[]): Promise<void> {
+  if (rows.length === 0) return;
+  const told = JSON.stringify(
+    rows.map(({ holdingId, houseId, state, stateAt }) => ({
+      holding_id: holdingId,
+      house_id: houseId,
+      state,
+      state_at: stateAt,
+    })),
+  );
+  await db.execute(sql`
+    insert into control_memory (holding_id, house_id, state, state_at)
+    select holding_id, house_id, state, state_at
+    from jsonb_to_recordset(${told}::jsonb)
+      as told(holding_id uuid, house_id uuid, state jsonb, state_at timestamptz)
+    on conflict (holding_id, house_id) do update set state = excluded.state, state_at = excluded.state_at`);
 }
 
 export interface KeptMemory {

@@ -33,6 +33,8 @@ class Answer implements StepResult {
   readonly wakeAt: number | null;
   readonly #run: Run;
   #channels: ChannelResult[] | null = null;
+  #points: PointResult[] | null = null;
+  #sources: SourceResult[] | null = null;
 
   constructor(run: Run, memory: Memory) {
     this.#run = run;
@@ -48,11 +50,13 @@ class Answer implements StepResult {
   }
 
   get points(): PointResult[] {
-    return this.#run.plan.points.map((_, index) => pointResult(this.#run, index));
+    this.#points ??= this.#run.plan.points.map((_, index) => pointResult(this.#run, index));
+    return this.#points;
   }
 
   get sources(): SourceResult[] {
-    return this.#run.plan.sources.map((_, index) => sourceResult(this.#run, index));
+    this.#sources ??= this.#run.plan.sources.map((_, index) => sourceResult(this.#run, index));
+    return this.#sources;
   }
 }
 

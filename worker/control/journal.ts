@@ -39,6 +39,12 @@ export class Journal {
       groupWeight: GROUP_ROWS,
       heldWeight: HELD_ROWS,
       weigh: (entry) => rowsOf(entry) + 1,
+      // a state is only for those who open a page: the next one follows at the next report anyway
+      gather: {
+        ms: 250,
+        fullWeight: GROUP_ROWS,
+        isUrgent: (entry) => rowsOf(entry) > 0 || entry.memory?.memory !== undefined,
+      },
       write: async (entries) => {
         await writeRunning(base.db, batchOf(entries));
         return entries.map(() => null);
