@@ -66,6 +66,16 @@ describe('every quarter of an hour of a day on which the clock changes', () => {
   );
 });
 
+it('of two periods that a skipped hour begins together the later holds', () => {
+  const band = [
+    { from: '00:00', low: 1, high: 4 },
+    { from: '02:15', low: 2, high: 5 },
+    { from: '02:30', low: 3, high: 6 },
+  ];
+  const calendar = compileCalendar(body({ band }), zone('Europe/Zurich'));
+  expect([-1, 0, 3_600_000].map((ms) => calendar(at('2026-03-29T01:00:00Z') + ms).low)).toEqual([1, 3, 3]);
+});
+
 describe('seasons', () => {
   const inSeason = (from: string, to: string, instant: string) =>
     compileCalendar(body({ season: { from, to } }), zone('Europe/Zurich'))(at(instant)).inSeason;

@@ -58,16 +58,17 @@ describe('least gain', () => {
   });
 
   // silent from 880 s: bad at 970, before the 2 min are over; it speaks again at 1,100
-  holds('nor does what is not good', {
-    config: config(),
-    reads: cold,
-    rows: [
-      [880, silent('out'), 'on band'],
-      [1100, speaking('out'), 'on band'],
-      [1219.999, null, 'on band'],
-      [1220, null, 'off rest'],
-    ],
-  });
+  for (const end of ['in', 'out'])
+    holds(`nor does what is not good, at “${end}”`, {
+      config: config(),
+      reads: cold,
+      rows: [
+        [880, silent(end), 'on band'],
+        [1100, speaking(end), 'on band'],
+        [1219.999, null, 'on band'],
+        [1220, null, 'off rest'],
+      ],
+    });
 
   holds('half an hour of warming up is no “no gain” where the wait is as long (common practice, no source)', {
     config: config({}, { leastGain: { ...gain, after: 1800 } }),
