@@ -29,6 +29,9 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
       className={classes('h-auto w-full select-none', className)}
     >
       <StripPatterns id={id} />
+      <clipPath id={`${id}-plot`}>
+        <rect x={x0} y={yTop} width={x1 - x0} height={yBottom - yTop} />
+      </clipPath>
       {layout.degrees.map((tick) => (
         <g key={tick.celsius}>
           <line x1={x0} x2={x1} y1={tick.y} y2={tick.y} className="stroke-line" strokeWidth="1" />
@@ -94,6 +97,7 @@ export function NightSvg({ layout, id, className }: { layout: NightLayout; id: s
         <path
           key={line.key}
           d={line.path}
+          clipPath={`url(#${id}-plot)`}
           fill="none"
           strokeWidth={line.isMain ? 2.4 : line.role === 'bench' || line.role === 'house-air' ? 1.3 : 1.6}
           strokeDasharray={

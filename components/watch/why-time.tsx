@@ -56,7 +56,8 @@ export function WhyTime({
       ) : null}
       <div className="grid grid-cols-3 gap-2">
         <Button disabled={before === null} onClick={() => onAsk(before)} className="px-2 whitespace-normal">
-          Switching before
+          Earlier
+          <span className="sr-only"> switching</span>
         </Button>
         <Button
           aria-expanded={isOpen}
@@ -66,7 +67,8 @@ export function WhyTime({
           Other time
         </Button>
         <Button disabled={after === null} onClick={() => onAsk(after)} className="px-2 whitespace-normal">
-          Switching after
+          Later
+          <span className="sr-only"> switching</span>
         </Button>
       </div>
     </div>
