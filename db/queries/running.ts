@@ -1,5 +1,5 @@
 /** What control did and how it stands: written by the worker in batches, read by pages and the interface. */
-import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, gte, inArray, lt, or, sql } from 'drizzle-orm';
 import type { Db, Holding } from '@/db/client';
 import { nodeLog } from '@/db/schema/node-log';
 import { controlMemory, decision, relayReport, switching } from '@/db/schema/running';
