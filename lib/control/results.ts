@@ -26,7 +26,7 @@ export function channelResult(run: Run, index: number): ChannelResult {
 }
 
 export function pointResult(run: Run, index: number): PointResult {
-  const { id, value, at, quality, why, doubts = null } = entry(run.points, index);
+  const { id, value, at, quality, why, doubts } = entry(run.points, index);
   return { id, value, at, quality, why, doubtSince: doubts?.since ?? null, lastDoubt: doubts?.last ?? null };
 }
 

@@ -25,7 +25,8 @@ export async function withRemovals(
   const known = new Map((await listLockouts(holding, houseId)).map((one) => [one.id, one]));
   const lockouts = placed.map((one) => {
     if (typeof one !== 'object' || one === null || Array.isArray(one)) return one;
-    const { removedAt = null, removedBy = null } = known.get(String(one['id'])) ?? {};
+    const id = typeof one['id'] === 'string' ? one['id'] : '';
+    const { removedAt = null, removedBy = null } = known.get(id) ?? {};
     return removedAt === null ? one : { ...one, removedAt: Date.parse(removedAt), removedBy };
   });
   const because: Data = { ...lock.because, lockouts };

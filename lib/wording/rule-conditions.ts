@@ -1,5 +1,5 @@
 /** A rule's extra conditions in words. */
-import type { Condition, ConditionNode, ConditionTree } from '@/lib/control/rule-body';
+import type { Condition, ConditionNode } from '@/lib/control/rule-body';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { dayTime } from '@/lib/units/time';
