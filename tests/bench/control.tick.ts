@@ -10,7 +10,7 @@ import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
 import type { Observed } from '@/lib/control/types';
 import { demoConfig } from './demo-config';
-import { straight, straightState, type Answer } from './straight';
+import { straight, straightState, type Answer } from './straight-line';
 import { quantile, ratio, round3, timeMs } from './support';
 
 /** Noon to noon on a winter day without a change of the clock; London's clock is UTC then. */
