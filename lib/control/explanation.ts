@@ -1,10 +1,14 @@
 /** Why a channel is as it is, at an instant that is settled. */
 import { becauseOf, ladderOf, ladderUnder } from './ladder';
-import { entry, type Run } from './run';
+import { entry, told, type Run } from './run';
 import type { Explanation } from './types';
 
 /** The ladder of a channel at `run.at`; `next` is left to whoever can look ahead. */
 export function explainSettled(run: Run, channel: number): Explanation {
+  return told(run, () => explanationOf(run, channel));
+}
+
+function explanationOf(run: Run, channel: number): Explanation {
   const { id, wanted, claim } = entry(run.channels, channel);
   const decided = claim ?? 'idle';
   const because = becauseOf(run, channel, decided);

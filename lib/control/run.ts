@@ -124,4 +124,17 @@ export function dueAt(run: Run, instant: number): void {
   if (instant > run.at && instant < run.due) run.due = instant;
 }
 
+/**
+ * What is asked only to be told. Claims note when they want to be awake as they are asked; a reason that somebody reads
+ * afterwards must not move what the run has settled, or reading would change when the next step comes.
+ */
+export function told<T>(run: Run, ask: () => T): T {
+  const { wake, readingsWake, due } = run;
+  const answer = ask();
+  run.wake = wake;
+  run.readingsWake = readingsWake;
+  run.due = due;
+  return answer;
+}
+
 export const nextWake = (run: Run): number => Math.min(run.wake, run.readingsWake);
