@@ -10,6 +10,7 @@ import * as money from './schema/money';
 import * as people from './schema/people';
 import * as report from './schema/report';
 import * as rule from './schema/rule';
+import * as nodeLog from './schema/node-log';
 import * as running from './schema/running';
 import * as study from './schema/study';
 import * as watch from './schema/watch';
@@ -22,6 +23,7 @@ export const schema = {
   ...people,
   ...report,
   ...rule,
+  ...nodeLog,
   ...running,
   ...study,
   ...watch,

@@ -16,6 +16,11 @@ export interface GroupOptions<Item, Result> {
   heldWeight: number;
   weigh: (item: Item) => number;
   write: (items: Item[]) => Promise<Result[]>;
+  /**
+   * What need not be durable at once waits until `ms` after the write before it, so that many houses share a commit; what
+   * is urgent takes all that waits along with it, and so does a weight that fills a commit well by itself.
+   */
+  gather: { ms: number; fullWeight: number; isUrgent: (item: Item) => boolean };
 }
 
 interface Waiting<Item, Result> {
@@ -32,6 +37,8 @@ export class GroupWriter<Item, Result> {
   private running = false;
   private stopped = false;
   private awaySince: number | null = null;
+  private wroteAtMs = -Infinity;
+  private endGathering: (() => void) | null = null;
 
   constructor(
     private readonly base: Pick<Base, 'clock' | 'log' | 'metrics'>,
@@ -58,6 +65,7 @@ export class GroupWriter<Item, Result> {
     const result = new Promise<Result>((done, failed) => {
       this.waiting.push({ item, done, failed });
     });
+    if (this.isHurried()) this.endGathering?.();
     void this.run();
     return result;
   }
@@ -78,10 +86,31 @@ export class GroupWriter<Item, Result> {
     // What comes in the same turn of the event loop goes in one group.
     await Promise.resolve();
     while (this.waiting.length > 0 && !this.stopped) {
+      await this.gather();
+      this.wroteAtMs = this.base.clock.monotonicMs();
       const group = this.nextGroup();
       await this.writeGroup(group);
     }
     this.running = false;
+  }
+
+  private isHurried(): boolean {
+    const { fullWeight, isUrgent } = this.options.gather;
+    return this.weight >= fullWeight || this.waiting.some(({ item }) => isUrgent(item));
+  }
+
+  private async gather(): Promise<void> {
+    const { clock } = this.base;
+    const leftMs = this.wroteAtMs + this.options.gather.ms - clock.monotonicMs();
+    if (leftMs <= 0 || this.isHurried()) return;
+    await new Promise<void>((resolve) => {
+      const cancel = clock.after(leftMs, resolve);
+      this.endGathering = () => {
+        cancel();
+        resolve();
+      };
+    });
+    this.endGathering = null;
   }
 
   private nextGroup(): Waiting<Item, Result>[] {

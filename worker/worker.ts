@@ -3,6 +3,7 @@ import type http from 'node:http';
 import { tellOfGap } from './alarms/gap';
 import { AlarmKeeper } from './alarms/keeper';
 import type { Base } from './base';
+import { keepGap } from './control/gap';
 import { Journal } from './control/journal';
 import { Houses } from './control/houses';
 import { Lead } from './control/lead';
@@ -52,6 +53,7 @@ export async function startWorker(base: Base, instance: string, port: number): P
     onLead: async ({ formerHeartbeatAt, wasReleased }) => {
       await houses.lead(formerHeartbeatAt);
       jobs.start();
+      await keepGap(base, formerHeartbeatAt);
       await tellOfGap(base, wasReleased ? null : formerHeartbeatAt);
     },
     onLost: () => {

@@ -36,20 +36,34 @@ export interface NightLayout {
   now: { x: number; text: string; anchor: 'start' | 'end' } | null;
 }
 
-/** °C between which the chart spans: all lines and the bands that warm, never less than 8 K. */
+/** K over everything else that a loop's air may show; hotter, it leaves the chart at its top. */
+const LOOP_ROOM_K = 3;
+
+/**
+ * °C between which the chart spans: the lines and the bands that warm, never less than 8 K. A loop's air does not
+ * stretch it: at 30 °C it would press the house's own few degrees, which the chart is for, into a hair.
+ */
 export function extentOf(chart: Pick<NightChart, 'lines' | 'bands' | 'frostLimit'>): [number, number] {
+  const valuesOf = (lines: WatchLine[]) =>
+    lines.flatMap((one) => one.value.filter((value) => value !== null));
+  const loops = valuesOf(chart.lines.filter(isLoop));
   const values = [
-    ...chart.lines.flatMap((one) => one.value.filter((value) => value !== null)),
+    ...valuesOf(chart.lines.filter((one) => !isLoop(one))),
     ...chart.bands
       .filter((band) => band.purpose === 'warm')
       .flatMap((band) => band.periods.flatMap((period) => [period.low, period.high])),
     ...(chart.frostLimit === null ? [] : [chart.frostLimit]),
   ];
-  if (values.length === 0) return [-5, 15];
-  const [least, greatest] = [Math.min(...values), Math.max(...values)];
+  if (values.length + loops.length === 0) return [-5, 15];
+  const others = values.length === 0 ? loops : values;
+  const least = Math.min(...others, ...loops);
+  const highest = Math.max(...others);
+  const greatest = Math.max(highest, Math.min(Math.max(...loops), highest + LOOP_ROOM_K));
   const lack = Math.max(0, 8 - (greatest - least)) / 2;
   return [Math.floor(least - lack - 0.5), Math.ceil(greatest + lack + 0.5)];
 }
+
+const isLoop = (one: WatchLine) => one.role === 'loop-return';
 
 export function nightLayout(chart: NightChart, frame: Frame, preferences: Preferences): NightLayout {
   const { from, to } = chart.night;
@@ -122,8 +136,11 @@ function labelsOf(chart: NightChart, x: Scale, y: Scale, frame: Frame, preferenc
     const name = one.role === 'outdoors' ? 'Outdoors' : one.role === 'loop-return' ? 'Loop return' : one.name;
     // on a phone the colour and the place say which; the name would run over the lines
     const text = frame.namesAbove ? temperatureFigure(value, preferences) : name;
+    // a line that left the chart says how high it is
+    const isOut = y(value) < frame.top;
+    const told = isOut && !frame.namesAbove ? `${text} ↑ ${temperatureFigure(value, preferences)}` : text;
     return [
-      { key: one.key, role: one.role, isMain: one.key === chart.main, text, x: x(at) + 5, y: y(value) },
+      { key: one.key, role: one.role, isMain: one.key === chart.main, text: told, x: x(at) + 5, y: y(value) },
     ];
   });
   return spread(items, 13, frame.top + 6, frame.top + frame.plot - 2);

@@ -1,9 +1,12 @@
+import Link from 'next/link';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock } from '@/lib/units/time';
 import { decisionWords } from '@/lib/wording/duty';
 
 export interface OpenedDecision {
+  /** The channel's label, and its key. */
   channel: string;
+  key: string;
   at: number;
   state: 'on' | 'off';
   claim: string;
@@ -11,12 +14,14 @@ export interface OpenedDecision {
 
 /** Every decision of a night and what decided it. */
 export function Decisions({
+  house,
   decisions,
   from,
   zone,
   preferences,
   many,
 }: {
+  house: string;
   decisions: OpenedDecision[];
   /** The night's first noon: what stood then was decided before. */
   from: number;
@@ -47,10 +52,14 @@ export function Decisions({
             >
               {decision.at < from ? 'at noon' : clock(decision.at, zone, preferences)}
             </time>
-            <span>
+            <Link
+              href={`/${house}/watch?why=${decision.key}&at=${new Date(Math.max(decision.at, from)).toISOString()}`}
+              className="underline decoration-line underline-offset-4 hover:decoration-ink"
+            >
               {many ? `${decision.channel}: ` : null}
               {decisionWords(decision.state, decision.claim)}
-            </span>
+              <span className="sr-only">: why</span>
+            </Link>
           </li>
         ))}
       </ol>

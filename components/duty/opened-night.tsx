@@ -86,6 +86,7 @@ export function OpenedNight({
             ))}
             <Happenings alarms={opened.alarms} entries={opened.entries} scene={scene} />
             <Decisions
+              house={house.slug}
               decisions={opened.decisions}
               from={summary.from}
               zone={zone}

@@ -1,12 +1,14 @@
 'use client';
 import { useFieldArray, useWatch } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
-import { NumberField, Select, TextField } from '@/components/ui/field';
+import { NumberField, Select } from '@/components/ui/field';
 import { degrees } from '@/lib/units/format';
 import { BandSlider } from './band-slider';
 import { useFacts, useRuleForm } from './context';
+import { DayTimeField } from './day-time-field';
 import { PointChoices } from './point-choices';
 import { Section } from './section';
+import { StandIns } from './stand-ins';
 
 /** Where it is measured, what stands in, and the two thresholds, by periods of the day. */
 export function BandSection() {
@@ -34,16 +36,10 @@ export function BandSection() {
         <div key={period.id} className="border-t border-line pt-3 first:border-0">
           {several ? (
             <div className="mb-2 flex items-end gap-3">
-              <TextField
-                label="From"
-                hint="A clock time, such as 22:00."
-                className="w-40"
-                error={form.errorOf(`band.${place}.from`)}
-                {...form.register(`band.${place}.from`)}
-              />
+              <DayTimeField name={`band.${place}.from`} label="From" />
               <Button kind="quiet" onClick={() => periods.remove(place)}>
                 <span>
-                  Remove<span className="sr-only"> the period from {band[place]?.from}</span>
+                  Remove<span className="sr-only"> period {place + 1}</span>
                 </span>
               </Button>
             </div>
@@ -69,53 +65,20 @@ export function BandSection() {
         kind="quiet"
         className="-ml-4 self-start"
         onClick={() =>
-          periods.append({ from: several ? '' : '22:00', low: band[0]?.low ?? '', high: band[0]?.high ?? '' })
+          periods.append({
+            from: { how: several ? 'clock' : 'before-sunset', clock: several ? '' : '22:00', away: '60' },
+            low: band.at(-1)?.low ?? '',
+            high: band.at(-1)?.high ?? '',
+          })
         }
       >
-        {several ? 'Add a period' : 'Another band at night? Add a period'}
+        {several ? 'Add a period' : 'Another band from sunset? Add a period'}
       </Button>
-    </Section>
-  );
-}
-
-function StandIns() {
-  const form = useRuleForm();
-  const { preferences } = useFacts();
-  const standIns = useFieldArray({ control: form.control, name: 'standIns' });
-  return (
-    <div className="flex flex-col gap-2">
-      {standIns.fields.map((one, place) => (
-        <div key={one.id} className="grid grid-cols-[1fr_auto] items-end gap-2 sm:grid-cols-[1fr_7rem_auto]">
-          <Select
-            label={place === 0 ? 'If that fails' : 'If that fails too'}
-            className="col-span-2 sm:col-span-1"
-            error={form.errorOf(`standIns.${place}.point`)}
-            {...form.register(`standIns.${place}.point`)}
-          >
-            <PointChoices units={['Cel']} />
-          </Select>
-          <NumberField
-            label="and add"
-            unit={degrees(preferences)}
-            error={form.errorOf(`standIns.${place}.offset`)}
-            {...form.register(`standIns.${place}.offset`)}
-          />
-          <Button kind="quiet" onClick={() => standIns.remove(place)}>
-            <span>
-              Remove<span className="sr-only"> stand-in {place + 1}</span>
-            </span>
-          </Button>
-        </div>
-      ))}
-      {standIns.fields.length < 5 ? (
-        <Button
-          kind="quiet"
-          className="-ml-4 self-start"
-          onClick={() => standIns.append({ point: '', offset: '0' })}
-        >
-          {standIns.fields.length === 0 ? 'If that sensor fails? Add a stand-in' : 'Add another stand-in'}
-        </Button>
+      {several ? (
+        <p className="text-[0.85rem] text-soft">
+          Each holds until the next begins, the last one over midnight.
+        </p>
       ) : null}
-    </div>
+    </Section>
   );
 }

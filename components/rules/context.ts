@@ -5,12 +5,16 @@ import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import type { RuleNames } from '@/lib/wording/rule-names';
+import type { FactOf } from './conditions/condition-text';
+import type { ClockFacts } from './conditions/present';
 import type { RuleForm } from './form-values';
 
 /** What every part of the editor needs beside the form. */
 export interface EditorFacts {
   points: Point[];
   now: StatePoint[];
+  clock: ClockFacts;
+  factOf: FactOf;
   names: RuleNames;
   preferences: Preferences;
   mayWrite: boolean;

@@ -1,19 +1,31 @@
 'use client';
+import Link from 'next/link';
+import { useId } from 'react';
 import { Button } from '@/components/ui/button';
 import { classes } from '@/components/ui/classes';
 import type { Finding } from '@/lib/schema/rule';
+import type { Findings as Told } from '@/lib/schema/rule-view';
 import { capital, counted } from '@/lib/wording/counts';
-import { fieldOfPath } from './form-values';
 
 /** What the check found: what keeps the draft out of force first. A press goes to the field. */
-export function Findings({ findings, onGo }: { findings: Finding[] | null; onGo: (field: string) => void }) {
-  if (findings === null) return null;
+export function Findings({
+  told,
+  house,
+  onGo,
+}: {
+  told: Told | null;
+  house: string;
+  onGo: (path: string) => void;
+}) {
+  if (told === null) return null;
+  const { findings, notKnown } = told;
   const sorted = [...findings].sort(
     (one, other) => Number(other.level === 'stop') - Number(one.level === 'stop'),
   );
   const hasStop = findings.some((finding) => finding.level === 'stop');
   return (
     <section
+      id="look-at"
       aria-label="Things to look at"
       aria-live="polite"
       className={classes(
@@ -31,25 +43,48 @@ export function Findings({ findings, onGo }: { findings: Finding[] | null; onGo:
       ) : (
         <ul className="mt-1 flex flex-col gap-2">
           {sorted.map((finding, place) => {
-            const path = finding.paths[0];
             return (
-              <li key={place} className="text-[0.95rem]">
+              <li key={`${place} ${finding.kind}`} className="text-[0.95rem]">
                 {finding.level === 'stop' ? (
                   <strong className="text-alarm">Keeps it out of force: </strong>
                 ) : null}
-                {finding.text}
-                {path === undefined || path === '' ? null : (
-                  <Button kind="quiet" className="-my-2 ml-1 px-1" onClick={() => onGo(fieldOfPath(path))}>
-                    <span>
-                      Go to the field<span className="sr-only"> {path}</span>
-                    </span>
-                  </Button>
-                )}
+                <Remedy finding={finding} house={house} onGo={onGo} />
               </li>
             );
           })}
         </ul>
       )}
+      {notKnown.length === 0 ? null : (
+        <p className="mt-2 text-[0.9rem] text-soft">Not known yet: {notKnown.join(' ')}</p>
+      )}
     </section>
+  );
+}
+
+/** What is wrong, and where the remedy is: a field of this form, or Wiring for what the rule hangs on. */
+function Remedy({ finding, house, onGo }: { finding: Finding; house: string; onGo: (path: string) => void }) {
+  const id = useId();
+  const path = finding.paths.find((one) => one !== '' && one !== 'channel');
+  const said = <span id={id}>{finding.text} </span>;
+  if (path === undefined)
+    return (
+      <>
+        {said}
+        <Link
+          aria-describedby={id}
+          href={`/${house}/wiring`}
+          className="inline-flex min-h-11 items-center font-semibold underline underline-offset-4"
+        >
+          Go to Wiring
+        </Link>
+      </>
+    );
+  return (
+    <>
+      {said}
+      <Button kind="quiet" aria-describedby={id} className="-my-2 -ml-1 px-1" onClick={() => onGo(path)}>
+        Go to the field
+      </Button>
+    </>
   );
 }

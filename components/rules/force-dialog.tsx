@@ -9,8 +9,7 @@ import type { Answer } from '@/components/ui/send';
 import type { RuleBody } from '@/lib/control/rule-body';
 import type { Preferences } from '@/lib/units/preferences';
 import { ruleSentence } from '@/lib/wording/rule';
-import type { Change } from '@/lib/wording/rule-changes';
-import { changeWords } from '@/lib/wording/rule-changes';
+import { changeWords, ruleChanges } from '@/lib/wording/rule-changes';
 import type { RuleNames } from '@/lib/wording/rule-names';
 
 /** What has to be typed where nobody has seen the relay move this load. */
@@ -21,7 +20,7 @@ export function ForceDialog({
   body,
   names,
   preferences,
-  changes,
+  inForce,
   version,
   channelLabel,
   isProved,
@@ -32,13 +31,14 @@ export function ForceDialog({
   names: RuleNames;
   preferences: Preferences;
   /** Null: nothing is in force yet. */
-  changes: Change[] | null;
+  inForce: RuleBody | null;
   version: number;
   channelLabel: string;
   isProved: boolean;
   onForce: (why: string, acceptUnproved: boolean) => Promise<Answer<unknown>>;
   onClose: () => void;
 }) {
+  const changes = inForce === null ? null : ruleChanges(inForce, body, names, preferences);
   const [why, setWhy] = useState('');
   const [consent, setConsent] = useState('');
   const [errors, setErrors] = useState<{ why?: string; consent?: string; all?: string }>({});

@@ -58,10 +58,10 @@ export function RestSection({ source }: { source: SourceFacts | null }) {
             <NumberField label="Longest draw" unit="min" {...field('longestDraw')} />
             <NumberField label="Rest at least" unit="min" {...field('least')} />
           </div>
-          <div className="grid grid-cols-2 items-start gap-3 sm:grid-cols-3">
+          <div className="grid grid-cols-2 items-start gap-3">
             <Select
               label="then until"
-              className="col-span-2 sm:col-span-1"
+              className="col-span-2"
               error={form.errorOf('waitsAt')}
               {...form.register('waitsAt')}
             >

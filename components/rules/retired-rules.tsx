@@ -30,11 +30,19 @@ export function RetiredRules({
             </Link>
             <span className="text-[0.9rem]">
               {channels.find((one) => one.key === rule.channel)?.label ?? rule.channel}
-              {rule.retiredAt === null ? '' : `, retired ${day(Date.parse(rule.retiredAt), zone)}`}
+              {retiredWords(rule, zone)}
             </span>
           </li>
         ))}
       </ul>
     </Panel>
   );
+}
+
+/** @example ", retired 12 April by grower@larkmoor.example: “The heap is spent.”" */
+function retiredWords({ retired }: Rule, zone: string): string {
+  if (retired === null) return '';
+  const by = retired.by === null ? '' : ` by ${retired.by}`;
+  const why = retired.why === null ? '' : `: “${retired.why}”`;
+  return `, retired ${day(Date.parse(retired.at), zone)}${by}${why}`;
 }

@@ -1,69 +1,21 @@
 import Link from 'next/link';
-import { NARROW, WIDE, type NightChart } from '@/components/chart/night-chart';
-import { nightLayout } from '@/components/chart/night-layout';
+import { KeepFresh } from '@/components/ui/keep-fresh';
 import { compileTimeFacts, place } from '@/lib/control/calendar';
 import type { HouseState } from '@/lib/schema/house-state';
-import type { RuleWithVersions } from '@/lib/schema/rule-view';
-import type { Channel, House, Point, Source } from '@/lib/schema/yard-view';
+import type { Channel, Source } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
-import { day } from '@/lib/units/time';
-import { nightSummary } from '@/lib/wording/night-summary';
-import type { DrawnNight } from './band-night';
+import { Reading } from './conditions/reading';
+import { drawNight, type NightOfRule } from './draw-night';
+import { EditorNotices } from './editor-notices';
+import { formOf } from './form-values';
 import { RuleEditor } from './rule-editor';
+import { Versions } from './versions';
 
-export interface RuleData {
-  house: House;
-  rule: RuleWithVersions;
+export interface RuleData extends NightOfRule {
   others: string[];
-  points: Point[];
   channels: Channel[];
   sources: Source[];
   state: HouseState | null;
-  night: { name: string; from: number; to: number };
-  readings: { point: string; at: number[]; value: number[] }[];
-}
-
-/** Draws the night on the server; the editor lays the band over it. Null where nothing was read in it. */
-function drawNight(data: RuleData, now: number, preferences: Preferences): DrawnNight | null {
-  const { house, rule, night, points } = data;
-  const shown = new Set([
-    rule.body.point,
-    ...points.filter((one) => one.role === 'outdoors').map((one) => one.key),
-  ]);
-  const lines = data.readings
-    .filter((one) => shown.has(one.point) && one.at.length > 0)
-    .map((one) => {
-      const point = points.find((other) => other.key === one.point);
-      return {
-        key: one.point,
-        name: point?.name ?? one.point,
-        role: point?.role ?? 'other',
-        at: one.at,
-        value: one.value,
-      };
-    });
-  if (lines.length === 0) return null;
-  const { from, to } = night;
-  const chart: NightChart = {
-    ...{ night: { from, to }, now, zone: house.zone, lines, strips: [], main: rule.body.point },
-    frostLimit: house.frostLimit,
-    // for the extent only: the editor draws the band itself
-    bands: [
-      {
-        point: rule.body.point,
-        channel: rule.channel,
-        purpose: 'warm',
-        periods: rule.body.band.map(({ low, high }) => ({ from, to, low, high })),
-      },
-    ],
-  };
-  const frame = (base: typeof WIDE) => ({ ...nightLayout(chart, base, preferences), bands: [] });
-  return {
-    title: `${day(from, house.zone)} to ${day(to, house.zone)}, noon to noon`,
-    wide: frame(WIDE),
-    narrow: frame(NARROW),
-    summary: nightSummary(chart, preferences),
-  };
 }
 
 /** The page of one rule. */
@@ -81,9 +33,20 @@ export function RuleView({
   const { house, rule, points, channels, sources, state } = data;
   const channel = channels.find((one) => one.key === rule.channel);
   const source = sources.find((one) => one.slug === channel?.source);
-  const facts = compileTimeFacts(place(house))(now);
+  const mayWrite = allowed.includes('rule.write');
+  const pointStates = state?.points ?? [];
+  const names = {
+    channel: { label: channel?.label ?? rule.channel, loadKind: channel?.load.kind ?? 'other' },
+    points: points.map(({ key, name, role, unit }) => ({ key, name, role, unit })),
+  };
+  const clock = clockOf(house, now);
+  const factOf = (fact: string) => points.find((one) => one.key === fact);
+  const values = formOf(rule.body, factOf, preferences);
+  const told = { rule, names, preferences, mayWrite, now, zone: house.zone };
   return (
     <div className="flex flex-col gap-5">
+      {/* what conditions go by moves while somebody looks; what is typed stays */}
+      <KeepFresh everyS={15} />
       <nav aria-label="Where this is" className="-mb-3 text-[0.95rem] text-soft">
         <Link
           href={`/${house.slug}/rules`}
@@ -95,14 +58,17 @@ export function RuleView({
         {rule.draft === null ? '' : ` / draft of version ${rule.draft.number}`}
       </nav>
       <RuleEditor
+        parts={{
+          notices: <EditorNotices {...told} />,
+          conditions: (
+            <Reading node={values.only} facts={{ now: pointStates, clock, names, factOf, preferences }} />
+          ),
+          versions: <Versions {...told} />,
+        }}
         data={{
-          ...{ rule, points, preferences, now },
-          pointStates: state?.points ?? [],
-          names: {
-            channel: { label: channel?.label ?? rule.channel, loadKind: channel?.load.kind ?? 'other' },
-            points: points.map(({ key, name, role, unit }) => ({ key, name, role, unit })),
-          },
+          ...{ rule, values, points, pointStates, names, clock, preferences, mayWrite },
           channel: {
+            key: rule.channel,
             label: channel?.label ?? rule.channel,
             isProved: channel !== undefined && channel.provedAt !== null,
           },
@@ -115,12 +81,6 @@ export function RuleView({
                   dailyLimitS: source.dailyLimit,
                   drawnTodayS: state?.sources.find((one) => one.slug === source.slug)?.drawnToday ?? null,
                 },
-          clock: {
-            'time.hour': facts.hour,
-            'time.month': facts.month,
-            'time.weekday': facts.weekday,
-            'time.sunUp': facts.sunUp,
-          },
           night: drawNight(data, now, preferences),
           zone: house.zone,
           house: house.slug,
@@ -131,9 +91,18 @@ export function RuleView({
             frostHelp: channel?.frostHelp ?? false,
             runsWithoutCommand: channel?.contact === 'NC',
           },
-          mayWrite: allowed.includes('rule.write'),
         }}
       />
     </div>
   );
+}
+
+function clockOf(house: RuleData['house'], now: number) {
+  const facts = compileTimeFacts(place(house))(now);
+  return {
+    'time.hour': facts.hour,
+    'time.month': facts.month,
+    'time.weekday': facts.weekday,
+    'time.sunUp': facts.sunUp,
+  };
 }

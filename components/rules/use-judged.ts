@@ -2,21 +2,18 @@
 import { useEffect, useRef, useState } from 'react';
 import type { FieldErrors, Resolver, UseFormReturn } from 'react-hook-form';
 import { send } from '@/components/ui/send';
-import type { ConditionTree, RuleBody } from '@/lib/control/rule-body';
-import type { Finding } from '@/lib/schema/rule';
+import type { RuleBody } from '@/lib/control/rule-body';
+import type { Findings } from '@/lib/schema/rule-view';
 import type { Preferences } from '@/lib/units/preferences';
-import type { RuleForm, UnitOf } from './form-values';
+import type { FactOf } from './conditions/condition-text';
+import type { RuleForm } from './form-values';
 
 const judgeModule = () => import('./judge');
 
-export function ruleResolver(
-  kept: ConditionTree | null,
-  unitOf: UnitOf,
-  preferences: Preferences,
-): Resolver<RuleForm> {
+export function ruleResolver(factOf: FactOf, preferences: Preferences): Resolver<RuleForm> {
   return async (form) => {
     const { judge } = await judgeModule();
-    const { body, errors } = judge(form, kept, unitOf, preferences);
+    const { body, errors } = judge(form, factOf, preferences);
     if (body !== null) return { values: form, errors: {} };
     return { values: {}, errors: nested(errors) as FieldErrors<RuleForm> };
   };
@@ -25,12 +22,11 @@ export function ruleResolver(
 /** What stands in the form at this moment, judged: a press may come before the last key's judgement. */
 export async function judgeNow(
   form: UseFormReturn<RuleForm>,
-  kept: ConditionTree | null,
-  unitOf: UnitOf,
+  factOf: FactOf,
   preferences: Preferences,
 ): Promise<RuleBody | null> {
   const { judge } = await judgeModule();
-  return judge(form.getValues(), kept, unitOf, preferences).body;
+  return judge(form.getValues(), factOf, preferences).body;
 }
 
 function nested(errors: Record<string, string>): Record<string, unknown> {
@@ -48,14 +44,13 @@ function nested(errors: Record<string, string>): Record<string, unknown> {
 export function useTypedBody(
   form: UseFormReturn<RuleForm>,
   first: RuleBody,
-  kept: ConditionTree | null,
-  unitOf: UnitOf,
+  factOf: FactOf,
   preferences: Preferences,
 ): { body: RuleBody; isWhole: boolean } {
   const [typed, setTyped] = useState({ body: first, isWhole: true });
   const { isSubmitted } = form.formState;
-  const latest = useRef({ kept, unitOf, preferences, isSubmitted });
-  latest.current = { kept, unitOf, preferences, isSubmitted };
+  const latest = useRef({ factOf, preferences, isSubmitted });
+  latest.current = { factOf, preferences, isSubmitted };
   useEffect(() => {
     let isGone = false;
     const look = async () => {
@@ -63,7 +58,7 @@ export function useTypedBody(
       const at = latest.current;
       // the library judges only the field that changed, but a band is judged by both its ends
       if (at.isSubmitted) void form.trigger();
-      const { body } = judge(form.getValues(), at.kept, at.unitOf, at.preferences);
+      const { body } = judge(form.getValues(), at.factOf, at.preferences);
       if (!isGone)
         setTyped((before) =>
           body === null ? { body: before.body, isWhole: false } : { body, isWhole: true },
@@ -79,17 +74,17 @@ export function useTypedBody(
 }
 
 /** Things to look at in what is typed, asked a moment after the last key. Null until the first answer. */
-export function useFindings(ruleId: string, body: RuleBody, isAllowed: boolean): Finding[] | null {
-  const [findings, setFindings] = useState<Finding[] | null>(null);
+export function useFindings(ruleId: string, body: RuleBody, isAllowed: boolean): Findings | null {
+  const [findings, setFindings] = useState<Findings | null>(null);
   const text = JSON.stringify(body);
   useEffect(() => {
     if (!isAllowed) return;
     let isGone = false;
     const timer = setTimeout(() => {
-      void send<{ findings: Finding[] }>('POST', `/rules/${ruleId}/check`, {
+      void send<Findings>('POST', `/rules/${ruleId}/check`, {
         body: JSON.parse(text) as unknown,
       }).then((answer) => {
-        if (!isGone && answer.ok) setFindings(answer.value.findings);
+        if (!isGone && answer.ok) setFindings(answer.value);
       });
     }, 700);
     return () => {

@@ -1,9 +1,10 @@
 'use client';
 import { useWatch } from 'react-hook-form';
 import { Checkbox } from '@/components/ui/check';
-import { NumberField, Select, TextField } from '@/components/ui/field';
+import { NumberField, Select } from '@/components/ui/field';
 import { monthName } from '@/lib/wording/rule-when';
 import { useRuleForm } from './context';
+import { DayTimeField } from './day-time-field';
 import { Section } from './section';
 
 function DayOfYear({ which }: { which: 'From' | 'To' }) {
@@ -45,14 +46,15 @@ export function WhenSection({ zone }: { zone: string }) {
       ) : null}
       <Checkbox label="Only at some hours of the day" {...form.register('isDaily')} />
       {isDaily ? (
-        <div className="grid grid-cols-2 items-start gap-3">
-          <TextField label="From" error={form.errorOf('hoursFrom')} {...form.register('hoursFrom')} />
-          <TextField label="To" error={form.errorOf('hoursTo')} {...form.register('hoursTo')} />
+        <div className="flex flex-col gap-3">
+          <DayTimeField name="hoursFrom" label="From" />
+          <DayTimeField name="hoursTo" label="To" />
         </div>
       ) : null}
       {isSeasonal || isDaily ? (
         <p className="text-[0.85rem] text-soft">
-          By the clock of {zone}. Out of season or hours the band waits; frost help does not.
+          By the clock and the sun of {zone}; a season may run over new year, hours over midnight. Out of
+          season or hours the band waits; frost help does not.
         </p>
       ) : null}
     </Section>

@@ -5,19 +5,20 @@ import { Button } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
 import { ChannelRow } from './channel-row';
 import { useHouse } from './live-house';
+import { showWhy, useWhyAddress } from './why-address';
 
 // dialogs cost script that a page which is only read need not load
 const AllOffDialog = dynamic(() => import('./all-off-dialog').then((file) => file.AllOffDialog));
 const HandDialog = dynamic(() => import('./hand-dialog').then((file) => file.HandDialog));
 const WhySheet = dynamic(() => import('./why-sheet').then((file) => file.WhySheet));
 
-type Asked =
-  { what: 'all-off' } | { what: 'why'; channel: string } | { what: 'on' | 'off' | 'auto'; channel: string };
+type Asked = { what: 'all-off' } | { what: 'on' | 'off' | 'auto'; channel: string };
 
 /** Each load: how it stands, why, and hand / off / auto. */
 export function Channels() {
   const { channels, state, allowed, link, controlRuns } = useHouse();
   const [asked, setAsked] = useState<Asked | null>(null);
+  const why = useWhyAddress();
   const close = () => setAsked(null);
   const mayHand = allowed.includes('channel.hand');
   const bar = !mayHand
@@ -51,7 +52,7 @@ export function Channels() {
               channel={channel}
               standing={standing}
               barred={bar === null ? undefined : 'no-hand'}
-              onWhy={() => setAsked({ what: 'why', channel: channel.key })}
+              onWhy={() => showWhy({ channel: channel.key, at: null })}
               onChoose={(choice) => setAsked({ what: choice, channel: channel.key })}
             />
           );
@@ -60,10 +61,9 @@ export function Channels() {
       {channels.length === 0 ? (
         <p className="border-t border-line py-3 text-soft">No channel is wired yet: begin under Wiring.</p>
       ) : null}
+      {why === null ? null : <WhySheet channelKey={why.channel} at={why.at} />}
       {asked === null ? null : asked.what === 'all-off' ? (
         <AllOffDialog onClose={close} />
-      ) : asked.what === 'why' ? (
-        <WhySheet channelKey={asked.channel} onClose={close} />
       ) : (
         <HandDialog
           key={asked.channel + asked.what}

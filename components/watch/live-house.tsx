@@ -11,7 +11,7 @@ import { joinFeed } from './live-feed';
 import { useRedraw } from './redraw';
 
 /** What the browser needs of the view: all but the lines and strips, which the server draws. */
-export type LiveStart = Omit<WatchView, 'lines' | 'strips' | 'nights' | 'others'> & {
+export type LiveStart = Omit<WatchView, 'lines' | 'strips' | 'nights' | 'alone' | 'others'> & {
   preferences: Preferences;
   allowed: string[];
   coldest: { value: number; at: number } | null;

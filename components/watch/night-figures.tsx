@@ -6,17 +6,22 @@ import type { WatchSource } from '@/lib/schema/watch-view';
 import { count, energy, temperature, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { clock, duration } from '@/lib/units/time';
+import { causeWords } from '@/lib/wording/quality';
+import type { NightDoubt } from './standing';
 
 /** This night so far, from the very rows that Duty shows; a figure that cannot be had says why. */
 export function NightFigures({
   house,
   sources,
   nights,
+  doubts,
   preferences,
 }: {
   house: { slug: string; zone: string; frostLimit: number | null };
   sources: WatchSource[];
   nights: NightSummary[];
+  /** Points that were in doubt this night and are good again. */
+  doubts: NightDoubt[];
   preferences: Preferences;
 }) {
   const nameOf = (slug: string) => sources.find((source) => source.slug === slug)?.name ?? slug;
@@ -59,6 +64,11 @@ export function NightFigures({
             value: lowest === null ? UNKNOWN : duration(under),
           },
         ]),
+    ...doubts.map(({ name, why, from, to }) => ({
+      name: `${name}: ${causeWords(why)}`,
+      value: `${clock(from, house.zone, preferences)} to ${clock(to, house.zone, preferences)}`,
+      note: 'good again',
+    })),
   ];
   return (
     <Panel

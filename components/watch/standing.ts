@@ -3,6 +3,12 @@ import type { WatchBand, WatchChannel, WatchSource } from '@/lib/schema/watch-vi
 import type { HouseState } from '@/lib/schema/house-state';
 import type { HouseStanding } from '@/lib/wording/watch-standing';
 
+/** Of a bad cable a night has dozens; the wiring page tells each point's latest. */
+const DOUBTS_SHOWN = 4;
+const MINUTE_MS = 60_000;
+/** So many at once are a line or a node, not a probe. */
+const MANY = 3;
+
 interface Parts {
   house: { name: string; frostLimit: number | null };
   channels: WatchChannel[];
@@ -43,4 +49,35 @@ export function standingOf(parts: Parts, state: HouseState, now: number): HouseS
     }),
     coldest: parts.coldest,
   };
+}
+
+export interface NightDoubt {
+  name: string;
+  why: string | null;
+  /** Epoch ms. */
+  from: number;
+  to: number;
+}
+
+/** Doubts of a minute and more that were over since `from`, the latest first; what fell silent together is told together. */
+export function pastDoubts(state: HouseState | null, from: number): NightDoubt[] {
+  const doubts = (state?.points ?? [])
+    .flatMap(({ name, quality, lastDoubt }): NightDoubt[] => {
+      if (quality !== 'good' || !lastDoubt) return [];
+      return [{ name, why: lastDoubt.why, from: Date.parse(lastDoubt.from), to: Date.parse(lastDoubt.to) }];
+    })
+    .filter((doubt) => doubt.to >= from && doubt.to - doubt.from >= MINUTE_MS);
+  const together = new Map<string, NightDoubt[]>();
+  for (const doubt of doubts) {
+    const key = `${doubt.why} ${Math.floor(doubt.to / MINUTE_MS)}`;
+    together.set(key, [...(together.get(key) ?? []), doubt]);
+  }
+  return [...together.values()]
+    .flatMap((group) => {
+      const [first] = group;
+      if (first === undefined || group.length < MANY) return group;
+      return [{ ...first, name: `${group.length} points`, from: Math.min(...group.map((one) => one.from)) }];
+    })
+    .sort((one, other) => other.to - one.to)
+    .slice(0, DOUBTS_SHOWN);
 }

@@ -6,13 +6,15 @@ import { Empty } from '@/components/ui/states';
 import type { WatchView } from '@/lib/schema/watch-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { Alarms } from './alarms';
+import { AloneNotice } from './alone-notice';
 import { Channels } from './channels';
 import { HouseSentence } from './house-sentence';
 import { LinkNotice } from './link-notice';
 import { LiveHouseProvider } from './live-house';
 import { NightFigures } from './night-figures';
 import { OtherHouses } from './other-houses';
-import { mainBand } from './standing';
+import { mainBand, pastDoubts } from './standing';
+import { WhyChart } from './why-chart';
 import { YardDrawing } from './yard-drawing';
 
 /** How the house stands now: alarms, the sentence, the night, the yard, each load and why. */
@@ -25,7 +27,7 @@ export function Watch({
   preferences: Preferences;
   allowed: string[];
 }) {
-  const { lines, strips, nights, others, ...start } = view;
+  const { lines, strips, nights, alone, others, ...start } = view;
   const cold = nights.flatMap((night) => (night.outdoorsLowest === null ? [] : [night.outdoorsLowest]));
   const coldest = cold.reduce<(typeof cold)[number] | null>(
     (low, one) => (low === null || one.value < low.value ? one : low),
@@ -37,6 +39,12 @@ export function Watch({
         <div className="flex flex-col gap-2 empty:hidden">
           <LinkNotice />
           <Alarms />
+          <AloneNotice
+            alone={alone}
+            zone={view.house.zone}
+            many={(view.state?.nodes.length ?? 0) > 1}
+            preferences={preferences}
+          />
         </div>
         <HouseSentence />
         {view.state === null ? (
@@ -45,18 +53,20 @@ export function Watch({
         <div className="grid items-start gap-5 xl:grid-cols-[minmax(0,13fr)_minmax(0,6fr)]">
           <div className="flex min-w-0 flex-col gap-5">
             <Panel title="Noon to noon" note={<StripKey id="key" />}>
-              <NoonToNoon
-                preferences={preferences}
-                chart={{
-                  ...{
-                    night: view.night,
-                    now: view.now,
-                    zone: view.house.zone,
-                    frostLimit: view.house.frostLimit,
-                  },
-                  ...{ lines, strips, bands: view.bands, main: mainBand(view)?.point ?? null },
-                }}
-              />
+              <WhyChart night={view.night} now={view.now}>
+                <NoonToNoon
+                  preferences={preferences}
+                  chart={{
+                    ...{
+                      night: view.night,
+                      now: view.now,
+                      zone: view.house.zone,
+                      frostLimit: view.house.frostLimit,
+                    },
+                    ...{ lines, strips, bands: view.bands, main: mainBand(view)?.point ?? null },
+                  }}
+                />
+              </WhyChart>
             </Panel>
             <Channels />
           </div>
@@ -66,6 +76,7 @@ export function Watch({
               house={view.house}
               sources={view.sources}
               nights={nights}
+              doubts={pastDoubts(view.state, view.night.from)}
               preferences={preferences}
             />
             <OtherHouses cards={others} now={view.now} preferences={preferences} />

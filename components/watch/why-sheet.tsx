@@ -1,102 +1,71 @@
 'use client';
 import { useQuery } from '@tanstack/react-query';
-import Link from 'next/link';
 import { Dialog } from '@/components/ui/dialog';
 import { Skeleton } from '@/components/ui/states';
-import { becauseWords } from '@/lib/wording/because';
-import { stateWord } from '@/lib/wording/channel-state';
-import { becauseInstant } from '@/lib/wording/instants';
-import { ladderLines, nextWords, type LadderLine, type Step } from '@/lib/wording/ladder';
-import { timeWords } from '@/lib/wording/scene';
+import type { Why } from '@/lib/schema/running';
+import { whyTitle } from '@/lib/wording/why';
 import { useHouse } from './live-house';
+import { showWhy } from './why-address';
+import { WhyBody } from './why-body';
+import { WhyTime } from './why-time';
 
-interface Why {
-  at: string;
-  state: 'on' | 'off';
-  claim: string;
-  ladder: Step[];
-  next: unknown[];
-  version: number | null;
+/** Nothing was decided for this channel so early. */
+class TooEarly extends Error {}
+
+async function askWhy(path: string): Promise<Why> {
+  const response = await fetch(`/api/v1${path}`);
+  if (response.status === 404) throw new TooEarly();
+  if (!response.ok) throw new Error(`why answered ${response.status}`);
+  return (await response.json()) as Why;
 }
 
-/** The ladder that decided, from the top to the claim that spoke, and what would come next. */
-export function WhySheet({ channelKey, onClose }: { channelKey: string; onClose: () => void }) {
+/** Why a load is, or was, as it is: the reason, what comes next, the whole ladder, and any other moment. */
+export function WhySheet({ channelKey, at }: { channelKey: string; at: number | null }) {
   const { channels, state, house, scene } = useHouse();
   const channel = channels.find((one) => one.key === channelKey);
   const standing = state?.channels.find((one) => one.key === channelKey);
-  const { data, isError } = useQuery<Why>({
-    // the claim is part of the key: another decision is another question
-    queryKey: ['why', house.slug, channelKey, standing?.claim, standing?.state],
-    queryFn: async () => {
-      const response = await fetch(`/api/v1/houses/${house.slug}/channels/${channel?.number ?? 0}/why`);
-      if (!response.ok) throw new Error(`why answered ${response.status}`);
-      return (await response.json()) as Why;
-    },
+  const number = channel?.number ?? 0;
+  const moment = at === null ? '' : `?at=${encodeURIComponent(new Date(at).toISOString())}`;
+  const { data, error, isFetching } = useQuery<Why>({
+    // of now, the claim is part of the key: another decision is another question
+    queryKey: ['why', house.slug, channelKey, ...(at === null ? [standing?.claim, standing?.state] : [at])],
+    queryFn: () => askWhy(`/houses/${house.slug}/channels/${number}/why${moment}`),
+    // another moment is shown in the place of the one before, which does not blink away meanwhile
+    placeholderData: (before) => before,
   });
-  if (channel === undefined || standing === undefined) return null;
-  const next = data === undefined ? [] : nextWords(data.next, scene);
+  if (channel === undefined) return null;
+  const told = data ?? (at === null ? standing : undefined);
   return (
     <Dialog
       open
       as="sheet"
-      onOpenChange={(open) => (open ? undefined : onClose())}
-      title={`Why ${channel.label} is ${stateWord(standing, channel.loadKind).toLowerCase()}`}
-      description={becauseWords(standing.claim, standing.because, scene)}
+      onOpenChange={(open) => (open ? undefined : showWhy(null, 'replace'))}
+      title={
+        told === undefined || error !== null
+          ? `Why: ${channel.label}`
+          : whyTitle({ channel, state: told.state, claim: told.claim, at }, scene)
+      }
     >
-      {isError ? (
-        <p role="alert" className="font-semibold text-alarm">
-          The reasons could not be fetched. The channel stands as shown; close this and try again.
-        </p>
-      ) : data === undefined ? (
-        <Skeleton className="h-72" />
-      ) : (
-        <>
-          <section aria-label="What comes next">
-            <h3 className="font-semibold">What comes next</h3>
-            {next.length === 0 ? (
-              <p className="text-soft">Nothing by the clock; the next reading may change it.</p>
-            ) : (
-              <ul className="list-disc pl-5">
-                {next.map((line) => (
-                  <li key={line}>{line}</li>
-                ))}
-              </ul>
-            )}
-          </section>
-          <section aria-label="The ladder">
-            <h3 className="font-semibold">What was asked, from the top</h3>
-            <p className="mb-2 text-[0.9rem] text-soft">The first that speaks decides.</p>
-            <Ladder lines={ladderLines(data.ladder, scene)} />
-          </section>
-          <p className="text-[0.9rem] text-soft">
-            {data.version === null ? 'No rule in force.' : `By version ${data.version} of its rule.`} As of{' '}
-            {timeWords(becauseInstant(data.at), scene)}.{' '}
-            <Link href={`/${house.slug}/rules`} className="underline underline-offset-4">
-              To the rules
-            </Link>
+      <div className="flex flex-col gap-5" aria-busy={isFetching}>
+        {error instanceof TooEarly ? (
+          <p className="text-lg">Nothing is known of that time: this channel was first decided later.</p>
+        ) : error !== null ? (
+          <p role="alert" className="font-semibold text-alarm">
+            The reasons could not be fetched. The channel stands as shown; close this and try again.
           </p>
-        </>
-      )}
-    </Dialog>
-  );
-}
-
-function Ladder({ lines }: { lines: LadderLine[] }) {
-  return (
-    <ol className="border-y border-line">
-      {lines.map((line) =>
-        line.decides ? (
-          <li key={line.claim} className="-mx-2 rounded-md border-l-4 border-ember bg-faint p-2">
-            <span className="font-semibold">{line.title}</span>
-            <span className="sr-only"> decides</span>
-            <span className="block">{line.words}</span>
-          </li>
+        ) : data === undefined ? (
+          <Skeleton className="h-72" />
         ) : (
-          <li key={line.claim} className="py-1 text-[0.9rem] text-soft">
-            <span className="text-ink">{line.title}.</span> {line.words}
-          </li>
-        ),
-      )}
-    </ol>
+          <WhyBody why={data} at={at} />
+        )}
+        <WhyTime
+          key={at ?? 'now'}
+          at={at}
+          earlier={data?.earlier ?? null}
+          later={data?.later ?? null}
+          onAsk={(moment_) => showWhy({ channel: channelKey, at: moment_ }, 'replace')}
+        />
+      </div>
+    </Dialog>
   );
 }

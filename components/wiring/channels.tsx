@@ -4,7 +4,8 @@ import { Phrases } from '@/components/ui/sentence';
 import { Empty } from '@/components/ui/states';
 import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import { day } from '@/lib/units/time';
-import type { Channel, Lockout, Source } from '@/lib/schema/yard-view';
+import type { Channel, Lockout, Point, Source } from '@/lib/schema/yard-view';
+import type { Preferences } from '@/lib/units/preferences';
 import { exactly } from '@/lib/wording/settings';
 import {
   SHARE_NOTE,
@@ -17,6 +18,7 @@ import {
 } from '@/lib/wording/wiring-load';
 import { MAINS_CAUTION } from '@/lib/wording/wiring-parts';
 import { AddButton, ChangeButton } from './editing';
+import { FallbackLine, type Alone } from './fallback-line';
 import { LockOutButton } from './lock-out';
 
 const columns = [
@@ -30,17 +32,27 @@ const columns = [
   { key: 'act', label: 'Change', labelHidden: true },
 ];
 
+/** What a channel's fallback is read with. */
+interface Reading {
+  alone: Alone;
+  points: Point[];
+  zone: string;
+  /** Epoch ms of app time. */
+  now: number;
+  preferences: Preferences;
+}
+
 function ChannelRow({
   channel,
   source,
   lockout,
   zone,
   house,
-}: {
+  ...reading
+}: Reading & {
   channel: Channel;
   source: Source | undefined;
   lockout: Lockout | undefined;
-  zone: string;
   house: string;
 }) {
   const fit = contactFit(channel.load);
@@ -55,6 +67,7 @@ function ChannelRow({
           {channel.frostHelp ? ', helps against frost' : ''}. At least {exactly(channel.minOn)} on,{' '}
           {exactly(channel.minOff)} off.
         </span>
+        <FallbackLine channel={channel} zone={zone} {...reading} />
         {lockout === undefined ? null : (
           <span className="block text-[0.9rem] text-warn">Locked out: {lockout.why}</span>
         )}
@@ -104,14 +117,13 @@ export function Channels({
   channels,
   sources,
   lockouts,
-  zone,
   house,
   hasNode,
-}: {
+  ...reading
+}: Reading & {
   channels: Channel[];
   sources: Source[];
   lockouts: Lockout[];
-  zone: string;
   house: string;
   hasNode: boolean;
 }) {
@@ -135,8 +147,8 @@ export function Channels({
               channel={channel}
               source={sources.find((one) => one.slug === channel.source)}
               lockout={lockouts.find((one) => one.channel === channel.key && one.removedAt === null)}
-              zone={zone}
               house={house}
+              {...reading}
             />
           ))}
         </Table>

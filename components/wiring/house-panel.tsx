@@ -2,6 +2,7 @@ import { ButtonLink } from '@/components/ui/button';
 import { Figures, Panel } from '@/components/ui/panel';
 import type { House } from '@/lib/schema/yard-view';
 import { decimal, length, temperature } from '@/lib/units/format';
+import { day } from '@/lib/units/time';
 import type { Preferences } from '@/lib/units/preferences';
 import { LAST_RESORT_CAUTION } from '@/lib/wording/wiring-parts';
 import { ChangeButton } from './editing';
@@ -47,6 +48,21 @@ export function HousePanel({
                 temperature(house.frostAlarm, preferences)
               ),
           },
+          {
+            name: 'Thermostat of last resort',
+            value:
+              house.lastResort === null ? (
+                <span className="font-sans text-warn">none</span>
+              ) : (
+                `below ${temperature(house.lastResort.below, preferences)}`
+              ),
+            note:
+              house.lastResort === null
+                ? undefined
+                : house.lastResort.provedOn === null
+                  ? 'nobody saw it work yet'
+                  : `seen to work on ${dayOf(house.lastResort.provedOn)}`,
+          },
         ]}
       />
       <p className="mt-2 border-l-4 border-warn pl-3 text-[0.9rem] text-soft">{LAST_RESORT_CAUTION}</p>
@@ -58,3 +74,6 @@ export function HousePanel({
     </Panel>
   );
 }
+
+/** A date alone, which is the same day in every zone. */
+const dayOf = (date: string) => day(Date.parse(`${date}T12:00:00Z`), 'UTC');

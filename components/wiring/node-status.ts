@@ -1,3 +1,5 @@
+import type { CanFallback } from '@/lib/wording/alone';
+
 /** What the worker's link keeps of a node, read with care: an older worker may have kept less. */
 export interface NodeStatus {
   firmware: string | null;
@@ -6,6 +8,8 @@ export interface NodeStatus {
   clockErrorS: number | null;
   trips: number | null;
   refused: number | null;
+  /** Whether it can run fallbacks, as its hello said. */
+  canFallback: CanFallback;
   /** Why, the newest first. */
   refusals: { name: string; why: string }[];
 }
@@ -22,6 +26,7 @@ export function nodeStatus(kept: Record<string, unknown> | undefined): NodeStatu
     clockErrorS: number(kept?.clockErrorS),
     trips: number(kept?.trips),
     refused: number(kept?.refused),
+    canFallback: !Array.isArray(kept?.can) ? 'not-told' : kept.can.includes('fallback') ? 'can' : 'cannot',
     refusals: (Array.isArray(kept?.refusals) ? kept.refusals : []).flatMap(refusal),
   };
 }
@@ -30,4 +35,18 @@ function refusal(value: unknown): NodeStatus['refusals'] {
   if (typeof value !== 'object' || value === null) return [];
   const { name, why } = value as Record<string, unknown>;
   return typeof name === 'string' && typeof why === 'string' ? [{ name, why }] : [];
+}
+
+/** Whether each node can run fallbacks, by its key. */
+export function canFallback(
+  nodes: readonly { id: string; key: string; kind: string }[],
+  kept: Record<string, Record<string, unknown>>,
+): Record<string, CanFallback> {
+  return Object.fromEntries(
+    nodes.map(({ id, key, kind }) => {
+      // a board on a bus, or a node that only posts, keeps nothing of ours
+      const can = kind === 'socket' || kind === 'mqtt' ? nodeStatus(kept[id]).canFallback : 'cannot';
+      return [key, can];
+    }),
+  );
 }

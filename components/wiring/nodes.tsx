@@ -77,6 +77,7 @@ export function Nodes({
                   <span className="font-mono">{node.key}</span>
                   <span className="block text-[0.85rem] font-normal text-soft">
                     {NODE_WORDS[node.kind]}; {node.channels} relays, reports every {node.reportEvery}&nbsp;s
+                    {status.canFallback === 'can' ? '; can keep a house by itself' : ''}
                   </span>
                 </RowHead>
                 <Cell className="whitespace-nowrap">

@@ -6,10 +6,10 @@ import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { qualityWords } from '@/lib/wording/quality';
 import { exactly } from '@/lib/wording/settings';
 import { AddButton, ChangeButton } from './editing';
 import { roleWords } from './forms/options';
+import { PointDoubt } from './point-doubt';
 
 const columns = [
   { key: 'point', label: 'Point' },
@@ -33,6 +33,7 @@ function PointRow({
   now,
   reportEvery,
   appNow,
+  zone,
   preferences,
 }: {
   point: Point;
@@ -40,18 +41,11 @@ function PointRow({
   reportEvery: number | undefined;
   /** Epoch ms. */
   appNow: number;
+  zone: string;
   preferences: Preferences;
 }) {
   const range = (value: number | null) => (value === null ? '' : pointValue(value, point.unit, preferences));
   const stale = point.staleAfter ?? (reportEvery === undefined ? null : reportEvery * 3);
-  const isOld =
-    stale !== null && now !== undefined && now.at !== null && appNow - Date.parse(now.at) > stale * 1000;
-  // the worker says so itself; where it stands still, its last word has grown old too
-  const doubt = isOld
-    ? qualityWords('bad', 'silent')
-    : now === undefined
-      ? null
-      : qualityWords(now.quality, now.why);
   return (
     <Row>
       <RowHead className="min-w-40">
@@ -66,7 +60,9 @@ function PointRow({
         ) : (
           pointValue(now.value, point.unit, preferences)
         )}
-        {doubt === null ? null : <span className="block font-sans text-[0.85rem] text-warn">{doubt}</span>}
+        {now === undefined ? null : (
+          <PointDoubt point={now} staleS={stale} now={appNow} {...{ zone, preferences }} />
+        )}
       </Cell>
       <Cell className="whitespace-nowrap">
         {now?.at === null || now === undefined ? (
@@ -106,6 +102,7 @@ export function Points({
   states,
   nodes,
   now,
+  zone,
   preferences,
 }: {
   points: Point[];
@@ -113,6 +110,7 @@ export function Points({
   nodes: { key: string; reportEvery: number }[];
   /** Epoch ms of app time. */
   now: number;
+  zone: string;
   preferences: Preferences;
 }) {
   return (
@@ -134,6 +132,7 @@ export function Points({
               now={states.find((one) => one.key === point.key)}
               reportEvery={nodes.find((one) => one.key === point.node)?.reportEvery}
               appNow={now}
+              zone={zone}
               preferences={preferences}
             />
           ))}

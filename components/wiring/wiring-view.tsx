@@ -8,6 +8,7 @@ import { WiringEditing } from './editing';
 import type { Yard } from './forms/options';
 import { HousePanel } from './house-panel';
 import { FormerLockOuts, StandingLockOuts } from './lock-outs';
+import { canFallback } from './node-status';
 import { Nodes } from './nodes';
 import { Points } from './points';
 import { RelayBoard } from './relay-board';
@@ -15,6 +16,7 @@ import { Interlocks, Sources } from './sources';
 
 export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;
+  ranAlone: Record<string, number>;
   state: HouseState | null;
 }
 
@@ -33,15 +35,19 @@ export function WiringView({
   preferences: Preferences;
   now: number;
 }) {
-  const { nodeStatus, state, ...yard } = data;
+  const { nodeStatus, ranAlone, state, ...yard } = data;
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
+  const can = canFallback(nodes, nodeStatus);
   const isLocked = (key: string) => lockouts.some((one) => one.channel === key && one.removedAt === null);
   const standing = {
     nodes: nodes.map((node) => ({
       key: node.key,
       lastHeardAt: node.lastHeardAt === null ? null : Date.parse(node.lastHeardAt),
       isRevoked: node.revokedAt !== null,
+      keeps: channels
+        .filter((one) => one.node === node.key && one.fallback !== null && can[node.key] === 'can')
+        .map((one) => one.label),
     })),
     points: points.map((point) => ({
       name: point.name,
@@ -83,18 +89,13 @@ export function WiringView({
           channels={channels}
           sources={sources}
           lockouts={lockouts}
-          zone={zone}
           house={house.slug}
+          alone={{ can, ran: ranAlone }}
+          {...{ points, zone, now, preferences }}
           hasNode={nodes.some((node) => node.channels > 0)}
         />
         <Nodes nodes={nodes} kept={nodeStatus} zone={zone} now={now} preferences={preferences} />
-        <Points
-          points={points}
-          states={state?.points ?? []}
-          nodes={nodes}
-          now={now}
-          preferences={preferences}
-        />
+        <Points points={points} states={state?.points ?? []} nodes={nodes} {...{ now, zone, preferences }} />
         <div className="grid grid-cols-1 gap-5 xl:grid-cols-2">
           <Sources
             sources={sources}

@@ -5,10 +5,12 @@ import { switching } from '@/db/schema/running';
 import { alarm } from '@/db/schema/watch';
 import type { ChannelRecord } from '@/lib/analysis/spans';
 import { CLAIMS, type Claim } from '@/lib/control/types';
-import { listDecisions, listRelayReports } from './running';
+import { listDecisions } from './decision';
+import { listRelayReports } from './running';
 
 interface RecordedChannel {
   id: string;
+  key: string;
   nodeKey: string;
   /** What its load falls to without a coil. */
   safe: 'on' | 'off';
@@ -18,7 +20,7 @@ function isClaim(value: string): value is Claim {
   return (CLAIMS as readonly string[]).includes(value);
 }
 
-/** Decisions, relays' reports, lease trips, and when nodes were lost, by the channel's id; `from` to before `to`, epoch ms. */
+/** Decisions, relays' reports, what nodes did by themselves, when they were lost and loads stood, by the channel's id; `from` to before `to`, epoch ms. */
 export async function recordsOf(
   holding: Holding,
   houseId: string,
@@ -30,7 +32,7 @@ export async function recordsOf(
   const decisions = await listDecisions(holding, ids, from, to);
   const reports = await listRelayReports(holding, ids, from, to);
   const trips = await tripsOf(holding, ids, from, to);
-  const lost = await nodesLost(holding, houseId, from, to);
+  const away = await alarmTimes(holding, houseId, from, to);
   const mine = <T extends { channelId: string }>(rows: readonly T[], id: string) =>
     rows.filter((row) => row.channelId === id);
   return new Map(
@@ -42,7 +44,8 @@ export async function recordsOf(
         ),
         reports: mine(reports, one.id),
         trips: mine(trips, one.id),
-        silences: lost.filter((silence) => silence.node === one.nodeKey),
+        silences: away.filter(({ kind, about }) => kind === 'node-lost' && about.node === one.nodeKey),
+        stood: away.filter(({ kind, about }) => kind === 'fan-standing' && about.channel === one.key),
         safe: one.safe,
       },
     ]),
@@ -74,23 +77,24 @@ async function tripsOf(holding: Holding, ids: string[], from: number, to: number
   return [...before, ...during].map((row) => ({ ...row, at: row.at.getTime() }));
 }
 
-/** When nodes of a house were lost: what the alarms of their links say. */
-async function nodesLost(holding: Holding, houseId: string, from: number, to: number) {
+/** When nodes of a house were lost, and loads stood though they were ordered on: what the alarms of it say. */
+async function alarmTimes(holding: Holding, houseId: string, from: number, to: number) {
   const rows = await holding.db
-    .select({ about: alarm.about, raisedAt: alarm.raisedAt, clearedAt: alarm.clearedAt })
+    .select({ kind: alarm.kind, about: alarm.about, raisedAt: alarm.raisedAt, clearedAt: alarm.clearedAt })
     .from(alarm)
     .where(
       and(
         eq(alarm.holdingId, holding.id),
         eq(alarm.houseId, houseId),
-        eq(alarm.kind, 'node-lost'),
+        inArray(alarm.kind, ['node-lost', 'fan-standing']),
         lt(alarm.raisedAt, new Date(to)),
         or(isNull(alarm.clearedAt), gte(alarm.clearedAt, new Date(from))),
       ),
     )
     .orderBy(asc(alarm.raisedAt));
   return rows.map((row) => ({
-    node: row.about.node ?? '',
+    kind: row.kind,
+    about: row.about,
     from: row.raisedAt.getTime(),
     to: row.clearedAt?.getTime() ?? null,
   }));

@@ -9,12 +9,13 @@ import type { WatchBand, WatchLine, WatchLoop, WatchStrip } from '@/lib/schema/w
 import type { Alarm } from './alarm';
 import { alarmNames, type AlarmNames } from './alarms-page';
 import { loadHouse } from './plan';
-import { listDecisions } from './running';
+import { listDecisions } from './decision';
 import { readBands } from './watch-bands';
 import { readLines, readStrips, whileRunning } from './watch-lines';
 
 export interface OpenedDecision {
   channel: string;
+  key: string;
   at: number;
   state: State;
   claim: string;
@@ -55,6 +56,7 @@ export async function openNight(
   const strips = await readStrips(holding, record, night, now);
   const lines = await readLines(holding, record, night, now, null);
   const labels = new Map(record.channels.map(({ id, label }) => [id, label]));
+  const keys = new Map(record.channels.map(({ id, key }) => [id, key]));
   const drawing = new Set(summary.channels.map((one) => one.number));
   const ids = record.channels.filter((one) => drawing.has(one.number)).map((one) => one.id);
   const decisions = await listDecisions(holding, ids, summary.from, summary.to);
@@ -63,7 +65,11 @@ export async function openNight(
     lines: whileRunning(lines, loopsOf(record.config.loops), strips),
     strips,
     bands: await readBands(holding, house, night, labels),
-    decisions: decisions.map(({ channelId, ...rest }) => ({ ...rest, channel: labels.get(channelId) ?? '' })),
+    decisions: decisions.map(({ channelId, ...rest }) => ({
+      ...rest,
+      channel: labels.get(channelId) ?? '',
+      key: keys.get(channelId) ?? '',
+    })),
     alarms: await alarmsIn(holding, house.id, summary.from, summary.to),
     entries: await entriesIn(holding, source.id, summary.from, summary.to),
     names: await alarmNames(holding, house.id),

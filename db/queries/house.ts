@@ -13,8 +13,12 @@ import { freeSlug, NO_HOUSE } from './slug';
 type Row = typeof house.$inferSelect;
 
 function toHouse(row: Row): House {
-  const { id, revision, slug, name, zone, latitude, longitude, altitude, frostLimit, frostAlarm } = row;
-  return { id, revision, slug, name, zone, latitude, longitude, altitude, frostLimit, frostAlarm };
+  const { id, revision, slug, name, zone, latitude, longitude, altitude } = row;
+  const { frostLimit, frostAlarm, lastResort } = row;
+  return {
+    ...{ id, revision, slug, name, zone, latitude, longitude, altitude },
+    ...{ frostLimit, frostAlarm, lastResort },
+  };
 }
 
 export async function listHouses(holding: Holding): Promise<House[]> {

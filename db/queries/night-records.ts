@@ -32,6 +32,7 @@ interface PointOfNights {
 
 interface ChannelOfNights extends Omit<NightChannel, 'record'> {
   id: string;
+  key: string;
   /** Null for what draws on nothing. */
   sourceId: string | null;
   nodeKey: string;
@@ -98,6 +99,7 @@ export async function yardOfNights(holding: Holding, houseId: string): Promise<Y
       const [intake, back] = [keyOf(own?.intakePointId ?? null), keyOf(own?.returnPointId ?? null)];
       return {
         id: row.id,
+        key: row.key,
         sourceId: row.sourceId,
         number: row.number,
         label: row.label,

@@ -4,6 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { calibration, point } from '@/db/schema/yard';
+import { needsCycle } from '@/lib/control/interlocks';
 import type { PointCreate } from '@/lib/schema/yard';
 import { Point } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
@@ -114,9 +115,11 @@ export async function amendPoint(
   given: Given,
   change: { by: string; now: Date },
 ): Promise<Point> {
+  const next = await columns(holding, houseId, given);
+  await refuseRing(holding, houseId, before.key, next.derived?.points ?? []);
   await holding.db
     .update(point)
-    .set({ ...(await columns(holding, houseId, given)), revision: sql`${point.revision} + 1` })
+    .set({ ...next, revision: sql`${point.revision} + 1` })
     .where(and(eq(point.holdingId, holding.id), eq(point.id, before.id)));
   if (given.key !== before.key) await renamePoint(holding, houseId, before.key, given.key);
   if (given.offset !== before.offset || given.gain !== before.gain) {
@@ -124,6 +127,28 @@ export async function amendPoint(
   }
   await touchPlan(holding, houseId);
   return found(holding, houseId, before.id);
+}
+
+/**
+ * A new point names only points that were there before it, so a ring can only be closed by an amended one.
+ * @throws Refusal where the point would be derived from itself, by whatever way round
+ */
+async function refuseRing(
+  holding: Holding,
+  houseId: string,
+  key: string,
+  inputs: readonly string[],
+): Promise<void> {
+  const others = (await listPoints(holding, houseId)).filter((one) => one.key !== key);
+  const ring = needsCycle(
+    [...others.map((one) => ({ key: one.key, inputs: one.derived?.points ?? [] })), { key, inputs }].flatMap(
+      (one) => one.inputs.map((other) => ({ channel: one.key, other })),
+    ),
+  );
+  if (ring.length > 0) {
+    const told = [...ring, ring[0] ?? key].join(' from ');
+    throw new Refusal('derived.points', `Each would be derived from the next: ${told}. Take one out.`);
+  }
 }
 
 export async function removePoint(holding: Holding, houseId: string, gone: Point, now: Date): Promise<void> {

@@ -2,10 +2,11 @@ import 'server-only';
 import { and, eq } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { Holding } from '@/db/client';
-import { ruleVersion } from '@/db/schema/rule';
+import { rule as rules, ruleVersion } from '@/db/schema/rule';
 import type { RuleBody } from '@/lib/schema/rule';
 import type { RuleVersion } from '@/lib/schema/rule-view';
 import { touchPlan } from './plan';
+import { houseNames } from './reference';
 import { Refusal } from './refusal';
 import { again, resolveBody, touchRule, type FoundRule } from './rule';
 
@@ -24,7 +25,16 @@ export async function writeDraft(
   given: RuleBody,
   act: Act,
 ): Promise<FoundRule> {
-  const body = await resolveBody(holding, rule.houseId, given);
+  return writeDraftAsIs(holding, rule, await resolveBody(holding, rule.houseId, given), act);
+}
+
+/** A body of old may name a point that is no longer there: as a draft it is kept, and the check says what it lacks. */
+async function writeDraftAsIs(
+  holding: Holding,
+  rule: FoundRule,
+  body: RuleBody,
+  act: Act,
+): Promise<FoundRule> {
   if (rule.draft === null) {
     await holding.db.insert(ruleVersion).values({
       ...{ id: uuid(), holdingId: holding.id, ruleId: rule.id, status: 'draft', body, by: act.by },
@@ -42,11 +52,11 @@ export async function writeDraft(
 }
 
 /** Throws the draft away; a rule that never was in force keeps its only version, as retired. */
-export async function dropDraft(holding: Holding, rule: FoundRule, now: Date): Promise<void> {
+export async function dropDraft(holding: Holding, rule: FoundRule, act: Act): Promise<void> {
   if (rule.draft === null) throw new Refusal(null, 'This rule has no draft.');
   if (rule.versions.length === 1) {
-    await endVersion(holding, rule.draft.id, now);
-    await touchRule(holding, rule.id, { retiredAt: now });
+    await endVersion(holding, rule.draft.id, act, null);
+    await touchRule(holding, rule.id, { retiredAt: act.now });
     return;
   }
   await holding.db.delete(ruleVersion).where(mine(holding, rule.draft.id));
@@ -62,7 +72,7 @@ export async function forceDraft(
 ): Promise<RuleVersion> {
   const { draft, inForce } = rule;
   if (draft === null) throw new Refusal(null, 'This rule has no draft to put into force.');
-  if (inForce !== null) await endVersion(holding, inForce.id, act.now);
+  if (inForce !== null) await endVersion(holding, inForce.id, act, null);
   await holding.db
     .update(ruleVersion)
     .set({ status: 'in-force', why, by: act.by, forcedAt: act.now })
@@ -74,10 +84,15 @@ export async function forceDraft(
   return forced;
 }
 
-export async function retireRule(holding: Holding, rule: FoundRule, act: Act): Promise<FoundRule> {
+export async function retireRule(
+  holding: Holding,
+  rule: FoundRule,
+  why: string,
+  act: Act,
+): Promise<FoundRule> {
   if (rule.retiredAt !== null) throw new Refusal(null, 'This rule is retired already.');
   for (const version of [rule.draft, rule.inForce]) {
-    if (version !== null) await endVersion(holding, version.id, act.now);
+    if (version !== null) await endVersion(holding, version.id, act, why);
   }
   await touchRule(holding, rule.id, { retiredAt: act.now });
   await touchPlan(holding, rule.houseId);
@@ -96,6 +111,38 @@ export async function goBack(
   return writeDraft(holding, rule, older.body, act);
 }
 
-async function endVersion(holding: Holding, id: string, now: Date): Promise<void> {
-  await holding.db.update(ruleVersion).set({ status: 'retired', endedAt: now }).where(mine(holding, id));
+/**
+ * Brings a retired rule back as a draft of what it last said while it was in force (else last of all), or of a version
+ * that is named. Nothing is put into force by it: the yard may have changed since, so a person looks first.
+ */
+export async function restoreRule(
+  holding: Holding,
+  rule: FoundRule,
+  number: number | undefined,
+  act: Act,
+): Promise<FoundRule> {
+  if (rule.retiredAt === null) throw new Refusal(null, 'This rule is not retired.');
+  const { channels } = await houseNames(holding, rule.houseId);
+  if (!channels.has(rule.channelId))
+    throw new Refusal(
+      null,
+      'The channel of this rule was taken out of use. Copy the rule to another channel instead.',
+    );
+  const chosen =
+    number === undefined
+      ? (rule.versions.find((version) => version.forcedAt !== null) ?? rule.versions[0])
+      : rule.versions.find((version) => version.number === number);
+  if (chosen === undefined) throw new Refusal('version', `This rule has no version ${number ?? 1}.`);
+  await holding.db
+    .update(rules)
+    .set({ retiredAt: null })
+    .where(and(eq(rules.holdingId, holding.id), eq(rules.id, rule.id)));
+  return writeDraftAsIs(holding, rule, chosen.body, act);
+}
+
+async function endVersion(holding: Holding, id: string, act: Act, why: string | null): Promise<void> {
+  await holding.db
+    .update(ruleVersion)
+    .set({ status: 'retired', endedAt: act.now, endedBy: act.by, endedWhy: why })
+    .where(mine(holding, id));
 }

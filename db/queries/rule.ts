@@ -21,6 +21,7 @@ const headFields = {
   channel: channel.key,
   channelId: rule.channelId,
   retiredAt: rule.retiredAt,
+  copiedFrom: rule.copiedFrom,
 };
 interface Head {
   id: string;
@@ -32,6 +33,7 @@ interface Head {
   channel: string;
   channelId: string;
   retiredAt: Date | null;
+  copiedFrom: { rule: string; version: number } | null;
 }
 /** With what the routes need beside the answer: whose house and channel. */
 export interface FoundRule extends RuleWithVersions {
@@ -56,6 +58,7 @@ export function toVersion(row: typeof ruleVersion.$inferSelect): RuleVersion {
     draftedAt: row.draftedAt.toISOString(),
     forcedAt: row.forcedAt?.toISOString() ?? null,
     endedAt: row.endedAt?.toISOString() ?? null,
+    ...{ endedBy: row.endedBy, endedWhy: row.endedWhy },
   };
 }
 
@@ -74,13 +77,35 @@ async function withVersions(holding: Holding, head: Head): Promise<FoundRule> {
     ...head,
     ...{ body: shown.body, draft, inForce, versions },
     retiredAt: head.retiredAt?.toISOString() ?? null,
+    retired: retirement(head.retiredAt, versions),
+    copiedFrom: await originOf(holding, head.copiedFrom),
   };
+}
+
+/** Its versions keep who ended them and why, also after it was brought back; the last of them is the retirement's. */
+function retirement(at: Date | null, versions: RuleVersion[]): Rule['retired'] {
+  if (at === null) return null;
+  const ended = versions.find((version) => version.endedAt === at.toISOString());
+  return { at: at.toISOString(), by: ended?.endedBy ?? null, why: ended?.endedWhy ?? null };
+}
+
+/** Null also where that rule went with its house. */
+async function originOf(holding: Holding, from: Head['copiedFrom']): Promise<Rule['copiedFrom']> {
+  if (from === null) return null;
+  const origin = (await heads(holding, eq(rule.id, from.rule)))[0];
+  return origin === undefined
+    ? null
+    : { rule: origin.slug, name: origin.name, house: origin.house, version: from.version };
 }
 
 /** The rule without what only its own page shows. */
 export function toRule(found: FoundRule): Rule {
-  const { id, revision, slug, name, house, channel, body, draft, inForce, retiredAt } = found;
-  return { id, revision, slug, name, house, channel, body, draft, inForce, retiredAt };
+  const { id, revision, slug, name, house, channel, body, draft, inForce } = found;
+  const { retiredAt, retired, copiedFrom } = found;
+  return {
+    ...{ id, revision, slug, name, house, channel, body, draft, inForce },
+    ...{ retiredAt, retired, copiedFrom },
+  };
 }
 
 export function toRuleWithVersions(found: FoundRule): RuleWithVersions {
@@ -120,15 +145,25 @@ export async function createRule(
   given: { name: string; channel: string; body: RuleBody },
   act: Act,
 ): Promise<FoundRule> {
-  const channelId = (await houseNames(holding, houseId)).channels.find(given.channel, 'channel').id;
+  const { points, channels } = await houseNames(holding, houseId);
+  const channelId = channels.find(given.channel, 'channel').id;
   // The body stands one deeper here than in PUT draft, and so do its paths.
-  const { points } = await houseNames(holding, houseId);
   const body = mapRulePoints(given.body, (ref, path) => points.find(ref, `body.${path}`).key);
+  return addRule(holding, { houseId, channelId, name: given.name, body, copiedFrom: null }, act);
+}
+
+/** Writes a rule with its first draft; all names in it are found already. */
+export async function addRule(
+  holding: Holding,
+  given: Pick<Head, 'houseId' | 'channelId' | 'name' | 'copiedFrom'> & { body: RuleBody },
+  act: Act,
+): Promise<FoundRule> {
+  const { body, ...head } = given;
   const taken = await holding.db.select({ slug: rule.slug }).from(rule).where(eq(rule.holdingId, holding.id));
   const id = uuid();
   await holding.db.insert(rule).values({
-    ...{ id, houseId, channelId, holdingId: holding.id, name: given.name, createdAt: act.now },
-    slug: freeSlug(given.name, new Set(taken.map((row) => row.slug))),
+    ...{ ...head, id, holdingId: holding.id, createdAt: act.now },
+    slug: freeSlug(head.name, new Set(taken.map((row) => row.slug))),
   });
   await holding.db.insert(ruleVersion).values({
     ...{ id: uuid(), holdingId: holding.id, ruleId: id, number: 1, status: 'draft', body, by: act.by },

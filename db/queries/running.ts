@@ -1,6 +1,7 @@
 /** What control did and how it stands: written by the worker in batches, read by pages and the interface. */
-import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, gte, inArray, lt, or, sql } from 'drizzle-orm';
 import type { Db, Holding } from '@/db/client';
+import { nodeLog } from '@/db/schema/node-log';
 import { controlMemory, decision, relayReport, switching } from '@/db/schema/running';
 import type { Explanation, State } from '@/lib/control/types';
 import type { HouseState } from '@/lib/schema/house-state';
@@ -8,6 +9,7 @@ import type { HouseState } from '@/lib/schema/house-state';
 export type SwitchingRow = typeof switching.$inferInsert;
 export type DecisionRow = typeof decision.$inferInsert;
 export type RelayReportRow = typeof relayReport.$inferInsert;
+export type NodeLogRow = typeof nodeLog.$inferInsert;
 export type MemoryRow = typeof controlMemory.$inferInsert;
 
 /** Rows of any number of houses and holdings, in the order in which they came to be. */
@@ -15,6 +17,8 @@ export interface RunningBatch {
   switchings: SwitchingRow[];
   decisions: DecisionRow[];
   reports: RelayReportRow[];
+  /** What nodes said of themselves. */
+  logs?: NodeLogRow[];
   /** One a house at most: the newest. */
   memories: MemoryRow[];
 }
@@ -29,7 +33,14 @@ export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
       await tx.insert(switching).values(batch.switchings).onConflictDoNothing();
     if (batch.decisions.length > 0) await tx.insert(decision).values(batch.decisions).onConflictDoNothing();
     if (batch.reports.length > 0) await tx.insert(relayReport).values(batch.reports).onConflictDoNothing();
+    if (batch.logs !== undefined && batch.logs.length > 0)
+      await tx.insert(nodeLog).values(batch.logs).onConflictDoNothing();
+    await writeStates(
+      tx,
+      batch.memories.filter((row) => isStateAlone(row)),
+    );
     for (const row of batch.memories) {
+      if (isStateAlone(row)) continue;
       const { holdingId: _holding, houseId: _house, ...changed } = row;
       await tx
         .insert(controlMemory)
@@ -37,6 +48,29 @@ export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
         .onConflictDoUpdate({ target: [controlMemory.holdingId, controlMemory.houseId], set: changed });
     }
   });
+}
+
+/** Nothing happened in the house but readings. */
+const isStateAlone = ({ state, stateAt, ...rest }: MemoryRow): boolean =>
+  state !== undefined && stateAt !== undefined && Object.keys(rest).length === 2;
+
+/** Each house writes its state at each report: a statement a house would cost many times what the rows do. */
+async function writeStates(db: Db, rows: MemoryRow[]): Promise<void> {
+  if (rows.length === 0) return;
+  const told = JSON.stringify(
+    rows.map(({ holdingId, houseId, state, stateAt }) => ({
+      holding_id: holdingId,
+      house_id: houseId,
+      state,
+      state_at: stateAt,
+    })),
+  );
+  await db.execute(sql`
+    insert into control_memory (holding_id, house_id, state, state_at)
+    select holding_id, house_id, state, state_at
+    from jsonb_to_recordset(${told}::jsonb)
+      as told(holding_id uuid, house_id uuid, state jsonb, state_at timestamptz)
+    on conflict (holding_id, house_id) do update set state = excluded.state, state_at = excluded.state_at`);
 }
 
 export interface KeptMemory {
@@ -113,64 +147,9 @@ export async function listSwitchings(
   return rows.map(asSwitching);
 }
 
-/** The switching that a channel stood under at a time: the newest at or before it. */
-export async function switchingAt(
-  holding: Holding,
-  channelId: string,
-  at: number,
-): Promise<Switching | null> {
-  const [row] = await holding.db
-    .select()
-    .from(switching)
-    .where(
-      and(
-        eq(switching.holdingId, holding.id),
-        eq(switching.channelId, channelId),
-        lte(switching.at, new Date(at)),
-      ),
-    )
-    .orderBy(desc(switching.at), desc(switching.id))
-    .limit(1);
-  return row === undefined ? null : asSwitching(row);
-}
-
-function asSwitching(row: typeof switching.$inferSelect): Switching {
+export function asSwitching(row: typeof switching.$inferSelect): Switching {
   const { id, channelId, from, to, claim, number, ruleId, version, explanation } = row;
   return { id, channelId, at: row.at.getTime(), from, to, claim, number, ruleId, version, explanation };
-}
-
-export interface Decision {
-  channelId: string;
-  at: number;
-  state: State;
-  claim: string;
-}
-
-/** Decisions from `from` to before `to`, ascending, led by the one of each channel that stood at `from`. */
-export async function listDecisions(
-  holding: Holding,
-  channelIds: readonly string[],
-  from: number,
-  to: number,
-): Promise<Decision[]> {
-  if (channelIds.length === 0) return [];
-  const mine = and(eq(decision.holdingId, holding.id), inArray(decision.channelId, [...channelIds]));
-  const standing = await holding.db
-    .selectDistinctOn([decision.channelId])
-    .from(decision)
-    .where(and(mine, lt(decision.at, new Date(from))))
-    .orderBy(decision.channelId, desc(decision.at), desc(decision.id));
-  const during = await holding.db
-    .select()
-    .from(decision)
-    .where(and(mine, gte(decision.at, new Date(from)), lt(decision.at, new Date(to))))
-    .orderBy(asc(decision.at), asc(decision.id));
-  return [...standing, ...during].map((row) => ({
-    channelId: row.channelId,
-    at: row.at.getTime(),
-    state: row.state,
-    claim: row.claim,
-  }));
 }
 
 export interface RelayReport {
@@ -208,8 +187,9 @@ export async function listRelayReports(
 }
 
 /** A node's text may hold what no database keeps; it must not keep the notes of all others from being written. */
+export const storableText = (text: string): string => text.replace(/[\0\p{Surrogate}]/gu, '\ufffd');
 const storable = (_key: string, value: unknown): unknown =>
-  typeof value === 'string' ? value.replace(/[\0\p{Surrogate}]/gu, '\ufffd') : value;
+  typeof value === 'string' ? storableText(value) : value;
 
 /** What the link last knew of each node, for the wiring page and for a restarted worker. */
 export async function writeNodeStatus(

@@ -15,6 +15,7 @@ import { readLeader } from './leader';
 import { nightSoFar } from './night';
 import { loadHouse } from './plan';
 import { readMemory } from './running';
+import { readAlone } from './watch-alone';
 import { readBands } from './watch-bands';
 import { readLines, readStrips, whileRunning } from './watch-lines';
 
@@ -57,6 +58,7 @@ export async function readWatch(
       }),
     ),
     nights: await nightSoFar(holding, house.id, now),
+    alone: await readAlone(holding, record, night.from, Math.min(now, night.to)),
     others: await readCards(holding, house.id),
   };
 }

@@ -18,6 +18,7 @@ import { listInterlocks } from './interlock';
 import { listLockouts } from './lockout';
 import { listLoops } from './loop';
 import { listNodes } from './node';
+import { lastAlone } from './node-log';
 import { listPoints } from './point';
 import { readMemory } from './running';
 import { listSources } from './source';
@@ -33,6 +34,8 @@ export interface WiringPage {
   loops: Loop[];
   interlocks: Interlock[];
   lockouts: Lockout[];
+  /** When a channel was last put on by its node's fallback, epoch ms by the channel's id; absent where it never was. */
+  ranAlone: Record<string, number>;
   /** Null until the worker has stepped this house for the first time. */
   state: HouseState | null;
 }
@@ -42,13 +45,17 @@ export async function readWiring(holding: Holding, house: House): Promise<Wiring
     .select({ id: node.id, status: node.status })
     .from(node)
     .where(and(eq(node.holdingId, holding.id), eq(node.houseId, house.id), isNull(node.removedAt)));
+  const channels = await listChannels(holding, house.id);
+  const ranAlone = await lastAlone(
+    holding,
+    channels.map((one) => one.id),
+  );
   return {
-    house,
+    ...{ house, channels, ranAlone: Object.fromEntries(ranAlone) },
     nodes: await listNodes(holding, house.id),
     nodeStatus: Object.fromEntries(rows.map((row) => [row.id, row.status])),
     points: await listPoints(holding, house.id),
     sources: await listSources(holding, house.id),
-    channels: await listChannels(holding, house.id),
     loops: await listLoops(holding, house.id),
     interlocks: await listInterlocks(holding, house.id),
     lockouts: await listLockouts(holding, house.id),

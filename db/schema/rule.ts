@@ -26,6 +26,8 @@ export const rule = pgTable(
     revision: integer('revision').notNull().default(1),
     createdAt: instant('created_at').notNull().defaultNow(),
     retiredAt: instant('retired_at'),
+    /** The rule and version that a copy was made of; that rule lives its own life since. */
+    copiedFrom: jsonb('copied_from').$type<{ rule: string; version: number }>(),
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
@@ -52,6 +54,10 @@ export const ruleVersion = pgTable(
     draftedAt: instant('drafted_at').notNull(),
     forcedAt: instant('forced_at'),
     endedAt: instant('ended_at'),
+    /** Who took it out of force, or put another in its place. */
+    endedBy: text('ended_by'),
+    /** Why the rule was retired; null where another version only took its place, which says its own why. */
+    endedWhy: text('ended_why'),
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),

@@ -67,6 +67,8 @@ export const decision = pgTable(
     at: instant('at').notNull(),
     state: text('state').$type<'on' | 'off'>().notNull(),
     claim: text('claim').notNull(),
+    /** Only where no switching of that instant carries it; null in rows from before decisions were explained. */
+    explanation: jsonb('explanation').$type<Explanation>(),
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
@@ -152,6 +154,12 @@ export const leader = pgTable('leader', {
   spool: bigint('spool', { mode: 'number' }).notNull().default(0),
   /** App time of the newest step of any house. */
   lastStep: instant('last_step'),
+});
+
+/** App time in which no worker led: of those hours nothing was decided. One that goes on is not here yet. */
+export const controlGap = pgTable('control_gap', {
+  from: instant('from').primaryKey(),
+  to: instant('to').notNull(),
 });
 
 /** One row: app time = anchorApp + (real − anchorReal) × rate. */

@@ -34,6 +34,8 @@ export const house = pgTable(
     altitude: doublePrecision('altitude').notNull(),
     frostLimit: doublePrecision('frost_limit'),
     frostAlarm: doublePrecision('frost_alarm'),
+    /** A thermostat that keeps the house without any software; null: nobody has said that there is one. */
+    lastResort: jsonb('last_resort').$type<{ below: number; provedOn: string | null }>(),
     /** Grows with every change of anything the core reads of this house. */
     planRevision: bigint('plan_revision', { mode: 'number' }).notNull().default(1),
     revision: revision(),

@@ -110,6 +110,7 @@ export const longHouse: DemoHouse = {
       minOff: 120,
       startsPerHour: 6,
       runProof: { point: 'fan-amps', above: 0.2 },
+      fallback: { point: 'bench-1', below: 2, above: 5, onFor: 1200, offFor: 2400 },
       flow: { litresPerSecond: 42.5, from: 'measured', sd: 4 },
     },
     {

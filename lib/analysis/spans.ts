@@ -18,22 +18,29 @@ export interface Span {
   claim: Claim | null;
 }
 
+interface Time {
+  from: number;
+  to: number | null;
+}
+
 /** Ascending in time; the newest of each list before the span is asked for may, and should, be among them. */
 export interface ChannelRecord {
   decisions: { at: number; state: State; claim: Claim }[];
   reports: { at: number; state: State }[];
-  /** A lease that ran out: what the load fell to, and when, by the node's own account. */
+  /** What the node did without a command, and when, by its own account: a lease that ran out, or its fallback. */
   trips: { at: number; state: State }[];
-  /** Times in which the node was lost, `to` null while it is: the load then stands as its wiring says. */
-  silences: { from: number; to: number | null }[];
+  /** Times in which the node was lost, `to` null while it is: the load then stands as its wiring says, but for what the node told later. */
+  silences: Time[];
+  /** Times in which its proof denied that the load ran, whatever its relay said. */
+  stood: Time[];
   /** What the load falls to without its coil. */
   safe: State;
 }
 
 const HELD: ReadonlySet<Claim> = new Set(['lock-out', 'interlock', 'limit', 'source-guard', 'fail-safe']);
 
-function kindOf(on: boolean, claim: Claim | null, silent: boolean): SpanKind {
-  if (silent) return on ? 'run' : 'held';
+function kindOf(on: boolean, claim: Claim | null, isLeft: boolean): SpanKind {
+  if (isLeft) return on ? 'run' : 'held';
   if (claim === 'hand') return 'hand';
   if (on) return 'run';
   if (claim === 'rest') return 'rest';
@@ -50,23 +57,26 @@ export function channelSpans(record: ChannelRecord, fromMs: number, toMs: number
   const cuts = [
     fromMs,
     ...[...record.decisions, ...loads].map((row) => row.at).filter(inside),
-    ...record.silences.flatMap((silence) => [silence.from, silence.to]).filter(inside),
+    ...[...record.silences, ...record.stood].flatMap((time) => [time.from, time.to]).filter(inside),
     toMs,
   ].sort((a, b) => a - b);
 
   const spans: Span[] = [];
   const decisionAt = walker(record.decisions);
   const loadAt = walker(loads);
-  const silenceAt = walker(record.silences.map((silence) => ({ ...silence, at: silence.from })));
+  const isSilent = within(record.silences);
+  const stands = within(record.stood);
   for (let i = 0; i + 1 < cuts.length; i += 1) {
     const from = cuts[i] ?? fromMs;
     const to = cuts[i + 1] ?? toMs;
     if (to <= from) continue;
     const claim = decisionAt(from)?.claim ?? null;
-    const silence = silenceAt(from);
-    const silent = silence !== undefined && (silence.to === null || silence.to > from);
-    const on = (silent ? record.safe : (loadAt(from)?.state ?? 'off')) === 'on';
-    const kind = kindOf(on, claim, silent);
+    const load = loadAt(from);
+    const silent = isSilent(from);
+    const stood = stands(from);
+    const state = silent && load?.isOwn !== true ? record.safe : (load?.state ?? 'off');
+    const on = state === 'on' && !stood;
+    const kind = kindOf(on, claim, silent || stood);
     const last = spans.at(-1);
     if (last !== undefined && last.on === on && last.kind === kind && last.claim === claim) last.to = to;
     else spans.push({ from, to, on, kind, claim });
@@ -74,12 +84,28 @@ export function channelSpans(record: ChannelRecord, fromMs: number, toMs: number
   return spans;
 }
 
-/** Decisions up to the first report, then reports and trips. */
-function loadTimeline(record: ChannelRecord): { at: number; state: State }[] {
-  const told = [...record.reports, ...record.trips].sort((a, b) => a.at - b.at);
+/** Decisions up to the first report, then reports and what the node told of its own doing. */
+function loadTimeline(record: ChannelRecord): { at: number; state: State; isOwn: boolean }[] {
+  const row = (isOwn: boolean) => (one: { at: number; state: State }) => ({
+    at: one.at,
+    state: one.state,
+    isOwn,
+  });
+  const told = [...record.reports.map(row(false)), ...record.trips.map(row(true))].sort(
+    (a, b) => a.at - b.at,
+  );
   const first = told[0]?.at ?? Infinity;
   const decided = record.decisions.filter((decision) => decision.at < first);
-  return [...decided.map(({ at, state }) => ({ at, state })), ...told];
+  return [...decided.map(row(false)), ...told];
+}
+
+/** Whether an instant is within one of some times; asked with instants that only grow. */
+function within(times: readonly Time[]): (at: number) => boolean {
+  const timeAt = walker(times.map((time) => ({ ...time, at: time.from })));
+  return (at) => {
+    const time = timeAt(at);
+    return time !== undefined && (time.to === null || time.to > at);
+  };
 }
 
 /** The newest row at or before an instant; asked with instants that only grow. */

@@ -9,7 +9,17 @@ import type { Claim, State } from './types';
 export const isInstant = (field: string): boolean => /^(at|until)$|(At|Until|Since)$/.test(field);
 
 export interface LockOutReason {
-  lockouts: { id: string; why: string; by: string; placedAt: number }[];
+  lockouts: LockOutPlaced[];
+}
+
+export interface LockOutPlaced {
+  id: string;
+  why: string;
+  by: string;
+  placedAt: number;
+  /** Only where a past moment is told, and it was removed since. */
+  removedAt?: number;
+  removedBy?: string;
 }
 
 export interface InterlockReason {
@@ -93,6 +103,19 @@ export interface FrostReason {
 export interface FailSafeReason {
   safe: State;
   points: { point: string; why: string | null; lastAt: number | null }[];
+  /** The relay dropped with its lease: no sensor is missing, nobody commanded it. */
+  trip?: string;
+  /** The same, known only from control not running since. */
+  stoppedAt?: number;
+  /** Its node's own fallback switched it while nobody commanded the node; °C. */
+  fallback?: {
+    state: State;
+    point: string | null;
+    value: number | null;
+    why: string | null;
+    below: number | null;
+    above: number | null;
+  };
 }
 
 export interface RestReason {
@@ -171,22 +194,47 @@ export interface Reasons {
   idle: IdleReason;
 }
 
-/** What comes next for a channel (Explanation.next). */
-export type NextReason =
-  | {
-      /** By the clock alone, if no reading changes. */
-      kind: 'then';
-      at: number;
-      state: State;
-      claim: Claim;
-    }
-  | {
-      /** Sooner, if the point passes the value. */
-      kind: 'if';
-      /** null: the coldest house-air or bench point, which frost looks at. */
-      point: string | null;
-      side: 'above' | 'below';
-      value: number;
-      state: State;
-      claim: Claim;
-    };
+/** What comes next for a channel (Explanation.next): by the clock, by a reading, or by what somebody does. */
+export type NextReason = NextThen | NextIf | NextWhen;
+
+/** By the clock alone, if no reading changes. */
+export interface NextThen {
+  kind: 'then';
+  at: number;
+  state: State;
+  claim: Claim;
+}
+
+/** If a point passes a value; nothing changes up to it. */
+export interface NextIf {
+  kind: 'if';
+  /** null: the coldest house-air or bench point, which frost looks at; that it rises means that none is colder. */
+  point: string | null;
+  side: 'above' | 'below';
+  value: number;
+  /** The value itself is enough. */
+  orAt?: true;
+  /** When this then comes of it; absent: at once. */
+  at?: number;
+  /** That is later than by the clock alone. */
+  later?: true;
+  /** Equal to the present state: the channel keeps it where by the clock it would not, or the claim alone changes. */
+  state: State;
+  claim: Claim;
+}
+
+/** If something is done or reported. */
+export interface NextWhen {
+  kind: 'when';
+  what: 'unlocked' | 'given-back' | 'other-off' | 'other-on' | 'ready' | 'answers';
+  /** other-off, other-on: key of the other channel. */
+  other?: string;
+  /** ready: slug of the heap that somebody says is ready. */
+  source?: string;
+  /** answers: the point that is missing. */
+  point?: string;
+  at?: number;
+  /** Absent where it hangs on what the point then reads. */
+  state?: State;
+  claim?: Claim;
+}

@@ -135,8 +135,12 @@ function spanOf(
   if (bySun && polar !== null) {
     const darkHours = hours.from.kind === 'sunset' && hours.to.kind === 'sunrise';
     const lightHours = hours.from.kind === 'sunrise' && hours.to.kind === 'sunset';
+    const midnight = wallInstant(where, day + 1, 0);
+    // the night before the sun's first rise belongs to it: after a polar night all of it, after a polar day from midnight
+    const rise = darkHours ? instantOf(where, day + 1, hours.to) : null;
+    if (polar === 'up' && darkHours) return rise === null ? null : [midnight, rise];
     const always = polar === 'down' ? darkHours : lightHours;
-    return always ? [wallInstant(where, day, 0), wallInstant(where, day + 1, 0)] : null;
+    return always ? [wallInstant(where, day, 0), rise ?? midnight] : null;
   }
   const begins = eventOf(where, day, hours.from);
   const endsToday = eventOf(where, day, hours.to);

@@ -1,6 +1,6 @@
 /** Static checks of a rule before it goes into force. */
 import { bandChecks } from './checks/band-checks';
-import type { CheckContext, Finding, RuleToCheck } from './checks/finding';
+import { sayIn, type CheckContext, type Finding, type RuleToCheck } from './checks/finding';
 import { restChecks } from './checks/rest-checks';
 import { wiringChecks } from './checks/wiring-checks';
 import type { HouseConfig } from './types';
@@ -11,7 +11,7 @@ import type { HouseConfig } from './types';
  */
 export function check(config: HouseConfig, rule: RuleToCheck, context: CheckContext = {}): Finding[] {
   const channel = config.channels.find((one) => one.key === rule.channel) ?? null;
-  const input = { config, rule, channel, context };
+  const input = { config, rule, channel, context, say: sayIn(context.preferences) };
   const found = [...wiringChecks(input), ...restChecks(input), ...bandChecks(input)];
   return found.sort((a, b) => Number(b.level === 'stop') - Number(a.level === 'stop'));
 }

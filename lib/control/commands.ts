@@ -1,5 +1,8 @@
 /** What people ordered. Each number is taken once, in order; what cannot be obeyed is refused with its reason. */
+import { settleFrost } from './claims/frost';
 import { endHand } from './claims/hand';
+import { settleDerived } from './derived';
+import { settlePoints } from './quality';
 import { entry, type Run } from './run';
 import type { HandMemory } from './memory';
 import type { PersonCommand } from './types';
@@ -8,11 +11,17 @@ const LONGEST_HAND_S = 43_200;
 const LONGEST_HEATER_S = 3600;
 const LONGEST_PULSE_S = 60;
 const LONGEST_GAIN_RUN_S = 600;
+/** On of a cooling channel that is given during frost. */
+const LONGEST_IN_FROST_S = 1800;
 
 /** Takes the commands above `taken` and gives the greatest number. */
 export function takeCommands(run: Run, taken: number): number {
   const { commands } = run.observed;
-  if (commands.length === 0) return taken;
+  if (!commands.some(({ number }) => number > taken)) return taken;
+  // what may be ordered hangs on frost, which the readings of this very step can begin
+  settlePoints(run);
+  settleDerived(run);
+  settleFrost(run);
   let last = taken;
   for (const command of commands.toSorted((a, b) => a.number - b.number)) {
     if (command.number <= last) continue;
@@ -65,9 +74,10 @@ type Given<K extends PersonCommand['kind']> = Extract<PersonCommand, { kind: K }
 
 function takeHand(run: Run, channel: number, command: Given<'hand'>): void {
   const { config, inFrost } = entry(run.plan.channels, channel);
-  const { pointDeadSince } = entry(run.channels, channel);
+  const { pointDeadSince, lockouts } = entry(run.channels, channel);
   const { state, seconds, holdInFrost } = command;
   if (!(seconds > 0 && seconds <= LONGEST_HAND_S)) return refuse(run, command, channel, 'hand-too-long');
+  if (state === 'on' && lockouts.length > 0) return refuse(run, command, channel, 'locked-out');
   if (state === 'on' && config.loadKind === 'heater') {
     if (seconds > LONGEST_HEATER_S) return refuse(run, command, channel, 'heater-hand-too-long');
     if (pointDeadSince !== null) return refuse(run, command, channel, 'heater-point-dead');
@@ -87,7 +97,9 @@ function giveHand(
   const memory = entry(run.channels, channel);
   // a command that waited for a worker has used up its time meanwhile
   const givenAt = Math.min(at, run.at);
-  const until = givenAt + seconds * 1000;
+  const shortInFrost =
+    state === 'on' && run.frost.on && entry(run.plan.channels, channel).inFrost === 'cools';
+  const until = givenAt + (shortInFrost ? Math.min(seconds, LONGEST_IN_FROST_S) : seconds) * 1000;
   run.channels[channel] = { ...memory, hand: { state, by, number, givenAt, until, holdInFrost } };
   run.events.push({
     kind: 'hand-begun',
@@ -122,6 +134,7 @@ function takeProve(run: Run, channel: number, command: Given<'prove'>): void {
   const longest = source === null ? LONGEST_PULSE_S : LONGEST_GAIN_RUN_S;
   if (!(command.seconds > 0 && command.seconds <= longest))
     return refuse(run, command, channel, 'pulse-too-long');
+  if (memory.lockouts.length > 0) return refuse(run, command, channel, 'locked-out');
   // a pulse on a running load would change nothing and prove nothing
   if (memory.counted === 'on') return refuse(run, command, channel, 'already-running');
   const until = Math.min(command.at, run.at) + command.seconds * 1000;

@@ -136,10 +136,22 @@ export function addOwnSources(channels: PlanChannel[], sources: PlanSource[], ru
 
 export function usedPoints(points: PlanPoint[], rules: PlanRule[], channels: PlanChannel[]): Set<number> {
   const used = new Set<number>();
-  for (const rule of rules) for (const { point } of rule.points) if (point !== null) used.add(point);
-  for (const { highLimitPoint } of channels) if (highLimitPoint !== null) used.add(highLimitPoint);
-  for (const index of [...used])
-    for (const input of points[index]?.derived?.inputs ?? []) if (input >= 0) used.add(input);
+  const use = (index: number | null | undefined): void => {
+    if (index === null || index === undefined || index < 0 || used.has(index)) return;
+    used.add(index);
+    for (const input of points[index]?.derived?.inputs ?? []) use(input);
+  };
+  for (const { points: own, rest, only } of rules) {
+    for (const { point } of own) use(point);
+    use(rest?.until?.point);
+    use(rest?.leastGain?.intake);
+    use(rest?.leastGain?.return);
+    for (const fact of only?.facts ?? []) use(points.findIndex((one) => one.key === fact));
+  }
+  for (const { highLimitPoint, runProofPoint } of channels) {
+    use(highLimitPoint);
+    use(runProofPoint);
+  }
   return used;
 }
 

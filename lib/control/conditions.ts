@@ -8,7 +8,8 @@ import type { Condition, ConditionNode, ConditionTree } from './rule-body';
 export type FactValue = number | boolean;
 /** null: the fact has no good reading. */
 export type Verdict = boolean | null;
-export type ReadFact = (fact: string) => FactValue | null;
+/** `limits`: all that the value is compared with. */
+export type ReadFact = (fact: string, limits: readonly number[]) => FactValue | null;
 
 export interface CompiledConditions {
   tree: ConditionTree;
@@ -37,8 +38,13 @@ function compileNode(node: ConditionNode): (read: ReadFact) => Verdict {
     const inner = compileNode(node.not);
     return (read) => not(inner(read));
   }
-  return (read) => holds(node, read(node.fact));
+  const limits = limitsOf(node.value);
+  return (read) => holds(node, read(node.fact, limits));
 }
+
+/** A list is compared as a whole by the operators that take one number: the library turns it into one. */
+const limitsOf = (value: Condition['value']): number[] =>
+  [...(Array.isArray(value) ? value : []), Number(value)].filter((one) => !Number.isNaN(one));
 
 /** False if one is false, else unknown if one is unknown. */
 function every(parts: ((read: ReadFact) => Verdict)[]): (read: ReadFact) => Verdict {

@@ -17,8 +17,8 @@ export function noteRelay(run: Run, index: number): void {
   if (seen === undefined) return;
   const { safe } = entry(run.plan.channels, index);
   const before = memory.relay;
-  const { reported, reportedAt, acknowledges, leaseEndsAt } = seen;
-  const relay = { reported, reportedAt, acknowledges, leaseEndsAt, seenAt: run.stepAt };
+  const { reported, reportedAt, acknowledges, leaseEndsAt, isAlone = false } = seen;
+  const relay = { reported, reportedAt, acknowledges, leaseEndsAt, isAlone, seenAt: run.stepAt };
   memory = { ...memory, relay };
   // it ran by its own report and now says it stands: a lease trip, told as a switching of its own, not of ours
   const ran = before !== null && before.reported !== null && before.reported !== safe;

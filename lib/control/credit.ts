@@ -4,7 +4,8 @@
  */
 import type { SourceMemory } from './memory';
 import { settleDay, usedMs } from './day';
-import { entry, wakeAt, type Run } from './run';
+import { isUnder } from './lines';
+import { dueAt, entry, wakeAt, type Run } from './run';
 import type { PlanRule, PlanSource } from './plan';
 
 /** Credit of a source at an instant, 0 to 1. */
@@ -23,22 +24,24 @@ function counts(run: Run, rules: readonly number[], rule: number): boolean {
   return inSeason(run, rule) || !rules.some((one) => inSeason(run, one));
 }
 
-/** What a channel's draw costs its source, share a ms: by the smallest longest draw of its rules in season. */
+/**
+ * What a channel's draw costs its source, share a ms: by the smallest longest draw of its rules in season, of all if
+ * none is. With a rule in season and no rest among those that are, it costs nothing: a summer rule has no winter's rest.
+ */
 export function drawCost(run: Run, channel: number): number {
   let cost = 0;
+  let costOfAll = 0;
   let anyInSeason = false;
   const { rules } = entry(run.plan.channels, channel);
   for (const index of rules) {
     const { rest } = entry(run.plan.rules, index);
-    if (rest === null) continue;
     const now = inSeason(run, index);
-    if (now && !anyInSeason) {
-      anyInSeason = true;
-      cost = 0;
-    }
-    if (now || !anyInSeason) cost = Math.max(cost, 1 / rest.longestDrawMs);
+    anyInSeason ||= now;
+    if (rest === null) continue;
+    costOfAll = Math.max(costOfAll, 1 / rest.longestDrawMs);
+    if (now) cost = Math.max(cost, 1 / rest.longestDrawMs);
   }
-  return cost;
+  return anyInSeason ? cost : costOfAll;
 }
 
 /** The largest least rest of the rules that count, ms. */
@@ -85,6 +88,7 @@ export function settleSource(run: Run, index: number): void {
   if (slope !== memory.slope)
     memory = { ...memory, credit: creditAt(memory, run.at), creditAt: run.at, slope };
   memory = settleDay(memory, number, run.at);
+  if (memory.day.nextAt !== null) dueAt(run, memory.day.nextAt);
   const spends = spentAt(memory);
   if (spends !== null) wakeAt(run, spends);
   if (source.dailyLimitMs !== null && number > 0) {
@@ -103,8 +107,8 @@ function spentAt(memory: SourceMemory): number | null {
 
 function slopeOf(run: Run, source: PlanSource, memory: SourceMemory, number: number, cost: number): number {
   if (memory.resting || !source.hasRest) return 0;
-  // a draw that costs nothing still keeps the credit from coming back
-  if (number > 0) return -cost;
+  // a draw that costs nothing still keeps the credit from coming back; 0 − 0 is 0, where −0 would not survive JSON
+  if (number > 0) return 0 - cost;
   return 1 / Math.max(1, leastRestMs(run, source));
 }
 
@@ -169,5 +173,5 @@ function restEnd(
 /** At or above its level, by a good reading, at the instant of looking. */
 export function recovered(run: Run, until: { point: number | null; level: number }): boolean {
   if (until.point === null || run.usable[until.point] !== 'good') return false;
-  return (entry(run.points, until.point).value ?? -Infinity) >= until.level;
+  return !isUnder(run, until.point, until.level);
 }

@@ -23,14 +23,28 @@ export function settleDay(memory: SourceMemory, draws: number, at: number): Sour
     if (draws > 0) spans.push([at, null, draws]);
     merge(spans);
   }
+  return { ...memory, draws, spans, day: dayOf(spans, draws, at) };
+}
+
+/** Draws that were told afterwards, over by `at`, as [from, to, channels]: where they overlap others, both count. */
+export function addSpans(memory: SourceMemory, told: SourceMemory['spans'], at: number): SourceMemory {
+  // the one that goes on stays last: settleDay ends it there
+  const spans = [...memory.spans, ...told].sort(
+    (one, other) => Number(one[1] === null) - Number(other[1] === null) || one[0] - other[0],
+  );
+  while (spans.length > SPANS && merge(spans));
+  return { ...memory, spans, day: dayOf(spans, memory.draws, at) };
+}
+
+function dayOf(spans: SourceMemory['spans'], draws: number, at: number): SourceMemory['day'] {
   let nextAt: number | null = null;
   let leaving = 0;
   for (const [from, to, channels] of spans) {
-    if (from <= at - DAY_MS) leaving = channels;
+    if (from <= at - DAY_MS && (to ?? at) > at - DAY_MS) leaving += channels;
     for (const edge of [from + DAY_MS, to === null ? Infinity : to + DAY_MS])
       if (edge > at && (nextAt === null || edge < nextAt)) nextAt = edge;
   }
-  return { ...memory, draws, spans, day: { usedMs: reckon(spans, at), at, slope: draws - leaving, nextAt } };
+  return { usedMs: reckon(spans, at), at, slope: draws - leaving, nextAt };
 }
 
 function reckon(spans: SourceMemory['spans'], at: number): number {
@@ -42,10 +56,11 @@ function reckon(spans: SourceMemory['spans'], at: number): number {
   return sum;
 }
 
-function merge(spans: SourceMemory['spans']): void {
+function merge(spans: SourceMemory['spans']): boolean {
   const [first, second] = spans;
-  if (spans.length <= SPANS || first === undefined || second === undefined) return;
-  if (first[1] === null || second[1] === null) return;
+  if (spans.length <= SPANS || first === undefined || second === undefined) return false;
+  if (first[1] === null || second[1] === null) return false;
   const content = (first[1] - first[0]) * first[2] + (second[1] - second[0]) * second[2];
   spans.splice(0, 2, [first[0], second[1], content / (second[1] - first[0])]);
+  return true;
 }

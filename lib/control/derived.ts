@@ -60,14 +60,21 @@ export function settleDerived(run: Run): void {
     let at = -Infinity;
     let quality: Quality = 'good';
     let why: string | null = null;
+    let goodRun = 3;
     for (const input of derived.inputs) {
       const memory = input < 0 ? null : entry(run.points, input);
       at = Math.max(at, memory?.at ?? -Infinity);
       const worse = memory?.quality ?? 'bad';
       if (worse === 'bad' || (worse === 'uncertain' && quality === 'good')) quality = worse;
       if (worse !== 'good') why ??= `input-${worse}`;
+      goodRun = Math.min(goodRun, memory?.goodRun ?? 0);
     }
-    const memory = entry(run.points, index);
+    let memory = entry(run.points, index);
+    // a rule comes back to it when every input has been good three times
+    if (goodRun !== memory.goodRun) {
+      memory = { ...memory, goodRun };
+      run.points[index] = memory;
+    }
     if (at > (memory.at ?? -Infinity) && quality !== 'bad') {
       run.points[index] = reckon(
         derived,
@@ -91,8 +98,17 @@ function reckon(derived: PlanDerived, memory: PointMemory, inputs: PointMemory[]
   if (derived.of === 'trend') {
     trail = extendTrail(memory.trail ?? [], [at, values[0] ?? NaN], derived.windowMs);
     value = trend(trail, derived.windowMs);
-  } else value = formula(derived, values);
+  } else value = formulaWithinRange(derived, values);
   return { ...memory, value: value !== null && Number.isFinite(value) ? value : null, at, lastAt: at, trail };
+}
+
+/** The handbook's equations throw outside their range; a reading must not stop a house, so there the value is unknown. */
+function formulaWithinRange(derived: PlanDerived, values: number[]): number | null {
+  try {
+    return formula(derived, values);
+  } catch {
+    return null;
+  }
 }
 
 /**

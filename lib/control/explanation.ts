@@ -1,10 +1,14 @@
 /** Why a channel is as it is, at an instant that is settled. */
-import { becauseOf, ladderOf } from './ladder';
-import { entry, type Run } from './run';
+import { becauseOf, ladderOf, ladderUnder } from './ladder';
+import { entry, told, type Run } from './run';
 import type { Explanation } from './types';
 
 /** The ladder of a channel at `run.at`; `next` is left to whoever can look ahead. */
 export function explainSettled(run: Run, channel: number): Explanation {
+  return told(run, () => explanationOf(run, channel));
+}
+
+function explanationOf(run: Run, channel: number): Explanation {
   const { id, wanted, claim } = entry(run.channels, channel);
   const decided = claim ?? 'idle';
   const because = becauseOf(run, channel, decided);
@@ -16,6 +20,7 @@ export function explainSettled(run: Run, channel: number): Explanation {
     claim: decided,
     until: typeof because.until === 'number' ? because.until : null,
     ladder: ladderOf(run, channel, decided),
+    under: ladderUnder(run, channel, decided),
     next: [],
     rule,
   };

@@ -1,8 +1,10 @@
 /** Standing conditions that somebody should know of: the whole list at every step, told when one begins or ends. */
 import { coldestPoint } from './claims/frost';
+import { wakeForDay } from './claims/rest';
 import { isUnderFloor } from './claims/source-guard';
-import { restForbids } from './claims/rest';
+import { usedMs } from './day';
 import { entry, type Run } from './run';
+import { isUnsteady } from './steady';
 import type { Data, Fault } from './types';
 
 type About = Fault['about'];
@@ -50,18 +52,24 @@ function houseFaults(run: Run, stand: Stand): void {
 }
 
 function pointFaults(run: Run, index: number, stand: Stand): void {
-  const { id, quality, why, at, contradictedSince } = entry(run.points, index);
-  const { derived, key } = entry(run.plan.points, index);
+  const memory = entry(run.points, index);
+  const { id, quality, why, at, contradictedSince } = memory;
+  const { derived, key, isHouse } = entry(run.plan.points, index);
   // a derived point is bad by its inputs, which stand in this list themselves
   const tells = why !== 'never-spoke' || run.plan.usedPoints.has(index);
-  if (quality === 'bad' && derived === null && tells)
+  // one that comes and goes is one fault, however it stands just now
+  if (isUnsteady(memory))
+    stand('point-unsteady', { point: id }, () => ({ key, why: memory.doubts?.why ?? null, lastAt: at }));
+  else if (quality === 'bad' && derived === null && tells)
     stand('point-bad', { point: id }, () => ({ key, why, lastAt: at }));
-  if (contradictedSince !== null && run.at >= contradictedSince + CONTRADICTED_MS)
+  const { frostLimit } = run.plan.house;
+  const inFrost = isHouse && frostLimit !== null && contradictedSince !== null;
+  if (inFrost && run.at >= contradictedSince + CONTRADICTED_MS)
     stand('frozen-point-in-frost', { point: id }, () => ({ key, contradictedSince }));
 }
 
 function sourceFaults(run: Run, index: number, stand: Stand): void {
-  const { id, config, core, slug, dailyLimitMs, channels } = entry(run.plan.sources, index);
+  const { id, config, core, slug, dailyLimitMs } = entry(run.plan.sources, index);
   const memory = entry(run.sources, index);
   const value = core === null ? null : entry(run.points, core).value;
   if (isUnderFloor(run, index))
@@ -69,9 +77,11 @@ function sourceFaults(run: Run, index: number, stand: Stand): void {
   const needsCore = config.coreFloor !== null || (config.ready !== null && !memory.ready);
   if (needsCore && (core === null || run.usable[core] !== 'good'))
     stand('core-not-good', { source: id }, () => ({ source: slug, point: config.corePoint }));
-  const first = channels[0];
-  if (dailyLimitMs !== null && first !== undefined && restForbids(run, first) === 'daily-limit')
+  // spent is spent, though the source rests besides
+  if (dailyLimitMs !== null && usedMs(memory, run.at) >= dailyLimitMs) {
+    wakeForDay(run, index, dailyLimitMs);
     stand('daily-limit', { source: id }, () => ({ source: slug, limitS: dailyLimitMs / 1000 }));
+  }
   if (memory.ranToMost) stand('rest-ran-to-most', { source: id }, () => ({ source: slug }));
 }
 
@@ -93,7 +103,10 @@ function channelFaults(run: Run, index: number, stand: Stand): void {
   if (memory.overHighLimit) stand('high-limit', { channel: id }, named);
   if (memory.noGainUntil !== null && run.at < memory.noGainUntil) stand('no-gain', { channel: id }, named);
   if (memory.standing) stand('fan-standing', { channel: id }, named);
+  if (memory.unbidden === true) stand('runs-though-off', { channel: id }, named);
   // an order given in this very step cannot have been followed yet, and `counted` then goes by what is wanted
-  if (relay !== null && memory.counted === relay.reported && memory.counted !== memory.wanted)
+  // and while its node's fallback runs it, nobody has told the node yet
+  const follows = relay === null || memory.counted !== relay.reported || memory.counted === memory.wanted;
+  if (!follows && relay.isAlone !== true)
     stand('relay-does-not-follow', { channel: id }, () => ({ key, wanted: memory.wanted }));
 }

@@ -8,6 +8,8 @@ import {
   type SourceMemory,
 } from './memory';
 import type { Plan } from './plan';
+import { creditAt } from './credit';
+import { settleDay } from './day';
 
 export function fit(plan: Plan, memory: Memory): Memory {
   if (memory.shape === plan.shape) return memory;
@@ -20,6 +22,8 @@ export function fit(plan: Plan, memory: Memory): Memory {
   const channels = sort(plan.channels, [...parked.channels, ...memory.channels], (one) =>
     newChannel(one.id, one.safe),
   );
+  const at = memory.at ?? 0;
+  const wasParked = new Set(parked.channels.map((one) => one.id));
   return {
     ...emptyMemory(),
     ...memory,
@@ -27,15 +31,36 @@ export function fit(plan: Plan, memory: Memory): Memory {
     points: points.kept,
     rules: rules.kept,
     sources: sources.kept,
-    channels: channels.kept,
+    channels: channels.kept.map((one, index) =>
+      wasParked.has(one.id) ? standing(one, plan.channels[index]?.safe ?? 'off') : one,
+    ),
     parked: {
       points: points.parked,
       rules: rules.parked,
-      sources: sources.parked,
-      channels: channels.parked.map((one) => ({ ...one, hand: null, prove: null, relay: null })),
+      sources: sources.parked.map((one) => laidAside(one, at)),
+      channels: channels.parked.map((one) => ({
+        ...switchedOff(one, at),
+        ...{ hand: null, prove: null, relay: null },
+      })),
     },
   };
 }
+
+/** A removed channel goes off: its least off counts from there, whenever it comes back. */
+const switchedOff = (one: ChannelMemory, at: number): ChannelMemory =>
+  one.counted === 'off' && one.wanted === 'off'
+    ? one
+    : { ...one, wanted: 'off', counted: 'off', countedSince: at, leastSince: at };
+
+/** One that comes back stands as its wiring left it, coil off. */
+const standing = (one: ChannelMemory, safe: ChannelMemory['wanted']): ChannelMemory =>
+  one.wanted === safe ? one : { ...one, wanted: safe, counted: safe };
+
+/** Nothing draws on a source that is gone, and nothing comes back to it. */
+const laidAside = (one: SourceMemory, at: number): SourceMemory =>
+  one.draws === 0 && one.slope === 0
+    ? one
+    : { ...settleDay(one, 0, at), credit: creditAt(one, at), creditAt: at, slope: 0 };
 
 function sort<P extends { id: string }, M extends { id: string }>(
   wanted: P[],
@@ -60,6 +85,7 @@ const newPoint = (id: string): PointMemory => ({
   quality: 'bad',
   why: 'never-spoke',
   uncertainSince: null,
+  doubts: null,
   contradictedSince: null,
   trail: null,
 });

@@ -13,7 +13,7 @@ import { rest } from './claims/rest';
 import { shortCycle } from './claims/short-cycle';
 import { sourceGuard } from './claims/source-guard';
 import type { Run } from './run';
-import type { Claim, Data, LadderStep, State } from './types';
+import { CLAIMS, type Claim, type Data, type LadderStep, type State } from './types';
 
 /** A rung without its own name: what all of them have in common. */
 interface Rung {
@@ -83,6 +83,12 @@ export function decide(run: Run, channel: number): { claim: Claim; state: State 
 export const becauseOf = (run: Run, channel: number, claim: Claim): Data =>
   BY_CLAIM.get(claim)?.because(run, channel) ?? {};
 
+/** The same by names alone, of a decision that did not outlast its instant. */
+export const bareLadder = (decided: Claim, wants: State): LadderStep[] => [
+  ...CLAIMS.slice(0, CLAIMS.indexOf(decided)).map((claim) => ({ claim, speaks: false })),
+  { claim: decided, speaks: true, wants },
+];
+
 /** The ladder down to the claim that decided, as data. */
 export function ladderOf(run: Run, channel: number, decided: Claim): LadderStep[] {
   const steps: LadderStep[] = [];
@@ -95,5 +101,18 @@ export function ladderOf(run: Run, channel: number, decided: Claim): LadderStep[
     steps.push({ claim: one.claim, speaks: true, wants, because: one.because(run, channel) });
     break;
   }
+  return steps;
+}
+
+/** Claims under the one that decided that would speak if it did not, from short-cycle down; nothing else is no claim. */
+export function ladderUnder(run: Run, channel: number, decided: Claim): LadderStep[] {
+  const { wake } = run;
+  const place = LADDER.findIndex((one) => one.claim === decided);
+  const steps = LADDER.slice(place + 1).flatMap(({ claim, speaks, because }): LadderStep[] => {
+    const wants = claim === 'idle' ? null : speaks(run, channel);
+    return wants === null ? [] : [{ claim, speaks: true, wants, because: because(run, channel) }];
+  });
+  // asking is no reason to wake
+  run.wake = wake;
   return steps;
 }

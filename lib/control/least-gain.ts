@@ -1,6 +1,7 @@
 /** Two looks at whether a running fan really brings heat: its least gain, and the proof that it turns. */
 import { beginRest, draws, leastRestMs } from './credit';
-import { entry, wakeAt, type Run } from './run';
+import { awaitReading, isDifferenceUnder, isOver } from './lines';
+import { dueAt, entry, wakeAt, type Run } from './run';
 
 const LOW_MS = 120_000;
 /** A fan has this long to come up to speed before a reading of its proof counts. */
@@ -9,14 +10,19 @@ const SPIN_UP_MS = 15_000;
 /** A load that is ordered on and whose proof shows nothing counts as not drawing. */
 export function settleProof(run: Run, channel: number): void {
   const { config, runProofPoint } = entry(run.plan.channels, channel);
-  if (config.runProof === null || runProofPoint === null) return;
   const memory = entry(run.channels, channel);
   let { standing } = memory;
-  if (memory.counted === 'off') standing = false;
+  if (config.runProof === null || runProofPoint === null) {
+    // a proof that was taken away denies nothing any more
+    if (standing) run.channels[channel] = { ...memory, standing: false };
+    return;
+  }
+  if (memory.counted === 'off' || run.usable[runProofPoint] === 'bad') standing = false;
   else if (run.usable[runProofPoint] === 'good') {
     const { value, at } = entry(run.points, runProofPoint);
     const says = at !== null && at >= (memory.countedSince ?? -Infinity) + SPIN_UP_MS;
-    if (says && value !== null) standing = value <= config.runProof.above;
+    if (!says) awaitReading(run, runProofPoint);
+    else if (value !== null) standing = !isOver(run, runProofPoint, config.runProof.above);
   }
   if (standing !== memory.standing) run.channels[channel] = { ...memory, standing };
 }
@@ -32,6 +38,7 @@ export function settleGain(run: Run, channel: number): void {
   const wanted = draws(run, channel) ? gainWanted(run, rules) : null;
   let { gainLowSince, noGainUntil } = memory;
   if (noGainUntil !== null && run.at >= noGainUntil) noGainUntil = null;
+  if (noGainUntil !== null) dueAt(run, noGainUntil);
   if (wanted === null) gainLowSince = null;
   else {
     const looksAt = (memory.countedSince ?? -Infinity) + wanted.afterMs;
@@ -40,12 +47,13 @@ export function settleGain(run: Run, channel: number): void {
       gainLowSince = null;
     } else if (isLow(run, wanted)) {
       gainLowSince ??= run.at;
-      if (run.at < gainLowSince + LOW_MS) wakeAt(run, gainLowSince + LOW_MS);
-      else {
-        gainLowSince = null;
+      if (run.at >= gainLowSince + LOW_MS) {
+        // where frost draws on all the same, the two minutes begin anew now, not at whatever step comes next
+        gainLowSince = run.at;
         noGainUntil = run.at + leastRestMs(run, entry(run.plan.sources, source));
         spendAll(run, source);
       }
+      wakeAt(run, gainLowSince + LOW_MS);
     } else gainLowSince = null;
   }
   if (gainLowSince !== memory.gainLowSince || noGainUntil !== memory.noGainUntil)
@@ -65,8 +73,7 @@ function gainWanted(run: Run, rules: readonly number[]): Gain | null {
 function isLow(run: Run, { intake, return: back, kelvin }: Gain): boolean {
   if (intake === null || back === null) return false;
   if (run.usable[intake] !== 'good' || run.usable[back] !== 'good') return false;
-  const gain = (entry(run.points, back).value ?? NaN) - (entry(run.points, intake).value ?? NaN);
-  return gain < kelvin;
+  return isDifferenceUnder(run, back, intake, kelvin);
 }
 
 function spendAll(run: Run, source: number): void {

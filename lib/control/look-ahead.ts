@@ -1,79 +1,127 @@
-/** What comes next for a channel: by the clock alone, and sooner if a reading passes a threshold. */
-import type { NextReason } from './because';
-import { entry, type Run } from './run';
+/**
+ * What comes next for a channel: by the clock alone, by a reading that passes a threshold, and by what somebody does.
+ * Nothing here reasons about the claims: each candidate is tried on the core itself, and told only if it would change
+ * what runs, when, or what decides.
+ */
+import type { NextIf, NextReason, NextThen } from './because';
+import { eventsAhead } from './events-ahead';
 import type { Memory } from './memory';
-import type { Plan } from './plan';
-import { play } from './play';
-import type { Data, Explanation, Observed } from './types';
+import { entry, type Run } from './run';
+import { moved } from './moved';
+import { thresholdsOf, type Threshold } from './thresholds';
+import { CLAIMS, type Data, type Explanation } from './types';
+import { asItIs, changesBy, ifInstead, type Future, type Told } from './what-if';
 
 const AHEAD_MS = 24 * 3_600_000;
-const WAKES = 60;
+/** What a reading sets going comes within a few instants: a least time, two minutes without gain, a delay. */
+const NEAR_WAKES = 5;
 
-/** Adds what follows to an explanation of the instant at which `run` stands. */
+/**
+ * Adds what follows to an explanation of the instant at which `run` stands. It costs some dozens of steps, so it is
+ * reckoned when somebody reads it: a replay of a winter never does. @param memory as the step left it
+ */
 export function addLookAhead(run: Run, memory: Memory, explanation: Explanation): Explanation {
-  const channel = memory.channels.findIndex((one) => one.id === explanation.channel);
-  if (channel < 0) return explanation;
-  const reasons = [byTheClock(run.plan, memory, channel), ...byReadings(run, channel, explanation)];
-  // reasons are plain JSON by their types; an interface only lacks the index that Data asks for
-  const next = reasons.filter((one) => one !== null).map((one) => one as unknown as Data);
-  return { ...explanation, next };
+  let next: Data[] | null = null;
+  return {
+    ...explanation,
+    get next() {
+      // reasons are plain JSON by their types; an interface only lacks the index that Data asks for
+      next ??= whatNext(run, memory, explanation).map((one) => one as unknown as Data);
+      return next;
+    },
+  };
 }
 
-/** The first change of state or claim within a day if no reading changes. */
-function byTheClock(plan: Plan, from: Memory, channel: number): NextReason | null {
-  const at = from.at ?? 0;
-  const { wanted, claim } = entry(from.channels, channel);
-  // nobody will report or be unplugged in this future
-  let memory: Memory = { ...from, channels: from.channels.map((one) => ({ ...one, relay: null })) };
-  const observed: Observed = { workerStartedAt: 0, points: {}, relays: {}, commands: [] };
-  for (let look = 0; look < WAKES && memory.wakeAt !== null && memory.wakeAt <= at + AHEAD_MS; look += 1) {
-    const played = play(plan, memory, observed, memory.wakeAt, { explains: false, readingsHold: true });
-    memory = played.memory;
-    const then = entry(memory.channels, channel);
-    if (then.wanted !== wanted || then.claim !== claim)
-      return { kind: 'then', at: memory.at ?? at, state: then.wanted, claim: then.claim ?? 'idle' };
-  }
-  return null;
+function whatNext(run: Run, memory: Memory, { channel: id, state, claim }: Explanation): NextReason[] {
+  const channel = memory.channels.findIndex((one) => one.id === id);
+  if (channel < 0) return [];
+  const base = asItIs(run, memory, channel);
+  const events = eventsAhead(run, base, { state, claim }, base.at + AHEAD_MS);
+  // it waits for a relay's report: what comes of readings cannot be said before
+  if (base.state !== state || base.claim !== claim) return events;
+  const { change, flip } = changesBy(base, base.at + AHEAD_MS);
+  const thens = [change, flip].flatMap((one, place, both): NextThen[] =>
+    one === null || (place === 1 && both[0]?.at === one.at) ? [] : [{ kind: 'then', ...one }],
+  );
+  const thresholds = thresholdsOf(run, channel, flip?.at ?? null);
+  const ifs = thresholds.flatMap((one) => tried(base, flip, one, isAlone(run, one, thresholds)) ?? []);
+  return [...thens, ...nearest(ifs, base.at), ...events];
 }
 
-/** Thresholds that would change what was decided. */
-function byReadings(run: Run, channel: number, { claim }: Explanation): NextReason[] {
-  const { inFrost, frostMayBreakRest, rules } = entry(run.plan.channels, channel);
-  const reasons: NextReason[] = [];
-  const { frostLimit } = run.plan.house;
-  const yieldsToFrost =
-    ['fail-safe', 'band', 'idle'].includes(claim) || (claim === 'rest' && frostMayBreakRest);
-  if (frostLimit !== null && inFrost !== null && yieldsToFrost && claim !== 'band') {
-    const state = inFrost === 'helps' ? 'on' : 'off';
-    reasons.push({ kind: 'if', point: null, side: 'below', value: frostLimit, state, claim: 'frost' });
-  }
-  for (const rule of rules) {
-    const { warm, points } = entry(run.plan.rules, rule);
-    const { low, high } = entry(run.calendars, rule);
-    const { key, offset } = entry(points, entry(run.rules, rule).using);
-    const standing = run.standing[rule];
-    if (claim === 'idle' && standing === 'satisfied') {
-      const side = warm ? 'below' : 'above';
-      reasons.push({
-        kind: 'if',
-        point: key,
-        side,
-        value: (warm ? low : high) - offset,
-        state: 'on',
-        claim: 'band',
-      });
-    }
-    if (claim === 'band' && standing === 'wants') {
-      const side = warm ? 'above' : 'below';
-      reasons.push({
-        kind: 'if',
-        point: key,
-        side,
-        value: (warm ? high : low) - offset,
-        state: 'off',
-        claim: 'idle',
-      });
-    }
-  }
-  return reasons;
+/** What a reading past the threshold would bring; null: nothing. */
+function tried(base: Future, flip: Told | null, threshold: Threshold, alone: boolean): NextIf | null {
+  const { point, side, value, orAt, of } = threshold;
+  const step = (side === 'above' ? 1 : -1) * 1e-6 * Math.max(1, Math.abs(value));
+  const outcome = outcomeOf(base, flip, threshold, orAt ? value : value + step);
+  if (outcome === null) return null;
+  const keepsState = outcome.state === base.state;
+  // with nothing else to come, another claim for the same state is news only where it is the deciding one that lets go
+  const letsGo = of === base.claim && CLAIMS.indexOf(outcome.claim) > CLAIMS.indexOf(base.claim);
+  if (keepsState && flip === null && !letsGo) return null;
+  // what a threshold on the way there brings already is told of that one
+  const near = orAt ? value - step : value;
+  const isSure = alone && outcome.at === base.at;
+  if (!isSure && isSame(outcomeOf(base, flip, { ...threshold, overTime: true }, near), outcome)) return null;
+  const key = point === null ? null : entry(base.plan.points, point).key;
+  return {
+    ...{ kind: 'if', point: key, side, value },
+    ...(orAt ? { orAt } : {}),
+    ...(outcome.at > base.at ? { at: outcome.at } : {}),
+    ...(flip !== null && outcome.at > flip.at ? { later: true } : {}),
+    ...{ state: outcome.state, claim: outcome.claim },
+  };
+}
+
+/** No other threshold lies on the way to it: none of its point, of the coldest, or of a point made of others. */
+function isAlone(run: Run, one: Threshold, all: readonly Threshold[]): boolean {
+  const isMade = ({ point }: Threshold) => point === null || entry(run.plan.points, point).derived !== null;
+  return all.every((other) => other === one || (other.point !== one.point && !isMade(other) && !isMade(one)));
+}
+
+/** What a channel does differently when a reading is `value`. */
+function outcomeOf(base: Future, flip: Told | null, threshold: Threshold, value: number): Told | null {
+  const future = ifInstead(base, moved(base, threshold, value));
+  if (future.state !== base.state) return future;
+  if (flip === null && future.claim !== base.claim) return future;
+  if (!threshold.overTime && !isMoved(base, future)) return null;
+  const horizon = base.at + AHEAD_MS;
+  const other = flip === null ? changesBy(future, horizon, NEAR_WAKES) : changesBy(future, flip.at);
+  // that another claim does the same at the same time is no news
+  if (other.flip !== null && other.flip.at === flip?.at) return null;
+  if (other.flip !== null || flip === null || !other.isKnown) return other.flip;
+  // what was to come by the clock does not: later, or not at all
+  const later = changesBy(other.end, horizon, NEAR_WAKES);
+  return later.flip ?? { at: flip.at, state: base.state, claim: other.claim };
+}
+
+const isSame = (a: Told | null, b: Told | null): boolean =>
+  a !== null && b !== null && a.at === b.at && a.state === b.state && a.claim === b.claim;
+
+/** Whether a reading has turned anything in the house that bears on the channel, beside its own value. */
+function isMoved(base: Future, { run, claim }: Future): boolean {
+  const { source } = entry(base.plan.channels, base.channel);
+  const before = base.run;
+  if (claim !== base.claim || run.frost.on !== before.frost.on) return true;
+  if (run.standing.some((standing, rule) => standing !== before.standing[rule])) return true;
+  if (run.channels.some((one, place) => one.overHighLimit !== before.channels[place]?.overHighLimit))
+    return true;
+  return source !== null && entry(run.sources, source) !== entry(before.sources, source);
+}
+
+/** Of thresholds of one point that bring the same, the one that is reached first; the soonest first. */
+function nearest(ifs: NextIf[], now: number): NextIf[] {
+  const farther = (a: NextIf, b: NextIf) => (a.side === 'above' ? a.value > b.value : a.value < b.value);
+  return ifs
+    .filter(
+      (one, place) =>
+        !ifs.some(
+          (other, at) =>
+            at !== place &&
+            other.point === one.point &&
+            other.side === one.side &&
+            other.state === one.state &&
+            (farther(one, other) || (other.value === one.value && at < place)),
+        ),
+    )
+    .sort((a, b) => (a.at ?? now) - (b.at ?? now));
 }

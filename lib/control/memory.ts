@@ -46,10 +46,24 @@ export interface PointMemory {
   quality: Quality;
   why: string | null;
   uncertainSince: number | null;
+  /** When and why it was in doubt; null: it never was. Memories of before this was kept lack it. */
+  doubts: DoubtMemory | null;
   /** A frozen cold point that another house point contradicts, since then. */
   contradictedSince: number | null;
   /** trend: [time, value], thinned to the window's needs. */
   trail: [number, number][] | null;
+}
+
+export interface DoubtMemory {
+  /** Since when it is not good, and what dropped it; null while it is. */
+  since: number | null;
+  why: string | null;
+  /** The last time in doubt that is over. */
+  last: { why: string | null; from: number; to: number } | null;
+  /** Its newest drops, three at most. */
+  drops: number[];
+  /** Good without a break since, while that is not yet believed. */
+  goodSince: number | null;
 }
 
 export interface RuleMemory {
@@ -96,6 +110,8 @@ export interface RelayMemory {
   reportedAt: number | null;
   acknowledges: boolean;
   leaseEndsAt: number | null;
+  /** Its node's fallback has it on, and nobody commands the node. */
+  isAlone?: boolean;
   /** The step that was told this. */
   seenAt: number;
 }
@@ -127,8 +143,12 @@ export interface ChannelMemory {
   pointDeadSince: number | null;
   gainLowSince: number | null;
   noGainUntil: number | null;
+  /** What its node's fallback ran up to then has been taken in; absent: nothing was ever told. */
+  aloneTill?: number;
   /** Ordered on, but its proof point shows nothing. */
   standing: boolean;
+  /** Off, but its proof point shows that it runs; memories of before this was kept lack it. */
+  unbidden?: boolean;
 }
 
 export interface FrostMemory {

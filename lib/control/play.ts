@@ -3,12 +3,14 @@ import { takeCommands } from './commands';
 import { extendLease, noteRelay } from './counting';
 import { faultsNow } from './faults';
 import { fit } from './fit';
-import { MEMORY_VERSION, type Memory } from './memory';
+import { isLull, lullSince } from './lull';
+import { MEMORY_VERSION, type Memory, type PointMemory } from './memory';
 import type { Plan } from './plan';
 import { silenceAhead, takeReading } from './quality';
-import { entry, type Run } from './run';
-import { settle, settleUndriven } from './settle';
-import type { Observed } from './types';
+import { takeRunsAlone } from './ran-alone';
+import { entry, filled, nextWake, nothingFound, type Run } from './run';
+import { settle, settleDecisions, settleReadings, settleUndriven } from './settle';
+import type { Observed, Quality } from './types';
 
 export interface Played {
   run: Run;
@@ -18,7 +20,7 @@ export interface Played {
 export interface PlayOptions {
   /** Whether switchings carry their ladder. */
   explains: boolean;
-  /** A look ahead: the readings stay as they are and no point falls silent. */
+  /** A look ahead: the readings stay as they are, no point falls silent and none that is silent speaks. */
   readingsHold?: boolean;
 }
 
@@ -36,7 +38,8 @@ export function play(
   const memory = fit(plan, given);
   // a clock that went back stands still for control
   const stepAt = memory.at === null ? now : Math.max(now, memory.at);
-  const run = begin(plan, memory, observed, stepAt, options);
+  const before = lullSince(plan, memory, observed, stepAt);
+  const run = begin(plan, memory, observed, stepAt, options, before);
   if (memory.at !== null && memory.at < stepAt) {
     if (observed.workerStartedAt > memory.at) passUndriven(run, memory.at);
     else if (memory.wakeAt !== null && memory.wakeAt < stepAt) pass(run, memory.wakeAt);
@@ -48,43 +51,76 @@ export function play(
     if (seen !== undefined && point.derived === null)
       run.points[index] = takeReading(point, entry(run.points, index), seen, stepAt);
   }
-  for (let index = 0; index < plan.channels.length; index += 1) noteRelay(run, index);
+  for (let index = 0; before === null && index < plan.channels.length; index += 1) {
+    noteRelay(run, index);
+    takeRunsAlone(run, index);
+  }
   const taken = takeCommands(run, memory.taken);
-  settle(run);
+  settleReadings(run);
+  if (before !== null) {
+    if (isLull(run, before)) return { run, memory: remember(run, memory, taken, memory.faults) };
+    // from here on everything is found anew, and the step before keeps what it found
+    Object.assign(run, nothingFound(plan));
+    ownLists(run);
+  }
+  settleDecisions(run);
   const faults = faultsNow(run, memory.faults);
   return { run, memory: remember(run, memory, taken, faults) };
 }
 
-function begin(plan: Plan, memory: Memory, observed: Observed, stepAt: number, options: PlayOptions): Run {
-  const channels = plan.channels.length;
-  return {
+function begin(
+  plan: Plan,
+  memory: Memory,
+  observed: Observed,
+  stepAt: number,
+  options: PlayOptions,
+  before: Run | null,
+): Run {
+  const found = before ?? nothingFound(plan);
+  const run = {
     plan,
     observed,
     at: stepAt,
     stepAt,
     undriven: false,
     awayFrom: null,
-    silentAt: options.readingsHold === true ? plan.points.map(() => Infinity) : null,
-    wake: Infinity,
+    silentAt: options.readingsHold === true ? memory.points.map(heldSilence) : null,
     points: memory.points.slice(),
-    rules: memory.rules.slice(),
-    sources: memory.sources.slice(),
-    channels: memory.channels.slice(),
+    rules: memory.rules,
+    sources: memory.sources,
+    channels: memory.channels,
     frost: memory.frost,
-    usable: new Array<Run['usable'][number]>(plan.points.length).fill('bad'),
-    calendars: [],
-    standing: [],
-    lowerClaim: new Array<Run['lowerClaim'][number]>(channels).fill('idle'),
-    lowerState: new Array<Run['lowerState'][number]>(channels).fill('off'),
-    demandClaim: new Array<Run['demandClaim'][number]>(channels).fill('idle'),
-    demandState: new Array<Run['demandState'][number]>(channels).fill('off'),
-    interlocked: new Array<Run['interlocked'][number]>(channels).fill(null),
-    drawRate: [],
-    drawCount: [],
+    wake: found.wake,
+    readingsWake: Infinity,
+    due: found.due,
+    over: found.over,
+    under: found.under,
+    usable: before === null ? filled<Quality>(plan.points.length, 'bad') : before.usable.slice(),
+    calendars: found.calendars,
+    standing: found.standing,
+    lowerClaim: found.lowerClaim,
+    lowerState: found.lowerState,
+    demandClaim: found.demandClaim,
+    demandState: found.demandState,
+    interlocked: found.interlocked,
+    drawRate: found.drawRate,
+    drawCount: found.drawCount,
     events: [],
     explains: options.explains,
   };
+  if (before === null) ownLists(run);
+  return run;
 }
+
+/** The memory given is not changed: what a step may write into is its own. */
+function ownLists(run: Run): void {
+  run.rules = run.rules.slice();
+  run.sources = run.sources.slice();
+  run.channels = run.channels.slice();
+}
+
+const heldSilence = ({ why }: PointMemory): number =>
+  why === 'silent' || why === 'worker-was-away' ? -Infinity : Infinity;
 
 /** Through the instants between, under what the last step knew; but leases were renewed and readings fill silences. */
 function pass(run: Run, first: number): void {
@@ -95,7 +131,7 @@ function pass(run: Run, first: number): void {
     run.plan.points.map((point, index) =>
       silenceAhead(point, entry(run.points, index), run.observed.points[point.id]),
     );
-  for (let at = first; at < run.stepAt; at = run.wake) {
+  for (let at = first; at < run.stepAt; at = nextWake(run)) {
     run.at = at;
     settle(run);
   }
@@ -107,7 +143,7 @@ function passUndriven(run: Run, from: number): void {
   for (let channel = 0; channel < run.plan.channels.length; channel += 1) extendLease(run, channel);
   run.undriven = true;
   run.awayFrom = from;
-  for (let at = from; at < run.stepAt; at = run.wake) {
+  for (let at = from; at < run.stepAt; at = nextWake(run)) {
     run.at = at;
     settleUndriven(run);
   }
@@ -115,10 +151,11 @@ function passUndriven(run: Run, from: number): void {
 }
 
 function remember(run: Run, memory: Memory, taken: number, faults: Memory['faults']): Memory {
+  const wake = nextWake(run);
   return {
     version: MEMORY_VERSION,
     at: run.stepAt,
-    wakeAt: run.wake === Infinity ? null : run.wake,
+    wakeAt: wake === Infinity ? null : wake,
     shape: run.plan.shape,
     taken,
     points: run.points,

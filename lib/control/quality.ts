@@ -1,7 +1,8 @@
 /** Which readings are believed, and how good a point is at an instant. */
 import type { PointMemory } from './memory';
 import type { PlanPoint } from './plan';
-import { entry, wakeAt, type Run } from './run';
+import { entry, wakeForReadings, type Run } from './run';
+import { steadied } from './steady';
 import type { ObservedPoint, Quality } from './types';
 
 const AHEAD_MS = 120_000;
@@ -98,6 +99,7 @@ export function takeReading(
     quality: memory.quality,
     why: memory.why,
     uncertainSince: memory.uncertainSince,
+    doubts: memory.doubts,
     contradictedSince: memory.contradictedSince,
     trail: memory.trail,
   };
@@ -124,10 +126,15 @@ export function settlePoints(run: Run): void {
           memory.why !== 'silent' && run.observed.workerStartedAt > spokeAt(memory) && run.at < excusedTill;
         quality = excused && quality !== 'bad' ? 'uncertain' : 'bad';
         why = excused ? (why ?? 'worker-was-away') : 'silent';
-        if (excused) wakeAt(run, excusedTill);
-      } else wakeAt(run, silentAt);
+        if (excused) wakeForReadings(run, excusedTill);
+      } else wakeForReadings(run, silentAt);
     }
-    keepQuality(run, index, quality, why);
+    // most points are good most of the time
+    if (quality === 'good' && memory.quality === 'good') keepQuality(run, index, quality, why);
+    else {
+      const judged = steadied(run, index, quality, why);
+      keepQuality(run, index, judged.quality, judged.why);
+    }
   }
 }
 
@@ -151,7 +158,7 @@ export function keepQuality(run: Run, index: number, quality: Quality, why: stri
   let usable = quality;
   if (memory.uncertainSince !== null) {
     if (run.at >= memory.uncertainSince + UNCERTAIN_MS) usable = 'bad';
-    else wakeAt(run, memory.uncertainSince + UNCERTAIN_MS);
+    else wakeForReadings(run, memory.uncertainSince + UNCERTAIN_MS);
   }
   run.usable[index] = usable;
 }

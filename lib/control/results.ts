@@ -4,14 +4,14 @@ import { isReady, isUnderFloor } from './claims/source-guard';
 import { creditAt } from './credit';
 import { usedMs } from './day';
 import { becauseOf } from './ladder';
-import { entry, type Run } from './run';
+import { entry, told, type Run } from './run';
 import type { ChannelResult, PointResult, SourceResult } from './types';
 
 export function channelResult(run: Run, index: number): ChannelResult {
   const { id, number, safe } = entry(run.plan.channels, index);
   const memory = entry(run.channels, index);
   const claim = memory.claim ?? 'idle';
-  const because = becauseOf(run, index, claim);
+  const because = told(run, () => becauseOf(run, index, claim));
   return {
     id,
     number,
@@ -26,14 +26,14 @@ export function channelResult(run: Run, index: number): ChannelResult {
 }
 
 export function pointResult(run: Run, index: number): PointResult {
-  const { id, value, at, quality, why } = entry(run.points, index);
-  return { id, value, at, quality, why };
+  const { id, value, at, quality, why, doubts } = entry(run.points, index);
+  return { id, value, at, quality, why, doubtSince: doubts?.since ?? null, lastDoubt: doubts?.last ?? null };
 }
 
 export function sourceResult(run: Run, index: number): SourceResult {
   const { id, slug, config } = entry(run.plan.sources, index);
   const memory = entry(run.sources, index);
-  const rest = memory.resting ? restTimes(run, index) : null;
+  const rest = memory.resting ? told(run, () => restTimes(run, index)) : null;
   return {
     id,
     slug,

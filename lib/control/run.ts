@@ -18,8 +18,15 @@ export interface Run {
   awayFrom: number | null;
   /** When each point falls silent, where that is not to be read from its memory alone. */
   silentAt: number[] | null;
-  /** Earliest later instant at which something changes by itself; Infinity: none. */
+  /** Earliest later instant at which something changes by itself, silence and doubt of readings apart; Infinity: none. */
   wake: number;
+  /** The same for silence and doubt, which every reading puts off. */
+  readingsWake: number;
+  /** Something kept is to be looked at then, though nobody need be woken for it. */
+  due: number;
+  /** By point: what was found holds while its value stays between these two (lines.ts). */
+  over: number[];
+  under: number[];
   points: PointMemory[];
   rules: RuleMemory[];
   sources: SourceMemory[];
@@ -46,6 +53,45 @@ export interface Run {
   explains: boolean;
 }
 
+/** What an instant's settling finds. */
+type Found = Pick<
+  Run,
+  | 'wake'
+  | 'due'
+  | 'over'
+  | 'under'
+  | 'calendars'
+  | 'standing'
+  | 'lowerClaim'
+  | 'lowerState'
+  | 'demandClaim'
+  | 'demandState'
+  | 'interlocked'
+  | 'drawRate'
+  | 'drawCount'
+>;
+
+/** Before it has found anything. */
+export function nothingFound({ points, channels, sources }: Plan): Found {
+  return {
+    wake: Infinity,
+    due: Infinity,
+    over: filled(points.length, -Infinity),
+    under: filled(points.length, Infinity),
+    calendars: [],
+    standing: [],
+    lowerClaim: filled<Claim>(channels.length, 'idle'),
+    lowerState: filled<State>(channels.length, 'off'),
+    demandClaim: filled<Claim>(channels.length, 'idle'),
+    demandState: filled<State>(channels.length, 'off'),
+    interlocked: filled<InterlockVerdict | null>(channels.length, null),
+    drawRate: filled(sources.length, 0),
+    drawCount: filled(sources.length, 0),
+  };
+}
+
+export const filled = <T>(length: number, value: T): T[] => new Array<T>(length).fill(value);
+
 /** Why a rule wants its channel on, or not. */
 export type RuleCode =
   | 'wants'
@@ -67,3 +113,28 @@ export function entry<T>(list: readonly T[], index: number): T {
 export function wakeAt(run: Run, instant: number): void {
   if (instant > run.at && instant < run.wake) run.wake = instant;
 }
+
+/** As `wakeAt`, for what every reading puts off. */
+export function wakeForReadings(run: Run, instant: number): void {
+  if (instant > run.at && instant < run.readingsWake) run.readingsWake = instant;
+}
+
+/** What was found at `run.at` need not hold from `instant` on, but it can wait for the next step. */
+export function dueAt(run: Run, instant: number): void {
+  if (instant > run.at && instant < run.due) run.due = instant;
+}
+
+/**
+ * What is asked only to be told. Claims note when they want to be awake as they are asked; a reason that somebody reads
+ * afterwards must not move what the run has settled, or reading would change when the next step comes.
+ */
+export function told<T>(run: Run, ask: () => T): T {
+  const { wake, readingsWake, due } = run;
+  const answer = ask();
+  run.wake = wake;
+  run.readingsWake = readingsWake;
+  run.due = due;
+  return answer;
+}
+
+export const nextWake = (run: Run): number => Math.min(run.wake, run.readingsWake);

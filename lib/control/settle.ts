@@ -10,18 +10,33 @@ import { settleCounted } from './counting';
 import { drawCost, settleSource } from './credit';
 import { settleDerived } from './derived';
 import { explainSettled } from './explanation';
-import { askDemand, askLower, decide } from './ladder';
+import { askDemand, askLower, bareLadder, decide } from './ladder';
 import { settleGain, settleProof } from './least-gain';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
-import type { Claim, State } from './types';
+import { settleUnbidden } from './unbidden';
+import type { Claim, Explanation, State } from './types';
 
-/** Settles `run.at`; afterwards `run.wake` is the earliest instant at which something changes by itself. */
+/** Settles `run.at`; afterwards `nextWake(run)` is the earliest instant at which something changes by itself. */
 export function settle(run: Run): void {
-  const { plan } = run;
-  run.wake = Infinity;
+  settleReadings(run);
+  settleDecisions(run);
+}
+
+/** How good every point is, and what the derived ones are. */
+export function settleReadings(run: Run): void {
+  run.readingsWake = Infinity;
   settlePoints(run);
   settleDerived(run);
+}
+
+/** Everything that follows from the readings. */
+export function settleDecisions(run: Run): void {
+  const { plan } = run;
+  run.wake = Infinity;
+  run.due = Infinity;
+  run.over.fill(-Infinity);
+  run.under.fill(Infinity);
   for (let rule = 0; rule < plan.rules.length; rule += 1)
     run.calendars[rule] = entry(plan.rules, rule).calendar(run.at);
   if (plan.usesTimeFacts) run.wake = Math.min(run.wake, plan.timeFacts(run.at).until);
@@ -34,12 +49,13 @@ export function settle(run: Run): void {
     const handsEnded = settleDemands(run);
     if (!decideAll(run) && !handsEnded) break;
   }
-  explainSwitchings(run, firstEvent);
+  explainDecisions(run, firstEvent);
 }
 
 /** While nobody drove: loads dropped with their leases, time went on, and that is all that can be said. */
 export function settleUndriven(run: Run): void {
   run.wake = Infinity;
+  run.readingsWake = Infinity;
   for (let rule = 0; rule < run.plan.rules.length; rule += 1)
     run.calendars[rule] = entry(run.plan.rules, rule).calendar(run.at);
   for (let channel = 0; channel < run.plan.channels.length; channel += 1) settleCounted(run, channel);
@@ -55,6 +71,7 @@ function settleSources(run: Run): void {
   for (let channel = 0; channel < channels.length; channel += 1) {
     settleCounted(run, channel);
     settleProof(run, channel);
+    settleUnbidden(run, channel);
   }
   for (let source = 0; source < sources.length; source += 1) {
     settleSource(run, source);
@@ -101,22 +118,15 @@ function keep(run: Run, channel: number, claim: Claim, state: State): boolean {
   const memory = entry(run.channels, channel);
   if (state === memory.wanted) {
     if (claim === memory.claim) return false;
-    run.events.push({ kind: 'decision', at: run.at, channel: memory.id, state, claim, before: memory.claim });
+    const { id, claim: before } = memory;
+    const explanation = unexplained(id, run.at, state, claim);
+    run.events.push({ kind: 'decision', at: run.at, channel: id, state, claim, before, explanation });
     run.channels[channel] = { ...memory, claim };
     return false;
   }
   countDraw(run, channel, state);
   run.channels[channel] = { ...memory, wanted: state, claim, orderedAt: run.stepAt };
-  const explanation = {
-    channel: memory.id,
-    at: run.at,
-    state,
-    claim,
-    until: null,
-    ladder: [],
-    next: [],
-    rule: null,
-  };
+  const explanation = unexplained(memory.id, run.at, state, claim);
   run.events.push({
     kind: 'switching',
     at: run.at,
@@ -129,6 +139,11 @@ function keep(run: Run, channel: number, claim: Claim, state: State): boolean {
   return true;
 }
 
+const unexplained = (channel: string, at: number, state: State, claim: Claim): Explanation => ({
+  ...{ channel, at, state, claim },
+  ...{ until: null, ladder: bareLadder(claim, state), next: [], rule: null },
+});
+
 function countDraw(run: Run, channel: number, state: State): void {
   const { source } = entry(run.plan.channels, channel);
   if (source === null || entry(run.channels, channel).counted === state) return;
@@ -137,14 +152,18 @@ function countDraw(run: Run, channel: number, state: State): void {
   run.drawCount[source] = Math.max(0, (run.drawCount[source] ?? 0) + sign);
 }
 
-/** A switching's ladder is taken once the instant is settled, so that what follows it can be foreseen. */
-function explainSwitchings(run: Run, firstEvent: number): void {
+/** A decision's ladder is taken once the instant is settled, so that what follows it can be foreseen. */
+function explainDecisions(run: Run, firstEvent: number): void {
+  if (!run.explains) return;
   for (let place = firstEvent; place < run.events.length; place += 1) {
     const event = entry(run.events, place);
-    if (event.kind !== 'switching') continue;
+    if (event.kind !== 'switching' && event.kind !== 'decision') continue;
     const channel = run.channels.findIndex((one) => one.id === event.channel);
-    if (!run.explains) continue;
     const explanation = explainSettled(run, channel);
+    // what a later round of the same instant overtook has the names of its ladder alone
+    if (event.kind === 'decision' && (event.claim !== explanation.claim || event.state !== explanation.state))
+      continue;
+    if (event.kind === 'switching' && event.to !== explanation.state) continue;
     run.events[place] = { ...event, claim: explanation.claim, explanation };
   }
 }

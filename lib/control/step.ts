@@ -1,5 +1,6 @@
 /** The heart: what runs now, why, and when to look again. */
 import { addLookAhead } from './look-ahead';
+import { rememberStep } from './lull';
 import type { Memory } from './memory';
 import type { Plan } from './plan';
 import { play } from './play';
@@ -17,45 +18,62 @@ import type { ChannelResult, ControlEvent, Fault, Observed, PointResult, SourceR
  */
 export function step(plan: Plan, memory: Memory, observed: Observed, now: number): StepResult {
   const { run, memory: next } = play(plan, memory, observed, now, { explains: true });
+  rememberStep(run, next);
   return new Answer(run, next);
 }
 
-/** Points and sources are reckoned when somebody looks: a replay of a winter never does. */
+/**
+ * Reasons, points and sources are reckoned when somebody looks: a replay of a winter never does. What each channel is to
+ * do and by which claim stands in the memory as well.
+ */
 class Answer implements StepResult {
   readonly memory: Memory;
-  readonly channels: ChannelResult[];
   readonly faults: Fault[];
   readonly events: ControlEvent[];
   readonly wakeAt: number | null;
   readonly #run: Run;
+  #channels: ChannelResult[] | null = null;
+  #points: PointResult[] | null = null;
+  #sources: SourceResult[] | null = null;
 
   constructor(run: Run, memory: Memory) {
     this.#run = run;
     this.memory = memory;
-    this.channels = [];
-    for (let index = 0; index < run.channels.length; index += 1)
-      this.channels.push(channelResult(run, index));
     this.faults = memory.faults;
     this.events = run.events.length === 0 ? run.events : tellEvents(run, memory);
     this.wakeAt = memory.wakeAt;
   }
 
+  get channels(): ChannelResult[] {
+    this.#channels ??= this.#run.channels.map((_, index) => channelResult(this.#run, index));
+    return this.#channels;
+  }
+
   get points(): PointResult[] {
-    return this.#run.plan.points.map((_, index) => pointResult(this.#run, index));
+    this.#points ??= this.#run.plan.points.map((_, index) => pointResult(this.#run, index));
+    return this.#points;
   }
 
   get sources(): SourceResult[] {
-    return this.#run.plan.sources.map((_, index) => sourceResult(this.#run, index));
+    this.#sources ??= this.#run.plan.sources.map((_, index) => sourceResult(this.#run, index));
+    return this.#sources;
   }
 }
 
-/** Switchings that a later one of the same step overtook are marked; the others learn what comes next. */
+/** Decisions that a later one of the same step overtook are marked; the others learn what comes next. */
 function tellEvents(run: Run, memory: Memory): ControlEvent[] {
-  const last = new Map<string, ControlEvent>();
-  for (const event of run.events) if (event.kind === 'switching') last.set(event.channel, event);
+  const switched = new Map<string, ControlEvent>();
+  const decided = new Map<string, ControlEvent>();
+  for (const event of run.events) {
+    if (event.kind === 'switching') switched.set(event.channel, event);
+    if (event.kind === 'switching' || event.kind === 'decision') decided.set(event.channel, event);
+  }
   return run.events.map((event) => {
-    if (event.kind !== 'switching') return event;
-    if (last.get(event.channel) !== event) return { ...event, overtaken: true };
+    if (event.kind !== 'switching' && event.kind !== 'decision') return event;
+    if (event.kind === 'switching' && switched.get(event.channel) !== event)
+      return { ...event, overtaken: true };
+    // what comes next is reckoned from where the step ends, so only for what still holds there
+    if (decided.get(event.channel) !== event) return event;
     return { ...event, explanation: addLookAhead(run, memory, event.explanation) };
   });
 }

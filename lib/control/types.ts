@@ -165,6 +165,10 @@ export interface ObservedRelay {
   acknowledges: boolean;
   /** Latest instant at which a lease given so far can end; null: none was given. */
   leaseEndsAt: number | null;
+  /** Nobody commanded the node when it reported, and its fallback has this coil on. */
+  isAlone?: boolean;
+  /** When this load ran by its node's own fallback, told since the step before; over, epoch ms. */
+  ranAlone?: { from: number; to: number }[];
 }
 
 export type PersonCommand = { number: number; at: number; by: string } & (
@@ -202,8 +206,12 @@ export interface PointResult {
   value: number | null;
   at: number | null;
   quality: Quality;
-  /** Why it is not good: silent, out-of-range, one-wire-fault, too-fast, frozen, input-bad … */
+  /** Why it is not good: silent, out-of-range, one-wire-fault, too-fast, frozen, unsteady, input-bad … */
   why: string | null;
+  /** Since when it is in doubt; null while it is good, and for a derived point. */
+  doubtSince: number | null;
+  /** The last time of doubt that is over: what dropped it, and when it came back. */
+  lastDoubt: { why: string | null; from: number; to: number } | null;
 }
 
 export interface SourceResult {
@@ -230,7 +238,7 @@ export interface LadderStep {
   because?: Data;
 }
 
-/** The ladder down to the claim that decided, and what would follow it. */
+/** The ladder down to the claim that decided, what stands under it, and what would follow it. */
 export interface Explanation {
   channel: string;
   at: number;
@@ -238,6 +246,8 @@ export interface Explanation {
   claim: Claim;
   until: number | null;
   ladder: LadderStep[];
+  /** Claims under the one that decided that speak too, highest first; absent in what was stored before they were told. */
+  under?: LadderStep[];
   /** What comes next, earliest first: when known, the claim that then decides, and what would bring it sooner. */
   next: Data[];
   rule: { id: string; version: number } | null;
@@ -255,8 +265,17 @@ export type ControlEvent = { at: number } & (
       overtaken?: true;
     }
   /** Another claim decides, the state stays; a switching tells its claim itself. `before` is null at a channel's first step. */
-  | { kind: 'decision'; channel: string; state: State; claim: Claim; before: Claim | null }
+  | {
+      kind: 'decision';
+      channel: string;
+      state: State;
+      claim: Claim;
+      before: Claim | null;
+      explanation: Explanation;
+    }
   | { kind: 'rest-begun' | 'rest-ended'; source: string; why: Data }
+  /** Told afterwards: a node ran its fallback while nobody commanded it. */
+  | { kind: 'ran-alone'; channel: string; from: number; to: number }
   | { kind: 'latch'; rule: string; on: boolean }
   | { kind: 'hand-begun' | 'hand-ended'; channel: string; why: Data }
   | { kind: 'lock-out-begun' | 'lock-out-ended'; channel: string; why: Data }
@@ -272,6 +291,7 @@ export interface Fault {
   kind:
     | 'frost'
     | 'point-bad'
+    | 'point-unsteady'
     | 'core-under-floor'
     | 'core-not-good'
     | 'frost-without-reading'
@@ -283,6 +303,7 @@ export interface Fault {
     | 'daily-limit'
     | 'rest-ran-to-most'
     | 'fan-standing'
+    | 'runs-though-off'
     | 'relay-does-not-follow'
     | 'frozen-point-in-frost';
   about: { point?: string; channel?: string; source?: string };

@@ -4,6 +4,7 @@ import { PageQuery, Text } from './common';
 export const ALARM_KINDS = [
   'point-silent',
   'point-not-trusted',
+  'point-unsteady',
   'frost',
   'node-lost',
   'control-not-running',
@@ -18,6 +19,7 @@ export const ALARM_KINDS = [
   'daily-limit',
   'rest-ran-to-most',
   'fan-standing',
+  'runs-though-off',
   'relay-does-not-follow',
   'frozen-point-in-frost',
   'cloned-token',

@@ -14,6 +14,10 @@ export const StatePoint = z.object({
   at: z.string().nullable(),
   quality: Quality,
   why: z.string().nullable(),
+  /** Since when it is in doubt; absent in what was kept before this was told. */
+  doubtSince: z.string().nullish(),
+  /** The last time of doubt that is over. */
+  lastDoubt: z.object({ why: z.string().nullable(), from: z.string(), to: z.string() }).nullish(),
 });
 
 export const StateChannel = z.object({

@@ -33,6 +33,16 @@ export function mapRulePoints(body: RuleBody, rename: (key: string, path: string
   };
 }
 
+/** Each point that a body names, once, in the order in which a reader meets them. */
+export function pointsOfRule(body: RuleBody): string[] {
+  const named = new Set<string>();
+  mapRulePoints(body, (key) => {
+    named.add(key);
+    return key;
+  });
+  return [...named];
+}
+
 type Rename = (key: string, path: string) => string;
 type Tree = NonNullable<RuleBody['only']>;
 

@@ -12,6 +12,9 @@ export const RuleVersion = z.strictObject({
   draftedAt: z.string(),
   forcedAt: z.string().nullable(),
   endedAt: z.string().nullable(),
+  /** Who took it out of force or put another in its place; the why is that of retiring. */
+  endedBy: z.string().nullable(),
+  endedWhy: z.string().nullable(),
 });
 export type RuleVersion = z.infer<typeof RuleVersion>;
 
@@ -27,6 +30,14 @@ export const Rule = z.strictObject({
   draft: RuleVersion.nullable(),
   inForce: RuleVersion.nullable(),
   retiredAt: z.string().nullable(),
+  /** Null while it is not retired. */
+  retired: z
+    .strictObject({ at: z.string(), by: z.string().nullable(), why: z.string().nullable() })
+    .nullable(),
+  /** The rule that this one began as a copy of; its name and house as they are now. */
+  copiedFrom: z
+    .strictObject({ rule: z.string(), name: z.string(), house: z.string(), version: z.number() })
+    .nullable(),
 });
 export type Rule = z.infer<typeof Rule>;
 
@@ -38,4 +49,9 @@ export const RuleListQuery = z.strictObject({
   /** Retired ones too. */
   retired: z.enum(['true', 'false']).default('false'),
 });
-export const Findings = z.strictObject({ findings: z.array(Finding) });
+export const Findings = z.strictObject({
+  findings: z.array(Finding),
+  /** What could not be looked at yet, for want of readings. */
+  notKnown: z.array(z.string()),
+});
+export type Findings = z.infer<typeof Findings>;

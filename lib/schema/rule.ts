@@ -48,6 +48,26 @@ export const ConditionTree: z.ZodType<ConditionTree> = z
   )
   .meta({ id: 'ConditionTree' });
 
+/** Far over what a person writes or reads, and what keeps checks and steps of one rule cheap. */
+export const MOST_CONDITIONS = 100;
+export const DEEPEST_CONDITIONS = 12;
+
+const sizeOf = (node: ConditionNode): { many: number; deep: number } => {
+  if ('fact' in node) return { many: 1, deep: 0 };
+  const inner = 'all' in node ? node.all : 'any' in node ? node.any : [node.not];
+  const sizes = inner.map(sizeOf);
+  return {
+    many: sizes.reduce((sum, one) => sum + one.many, 0),
+    deep: 1 + Math.max(...sizes.map((one) => one.deep)),
+  };
+};
+
+const Only = ConditionTree.refine((tree) => sizeOf(tree).many <= MOST_CONDITIONS, {
+  error: `A rule takes at most ${MOST_CONDITIONS} conditions.`,
+}).refine((tree) => sizeOf(tree).deep <= DEEPEST_CONDITIONS, {
+  error: `Conditions may stand at most ${DEEPEST_CONDITIONS} groups deep.`,
+});
+
 export const BandPeriod = z
   .strictObject({
     from: DayTime,
@@ -100,7 +120,7 @@ export const RuleBody = z.strictObject({
       'Two periods begin at the same time.',
     ),
   rest: Rest.optional(),
-  only: ConditionTree.optional(),
+  only: Only.optional(),
   season: z.strictObject({ from: MonthDay, to: MonthDay }).optional(),
   hours: z.strictObject({ from: DayTime, to: DayTime }).optional(),
 });
@@ -112,6 +132,26 @@ export const RuleCreate = z.strictObject({ name: Name, channel: Key, body: RuleB
 export const RuleAmend = z.strictObject({ name: Name.optional() });
 export const RuleForce = z.strictObject({ why: Why, acceptUnproved: z.boolean().optional() });
 export const RuleRetire = z.strictObject({ why: Why });
+/** Without a version: what last was in force. Either way it comes back as a draft. */
+export const RuleRestore = z.strictObject({ version: z.number().int().min(1).optional() });
+/**
+ * A draft of the same rule for another channel, in this house or another. Each point that the rule names is put through
+ * `points`; in its own house a point that is left out stays itself.
+ */
+export const RuleCopy = z.strictObject({
+  /** By slug or id; left out: the rule's own. */
+  house: z.string().trim().min(1, 'Choose a house.').max(200).optional(),
+  channel: Key,
+  /** Left out: as the rule is called. */
+  name: Name.optional(),
+  /** Left out: the draft, else what is in force. */
+  version: z.number().int().min(1).optional(),
+  points: z
+    .array(z.strictObject({ from: Key, to: Key }))
+    .max(200)
+    .default([]),
+});
+export type RuleCopy = z.infer<typeof RuleCopy>;
 /** Check without a body looks at the draft (else at the version in force); with one, at what is being typed. */
 export const RuleCheck = z.strictObject({ body: RuleBody.optional() });
 /** Going back: an older version's body becomes the draft. */

@@ -79,7 +79,21 @@ export const Why = z.strictObject({
   ladder: z.array(LadderStep),
   next: z.array(Data),
   version: z.number().nullable(),
+  /** Claims under the one that decided that speak too. */
+  under: z.array(LadderStep),
+  /** When `next` was reckoned: for a moment of the past, when the decision was made. */
+  foreseenAt: z.string().nullable(),
+  /** When this decision began, and what followed it: null while it stands. */
+  since: z.string().nullable(),
+  ended: z.strictObject({ at: z.string(), state: State, claim: z.string() }).nullable(),
+  /** The load's switchings before and after. */
+  earlier: z.string().nullable(),
+  later: z.string().nullable(),
+  rule: z.strictObject({ id: z.string(), slug: z.string(), name: z.string() }).nullable(),
+  /** Hours within this decision in which control did not run; `to` is null while it does not. */
+  gaps: z.array(z.strictObject({ from: z.string(), to: z.string().nullable() })),
 });
+export type Why = z.infer<typeof Why>;
 
 const Part = z.strictObject({ up: z.boolean(), says: z.string() });
 export const Health = z.strictObject({

@@ -1,4 +1,5 @@
 /** What Watch is made of: read once by the server, and kept up to date in the browser by the live feed. */
+import type { Alone } from '@/lib/analysis/alone';
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { SpanKind } from '@/lib/analysis/spans';
 import type { HouseState } from './house-state';
@@ -117,5 +118,7 @@ export interface WatchView {
   alarms: WatchAlarm[];
   /** This night so far, one a source: the very rows that Duty shows. */
   nights: NightSummary[];
+  /** Times of this night in which field boxes kept the house by themselves, ascending. */
+  alone: Alone[];
   others: WatchCard[];
 }

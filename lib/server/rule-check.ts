@@ -1,36 +1,82 @@
 import 'server-only';
 import type { Holding } from '@/db/client';
 import { listChannels } from '@/db/queries/channel';
+import { findHouse } from '@/db/queries/house';
 import { loadHouseConfig } from '@/db/queries/plan';
 import { pointNumbers } from '@/db/queries/point';
 import { readSeries } from '@/db/queries/reading';
 import { resolveBody, type FoundRule } from '@/db/queries/rule';
+import { readPreferences } from '@/db/queries/preferences';
 import { check } from '@/lib/control/check';
 import type { CheckContext } from '@/lib/control/checks/finding';
 import type { Finding, RuleBody } from '@/lib/schema/rule';
 import type { Channel } from '@/lib/schema/yard-view';
+import type { Caller } from './caller';
 import { Problem } from './errors';
+import { answersOf, NOTHING, type HouseAnswers } from './house-answers';
 
 const NIGHTS_MS = 14 * 86_400_000;
 
+export interface Checked {
+  findings: Finding[];
+  /** What could not be looked at, for want of readings. */
+  notKnown: string[];
+}
+
 /**
- * Things to look at in the draft (else in what is in force), or in a body that is still being typed.
+ * Things to look at in the draft (else in what is in force), or in a body that is still being typed; a person is told in
+ * their own degrees, a program in °C.
  * @throws Refusal at the path of a point that the house does not have
  */
 export async function findingsOf(
   holding: Holding,
   rule: Pick<FoundRule, 'id' | 'houseId' | 'channel' | 'body'>,
   typed: RuleBody | undefined,
-  now: Date,
-): Promise<Finding[]> {
+  { caller, now }: { caller: Pick<Caller, 'userId'>; now: Date },
+): Promise<Checked> {
   const { id, houseId, channel } = rule;
   const body = typed === undefined ? rule.body : await resolveBody(holding, houseId, typed);
   const config = await loadHouseConfig(holding, houseId);
   if (config === null) throw new Problem('not-found');
   const channels = await listChannels(holding, houseId);
   const greatest = await greatestOf(holding, houseId, body.rest?.until?.point, now);
-  const context: CheckContext = { channels: factsOf(channels), ...(greatest === null ? {} : { greatest }) };
-  return check(config, { id, channel, body }, context);
+  const own = channels.find((one) => one.key === channel);
+  const answers =
+    own === undefined ? NOTHING : await answersOf(holding, config, own, body.point, now.getTime());
+  const { liftK, response, coldestOutdoors } = answers;
+  const resort = (await findHouse(holding, houseId))?.lastResort ?? null;
+  const context: CheckContext = {
+    channels: factsOf(channels),
+    lastResort: resort === null ? null : { below: resort.below, isProved: resort.provedOn !== null },
+    ...(greatest === null ? {} : { greatest }),
+    ...(liftK === null ? {} : { liftK }),
+    ...(response === null ? {} : { response }),
+    ...(coldestOutdoors === null ? {} : { coldestOutdoors }),
+    ...(caller.userId === null ? {} : { preferences: await readPreferences(caller.userId) }),
+  };
+  return {
+    findings: check(config, { id, channel, body }, context),
+    notKnown: notKnownOf(body, answers, greatest, (own?.startsPerHour ?? null) !== null),
+  };
+}
+
+function notKnownOf(
+  body: RuleBody,
+  { liftK, response }: HouseAnswers,
+  greatest: Record<string, number> | null,
+  isRated: boolean,
+): string[] {
+  return [
+    ...(liftK === null && body.purpose === 'warm'
+      ? ['How much warmer than outdoors this gets: that takes some nights of draws that a rest ended.']
+      : []),
+    ...(response === null && isRated
+      ? ['How often it would start: that takes some nights of starts that stand half an hour apart.']
+      : []),
+    ...(greatest === null && body.rest?.until !== undefined
+      ? ['Whether a rest would ever reach its temperature: its point has no readings yet.']
+      : []),
+  ];
 }
 
 function factsOf(channels: Channel[]): NonNullable<CheckContext['channels']> {
@@ -68,7 +114,7 @@ export async function refuseForce(
   holding: Holding,
   rule: FoundRule,
   acceptUnproved: boolean,
-  now: Date,
+  act: { caller: Pick<Caller, 'userId'>; now: Date },
 ): Promise<void> {
   if (rule.draft === null) throw conflict('This rule has no draft to put into force.');
   const channel = (await listChannels(holding, rule.houseId)).find((one) => one.id === rule.channelId);
@@ -78,7 +124,8 @@ export async function refuseForce(
       `${channel.label} is not proved: nobody has seen that this relay moves this load. Prove it, or accept that (acceptUnproved).`,
     );
   }
-  const stops = (await findingsOf(holding, rule, undefined, now)).filter((one) => one.level === 'stop');
+  const { findings } = await findingsOf(holding, rule, undefined, act);
+  const stops = findings.filter((one) => one.level === 'stop');
   if (stops.length === 0) return;
   const errors = stops.flatMap(({ paths, text }) => paths.map((path) => ({ path, message: text })));
   throw new Problem('conflict', { detail: stops.map((one) => one.text).join(' '), errors });

@@ -2,10 +2,40 @@ import { DateTime } from 'luxon';
 import { isInstant } from '@/lib/control/because';
 import type { Data, DataValue, LadderStep } from '@/lib/control/types';
 
+const QUARTER_MS = 900_000;
+const REMEMBERED = 5000;
+
+interface Offset {
+  ms: number;
+  /** `Z` or `+01:00`. */
+  suffix: string;
+}
+/**
+ * By zone and quarter of an hour: zones change on quarters. A house's state tells some thirty instants at each report,
+ * and the offset is what costs, a hundredth of it the digits.
+ */
+const offsets = new Map<string, Offset>();
+
 /** ISO 8601 with the offset that the zone has at that instant. */
 export function isoIn(zone: string, at: number): string {
-  const time = DateTime.fromMillis(at, { zone });
-  return (time.isValid ? time : DateTime.fromMillis(at, { zone: 'utc' })).toISO() ?? '';
+  const { ms, suffix } = offsetAt(zone, Math.floor(at / QUARTER_MS));
+  return new Date(at + ms).toISOString().slice(0, -1) + suffix;
+}
+
+function offsetAt(zone: string, quarter: number): Offset {
+  const key = `${zone} ${quarter}`;
+  let offset = offsets.get(key);
+  if (offset === undefined) {
+    const local = DateTime.fromMillis(quarter * QUARTER_MS, { zone });
+    const time = local.isValid ? local : DateTime.fromMillis(quarter * QUARTER_MS, { zone: 'utc' });
+    offset = {
+      ms: time.offset * 60_000,
+      suffix: time.zone.isUniversal && time.offset === 0 ? 'Z' : time.toFormat('ZZ'),
+    };
+    if (offsets.size >= REMEMBERED) offsets.clear();
+    offsets.set(key, offset);
+  }
+  return offset;
 }
 
 export function isoOrNull(zone: string, at: number | null): string | null {

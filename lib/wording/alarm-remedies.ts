@@ -1,4 +1,6 @@
 /** What each kind of alarm means, and what to do about it. The cautions of the trade stand where they matter. */
+import { UNSTEADY_WORDS } from './quality';
+
 interface Remedy {
   effect: string;
   remedy: string;
@@ -17,6 +19,10 @@ const REMEDIES: Record<string, Remedy> = {
   'point-not-trusted': {
     effect: 'Its readings are kept but not used. Rules use their stand-in or their last good value.',
     remedy: 'Compare it with a thermometer; look for a wet plug or a loose screw.',
+  },
+  'point-unsteady': {
+    effect: UNSTEADY_WORDS,
+    remedy: 'Look for a loose plug, a chewed cable, or a radio that is only just reached.',
   },
   'node-lost': {
     effect:
@@ -72,8 +78,12 @@ const REMEDIES: Record<string, Remedy> = {
     remedy: 'Probe it. Lengthen the rest, shorten the draw, or feed it.',
   },
   'fan-standing': {
-    effect: 'No heat comes although control believes it does.',
+    effect: 'No heat comes, and it does not count as a draw.',
     remedy: 'Look at the fuse, the plug and the fan. Switch off at the isolator before you reach into it.',
+  },
+  'runs-though-off': {
+    effect: 'It draws current though its relay says that it is off: it may warm or cool against every rule.',
+    remedy: 'Use its isolator. A contact may be welded, or a switch beside the relay is on.',
   },
   'relay-does-not-follow': {
     effect: 'The load may run, or stand, against every rule.',

@@ -33,6 +33,7 @@ const GRAVE = new Set([
   'high-limit',
   'relay-does-not-follow',
   'fan-standing',
+  'runs-though-off',
   'cloned-token',
 ]);
 
@@ -75,6 +76,8 @@ function title(alarm: AlarmFacts, scene: Scene): string {
       return `${begin(point)} has sent nothing since ${since}`;
     case 'point-not-trusted':
       return `${begin(point)} cannot be trusted: ${faultWords(typeof data['why'] === 'string' ? data['why'] : null)}`;
+    case 'point-unsteady':
+      return `${begin(point)} comes and goes`;
     case 'node-lost':
       return `Node ${about.node ?? ''} has not been heard since ${since}`;
     case 'control-not-running':
@@ -103,6 +106,8 @@ function title(alarm: AlarmFacts, scene: Scene): string {
       return `${begin(source)} did not come back in its longest rest`;
     case 'fan-standing':
       return `${begin(channel)} is ordered on but stands still`;
+    case 'runs-though-off':
+      return `${begin(channel)} is off but runs all the same`;
     case 'relay-does-not-follow':
       return `The relay of ${channel} does not do what it is told`;
     case 'frozen-point-in-frost':

@@ -1,23 +1,36 @@
 /** Why a load is held: the claims that stand above the night's own business. */
-import type { Reasons } from '@/lib/control/because';
+import type { LockOutPlaced, Reasons } from '@/lib/control/because';
 import { duration } from '@/lib/units/time';
 import { temperature } from '@/lib/units/format';
-import { begin, channelName, pointName, said, sourceName, timeWords, type Scene } from './scene';
+import { fallbackReason } from './alone';
+import { begin, channelName, pointName, said, sourceName, timeWords, valueOf, type Scene } from './scene';
 import { CLAIM_NAMES } from './claims';
-import { level } from './settings';
+import { level, withoutZero } from './settings';
 
 type Reason<Claim extends keyof Reasons> = Partial<Reasons[Claim]>;
 
 export function lockOutWords(reason: Reason<'lock-out'>, scene: Scene): string {
-  const [first, ...others] = reason.lockouts ?? [];
-  if (first === undefined) return 'Locked out. Only a person removes it.';
-  const since = timeWords(first.placedAt, scene);
+  const lockouts = reason.lockouts ?? [];
+  if (lockouts.length === 0) return 'Locked out. Only a person removes it.';
+  return said(...lockouts.map((one) => lockOutOf(one, scene)));
+}
+
+function lockOutOf({ by, placedAt, why, removedAt, removedBy }: LockOutPlaced, scene: Scene): string {
+  const since = timeWords(placedAt, scene);
+  const removed = timeWords(removedAt, scene);
   return said(
-    `Locked out by ${first.by}${since === null ? '' : ` since ${since}`}: ${first.why.replace(/\.$/, '')}.`,
-    others.length > 0 && `${others.length} more lock-out${others.length === 1 ? '' : 's'} stand on it.`,
-    'Only a person removes it.',
+    `Locked out by ${by}${since === null ? '' : ` since ${since}`}: ${ended(why)}`,
+    removed === null
+      ? 'Only a person removes it.'
+      : `Removed at ${removed}${removedBy === undefined ? '' : ` by ${removedBy}`}.`,
   );
 }
+
+/** What somebody wrote, as a sentence of its own. */
+const ended = (text: string): string => {
+  const plain = text.replace(/\s+/g, ' ').trim();
+  return /[.!?…]$/.test(plain) ? plain : `${plain}.`;
+};
 
 export function interlockWords(reason: Reason<'interlock'>, scene: Scene): string {
   const other = channelName(reason.other ?? '', scene);
@@ -44,12 +57,13 @@ export function limitWords(reason: Reason<'limit'>, scene: Scene): string {
       return said(
         `Has run for its longest time, ${duration(reason.longestOnS ?? 0)}.`,
         until !== null && `Off at least till ${until}.`,
+        'It must have been wanted off once before it runs again.',
       );
     default:
       return said(
-        `${begin(pointName(reason.point ?? '', scene))} is at ${temperature(reason.value ?? null, scene.preferences)}, over the limit of ${level(reason.above ?? 0, scene.preferences)}.`,
+        `${begin(pointName(reason.point ?? '', scene))} is at ${valueOf(reason.point ?? null, reason.value ?? null, scene)}, over the limit of ${withoutZero(valueOf(reason.point ?? null, reason.above ?? 0, scene))}.`,
         reason.againAtOrBelow !== undefined &&
-          `Again from ${level(reason.againAtOrBelow, scene.preferences)} down.`,
+          `Again from ${withoutZero(valueOf(reason.point ?? null, reason.againAtOrBelow, scene))} down.`,
       );
   }
 }
@@ -92,12 +106,19 @@ export function sourceGuardWords(reason: Reason<'source-guard'>, scene: Scene): 
 
 const FAULTS: Record<string, string> = {
   silent: 'silent',
+  'never-spoke': 'never heard',
   'never-heard': 'never heard',
+  'no-such-point': 'no longer there',
   'out-of-range': 'out of its range',
   'one-wire-fault': 'its probe answers with a fault',
   'too-fast': 'changing faster than it can',
   frozen: 'frozen at one value',
+  unsteady: 'coming and going',
   'input-bad': 'made of a sensor that cannot be trusted',
+  'input-uncertain': 'made of a sensor in doubt',
+  'window-not-full': 'not read for long enough yet',
+  'cannot-be-reckoned': 'not to be reckoned from what its sensors say',
+  'worker-was-away': 'not heard again yet',
   contradicted: 'contradicted by its neighbours',
 };
 
@@ -107,13 +128,23 @@ export function faultWords(why: string | null | undefined): string {
 }
 
 export function failSafeWords(reason: Reason<'fail-safe'>, scene: Scene): string {
+  const { fallback } = reason;
+  if (fallback !== undefined) {
+    const on = fallback.state === 'on';
+    return fallbackReason(fallback, on, (key) => pointName(key, scene), scene.preferences);
+  }
+  const safe = reason.safe ?? 'its safe state';
+  if (reason.trip !== undefined)
+    return `Nobody commanded it for longer than its relay waits, so it fell to ${safe} by itself.`;
+  if (reason.stoppedAt !== undefined)
+    return `Control did not run from ${timeWords(reason.stoppedAt, scene) ?? ''} on, so it fell to ${safe} by itself.`;
   const points = (reason.points ?? []).map((one) => {
-    const since = timeWords(one.lastAt, scene);
+    // the newest reading's time is the beginning of nothing but a silence
+    const since = one.why === 'silent' ? timeWords(one.lastAt, scene) : null;
     return `${pointName(one.point, scene)}, ${faultWords(one.why)}${since === null ? '' : ` since ${since}`}`;
   });
-  const [what, is] = points.length > 1 ? ['Its sensors are', ''] : ['Its sensor is', ''];
   return said(
-    `${what} missing${is}${points.length === 0 ? '' : `: ${points.join('; ')}`}.`,
+    `${points.length > 1 ? 'Its sensors are' : 'Its sensor is'} missing${points.length === 0 ? '' : `: ${points.join('; ')}`}.`,
     reason.safe === 'on' && 'Runs, as its wiring makes it when nothing commands it.',
   );
 }

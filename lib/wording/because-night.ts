@@ -3,7 +3,7 @@ import type { Reasons, RuleStanding } from '@/lib/control/because';
 import { difference, temperature } from '@/lib/units/format';
 import { duration } from '@/lib/units/time';
 import { faultWords } from './because-held';
-import { begin, pointName, said, sourceName, timeWords, type Scene } from './scene';
+import { begin, pointName, said, sourceName, timeWords, valueOf, type Scene } from './scene';
 import { level } from './settings';
 
 type Reason<Claim extends keyof Reasons> = Partial<Reasons[Claim]>;
@@ -92,28 +92,26 @@ export function restWords(reason: Reason<'rest'>, scene: Scene): string {
 function stands(rule: Partial<RuleStanding>, scene: Scene): string {
   const point = begin(pointName(rule.point ?? '', scene));
   const instead = rule.standInFor === undefined ? '' : ` (for ${pointName(rule.standInFor, scene)})`;
-  return `${point}${instead} is at ${temperature(rule.value ?? null, scene.preferences)}`;
+  return `${point}${instead} is at ${valueOf(rule.point ?? null, rule.value ?? null, scene)}`;
 }
 
 export function bandWords(reason: Reason<'band'>, scene: Scene): string {
-  const { preferences } = scene;
-  const { low = 0, high = 0, value = null } = reason;
+  const { point = null, low = 0, high = 0, value = null } = reason;
   const warm = reason.purpose !== 'cool';
-  const start = warm ? `under ${temperature(low, preferences)}` : `over ${temperature(high, preferences)}`;
+  const start = warm ? `under ${valueOf(point, low, scene)}` : `over ${valueOf(point, high, scene)}`;
   const beyond = value !== null && (warm ? value < low : value > high);
   const stop = reason.stops?.value ?? (warm ? high : low);
   return said(
     beyond ? `${stands(reason, scene)}, ${start}.` : `${stands(reason, scene)}; it was ${start}.`,
-    `Stops ${warm ? 'above' : 'below'} ${temperature(stop, preferences)}.`,
+    `Stops ${warm ? 'above' : 'below'} ${valueOf(point, stop, scene)}.`,
   );
 }
 
 function idleOf(rule: RuleStanding, scene: Scene): string {
-  const { preferences } = scene;
   const starts =
     rule.purpose === 'cool'
-      ? `Starts above ${temperature(rule.high, preferences)}.`
-      : `Starts under ${temperature(rule.low, preferences)}.`;
+      ? `Starts above ${valueOf(rule.point, rule.high, scene)}.`
+      : `Starts under ${valueOf(rule.point, rule.low, scene)}.`;
   switch (rule.why) {
     case 'out-of-season':
       return 'Out of season.';

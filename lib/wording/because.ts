@@ -22,6 +22,9 @@ const WORDS: Words = {
   idle: night.idleWords,
 };
 
+/** Decisions without a switching were once kept by their claim alone. */
+const UNTOLD = 'No more was kept of it than this.';
+
 export function isClaim(value: string): value is Claim {
   return (CLAIMS as readonly string[]).includes(value);
 }
@@ -33,7 +36,8 @@ export function isClaim(value: string): value is Claim {
 export function becauseWords(claim: string, because: unknown, scene: Scene): string {
   if (!isClaim(claim)) return '';
   const reason = withInstants(because);
+  if (typeof reason !== 'object' || reason === null || Object.keys(reason).length === 0) return UNTOLD;
   // a reason kept by an older release may lack fields, so every field is optional to the words
   const words: (reason: object, scene: Scene) => string = WORDS[claim];
-  return words(typeof reason === 'object' && reason !== null ? reason : {}, scene);
+  return words(reason, scene);
 }

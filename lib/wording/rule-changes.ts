@@ -22,7 +22,7 @@ type Fields = Map<string, { path: string; label: string; text: string }>;
 const atMost1 = (celsius: number, preferences: Preferences) => temperature(celsius, preferences, 1);
 
 /** Every field of a body as text, keyed so that the same thing of two versions meets: a period by when it begins. */
-function fieldsOf(body: RuleBody, names: RuleNames, preferences: Preferences): Fields {
+function fieldsOf(body: RuleBody, names: RuleNames, preferences: Preferences, isAllDay: boolean): Fields {
   const fields: Fields = new Map();
   const put = (key: string, path: string, label: string, text: string | undefined) => {
     if (text !== undefined) fields.set(key, { path, label, text });
@@ -46,7 +46,8 @@ function fieldsOf(body: RuleBody, names: RuleNames, preferences: Preferences): F
   );
   body.band.forEach((period, index) => {
     const single = body.band.length === 1;
-    const key = single ? 'all day' : period.from;
+    // two bands that hold all day are one thing, whenever they would begin
+    const key = isAllDay ? 'all day' : period.from;
     const when = single ? '' : ` from ${dayTimeWords(period.from, preferences)}`;
     put(
       `low ${key}`,
@@ -105,8 +106,9 @@ export function ruleChanges(
   names: RuleNames,
   preferences: Preferences,
 ): Change[] {
-  const was = fieldsOf(before, names, preferences);
-  const is = fieldsOf(after, names, preferences);
+  const isAllDay = before.band.length === 1 && after.band.length === 1;
+  const was = fieldsOf(before, names, preferences, isAllDay);
+  const is = fieldsOf(after, names, preferences, isAllDay);
   const keys = [...new Set([...is.keys(), ...was.keys()])];
   return keys.flatMap((key) => {
     const old = was.get(key);

@@ -1,5 +1,5 @@
 /** A rule's extra conditions in words. */
-import type { Condition, ConditionNode, ConditionTree } from '@/lib/control/rule-body';
+import type { Condition, ConditionNode } from '@/lib/control/rule-body';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { dayTime } from '@/lib/units/time';
@@ -100,14 +100,38 @@ export function conditionWords(
   nested = false,
 ): Phrase[] {
   if ('fact' in node) return leafWords(node, names, preferences);
-  if ('not' in node) return join('not (', conditionWords(node.not, names, preferences), ')');
+  if ('not' in node) return conditionWords(turned(node.not), names, preferences, nested);
   const children = 'all' in node ? node.all : node.any;
   const words = children.map((child) => conditionWords(child, names, preferences, children.length > 1));
   const joined = between(words, 'all' in node ? ' and ' : ' or ');
   return nested && children.length > 1 ? join('(', joined, ')') : joined;
 }
 
-/** Whether the simple form of the editor can show it: all of some leaves, nothing nested. */
-export function isSimple(tree: ConditionTree): tree is { all: Condition[] } {
-  return 'all' in tree && tree.all.every((node) => 'fact' in node);
+const OPPOSITE: Record<Condition['operator'], Condition['operator']> = {
+  equal: 'notEqual',
+  notEqual: 'equal',
+  lessThan: 'greaterThanInclusive',
+  lessThanInclusive: 'greaterThan',
+  greaterThan: 'lessThanInclusive',
+  greaterThanInclusive: 'lessThan',
+  in: 'notIn',
+  notIn: 'in',
+};
+
+/**
+ * The same condition without its `not`: nobody says "not (it is at least 38 °C)". Of a group the rule of De Morgan holds in
+ * three-valued logic too, so what is said is what control reckons, also while something is not known.
+ */
+function turned(node: ConditionNode): ConditionNode {
+  if ('fact' in node) return { ...node, operator: OPPOSITE[node.operator] };
+  if ('not' in node) return node.not;
+  return 'all' in node ? { any: node.all.map(turned) } : { all: node.any.map(turned) };
+}
+
+/** The same words at the beginning of a line. */
+export function capitalFirst(phrases: Phrase[]): Phrase[] {
+  const [first, ...others] = phrases;
+  if (first === undefined) return [];
+  const raise = (text: string) => `${text.charAt(0).toUpperCase()}${text.slice(1)}`;
+  return [typeof first === 'string' ? raise(first) : { ...first, text: raise(first.text) }, ...others];
 }

@@ -1,5 +1,6 @@
 /** What the sentences of Watch need to know beside a reason: names, the reader, the house's clock. */
 import { isInstant } from '@/lib/control/because';
+import { pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 import { midSentence, pointWords, type NamedPoint } from './rule-names';
@@ -20,6 +21,12 @@ export function timeWords(at: number | null | undefined, scene: Scene): string |
 
 export function pointName(key: string, scene: Scene): string {
   return pointWords(key, { points: scene.points, channel: { label: '', loadKind: '' } });
+}
+
+/** A value of a point in the unit that it is kept in; temperatures where the point is not known. */
+export function valueOf(key: string | null, value: number | null, scene: Scene): string {
+  const unit = scene.points.find((one) => one.key === key)?.unit ?? 'Cel';
+  return pointValue(value, unit, scene.preferences);
 }
 
 /** @example channelName('gate-heap-fan', scene) === 'the gate-heap fan' */

@@ -29,6 +29,7 @@ export function amount(kelvin: number, preferences: Preferences): string {
   return withoutZero(difference(kelvin, preferences));
 }
 
-function withoutZero(text: string): string {
+/** @example withoutZero('43.0 °C') === '43 °C' */
+export function withoutZero(text: string): string {
   return text.replace(/\.0(?=\u00a0)/, '');
 }

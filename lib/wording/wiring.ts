@@ -6,7 +6,13 @@ import type { Phrase } from './phrase';
 import { midSentence } from './rule-names';
 
 export interface WiringStanding {
-  nodes: { key: string; lastHeardAt: number | null; isRevoked: boolean }[];
+  nodes: {
+    key: string;
+    lastHeardAt: number | null;
+    isRevoked: boolean;
+    /** Labels of channels that it keeps by their fallback. */
+    keeps?: string[];
+  }[];
   points: { name: string; isGood: boolean }[];
   channels: { number: number; label: string; isProved: boolean; isLockedOut: boolean }[];
 }
@@ -104,6 +110,15 @@ function nodeSentence(node: WiringStanding['nodes'][number], now: number): Phras
     : join(
         'Field node ',
         key,
-        ` answered ${age(now - node.lastHeardAt)}; its relays fall back to their safe states if it hears nothing for ${LEASE_S}\u00a0s.`,
+        ` answered ${age(now - node.lastHeardAt)}; its relays fall back to their safe states if it hears nothing for ${LEASE_S}\u00a0s${keptWords(node.keeps ?? [])}.`,
       );
+}
+
+/** @example keptWords(['Gate-heap fan']) === ', and it then runs the gate-heap fan by its fallback' */
+function keptWords(labels: readonly string[]): string {
+  if (labels.length === 0) return '';
+  const loads = labels.map((label) => `the ${midSentence(label)}`);
+  const last = loads.pop() ?? '';
+  const all = loads.length === 0 ? last : `${loads.join(', ')} and ${last}`;
+  return `, and it then runs ${all} by ${labels.length === 1 ? 'its fallback' : 'their fallbacks'}`;
 }

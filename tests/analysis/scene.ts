@@ -58,6 +58,7 @@ export function scene(change: Partial<NightInput> = {}): NightInput {
           reports: [],
           trips: [],
           silences: [],
+          stood: [],
           safe: 'off',
         },
       },

@@ -4,7 +4,14 @@ import { channelSpans, type ChannelRecord, secondsOf, startsOf } from '@/lib/ana
 import { CLAIMS } from '@/lib/control/types';
 
 const min = 60_000;
-const nothing: ChannelRecord = { decisions: [], reports: [], trips: [], silences: [], safe: 'off' };
+const nothing: ChannelRecord = {
+  decisions: [],
+  reports: [],
+  trips: [],
+  silences: [],
+  stood: [],
+  safe: 'off',
+};
 const kinds = (record: Partial<ChannelRecord>, to = 100 * min) =>
   channelSpans({ ...nothing, ...record }, 0, to).map((span) => [span.kind, span.from / min, span.to / min]);
 
@@ -59,6 +66,41 @@ describe('spans of a channel', () => {
     ]);
   });
 
+  it('show what a lost node ran by its fallback, as it told later', () => {
+    const record: Partial<ChannelRecord> = {
+      decisions: [{ at: 0, state: 'off', claim: 'fail-safe' }],
+      reports: [
+        { at: 0, state: 'off' },
+        { at: 80 * min, state: 'off' },
+      ],
+      trips: [
+        { at: 20 * min, state: 'on' },
+        { at: 40 * min, state: 'off' },
+      ],
+      silences: [{ from: 25 * min, to: 80 * min }],
+    };
+    expect(kinds(record)).toEqual([
+      ['held', 0, 20],
+      ['run', 20, 40],
+      ['held', 40, 100],
+    ]);
+  });
+
+  it('count no draw while its proof denies that a load ran', () => {
+    const record: Partial<ChannelRecord> = {
+      decisions: [{ at: 0, state: 'on', claim: 'band' }],
+      reports: [{ at: 0, state: 'on' }],
+      stood: [{ from: 30 * min, to: 60 * min }],
+    };
+    expect(kinds(record)).toEqual([
+      ['run', 0, 30],
+      ['held', 30, 60],
+      ['run', 60, 100],
+    ]);
+    const spans = channelSpans({ ...nothing, ...record }, 0, 100 * min);
+    expect(secondsOf(spans, (span) => span.on)).toBe(70 * 60);
+  });
+
   it('count a load that runs without its coil as running while its node is lost', () => {
     const spans = channelSpans(
       { ...nothing, safe: 'on', silences: [{ from: 30 * min, to: null }] },
@@ -105,6 +147,7 @@ describe('spans of a channel', () => {
           { from: 2000, to: null },
         ],
       ),
+      stood: fc.constantFrom<ChannelRecord['stood'][]>([], [{ from: 1000, to: 1500 }]),
       safe: state,
     });
     fc.assert(

@@ -78,7 +78,7 @@ const summaries = nights.map((night) =>
         flow: { m3PerS: place.heapFan.flowM3PerS, sdM3PerS: 0.004, from: 'measured' },
         loop: { intake: 'loop-intake', return: 'loop-return' },
         runProof: { point: 'fan-amps', above: 0.2 },
-        record: { decisions, reports: [], trips: [], silences: [], safe: 'off' },
+        record: { decisions, reports: [], trips: [], silences: [], stood: [], safe: 'off' },
       },
     ],
     points: new Map(

@@ -172,7 +172,11 @@ describe('rules in the browser', () => {
     await page.waitForURL(/\/rules$/);
     await page.getByRole('region', { name: 'Retired' }).getByRole('link', { name: 'Soon retired' }).click();
     await page.getByText('This rule is retired: nothing runs by it.').waitFor();
-    await page.getByRole('button', { name: 'Go back to version 1' }).click();
+    await page.getByText('grower@larkmoor.example retired it', { exact: false }).waitFor();
+    await page.getByText('“Never needed.”').first().waitFor();
+    await page.getByRole('button', { name: 'Bring version 1 back as the draft' }).click();
+    await page.getByText('The rule is back, with version 1 as its draft.', { exact: false }).waitFor();
+    await page.getByText('This rule is retired: nothing runs by it.').waitFor({ state: 'detached' });
     await page.getByRole('button', { name: 'Throw the draft away…' }).click();
     await dialog.getByRole('button', { name: 'Throw it away' }).click();
     await page.getByText('The draft is thrown away.').waitFor();

@@ -106,8 +106,9 @@ describe('Watch in the browser', () => {
     const why = page.getByRole('button', { name: /Why, and what next\s*: Gate-heap fan/ });
     await why.click();
     const sheet = page.getByRole('dialog');
+    await sheet.getByText(/claims above it kept still/).click();
     await sheet.getByText('Nobody has locked it out.').waitFor();
-    await sheet.getByText('decides', { exact: true }).waitFor({ state: 'attached' });
+    await sheet.getByText('decides', { exact: true }).waitFor();
     expect(await accessibilityFaults(page)).toEqual([]);
     await page.keyboard.press('Escape');
     await sheet.waitFor({ state: 'detached' });

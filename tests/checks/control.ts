@@ -8,10 +8,50 @@
  * switch-off at h, switch-on at l. Recomputed: t_on = τ·ln[(K−l)/(K−h)], t_off = τ·ln(h/l).
  */
 export const CYCLES = [
-  { id: 'F-CYC-1', tauS: 3600, K: 20, h: 6, l: 4, onS: 480.713, offS: 1459.674, duty: 0.247741 },
-  { id: 'F-CYC-2', tauS: 1800, K: 12, h: 7, l: 5, onS: 605.65, offS: 605.65, duty: 0.5 },
-  { id: 'F-CYC-3', tauS: 3600, K: 40, h: 10.5, l: 9.5, onS: 120.011, offS: 360.3, duty: 0.249861 },
+  {
+    id: 'F-CYC-1',
+    tauS: 3600,
+    K: 20,
+    h: 6,
+    l: 4,
+    onS: 480.713,
+    offS: 1459.674,
+    duty: 0.247741,
+    perH: 1.8553,
+  },
+  { id: 'F-CYC-2', tauS: 1800, K: 12, h: 7, l: 5, onS: 605.65, offS: 605.65, duty: 0.5, perH: 2.972 },
+  {
+    id: 'F-CYC-3',
+    tauS: 3600,
+    K: 40,
+    h: 10.5,
+    l: 9.5,
+    onS: 120.011,
+    offS: 360.3,
+    duty: 0.249861,
+    perH: 7.4951,
+  },
 ] as const;
+
+/**
+ * F-NMAX, recomputed: the small-band limit of the most starts an hour, K/(4τd), at half load, and the parabola
+ * 4·x(1 − x) of that at other loads x. Starts an hour to 1 %: the limit is that of a vanishing band.
+ */
+export const MOST_STARTS = {
+  ...{ tauS: 3600, K: 40, bandK: 1, perH: 10, exactPerH: 9.9979 },
+  shares: [
+    [0.1, 0.36],
+    [0.2, 0.64],
+    [0.5, 1],
+    [0.8, 0.64],
+  ],
+} as const;
+
+/** F-DEAD, recomputed: F-CYC-1 with a pure delay of 120 s after each switch; x to 1e-4, times to 0.1 s. */
+export const DEAD_TIME = {
+  ...{ tauS: 3600, K: 20, h: 6, l: 4, delayS: 120 },
+  ...{ greatest: 6.45897, least: 3.86886, onS: 630.1, offS: 1845.03 },
+} as const;
 
 /** F-CYC-NEVER, recomputed: K ≤ h never switches off; l ≤ 0 never switches on. */
 export const NEVER = [
@@ -20,14 +60,23 @@ export const NEVER = [
   { K: 20, h: 6, l: 0, start: 3, duty: 0 },
 ] as const;
 
-/** F-MINON, recomputed: on 35 °F, off 45 °F; between the thresholds the state is memory. */
+/**
+ * F-MINON, recomputed: on 35 °F, off 45 °F; between the thresholds the state is memory. Its own sequence switches at
+ * 35 and 45 exactly; ours are strict, so a tenth of a degree past each stands beside them.
+ */
 export const TRADE_THERMOSTAT = {
   readingsF: [50, 45, 44, 36, 35, 34.9, 36, 44, 45, 45.1, 44, 34.9],
   on: [0, 0, 0, 0, 0, 1, 1, 1, 1, 0, 0, 1],
 } as const;
 
-/** J-SET and J-CHK-REACH, practice: on at 35 °F, off at 45 °F, and +16 °F of lift never reach off below 29 °F. */
-export const TRADE = { onC: 1.667, offC: 7.222, liftF: 16, offF: 45, reachF: 29 } as const;
+/**
+ * J-SET, J-RUN, J-WARMUP and J-CHK-REACH: common practice, no source. On at 35 °F, off at 45 °F; +16 °F of lift never
+ * reach off below 29 °F outdoors; a draw of 105 min, 45 min off, and on again; half an hour of warming up.
+ */
+export const TRADE = {
+  ...{ onC: 1.667, offC: 7.222, onF: 35, offF: 45, liftF: 16, reachF: 29 },
+  ...{ drawMin: 105, restMin: 45, warmUpMin: 30 },
+} as const;
 
 /** Changes of the clock, IANA zone data: [zone, instant, seconds before, seconds after]. */
 export const CHANGES = [

@@ -53,6 +53,20 @@ const layout = nightLayout(chart, WIDE, USUAL);
 describe('the chart of a night', () => {
   it('has midnight in the middle', () =>
     expect(layout.hours.find((tick) => tick.isMidnight)?.x).toBeCloseTo((layout.x0 + layout.x1) / 2));
+  it('is not stretched by the hot air of a loop, whose line leaves it and says how high it is', () => {
+    const loop = { key: 'loop-return', name: 'Return', role: 'loop-return', at: [from, from + hour] };
+    const hot = nightLayout(
+      { ...chart, lines: [...chart.lines, { ...loop, value: [12, 31.4] }] },
+      WIDE,
+      USUAL,
+    );
+    // 9 °C is the house's highest: three degrees over it are the loop's
+    expect(hot.degrees.every(({ celsius }) => celsius <= 13)).toBe(true);
+    expect(hot.labels.find(({ key }) => key === 'loop-return')).toMatchObject({
+      text: 'Loop return ↑ 31.4',
+      y: WIDE.top + 6,
+    });
+  });
   it('breaks a line where readings are missing', () =>
     expect(layout.lines[0]?.path.match(/M/g)).toHaveLength(2));
   it('draws the band between its thresholds, each labelled in place', () => {

@@ -4,6 +4,7 @@ import { check } from '@/lib/control/check';
 import type { CheckContext } from '@/lib/control/checks/finding';
 import type { RuleBody } from '@/lib/control/rule-body';
 import type { HouseConfig } from '@/lib/control/types';
+import { USUAL } from '@/lib/units/preferences';
 import { TRADE } from '../checks/control';
 import { body, channel, house, point, rest, rule, source } from './house';
 
@@ -118,6 +119,18 @@ const CASES: Case[] = [
     not: () => kinds(body(), long({ frostLimit: 3 }), { channels: { vent: { hasFallback: true } } }),
   },
   {
+    kind: 'look no-last-resort',
+    fires: () =>
+      kinds(body(), long({ frostLimit: 3 }), { channels: {}, lastResort: { below: 1, isProved: false } }),
+    not: () =>
+      kinds(body(), long({ frostLimit: 3 }), { channels: {}, lastResort: { below: 1, isProved: true } }),
+  },
+  {
+    kind: 'look last-resort-over-band',
+    fires: () => kinds(body(), long(), { lastResort: { below: 4, isProved: true } }),
+    not: () => kinds(body(), long(), { lastResort: { below: 3.9, isProved: true } }),
+  },
+  {
     // F-NMAX, recomputed: K/(4τd) with K 40, τ 3600 s, d 1 is 10 starts an hour
     kind: 'look starts-too-often',
     fires: () =>
@@ -172,6 +185,51 @@ describe('things to look at', () => {
       'under −1.7 °C outdoors this fan will never stop by itself',
     );
     expect(((TRADE.reachF - 32) * 5) / 9).toBeCloseTo(-1.667, 3);
+  });
+
+  it('two that warm and vent do not fight where an interlock or their seasons part them', () => {
+    const fights = (config: HouseConfig, own = body()) => kinds(own, config).includes('look sources-fight');
+    const venting = rule('vent', cool(7, 10));
+    expect(fights(long({ rules: [venting] }))).toBe(true);
+    const never = { ...needs('vent', 'fan'), kind: 'never-with' as const };
+    expect(fights(long({ rules: [venting], interlocks: [never] }))).toBe(false);
+    expect(fights(long({ rules: [venting], interlocks: [needs('vent', 'fan')] }))).toBe(true);
+    const inSummer = rule('vent', { ...cool(7, 10), season: { from: '05-01', to: '09-30' } });
+    const winter = (to: string) => body({ season: { from: '10-01', to } });
+    expect(fights(long({ rules: [inSummer] }), winter('04-30'))).toBe(false);
+    expect(fights(long({ rules: [inSummer] }), winter('05-01'))).toBe(true);
+  });
+
+  it('a condition on a point that is derived from a loop’s gain is one on the gain', () => {
+    const derived = (key: string, points: string[]) => ({
+      ...point(key, 'other'),
+      derived: { of: 'mean', points },
+    });
+    const points = [...loopPoints, derived('gain', ['in', 'out']), derived('smooth', ['gain'])];
+    const only = { any: [{ not: { fact: 'smooth', operator: 'lessThan' as const, value: 3 } }] };
+    const found = check(long({ points, loops }), { channel: 'fan', body: body({ only }) });
+    expect(found).toMatchObject([{ kind: 'condition-on-gain', paths: ['only.any.0.not.fact'] }]);
+  });
+
+  it('a fact that is missing is named at its own place in the tree', () => {
+    const only = { all: [core('greaterThan', 1), { any: [{ ...core('lessThan', 9), fact: 'gone' }] }] };
+    expect(check(long(), { channel: 'fan', body: body({ only }) })).toMatchObject([
+      { kind: 'unknown-point', paths: ['only.all.1.any.0.fact'] },
+    ]);
+  });
+
+  it('speak in the degrees of their reader', () => {
+    const context = { liftK: 12, preferences: { ...USUAL, temperature: 'F' as const } };
+    const text = check(long(), { channel: 'fan', body: body() }, context)[0]?.text;
+    // the band ends at 7.5 °C
+    expect(text).toContain('21.6 °F warmer than outdoors: under 23.9 °F outdoors');
+  });
+
+  it('say nothing of an outdoors that a whole year has not brought', () => {
+    const found = (coldestOutdoors: number) => kinds(body(), long(), { liftK: 12, coldestOutdoors });
+    expect(found(-4.5)).not.toContain('look lift-too-small');
+    expect(found(-4.4)).not.toContain('look lift-too-small');
+    expect(found(-4.6)).toContain('look lift-too-small');
   });
 
   it('a rule is not held against its own version in force', () => {

@@ -1,138 +1,23 @@
-/** Random houses, readings, orders, times and restarts against what must hold whatever happens. */
+/** Random houses, readings, orders, times, restarts, reports and gaps against what must hold whatever happens. */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { migrateMemory, type Memory } from '@/lib/control/memory';
+import type { Memory } from '@/lib/control/memory';
 import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
 import type { ControlEvent, HouseConfig } from '@/lib/control/types';
-import { body, channel, house, Player, point, rest, rule, S, source } from './house';
+import { Player } from './house';
+import { checkClaims, checkDraws, checkLeastOn, checkPairs, checkStanding } from './model-claims';
+import { act, AT_FIRST, deeds, houses, outside } from './model-house';
 
-const seconds = (...list: number[]) => fc.constantFrom(...list);
+/** More of them for a long night: `MODEL_RUNS=5000 npx vitest run --project pure tests/control/model.test.ts`. */
+const RUNS = Number(process.env['MODEL_RUNS'] ?? 150);
+const LONGEST_MS = Math.max(120_000, RUNS * 2000);
 
-const houses: fc.Arbitrary<HouseConfig> = fc
-  .record({
-    minOnS: seconds(0, 60, 120, 300),
-    minOffS: seconds(0, 60, 180),
-    longestDraw: seconds(120, 600, 2400),
-    least: seconds(60, 600, 1800),
-    most: fc.option(seconds(1800, 5400)),
-    frostMayBreak: fc.boolean(),
-    dailyLimitS: fc.option(seconds(900, 3600)),
-    coreFloor: fc.option(fc.constant(38)),
-    longestOnS: fc.option(seconds(300, 1200)),
-    frostLimit: fc.option(fc.constant(3)),
-    delayS: seconds(0, 5, 60),
-    needs: fc.boolean(),
-    frozenAfterS: fc.option(seconds(300)),
-    maxRate: fc.option(fc.constant(0.05)),
-    second: fc.boolean(),
-  })
-  .map((given) => {
-    const { minOnS, minOffS, longestDraw, least, most, frostMayBreak } = given;
-    const until = most === null ? {} : { until: { point: 'base', level: 43 }, most: Math.max(most, least) };
-    const draws = { source: 'heap', minOnS, minOffS, frostHelp: true, longestOnS: given.longestOnS };
-    const cool = body({ purpose: 'cool', point: 'air', band: [{ from: '00:00', low: 6, high: 10 }] });
-    const heapRest = rest(longestDraw, least, { ...until, frostMayBreak });
-    return house({
-      frostLimit: given.frostLimit,
-      points: [
-        point('bench', 'bench', { frozenAfterS: given.frozenAfterS, maxRate: given.maxRate }),
-        point('air', 'house-air', { staleAfterS: 400 }),
-        point('core', 'heap-core', { staleAfterS: 3600 }),
-        point('base', 'heap-base', { staleAfterS: 3600 }),
-      ],
-      sources: [source('heap', { dailyLimitS: given.dailyLimitS, coreFloor: given.coreFloor })],
-      channels: [
-        channel('fan', 1, { ...draws, highLimit: { point: 'air', above: 12 } }),
-        channel('second', 2, draws),
-        channel('vent', 3, { loadKind: 'vent', minOnS, minOffS }),
-        channel('pump', 4, { minOnS }),
-      ],
-      interlocks: [
-        {
-          id: 'never',
-          channel: 'vent',
-          kind: 'never-with',
-          other: 'fan',
-          delayS: given.delayS,
-          frostMayBreak: false,
-        },
-        ...(given.needs
-          ? [
-              {
-                id: 'needs',
-                channel: 'second',
-                kind: 'needs' as const,
-                other: 'pump',
-                delayS: given.delayS,
-                frostMayBreak: false,
-              },
-            ]
-          : []),
-      ],
-      rules: [
-        rule('fan', body({ rest: heapRest, standIns: [{ point: 'air', offset: -0.5 }] })),
-        ...(given.second
-          ? [rule('second', body({ point: 'air', rest: rest(longestDraw * 2, least, { frostMayBreak }) }))]
-          : []),
-        rule('vent', cool),
-        rule('pump', body({ point: 'air' })),
-      ],
-    });
-  });
-
-const KEYS = ['fan', 'second', 'vent', 'pump'];
-const key = fc.constantFrom(...KEYS);
-type Deed =
-  | { do: 'pass'; s: number; cut: number }
-  | { do: 'say'; point: string; value: number }
-  | { do: 'order'; order: Parameters<Player['order']>[0] }
-  | { do: 'restart' | 'double' };
-const deeds: fc.Arbitrary<Deed> = fc.oneof(
-  {
-    weight: 5,
-    arbitrary: fc.record({
-      do: fc.constant('pass' as const),
-      s: seconds(1, 7, 30, 60, 61, 300, 1300),
-      cut: fc.double({ min: 0.05, max: 0.95, noNaN: true }),
-    }),
-  },
-  {
-    weight: 5,
-    arbitrary: fc.record({
-      do: fc.constant('say' as const),
-      point: fc.constantFrom('bench', 'air', 'core', 'base'),
-      value: seconds(1, 2.9, 3.5, 4, 5, 7.5, 8, 11, 13, 37, 39, 44, 200),
-    }),
-  },
-  { weight: 1, arbitrary: fc.record({ do: fc.constant('restart' as const) }) },
-  { weight: 1, arbitrary: fc.record({ do: fc.constant('double' as const) }) },
-  {
-    weight: 1,
-    arbitrary: fc.record({
-      do: fc.constant('order' as const),
-      order: fc.oneof(
-        fc.record({
-          kind: fc.constant('hand' as const),
-          channel: key,
-          state: fc.constantFrom('on' as const, 'off' as const),
-          seconds: seconds(1, 100, 3600),
-          holdInFrost: fc.boolean(),
-        }),
-        fc.record({ kind: fc.constant('auto' as const), channel: key }),
-        fc.record({
-          kind: fc.constant('lock-out' as const),
-          channel: key,
-          lockout: fc.constant('x'),
-          why: fc.constant('work'),
-        }),
-        fc.record({ kind: fc.constant('unlock' as const), channel: key, lockout: fc.constant('x') }),
-        fc.record({ kind: fc.constant('prove' as const), channel: key, seconds: seconds(10, 60) }),
-        fc.record({ kind: fc.constant('all-off' as const), seconds: seconds(600) }),
-      ),
-    }),
-  },
-);
+const hushed = (config: HouseConfig): Player => {
+  const player = new Player(config, AT_FIRST);
+  player.silent = new Set(Object.keys(AT_FIRST));
+  return player;
+};
 
 /** What a step of nothing but time leaves must not hang on the steps between. */
 function playBothWays(player: Player, untilAt: number, cut: number): void {
@@ -153,7 +38,11 @@ function playBothWays(player: Player, untilAt: number, cut: number): void {
 /** When an order left is the one thing that hangs on the steps, and nothing but a relay's report is held against it. */
 const plain = (memory: Memory): unknown => ({
   ...memory,
-  channels: memory.channels.map((one) => ({ ...one, orderedAt: null })),
+  channels: memory.channels.map((one) => ({
+    ...one,
+    orderedAt: null,
+    relay: one.relay === null ? null : { ...one.relay, seenAt: null },
+  })),
   faults: memory.faults.map((fault) => fault.key),
 });
 const turns = (events: ControlEvent[]) =>
@@ -161,88 +50,110 @@ const turns = (events: ControlEvent[]) =>
     event.kind === 'switching' ? [[event.at, event.channel, event.to, event.claim]] : [],
   );
 
-/** control.md's own exceptions written out. */
-function checkStanding(player: Player): void {
-  const { result, memory } = player;
-  for (const [index, one] of result.channels.entries()) {
-    const own = memory.channels[index];
-    if (own === undefined) throw new Error('A channel without memory.');
-    if (own.lockouts.length > 0) expect(one).toMatchObject({ state: 'off', claim: 'lock-out' });
-    if (own.overHighLimit) expect(one.state).toBe('off');
-    if (one.state === 'on' && one.id !== 'vent' && one.id !== 'pump') {
-      const heap = player.heap();
-      if (heap.underFloor) expect(['hand', 'proving', 'short-cycle']).toContain(one.claim);
-      if (heap.credit === 0) expect(['hand', 'proving', 'short-cycle', 'frost']).toContain(one.claim);
-      if (one.claim === 'band')
-        expect(heap.drawnTodayS).toBeLessThan(player.plan.sources[0]?.config.dailyLimitS ?? Infinity);
-    }
-  }
-  const state = (id: string) => result.channels.find((one) => one.id === id)?.state;
-  expect([state('vent'), state('fan')]).not.toEqual(['on', 'on']);
-  for (const heap of result.sources) {
-    expect(heap.credit).toBeGreaterThanOrEqual(0);
-    expect(heap.credit).toBeLessThanOrEqual(1);
-  }
-}
-
-/** Off by a claim that may not break least on came no sooner than least on after on. */
-function checkLeastOn(player: Player): void {
-  const mayBreak = ['lock-out', 'interlock', 'limit', 'hand'];
-  for (const one of player.plan.channels) {
-    const list = player.events.flatMap((event) =>
-      event.kind === 'switching' && event.channel === one.id ? [event] : [],
-    );
-    list.forEach((event, index) => {
-      const begun = list[index - 1];
-      const last = event.explanation.ladder.at(-1);
-      expect(last).toMatchObject({ claim: event.claim, speaks: true });
-      if (
-        event.to === 'on' ||
-        begun === undefined ||
-        begun.claim === 'proving' ||
-        mayBreak.includes(event.claim)
-      )
-        return;
-      expect(event.at - begun.at).toBeGreaterThanOrEqual(one.minOnMs);
-    });
-  }
-}
-
 describe('whatever happens', () => {
-  it('no claim is broken, silence is silent, and the steps between do not matter', () => {
-    fc.assert(
-      fc.property(houses, fc.array(deeds, { minLength: 5, maxLength: 60 }), (config, list) => {
-        const player = new Player(config, { bench: 5, air: 8, core: 50, base: 40 });
-        player.silent = new Set(['bench', 'air', 'core', 'base']);
-        for (const deed of list) {
-          if (deed.do === 'restart') player.memory = migrateMemory(JSON.parse(JSON.stringify(player.memory)));
-          if (deed.do === 'double') {
+  it(
+    'no claim is broken, silence is silent, and the steps between do not matter',
+    () => {
+      fc.assert(
+        fc.property(houses, fc.array(deeds, { minLength: 5, maxLength: 60 }), (config, list) => {
+          const player = hushed(config);
+          for (const deed of list) {
+            if (deed.do === 'pass') playBothWays(player, player.now + deed.s * 1000, deed.cut);
+            if (deed.do === 'double') {
+              const again = step(player.plan, player.memory, player.observed, player.now);
+              expect(again.events).toEqual([]);
+              expect(again.memory).toEqual(player.memory);
+            }
+            act(player, deed);
+            checkStanding(player);
+            checkPairs(player);
+          }
+          checkLeastOn(player);
+          checkClaims(player);
+          checkDraws(player);
+        }),
+        { numRuns: RUNS },
+      );
+    },
+    LONGEST_MS,
+  );
+
+  it(
+    'with relays that report what they please and a worker that is away, no claim is broken',
+    () => {
+      fc.assert(
+        fc.property(houses, fc.array(outside, { minLength: 5, maxLength: 60 }), (config, list) => {
+          const player = hushed(config);
+          for (const deed of list) {
+            act(player, deed);
+            checkStanding(player);
+            checkPairs(player);
             const again = step(player.plan, player.memory, player.observed, player.now);
             expect(again.events).toEqual([]);
             expect(again.memory).toEqual(player.memory);
           }
-          if (deed.do === 'say') {
-            player.now += S;
-            player.observed.points = {
-              ...player.observed.points,
-              [deed.point]: { value: deed.value, at: player.now },
-            };
-            player.step();
+          checkClaims(player);
+        }),
+        { numRuns: RUNS },
+      );
+    },
+    LONGEST_MS,
+  );
+
+  it(
+    'a memory that is written out and read back at every step leaves all as it is',
+    () => {
+      fc.assert(
+        fc.property(houses, fc.array(outside, { minLength: 5, maxLength: 60 }), (config, list) => {
+          const kept = hushed(config);
+          const restarted = hushed(config);
+          for (const deed of list) {
+            act(kept, deed);
+            act(restarted.restart(), deed);
+            expect(restarted.memory).toEqual(kept.memory);
+            expect(restarted.result.channels).toEqual(kept.result.channels);
           }
-          if (deed.do === 'order') {
-            player.now += S;
-            player.order(deed.order);
+          expect(restarted.events).toEqual(kept.events);
+        }),
+        { numRuns: RUNS },
+      );
+    },
+    LONGEST_MS,
+  );
+
+  it(
+    'readings that come often leave all as those do that come to the same, one by one',
+    () => {
+      // a lull is short of nothing: values that move a little at every step, against a memory read back each time
+      const drift = fc.array(
+        fc.record({
+          point: fc.constantFrom('bench', 'air', 'core', 'base'),
+          by: fc.double({ min: -0.8, max: 0.8, noNaN: true }),
+          s: fc.constantFrom(1, 5, 30),
+        }),
+        { minLength: 20, maxLength: 150 },
+      );
+      fc.assert(
+        fc.property(houses, drift, (config, list) => {
+          const kept = hushed(config);
+          const restarted = hushed(config);
+          const values: Record<string, number> = { bench: 4.2, air: 6.2, core: 38.5, base: 42.5 };
+          for (const { point, by, s } of list) {
+            values[point] = (values[point] ?? 0) + by;
+            for (const player of [kept, restarted.restart()]) {
+              player.now += s * 1000;
+              for (const [key, value] of Object.entries(values))
+                player.observed.points = { ...player.observed.points, [key]: { value, at: player.now } };
+              player.step();
+            }
+            expect(restarted.memory).toEqual(kept.memory);
+            expect(restarted.result.channels).toEqual(kept.result.channels);
           }
-          if (deed.do === 'pass') {
-            playBothWays(player, player.now + deed.s * S, deed.cut);
-            player.now += deed.s * S;
-            player.step();
-          }
-          checkStanding(player);
-        }
-        checkLeastOn(player);
-      }),
-      { numRuns: 250 },
-    );
-  }, 30_000);
+          expect(restarted.events).toEqual(kept.events);
+        }),
+        { numRuns: RUNS },
+      );
+    },
+    LONGEST_MS,
+  );
 });

@@ -48,41 +48,6 @@ describe('draw credit', () => {
     expect(player.heap().credit).toBe(1);
   });
 
-  it('two fans on one heap spend one credit', () => {
-    const config = { ...one({}), channels: [fan('fan', 1), fan('second', 2)] };
-    const player = new Player(
-      { ...config, rules: [...config.rules, rule('second', body({ rest: rest(1200, 1800) }))] },
-      cold,
-    );
-    player.pass(H);
-    // 1/600 + 1/1200 a second: 400 s; then the larger of the two least rests
-    expect(player.switchings('fan').slice(0, 3)).toEqual([
-      [0, 'on', 'band'],
-      [400, 'off', 'rest'],
-      [2200, 'on', 'band'],
-    ]);
-    expect(player.switchings('second').slice(0, 3)).toEqual(player.switchings('fan').slice(0, 3));
-  });
-
-  it('a channel without a rest costs no credit, but while it draws nothing comes back', () => {
-    const config = { ...one({}), channels: [fan('fan', 1), fan('free', 2)] };
-    const player = new Player(
-      { ...config, rules: [...config.rules, rule('free', body({ point: 'air' }))] },
-      cold,
-    );
-    player.pass(300 * S).at({ bench: 8, air: 3 });
-    expect(player.says('free')).toBe('on band');
-    player.pass(20 * MIN);
-    expect(player.heap().credit).toBeCloseTo(0.5, 4);
-  });
-
-  it('a draw by hand spends it like one by the band', () => {
-    const player = new Player(one({}), { ...cold, bench: 9 });
-    player.order({ kind: 'hand', channel: 'fan', state: 'on', seconds: 900, holdInFrost: false });
-    player.pass(5 * MIN);
-    expect(player.heap().credit).toBeCloseTo(0.5, 5);
-  });
-
   it('a fan that shows no current counts as not drawing, and a fault says so', () => {
     const config = one({}, { runProof: { point: 'amps', above: 0.2 } });
     const points = [...config.points, point('amps', 'current', { unit: 'A' })];

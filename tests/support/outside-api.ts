@@ -58,6 +58,11 @@ export class OutsideApi {
     };
   }
 
+  /** A page as a browser first gets it. */
+  async page(path: string): Promise<string> {
+    return (await fetch(`${this.url}${path}`, { headers: { cookie: this.cookie } })).text();
+  }
+
   get(path: string): Promise<Answer> {
     return this.call('GET', path);
   }

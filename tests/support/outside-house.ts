@@ -1,6 +1,6 @@
 /** A house made through the interface, as somebody would who knows only its description. */
 import type { Body, OutsideApi } from './outside-api';
-import { OutsideNode } from './outside-node';
+import { OutsideNode, type Brings } from './outside-node';
 import { until } from './until';
 
 export interface OutsideHouse {
@@ -75,12 +75,12 @@ export async function putIntoForce(
 }
 
 /** Connects as a node does: again and again while the worker is away. */
-export async function joinNode(url: string, house: OutsideHouse): Promise<OutsideNode> {
+export async function joinNode(url: string, house: OutsideHouse, brings: Brings = {}): Promise<OutsideNode> {
   let node: OutsideNode | undefined;
   await until(
     'the node is taken in',
     async () => {
-      node = await OutsideNode.connect(url, house.token, house.nodeKey, 4).catch(() => undefined);
+      node = await OutsideNode.connect(url, house.token, house.nodeKey, 4, brings).catch(() => undefined);
       return node !== undefined;
     },
     20_000,

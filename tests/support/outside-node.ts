@@ -11,6 +11,18 @@ export interface Command {
   boot: string;
   seen: number;
   channels: Record<string, Coil>;
+  fallback?: Record<string, { point: string; below: number; above: number; onFor: number; offFor: number }>;
+}
+/** What a node brings along that was here before, or can more than the least. */
+export interface Brings {
+  /** Of a node whose line was lost; else it has just started. */
+  boot?: string;
+  can?: string[];
+  coils?: Record<string, Coil>;
+  number?: number;
+  trips?: number;
+  /** Texts that it kept while it was away, sent right after its first `relays`. */
+  logs?: string[];
 }
 interface Ack {
   type: 'ack';
@@ -64,15 +76,16 @@ export class OutsideNode {
     this.socket.on('error', () => undefined);
   }
 
-  /** @param boot of a node whose line was lost; else it has just started */
   static async connect(
     url: string,
     token: string,
     key: string,
     channels = 8,
-    boot: string = randomUUID(),
+    { boot = randomUUID(), can, coils = {}, number = 0, trips = 0, logs = [] }: Brings = {},
   ): Promise<OutsideNode> {
     const node = new OutsideNode(url, token, channels, boot);
+    Object.assign(node.coils, coils);
+    Object.assign(node, { number, trips });
     await new Promise<void>((resolve, reject) => {
       node.socket.once('open', resolve);
       node.socket.once('unexpected-response', (_request, response) => {
@@ -81,10 +94,19 @@ export class OutsideNode {
       node.socket.once('error', reject);
     });
     const clock = Date.now() / 1000;
-    node.send({ type: 'hello', node: key, firmware: 'outside 1', channels, boot: node.boot, clock });
+    node.send({
+      type: 'hello',
+      node: key,
+      firmware: 'outside 1',
+      channels,
+      boot,
+      clock,
+      ...(can && { can }),
+    });
     const welcome = await node.next((frame) => frame.type === 'welcome');
     node.rate = Number(welcome['rate']);
     node.sendRelays();
+    for (const text of logs) node.log(text);
     node.report = setInterval(() => node.sendRelays(), 10_000 / node.rate);
     await node.next((frame) => frame.type === 'command');
     return node;
@@ -108,6 +130,18 @@ export class OutsideNode {
     this.relayFrames.add(seq);
     this.sentAt.set(seq, performance.now());
     return seq;
+  }
+
+  /** @returns the frame's seq */
+  log(text: string, level = 'info'): number {
+    return this.send({ type: 'log', level, text });
+  }
+
+  /** App time as the node keeps it from its welcome, Unix seconds. */
+  now(): number {
+    const welcome = this.frames.find(({ frame }) => frame.type === 'welcome');
+    if (welcome === undefined) throw new Error('no welcome came');
+    return Number(welcome.frame['now']) + ((performance.now() - welcome.at) / 1000) * this.rate;
   }
 
   sendText(text: string): void {

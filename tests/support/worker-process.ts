@@ -53,6 +53,10 @@ export class WorkerProcess {
     );
   }
 
+  get pid(): number {
+    return this.child.pid ?? 0;
+  }
+
   get exitCode(): number | null {
     return this.child.exitCode;
   }

@@ -49,7 +49,8 @@ describe.concurrent('Rest and draw credit, in times worked out on paper', () => 
     const begun = await scene.send({ bench: 3, air: 5 });
     await scene.waitTold(1, 1);
     await scene.pass(60 - (scene.now() - begun));
-    await scene.hand(1, { state: 'off', seconds: 1 });
+    // long enough that it is not over before anybody heard of it: a second of app time is 50 ms here
+    await scene.hand(1, { state: 'off', seconds: 8 });
     const [on, off, again] = await scene.waitTold(1, 3);
     expect(off?.claim).toBe('hand');
     // drawn d seconds leaves 1 - d/100; a start needs 50/100, and 1/100 a second comes back

@@ -2,7 +2,7 @@
 import type { RunningApp } from '../support/app';
 import { listOf, type Body, type OutsideApi } from '../support/outside-api';
 import { joinNode, type OutsideHouse } from '../support/outside-house';
-import type { OutsideNode } from '../support/outside-node';
+import type { Brings, OutsideNode } from '../support/outside-node';
 import { until } from '../support/until';
 
 export interface Told {
@@ -54,7 +54,8 @@ export class Scene {
       intake: 'loop-intake',
       back: 'loop-return',
     };
-    for (const [key, role] of Object.entries(roles)) {
+    const others = Object.keys(points).filter((key) => !(key in roles));
+    for (const [key, role] of [...Object.entries(roles), ...others.map((one) => [one, 'other'] as const)]) {
       const point = { key, node: 'N', name: key, role, unit: 'Cel', staleAfter: LONG };
       await api.make(`${at}/points`, { ...point, ...points[key] });
     }
@@ -84,8 +85,8 @@ export class Scene {
     return String(rule['id']);
   }
 
-  async join(): Promise<void> {
-    this.node = await joinNode(this.app.url, this.house);
+  async join(brings: Brings = {}): Promise<void> {
+    this.node = await joinNode(this.app.url, this.house, brings);
   }
 
   now(): number {
@@ -100,6 +101,11 @@ export class Scene {
     const ack = await this.node.readings(Object.entries(values).map(([n, v]) => ({ n, u: 'Cel', t, v })));
     if (ack.refused.length > 0) throw new Error(JSON.stringify(ack.refused));
     return t;
+  }
+
+  /** A reading of the current clamp `amps`, taken now. */
+  async sendAmps(v: number): Promise<void> {
+    await this.node.readings([{ n: 'amps', u: 'A', t: this.now(), v }]);
   }
 
   hand(number: number, body: object): Promise<Body> {

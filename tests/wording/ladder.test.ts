@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { reportWords, stateWord } from '@/lib/wording/channel-state';
-import { ladderLines, nextWords } from '@/lib/wording/ladder';
+import { ladderLines } from '@/lib/wording/ladder';
+import { nextWords } from '@/lib/wording/next';
 import { at, scene, spaced } from './scene';
 
 describe('the ladder', () => {

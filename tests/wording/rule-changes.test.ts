@@ -50,6 +50,15 @@ describe('the comparison of two versions', () => {
     ).toEqual(['longest draw: 90 s → 25 min']);
   });
 
+  it('says of a second period what it adds, and nothing of the first', () => {
+    const two = [...base.band, { from: 'sunset-01:00', low: 5, high: 8 }];
+    expect(changes(base, { ...base, band: two })).toEqual([
+      'on below from 1 h before sunset: none before, now 5.0 °C',
+      'off above from 1 h before sunset: none before, now 8.0 °C',
+    ]);
+    expect(changes(base, { ...base, band: [{ from: '06:00', low: 4, high: 7.5 }] })).toEqual([]);
+  });
+
   it('matches periods by when they begin, not by their place in the list', () => {
     const before = {
       ...base,

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { USUAL, type Preferences } from '@/lib/units/preferences';
 import type { Condition, ConditionNode } from '@/lib/control/rule-body';
-import { conditionWords, isSimple } from '@/lib/wording/rule-conditions';
+import { capitalFirst, conditionWords } from '@/lib/wording/rule-conditions';
 import { plainText } from '@/lib/wording/phrase';
 
 const names = {
@@ -52,14 +52,29 @@ describe('conditions in words', () => {
     expect(says({ all: [a, { any: [b, c] }] })).toBe(
       'the heap’s core is above 38.0 °C and (it is before 06:00 or the sun is up)',
     );
+  });
+
+  it('says a “not” by its opposite, also of a group', () => {
+    const a = leaf('gate-core', 'greaterThan', 38);
+    const b = leaf('time.hour', 'lessThan', 6);
+    const c = leaf('time.sunUp', 'equal', true);
+    expect(says({ not: a })).toBe('the heap’s core is at most 38.0 °C');
+    expect(says({ not: b })).toBe('it is 06:00 or later');
+    expect(says({ not: c })).toBe('the sun is down');
+    expect(says({ not: { not: a } })).toBe('the heap’s core is above 38.0 °C');
+    expect(says({ not: { any: [a] } })).toBe('the heap’s core is at most 38.0 °C');
+    expect(says({ not: { any: [a, c] } })).toBe('the heap’s core is at most 38.0 °C and the sun is down');
     expect(says({ not: { all: [a, b] } }, 'C', 12)).toBe(
-      'not (the heap’s core is above 38.0 °C and it is before 6:00 am)',
+      'the heap’s core is at most 38.0 °C or it is 6:00 am or later',
+    );
+    expect(says({ any: [a, { not: { any: [b, c] } }] })).toBe(
+      'the heap’s core is above 38.0 °C or (it is 06:00 or later and the sun is down)',
     );
   });
 
-  it('tells which trees the simple form can show', () => {
-    expect(isSimple({ all: [leaf('a', 'equal', 1)] })).toBe(true);
-    expect(isSimple({ any: [leaf('a', 'equal', 1)] })).toBe(false);
-    expect(isSimple({ all: [{ not: leaf('a', 'equal', 1) }] })).toBe(false);
+  it('can begin a line', () => {
+    const phrases = conditionWords(leaf('time.sunUp', 'equal', true), names, USUAL);
+    expect(plainText(capitalFirst(phrases))).toBe('The sun is up');
+    expect(capitalFirst([])).toEqual([]);
   });
 });

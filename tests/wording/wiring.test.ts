@@ -32,6 +32,16 @@ describe('the sentence of the wiring', () => {
     );
   });
 
+  it('says what the node keeps by itself', () => {
+    const keeps = (...labels: string[]) => says({ nodes: [{ ...node, keeps: labels }] });
+    expect(keeps('Gate-heap fan')).toMatch(
+      / if it hears nothing for 30 s, and it then runs the gate-heap fan by its fallback\.$/,
+    );
+    expect(keeps('Gate-heap fan', 'Ground fan', 'Bench mat')).toMatch(
+      /runs the gate-heap fan, the ground fan and the bench mat by their fallbacks\.$/,
+    );
+  });
+
   it('says it shortly when all is proved', () => {
     expect(says({ channels: four.slice(0, 3) })).toMatch(/^All three channels are proved\. Field node/);
     expect(says({ channels: four.slice(0, 1) })).toMatch(/^The one channel is proved\. /);

@@ -51,7 +51,7 @@ it.concurrent(
     await refusedIs(scene, 1);
     const { boot } = node;
     node.close();
-    const again = await OutsideNode.connect(worker.url, scene.token, 'N-1', 4, boot);
+    const again = await OutsideNode.connect(worker.url, scene.token, 'N-1', 4, { boot });
     await again.readings(pack({ nobody: 1 }));
     await refusedIs(scene, 2);
     again.close();

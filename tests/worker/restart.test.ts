@@ -140,6 +140,40 @@ describe('A stand-by', () => {
   });
 });
 
+describe('A second worker', () => {
+  it('takes over from one that was killed within a relay’s lease: nodes that find it keep their coils', async () => {
+    const scene = await makeScene(slow);
+    const first = await start();
+    const second = await start({ DATA_DIR: `${process.env['DATA_DIR'] ?? ''}/second` }, false);
+    const node = await join(first, scene);
+    await node.readings(pack({ 'bench-1': 3, 'house-air': 5 }));
+    await node.coil(1, 'on');
+    await until('the switching is stored', async () => (await switchings(scene)).length === 1);
+    const epoch = (await first.health())?.epoch ?? 0;
+    const { boot, number } = node;
+    await first.end('SIGKILL');
+
+    let again: OutsideNode | undefined;
+    await until(
+      'the second takes the node in',
+      async () => {
+        again = await OutsideNode.connect(second.url, scene.token, 'N-1', 4, {
+          ...{ boot, number, coils: { '1': 'on' as const } },
+        }).catch(() => undefined);
+        return again !== undefined;
+      },
+      25_000,
+    );
+    onTestFinished(() => again?.terminate());
+    expect((await second.health())?.epoch).toBe(epoch + 1);
+    expect(again?.number).toBeGreaterThan(number);
+    // its lease of 30 s has not ended, and the first command that it got holds the coil
+    expect(node.coils['1']).toBe('on');
+    expect(again?.coils['1']).toBe('on');
+    expect((await switchings(scene)).map(({ to }) => to)).toEqual(['on']);
+  }, 60_000);
+});
+
 describe('While the database is away', () => {
   it('nothing is acknowledged, control goes on, and all is stored once when it is back', async () => {
     const scene = await makeScene();

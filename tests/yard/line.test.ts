@@ -27,6 +27,7 @@ describe('the line', () => {
       channels: 4,
       boot: it.node.state().boot,
       clock: it.clock.wallMs() / 1000,
+      can: ['fallback'],
     });
   });
 

@@ -3,7 +3,7 @@ import type { AddressInfo } from 'node:net';
 import { WebSocketServer, type WebSocket } from 'ws';
 import { parseNodeFrame, type Coils, type NodeFrame } from '@/lib/field/frames';
 import { AppTime, type Clock } from '@/worker/yard/clock';
-import { FieldNode, type NodeParts } from '@/worker/yard/node';
+import { FieldNode, type KeptNode, type NodeParts } from '@/worker/yard/node';
 
 /** A clock that stands until it is told to go on; timers fire in their order, each at its own time. */
 export class FakeClock implements Clock {
@@ -170,6 +170,12 @@ export interface TestNode {
   changes: number[];
 }
 
+/** Flash that outlives a node, as long as it is handed to the next one. */
+export function flash(): NodeParts['flash'] {
+  let kept: KeptNode = { fallback: null, logs: [] };
+  return { read: () => kept, write: (now) => (kept = now) };
+}
+
 export function testNode(server: FakeServer, parts: Partial<NodeParts> = {}): TestNode {
   const clock = new FakeClock();
   const log: TestNode['log'] = [];
@@ -186,6 +192,7 @@ export function testNode(server: FakeServer, parts: Partial<NodeParts> = {}): Te
     sample: (appMs) => [{ n: 'bench-1', u: 'Cel', v: (appMs / 1000) % 97 }],
     beforeCoilsChange: (ms) => changes.push(ms),
     log: (event, fields) => log.push({ event, ...fields }),
+    flash: flash(),
     ...parts,
   });
   node.start();

@@ -1,5 +1,6 @@
 /** The nodes of one house: their relays, their links, and what is sent to them. */
 import type { ChannelWiring, HouseRecord, NodeWiring } from '@/db/queries/plan';
+import type { SwitchingRow } from '@/db/queries/running';
 import type { Memory } from '@/lib/control/memory';
 import type { StepResult } from '@/lib/control/step-result';
 import type { ObservedRelay, State } from '@/lib/control/types';
@@ -8,12 +9,15 @@ import {
   type BootId,
   type CommandFrame,
   type HelloFrame,
+  type LogFrame,
   type RefusedRecord,
   type RelaysFrame,
 } from '@/lib/field/frames';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { ControlledHouse, HouseDeps } from './house-deps';
-import { reportRows, tripRows } from './house-record';
+import { aloneRows, reportRows, tripRows } from './house-record';
+import { keptAlone, NodeFallback, type AloneChange } from './node-fallback';
+import { NodeLogs } from './node-logs';
 import { refusalsOfBoot, withRefused } from './node-refusals';
 import { NodeRelays, loadState, type Order, type Trip } from './node-relays';
 import { houseState, type NodeStanding } from './state';
@@ -32,6 +36,8 @@ export interface CommandLink {
 interface Attached {
   wiring: NodeWiring;
   relays: NodeRelays;
+  fallback: NodeFallback;
+  logs: NodeLogs;
   link: CommandLink | null;
   standing: NodeStanding;
   /** Relays that the node itself says it has. */
@@ -112,6 +118,7 @@ export class HouseNodes {
       firmware,
       channels,
       clockErrorS: clock === null ? null : clock - at / 1000,
+      can: hello.can ?? [],
     };
     node.relayCount = channels;
     node.isNoted = true;
@@ -138,8 +145,11 @@ export class HouseNodes {
     const node = this.nodes.get(nodeId);
     if (node === undefined || node.link !== link) return;
     this.heard(nodeId);
-    const { changed, trip } = node.relays.take(link.boot, frame, at);
+    const { changed, trip } = node.relays.take(link.boot, frame, at, link.canFallback);
     const report = node.relays.lastReport;
+    const turned = new Set([...changed, ...(trip?.dropped ?? [])].map(({ relay }) => relay));
+    const alone = node.fallback.takeReport(frame.channels, report?.isAlone === true, at, turned);
+    if (alone.length > 0) void this.deps.journal.append(this.noteAlone(node, alone));
     if (report !== null && changed.length > 0) {
       void this.deps.journal.append({ reports: reportRows(this.house.record, changed, report) });
     }
@@ -153,6 +163,27 @@ export class HouseNodes {
     }
     // An order whose switchings are being written is sent as soon as they are: it is the answer then.
     if (node.pending === 0) this.send(node, this.deps.clock.monotonicMs());
+  }
+
+  /**
+   * A node says something of itself; where it tells what its fallback did, that is taken into account at its own times.
+   * @returns whether it is kept, or never will be: the node need not say it again
+   */
+  async takeLog(nodeId: string, frame: LogFrame, at: number): Promise<boolean> {
+    const node = this.nodes.get(nodeId);
+    if (node === undefined) return false;
+    this.heard(nodeId);
+    const taken = node.logs.take(this.house.record, nodeId, frame, at);
+    if (taken === null) return true;
+    const alone = taken.fallback === null ? [] : node.fallback.takeLog(taken.fallback);
+    const entry = { ...this.noteAlone(node, alone), logs: [taken.row] };
+    if (taken.fallback !== null) this.house.step();
+    return this.deps.journal.keep(entry);
+  }
+
+  /** A step has taken in what was observed. */
+  told(): void {
+    for (const node of this.nodes.values()) node.fallback.told();
   }
 
   /**
@@ -199,8 +230,11 @@ export class HouseNodes {
   observed(): Record<string, ObservedRelay> {
     const relays: Record<string, ObservedRelay> = {};
     for (const channel of this.house.record.channels) {
-      const observed = this.nodes.get(channel.nodeId)?.relays.observed(channel) ?? null;
-      if (observed !== null) relays[channel.id] = observed;
+      const node = this.nodes.get(channel.nodeId);
+      const observed = node?.relays.observed(channel) ?? null;
+      if (observed === null) continue;
+      const ranAlone = node?.fallback.runsOf(channel.id) ?? [];
+      relays[channel.id] = ranAlone.length === 0 ? observed : { ...observed, ranAlone };
     }
     return relays;
   }
@@ -235,7 +269,7 @@ export class HouseNodes {
       const { lastHeardAt } = node.standing;
       if (!node.isNoted || lastHeardAt === null) continue;
       node.isNoted = false;
-      const status = { ...node.status, ...node.relays.status() };
+      const status = { ...node.status, ...node.relays.status(), ...node.fallback.status() };
       notes.push({ id, holdingId: this.house.holdingId, lastHeardAt, status });
     }
     return notes;
@@ -262,6 +296,8 @@ export class HouseNodes {
     };
     this.nodes.set(wiring.id, {
       ...{ wiring, relays, standing, link: null, isNoted: false, pending: 0 },
+      fallback: new NodeFallback(() => this.channelsOf(wiring.id), keptAlone(wiring.status)),
+      logs: new NodeLogs(),
       relayCount: wiring.channels,
       status: wiring.status,
       tail: Promise.resolve(),
@@ -293,8 +329,21 @@ export class HouseNodes {
       'a lease ran out; coils dropped',
     );
     const droppedAt = Math.min(node.relays.leaseEnd ?? at, at);
+    node.fallback.dropped(droppedAt);
     const switchings = tripRows(record, trip, droppedAt);
     if (switchings.length > 0) node.tail = Promise.all([node.tail, this.deps.journal.append({ switchings })]);
+  }
+
+  /** What a fallback did is stored as what it was, and whoever looks is told. */
+  private noteAlone(node: Attached, changes: readonly AloneChange[]): { switchings: SwitchingRow[] } {
+    for (const { channel, at, coil } of changes) {
+      this.deps.log.info(
+        { house: this.house.id, node: node.wiring.key, channel: channel.key, coil, at },
+        'a node ran its fallback',
+      );
+      this.deps.onSwitching(this.house, channel.number, at, loadState(channel, coil), 'fail-safe');
+    }
+    return { switchings: aloneRows(this.house.record, changes) };
   }
 
   private releaseNode(node: Attached, committed: Promise<unknown> | null): void {

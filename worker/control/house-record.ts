@@ -2,7 +2,8 @@
 import { v7 } from 'uuid';
 import type { HouseHead, ChannelWiring } from '@/db/queries/plan';
 import type { DecisionRow, RelayReportRow, SwitchingRow } from '@/db/queries/running';
-import type { ControlEvent, Explanation } from '@/lib/control/types';
+import type { ControlEvent, Data, Explanation, State } from '@/lib/control/types';
+import type { AloneChange } from './node-fallback';
 import { loadState, type Report, type Trip } from './node-relays';
 
 export function switchingRows(
@@ -16,7 +17,15 @@ export function switchingRows(
     // One that a later switching of the same step overtook is carried by no command.
     const number = event.overtaken === true ? null : numberOf(channel);
     return [
-      { ...headOf(house, channel, event.at), from, to, claim, number, ...ruleOf(explanation), explanation },
+      {
+        ...headOf(house, channel, event.at),
+        from,
+        to,
+        claim,
+        number,
+        ...ruleOf(explanation),
+        explanation: { ...explanation },
+      },
     ];
   });
 }
@@ -24,8 +33,13 @@ export function switchingRows(
 export function decisionRows(house: HouseHead, events: readonly ControlEvent[]): DecisionRow[] {
   return events.flatMap((event) => {
     if (event.kind !== 'switching' && event.kind !== 'decision') return [];
-    const state = event.kind === 'switching' ? event.to : event.state;
-    return [{ ...headOf(house, event.channel, event.at), state, claim: event.claim }];
+    const head = headOf(house, event.channel, event.at);
+    // a switching has a row of its own that carries its ladder
+    if (event.kind === 'switching') return [{ ...head, state: event.to, claim: event.claim }];
+    const { state, claim, explanation } = event;
+    // one that was overtaken within its own instant never had a ladder
+    const isTold = explanation.ladder.length > 0;
+    return [{ ...head, state, claim, explanation: isTold ? { ...explanation } : null }];
   });
 }
 
@@ -50,30 +64,42 @@ export function reportRows(
 
 /** Coils that dropped with their lease: switchings of their own, that no command made. */
 export function tripRows(house: HouseHead, { trip, dropped }: Trip, at: number): SwitchingRow[] {
-  return dropped.map((channel) => {
-    const from = loadState(channel, 'on');
-    const to = loadState(channel, 'off');
-    const because = { safe: to, points: [], trip };
-    const explanation: Explanation = {
-      channel: channel.id,
-      at,
-      state: to,
-      claim: 'fail-safe',
-      until: null,
-      ladder: [{ claim: 'fail-safe', speaks: true, wants: to, because }],
-      next: [],
-      rule: null,
-    };
-    return {
-      ...headOf(house, channel.id, at),
-      from,
-      to,
-      claim: 'fail-safe',
-      number: null,
-      trip,
-      explanation,
-    };
+  return dropped.map((channel) => uncommanded(house, channel, 'off', at, trip, {}));
+}
+
+/** What a node's fallback did: switchings of their own too, each told once by its time. */
+export function aloneRows(house: HouseHead, changes: readonly AloneChange[]): SwitchingRow[] {
+  return changes.map(({ channel, at, coil, told }) => {
+    const { below, above } = channel.fallback ?? { below: null, above: null };
+    const point = told?.point ?? channel.fallback?.point ?? null;
+    const state = loadState(channel, coil);
+    const fallback = { state, point, value: told?.value ?? null, why: told?.why ?? null, below, above };
+    return uncommanded(house, channel, coil, at, `fallback/${told?.at ?? at}/${coil}`, { fallback });
   });
+}
+
+function uncommanded(
+  house: HouseHead,
+  channel: ChannelWiring,
+  coil: State,
+  at: number,
+  trip: string,
+  more: Data,
+): SwitchingRow {
+  const to = loadState(channel, coil);
+  const because = { safe: loadState(channel, 'off'), points: [], trip, ...more };
+  const explanation: Explanation = {
+    channel: channel.id,
+    at,
+    state: to,
+    claim: 'fail-safe',
+    until: null,
+    ladder: [{ claim: 'fail-safe', speaks: true, wants: to, because }],
+    next: [],
+    rule: null,
+  };
+  const from = to === 'on' ? 'off' : 'on';
+  return { ...headOf(house, channel.id, at), from, to, claim: 'fail-safe', number: null, trip, explanation };
 }
 
 function headOf(house: HouseHead, channelId: string, at: number) {

@@ -42,7 +42,8 @@ export class House implements ControlledHouse {
   readonly nodes: HouseNodes;
   last: StepResult | null = null;
   state: HouseState | null = null;
-  private plan: Plan;
+  /** Null: what is to be driven by has not been compiled yet, or cannot be. */
+  private plan: Plan | null;
   private readonly points = new Map<string, ObservedPoint>();
   /** Points whose newest reading no step has seen yet. */
   private readonly untold = new Set<string>();
@@ -128,9 +129,8 @@ export class House implements ControlledHouse {
   replan(record: HouseRecord): void {
     this.record = record;
     this.nodes.rewire(record);
-    this.guard(() => {
-      this.plan = compile(record.config);
-    });
+    // not the former plan, should this one be none: who changed it believes that it is in force
+    this.plan = null;
     this.step();
   }
 
@@ -158,6 +158,7 @@ export class House implements ControlledHouse {
     const { clock, metrics, journal } = this.deps;
     const now = Math.max(clock.appNow(), this.memory.at ?? 0);
     const startedMs = clock.monotonicMs();
+    this.plan ??= compile(this.record.config);
     const result = step(this.plan, this.memory, this.observed(), now);
     metrics.add('steps_total');
     metrics.add('step_seconds_total', (clock.monotonicMs() - startedMs) / 1000);
@@ -169,6 +170,7 @@ export class House implements ControlledHouse {
     this.commands = this.commands.filter((one) => one.number > result.memory.taken);
     for (const point of this.points.values()) delete point.between;
     this.untold.clear();
+    this.nodes.told();
 
     const orders = this.nodes.order(result);
     const entry: Entry = {

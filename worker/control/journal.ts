@@ -6,6 +6,7 @@ import {
   writeRunning,
   type DecisionRow,
   type MemoryRow,
+  type NodeLogRow,
   type RelayReportRow,
   type RunningBatch,
   type SwitchingRow,
@@ -17,6 +18,8 @@ export interface Entry {
   switchings?: SwitchingRow[];
   decisions?: DecisionRow[];
   reports?: RelayReportRow[];
+  /** What nodes said. */
+  logs?: NodeLogRow[];
   /** Columns of the house's row that change. */
   memory?: MemoryRow;
 }
@@ -36,6 +39,12 @@ export class Journal {
       groupWeight: GROUP_ROWS,
       heldWeight: HELD_ROWS,
       weigh: (entry) => rowsOf(entry) + 1,
+      // a state is only for those who open a page: the next one follows at the next report anyway
+      gather: {
+        ms: 250,
+        fullWeight: GROUP_ROWS,
+        isUrgent: (entry) => rowsOf(entry) > 0 || entry.memory?.memory !== undefined,
+      },
       write: async (entries) => {
         await writeRunning(base.db, batchOf(entries));
         return entries.map(() => null);
@@ -57,14 +66,7 @@ export class Journal {
    * @returns whether it is durable
    */
   async append(entry: Entry): Promise<boolean> {
-    const written = this.writer.put(entry).then(
-      () => true,
-      (error: unknown) => {
-        const what = error instanceof Overflow ? 'dropped, the journal is full' : 'refused by the database';
-        this.base.log.error({ err: error, rows: rowsOf(entry) }, `what control did is ${what}`);
-        return false;
-      },
-    );
+    const written = this.keep(entry);
     if (this.writer.isAway) return false;
     return Promise.race([
       written,
@@ -73,6 +75,18 @@ export class Journal {
         void written.then(cancel);
       }),
     ]);
+  }
+
+  /** Resolves once the entry is committed, however long that takes. @returns false where it cannot be kept */
+  keep(entry: Entry): Promise<boolean> {
+    return this.writer.put(entry).then(
+      () => true,
+      (error: unknown) => {
+        const what = error instanceof Overflow ? 'dropped, the journal is full' : 'refused by the database';
+        this.base.log.error({ err: error, rows: rowsOf(entry) }, `what control did is ${what}`);
+        return false;
+      },
+    );
   }
 
   settle(limitMs: number): Promise<void> {
@@ -84,8 +98,8 @@ export class Journal {
   }
 }
 
-function rowsOf(entry: Entry): number {
-  return (entry.switchings?.length ?? 0) + (entry.decisions?.length ?? 0) + (entry.reports?.length ?? 0);
+function rowsOf({ switchings, decisions, reports, logs }: Entry): number {
+  return [switchings, decisions, reports, logs].reduce((sum, rows) => sum + (rows?.length ?? 0), 0);
 }
 
 /** Of several memories of a house only the newest columns are written. */
@@ -98,6 +112,7 @@ function batchOf(entries: Entry[]): RunningBatch {
     switchings: entries.flatMap((entry) => entry.switchings ?? []),
     decisions: entries.flatMap((entry) => entry.decisions ?? []),
     reports: entries.flatMap((entry) => entry.reports ?? []),
+    logs: entries.flatMap((entry) => entry.logs ?? []),
     memories: [...memories.values()],
   };
 }

@@ -25,6 +25,8 @@ export interface Report {
   boot: BootId;
   channels: Coils;
   number: number;
+  /** Nobody commanded the node when it sent this, and it may have run its fallback. */
+  isAlone: boolean;
 }
 
 /** Coils that fell off with a lease, told once. */
@@ -36,6 +38,8 @@ export interface Trip {
 }
 
 const LEASE_MS = leaseS * 1000;
+/** A node's lease ends sooner than it can by our reckoning: by as long as frames are under way. */
+const UNDER_WAY_MS = 2000;
 
 export class NodeRelays {
   private wanted: Order | null = null;
@@ -137,9 +141,15 @@ export class NodeRelays {
 
   /**
    * Takes a report in.
+   * @param canFallback the node can run fallbacks by itself
    * @returns the channels whose relay now says another thing than before, and a trip if it tells of a new one
    */
-  take(boot: BootId, frame: RelaysFrame, at: number): { changed: ChannelWiring[]; trip: Trip | null } {
+  take(
+    boot: BootId,
+    frame: RelaysFrame,
+    at: number,
+    canFallback = false,
+  ): { changed: ChannelWiring[]; trip: Trip | null } {
     const before = this.lastCoils;
     const known = this.trips?.boot === boot ? this.trips.count : 0;
     const changed = this.channels.filter(({ relay }) => {
@@ -148,13 +158,17 @@ export class NodeRelays {
     });
     let trip: Trip | null = null;
     if (frame.trips > known) {
-      const dropped = this.channels.filter(
-        ({ relay }) => before[String(relay)] === 'on' && frame.channels[String(relay)] === 'off',
-      );
+      const dropped = this.channels.filter(({ relay, fallback }) => {
+        if (before[String(relay)] !== 'on') return false;
+        // one that is on again was put on by its fallback: the trip dropped it all the same
+        return frame.channels[String(relay)] === 'off' || (canFallback && fallback !== null);
+      });
       trip = { trip: `${boot}/${frame.trips}`, dropped };
     }
     this.trips = { boot, count: Math.max(known, frame.trips) };
-    this.report = { at, boot, channels: frame.channels, number: frame.number };
+    const isOver = this.leaseEndsAt === null || at >= this.leaseEndsAt - UNDER_WAY_MS;
+    const isAlone = canFallback && (isOver || trip !== null);
+    this.report = { at, boot, channels: frame.channels, number: frame.number, isAlone };
     this.lastCoils = { ...before, ...frame.channels };
     return { changed, trip };
   }
@@ -162,10 +176,14 @@ export class NodeRelays {
   observed(channel: ChannelWiring): ObservedRelay | null {
     const coil = this.report?.channels[String(channel.relay)];
     if (this.report === null && this.leaseEndsAt === null) return null;
+    const isAlone = this.report?.isAlone === true && coil === 'on' && channel.fallback !== null;
     return {
+      ...(isAlone ? { isAlone } : {}),
       reported: coil === undefined ? null : loadState(channel, coil),
       reportedAt: coil === undefined ? null : (this.report?.at ?? null),
-      acknowledges: this.report !== null && this.report.number >= (this.changedBy.get(channel.relay) ?? 0),
+      // while its fallback runs, no order of ours stands against what it says
+      acknowledges:
+        isAlone || (this.report !== null && this.report.number >= (this.changedBy.get(channel.relay) ?? 0)),
       leaseEndsAt: this.leaseEndsAt,
     };
   }

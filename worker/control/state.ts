@@ -1,10 +1,10 @@
 /** How a house stands, as pages, browsers and the interface are told: names for ids, ISO times with the house's offset. */
-import { DateTime } from 'luxon';
 import type { HouseRecord } from '@/db/queries/plan';
 import { isInstant } from '@/lib/control/because';
 import type { StepResult } from '@/lib/control/step-result';
 import type { DataValue, State } from '@/lib/control/types';
 import type { HouseState } from '@/lib/schema/house-state';
+import { isoIn } from '@/lib/server/wire';
 
 export interface NodeStanding {
   online: boolean;
@@ -31,12 +31,16 @@ export function houseState(
     at: isoIn(zone, now),
     points: record.points.map(({ id, key, name, role, unit }) => {
       const point = points.get(id);
+      const last = point?.lastDoubt ?? null;
       return {
         ...{ key, name, role, unit },
         value: point?.value ?? null,
         at: iso(point?.at ?? null),
         quality: point?.quality ?? 'bad',
         why: point?.why ?? null,
+        doubtSince: iso(point?.doubtSince ?? null),
+        lastDoubt:
+          last === null ? null : { why: last.why, from: isoIn(zone, last.from), to: isoIn(zone, last.to) },
       };
     }),
     channels: record.channels.flatMap((wiring) => {
@@ -81,11 +85,6 @@ export function houseState(
 
 export function isoUtc(at: number): string {
   return isoIn('utc', at);
-}
-
-function isoIn(zone: string, at: number): string {
-  const time = DateTime.fromMillis(at, { zone });
-  return (time.isValid ? time : DateTime.fromMillis(at, { zone: 'utc' })).toISO() ?? '';
 }
 
 function wire(zone: string, field: string, value: DataValue): DataValue {

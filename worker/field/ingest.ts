@@ -9,6 +9,8 @@ const HELD_ROWS = 500_000;
 const GROUP_ROWS = 20_000;
 /** Older readings find their roll-ups and nights made: within it the roll-ups of a start afresh reach them. */
 export const LATE_MS = 20 * 3_600_000;
+/** Packs of a backlog are a hundred each: some of them under way at once are not held up. */
+const FULL_ROWS = 400;
 
 export interface Stored {
   stored: number;
@@ -25,6 +27,8 @@ export class Ingest {
       name: 'readings',
       groupWeight: GROUP_ROWS,
       heldWeight: HELD_ROWS,
+      // nodes have time, and twenty commits a second are little work for the disk
+      gather: { ms: 50, fullWeight: FULL_ROWS, isUrgent: () => false },
       // An empty pack weighs too: it waits for its turn, so acknowledgements keep their order.
       weigh: (rows) => Math.max(rows.length, 1),
       write: async (packs) => {

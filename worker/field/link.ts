@@ -132,12 +132,15 @@ export class NodeLink implements CommandLink {
         this.seen = { seq: frame.seq, at };
         return this.house.nodes.takeRelays(this.nodeId, this, frame, at);
       }
-      case 'log':
-        log.info(
-          { node: node.key, level: frame.level, text: frame.text.slice(0, LOG_TEXT_MAX) },
-          'a node says',
+      case 'log': {
+        const { seq, level, text } = frame;
+        log.info({ node: node.key, level, text: text.slice(0, LOG_TEXT_MAX) }, 'a node says');
+        this.house.nodes.takeLog(this.nodeId, frame, clock.appNow()).then(
+          (isKept) => isKept && this.send({ type: 'ack', seq }),
+          (error: unknown) => log.warn({ err: error, node: node.key }, 'a log could not be kept'),
         );
-        return this.send({ type: 'ack', seq: frame.seq });
+        return;
+      }
       case 'readings': {
         const { seq } = frame;
         takePack(this.deps, ingest, this.house, node, frame.pack).then(

@@ -1,6 +1,7 @@
 /** What is done by the clock: roll-ups, night summaries, months of readings made ahead. The leader alone does them. */
 import cron, { type ScheduledTask } from 'node-cron';
 import { makeLate } from '@/db/queries/late-readings';
+import { forgetNodeLogs } from '@/db/queries/node-log';
 import { makeReadingMonth, rollUp } from '@/db/queries/reading-write';
 import { env } from '@/lib/server/env';
 import { sendLetter } from '@/lib/server/mail';
@@ -17,6 +18,8 @@ const AFRESH_MS = 24 * 3_600_000;
 /** Somebody sits before the page and waits for the file that was sent. */
 const IMPORTS_MS = 2000;
 const MONTH_MS = 31 * 86_400_000;
+/** What nodes said is asked for while a fault is looked for; what their fallbacks did is kept with the switchings. */
+const NODE_LOGS_MS = 90 * 86_400_000;
 
 export interface JobDeps extends Base {
   houses: Houses;
@@ -47,6 +50,7 @@ export class Jobs {
       each('*/5 * * * *', 'nights', () => this.keepNights()),
       each('*/5 * * * *', 'reports', () => this.sendReports()),
       each('17 3 * * *', 'months', () => this.makeMonths()),
+      each('27 3 * * *', 'node logs', () => this.forgetNodeLogs()),
     ];
   }
 
@@ -108,6 +112,11 @@ export class Jobs {
   private async sendReports(): Promise<void> {
     const { clock, db } = this.deps;
     await sendReports({ db, now: clock.appNow(), url: env().PUBLIC_URL, send: sendLetter });
+  }
+
+  private async forgetNodeLogs(): Promise<void> {
+    const gone = await forgetNodeLogs(this.deps.db, new Date(this.deps.clock.appNow() - NODE_LOGS_MS));
+    if (gone > 0) this.deps.log.info({ gone }, 'old logs of nodes are forgotten');
   }
 
   private async makeMonths(): Promise<void> {

@@ -2,10 +2,13 @@
  * A field node: everything that the field protocol asks of one, and nothing of what it measures or moves.
  * What it knows of the server is what comes over the wire.
  */
+import { fallbackText, type FallbackEntry } from '@/lib/field/fallback-log';
 import { parseServerFrame, relaysEveryS, type BootId, type CommandFrame } from '@/lib/field/frames';
 import type { KeptRecord } from './backlog';
 import type { AppTime, Clock } from './clock';
+import { Fallback, type FallbackChange, type KeptFallback } from './fallback';
 import { Line } from './line';
+import { LogBox, type KeptLog } from './log-box';
 import { Outbox } from './outbox';
 import { RelayBoard } from './relays';
 import { Sampler } from './sampler';
@@ -13,6 +16,12 @@ import { Sampler } from './sampler';
 /** The hardware watchdog that is modelled: a node that does not run for so long is reset, coils off. */
 export const watchdogMs = 10_000;
 const watchdogFedEveryMs = 2_000;
+
+/** What a node's flash holds over a restart, readings apart. */
+export interface KeptNode {
+  fallback: KeptFallback | null;
+  logs: KeptLog[];
+}
 
 export interface NodeParts {
   key: string;
@@ -29,12 +38,17 @@ export interface NodeParts {
   /** called just before coils change at this monotonic time: until then they were as they are */
   beforeCoilsChange(monotonicMs: number): void;
   log(event: string, fields: Record<string, unknown>): void;
+  flash: { read(): KeptNode; write(kept: KeptNode): void };
 }
 
-type TimerName = 'lease' | 'relays' | 'sample' | 'watchdog';
+type TimerName = 'lease' | 'relays' | 'sample' | 'watchdog' | 'alone';
 
 export class FieldNode {
   private board: RelayBoard;
+  private kept: KeptNode;
+  private fallback: Fallback;
+  private isAlone = false;
+  private readonly logBox: LogBox;
   private readonly outbox: Outbox;
   private readonly sampler: Sampler;
   private readonly line: Line;
@@ -44,8 +58,15 @@ export class FieldNode {
   private readonly timers = new Map<TimerName, () => void>();
 
   constructor(private readonly parts: NodeParts) {
-    this.board = new RelayBoard(parts.relays, parts.clock.id(), parts.rate);
     this.ranMs = parts.clock.monotonicMs();
+    this.board = new RelayBoard(parts.relays, parts.clock.id(), parts.rate, this.ranMs);
+    this.kept = parts.flash.read();
+    this.fallback = this.newFallback(this.ranMs);
+    this.logBox = new LogBox(
+      this.kept.logs,
+      (entry) => this.send({ type: 'log', ...entry }),
+      (logs) => this.keep({ logs }),
+    );
     this.outbox = new Outbox(
       (pack) => this.send({ type: 'readings', pack }),
       (ms, then) => parts.clock.after(ms, () => this.run(then)),
@@ -69,6 +90,7 @@ export class FieldNode {
     this.line.dial();
     this.sampler.schedule();
     this.feedWatchdog();
+    this.waitAlone();
   }
 
   /** Ends the node as a pulled plug does, but for the closing handshake. */
@@ -98,7 +120,10 @@ export class FieldNode {
     this.ranMs = now;
     this.expireLease(frozen ? Math.min(now, resetMs) : now);
     if (frozen) this.reset(resetMs);
-    else work();
+    else {
+      this.driveAlone(now);
+      work();
+    }
   }
 
   private expireLease(untilMs: number): void {
@@ -108,19 +133,78 @@ export class FieldNode {
     this.board.expire(endsMs);
     this.parts.log('trip', { trips: this.board.state().trips, number: this.board.state().number });
     this.sendRelays();
-    this.send({ type: 'log', level: 'warning', text: 'the lease ended: every coil dropped' });
+    this.logBox.add({ level: 'warning', text: 'the lease ended: every coil dropped' });
+  }
+
+  /** From when the last command has run out until the next one, by the node's own point and its own rest. */
+  private driveAlone(now: number): void {
+    if (now < this.board.aloneFromMs || !this.fallback.isSet) return;
+    if (!this.isAlone) {
+      this.isAlone = true;
+      this.parts.log('alone', {});
+      this.tell({ what: 'begun' }, this.board.aloneFromMs);
+    }
+    const appMs = this.parts.time.atMs(now);
+    const readings = appMs === null ? [] : this.parts.sample(appMs);
+    const changes = this.fallback.look(now, (point) => readings.find(({ n }) => n === point)?.v ?? null);
+    if (changes.length === 0) return;
+    this.parts.beforeCoilsChange(now);
+    for (const change of changes) {
+      this.board.drive(change.relay, change.what);
+      this.tell(change, now);
+    }
+    this.sendRelays();
+  }
+
+  /** Looks again when the next command can be missing, and then as often as the fallback asks. */
+  private waitAlone(): void {
+    const now = this.parts.clock.monotonicMs();
+    const atMs = now < this.board.aloneFromMs ? this.board.aloneFromMs : this.fallback.nextMs(now);
+    this.set('alone', atMs - now, () => this.waitAlone());
+  }
+
+  /** A command drives: what ran by itself ends, as far as the command does not go on with it. */
+  private endAlone(now: number): void {
+    if (!this.isAlone) return;
+    this.isAlone = false;
+    this.parts.log('commanded again', {});
+    const { channels } = this.board.state();
+    for (const change of this.fallback.end(now))
+      if (channels[String(change.relay)] === 'off') this.tell(change, now);
+    this.tell({ what: 'ended' }, now);
+  }
+
+  private tell(what: FallbackChange | { what: 'begun' | 'ended' }, monotonicMs: number): void {
+    if (what.what === 'on' || what.what === 'off') this.parts.log('fallback', { ...what });
+    const at = this.parts.time.atMs(monotonicMs);
+    // a node that was never told the time cannot say when; its relays frames still say what its coils are
+    if (at === null) return;
+    const entry: FallbackEntry = { ...what, at };
+    this.logBox.add({ level: 'info', text: fallbackText(entry) });
+  }
+
+  private keep(part: Partial<KeptNode>): void {
+    this.kept = { ...this.kept, ...part };
+    this.parts.flash.write(this.kept);
+  }
+
+  private newFallback(startMs: number): Fallback {
+    return new Fallback(this.kept.fallback, this.parts.rate, startMs, (fallback) => this.keep({ fallback }));
   }
 
   /** The watchdog has pulled the reset line: a new boot with every coil off. Kept readings are in flash. */
   private reset(atMs: number): void {
     this.parts.beforeCoilsChange(atMs);
-    this.board = new RelayBoard(this.parts.relays, this.parts.clock.id(), this.parts.rate);
+    this.board = new RelayBoard(this.parts.relays, this.parts.clock.id(), this.parts.rate, atMs);
+    this.fallback = this.newFallback(atMs);
+    this.isAlone = false;
     this.seq = 0;
     this.isWelcome = false;
     this.parts.log('watchdog', { boot: this.board.boot });
     this.line.drop();
     this.sampler.schedule();
     this.feedWatchdog();
+    this.waitAlone();
   }
 
   private feedWatchdog(): void {
@@ -136,6 +220,7 @@ export class FieldNode {
       channels: this.parts.relays,
       boot: this.board.boot,
       clock: appMs === null ? null : appMs / 1000,
+      can: ['fallback'],
     });
   }
 
@@ -144,6 +229,7 @@ export class FieldNode {
     this.isWelcome = false;
     this.cancel('relays');
     this.outbox.lineDown();
+    this.logBox.lineDown();
   }
 
   private received(text: string): void {
@@ -158,7 +244,7 @@ export class FieldNode {
       case 'command':
         return this.command(frame);
       case 'ack':
-        if (!('stored' in frame)) return;
+        if (!('stored' in frame)) return this.logBox.acknowledged(frame.seq);
         if (frame.refused.length > 0) this.parts.log('readings refused', { refused: frame.refused });
         return this.outbox.acknowledged(frame.seq);
       case 'error':
@@ -172,6 +258,7 @@ export class FieldNode {
     this.isWelcome = true;
     this.board.connected();
     this.sendRelays();
+    this.logBox.sendWaiting();
     if (this.sampler.isFresh) this.sampler.now();
     else this.outbox.send();
     this.sampler.schedule();
@@ -185,6 +272,9 @@ export class FieldNode {
       return this.parts.log('command ignored', { number: frame.number, why: answer.why });
     }
     this.scheduleLease();
+    this.fallback.take(frame.fallback ?? {});
+    this.endAlone(now);
+    this.waitAlone();
     if (answer.isRenewal && !answer.changed) return;
     this.parts.log('command', { number: frame.number, channels: this.board.state().channels });
     this.sendRelays();

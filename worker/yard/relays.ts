@@ -19,17 +19,21 @@ export class RelayBoard {
   private highest = 0;
   private trips = 0;
   private endsMs: number | null = null;
+  private commandedTillMs: number;
 
   /**
    * @param count relays, numbered from 1
    * @param boot the id of this start; a board starts with every coil off
    * @param rate app seconds a real second: the lease is in app time, the monotonic clock in real time
+   * @param startMs monotonic; a board that has just started waits for a first command as long as a lease
    */
   constructor(
     readonly count: number,
     readonly boot: BootId,
     private readonly rate: number,
+    startMs = 0,
   ) {
+    this.commandedTillMs = startMs + (leaseS * 1000) / rate;
     this.coils = Array.from({ length: count }, () => 'off');
   }
 
@@ -58,6 +62,19 @@ export class RelayBoard {
     return this.endsMs;
   }
 
+  /**
+   * When the last command runs out, on the monotonic clock, whether or not it had a coil on; nobody commands the board
+   * from then on.
+   */
+  get aloneFromMs(): number {
+    return this.commandedTillMs;
+  }
+
+  /** The node's own doing while nobody commands it. */
+  drive(relay: number, coil: Coil): void {
+    if (relay >= 1 && relay <= this.count) this.coils[relay - 1] = coil;
+  }
+
   /** Applies a command, or says why it is ignored. */
   command(frame: CommandFrame, monotonicMs: number): CommandAnswer {
     this.expire(monotonicMs);
@@ -71,6 +88,7 @@ export class RelayBoard {
     const isRenewal = frame.number === this.highest;
     const changed = this.coils.map((coil, i) => coil !== wanted(frame, i + 1)).includes(true);
     this.highest = frame.number;
+    this.commandedTillMs = Math.max(endsMs, this.commandedTillMs);
     this.coils.forEach((_coil, i) => (this.coils[i] = wanted(frame, i + 1)));
     // A lease is held for coils that are on; without one nothing can drop, and nothing is to be counted.
     this.endsMs = this.coils.includes('on') ? Math.max(endsMs, this.endsMs ?? 0) : null;

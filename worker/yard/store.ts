@@ -1,9 +1,11 @@
-/** The world on disk, between one start of the yard and the next. */
+/** The world and the nodes' flash on disk, between one start of the yard and the next. */
 import { mkdirSync, readFileSync, renameSync, writeFileSync } from 'node:fs';
 import { dirname } from 'node:path';
 import { z } from 'zod';
+import { fallbackSetting } from '@/lib/field/frames';
 import { yardHouses } from './catalogue';
 import { flowNames } from './house-world';
+import type { KeptNode } from './node';
 import type { World } from './world';
 
 const finite = z.number();
@@ -52,10 +54,49 @@ export function readWorld(file: string, seed: number): { world: World } | { why:
   }
 }
 
-/** Written beside and moved into place, so that a kill in the middle leaves the former one. */
 export function saveWorld(file: string, world: World): void {
+  write(file, world);
+}
+
+const keptNode = z.strictObject({
+  fallback: z
+    .strictObject({ settings: z.record(z.string(), fallbackSetting), spent: z.array(z.string()) })
+    .nullable(),
+  logs: z.array(z.strictObject({ level: z.enum(['info', 'warning']), text: z.string() })),
+});
+
+/**
+ * A node's flash, in a file beside the world's. What cannot be read is as a new node's: it has no fallback until the
+ * next command brings one.
+ */
+export function nodeFlash(
+  stateFile: string,
+  node: string,
+  failed: (why: string) => void,
+): { read(): KeptNode; write(kept: KeptNode): void } {
+  const file = `${stateFile}.${encodeURIComponent(node)}`;
+  return {
+    read: () => {
+      try {
+        return keptNode.parse(JSON.parse(readFileSync(file, 'utf8')));
+      } catch {
+        return { fallback: null, logs: [] };
+      }
+    },
+    write: (kept) => {
+      try {
+        write(file, kept);
+      } catch (error) {
+        failed(error instanceof Error ? error.message : String(error));
+      }
+    },
+  };
+}
+
+/** Written beside and moved into place, so that a kill in the middle leaves the former one. */
+function write(file: string, content: object): void {
   mkdirSync(dirname(file), { recursive: true });
   const beside = `${file}.new`;
-  writeFileSync(beside, JSON.stringify(world));
+  writeFileSync(beside, JSON.stringify(content));
   renameSync(beside, file);
 }

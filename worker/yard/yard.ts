@@ -7,6 +7,7 @@ import { AppTime, iso, type Clock } from './clock';
 import type { YardConfig } from './config';
 import { FieldNode } from './node';
 import { sensorReadings } from './sensors';
+import { nodeFlash } from './store';
 import { createWorld, stepWorld, type World, type YardRelays } from './world';
 
 /** A world that stood still for longer is taken up from here: nobody waits for a summer to be stepped. */
@@ -70,6 +71,9 @@ export class Yard {
       },
       beforeCoilsChange: (monotonicMs) => this.bringUpTo(monotonicMs),
       log: (event, fields) => this.log(event, { ...this.at(), node: key, ...fields }),
+      flash: nodeFlash(this.config.stateFile, key, (why) =>
+        this.log('flash not written', { node: key, why }),
+      ),
     });
   }
 

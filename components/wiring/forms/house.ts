@@ -51,4 +51,19 @@ export const houseGroups: Group[] = [
       },
     ],
   },
+  {
+    title: 'Thermostat of last resort',
+    note: 'One that switches a heater without any software, set under the lowest band. Empty: there is none.',
+    nullUnless: { path: 'lastResort', unless: 'lastResort.below' },
+    specs: [
+      { as: 'number', path: 'lastResort.below', label: 'Set to', quantity: 'temperature', empty: 'null' },
+      {
+        as: 'text',
+        path: 'lastResort.provedOn',
+        label: 'Somebody saw it work on',
+        empty: 'null',
+        hint: 'Turn it up until the heater comes on, then back. As 2026-10-01.',
+      },
+    ],
+  },
 ];

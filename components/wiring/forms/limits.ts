@@ -69,6 +69,15 @@ const runProof = (yard: Yard): Group => ({
   ],
 });
 
+/** With several boxes each point says whose it is: a box goes by its own alone. */
+function ownPoints(yard: Yard) {
+  const measured = yard.points.filter((point) => point.unit === 'Cel' && point.derived === null);
+  const options = pointOptions(measured, ['bench', 'house-air']);
+  if (yard.nodes.length < 2) return options;
+  const nodeOf = new Map(measured.map((point) => [point.key, point.node]));
+  return options.map(({ value, label }) => ({ value, label: `${label}, box ${nodeOf.get(value) ?? ''}` }));
+}
+
 const fallback = (yard: Yard): Group => ({
   folded: SECTION,
   title: 'Fallback without the server',
@@ -79,13 +88,10 @@ const fallback = (yard: Yard): Group => ({
       as: 'choice',
       path: 'fallback.point',
       label: 'Goes by',
-      options: pointOptions(
-        yard.points.filter((point) => point.unit === 'Cel' && point.derived === null),
-        ['bench', 'house-air'],
-      ),
+      options: ownPoints(yard),
       empty: 'null',
       none: 'No fallback',
-      hint: 'A point of the same box.',
+      hint: 'A point that the same box measures.',
     },
     { as: 'number', path: 'fallback.below', label: 'On below', quantity: 'temperature' },
     { as: 'number', path: 'fallback.above', label: 'Off over', quantity: 'temperature' },

@@ -1,12 +1,13 @@
 /** Things to look at in a rule's band, beside frost, the house's other rules and the weather. */
+import { withinSeason } from '../calendar';
 import type { RuleBody } from '../rule-body';
-import { celsius, look, type CheckInput, type Finding } from './finding';
+import { look, type CheckInput, type Finding } from './finding';
 
 export function bandChecks(input: CheckInput): Finding[] {
   return [...frostAboveBand(input), ...opposites(input), ...liftTooSmall(input), ...tooManyStarts(input)];
 }
 
-function frostAboveBand({ config, rule, channel }: CheckInput): Finding[] {
+function frostAboveBand({ config, rule, channel, say }: CheckInput): Finding[] {
   const { frostLimit } = config.house;
   if (frostLimit === null || rule.body.purpose !== 'warm' || channel?.frostHelp !== true) return [];
   return rule.body.band.flatMap(({ low }, index) =>
@@ -15,7 +16,7 @@ function frostAboveBand({ config, rule, channel }: CheckInput): Finding[] {
           look(
             'frost-limit-above-band',
             [`band.${index}.low`],
-            `The frost limit (${celsius(frostLimit)}) is above “on below” (${celsius(low)}): frost would run this channel first, rests and hours counting for nothing. Raise “on below” over it.`,
+            `The frost limit (${say.temperature(frostLimit)}) is above “on below” (${say.temperature(low)}): frost would run this channel first, rests and hours counting for nothing. Raise “on below” over it.`,
           ),
         ]
       : [],
@@ -28,11 +29,22 @@ function overlaps(a: RuleBody, b: RuleBody): boolean {
   return warm.band.some(({ high }) => cool.band.some(({ low }) => high > low));
 }
 
+/** Both seasons hold a day that is the other's first: two stretches of a ring meet where one begins in the other. */
+function seasonsMeet(a: RuleBody, b: RuleBody): boolean {
+  if (a.season === undefined || b.season === undefined) return true;
+  return withinSeason(a.season.from, b.season) || withinSeason(b.season.from, a.season);
+}
+
 function opposites({ config, rule, channel }: CheckInput): Finding[] {
   const found: Finding[] = [];
   for (const other of config.rules) {
-    if (other.id === rule.id || other.body.purpose === rule.body.purpose || !overlaps(rule.body, other.body))
-      continue;
+    if (other.id === rule.id || other.body.purpose === rule.body.purpose) continue;
+    if (!overlaps(rule.body, other.body) || !seasonsMeet(rule.body, other.body)) continue;
+    const isParted = config.interlocks.some(
+      ({ kind, channel: one, other: two }) =>
+        kind === 'never-with' &&
+        ((one === rule.channel && two === other.channel) || (one === other.channel && two === rule.channel)),
+    );
     const indexes = rule.body.band.map((_, index) => `band.${index}`);
     if (other.channel === rule.channel)
       found.push(
@@ -42,7 +54,7 @@ function opposites({ config, rule, channel }: CheckInput): Finding[] {
           `“${other.name}” wants the opposite of this channel in a band that overlaps: it would run for both. Part the bands.`,
         ),
       );
-    else if (channel !== null && sharesPoint(config.points, rule.body.point, other.body.point))
+    else if (channel !== null && !isParted && sharesPoint(config.points, rule.body.point, other.body.point))
       found.push(
         look(
           'sources-fight',
@@ -61,18 +73,19 @@ function sharesPoint(points: { key: string; role: string }[], a: string, b: stri
   return a === b || (isHouse(a) && isHouse(b));
 }
 
-function liftTooSmall({ rule, context }: CheckInput): Finding[] {
+function liftTooSmall({ rule, channel, context, say }: CheckInput): Finding[] {
   const { liftK, coldestOutdoors } = context;
   if (liftK === undefined || rule.body.purpose !== 'warm') return [];
   return rule.body.band.flatMap(({ high }, index) => {
     const outdoors = high - liftK;
-    if (coldestOutdoors !== undefined && outdoors < coldestOutdoors) return [];
+    if (coldestOutdoors !== undefined && outdoors <= coldestOutdoors) return [];
     const butForRest = rule.body.rest === undefined ? '' : ' but for its rest';
+    const load = channel === null || channel.loadKind === 'motor' ? 'fan' : 'load';
     return [
       look(
         'lift-too-small',
         [`band.${index}.high`],
-        `This house gets ${celsius(liftK)} warmer than outdoors: under ${celsius(outdoors)} outdoors this fan will never stop by itself${butForRest}. Lower “off above”, or rely on the rest.`,
+        `While this ran it was at most ${say.difference(liftK)} warmer than outdoors: under ${say.temperature(outdoors)} outdoors this ${load} will never stop by itself${butForRest}. Lower “off above”, or rely on the rest.`,
       ),
     ];
   });

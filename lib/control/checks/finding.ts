@@ -1,3 +1,5 @@
+import { fahrenheit, fahrenheitDifference } from '@/lib/units/conversion';
+import { USUAL, type Preferences } from '@/lib/units/preferences';
 import type { RuleBody } from '../rule-body';
 import type { ChannelConfig, HouseConfig } from '../types';
 
@@ -6,7 +8,7 @@ export interface Finding {
   level: 'stop' | 'look';
   /** Which check found it. */
   kind: string;
-  /** What is wrong and what to do, in the words that people read; °C. */
+  /** What is wrong and what to do, in the words that people read and in their degrees. */
   text: string;
   /** Where in the body, dotted: `band.0.low`. */
   paths: string[];
@@ -18,14 +20,16 @@ export interface CheckContext {
   channels?: Record<string, ChannelFacts>;
   /** By point key: the greatest value of the last 14 nights. */
   greatest?: Record<string, number>;
-  /** A thermostat of last resort is wired and proved. */
-  lastResort?: boolean;
-  /** How much warmer than outdoors the house gets with the fan on for good, K. */
+  /** The thermostat of last resort: what it is set to, °C, and whether somebody saw it work. Null: there is none. */
+  lastResort?: { below: number; isProved: boolean } | null;
+  /** How much warmer than outdoors the rule's point gets at most while the channel runs, K. */
   liftK?: number;
   /** The coldest outdoors that is to be expected, °C. */
   coldestOutdoors?: number;
   /** How the house answers the fan: time constant, s, and rise from off for good to on for good, K. */
   response?: { tauS: number; riseK: number };
+  /** The reader's degrees, for the texts; °C where nobody says. */
+  preferences?: Preferences;
 }
 
 export interface ChannelFacts {
@@ -49,6 +53,24 @@ export interface CheckInput {
   rule: RuleToCheck;
   channel: ChannelConfig | null;
   context: CheckContext;
+  say: Say;
+}
+
+/** Figures of a finding, as its reader reads them. */
+export interface Say {
+  /** @example say.temperature(-1.667) is "−1.7 °C", or "29 °F" */
+  temperature: (celsius: number) => string;
+  difference: (kelvin: number) => string;
+}
+
+export function sayIn({ temperature }: Preferences = USUAL): Say {
+  const unit = temperature === 'F' ? '°F' : '°C';
+  // without a tail of digits: "4 °C", for what was typed so
+  const figure = (value: number) => `${Math.round(value * 10) / 10} ${unit}`.replace('-', '−');
+  return {
+    temperature: (celsius) => figure(temperature === 'F' ? fahrenheit(celsius) : celsius),
+    difference: (kelvin) => figure(temperature === 'F' ? fahrenheitDifference(kelvin) : kelvin),
+  };
 }
 
 export const look = (kind: string, paths: string[], text: string): Finding => ({
@@ -63,9 +85,6 @@ export const stop = (kind: string, paths: string[], text: string): Finding => ({
   text,
   paths,
 });
-
-/** `7.5 °C`, without a tail of digits. */
-export const celsius = (value: number): string => `${Math.round(value * 10) / 10} °C`.replace('-', '−');
 
 /** `40 min`, `90 s`, `2 h 30 min`. */
 export function lasting(seconds: number): string {

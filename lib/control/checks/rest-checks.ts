@@ -1,9 +1,10 @@
 /** Things to look at in a rule's rest. */
-import { celsius, lasting, look, stop, type CheckInput, type Finding } from './finding';
+import { lasting, look, stop, type CheckInput, type Finding } from './finding';
 
 const UNWISE_S = 300;
 
-export function restChecks({ config, rule, channel, context }: CheckInput): Finding[] {
+export function restChecks(input: CheckInput): Finding[] {
+  const { rule, channel, context, say } = input;
   const { rest } = rule.body;
   if (rest === undefined || channel === null) return [];
   const found: Finding[] = [];
@@ -30,7 +31,7 @@ export function restChecks({ config, rule, channel, context }: CheckInput): Find
       look(
         'recovery-out-of-reach',
         ['rest.until.level'],
-        `${celsius(until.level)} has not been reached in the last 14 nights (${celsius(greatest)} at most), so every rest would run to its longest time. Lower it.`,
+        `${say.temperature(until.level)} has not been reached in the last 14 nights (${say.temperature(greatest)} at most), so every rest would run to its longest time. Lower it.`,
       ),
     );
   if (longestDraw < UNWISE_S)
@@ -57,7 +58,7 @@ export function restChecks({ config, rule, channel, context }: CheckInput): Find
         `This channel names no source, so its rest is its own: another fan on the same heap would not share it. Name the source in Wiring.`,
       ),
     );
-  return [...found, ...neverWorth({ config, rule, channel, context })];
+  return [...found, ...neverWorth(input)];
 }
 
 /** A least on time that the credit is never worth while the source's other fans run. */

@@ -14,6 +14,7 @@ export function wiringChecks(input: CheckInput): Finding[] {
     ...conditionChecks(input),
     ...contactOverloaded(input),
     ...proofAndFallback(input),
+    ...lastResortOverBand(input),
   ];
 }
 
@@ -36,11 +37,10 @@ function missingNames({ config, rule, channel }: CheckInput): Finding[] {
     .map(([path, key]) =>
       stop('unknown-point', [path], `There is no point “${key}” in this house. Choose another.`),
     );
-  const facts = only === undefined ? [] : factsOf(only);
-  for (const fact of facts)
+  for (const { fact, path } of only === undefined ? [] : factsOf(only, 'only'))
     if (!fact.startsWith('time.') && !known.has(fact))
       found.push(
-        stop('unknown-point', ['only'], `There is no point “${fact}” in this house. Choose another.`),
+        stop('unknown-point', [`${path}.fact`], `There is no point “${fact}” in this house. Choose another.`),
       );
   if (channel === null)
     found.push(
@@ -53,11 +53,11 @@ function missingNames({ config, rule, channel }: CheckInput): Finding[] {
   return found;
 }
 
-function factsOf(node: ConditionNode): string[] {
-  if ('all' in node) return node.all.flatMap(factsOf);
-  if ('any' in node) return node.any.flatMap(factsOf);
-  if ('not' in node) return factsOf(node.not);
-  return [node.fact];
+function factsOf(node: ConditionNode, path: string): { fact: string; path: string }[] {
+  if ('all' in node) return node.all.flatMap((one, index) => factsOf(one, `${path}.all.${index}`));
+  if ('any' in node) return node.any.flatMap((one, index) => factsOf(one, `${path}.any.${index}`));
+  if ('not' in node) return factsOf(node.not, `${path}.not`);
+  return [{ fact: node.fact, path }];
 }
 
 function rings({ config }: CheckInput): Finding[] {
@@ -100,28 +100,32 @@ function conditionChecks({ config, rule }: CheckInput): Finding[] {
         'These conditions can never hold together, so the channel would never run. Loosen one of them.',
       ),
     );
-  const onGain = factsOf(only).find((fact) => isGain(config, fact));
+  const onGain = factsOf(only, 'only').find(({ fact }) => isGain(config, fact));
   if (onGain !== undefined)
     found.push(
       look(
         'condition-on-gain',
-        ['only'],
-        `“${onGain}” tells what the loop brings while the fan runs; in still air it brings nothing, so the fan could never start. Use “stop if it brings less than” instead.`,
+        [`${onGain.path}.fact`],
+        `“${nameOf(config, onGain.fact)}” tells what the loop brings while the fan runs; in still air it brings nothing, so the fan could never start. Use “stop if it brings less than” instead.`,
       ),
     );
   return found;
 }
 
-/** A loop's return, or what is derived from both its ends. */
-function isGain(config: CheckInput['config'], key: string): boolean {
+/** A loop's return, what is derived from both its ends, or from such a point again. */
+function isGain(config: CheckInput['config'], key: string, above: readonly string[] = []): boolean {
   const point = config.points.find((one) => one.key === key);
-  if (point === undefined) return false;
+  if (point === undefined || above.includes(key)) return false;
   if (point.role === 'loop-return' || point.derived?.of === 'loop-heat') return true;
   const of = point.derived?.points ?? [];
-  return config.loops.some(
+  const isOfLoop = config.loops.some(
     (one) => one.return !== null && one.intake !== null && of.includes(one.return) && of.includes(one.intake),
   );
+  return isOfLoop || of.some((other) => isGain(config, other, [...above, key]));
 }
+
+const nameOf = (config: CheckInput['config'], key: string): string =>
+  config.points.find((one) => one.key === key)?.name ?? key;
 
 function contactOverloaded({ channel, context }: CheckInput): Finding[] {
   const facts = channel === null ? undefined : context.channels?.[channel.key];
@@ -148,15 +152,34 @@ function proofAndFallback({ config, rule, channel, context }: CheckInput): Findi
       ),
     );
   if (context.channels === undefined || config.house.frostLimit === null || channel === null) return found;
-  const guarded =
-    context.lastResort === true || Object.values(context.channels).some((one) => one.hasFallback === true);
-  if (!guarded)
+  const { lastResort } = context;
+  const hasFallback = Object.values(context.channels).some((one) => one.hasFallback === true);
+  if (!hasFallback && lastResort?.isProved !== true)
     found.push(
       look(
         'no-last-resort',
         [],
-        'This house has a frost limit, but nothing keeps it when the network or this program fails: set a fallback on a channel, or wire a thermostat of last resort under the lowest band and prove it.',
+        lastResort === null || lastResort === undefined
+          ? 'This house has a frost limit, but nothing keeps it when the network or this program fails: set a fallback on a channel, or wire a thermostat of last resort under the lowest band and prove it.'
+          : 'Nobody has seen the thermostat of last resort work: try it, and write the day down in Wiring.',
       ),
     );
   return found;
+}
+
+/** It would run before the rule does, and hide that the rule does not. */
+function lastResortOverBand({ rule, context, say }: CheckInput): Finding[] {
+  const { lastResort } = context;
+  if (lastResort === null || lastResort === undefined || rule.body.purpose !== 'warm') return [];
+  return rule.body.band.flatMap(({ low }, index) =>
+    lastResort.below < low
+      ? []
+      : [
+          look(
+            'last-resort-over-band',
+            [`band.${index}.low`],
+            `The thermostat of last resort is set to ${say.temperature(lastResort.below)}, not under “on below” (${say.temperature(low)}): it would run first. Set it lower, or raise “on below”.`,
+          ),
+        ],
+  );
 }

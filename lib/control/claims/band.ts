@@ -5,6 +5,7 @@
  */
 import type { BandReason, RuleStanding } from '../because';
 import type { FactValue } from '../conditions';
+import { awaitReading, exactly, isOver, isUnder, noteLines } from '../lines';
 import { entry, wakeAt, type Run, type RuleCode } from '../run';
 import type { ClaimRung } from './claim';
 
@@ -48,7 +49,9 @@ function pointInUse(run: Run, index: number, using: number): number {
   const now = Math.min(using, points.length - 1);
   for (let place = 0; place < now; place += 1) {
     const { point } = entry(points, place);
-    if (point !== null && run.usable[point] === 'good' && entry(run.points, point).goodRun >= 3) return place;
+    if (point === null) continue;
+    if (run.usable[point] === 'good' && entry(run.points, point).goodRun >= 3) return place;
+    awaitReading(run, point);
   }
   const { point } = entry(points, now);
   if (point !== null && run.usable[point] !== 'bad') return now;
@@ -64,10 +67,14 @@ function settleLatch(run: Run, index: number, using: number, latch: boolean): bo
   const quality = run.usable[point];
   if (quality === 'bad') return false;
   if (quality === 'uncertain') return latch;
-  const value = (entry(run.points, point).value ?? NaN) + offset;
-  if (value < low) return warm;
-  if (value > high) return !warm;
-  return latch;
+  // a latch turns on at one end of the band and off at the other: only that end is looked at
+  if (offset === 0) {
+    const turns = warm === latch ? isOver(run, point, high) : isUnder(run, point, low);
+    return turns ? !latch : latch;
+  }
+  // to the last digit it is the sum that counts, so no line can be drawn for the reading itself
+  const value = (exactly(run, point) ?? NaN) + offset;
+  return value < low ? warm : value > high ? !warm : latch;
 }
 
 function codeOf(run: Run, index: number, using: number, latch: boolean): RuleCode {
@@ -79,7 +86,11 @@ function codeOf(run: Run, index: number, using: number, latch: boolean): RuleCod
   if (point === null || run.usable[point] === 'bad') return 'point-bad';
   if (!latch) return 'satisfied';
   if (only === null) return 'wants';
-  const verdict = only.verdict((fact) => readFact(run, fact));
+  const verdict = only.verdict((fact, limits) => {
+    const place = run.plan.pointPlaces.get(fact);
+    if (place !== undefined) noteLines(run, place, limits);
+    return readFact(run, fact);
+  });
   return verdict === true ? 'wants' : verdict === false ? 'condition-not-met' : 'condition-unknown';
 }
 

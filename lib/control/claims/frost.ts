@@ -4,11 +4,12 @@
  * limit where the rules allow it, never the core floor, which is asked before it.
  */
 import type { FrostReason } from '../because';
+import { isOver, isUnder } from '../lines';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
-import { restForbids } from './rest';
+import { rest, restForbids } from './rest';
 
-const ENDS_K = 1;
+export const ENDS_K = 1;
 const BLIND_MS = 1_800_000;
 /** Wet things freezing stand still at 0 °C, so a frozen point is believed in the cold … */
 const STILL_TRUE_C = 2;
@@ -23,7 +24,7 @@ export const frost: ClaimRung<'frost'> = {
     if (inFrost === null) return null;
     if (inFrost === 'cools') return 'off';
     if (config.loadKind === 'heater' && run.frost.blindSince !== null) return null;
-    if (!frostMayBreakRest && restForbids(run, channel) !== null) return null;
+    if (!frostMayBreakRest && rest.speaks(run, channel) !== null) return null;
     return 'on';
   },
   because: (run, channel): FrostReason => {
@@ -51,15 +52,33 @@ export function coldestPoint(run: Run): number | null {
   let coldest: number | null = null;
   let lowest = Infinity;
   for (const index of run.plan.housePoints) {
-    const { value, why, contradictedSince } = entry(run.points, index);
-    if (value === null || value >= lowest) continue;
-    const frozenCold = why === 'frozen' && value <= STILL_TRUE_C;
-    const contradicted = contradictedSince !== null && run.at >= contradictedSince + CONTRADICTED_MS;
-    if (frozenCold ? contradicted : run.usable[index] === 'bad') continue;
+    const { value } = entry(run.points, index);
+    if (value === null || value >= lowest || !isBelieved(run, index)) continue;
     lowest = value;
     coldest = index;
   }
   return coldest;
+}
+
+/** Not bad, or bad only for standing still in the cold, or for having come and gone: it speaks again just now. */
+function isBelieved(run: Run, index: number): boolean {
+  const { value, why, contradictedSince } = entry(run.points, index);
+  if (value === null) return false;
+  if (!isFrozenCold(run, index)) return run.usable[index] !== 'bad' || why === 'unsteady';
+  return contradictedSince === null || run.at < contradictedSince + CONTRADICTED_MS;
+}
+
+const isFrozenCold = (run: Run, index: number): boolean => {
+  const { value, why } = entry(run.points, index);
+  return why === 'frozen' && value !== null && !isOver(run, index, STILL_TRUE_C);
+};
+
+/** Whether the coldest point is under a limit, without saying which one it is: another that is colder changes nothing. */
+function anyUnder(run: Run, limit: number): boolean {
+  let any = false;
+  for (const index of run.plan.housePoints)
+    if (isBelieved(run, index) && isUnder(run, index, limit)) any = true;
+  return any;
 }
 
 /** Settles the house's frost and the frost alarm. */
@@ -72,13 +91,11 @@ export function settleFrost(run: Run): void {
     return;
   }
   if (frostLimit !== null) settleContradiction(run, frostLimit);
-  const coldest = coldestPoint(run);
   let { on, alarm, blindSince } = before;
-  if (coldest !== null) {
-    const value = entry(run.points, coldest).value ?? Infinity;
+  if (run.plan.housePoints.some((index) => isBelieved(run, index))) {
     blindSince = null;
-    on = frostLimit !== null && (value < frostLimit || (on && value < frostLimit + ENDS_K));
-    alarm = value < warnsAt || (alarm && value < warnsAt + ENDS_K);
+    on = frostLimit !== null && anyUnder(run, on ? frostLimit + ENDS_K : frostLimit);
+    alarm = anyUnder(run, alarm ? warnsAt + ENDS_K : warnsAt);
   } else if (on) {
     blindSince ??= run.at;
     if (run.at >= blindSince + BLIND_MS) {
@@ -94,14 +111,12 @@ export function settleFrost(run: Run): void {
 function settleContradiction(run: Run, limit: number): void {
   for (const index of run.plan.housePoints) {
     const memory = entry(run.points, index);
-    const frozenCold = memory.why === 'frozen' && (memory.value ?? Infinity) <= STILL_TRUE_C;
     let { contradictedSince } = memory;
-    if (!frozenCold) contradictedSince = null;
+    if (!isFrozenCold(run, index)) contradictedSince = null;
     else {
-      const other = run.plan.housePoints.some((one) => {
-        const { value } = entry(run.points, one);
-        return one !== index && run.usable[one] === 'good' && value !== null && value >= limit + ENDS_K;
-      });
+      const other = run.plan.housePoints.some(
+        (one) => one !== index && run.usable[one] === 'good' && !isUnder(run, one, limit + ENDS_K),
+      );
       contradictedSince = other ? (contradictedSince ?? run.at) : null;
       if (contradictedSince !== null) wakeAt(run, contradictedSince + CONTRADICTED_MS);
     }

@@ -1,7 +1,8 @@
 /**
  * Hand: a person's command that has not ended. It ends by its time; on a channel marked to help, a hand off ends when
  * frost begins unless it was told to hold; a hand on of a cooling channel ends when frost begins; a hand on whose
- * point is dead ends 30 min after the death or the command (a heater's at once).
+ * point is dead ends 30 min after the death or the command (a heater's at once). A lock-out ends a hand on: a load
+ * must not start by an old command when the lock is taken off.
  */
 import type { HandReason } from '../because';
 import type { HandMemory } from '../memory';
@@ -24,27 +25,27 @@ export const hand: ClaimRung<'hand'> = {
 
 /** When a hand ends as things stand. */
 export function handUntil(run: Run, channel: number, given: HandMemory): number {
-  const { config, inFrost } = entry(run.plan.channels, channel);
+  const { config } = entry(run.plan.channels, channel);
   const { pointDeadSince } = entry(run.channels, channel);
   let { until } = given;
   if (given.state === 'on' && pointDeadSince !== null) {
     const deadOrGiven = Math.max(pointDeadSince, given.givenAt);
     until = Math.min(until, config.loadKind === 'heater' ? deadOrGiven : deadOrGiven + HALF_HOUR_MS);
   }
-  if (given.state === 'on' && inFrost === 'cools' && run.frost.on)
-    until = Math.min(until, given.givenAt + HALF_HOUR_MS);
   return until;
 }
 
 /** Notes since when none of a channel's rules has a usable point, and ends a hand that is over. */
 export function settleHand(run: Run, channel: number): void {
-  const dead = isPointDead(run, channel);
   let memory = entry(run.channels, channel);
+  // while the worker was away nobody can say that a point was dead
+  const dead = run.undriven ? memory.pointDeadSince !== null : isPointDead(run, channel);
   if (dead !== (memory.pointDeadSince !== null)) {
     memory = { ...memory, pointDeadSince: dead ? run.at : null };
     run.channels[channel] = memory;
   }
   if (memory.hand === null) return;
+  if (memory.hand.state === 'on' && memory.lockouts.length > 0) return endHand(run, channel, 'lock-out');
   const until = handUntil(run, channel, memory.hand);
   if (run.at >= until) return endHand(run, channel, until < memory.hand.until ? 'point-dead' : 'time');
   const frostBegan = run.frost.on && memory.hand.givenAt < (run.frost.since ?? Infinity);
@@ -59,7 +60,7 @@ export function settleHand(run: Run, channel: number): void {
 export function endHand(
   run: Run,
   channel: number,
-  cause: 'time' | 'point-dead' | 'frost' | 'limit' | 'auto',
+  cause: 'time' | 'point-dead' | 'frost' | 'limit' | 'lock-out' | 'auto',
 ): void {
   const memory = entry(run.channels, channel);
   if (memory.hand === null) return;

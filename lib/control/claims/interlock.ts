@@ -8,6 +8,7 @@ import type { InterlockVerdict, PlanInterlock } from '../interlocks';
 import { entry, wakeAt, type Run } from '../run';
 import { CLAIMS } from '../types';
 import type { ClaimRung } from './claim';
+import { shortCycle } from './short-cycle';
 
 export const interlock: ClaimRung<'interlock'> = {
   claim: 'interlock',
@@ -33,15 +34,19 @@ export function settleInterlocks(run: Run): void {
   neverWith(run);
   for (let place = run.plan.needsOrder.length - 1; place >= 0; place -= 1) {
     const channel = entry(run.plan.needsOrder, place);
-    run.interlocked[channel] ??= holds(run, channel);
+    const verdict = entry(run.interlocked, channel);
+    if (verdict === null) run.interlocked[channel] = holds(run, channel);
+    else if (verdict.kind === 'needs') run.interlocked[channel] = lastInChain(run, channel) ?? verdict;
   }
 }
 
-/** Off while a needed channel is not yet on for the delay, or is itself to go off. */
+/** Off while a needed channel is not yet on for the delay, or is itself to go off now: not while its least on holds it. */
 function needs(run: Run, channel: number): InterlockVerdict | null {
   for (const lock of entry(run.plan.channels, channel).needs) {
     const other = entry(run.channels, lock.other);
-    const leaves = run.demandState[lock.other] === 'off' || run.interlocked[lock.other]?.wants === 'off';
+    const leaves =
+      (run.demandState[lock.other] === 'off' && !isHeldOn(run, lock.other)) ||
+      run.interlocked[lock.other]?.wants === 'off';
     if (leaves || other.known !== 'on') return verdict(run, lock, channel, null);
     const readyAt = other.knownSince === null ? run.at : other.knownSince + lock.delayMs;
     if (run.at >= readyAt) continue;
@@ -78,7 +83,11 @@ function neverWith(run: Run): void {
   }
   for (const channel of order) {
     if (keeps.has(channel) || run.interlocked[channel] !== null) continue;
+    // one that only its least on keeps running gives way to one that wants to, and does so till that one runs
+    const { claim, wanted: own } = entry(run.channels, channel);
+    const givesWay = isHeldOn(run, channel) || (own === 'off' && claim === 'interlock');
     const on = partners(run, channel).find(({ other }) => {
+      if (givesWay && keeps.has(other)) return true;
       const { wanted, known } = entry(run.channels, other);
       return known === 'on' || (wanted === 'on' && run.demandState[other] === 'on');
     });
@@ -105,8 +114,27 @@ function waits(run: Run, channel: number): InterlockVerdict | null {
 
 /** On: a channel that is to go off waits for those that need it; lock-out, limit and never-with do not wait. */
 function holds(run: Run, channel: number): InterlockVerdict | null {
-  if (run.demandState[channel] !== 'off' || entry(run.channels, channel).wanted !== 'on') return null;
-  if (run.demandClaim[channel] === 'lock-out' || run.demandClaim[channel] === 'limit') return null;
+  if (run.demandState[channel] !== 'off' || isCutShort(run, channel)) return null;
+  return waitsForDependants(run, channel);
+}
+
+/** In a chain too: one that goes because what it needs is to go waits for its own dependants, if that one still waits. */
+function lastInChain(run: Run, channel: number): InterlockVerdict | null {
+  const stillOn = ({ other }: { other: number }) => entry(run.channels, other).known === 'on';
+  if (partners(run, channel).some(stillOn)) return null;
+  const { needs: needed } = entry(run.plan.channels, channel);
+  if (!needed.every((lock) => stillOn(lock) && !isCutShort(run, lock.other))) return null;
+  return waitsForDependants(run, channel);
+}
+
+/** Goes off at once, whoever needs it. */
+const isCutShort = (run: Run, channel: number): boolean =>
+  run.demandClaim[channel] === 'lock-out' ||
+  run.demandClaim[channel] === 'limit' ||
+  run.interlocked[channel]?.kind === 'never-with';
+
+function waitsForDependants(run: Run, channel: number): InterlockVerdict | null {
+  if (entry(run.channels, channel).wanted !== 'on') return null;
   for (const lock of entry(run.plan.channels, channel).neededBy) {
     if (entry(run.channels, lock.channel).known === 'off') continue;
     const { delayMs } = lock;
@@ -114,6 +142,10 @@ function holds(run: Run, channel: number): InterlockVerdict | null {
   }
   return null;
 }
+
+/** Nothing but the least on time keeps it running. */
+const isHeldOn = (run: Run, channel: number): boolean =>
+  run.demandClaim[channel] === run.lowerClaim[channel] && shortCycle.speaks(run, channel) === 'on';
 
 const partners = (run: Run, channel: number): { lock: PlanInterlock; other: number }[] =>
   entry(run.plan.channels, channel).neverWith;

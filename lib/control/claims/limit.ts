@@ -4,10 +4,11 @@
  * wanted it off once; frost that may break rest does not wait for that.
  */
 import type { LimitReason } from '../because';
+import { isOver } from '../lines';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 
-const AGAIN_K = 1;
+export const AGAIN_K = 1;
 
 export const limit: ClaimRung<'limit'> = {
   claim: 'limit',
@@ -42,14 +43,19 @@ function limitPointBad(run: Run, channel: number): boolean {
 export function settleLimit(run: Run, channel: number): void {
   const { config, highLimitPoint } = entry(run.plan.channels, channel);
   if (config.highLimit !== null && highLimitPoint !== null && run.usable[highLimitPoint] !== 'bad') {
-    const value = entry(run.points, highLimitPoint).value ?? -Infinity;
+    const { above } = config.highLimit;
     const memory = entry(run.channels, channel);
-    const over =
-      value > config.highLimit.above || (memory.overHighLimit && value > config.highLimit.above - AGAIN_K);
+    const over = isOver(run, highLimitPoint, memory.overHighLimit ? above - AGAIN_K : above);
     if (over !== memory.overHighLimit) run.channels[channel] = { ...memory, overHighLimit: over };
-  }
+  } else if (config.highLimit === null) forgetHighLimit(run, channel);
   if (config.longestOnS !== null || entry(run.channels, channel).ranLongest !== null)
     settleLongest(run, channel);
+}
+
+/** Taken away while it was passed, nothing would end it. */
+function forgetHighLimit(run: Run, channel: number): void {
+  const memory = entry(run.channels, channel);
+  if (memory.overHighLimit) run.channels[channel] = { ...memory, overHighLimit: false };
 }
 
 function settleLongest(run: Run, channel: number): void {

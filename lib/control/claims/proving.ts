@@ -1,6 +1,6 @@
 /**
  * Proving: an installer's timed pulse or gain run. On. It begins no least on time; its end begins least off, or
- * least on where the claims under it want the load on.
+ * least on where the claims under it want the load on. A lock-out ends it for good.
  */
 import type { ProvingReason } from '../because';
 import { entry, wakeAt, type Run } from '../run';
@@ -20,7 +20,8 @@ export const proving: ClaimRung<'proving'> = {
 export function settleProving(run: Run, channel: number): void {
   const memory = entry(run.channels, channel);
   if (memory.prove === null) return;
-  if (run.at < memory.prove.until) wakeAt(run, memory.prove.until);
+  if (memory.lockouts.length > 0) run.channels[channel] = { ...memory, prove: null };
+  else if (run.at < memory.prove.until) wakeAt(run, memory.prove.until);
   else {
     const goesOn = run.lowerState[channel] === 'on' && memory.counted === 'on';
     run.channels[channel] = { ...memory, prove: null, leastSince: goesOn ? run.at : memory.leastSince };

@@ -53,9 +53,21 @@ function isWorthAStart(run: Run, channel: number): boolean {
     return false;
   }
   const { dailyLimitMs } = entry(run.plan.sources, source);
-  if (dailyLimitMs === null || dayMs >= minOnMs) return true;
-  wakeForDay(run, source, dailyLimitMs - minOnMs * ((run.drawCount[source] ?? 0) + 1));
-  return false;
+  const targetMs = (dailyLimitMs ?? Infinity) - minOnMs * ((run.drawCount[source] ?? 0) + 1);
+  if (dayMs < minOnMs) {
+    wakeForDay(run, source, targetMs);
+    return false;
+  }
+  // a start that is held up meanwhile is worth it only until the others' draws have used up what it takes
+  const { credit, creditAt: since, slope, day } = memory;
+  wakeWhenGone(run, since, credit - minOnMs * ((run.drawRate[source] ?? 0) + cost), -slope);
+  if (dailyLimitMs !== null) wakeWhenGone(run, day.at, targetMs - day.usedMs, day.slope);
+  return true;
+}
+
+/** Wakes in the first ms in which what was to spare at `since` is more than gone, at `rate` a ms. */
+function wakeWhenGone(run: Run, since: number, spare: number, rate: number): void {
+  if (rate > 0) wakeAt(run, Math.max(run.at, since + Math.floor(spare / rate + 1e-6)) + 1);
 }
 
 /** For how long credit and day would carry a start, ms. */
@@ -73,7 +85,7 @@ function worth(run: Run, channel: number, source: number, cost: number): { credi
 }
 
 /** Wakes when the rolling day has let its use fall to `targetMs`, or when its slope changes before. */
-function wakeForDay(run: Run, source: number, targetMs: number): void {
+export function wakeForDay(run: Run, source: number, targetMs: number): void {
   const memory = entry(run.sources, source);
   const { slope, nextAt } = memory.day;
   if (nextAt !== null) wakeAt(run, nextAt);

@@ -1,9 +1,10 @@
 /** Source guard: the core is under its floor (1 K to begin again), or the heap is not ready yet. Off. */
 import type { SourceGuardReason } from '../because';
+import { isOver, isUnder } from '../lines';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 
-const AGAIN_K = 1;
+export const AGAIN_K = 1;
 
 export const sourceGuard: ClaimRung<'source-guard'> = {
   claim: 'source-guard',
@@ -47,12 +48,11 @@ export function settleGuard(run: Run, source: number): void {
   if (core === null) return;
   const before = entry(run.sources, source);
   let { underFloor, aboveSince, ready } = before;
-  const value = entry(run.points, core).value ?? NaN;
   if (config.coreFloor !== null && run.usable[core] === 'good')
-    underFloor = value < config.coreFloor || (underFloor && value < config.coreFloor + AGAIN_K);
+    underFloor = isUnder(run, core, underFloor ? config.coreFloor + AGAIN_K : config.coreFloor);
   if (config.ready !== null && !ready) {
     // a reading in doubt keeps the last plausible value; a core that nobody knows breaks the stretch
-    const above = run.usable[core] !== 'bad' && value > config.ready.level;
+    const above = run.usable[core] !== 'bad' && isOver(run, core, config.ready.level);
     aboveSince = above ? (aboveSince ?? run.at) : null;
     if (aboveSince !== null) {
       const readyAt = aboveSince + config.ready.forS * 1000;

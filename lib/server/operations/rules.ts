@@ -3,9 +3,11 @@ import {
   RuleAmend,
   RuleBody,
   RuleCheck,
+  RuleCopy,
   RuleCreate,
   RuleForce,
   RuleGoBack,
+  RuleRestore,
   RuleRetire,
 } from '@/lib/schema/rule';
 import { Findings, Rule, RuleListQuery, RuleVersion, RuleWithVersions } from '@/lib/schema/rule-view';
@@ -99,4 +101,22 @@ export const goBack = operation({
   summary: 'Make an older version the draft',
   body: RuleGoBack,
   answers: { 200: RuleVersion },
+});
+export const restoreRule = operation({
+  id: 'rule.restore',
+  method: 'POST',
+  path: '/rules/{rule}/restore',
+  action: 'rule.write',
+  summary: 'Bring a retired rule back, as a draft',
+  body: RuleRestore,
+  answers: { 200: RuleWithVersions },
+});
+export const copyRule = operation({
+  id: 'rule.copy',
+  method: 'POST',
+  path: '/rules/{rule}/copy',
+  action: 'rule.write',
+  summary: 'Copy a rule to another channel or house, as a draft',
+  body: RuleCopy,
+  answers: { 201: Rule },
 });

@@ -1,6 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { clockTyped } from '@/components/rules/clock-typed';
-import { fieldOfPath, fitsForm, formOf, type RuleForm } from '@/components/rules/form-values';
+import type { FactOf } from '@/components/rules/conditions/condition-text';
+import { draftOf } from '@/components/rules/conditions/draft-tree';
+import { dayTimeForm, dayTimeOf } from '@/components/rules/day-time';
+import { fieldOfPath } from '@/components/rules/field-paths';
+import { formOf, type RuleForm } from '@/components/rules/form-values';
 import { judge } from '@/components/rules/judge';
 import { RuleBody } from '@/lib/schema/rule';
 import { USUAL, type Preferences } from '@/lib/units/preferences';
@@ -25,47 +29,62 @@ const body = RuleBody.parse({
   only: {
     all: [
       { fact: 'gate-core', operator: 'greaterThanInclusive', value: 38 },
-      { fact: 'time.hour', operator: 'lessThan', value: 9 },
-      { fact: 'time.sunUp', operator: 'equal', value: false },
+      {
+        any: [
+          { fact: 'time.hour', operator: 'lessThan', value: 9 },
+          { not: { fact: 'time.sunUp', operator: 'equal', value: true } },
+          { not: { all: [{ fact: 'time.month', operator: 'in', value: [6, 7, 8] }] } },
+        ],
+      },
+      { fact: 'lift', operator: 'notIn', value: [2.5, 3] },
     ],
   },
   season: { from: '10-01', to: '04-30' },
-  hours: { from: '18:00', to: '08:00' },
+  hours: { from: 'sunset-01:30', to: 'sunrise' },
 });
-const unitOf = (fact: string) => (fact === 'gate-core' ? 'Cel' : undefined);
+const POINTS: Record<string, { unit: string; role: string }> = {
+  'gate-core': { unit: 'Cel', role: 'heap-core' },
+  lift: { unit: 'K', role: 'other' },
+};
+const factOf: FactOf = (fact) => POINTS[fact];
+const clockAt = (clock: string) => ({ how: 'clock' as const, clock, away: '60' });
+const none = draftOf(undefined, () => '');
 const form = (change: Partial<RuleForm> = {}, preferences = USUAL): RuleForm => ({
-  ...formOf(body, unitOf, preferences),
+  ...formOf(body, factOf, preferences),
   ...change,
 });
-const errorsOf = (change: Partial<RuleForm>) => judge(form(change), null, unitOf, USUAL).errors;
+const errorsOf = (change: Partial<RuleForm>) => judge(form(change), factOf, USUAL).errors;
 
 describe('a rule’s form', () => {
   it.each([USUAL, american])('gives back the body it was made of, in %j', (preferences) => {
-    expect(judge(form({}, preferences), null, unitOf, preferences)).toEqual({ body, errors: {} });
+    expect(judge(form({}, preferences), factOf, preferences)).toEqual({ body, errors: {} });
   });
 
   it('shows temperatures and differences in the reader’s degrees', () => {
     const shown = form({}, american);
-    expect([
-      shown.band[0]?.low,
-      shown.waitLevel,
-      shown.gain,
-      shown.standIns[0]?.offset,
-      shown.only[0]?.value,
-    ]).toEqual(['42.8', '109.4', '5.4', '-0.9', '100.4']);
+    expect([shown.band[0]?.low, shown.waitLevel, shown.gain, shown.standIns[0]?.offset]).toEqual([
+      '42.8',
+      '109.4',
+      '5.4',
+      '-0.9',
+    ]);
+    expect(shown.only.nodes[0]).toMatchObject({ value: '100.4' });
+    expect(shown.only.nodes[2]).toMatchObject({ value: '4.5; 5.4' });
   });
 
   it('says at its field what cannot be read, and gives no body', () => {
-    const change = { band: [{ from: '', low: 'four', high: '7' }] };
-    expect(judge(form(change), null, unitOf, USUAL)).toMatchObject({
+    const change = { band: [{ from: clockAt(''), low: 'four', high: '7' }] };
+    expect(judge(form(change), factOf, USUAL)).toMatchObject({
       body: null,
       errors: { 'band.0.low': 'Give a number in °C, such as 4.5.' },
     });
   });
 
   it('refuses a band that is turned over or narrower than half a degree', () => {
-    expect(errorsOf({ band: [{ from: '', low: '7', high: '4' }] })).toHaveProperty(['band.0.high']);
-    expect(errorsOf({ band: [{ from: '', low: '7', high: '7.4' }] })).toHaveProperty(['band.0.high']);
+    expect(errorsOf({ band: [{ from: clockAt(''), low: '7', high: '4' }] })).toHaveProperty(['band.0.high']);
+    expect(errorsOf({ band: [{ from: clockAt(''), low: '7', high: '7.4' }] })).toHaveProperty([
+      'band.0.high',
+    ]);
   });
 
   it('asks for the longest rest where one waits for a temperature', () => {
@@ -74,8 +93,8 @@ describe('a rule’s form', () => {
   });
 
   it('leaves out what is switched off, whatever stands in its fields', () => {
-    const off = form({ isRationed: false, longestDraw: 'x', isSeasonal: false, isDaily: false, only: [] });
-    expect(judge(off, null, unitOf, USUAL).body).toEqual({
+    const off = form({ isRationed: false, longestDraw: 'x', isSeasonal: false, isDaily: false, only: none });
+    expect(judge(off, factOf, USUAL).body).toEqual({
       purpose: 'warm',
       point: 'bench-1',
       standIns: body.standIns,
@@ -83,10 +102,20 @@ describe('a rule’s form', () => {
     });
   });
 
-  it('keeps conditions that it cannot show', () => {
-    const only = { any: [{ fact: 'gate-core', operator: 'lessThan', value: 50 } as const] };
-    expect(fitsForm(only)).toBe(false);
-    expect(judge(form({ only: [] }), only, unitOf, USUAL).body?.only).toEqual(only);
+  it('names a condition that cannot be read at its own place in the tree, and nothing else', () => {
+    const only = draftOf(body.only, (fact) => (fact === 'time.hour' ? '25' : fact === 'lift' ? 'x' : '1'));
+    expect(errorsOf({ only })).toEqual({
+      'only.all.1.any.0.value': 'Give whole hours, 0 to 23.',
+      'only.all.2.value': 'Give a number in °C, such as 4.5.',
+    });
+    const [first, ...others] = only.nodes;
+    const unchosen = { ...only, nodes: first === undefined ? [] : [{ ...first, fact: '' }, ...others] };
+    expect(errorsOf({ only: unchosen })).toMatchObject({ 'only.all.0.fact': 'Choose what it goes by.' });
+  });
+
+  it('asks for the day or month that a condition on the calendar lacks', () => {
+    const only = draftOf({ not: { fact: 'time.month', operator: 'in', value: [1] } }, () => '');
+    expect(errorsOf({ only })).toEqual({ 'only.all.0.not.value': 'Choose a month.' });
   });
 
   it('refuses days and times that are none', () => {
@@ -94,11 +123,13 @@ describe('a rule’s form', () => {
       seasonFromDay: 'That month has no such day.',
     });
     expect(errorsOf({ seasonToDay: '' })).toHaveProperty('seasonToDay');
-    expect(errorsOf({ hoursFrom: 'dusk' })).toHaveProperty('hoursFrom');
+    expect(errorsOf({ hoursFrom: clockAt('dusk') })).toHaveProperty('hoursFrom');
   });
 
   it('takes hostile text as text', () => {
-    const errors = errorsOf({ band: [{ from: '', low: '<script>4</script>', high: '9'.repeat(400) }] });
+    const errors = errorsOf({
+      band: [{ from: clockAt(''), low: '<script>4</script>', high: '9'.repeat(400) }],
+    });
     expect(Object.keys(errors).sort()).toEqual(['band.0.high', 'band.0.low']);
   });
 
@@ -106,7 +137,8 @@ describe('a rule’s form', () => {
     ['rest.until.level', 'waitLevel'],
     ['rest.longestDraw', 'longestDraw'],
     ['rest.leastGain.kelvin', 'gain'],
-    ['only.all.1.value', 'only.1.value'],
+    ['only.all.1.value', 'only.all.1.value'],
+    ['hours.to', 'hoursTo'],
     ['season.from', 'seasonFromDay'],
     ['band.0.high', 'band.0.high'],
   ])('finds the field of %s', (path, field) => expect(fieldOfPath(path)).toBe(field));
@@ -127,4 +159,20 @@ describe('a time of day', () => {
     ['soon', null],
     ['', null],
   ])('%j is %s', (text, time) => expect(clockTyped(text)).toBe(time));
+});
+
+describe('a time that the sun sets', () => {
+  it.each(['sunset-01:00', 'sunrise+00:30', 'sunset', 'sunrise', 'sunrise-12:59', '06:00', '22:15'])(
+    '%s comes back as it was',
+    (text) => expect(dayTimeOf(dayTimeForm(text))).toEqual({ text }),
+  );
+  const away = (typed: string) => dayTimeOf({ how: 'before-sunset', clock: '', away: typed });
+  it.each([
+    ['1 h 30', { text: 'sunset-01:30' }],
+    ['45', { text: 'sunset-00:45' }],
+    ['0', { text: 'sunset' }],
+    ['90 s', { error: 'Give whole minutes.' }],
+    ['13 h', { error: 'At most 12 h 59 min from the sun.' }],
+    ['a while', { error: 'Give minutes, such as 60, or 1 h 30.' }],
+  ])('%j before sunset is %j', (typed, said) => expect(away(typed)).toEqual(said));
 });

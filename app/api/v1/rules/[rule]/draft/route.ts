@@ -7,7 +7,7 @@ export const PUT = serve(writeDraft, async ({ holding, things, body, caller, now
   return { body: written.draft };
 });
 
-export const DELETE = serve(dropDraft, async ({ holding, things, now }) => {
-  await versions.dropDraft(holding, things.rule, now);
+export const DELETE = serve(dropDraft, async ({ holding, things, caller, now }) => {
+  await versions.dropDraft(holding, things.rule, { by: caller.by, now });
   return {};
 });

@@ -1,0 +1,1 @@
+ALTER TABLE "house" ADD COLUMN "last_resort" jsonb;

@@ -1,0 +1,171 @@
+/**
+ * Every value of a reading that the claims compare something with, as far as it bears on one channel. Which of them
+ * would really change anything now is for look-ahead.ts to try.
+ */
+import type { RuleCalendar } from './calendar';
+import { waitingRules } from './credit';
+import { coldestPoint, ENDS_K } from './claims/frost';
+import { AGAIN_K as LIMIT_AGAIN_K } from './claims/limit';
+import { AGAIN_K as FLOOR_AGAIN_K } from './claims/source-guard';
+import type { Condition, ConditionNode } from './rule-body';
+import { entry, type Run } from './run';
+import type { Claim } from './types';
+
+export interface Threshold {
+  /** null: the coldest point of the house. */
+  point: number | null;
+  side: 'above' | 'below';
+  value: number;
+  /** The value itself is enough. */
+  orAt: boolean;
+  /** The claim that compares. */
+  of: Claim;
+  /** What is compared counts over time, so nothing need change at once. */
+  overTime: boolean;
+}
+
+/** @param laterAt when the clock alone turns the channel: bands of that hour count too; null: it does not */
+export function thresholdsOf(run: Run, channel: number, laterAt: number | null): Threshold[] {
+  const { neverWith, needs, neededBy } = entry(run.plan.channels, channel);
+  // an interlock's other channel is turned by readings of its own, and stops this one or lets it go
+  const isStill =
+    laterAt === null && run.demandState[channel] === 'off' && entry(run.channels, channel).wanted === 'off';
+  const others = [
+    ...neverWith.map((one) => one.other),
+    ...needs.map((one) => one.other),
+    ...neededBy.map((one) => one.channel),
+  ];
+  return [channel, ...(isStill ? [] : others)].flatMap((one) => ofChannel(run, one, laterAt));
+}
+
+function ofChannel(run: Run, channel: number, laterAt: number | null): Threshold[] {
+  return [
+    ...frostLimits(run, channel),
+    ...sourceLevels(run, channel),
+    ...highLimit(run, channel),
+    ...entry(run.plan.channels, channel).rules.flatMap((rule) => [
+      ...leastGain(run, channel, rule),
+      ...band(run, rule, entry(run.calendars, rule), false),
+      ...(laterAt === null ? [] : band(run, rule, entry(run.plan.rules, rule).calendar(laterAt), true)),
+      ...conditions(run, rule),
+    ]),
+  ];
+}
+
+interface Compared {
+  of: Claim;
+  /** Whether the claim counts the value itself as low: `x ≤ value`, not `x < value`. */
+  lowIncludes: boolean;
+  overTime?: boolean;
+  /** Where only one way of passing it means anything. */
+  side?: Threshold['side'];
+}
+
+/** The way a point would have to go from where it is; none for one that is not to be trusted. */
+function past(run: Run, point: number | null, value: number, compared: Compared): Threshold[] {
+  if (point === null || run.usable[point] !== 'good') return [];
+  const now = entry(run.points, point).value;
+  if (now === null) return [];
+  const { of, lowIncludes, overTime = false } = compared;
+  const isLow = lowIncludes ? now <= value : now < value;
+  const side = compared.side ?? (isLow ? 'above' : 'below');
+  return [{ point, side, value, orAt: lowIncludes === (side === 'below'), of, overTime }];
+}
+
+function band(run: Run, rule: number, hour: RuleCalendar, isLater: boolean): Threshold[] {
+  const { warm, points } = entry(run.plan.rules, rule);
+  const { inSeason, inHours, low, high } = hour;
+  if (!inSeason || !inHours) return [];
+  const { using, latch } = entry(run.rules, rule);
+  const { point, offset } = entry(points, using);
+  // a latch turns on at one end of the band and off at the other
+  const isHigh = warm === latch;
+  // the last digits of a subtraction are nobody's setting
+  const value = Math.round(((isHigh ? high : low) - offset) * 1e9) / 1e9;
+  const side = isHigh ? 'above' : 'below';
+  return past(run, point, value, { of: 'band', lowIncludes: isHigh, overTime: isLater, side });
+}
+
+function conditions(run: Run, rule: number): Threshold[] {
+  const { only } = entry(run.plan.rules, rule);
+  if (only === null) return [];
+  return leaves(only.tree).flatMap(({ fact, value, operator }) => {
+    const point = run.plan.pointPlaces.get(fact);
+    const ordered = operator.startsWith('lessThan') || operator.startsWith('greaterThan');
+    if (point === undefined || typeof value !== 'number' || !ordered) return [];
+    const lowIncludes = operator === 'lessThanInclusive' || operator === 'greaterThan';
+    return past(run, point, value, { of: 'band', lowIncludes });
+  });
+}
+
+function leaves(node: ConditionNode): Condition[] {
+  if ('all' in node) return node.all.flatMap(leaves);
+  if ('any' in node) return node.any.flatMap(leaves);
+  return 'not' in node ? leaves(node.not) : [node];
+}
+
+function frostLimits(run: Run, channel: number): Threshold[] {
+  const { frostLimit } = run.plan.house;
+  const { inFrost } = entry(run.plan.channels, channel);
+  if (frostLimit === null || inFrost === null || coldestPoint(run) === null) return [];
+  const common = { point: null, of: 'frost', overTime: false } as const;
+  return run.frost.on
+    ? [{ ...common, side: 'above', value: frostLimit + ENDS_K, orAt: true }]
+    : [{ ...common, side: 'below', value: frostLimit, orAt: false }];
+}
+
+function sourceLevels(run: Run, channel: number): Threshold[] {
+  const place = entry(run.plan.channels, channel).source;
+  if (place === null) return [];
+  const source = entry(run.plan.sources, place);
+  const { resting, underFloor, ready } = entry(run.sources, place);
+  const { coreFloor, ready: readiness } = source.config;
+  const { core } = source;
+  const floor = coreFloor ?? 0;
+  const guard = { of: 'source-guard', lowIncludes: false } as const;
+  return [
+    ...(coreFloor === null
+      ? []
+      : underFloor
+        ? past(run, core, floor + FLOOR_AGAIN_K, { ...guard, side: 'above' })
+        : past(run, core, floor, { ...guard, side: 'below' })),
+    ...(readiness === null || ready
+      ? []
+      : past(run, core, readiness.level, { of: 'source-guard', lowIncludes: true, overTime: true })),
+    ...(resting
+      ? waitingRules(run, source).flatMap(({ rest }) =>
+          rest === null || rest.until === null
+            ? []
+            : past(run, rest.until.point, rest.until.level, {
+                of: 'rest',
+                lowIncludes: false,
+                overTime: true,
+              }),
+        )
+      : []),
+  ];
+}
+
+function highLimit(run: Run, channel: number): Threshold[] {
+  const { config, highLimitPoint } = entry(run.plan.channels, channel);
+  if (config.highLimit === null) return [];
+  const { overHighLimit } = entry(run.channels, channel);
+  const { above } = config.highLimit;
+  const limit = { of: 'limit', lowIncludes: true } as const;
+  return overHighLimit
+    ? past(run, highLimitPoint, above - LIMIT_AGAIN_K, { ...limit, side: 'below' })
+    : past(run, highLimitPoint, above, { ...limit, side: 'above' });
+}
+
+function leastGain(run: Run, channel: number, rule: number): Threshold[] {
+  const gain = entry(run.plan.rules, rule).rest?.leastGain ?? null;
+  if (gain === null || gain.intake === null || entry(run.channels, channel).counted === 'off') return [];
+  const intake = entry(run.points, gain.intake).value;
+  const back = gain.return === null ? null : entry(run.points, gain.return).value;
+  if (intake === null || back === null) return [];
+  const common = { of: 'rest', overTime: true } as const;
+  return [
+    ...past(run, gain.return, intake + gain.kelvin, { ...common, lowIncludes: false }),
+    ...past(run, gain.intake, back - gain.kelvin, { ...common, lowIncludes: true }),
+  ];
+}
