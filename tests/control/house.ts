@@ -5,9 +5,9 @@ import type { Plan } from '@/lib/control/plan';
 import type { RuleBody } from '@/lib/control/rule-body';
 import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
+import type { ControlEvent } from '@/lib/control/events';
 import type {
   ChannelConfig,
-  ControlEvent,
   HouseConfig,
   Observed,
   PersonCommand,

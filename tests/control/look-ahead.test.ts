@@ -1,7 +1,7 @@
 /** Whatever `next` says would happen does happen, on random houses; and what it says of the clock comes by the clock. */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/because';
+import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/next';
 import { explain } from '@/lib/control/explain';
 import type { Memory } from '@/lib/control/memory';
 import { step } from '@/lib/control/step';
