@@ -2,7 +2,7 @@
 import { expect } from 'vitest';
 import type { ControlEvent } from '@/lib/control/events';
 import type { Claim } from '@/lib/control/types';
-import type { Player } from './house';
+import type { Player } from './player';
 
 /** Those that may draw under a spent credit or a spent day. `interlock` holds a needed channel on. */
 const DRAW_WITHOUT_CREDIT: Claim[] = ['hand', 'proving', 'short-cycle', 'frost', 'interlock'];

@@ -6,7 +6,7 @@ import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
 import type { ControlEvent } from '@/lib/control/events';
 import type { HouseConfig } from '@/lib/control/types';
-import { Player } from './house';
+import { Player } from './player';
 import { checkClaims, checkDraws, checkLeastOn, checkPairs, checkStanding } from './model-claims';
 import { act, AT_FIRST, deeds, houses, outside } from './model-house';
 
