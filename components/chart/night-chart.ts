@@ -31,7 +31,7 @@ export interface Frame {
 }
 
 export const WIDE: Frame = {
-  ...{ width: 690, left: 38, right: 104, top: 24, plot: 248 },
+  ...{ width: 714, left: 38, right: 128, top: 24, plot: 248 },
   ...{ stripStep: 26, stripHeight: 14, namesAbove: false, everyHours: 3 },
 };
 export const NARROW: Frame = {

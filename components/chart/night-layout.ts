@@ -127,21 +127,35 @@ function drawn(one: WatchLine, chart: NightChart, x: Scale, y: Scale): DrawnLine
   return { key: one.key, role: one.role, isMain: one.key === chart.main, rank, path: path ?? '' };
 }
 
-/** A line's name stands where the line ends, with its last figure. */
+/** As many letters as stand beside the plot of a wide frame. */
+const BESIDE = 20;
+
+/** As much of a name as there is room for. */
+export const shortened = (name: string, most = BESIDE) =>
+  name.length > most ? `${name.slice(0, most - 1)}…` : name;
+
+/** A line's name stands beside the plot at the height where the line ends, clear of the words of bands within. */
 function labelsOf(chart: NightChart, x: Scale, y: Scale, frame: Frame, preferences: Preferences) {
   const items = chart.lines.flatMap((one) => {
     const last = one.value.findLastIndex((value) => value !== null);
     const [at, value] = [one.at[last], one.value[last]];
     if (at === undefined || value === undefined || value === null) return [];
-    const name = one.role === 'outdoors' ? 'Outdoors' : one.role === 'loop-return' ? 'Loop return' : one.name;
-    // on a phone the colour and the place say which; the name would run over the lines
-    const text = frame.namesAbove ? temperatureFigure(value, preferences) : name;
+    const figure = temperatureFigure(value, preferences);
     // a line that left the chart says how high it is
-    const isOut = y(value) < frame.top;
-    const told = isOut && !frame.namesAbove ? `${text} ↑ ${temperatureFigure(value, preferences)}` : text;
+    const out = y(value) < frame.top ? ` ↑ ${figure}` : '';
     return [
-      { key: one.key, role: one.role, isMain: one.key === chart.main, text: told, x: x(at) + 5, y: y(value) },
+      {
+        ...{ key: one.key, role: one.role, isMain: one.key === chart.main, y: y(value) },
+        // on a phone the colour and the place say which; the name would run over the lines
+        text: frame.namesAbove ? figure : `${shortened(nameOf(one, chart), BESIDE - out.length)}${out}`,
+        x: frame.namesAbove ? x(at) + 5 : frame.width - frame.right + 6,
+      },
     ];
   });
   return spread(items, 13, frame.top + 6, frame.top + frame.plot - 2);
+}
+
+function nameOf(one: WatchLine, chart: NightChart): string {
+  if (chart.lines.some((other) => other.key !== one.key && other.role === one.role)) return one.name;
+  return one.role === 'outdoors' ? 'Outdoors' : one.role === 'loop-return' ? 'Loop return' : one.name;
 }

@@ -1,4 +1,4 @@
-import type { NightLayout } from './night-layout';
+import { shortened, type NightLayout } from './night-layout';
 import { Strip } from './strip';
 
 /** When each channel ran, rested and was held, under the lines of its night. */
@@ -24,7 +24,7 @@ export function NightStrips({ layout, id }: { layout: NightLayout; id: string })
             strokeWidth="3"
             paintOrder="stroke"
           >
-            {strip.name.length > 17 && !frame.namesAbove ? `${strip.name.slice(0, 15)}…` : strip.name}
+            {frame.namesAbove ? strip.name : shortened(strip.name)}
           </text>
           {/* over the whole strip, with half the gap to its neighbours, for whoever wants to press it */}
           <rect

@@ -1,7 +1,7 @@
 import { ButtonLink } from '@/components/ui/button';
 import { Figures, Panel } from '@/components/ui/panel';
 import type { House } from '@/lib/schema/yard-view';
-import { decimal, length, temperature } from '@/lib/units/format';
+import { altitude, decimal, temperature } from '@/lib/units/format';
 import { day } from '@/lib/units/time';
 import type { Preferences } from '@/lib/units/preferences';
 import { LAST_RESORT_CAUTION } from '@/lib/wording/wiring-parts';
@@ -29,7 +29,7 @@ export function HousePanel({
             name: 'Place',
             value: `${degree(house.latitude, 'N', 'S')}, ${degree(house.longitude, 'E', 'W')}`,
           },
-          { name: 'Altitude', value: length(house.altitude, preferences) },
+          { name: 'Altitude', value: altitude(house.altitude, preferences) },
           {
             name: 'Frost help below',
             value:

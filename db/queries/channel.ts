@@ -1,15 +1,16 @@
 import 'server-only';
-import { and, asc, eq, isNull, or, sql } from 'drizzle-orm';
+import { and, asc, eq, or, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { channel, interlock, loop, point } from '@/db/schema/yard';
+import { channel, interlock, loop } from '@/db/schema/yard';
 import type { ChannelCreate } from '@/lib/schema/yard';
 import { Channel } from '@/lib/schema/yard-view';
+import { ofARun, ofOwnNode } from './channel-points';
 import { listNodes } from './node';
 import { touchPlan } from './plan';
 import { rulesOfChannel } from './point-uses';
-import { houseNames, inUse, isId, type HouseNames, type Named } from './reference';
+import { houseNames, inUse, isId, type HouseNames } from './reference';
 import { Refusal } from './refusal';
 
 type Given = z.infer<typeof ChannelCreate>;
@@ -90,39 +91,9 @@ async function columns(holding: Holding, houseId: string, given: Given) {
     minOffS: given.minOff,
     longestOnS: given.longestOn,
     highLimit: named(given.highLimit, 'highLimit'),
-    runProof: named(given.runProof, 'runProof'),
+    runProof: await ofARun(holding, houseId, named(given.runProof, 'runProof')),
     fallback: await ofOwnNode(holding, node, named(given.fallback, 'fallback')),
   };
-}
-
-/** A node runs a fallback by its own sensors, since it hears of no other. @throws Refusal at the point that is none of them */
-async function ofOwnNode<T extends { point: string }>(
-  holding: Holding,
-  node: Named,
-  fallback: T | null,
-): Promise<T | null> {
-  if (fallback === null) return null;
-  const [own] = await holding.db
-    .select({ unit: point.unit })
-    .from(point)
-    .where(
-      and(
-        eq(point.holdingId, holding.id),
-        eq(point.nodeId, node.id),
-        eq(point.key, fallback.point),
-        isNull(point.removedAt),
-      ),
-    );
-  if (own === undefined) {
-    const why = `Node ${node.key} does not measure ${fallback.point}: it runs a fallback by its own points alone.`;
-    throw new Refusal('fallback.point', why);
-  }
-  if (own.unit !== 'Cel')
-    throw new Refusal(
-      'fallback.point',
-      `A fallback goes by a temperature; ${fallback.point} is in ${own.unit}.`,
-    );
-  return fallback;
 }
 
 export async function createChannel(holding: Holding, houseId: string, given: Given): Promise<Channel> {

@@ -2,7 +2,8 @@
 import { and, asc, desc, eq, gt, gte, inArray, lt, lte } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { decision, switching } from '@/db/schema/running';
-import type { Explanation, State } from '@/lib/control/types';
+import type { Explanation } from '@/lib/control/events';
+import type { State } from '@/lib/control/types';
 import { asSwitching, type Switching } from './running';
 
 export interface Decision {

@@ -4,10 +4,12 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { house } from '@/db/schema/yard';
-import type { HouseAmend, HouseCreate } from '@/lib/schema/yard';
+import type { HouseCreate } from '@/lib/schema/yard';
 import type { House } from '@/lib/schema/yard-view';
+import { toLocal } from '@/lib/units/local-time';
 import { touchPlan } from './plan';
 import { isId } from './reference';
+import { Refusal } from './refusal';
 import { freeSlug, NO_HOUSE } from './slug';
 
 type Row = typeof house.$inferSelect;
@@ -53,7 +55,21 @@ async function takenSlugs(holding: Holding): Promise<Set<string>> {
   return new Set([...NO_HOUSE, ...rows.map((row) => row.slug)]);
 }
 
-export async function createHouse(holding: Holding, given: z.infer<typeof HouseCreate>): Promise<House> {
+/** @throws Refusal where a thermostat of last resort is said to have been seen at work on a day yet to come */
+function refuseUnseen({ lastResort, zone }: z.infer<typeof HouseCreate>, now: Date): void {
+  const seenOn = lastResort?.provedOn ?? null;
+  if (seenOn !== null && seenOn > toLocal(now.getTime(), zone).slice(0, 10)) {
+    const why = 'That day is yet to come: give the day on which it was seen to come on, or leave it empty.';
+    throw new Refusal('lastResort.provedOn', why);
+  }
+}
+
+export async function createHouse(
+  holding: Holding,
+  given: z.infer<typeof HouseCreate>,
+  now: Date,
+): Promise<House> {
+  refuseUnseen(given, now);
   const slug = freeSlug(given.name, await takenSlugs(holding));
   const id = uuid();
   const rows = await holding.db
@@ -68,8 +84,10 @@ export async function createHouse(holding: Holding, given: z.infer<typeof HouseC
 export async function amendHouse(
   holding: Holding,
   id: string,
-  given: z.infer<typeof HouseAmend>,
+  given: z.infer<typeof HouseCreate>,
+  now: Date,
 ): Promise<House> {
+  refuseUnseen(given, now);
   const rows = await holding.db
     .update(house)
     .set({ ...given, revision: sql`${house.revision} + 1` })

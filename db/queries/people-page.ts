@@ -5,8 +5,9 @@ import { session } from '@/db/schema/auth';
 import type { Place } from '@/lib/schema/common';
 import { listAudit, type AuditRow } from './audit';
 import { listHouses } from './house';
+import { listInvitations } from './invitation';
 import { listKeys, type KeyRow } from './key';
-import { listInvitations, listMembers } from './people';
+import { listMembers } from './member';
 
 export interface PeoplePage {
   /** Of the first house: a holding has none of its own. */

@@ -3,7 +3,8 @@ import { and, asc, desc, eq, gte, inArray, lt, or, sql } from 'drizzle-orm';
 import type { Db, Holding } from '@/db/client';
 import { nodeLog } from '@/db/schema/node-log';
 import { controlMemory, decision, relayReport, switching } from '@/db/schema/running';
-import type { Explanation, State } from '@/lib/control/types';
+import type { Explanation } from '@/lib/control/events';
+import type { State } from '@/lib/control/types';
 import type { HouseState } from '@/lib/schema/house-state';
 
 export type SwitchingRow = typeof switching.$inferInsert;

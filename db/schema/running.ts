@@ -12,7 +12,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
-import type { Explanation } from '@/lib/control/types';
+import type { Explanation } from '@/lib/control/events';
 import { holdingId, instant } from './columns';
 import { house } from './yard';
 

@@ -1,5 +1,5 @@
 /** The second demo holding, Stonebeck Nursery, whose rows Larkmoor must never see. Invented throughout. */
-import { probe, type DemoHouse } from './larkmoor';
+import { probe, type DemoHouse } from './demo-house';
 
 export const beckHouse: DemoHouse = {
   house: {

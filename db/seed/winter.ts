@@ -6,7 +6,7 @@ import type { z } from 'zod';
 import type { HeapEntryCreate } from '@/lib/schema/heap';
 import type { RuleBodyInput } from '@/lib/schema/rule';
 import type { State } from '@/lib/control/types';
-import { longHouse } from './larkmoor';
+import { longHouse } from './long-house';
 
 interface At {
   house: string;

@@ -15,7 +15,7 @@ import {
   PointCreate,
   SourceCreate,
 } from '@/lib/schema/yard';
-import type { DemoHouse } from './larkmoor';
+import type { DemoHouse } from './demo-house';
 
 export interface NodeSecret {
   house: string;

@@ -1,5 +1,5 @@
 /** What somebody's deed, or another load's report, would bring for a channel that waits for it. */
-import type { NextWhen } from './because';
+import type { NextWhen } from './next';
 import type { ChannelMemory, Memory } from './memory';
 import { entry, type Run } from './run';
 import type { Claim, State } from './types';

@@ -4,7 +4,8 @@ import { addLookAhead } from './look-ahead';
 import type { Memory } from './memory';
 import type { Plan } from './plan';
 import { play } from './play';
-import type { Explanation, Observed } from './types';
+import type { Explanation } from './events';
+import type { Observed } from './types';
 
 /**
  * The ladder of a channel (by id) at `now`, and what comes next. Asks without moving anything: the memory given is

@@ -1,7 +1,7 @@
 /** Why a channel is as it is, at an instant that is settled. */
 import { becauseOf, ladderOf, ladderUnder } from './ladder';
 import { entry, told, type Run } from './run';
-import type { Explanation } from './types';
+import type { Explanation } from './events';
 
 /** The ladder of a channel at `run.at`; `next` is left to whoever can look ahead. */
 export function explainSettled(run: Run, channel: number): Explanation {

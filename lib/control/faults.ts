@@ -5,7 +5,8 @@ import { isUnderFloor } from './claims/source-guard';
 import { usedMs } from './day';
 import { entry, type Run } from './run';
 import { isUnsteady } from './steady';
-import type { Data, Fault } from './types';
+import type { Fault } from './events';
+import type { Data } from './types';
 
 type About = Fault['about'];
 type Stand = (kind: Fault['kind'], about: About, data?: () => Data) => void;

@@ -13,7 +13,8 @@ import { rest } from './claims/rest';
 import { shortCycle } from './claims/short-cycle';
 import { sourceGuard } from './claims/source-guard';
 import type { Run } from './run';
-import { CLAIMS, type Claim, type Data, type LadderStep, type State } from './types';
+import type { LadderStep } from './events';
+import { CLAIMS, type Claim, type Data, type State } from './types';
 
 /** A rung without its own name: what all of them have in common. */
 interface Rung {

@@ -3,13 +3,14 @@
  * Nothing here reasons about the claims: each candidate is tried on the core itself, and told only if it would change
  * what runs, when, or what decides.
  */
-import type { NextIf, NextReason, NextThen } from './because';
+import type { NextIf, NextReason, NextThen } from './next';
 import { eventsAhead } from './events-ahead';
 import type { Memory } from './memory';
 import { entry, type Run } from './run';
 import { moved } from './moved';
 import { thresholdsOf, type Threshold } from './thresholds';
-import { CLAIMS, type Data, type Explanation } from './types';
+import type { Explanation } from './events';
+import { CLAIMS, type Data } from './types';
 import { asItIs, changesBy, ifInstead, type Future, type Told } from './what-if';
 
 const AHEAD_MS = 24 * 3_600_000;

@@ -3,7 +3,8 @@
  * the database's ids and stand in the plan's order (`fit.ts` puts them there), so a hot step copies arrays, not maps.
  * A step never changes the memory that it is given; what stays the same is shared with the one that it returns.
  */
-import type { Claim, Fault, Quality, State } from './types';
+import type { Fault } from './events';
+import type { Claim, Quality, State } from './types';
 
 export const MEMORY_VERSION = 1;
 

@@ -1,7 +1,7 @@
 /**
- * Draws that are told afterwards: a node ran its fallback while nobody heard it. They count in the rolling 24 h as any
- * other, and the credit is reckoned anew from the draws of that day: a heap that was drawn on has not rested, whoever
- * drew. What is reckoned only ever lowers the credit, since nobody knows what else was not told.
+ * Draws that are told afterwards: a node ran its fallback while nobody heard it, and tells from its log when it is back.
+ * They count in the rolling 24 h as any other, and the credit is reckoned anew from the draws of that day: a heap that
+ * was drawn on has not rested, whoever drew. So the credit can only fall by it, never rise.
  */
 import { beginRest, creditAt, drawCost, leastRestMs } from './credit';
 import { addSpans } from './day';

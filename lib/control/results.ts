@@ -5,7 +5,7 @@ import { creditAt } from './credit';
 import { usedMs } from './day';
 import { becauseOf } from './ladder';
 import { entry, told, type Run } from './run';
-import type { ChannelResult, PointResult, SourceResult } from './types';
+import type { ChannelResult, PointResult, SourceResult } from './step-result';
 
 export function channelResult(run: Run, index: number): ChannelResult {
   const { id, number, safe } = entry(run.plan.channels, index);

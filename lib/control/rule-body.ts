@@ -12,6 +12,18 @@ export type Operator =
   | 'in'
   | 'notIn';
 
+/** What holds exactly where an operator does not: what a `not` makes of it. */
+export const OPPOSITE: Record<Operator, Operator> = {
+  equal: 'notEqual',
+  notEqual: 'equal',
+  lessThan: 'greaterThanInclusive',
+  lessThanInclusive: 'greaterThan',
+  greaterThan: 'lessThanInclusive',
+  greaterThanInclusive: 'lessThan',
+  in: 'notIn',
+  notIn: 'in',
+};
+
 export interface Condition {
   fact: string;
   operator: Operator;

@@ -3,7 +3,8 @@ import type { ChannelMemory, FrostMemory, PointMemory, RuleMemory, SourceMemory 
 import type { InterlockVerdict } from './interlocks';
 import type { RuleCalendar } from './calendar';
 import type { Plan } from './plan';
-import type { Claim, ControlEvent, Observed, Quality, State } from './types';
+import type { ControlEvent } from './events';
+import type { Claim, Observed, Quality, State } from './types';
 
 export interface Run {
   plan: Plan;

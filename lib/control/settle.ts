@@ -15,7 +15,8 @@ import { settleGain, settleProof } from './least-gain';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
 import { settleUnbidden } from './unbidden';
-import type { Claim, Explanation, State } from './types';
+import type { Explanation } from './events';
+import type { Claim, State } from './types';
 
 /** Settles `run.at`; afterwards `nextWake(run)` is the earliest instant at which something changes by itself. */
 export function settle(run: Run): void {

@@ -7,7 +7,9 @@ import { play } from './play';
 import { channelResult, pointResult, sourceResult } from './results';
 import type { Run } from './run';
 import type { StepResult } from './step-result';
-import type { ChannelResult, ControlEvent, Fault, Observed, PointResult, SourceResult } from './types';
+import type { ControlEvent, Fault } from './events';
+import type { ChannelResult, PointResult, SourceResult } from './step-result';
+import type { Observed } from './types';
 
 /**
  * Decides every channel of a house at `now` (epoch ms). Level-triggered: the same inputs give the same outputs, a

@@ -30,7 +30,9 @@ const ConditionLeaf = z
         'Name a point by its key, or time.hour, time.month, time.weekday, time.sunUp.',
       ),
     operator: z.enum(OPERATORS),
-    value: z.union([z.number(), z.boolean(), z.array(z.number()).min(1).max(50)]),
+    value: z.union([z.number(), z.boolean(), z.array(z.number()).min(1).max(50)], {
+      error: 'Give a number, true or false, or (for in and notIn) a list of numbers.',
+    }),
   })
   .refine((leaf) => (leaf.operator === 'in' || leaf.operator === 'notIn') === Array.isArray(leaf.value), {
     path: ['value'],
@@ -40,11 +42,14 @@ const ConditionLeaf = z
 const Node: z.ZodType<ConditionNode> = z.lazy(() => z.union([ConditionLeaf, ConditionTree]));
 export const ConditionTree: z.ZodType<ConditionTree> = z
   .lazy(() =>
-    z.union([
-      z.strictObject({ all: z.array(Node).min(1).max(50) }),
-      z.strictObject({ any: z.array(Node).min(1).max(50) }),
-      z.strictObject({ not: Node }),
-    ]),
+    z.union(
+      [
+        z.strictObject({ all: z.array(Node).min(1).max(50) }),
+        z.strictObject({ any: z.array(Node).min(1).max(50) }),
+        z.strictObject({ not: Node }),
+      ],
+      { error: 'A group of conditions has one of all, any or not, and nothing beside it.' },
+    ),
   )
   .meta({ id: 'ConditionTree' });
 
@@ -104,26 +109,35 @@ export const Rest = z
     error: 'The longest rest cannot be shorter than the least.',
   });
 
-export const RuleBody = z.strictObject({
-  purpose: z.enum(['warm', 'cool']),
-  point: Key,
-  standIns: z
-    .array(z.strictObject({ point: Key, offset: finite(-30, 30, 'K').default(0) }))
-    .max(5)
-    .default([]),
-  band: z
-    .array(BandPeriod)
-    .min(1, 'A rule needs a band.')
-    .max(12)
-    .refine(
-      (band) => new Set(band.map((period) => period.from)).size === band.length,
-      'Two periods begin at the same time.',
-    ),
-  rest: Rest.optional(),
-  only: Only.optional(),
-  season: z.strictObject({ from: MonthDay, to: MonthDay }).optional(),
-  hours: z.strictObject({ from: DayTime, to: DayTime }).optional(),
-});
+export const RuleBody = z
+  .strictObject({
+    purpose: z.enum(['warm', 'cool']),
+    point: Key,
+    standIns: z
+      .array(z.strictObject({ point: Key, offset: finite(-30, 30, 'K').default(0) }))
+      .max(5)
+      .refine(
+        (standIns) => new Set(standIns.map((one) => one.point)).size === standIns.length,
+        'Each point stands in once.',
+      )
+      .default([]),
+    band: z
+      .array(BandPeriod)
+      .min(1, 'A rule needs a band.')
+      .max(12)
+      .refine(
+        (band) => new Set(band.map((period) => period.from)).size === band.length,
+        'Two periods begin at the same time.',
+      ),
+    rest: Rest.optional(),
+    only: Only.optional(),
+    season: z.strictObject({ from: MonthDay, to: MonthDay }).optional(),
+    hours: z.strictObject({ from: DayTime, to: DayTime }).optional(),
+  })
+  .refine((body) => !body.standIns.some((one) => one.point === body.point), {
+    path: ['standIns'],
+    error: 'A point cannot stand in for itself: name another, or leave it out.',
+  });
 export type RuleBody = z.infer<typeof RuleBody>;
 /** As a form or a program gives it, before defaults. */
 export type RuleBodyInput = z.input<typeof RuleBody>;

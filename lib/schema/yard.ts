@@ -94,6 +94,30 @@ export const DERIVED = [
   'loop-heat',
 ] as const;
 
+/** How many points each kind takes; the others take one to twelve. */
+const TAKES: Partial<Record<(typeof DERIVED)[number], number>> = {
+  difference: 2,
+  trend: 1,
+  'dew-point': 2,
+  'vapour-pressure-deficit': 2,
+  lift: 2,
+  'loop-heat': 2,
+};
+
+const Derived = z
+  .strictObject({
+    of: z.enum(DERIVED),
+    points: z.array(Key).min(1).max(12),
+    window: wholeSeconds(60, 86_400).optional(),
+  })
+  .superRefine(({ of, points }, context) => {
+    const takes = TAKES[of];
+    if (takes === undefined || takes === points.length) return;
+    const message =
+      takes === 1 ? `A ${of} is of one point.` : `A ${of} takes ${takes} points, in their order.`;
+    context.addIssue({ code: 'custom', path: ['points'], message });
+  });
+
 export const pointFields = {
   key: Key,
   node: Key.nullable(),
@@ -108,13 +132,7 @@ export const pointFields = {
   offset: z.number().min(-50).max(50),
   gain: z.number().min(0.1, 'Between 0.1 and 10.').max(10, 'Between 0.1 and 10.'),
   sensor: z.string().trim().max(60).nullable(),
-  derived: z
-    .strictObject({
-      of: z.enum(DERIVED),
-      points: z.array(Key).min(1).max(12),
-      window: wholeSeconds(60, 86_400).optional(),
-    })
-    .nullable(),
+  derived: Derived.nullable(),
 };
 export const PointCreate = z
   .strictObject({
@@ -189,7 +207,12 @@ export const channelFields = {
   startsPerHour: finite(0.1, 3600, 'starts an hour').nullable(),
   longestOn: wholeSeconds(1, 7 * 86_400).nullable(),
   highLimit: z.strictObject({ point: Key, above: Celsius }).nullable(),
-  runProof: z.strictObject({ point: Key, above: z.number() }).nullable(),
+  runProof: z
+    .strictObject({
+      point: Key,
+      above: z.number().min(0, 'Not under 0: a standing fan would pass for a running one.'),
+    })
+    .nullable(),
   fallback: z
     .strictObject({
       point: Key,

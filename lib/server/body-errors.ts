@@ -10,7 +10,15 @@ type Issue = z.core.$ZodIssue;
 
 /** Says each issue at its dotted path, unknown keys one by one, and of a choice the form that came nearest. */
 export function bodyErrors(error: z.ZodError): BodyError[] {
-  return error.issues.flatMap((issue) => errorsOf(issue, []));
+  const told = new Set<string>();
+  return error.issues
+    .flatMap((issue) => errorsOf(issue, []))
+    .filter(({ path }) => {
+      // what was not understood fails every further look: its first failing says why
+      if (told.has(path)) return false;
+      told.add(path);
+      return true;
+    });
 }
 
 function errorsOf(issue: Issue, above: PropertyKey[]): BodyError[] {
@@ -54,14 +62,19 @@ export function sayPlainly(issue: z.core.$ZodRawIssue): string | undefined {
     case 'too_small':
       return issue.origin === 'number' || issue.origin === 'int'
         ? `At least ${String(issue.minimum)}.`
-        : `At least ${String(issue.minimum)} ${issue.origin === 'string' ? 'characters' : 'entries'}.`;
+        : `At least ${counted(Number(issue.minimum), issue.origin)}.`;
     case 'too_big':
       return issue.origin === 'number' || issue.origin === 'int'
         ? `At most ${String(issue.maximum)}.`
-        : `At most ${String(issue.maximum)} ${issue.origin === 'string' ? 'characters' : 'entries'}.`;
+        : `At most ${counted(Number(issue.maximum), issue.origin)}.`;
     default:
       return undefined;
   }
+}
+
+function counted(many: number, origin: string): string {
+  const [one, more] = origin === 'string' ? ['character', 'characters'] : ['entry', 'entries'];
+  return `${many} ${many === 1 ? one : more}`;
 }
 
 const KINDS: Record<string, string> = {

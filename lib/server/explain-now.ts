@@ -6,7 +6,8 @@ import type { KeptMemory } from '@/db/queries/running';
 import { compile } from '@/lib/control/compile';
 import { explain } from '@/lib/control/explain';
 import { migrateMemory } from '@/lib/control/memory';
-import type { Explanation, Observed } from '@/lib/control/types';
+import type { Explanation } from '@/lib/control/events';
+import type { Observed } from '@/lib/control/types';
 
 /**
  * Asks the core about a channel from what the worker keeps in the database: its memory of the last event, and the newest

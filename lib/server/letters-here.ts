@@ -1,7 +1,9 @@
 import 'server-only';
 import { everyHolding, type Holding } from '@/db/client';
 import { listSinkMessages } from '@/db/queries/mail';
-import { listInvitations, listMembers, listMemberships, findUserByEmail } from '@/db/queries/people';
+import { listInvitations } from '@/db/queries/invitation';
+import { listMembers } from '@/db/queries/member';
+import { listMemberships, findUserByEmail } from '@/db/queries/people';
 import { Problem } from './errors';
 import { mailStaysHere } from './mail';
 

@@ -1,15 +1,14 @@
 import 'server-only';
 import type { Holding } from '@/db/client';
+import { createInvitation, type InvitationRow } from '@/db/queries/invitation';
 import {
   changeRole,
   countOtherOwners,
-  createInvitation,
   findFirstOwner,
   listMembers,
   removeMember,
-  type InvitationRow,
   type MemberRow,
-} from '@/db/queries/people';
+} from '@/db/queries/member';
 import { Refusal } from '@/db/queries/refusal';
 import type { Caller } from './caller';
 import { invitationLetter } from './letters';

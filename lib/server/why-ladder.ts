@@ -1,7 +1,8 @@
 import 'server-only';
 import type { Holding } from '@/db/client';
 import { listLockouts } from '@/db/queries/lockout';
-import { CLAIMS, type Data, type LadderStep, type State } from '@/lib/control/types';
+import type { LadderStep } from '@/lib/control/events';
+import { CLAIMS, type Data, type State } from '@/lib/control/types';
 
 /** The ladder as far as it went; of the claims above the one that decided it is only known that they kept still. */
 export function downTo(claim: string, wants: State): LadderStep[] {

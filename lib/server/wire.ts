@@ -1,6 +1,7 @@
 import { DateTime } from 'luxon';
 import { isInstant } from '@/lib/control/because';
-import type { Data, DataValue, LadderStep } from '@/lib/control/types';
+import type { LadderStep } from '@/lib/control/events';
+import type { Data, DataValue } from '@/lib/control/types';
 
 const QUARTER_MS = 900_000;
 const REMEMBERED = 5000;

@@ -91,11 +91,11 @@ export function flow(cubicMetresASecond: number | null, preferences: Preferences
     : `${decimal(cubicMetresASecond * 1000, 1)}${space}L/s`;
 }
 
-export function length(metresLong: number | null, preferences: Preferences): string {
-  if (metresLong === null) return UNKNOWN;
+/** Of ground above the sea: nobody knows it to the centimetre. */
+export function altitude(metresHigh: number, preferences: Preferences): string {
   return preferences.length === 'ft'
-    ? `${decimal(feet(metresLong), 1)}${space}ft`
-    : `${decimal(metresLong, 2)}${space}m`;
+    ? `${decimal(feet(metresHigh), 0)}${space}ft`
+    : `${decimal(metresHigh, 0)}${space}m`;
 }
 
 /** A value of a point in the unit it is kept in (SenML's name of it). A ratio, `/`, reads in per cent. */

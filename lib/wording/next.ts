@@ -1,5 +1,5 @@
 /** What comes next for a load: line by line, and the nearest of it in one sentence. */
-import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/because';
+import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/next';
 import type { Claim, State } from '@/lib/control/types';
 import { isClaim } from './because';
 import { CLAIM_NAMES } from './claims';

@@ -1,5 +1,5 @@
 /** A rule's extra conditions in words. */
-import type { Condition, ConditionNode } from '@/lib/control/rule-body';
+import { OPPOSITE, type Condition, type ConditionNode } from '@/lib/control/rule-body';
 import { decimal, pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { dayTime } from '@/lib/units/time';
@@ -106,17 +106,6 @@ export function conditionWords(
   const joined = between(words, 'all' in node ? ' and ' : ' or ');
   return nested && children.length > 1 ? join('(', joined, ')') : joined;
 }
-
-const OPPOSITE: Record<Condition['operator'], Condition['operator']> = {
-  equal: 'notEqual',
-  notEqual: 'equal',
-  lessThan: 'greaterThanInclusive',
-  lessThanInclusive: 'greaterThan',
-  greaterThan: 'lessThanInclusive',
-  greaterThanInclusive: 'lessThan',
-  in: 'notIn',
-  notIn: 'in',
-};
 
 /**
  * The same condition without its `not`: nobody says "not (it is at least 38 °C)". Of a group the rule of De Morgan holds in

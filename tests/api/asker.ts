@@ -1,7 +1,8 @@
 // Asks the interface as the running app would be asked: the route file is found by its path, as Next finds it.
 import { afterAll } from 'vitest';
 import { closePools, everyHolding, type Holding } from '@/db/client';
-import { addMember, createHolding, createUser } from '@/db/queries/people';
+import { addMember } from '@/db/queries/member';
+import { createHolding, createUser } from '@/db/queries/people';
 import { answerAuth } from '@/lib/server/auth-door';
 import { hashPassword } from '@/lib/server/auth';
 

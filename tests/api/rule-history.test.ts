@@ -150,6 +150,9 @@ test('a thermostat of last resort that somebody saw work answers what the check 
   expect(await kinds()).toContain('last-resort-over-band');
   const wrong = await house({ below: 1, provedOn: 'last autumn' });
   expect(errorsOf(wrong)).toMatchObject([{ path: 'lastResort.provedOn' }]);
+  const unseen = await house({ below: 1, provedOn: '2199-01-01' });
+  expect(unseen.status).toBe(422);
+  expect(errorsOf(unseen)).toMatchObject([{ path: 'lastResort.provedOn' }]);
 });
 
 test('a derived point is not amended into a ring', async () => {

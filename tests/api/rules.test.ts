@@ -93,6 +93,14 @@ const twisted: [string, Json, string][] = [
     { rest: { longestDraw: 9, least: 9, until: { point: 'gate-base', level: 4 } } },
     'rest.most',
   ],
+  ['a stand-in for itself', { standIns: [{ point: 'bench-1' }] }, 'standIns'],
+  ['a stand-in twice', { standIns: [{ point: 'house-air' }, { point: 'house-air' }] }, 'standIns'],
+  ['a group of two kinds', { only: { all: [], any: [] } }, 'only'],
+  [
+    'a condition on words',
+    { only: { all: [{ fact: 'gate-core', operator: 'lessThan', value: 'hot' }] } },
+    'only.all.0.value',
+  ],
   ['a key that is none', { bandd: [] }, 'bandd'],
   ['29 February is a day, 31 April is none', { season: { from: '02-29', to: '04-31' } }, 'season.to'],
 ];

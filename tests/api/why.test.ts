@@ -5,7 +5,8 @@ import { everyHolding, type Holding } from '@/db/client';
 import { noteGap } from '@/db/queries/control-gap';
 import { writeRunning, type DecisionRow, type SwitchingRow } from '@/db/queries/running';
 import { downTo } from '@/lib/server/why-ladder';
-import type { Claim, Data, Explanation, State } from '@/lib/control/types';
+import type { Explanation } from '@/lib/control/events';
+import type { Claim, Data, State } from '@/lib/control/types';
 import { type Asker, type Json, newHolding, personOf } from './asker';
 import * as shown from './shown';
 

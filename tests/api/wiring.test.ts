@@ -33,6 +33,31 @@ const unknown: [string, Json, string][] = [
   ['interlocks', { ...shown.interlock, channel: 'c1', other: 'c1' }, 'other'],
   ['lockouts', { channel: 'no', why: 'a test' }, 'channel'],
 ];
+test.each([
+  [{ above: -3, point: 'fan-amps' }, 'runProof.above'],
+  [{ above: 1, point: 'bench-1' }, 'runProof.point'],
+])('a run is not proved by what a standing fan shows as well: %o', async (runProof, path) => {
+  const body = { ...shown.fan, number: 9, relay: 8, key: 'c9', runProof };
+  const told = await owner.ask('POST', `${AT}/channels`, body);
+  expect(told.status).toBe(422);
+  expect(errorsOf(told)).toMatchObject([{ path }]);
+});
+
+test.each([
+  ['difference', ['outdoors']],
+  ['lift', ['house-air', 'outdoors', 'bench-1']],
+  ['trend', ['house-air', 'outdoors']],
+  ['dew-point', ['house-air']],
+])('a %s of %o is refused: it has another number of points', async (of, points) => {
+  const told = await owner.ask('POST', `${AT}/points`, {
+    ...shown.lift,
+    key: 'other-lift',
+    derived: { of, points },
+  });
+  expect(told.status).toBe(422);
+  expect(errorsOf(told)).toMatchObject([{ path: 'derived.points' }]);
+});
+
 test.each(unknown)(
   'in %s, a name that the house does not have is refused at its path: %#',
   async (list, body, path) => {

@@ -1,5 +1,6 @@
 // The demo's Long house as the core is given it, without a database between.
-import { longHouse, type DemoHouse } from '@/db/seed/larkmoor';
+import type { DemoHouse } from '@/db/seed/demo-house';
+import { longHouse } from '@/db/seed/long-house';
 import { RuleBody } from '@/lib/schema/rule';
 import type { HouseConfig } from '@/lib/control/types';
 

@@ -8,7 +8,7 @@ import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
-import { longHouse } from '@/db/seed/larkmoor';
+import { longHouse } from '@/db/seed/long-house';
 import { runMigrations } from '../../scripts/migrate.mjs';
 import { ensurePostgres, stopPostgres } from '../../scripts/pg.mjs';
 import { anyFree } from '../../scripts/ports.mjs';

@@ -22,6 +22,7 @@ interface Shown {
 /** Pages behind the sign-in, by their file; folders that only group are left out. */
 const YARD: Record<string, Shown> = {
   'page.tsx': { at: '/', heading: /stands at/, drawn: true },
+  '[house]/page.tsx': { at: '/long-house', heading: /stands at/, drawn: true },
   '[house]/watch/page.tsx': { at: '/long-house/watch', heading: /stands at/, drawn: true },
   '[house]/rules/page.tsx': { at: '/long-house/rules', heading: /rule/i },
   '[house]/rules/[rule]/page.tsx': {

@@ -67,6 +67,18 @@ describe('the chart of a night', () => {
       y: WIDE.top + 6,
     });
   });
+  it('names lines beside the plot, and two loops by their points', () => {
+    const loop = (key: string, name: string) => ({
+      ...{ key, name, role: 'loop-return', at: [from], value: [9] },
+    });
+    const lines = [...chart.lines, loop('a', 'Gate loop return'), loop('b', 'Ground loop back to the house')];
+    const { labels, x1 } = nightLayout({ ...chart, lines }, WIDE, USUAL);
+    expect(labels.filter(({ role }) => role === 'loop-return').map(({ text }) => text)).toEqual([
+      'Gate loop return',
+      'Ground loop back to…',
+    ]);
+    expect(labels.every(({ x }) => x > x1)).toBe(true);
+  });
   it('breaks a line where readings are missing', () =>
     expect(layout.lines[0]?.path.match(/M/g)).toHaveLength(2));
   it('draws the band between its thresholds, each labelled in place', () => {

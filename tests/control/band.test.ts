@@ -2,7 +2,8 @@
 import { describe, expect, it } from 'vitest';
 import type { RuleBody } from '@/lib/control/rule-body';
 import { NIGHT_PERIODS } from '../checks/control';
-import { body, channel, house, Player, rule } from './house';
+import { body, channel, house, rule } from './house';
+import { Player } from './player';
 import { holds, silent, speaking } from './table';
 
 const fan = (...bodies: Partial<RuleBody>[]) =>

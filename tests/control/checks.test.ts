@@ -6,7 +6,7 @@ import type { RuleBody } from '@/lib/control/rule-body';
 import type { HouseConfig } from '@/lib/control/types';
 import { USUAL } from '@/lib/units/preferences';
 import { TRADE } from '../checks/control';
-import { body, channel, house, point, rest, rule, source } from './house';
+import { body, channel, house, interlock, point, rest, rule, source } from './house';
 
 const long = (more: Partial<HouseConfig> & { frostLimit?: number | null } = {}) =>
   house({
@@ -25,14 +25,7 @@ const core = (operator: 'greaterThan' | 'lessThan', value: number) => ({ fact: '
 const gain = (after: number) => ({ leastGain: { kelvin: 3, after, intake: 'air', return: 'bench' } });
 const cool = (low: number, high: number) =>
   body({ purpose: 'cool', point: 'air', band: [{ from: '00:00', low, high }] });
-const needs = (a: string, b: string) => ({
-  id: `${a}-${b}`,
-  channel: a,
-  kind: 'needs' as const,
-  other: b,
-  delayS: 0,
-  frostMayBreak: false,
-});
+const needs = (a: string, b: string) => interlock('needs', a, b);
 const loops = [{ id: 'loop', name: 'loop', source: 'heap', channel: 'fan', intake: 'in', return: 'out' }];
 const loopPoints = [...house().points, point('in', 'loop-intake'), point('out', 'loop-return')];
 
@@ -191,7 +184,7 @@ describe('things to look at', () => {
     const fights = (config: HouseConfig, own = body()) => kinds(own, config).includes('look sources-fight');
     const venting = rule('vent', cool(7, 10));
     expect(fights(long({ rules: [venting] }))).toBe(true);
-    const never = { ...needs('vent', 'fan'), kind: 'never-with' as const };
+    const never = interlock('never-with', 'vent', 'fan');
     expect(fights(long({ rules: [venting], interlocks: [never] }))).toBe(false);
     expect(fights(long({ rules: [venting], interlocks: [needs('vent', 'fan')] }))).toBe(true);
     const inSummer = rule('vent', { ...cool(7, 10), season: { from: '05-01', to: '09-30' } });

@@ -1,7 +1,8 @@
 /** First-order lags under the core, played to the millisecond, against their closed forms. */
 import { describe, expect, it } from 'vitest';
 import { CYCLES, DEAD_TIME, MOST_STARTS, TRADE } from '../checks/control';
-import { body, house, MIN, Player, point, rest, rule, S } from './house';
+import { body, house, MIN, point, rest, rule, S } from './house';
+import { Player } from './player';
 
 const fahrenheit = (value: number) => ((value - 32) * 5) / 9;
 const config = (low: number, high: number, more = {}) =>

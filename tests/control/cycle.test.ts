@@ -1,7 +1,8 @@
 /** The limit cycle of a first-order lag under the core, against its closed form. */
 import { describe, expect, it } from 'vitest';
 import { CYCLES, NEVER, TRADE, TRADE_THERMOSTAT } from '../checks/control';
-import { body, house, Player, rest, rule, S, START } from './house';
+import { body, house, rest, rule, S, START } from './house';
+import { Player } from './player';
 
 const config = (low: number, high: number, more = {}) =>
   house({ rules: [rule('fan', body({ band: [{ from: '00:00', low, high }], ...more }))] });

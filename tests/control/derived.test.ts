@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { states, carriedSeaLevelWPerK, carried2400mWPerK } from '../checks/air';
 import type { PointConfig } from '@/lib/control/types';
-import { body, channel, house, MIN, Player, point, rule, S } from './house';
+import { body, channel, house, MIN, point, rule, S } from './house';
+import { Player } from './player';
 
 const derived = (key: string, of: string, points: string[], more: Partial<PointConfig> = {}) =>
   point(key, 'other', { derived: { of, points, ...(of === 'trend' ? { windowS: 600 } : {}) }, ...more });

@@ -1,7 +1,8 @@
 /** What somebody is told of while it stands, and no longer. */
 import { describe, expect, it } from 'vitest';
 import type { HouseConfig } from '@/lib/control/types';
-import { body, channel, house, MIN, Player, point, rest, rule, S, source } from './house';
+import { body, channel, house, MIN, point, rest, rule, S, source } from './house';
+import { Player } from './player';
 
 const cold = { bench: 3, air: 10, core: 50, base: 40 };
 const config = (more: Partial<HouseConfig> & { frostLimit?: number } = {}) =>

@@ -1,7 +1,8 @@
 /** Frost and the core's guard, on paper: a frost limit of 3 °C, a floor of 38 °C, ready over 50 °C for an hour. */
 import { describe, expect, it } from 'vitest';
 import type { ChannelConfig, HouseConfig } from '@/lib/control/types';
-import { body, channel, H, house, MIN, Player, point, rule, source } from './house';
+import { body, channel, H, house, MIN, point, rule, source } from './house';
+import { Player } from './player';
 import { hand, holds, prove, silent, speaking, type Play } from './table';
 
 const warm = { bench: 9, air: 9, core: 50, base: 45 };

@@ -1,6 +1,7 @@
 /** The thirteen situations that the ladder was drawn for, by name. */
 import { describe, expect, it } from 'vitest';
-import { body, channel, H, house, MIN, Player, point, rest, rule, S, source } from './house';
+import { body, channel, H, house, MIN, point, rest, rule, S, source } from './house';
+import { Player } from './player';
 
 const heap = (more = {}) => source('heap', { coreFloor: 38, ...more });
 const fan = (more = {}) =>

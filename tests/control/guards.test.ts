@@ -1,7 +1,8 @@
 /** Edges of source guard, frost and interlocks. */
 import { describe, expect, it } from 'vitest';
 import type { ChannelConfig, HouseConfig } from '@/lib/control/types';
-import { body, channel, H, house, MIN, Player, point, rest, rule, S, source } from './house';
+import { body, channel, H, house, interlock, MIN, point, rest, rule, S, source } from './house';
+import { Player } from './player';
 
 const warm = { bench: 9, air: 9, core: 50, base: 45, out: 5 };
 const one = (
@@ -118,19 +119,11 @@ describe('frost', () => {
 });
 
 describe('interlocks', () => {
-  const lock = (kind: 'never-with' | 'needs', delayS = 5) => ({
-    id: 'lock',
-    channel: 'a',
-    kind,
-    other: 'b',
-    delayS,
-    frostMayBreak: false,
-  });
   const pair = (kind: 'never-with' | 'needs', more: Partial<ChannelConfig> = {}, delayS = 5) =>
     house({
       channels: [channel('a', 1, more), channel('b', 2, more)],
       rules: [rule('a', body({ point: 'bench' })), rule('b', body({ point: 'air' }))],
-      interlocks: [lock(kind, delayS)],
+      interlocks: [interlock(kind, 'a', 'b', { delayS })],
     });
 
   it('never-with: of two that the band wants, the one that runs keeps; the other starts the delay after it is off', () => {

@@ -1,7 +1,8 @@
 /** What people order by hand, on paper; a frost limit of 3 °C where there is one. */
 import { describe, expect, it } from 'vitest';
 import type { ChannelConfig, HouseConfig } from '@/lib/control/types';
-import { body, channel, house, Player, rule, S } from './house';
+import { body, channel, house, rule, S } from './house';
+import { Player } from './player';
 import { hand, holds, silent, type Play } from './table';
 
 const warm = { bench: 9, air: 9, core: 50, base: 45 };

@@ -1,7 +1,8 @@
 /** Edges of lock-out, short-cycle, hand, limit and proving. */
 import { describe, expect, it } from 'vitest';
 import type { ChannelConfig, HouseConfig } from '@/lib/control/types';
-import { body, channel, H, house, MIN, Player, rule, S, source } from './house';
+import { body, channel, H, house, MIN, rule, S, source } from './house';
+import { Player } from './player';
 
 const warm = { bench: 9, air: 9, core: 50, base: 45, out: 5 };
 const one = (

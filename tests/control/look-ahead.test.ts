@@ -1,114 +1,13 @@
 /** Whatever `next` says would happen does happen, on random houses; and what it says of the clock comes by the clock. */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/because';
+import type { NextIf, NextReason, NextThen, NextWhen } from '@/lib/control/next';
 import { explain } from '@/lib/control/explain';
 import type { Memory } from '@/lib/control/memory';
 import { step } from '@/lib/control/step';
-import type { HouseConfig } from '@/lib/control/types';
-import { body, channel, house, Player, point, rest, rule, S, source } from './house';
-
-const among = <T>(...list: T[]) => fc.constantFrom(...list);
-/** So that nothing falls silent while readings are held. */
-const lasting = { staleAfterS: 10_000_000 };
-
-const houses: fc.Arbitrary<HouseConfig> = fc
-  .record({
-    ...{
-      minOnS: among(0, 120),
-      minOffS: among(0, 180),
-      longestDraw: among(600, 2400),
-      least: among(600, 1800),
-    },
-    ...{
-      most: fc.option(among(1800, 5400)),
-      frostMayBreak: fc.boolean(),
-      frostLimit: fc.option(among(2, 3)),
-    },
-    ...{ dailyLimitS: fc.option(among(900, 7200)), coreFloor: fc.option(among(38)), ready: fc.boolean() },
-    ...{ gain: fc.boolean(), only: fc.boolean(), longestOnS: fc.option(among(1200)), offset: among(0, -0.3) },
-    ...{ needs: fc.boolean(), delayS: among(0, 60), derived: fc.boolean() },
-  })
-  .map((given) => {
-    const { minOnS, minOffS, longestDraw, least, most, frostMayBreak } = given;
-    const drawn = rest(longestDraw, least, {
-      frostMayBreak,
-      ...(most === null ? {} : { until: { point: 'base', level: 43 }, most: Math.max(most, least) }),
-      ...(given.gain ? { leastGain: { kelvin: 3, after: 600, intake: 'air', return: 'return' } } : {}),
-    });
-    const only = {
-      any: [
-        { fact: 'core', operator: 'greaterThanInclusive' as const, value: 40 },
-        { fact: 'air', operator: 'lessThan' as const, value: 5 },
-      ],
-    };
-    const heap = { source: 'heap', minOnS, minOffS, frostHelp: true, longestOnS: given.longestOnS };
-    return house({
-      frostLimit: given.frostLimit,
-      points: [
-        ...[point('bench', 'bench', lasting), point('air', 'house-air', lasting)],
-        ...[point('core', 'heap-core', lasting), point('base', 'heap-base', lasting)],
-        point('return', 'loop-return', lasting),
-        point('mean', 'other', { ...lasting, derived: { of: 'mean', points: ['bench', 'air'] } }),
-      ],
-      sources: [
-        source('heap', {
-          ...{ dailyLimitS: given.dailyLimitS, coreFloor: given.coreFloor },
-          ready: given.ready ? { level: 45, forS: 3600 } : null,
-        }),
-      ],
-      channels: [
-        channel('fan', 1, { ...heap, highLimit: { point: 'air', above: 12 } }),
-        channel('vent', 2, { loadKind: 'vent', minOnS }),
-        channel('pump', 3),
-        channel('second', 4, { minOnS }),
-      ],
-      interlocks: [
-        {
-          id: 'a',
-          channel: 'vent',
-          kind: 'never-with',
-          other: 'fan',
-          delayS: given.delayS,
-          frostMayBreak: false,
-        },
-        ...(given.needs
-          ? [
-              {
-                id: 'b',
-                channel: 'second',
-                kind: 'needs' as const,
-                other: 'pump',
-                delayS: given.delayS,
-                frostMayBreak: false,
-              },
-            ]
-          : []),
-      ],
-      rules: [
-        rule(
-          'fan',
-          body({
-            rest: drawn,
-            ...(given.only ? { only } : {}),
-            standIns: [{ point: 'air', offset: given.offset }],
-          }),
-        ),
-        rule('vent', body({ purpose: 'cool', point: 'air', band: [{ from: '00:00', low: 8, high: 11 }] })),
-        rule('pump', body({ point: given.derived ? 'mean' : 'air' })),
-        rule(
-          'second',
-          body({
-            point: 'air',
-            band: [
-              { from: '00:00', low: 5, high: 9 },
-              { from: '02:00', low: 6, high: 9 },
-            ],
-          }),
-        ),
-      ],
-    });
-  });
+import { S } from './house';
+import { among, houses } from './look-ahead-houses';
+import { Player } from './player';
 
 const START_VALUES = { bench: 5, air: 8, core: 50, base: 40, return: 20 };
 const key = among('fan', 'vent', 'pump', 'second');

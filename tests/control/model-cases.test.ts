@@ -1,6 +1,7 @@
 /** What the model once found wrong, shrunk, as cases of their own. */
 import { expect, it } from 'vitest';
-import { body, channel, house, Player, rest, rule, S, source } from './house';
+import { body, channel, house, interlock, rest, rule, S, source } from './house';
+import { Player } from './player';
 
 const cold = { bench: 3, air: 10, core: 50, base: 40 };
 
@@ -37,9 +38,7 @@ it('a load that gives way in never-with is told of as switched off by the interl
   const config = house({
     channels: [channel('fan', 1), channel('vent', 2, { minOnS: 120 })],
     rules: [rule('fan', body()), rule('vent', body({ point: 'air' }))],
-    interlocks: [
-      { id: 'l', channel: 'vent', kind: 'never-with', other: 'fan', delayS: 5, frostMayBreak: false },
-    ],
+    interlocks: [interlock('never-with', 'vent', 'fan', { delayS: 5 })],
   });
   const player = new Player(config, { bench: 9, air: 3 });
   player.pass(30 * S);

@@ -1,7 +1,8 @@
 /** What must hold whatever happens, control.md's own exceptions written out. Reckoned from what is told, not as the core does. */
 import { expect } from 'vitest';
-import type { Claim, ControlEvent } from '@/lib/control/types';
-import type { Player } from './house';
+import type { ControlEvent } from '@/lib/control/events';
+import type { Claim } from '@/lib/control/types';
+import type { Player } from './player';
 
 /** Those that may draw under a spent credit or a spent day. `interlock` holds a needed channel on. */
 const DRAW_WITHOUT_CREDIT: Claim[] = ['hand', 'proving', 'short-cycle', 'frost', 'interlock'];

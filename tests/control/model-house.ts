@@ -1,7 +1,8 @@
 /** Random houses and what happens to them: readings, orders, times, restarts, reports, gaps. */
 import fc from 'fast-check';
 import type { HouseConfig, ObservedRelay } from '@/lib/control/types';
-import { body, channel, house, point, rest, rule, source, type Player } from './house';
+import { body, channel, house, interlock, point, rest, rule, source } from './house';
+import type { Player } from './player';
 
 const seconds = (...list: number[]) => fc.constantFrom(...list);
 
@@ -51,26 +52,8 @@ export const houses: fc.Arbitrary<HouseConfig> = fc
         channel('pump', 4, { minOnS, loadKind: given.heater ? 'heater' : 'motor' }),
       ],
       interlocks: [
-        {
-          id: 'never',
-          channel: 'vent',
-          kind: 'never-with',
-          other: 'fan',
-          delayS: given.delayS,
-          frostMayBreak: given.mayBreakLock,
-        },
-        ...(given.needs
-          ? [
-              {
-                id: 'needs',
-                channel: 'second',
-                kind: 'needs' as const,
-                other: 'pump',
-                delayS: given.delayS,
-                frostMayBreak: false,
-              },
-            ]
-          : []),
+        interlock('never-with', 'vent', 'fan', { delayS: given.delayS, frostMayBreak: given.mayBreakLock }),
+        ...(given.needs ? [interlock('needs', 'second', 'pump', { delayS: given.delayS })] : []),
       ],
       rules: [
         rule('fan', body({ rest: heapRest, standIns: [{ point: 'air', offset: -0.5 }] })),

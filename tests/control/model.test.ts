@@ -4,8 +4,9 @@ import { describe, expect, it } from 'vitest';
 import type { Memory } from '@/lib/control/memory';
 import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
-import type { ControlEvent, HouseConfig } from '@/lib/control/types';
-import { Player } from './house';
+import type { ControlEvent } from '@/lib/control/events';
+import type { HouseConfig } from '@/lib/control/types';
+import { Player } from './player';
 import { checkClaims, checkDraws, checkLeastOn, checkPairs, checkStanding } from './model-claims';
 import { act, AT_FIRST, deeds, houses, outside } from './model-house';
 

@@ -1,7 +1,8 @@
 /** Two that must never run together, on paper: a (bench) and b (air), 5 s apart unless said otherwise. */
 import { describe, expect, it } from 'vitest';
 import type { ChannelConfig, InterlockConfig } from '@/lib/control/types';
-import { body, channel, house, Player, rule, S } from './house';
+import { body, channel, house, rule, S } from './house';
+import { Player } from './player';
 import { hand, holds, lockOut, prove, reports, type Play } from './table';
 
 const warm = { bench: 9, air: 9 };

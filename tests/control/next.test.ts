@@ -2,7 +2,8 @@
 import { describe, expect, it } from 'vitest';
 import { explain } from '@/lib/control/explain';
 import type { HouseConfig } from '@/lib/control/types';
-import { body, channel, H, house, MIN, Player, point, rest, rule, S, source, START } from './house';
+import { body, channel, H, house, MIN, point, rest, rule, S, source, START } from './house';
+import { Player } from './player';
 
 const cold = { bench: 3, air: 8, core: 50, base: 40 };
 const heap = (more: Partial<HouseConfig> & { frostLimit?: number | null } = {}, rests = rest(2400, 1800)) =>

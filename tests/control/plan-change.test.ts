@@ -4,7 +4,8 @@ import { compile } from '@/lib/control/compile';
 import { MEMORY_VERSION, migrateMemory } from '@/lib/control/memory';
 import { step } from '@/lib/control/step';
 import type { HouseConfig } from '@/lib/control/types';
-import { body, channel, house, MIN, Player, point, rest, rule, S, source, START } from './house';
+import { body, channel, house, MIN, point, rest, rule, S, source, START } from './house';
+import { Player } from './player';
 
 const cold = { bench: 3, air: 10, core: 50, base: 40 };
 const config = (more: Partial<HouseConfig> = {}, own = rest(600, 1200)) =>

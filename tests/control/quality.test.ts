@@ -1,6 +1,7 @@
 /** Readings that cannot be trusted, by what they do to a fan that is on below 4 and off above 7.5 °C. */
 import { describe, expect, it } from 'vitest';
-import { body, house, MIN, Player, point, rule, S } from './house';
+import { body, house, MIN, point, rule, S } from './house';
+import { Player } from './player';
 
 const bench = (more = {}) => [point('bench', 'bench', more), point('air', 'house-air')];
 const played = (more = {}, ruleMore = {}, value = 5) =>

@@ -1,6 +1,7 @@
 /** Draws that a node tells of afterwards. Longest draw 20 min, rest 30 min, so a run of 10 min is worth half the credit. */
 import { describe, expect, it } from 'vitest';
-import { body, channel, H, house, MIN, Player, rest, rule, source, START } from './house';
+import { body, channel, H, house, MIN, rest, rule, source, START } from './house';
+import { Player } from './player';
 
 const played = (more: { dailyLimitS?: number } = {}) =>
   new Player(

@@ -1,7 +1,8 @@
 /** What each claim says of itself, whole: values, limits and instants, worked out on paper. */
 import { describe, expect, it } from 'vitest';
 import type { HouseConfig } from '@/lib/control/types';
-import { body, channel, house, MIN, Player, point, rest, rule, S, source, START } from './house';
+import { body, channel, house, MIN, point, rest, rule, S, source, START } from './house';
+import { Player } from './player';
 
 const at = (seconds: number) => START + seconds * S;
 const readings = { bench: 5, air: 10, core: 50, base: 40 };

@@ -1,7 +1,8 @@
 /** Which state of a load counts, on paper: a report for 25 s if it acknowledges, else what is wanted; a lease of 30 s. */
 import { describe, expect, it } from 'vitest';
 import type { ObservedRelay } from '@/lib/control/types';
-import { body, channel, house, Player, rest, rule, S, source, START } from './house';
+import { body, channel, house, rest, rule, S, source, START } from './house';
+import { Player } from './player';
 
 const config = (more = {}, restBody: ReturnType<typeof rest> | undefined = rest(600, 1200)) =>
   house({

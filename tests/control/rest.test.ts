@@ -1,6 +1,7 @@
 /** Draw credit and rest to the second, as tables of times. */
 import { describe, expect, it } from 'vitest';
-import { body, channel, H, house, MIN, Player, point, rest, rule, S, source } from './house';
+import { body, channel, H, house, MIN, point, rest, rule, S, source } from './house';
+import { Player } from './player';
 
 const cold = { bench: 3, air: 10, core: 50, base: 40 };
 const fan = (key: string, number: number, more = {}) => channel(key, number, { source: 'heap', ...more });

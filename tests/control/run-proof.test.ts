@@ -1,6 +1,7 @@
 /** The proof that a load runs: over 0.2 A. Credit of 20 min, rest of 30 min. */
 import { describe, expect, it } from 'vitest';
-import { body, channel, house, MIN, Player, point, rest, rule, S, source } from './house';
+import { body, channel, house, MIN, point, rest, rule, S, source } from './house';
+import { Player } from './player';
 
 const amps = point('amps', 'current', { unit: 'A', min: 0, max: 5 });
 const played = (values: Record<string, number>) =>

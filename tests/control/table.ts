@@ -1,7 +1,8 @@
 /** Situations as tables of times, each played in three ways that must end alike. */
 import { expect, it } from 'vitest';
 import type { HouseConfig, PersonCommand, State } from '@/lib/control/types';
-import { Player, S, START } from './house';
+import { S, START } from './house';
+import { Player } from './player';
 
 type Order = PersonCommand extends infer C
   ? C extends PersonCommand

@@ -2,7 +2,8 @@
 import { describe, expect, it } from 'vitest';
 import type { PointConfig } from '@/lib/control/types';
 import { FASTEST, ONE_WIRE_FAULTS } from '../checks/sensors';
-import { body, house, Player, point, rule, S, START } from './house';
+import { body, house, point, rule, S, START } from './house';
+import { Player } from './player';
 
 const played = (more: Partial<PointConfig> = {}, first = 3) => {
   const points = [point('bench', 'bench', more)];

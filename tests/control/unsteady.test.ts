@@ -1,6 +1,7 @@
 /** A point that comes and goes: silent after 90 s, by a fan that is on below 4 and off above 7.5 °C. */
 import { describe, expect, it } from 'vitest';
-import { body, house, MIN, Player, point, rule, S } from './house';
+import { body, house, MIN, point, rule, S } from './house';
+import { Player } from './player';
 
 const points = [point('bench', 'bench'), point('air', 'house-air')];
 const played = (standIn = false, more: { frostLimit?: number; bench?: number } = {}) => {

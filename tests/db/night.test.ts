@@ -8,7 +8,7 @@ import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
 import { writeRunning, type DecisionRow } from '@/db/queries/running';
 import { night as nightTable } from '@/db/schema/study';
 import { calibration, point } from '@/db/schema/yard';
-import { longHouse } from '@/db/seed/larkmoor';
+import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';
 import { nightNamed, nightsBetween } from '@/lib/analysis/night';

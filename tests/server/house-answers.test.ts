@@ -9,7 +9,7 @@ import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
 import { findRule } from '@/db/queries/rule';
 import { writeRunning, type DecisionRow } from '@/db/queries/running';
 import { point } from '@/db/schema/yard';
-import { longHouse } from '@/db/seed/larkmoor';
+import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';
 import { answersOf } from '@/lib/server/house-answers';

@@ -6,7 +6,7 @@ import { addPersonCommand } from '@/db/queries/person-command';
 import { touchPlan } from '@/db/queries/plan';
 import { organization } from '@/db/schema/auth';
 import { rule, ruleVersion } from '@/db/schema/rule';
-import type { DemoHouse } from '@/db/seed/larkmoor';
+import type { DemoHouse } from '@/db/seed/demo-house';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';
 import type { RuleBodyInput } from '@/lib/schema/rule';
 import type { SenmlRecord } from './outside-node';

@@ -43,12 +43,12 @@ describe('heat and power', () => {
   });
   it('read in watts, then in kilowatts', () =>
     expect([714.3, 12_345].map(format.power).map(spaced)).toEqual(['714 W', '12.3 kW']));
-  it('share, flow and length follow the reader', () => {
+  it('share, flow and altitude follow the reader', () => {
     expect(spaced(format.share(0.308))).toBe('31 %');
     expect(spaced(format.flow(0.0425, USUAL))).toBe('42.5 L/s');
     expect(spaced(format.flow(0.0425, american))).toBe('90 cfm');
-    expect(spaced(format.length(1.2, USUAL))).toBe('1.20 m');
-    expect(spaced(format.length(1.2, american))).toBe('3.9 ft');
+    expect(spaced(format.altitude(310, USUAL))).toBe('310 m');
+    expect(spaced(format.altitude(310, american))).toBe('1017 ft');
   });
 });
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { NextIf, NextReason } from '@/lib/control/because';
+import type { NextIf, NextReason } from '@/lib/control/next';
 import type { State } from '@/lib/control/types';
 import { nextSentence, nextWords } from '@/lib/wording/next';
 import { american, at, scene, spaced } from './scene';

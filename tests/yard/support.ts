@@ -3,7 +3,8 @@ import type { AddressInfo } from 'node:net';
 import { WebSocketServer, type WebSocket } from 'ws';
 import { parseNodeFrame, type Coils, type NodeFrame } from '@/lib/field/frames';
 import { AppTime, type Clock } from '@/worker/yard/clock';
-import { FieldNode, type KeptNode, type NodeParts } from '@/worker/yard/node';
+import { FieldNode } from '@/worker/yard/node';
+import type { KeptNode, NodeParts } from '@/worker/yard/node-parts';
 
 /** A clock that stands until it is told to go on; timers fire in their order, each at its own time. */
 export class FakeClock implements Clock {

@@ -2,7 +2,7 @@
 import type { AlarmAbout } from '@/db/queries/alarm';
 import type { HouseRecord, NodeWiring, PointWiring } from '@/db/queries/plan';
 import type { StepResult } from '@/lib/control/step-result';
-import type { Fault } from '@/lib/control/types';
+import type { Fault } from '@/lib/control/events';
 import type { AlarmKind } from '@/lib/schema/alarm';
 import type { NodeStanding } from '../control/state';
 

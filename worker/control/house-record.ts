@@ -2,7 +2,8 @@
 import { v7 } from 'uuid';
 import type { HouseHead, ChannelWiring } from '@/db/queries/plan';
 import type { DecisionRow, RelayReportRow, SwitchingRow } from '@/db/queries/running';
-import type { ControlEvent, Data, Explanation, State } from '@/lib/control/types';
+import type { ControlEvent, Explanation } from '@/lib/control/events';
+import type { Data, State } from '@/lib/control/types';
 import type { AloneChange } from './node-fallback';
 import { loadState, type Report, type Trip } from './node-relays';
 

@@ -16,8 +16,8 @@ import {
 } from '@/lib/field/frames';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
+import type { CommandLink } from '../control/command-link';
 import type { House } from '../control/house';
-import type { CommandLink } from '../control/house-nodes';
 import { rawText } from '../raw-text';
 import type { Ingest } from './ingest';
 import { takePack } from './intake';

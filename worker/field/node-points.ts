@@ -3,7 +3,8 @@ import type { PointWiring } from '@/db/queries/plan';
 import type { ReadingRow } from '@/db/queries/reading-write';
 import type { PackPoint } from '@/lib/field/pack';
 import { pointUnits, type PointUnit } from '@/lib/field/units';
-import type { PointConfig, PointResult } from '@/lib/control/types';
+import type { PointResult } from '@/lib/control/step-result';
+import type { PointConfig } from '@/lib/control/types';
 
 const QUALITY = { good: 0, uncertain: 1, bad: 2 } as const;
 

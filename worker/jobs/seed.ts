@@ -6,8 +6,10 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
 import { closePools } from '@/db/client';
+import type { DemoHouse } from '@/db/seed/demo-house';
 import { writeHeapYear, writeMaterials } from '@/db/seed/heap-year';
-import { longHouse, propHouse, type DemoHouse } from '@/db/seed/larkmoor';
+import { longHouse } from '@/db/seed/long-house';
+import { propHouse } from '@/db/seed/prop-house';
 import {
   markReady,
   passwordIsSeeded,

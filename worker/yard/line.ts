@@ -12,6 +12,7 @@ import {
   takenOverWaitMs,
 } from '@/lib/field/frames';
 import type { Clock } from './clock';
+import { Timers } from './timers';
 
 const backOffLeastMs = 1_000;
 const backOffMostMs = 30_000;
@@ -29,7 +30,7 @@ export class Line {
   private attempts = 0;
   private heardMs = 0;
   private stopped = false;
-  private timers = new Map<'dial' | 'ping' | 'silence', () => void>();
+  private readonly timers: Timers<'dial' | 'ping' | 'silence'>;
 
   /** @param server `ws://` or `wss://` origin, without the path */
   constructor(
@@ -37,7 +38,9 @@ export class Line {
     private readonly token: string,
     private readonly clock: Clock,
     private readonly events: LineEvents,
-  ) {}
+  ) {
+    this.timers = new Timers((ms, then) => clock.after(ms, then));
+  }
 
   dial(): void {
     if (this.stopped || this.socket !== undefined) return;
@@ -88,18 +91,17 @@ export class Line {
 
   stop(): void {
     this.stopped = true;
-    for (const cancel of this.timers.values()) cancel();
-    this.timers.clear();
+    this.timers.cancelAll();
     this.socket?.close(1000);
   }
 
   private down(socket: WebSocket, code: number, why: string): void {
     if (this.socket !== socket) return;
     this.socket = undefined;
-    this.cancel('ping');
-    this.cancel('silence');
+    this.timers.cancel('ping');
+    this.timers.cancel('silence');
     const waitMs = code === closeCode.takenOver ? takenOverWaitMs : this.backOffMs();
-    if (!this.stopped) this.set('dial', waitMs, () => this.dial());
+    if (!this.stopped) this.timers.set('dial', waitMs, () => this.dial());
     this.events.closed(code, why, waitMs);
   }
 
@@ -111,7 +113,7 @@ export class Line {
   }
 
   private keepAlive(socket: WebSocket): void {
-    this.set('ping', pingEveryMs, () => {
+    this.timers.set('ping', pingEveryMs, () => {
       if (socket.readyState === WebSocket.OPEN) socket.ping();
       this.keepAlive(socket);
     });
@@ -120,16 +122,6 @@ export class Line {
   private watchSilence(socket: WebSocket): void {
     const leftMs = this.heardMs + silenceMs - this.clock.monotonicMs();
     if (leftMs <= 0) socket.terminate();
-    else this.set('silence', leftMs, () => this.watchSilence(socket));
-  }
-
-  private set(name: 'dial' | 'ping' | 'silence', ms: number, then: () => void): void {
-    this.cancel(name);
-    this.timers.set(name, this.clock.after(ms, then));
-  }
-
-  private cancel(name: 'dial' | 'ping' | 'silence'): void {
-    this.timers.get(name)?.();
-    this.timers.delete(name);
+    else this.timers.set('silence', leftMs, () => this.watchSilence(socket));
   }
 }

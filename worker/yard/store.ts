@@ -5,7 +5,7 @@ import { z } from 'zod';
 import { fallbackSetting } from '@/lib/field/frames';
 import { yardHouses } from './catalogue';
 import { flowNames } from './house-world';
-import type { KeptNode } from './node';
+import type { KeptNode } from './node-parts';
 import type { World } from './world';
 
 const finite = z.number();

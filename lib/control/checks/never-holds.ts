@@ -2,7 +2,7 @@
  * Whether a tree of conditions can hold for any values at all. Each fact is narrowed to the intervals that the
  * conditions leave it; a branch dies when one of them is left with nothing.
  */
-import type { Condition, ConditionNode, Operator } from '../rule-body';
+import { OPPOSITE, type Condition, type ConditionNode, type Operator } from '../rule-body';
 
 /** A stretch of numbers; ends that are open do not belong to it. */
 interface Stretch {
@@ -13,17 +13,6 @@ interface Stretch {
 }
 /** What is left of each fact. */
 export type Domains = Map<string, Stretch[]>;
-
-const OPPOSITE: Record<Operator, Operator> = {
-  equal: 'notEqual',
-  notEqual: 'equal',
-  lessThan: 'greaterThanInclusive',
-  lessThanInclusive: 'greaterThan',
-  greaterThan: 'lessThanInclusive',
-  greaterThanInclusive: 'lessThan',
-  in: 'notIn',
-  notIn: 'in',
-};
 
 const EVERYTHING: Stretch[] = [{ low: -Infinity, lowOpen: true, high: Infinity, highOpen: true }];
 const single = (value: number): Stretch => ({ low: value, lowOpen: false, high: value, highOpen: false });

@@ -7,7 +7,7 @@ export const GET = serve(listHouses, async ({ holding, query }) => ({
   body: pageOf(await houses.listHouses(holding), query),
 }));
 
-export const POST = serve(createHouse, async ({ holding, body }) => ({
+export const POST = serve(createHouse, async ({ holding, body, now }) => ({
   status: 201,
-  body: await houses.createHouse(holding, body),
+  body: await houses.createHouse(holding, body, now),
 }));

@@ -1,11 +1,11 @@
 import { pageOf } from '@/db/queries/page';
-import * as people from '@/db/queries/people';
+import * as invitations from '@/db/queries/invitation';
 import { serve } from '@/lib/server/guard';
 import { createInvitation, listInvitations } from '@/lib/server/operations/people';
 import { invitationAnswer, invite } from '@/lib/server/people';
 
 export const GET = serve(listInvitations, async ({ holding, query }) => ({
-  body: pageOf((await people.listInvitations(holding, new Date())).map(invitationAnswer), query),
+  body: pageOf((await invitations.listInvitations(holding, new Date())).map(invitationAnswer), query),
 }));
 
 export const POST = serve(createInvitation, async ({ holding, body, caller }) => {

@@ -1,5 +1,5 @@
 import { pageOf } from '@/db/queries/page';
-import { listMembers } from '@/db/queries/people';
+import { listMembers } from '@/db/queries/member';
 import { serve } from '@/lib/server/guard';
 import { listPeople } from '@/lib/server/operations/people';
 import { memberAnswer } from '@/lib/server/people';

@@ -6,8 +6,8 @@ import { amendHouse, getHouse, removeHouse } from '@/lib/server/operations/yard'
 
 export const GET = serve(getHouse, ({ things }) => ({ body: things.house }));
 
-export const PATCH = serve(amendHouse, async ({ holding, things, body }) => ({
-  body: await houses.amendHouse(holding, things.house.id, merged(HouseCreate, things.house, body)),
+export const PATCH = serve(amendHouse, async ({ holding, things, body, now }) => ({
+  body: await houses.amendHouse(holding, things.house.id, merged(HouseCreate, things.house, body), now),
 }));
 
 export const DELETE = serve(removeHouse, async ({ holding, things, now }) => {

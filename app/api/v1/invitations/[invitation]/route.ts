@@ -1,8 +1,8 @@
-import * as people from '@/db/queries/people';
+import * as invitations from '@/db/queries/invitation';
 import { serve } from '@/lib/server/guard';
 import { cancelInvitation } from '@/lib/server/operations/people';
 
 export const DELETE = serve(cancelInvitation, async ({ holding, things }) => {
-  await people.cancelInvitation(holding, things.invitation.id);
+  await invitations.cancelInvitation(holding, things.invitation.id);
   return { subject: things.invitation.email };
 });

@@ -1,0 +1,119 @@
+/** One node under control: its relays, its link, and what its row keeps of it. */
+import type { ChannelWiring, NodeWiring } from '@/db/queries/plan';
+import type { State } from '@/lib/control/types';
+import type { BootId, HelloFrame, RefusedRecord } from '@/lib/field/frames';
+import type { CommandLink } from './command-link';
+import type { ControlledHouse, HouseDeps } from './house-deps';
+import { keptAlone, NodeFallback } from './node-fallback';
+import { NodeLogs } from './node-logs';
+import { NodeOrders } from './node-orders';
+import { refusalsOfBoot, withRefused } from './node-refusals';
+import { NodeRelays, loadState } from './node-relays';
+import type { NodeStanding } from './state';
+
+export class AttachedNode {
+  readonly relays: NodeRelays;
+  readonly fallback: NodeFallback;
+  readonly logs = new NodeLogs();
+  readonly orders: NodeOrders;
+  readonly standing: NodeStanding;
+  link: CommandLink | null = null;
+  /** Relays that the node itself says it has. */
+  relayCount: number;
+  private status: Record<string, unknown>;
+  /** There is something worth keeping in the node's row that has not been kept. */
+  private isNoted = false;
+
+  /** @param known states of loads as last known, by channel */
+  constructor(
+    public wiring: NodeWiring,
+    private readonly house: ControlledHouse,
+    formerLeaseEnd: number | null,
+    known: ReadonlyMap<string, State>,
+    deps: HouseDeps,
+  ) {
+    const channels = this.channels();
+    const coils = channels.flatMap((channel) => {
+      const state = known.get(channel.id);
+      // loadState is its own inverse: what turns a coil into a load turns a load into a coil.
+      return state === undefined ? [] : [[String(channel.relay), loadState(channel, state)] as const];
+    });
+    this.relays = new NodeRelays(
+      channels,
+      formerLeaseEnd,
+      keptTrips(wiring.status),
+      Object.fromEntries(coils),
+    );
+    this.standing = {
+      online: false,
+      lastHeardAt: wiring.lastHeardAt,
+      isCloned: false,
+      isEpochTooFar: false,
+    };
+    this.fallback = new NodeFallback(() => this.channels(), keptAlone(wiring.status));
+    this.orders = new NodeOrders(this.relays, () => this.link, house, deps);
+    this.relayCount = wiring.channels;
+    this.status = wiring.status;
+  }
+
+  /** The channels wired to it, by the house's record of now. */
+  channels(): ChannelWiring[] {
+    return this.house.record.channels.filter((one) => one.nodeId === this.wiring.id);
+  }
+
+  rewire(wiring: NodeWiring): void {
+    this.wiring = wiring;
+    this.relays.rewire(this.channels());
+  }
+
+  attach(link: CommandLink): void {
+    this.link = link;
+    this.standing.online = true;
+  }
+
+  detach(): void {
+    this.link = null;
+    this.standing.online = false;
+  }
+
+  heard(now: number): void {
+    this.standing.lastHeardAt = now;
+    this.isNoted = true;
+  }
+
+  greet(hello: HelloFrame, at: number): void {
+    const { firmware, channels, clock } = hello;
+    this.status = {
+      ...this.status,
+      ...refusalsOfBoot(this.status, hello.boot),
+      firmware,
+      channels,
+      clockErrorS: clock === null ? null : clock - at / 1000,
+      can: hello.can ?? [],
+    };
+    this.relayCount = channels;
+    this.isNoted = true;
+  }
+
+  tookPack(refused: readonly RefusedRecord[], now: number): void {
+    this.heard(now);
+    this.status = { ...this.status, ...withRefused(this.status, refused, now) };
+  }
+
+  /** What has changed since the last call, for its row; null where nothing has. */
+  takeNote(): { lastHeardAt: number; status: Record<string, unknown> } | null {
+    const { lastHeardAt } = this.standing;
+    if (!this.isNoted || lastHeardAt === null) return null;
+    this.isNoted = false;
+    return {
+      lastHeardAt,
+      status: { ...this.status, ...this.relays.status(), ...this.fallback.status() },
+    };
+  }
+}
+
+function keptTrips(status: Record<string, unknown>): { boot: BootId; trips: number } | null {
+  const { boot, trips } = status;
+  const isBoot = typeof boot === 'string' || typeof boot === 'number';
+  return isBoot && typeof trips === 'number' ? { boot, trips } : null;
+}
