@@ -20,6 +20,8 @@ export function HeatChart({ name, nights }: { name: string; nights: readonly Nig
     .range([HEIGHT - FOOT, 8]);
   const step = (WIDTH - LEFT) / Math.max(nights.length, 1);
   const middle = (at: number) => LEFT + (at + 0.5) * step;
+  // few nights stay bars, not blocks
+  const thick = Math.min(step * 0.7, 36);
   const every = Math.max(1, Math.ceil(nights.length / 8));
   const text = 'fill-soft font-mono text-[11px]';
   const words = nights.map(
@@ -49,8 +51,8 @@ export function HeatChart({ name, nights }: { name: string; nights: readonly Nig
             {heat === null ? null : (
               <>
                 <rect
-                  x={middle(at) - step * 0.35}
-                  width={step * 0.7}
+                  x={middle(at) - thick / 2}
+                  width={thick}
                   y={Math.min(y(heat.kWh), y(0))}
                   height={Math.abs(y(0) - y(heat.kWh))}
                   className="fill-ember"

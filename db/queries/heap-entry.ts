@@ -8,8 +8,9 @@ import { source } from '@/db/schema/yard';
 import type { HeapEntryCreate } from '@/lib/schema/heap';
 import { HeapEntry, type Photograph } from '@/lib/schema/heap-view';
 import { photographsOf } from './attachment';
+import { doneAt, heapId } from './heap-record-of';
 import { cut, type Listed, type Page } from './page';
-import { houseNames, isId } from './reference';
+import { isId } from './reference';
 import { Refusal } from './refusal';
 
 type Given = z.infer<typeof HeapEntryCreate>;
@@ -111,14 +112,14 @@ export async function createHeapEntry(
   given: Given,
   act: Act,
 ): Promise<{ entry: HeapEntry; isRepeat: boolean }> {
-  const sourceId = (await houseNames(holding, houseId)).sources.find(given.source, 'source').id;
+  const sourceId = await heapId(holding, houseId, given.source);
   const id = given.id ?? uuid();
   const written = await holding.db
     .insert(heapEntry)
     .values({
       ...columns(given),
       ...{ id, sourceId, holdingId: holding.id, by: act.by, enteredAt: act.now },
-      at: given.at === undefined ? act.now : new Date(given.at),
+      at: doneAt(given.at, act.now),
     })
     .onConflictDoNothing()
     .returning({ id: heapEntry.id });
@@ -139,7 +140,7 @@ export async function amendHeapEntry(
     .update(heapEntry)
     .set({
       ...columns(given),
-      ...(given.at === undefined ? {} : { at: new Date(given.at) }),
+      ...(given.at === undefined ? {} : { at: doneAt(given.at, act.now) }),
       ...{ amendedBy: act.by, amendedAt: act.now, revision: sql`${heapEntry.revision} + 1` },
     })
     .where(and(eq(heapEntry.holdingId, holding.id), eq(heapEntry.id, id)));

@@ -21,9 +21,7 @@ export async function recoveryOfHeap(
   const { ratioPerWeek } = recoveryTrend(weeks);
   return {
     weeks: weeks.flatMap(({ from, to, recovery }) =>
-      recovery === null
-        ? []
-        : [{ at: (from + to) / 2, tauS: recovery.tau.value, tauSdS: recovery.tau.sd }],
+      recovery === null ? [] : [{ at: (from + to) / 2, tauS: recovery.tau.value, tauSdS: recovery.tau.sd }],
     ),
     ratioPerWeek:
       ratioPerWeek === null || ratioPerWeek.low === null || ratioPerWeek.high === null

@@ -6,8 +6,9 @@ import type { Holding } from '@/db/client';
 import { probeSet } from '@/db/schema/heap';
 import { source } from '@/db/schema/yard';
 import { ProbeSet, type ProbeSetAmend, type ProbeSetCreate } from '@/lib/schema/probe-set';
+import { doneAt, heapId } from './heap-record-of';
 import { cut, type Listed, type Page } from './page';
-import { houseNames, isId } from './reference';
+import { isId } from './reference';
 import { Refusal } from './refusal';
 
 type Given = z.infer<typeof ProbeSetCreate>;
@@ -75,14 +76,14 @@ export async function createProbeSet(
   given: Given,
   act: Act,
 ): Promise<{ round: ProbeSet; isRepeat: boolean }> {
-  const sourceId = (await houseNames(holding, houseId)).sources.find(given.source, 'source').id;
+  const sourceId = await heapId(holding, houseId, given.source);
   const id = given.id ?? uuid();
   const { section, places, text } = given;
   const written = await holding.db
     .insert(probeSet)
     .values({
       ...{ holdingId: holding.id, id, sourceId, section, places, text, by: act.by, enteredAt: act.now },
-      at: given.at === undefined ? act.now : new Date(given.at),
+      at: doneAt(given.at, act.now),
     })
     .onConflictDoNothing()
     .returning({ id: probeSet.id });
@@ -103,7 +104,7 @@ export async function amendProbeSet(
     .update(probeSet)
     .set({
       ...{ section, places, text, amendedBy: act.by, amendedAt: act.now },
-      ...(at === undefined ? {} : { at: new Date(at) }),
+      ...(at === undefined ? {} : { at: doneAt(at, act.now) }),
       revision: sql`${probeSet.revision} + 1`,
     })
     .where(and(eq(probeSet.holdingId, holding.id), eq(probeSet.id, id)));

@@ -7,7 +7,7 @@ import type { Db, Holding } from '@/db/client';
 import { reportSchedule, reportSent } from '@/db/schema/report';
 import { house } from '@/db/schema/yard';
 import { ReportSchedule, type ReportScheduleCreate } from '@/lib/schema/report';
-import { listMembers } from './people';
+import { listMembers } from './member';
 import { isId } from './reference';
 import { Refusal } from './refusal';
 

@@ -7,7 +7,7 @@ import { HeapJobCreate } from '@/lib/schema/heap-job';
 import { MaterialCreate } from '@/lib/schema/material';
 import { toLocal } from '@/lib/units/local-time';
 import { JOB_TEMPLATES, nextDay } from '@/lib/wording/heap-jobs';
-import type { DemoHouse } from './larkmoor';
+import type { DemoHouse } from './demo-house';
 
 const DAY_MS = 86_400_000;
 

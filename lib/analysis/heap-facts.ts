@@ -46,6 +46,17 @@ export type FindingBody =
   | { kind: 'too-hot'; celsius: number; from: 'core' | 'probes'; limit: number }
   | { kind: 'uneven'; hottestC: number; coldestC: number };
 
+export const FINDING_KINDS = [
+  'core-falls',
+  'recovery-slower',
+  'dry',
+  'wet',
+  'cn-low',
+  'cn-high',
+  'too-hot',
+  'uneven',
+] as const satisfies FindingBody['kind'][];
+
 export type Finding = FindingBody & {
   urgency: Urgency;
   sure: Sureness;

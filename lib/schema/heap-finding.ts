@@ -1,10 +1,11 @@
 import { z } from 'zod';
+import { FINDING_KINDS } from '@/lib/analysis/heap-facts';
 import { listOf, Why } from './common';
 
 /** A finding is set aside by naming it with the evidence it stood on, as it was read. */
 export const DismissalCreate = z.strictObject({
   source: z.string().min(1).max(140),
-  kind: z.string().min(1).max(40),
+  kind: z.enum(FINDING_KINDS),
   mark: z.string().min(1).max(200),
   level: z.number(),
   why: Why,

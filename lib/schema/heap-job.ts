@@ -6,7 +6,7 @@ export const HEAP_JOB_KINDS = ['build', 'first-frost', 'spring', 'rebuild', 'own
 const Day = z.iso
   .date({ error: 'Give a day as YYYY-MM-DD.' })
   .refine((value) => value >= '1970' && value < '2200', {
-    message: 'Give a day between 1970 and 2200.',
+    error: 'Give a day between 1970 and 2200.',
   });
 const Line = z.string().trim().min(1, 'Say what is to be done.').max(200, 'At most 200 characters.');
 

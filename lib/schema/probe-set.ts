@@ -1,8 +1,7 @@
 import { z } from 'zod';
 import { Celsius, finite, Instant, listOf, PageQuery, Text, Uuid } from './common';
 
-const whole = (least: number, most: number) =>
-  z.number({ error: 'Give a whole number.' }).int('Give a whole number.').min(least).max(most);
+const whole = (least: number, most: number) => z.number().int('Give a whole number.').min(least).max(most);
 const Side = z.string().trim().max(20, 'At most 20 characters.');
 
 /** The section of a heap in which a round is probed. */

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { listOf } from './common';
+import { Email } from './people';
 
 export const SPANS = ['week', 'month', 'winter'] as const;
 export type ReportSpan = (typeof SPANS)[number];
@@ -15,7 +16,7 @@ const Sections = z
 export const ReportScheduleCreate = z.strictObject({
   span: z.enum(SPANS),
   sections: Sections.default([...SECTIONS]),
-  to: z.array(z.email().max(254)).min(1, 'Choose who gets it.').max(20),
+  to: z.array(Email).min(1, 'Choose who gets it.').max(20),
 });
 export const ReportSchedule = z.strictObject({
   id: z.string(),

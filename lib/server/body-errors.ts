@@ -67,6 +67,8 @@ export function sayPlainly(issue: z.core.$ZodRawIssue): string | undefined {
       return issue.origin === 'number' || issue.origin === 'int'
         ? `At most ${String(issue.maximum)}.`
         : `At most ${counted(Number(issue.maximum), issue.origin)}.`;
+    case 'invalid_format':
+      return FORMATS[issue.format];
     default:
       return undefined;
   }
@@ -76,6 +78,11 @@ function counted(many: number, origin: string): string {
   const [one, more] = origin === 'string' ? ['character', 'characters'] : ['entry', 'entries'];
   return `${many} ${many === 1 ? one : more}`;
 }
+
+const FORMATS: Record<string, string> = {
+  email: 'Give an e-mail address, such as name@example.org.',
+  uuid: 'Give a UUID.',
+};
 
 const KINDS: Record<string, string> = {
   string: 'text',

@@ -37,8 +37,9 @@ export function parseJson(text: string): unknown {
   } catch {
     throw refuse(text.trim() === '' ? 'This request needs a body in JSON.' : 'The body is not valid JSON.');
   }
-  // NUL and halves of a surrogate pair are valid JSON, and PostgreSQL takes neither in text.
-  if (/[\0\p{Surrogate}]/u.test(everyText(value)))
+  // NUL and halves of a surrogate pair are valid JSON, and PostgreSQL takes neither in text. What turns the direction of
+  // writing would turn other words of a page or a message with it.
+  if (/[\0\p{Surrogate}\u202a-\u202e\u2066-\u2069]/u.test(everyText(value)))
     throw refuse('The body holds a character that cannot be kept.');
   return value;
 }

@@ -7,7 +7,7 @@ import { refreshNights } from '@/db/queries/night-making';
 import { readSeries } from '@/db/queries/reading';
 import { rollUp, storeReadings } from '@/db/queries/reading-write';
 import { channel, point } from '@/db/schema/yard';
-import { longHouse } from '@/db/seed/larkmoor';
+import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';
 import { nightNamed } from '@/lib/analysis/night';

@@ -18,7 +18,7 @@ beforeAll(async () => {
   stonebeck = await createHolding('Stonebeck', 'stonebeck');
   for (const id of [larkmoor, stonebeck]) {
     await inHolding(id, async (holding) => {
-      await createHouse(holding, house);
+      await createHouse(holding, house, new Date());
       await addAudit(holding, { at: new Date(), by: 'test', action: 'test', subject: id, detail: {} });
     });
   }
@@ -87,7 +87,7 @@ test("a change without a clause of its own touches its own holding only, and ano
     { holding_id: stonebeck, name: 'House' },
     { holding_id: larkmoor, name: 'touched' },
   ]);
-  const smuggled = inHolding(larkmoor, ({ db }) => createHouse({ id: stonebeck, db }, house));
+  const smuggled = inHolding(larkmoor, ({ db }) => createHouse({ id: stonebeck, db }, house, new Date()));
   await expect(smuggled).rejects.toThrow();
 });
 

@@ -6,7 +6,7 @@
 import { inHolding, type Db } from '@/db/client';
 import { findHouse } from '@/db/queries/house';
 import { refreshNights } from '@/db/queries/night-making';
-import { listMembers } from '@/db/queries/people';
+import { listMembers } from '@/db/queries/member';
 import { readPreferences } from '@/db/queries/preferences';
 import { readReport } from '@/db/queries/report-page';
 import {

@@ -2,7 +2,7 @@ import type { Metadata } from 'next';
 import { readReportAddress } from '@/components/reports/address';
 import { ReportView } from '@/components/reports/report-view';
 import { inHolding } from '@/db/client';
-import { listMembers } from '@/db/queries/people';
+import { listMembers } from '@/db/queries/member';
 import { readPreferences } from '@/db/queries/preferences';
 import { readReport, readReports } from '@/db/queries/report-page';
 import { listReportSchedules } from '@/db/queries/report-schedule';
