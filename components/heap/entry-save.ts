@@ -24,7 +24,7 @@ export async function saveEntry(
     ...(photographs === undefined ? {} : { photographs }),
   };
   if (!judged.ok || photographs !== undefined)
-    return { ok: false, message: 'One thing is not right yet; see the field.', fields };
+    return { ok: false, message: 'Not right yet: see what is marked.', fields };
   const path = `/houses/${house}/heap-entries`;
   const label = `${kindWord(kind)}, ${draft.at.replace('T', ', ')}`;
   const writtenAt = Date.now();

@@ -39,7 +39,7 @@ export function OwnMaterialForm({ onClose }: { onClose: () => void }) {
         ]),
       ),
     );
-    if (!body.success) return setFailure('One thing is not right yet; see the field.');
+    if (!body.success) return setFailure('Not right yet: see what is marked.');
     setBusy(true);
     const answer = await send('POST', '/materials', body.data);
     setBusy(false);

@@ -99,7 +99,7 @@ export function judgeRound(draft: RoundDraft, heap: string, preferences: Prefere
       message:
         wrong.length > 0
           ? 'One place holds no temperature that can be; it is marked.'
-          : (fields['places'] ?? 'One thing is not right yet; see the field.'),
+          : (fields['places'] ?? 'Not right yet: see what is marked.'),
       ...{ fields, places: wrong },
     };
   return { ok: true, body: body.data };

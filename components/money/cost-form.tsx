@@ -46,7 +46,7 @@ export function CostForm({
     setErrors(
       Object.fromEntries((body.error?.issues ?? []).map((one) => [String(one.path.at(-1)), one.message])),
     );
-    setFailure(body.success ? '' : 'One thing is not right yet; see the field.');
+    setFailure(body.success ? '' : 'Not right yet: see what is marked.');
     if (!body.success) return;
     setBusy(true);
     const answer = await send('POST', `/houses/${house}/heap-costs`, body.data);

@@ -29,7 +29,7 @@ export function PricesPanel({
   async function save() {
     const told = bodyOfPrices(draft, book.revision);
     setErrors(told.ok ? {} : told.fields);
-    setFailure(told.ok ? '' : 'One thing is not right yet; see the field.');
+    setFailure(told.ok ? '' : 'Not right yet: see what is marked.');
     if (!told.ok) return;
     setBusy(true);
     const answer = await send('PUT', '/money', told.body);

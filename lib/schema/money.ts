@@ -25,6 +25,9 @@ const Band = z.strictObject({ from: ClockTime, to: ClockTime, days: z.enum(DAYS)
 export const TariffBody = z.strictObject({ from: Day, price: Price, bands: z.array(Band).max(12) });
 export type TariffBody = z.infer<typeof TariffBody>;
 
+/** A share in a body, per cent in the form. */
+const EFFICIENCY = 'What becomes heat is a share from 5 to 110 %, 0.05 to 1.1.';
+
 export const FuelBody = z
   .strictObject({
     fuel: z.enum(FUELS),
@@ -32,7 +35,7 @@ export const FuelBody = z
     price: Price,
     /** Energy in a unit; null takes the published figure. */
     kWh: finite(0.1, 20_000, 'kWh').nullable(),
-    efficiency: finite(0.05, 1.1, 'of 1'),
+    efficiency: z.number({ error: EFFICIENCY }).min(0.05, EFFICIENCY).max(1.1, EFFICIENCY),
   })
   .refine(({ fuel, unit }) => FUEL_UNITS[fuel].some((one) => one.unit === unit), {
     path: ['unit'],

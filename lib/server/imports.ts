@@ -85,7 +85,11 @@ export async function previewImport(
   const points = measured(await listPoints(holding, house.id));
   const columns = guess.columns.filter((column) => column.isTime || isNumeric(column, guess.layout.decimal));
   const layout = { ...guess.layout, columns: given?.columns ?? matchColumns(columns, points) };
-  const first = layout.columns[0] ?? { column: layout.timeColumns[0] ?? 0, point: '', unit: 'Cel' as const };
+  // what is looked at is the times, so while no column is put to a point any column of numbers will do
+  const numbers = columns.find((column) => !column.isTime);
+  const first = layout.columns[0] ?? {
+    ...{ column: numbers?.column ?? 0, point: numbers?.head ?? '', unit: 'Cel' as const },
+  };
   const target = { key: first.point, number: 0, unit: '', min: null, max: null };
   // any number of a point will do: what is looked at is the times
   const reader = new LoggerReader(

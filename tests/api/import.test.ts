@@ -175,6 +175,15 @@ describe('before anything is written', () => {
     expect((await grower.get(path)).status).toBe(404);
   });
 
+  it('while no column is put to a point the times are shown, and a line is blamed by its column’s head', async () => {
+    const path = await sent('Date;Time;Luft\n01.11.2026;00:00;5,1\n01.11.2026;00:10;warm\n');
+    expect(await previewed(path)).toMatchObject({
+      times: ['2026-11-01T00:00:00.000+00:00'],
+      faults: [{ line: 3, why: '"warm" in column 3 is no value for Luft.' }],
+    });
+    await grower.ask('DELETE', path);
+  });
+
   it('lines whose time comes twice are told with how they are read', async () => {
     const path = await sent(`${HEAD}2025-10-26 01:30;4\n2025-10-26 01:30;5\n`);
     const { layout } = await previewed(path);

@@ -129,7 +129,10 @@ async function bring(deps: ImportDeps, work: ImportWork): Promise<void> {
     // what an earlier try has brought is read again, for the order of the lines, and not stored again
     if (reader.lines <= work.doneLines) [reader.readings, reader.faults, reader.doubts] = [[], [], []];
     if (reader.readings.length + reader.faults.length < ROWS_A_PART) continue;
-    if (!deps.isLeading() || !(await store(done))) return;
+    if (deps.isLeading() && (await store(done))) continue;
+    // who goes on from here must find what was being stored, or would count it as duplicates
+    await storing;
+    return;
   }
   reader.end();
   if (!(await store(work.bytes)) || !(await storing)) return;
