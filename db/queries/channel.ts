@@ -3,7 +3,7 @@ import { and, asc, eq, or, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { channel, interlock, loop } from '@/db/schema/yard';
+import { channel, interlock, loop } from '@/db/schema/channel';
 import type { ChannelCreate } from '@/lib/schema/yard';
 import { Channel } from '@/lib/schema/yard-view';
 import { ofARun, ofOwnNode } from './channel-points';

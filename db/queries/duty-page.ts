@@ -2,7 +2,7 @@
 import { and, asc, eq, gte, inArray, isNull, lt } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { heapEntry } from '@/db/schema/heap';
-import { channel, source } from '@/db/schema/yard';
+import { channel, source } from '@/db/schema/channel';
 import { nightNamed } from '@/lib/analysis/night';
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { State } from '@/lib/control/types';

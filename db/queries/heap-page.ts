@@ -1,7 +1,8 @@
 /** What the page Heap book shows: one heap, what was done to it, and how its core went. */
 import { and, asc, desc, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { calibration, point, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { calibration, point } from '@/db/schema/node';
 import { reading } from '@/db/series';
 import { coreTrend, type CoreTrend } from '@/lib/analysis/core';
 import type { HeapEntry } from '@/lib/schema/heap-view';

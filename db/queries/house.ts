@@ -3,7 +3,7 @@ import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { house } from '@/db/schema/yard';
+import { house } from '@/db/schema/house';
 import type { HouseCreate } from '@/lib/schema/yard';
 import type { House } from '@/lib/schema/yard-view';
 import { toLocal } from '@/lib/units/local-time';

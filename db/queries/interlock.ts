@@ -3,7 +3,7 @@ import { and, asc, eq, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { interlock } from '@/db/schema/yard';
+import { interlock } from '@/db/schema/channel';
 import type { InterlockCreate } from '@/lib/schema/yard';
 import { Interlock } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';

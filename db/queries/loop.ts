@@ -3,7 +3,7 @@ import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { loop } from '@/db/schema/yard';
+import { loop } from '@/db/schema/channel';
 import type { LoopCreate } from '@/lib/schema/yard';
 import type { Loop } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';

@@ -5,7 +5,8 @@
 import { and, asc, desc, eq, gte, inArray, lt, lte, or, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { night as nightTable } from '@/db/schema/study';
-import { house, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
 import { type Night, nightOf, nightsBetween } from '@/lib/analysis/night';
 import { type NightSummary, SUMMARY_VERSION, summarise } from '@/lib/analysis/nights';
 import { countReadings, firstKnown, nightInputs, yardOfNights, type YardOfNights } from './night-records';

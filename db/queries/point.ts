@@ -3,7 +3,7 @@ import { and, asc, eq, inArray, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { calibration, point } from '@/db/schema/yard';
+import { calibration, point } from '@/db/schema/node';
 import { needsCycle } from '@/lib/control/interlocks';
 import type { PointCreate } from '@/lib/schema/yard';
 import { Point } from '@/lib/schema/yard-view';

@@ -3,7 +3,7 @@ import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
-import { channel, loop, source } from '@/db/schema/yard';
+import { channel, loop, source } from '@/db/schema/channel';
 import type { SourceCreate } from '@/lib/schema/yard';
 import { Source } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';

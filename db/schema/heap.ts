@@ -10,7 +10,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
-import { source } from './yard';
+import { source } from './channel';
 
 export const heapEntry = pgTable(
   'heap_entry',

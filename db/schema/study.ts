@@ -1,13 +1,13 @@
-import { date, foreignKey, index, jsonb, pgTable, primaryKey, uuid } from 'drizzle-orm/pg-core';
+import { date, index, jsonb, pgTable, primaryKey, uuid } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
-import { house } from './yard';
+import { inHouse, ofHouse } from './house';
 
 /** A noon-to-noon summary of one source, re-made from readings and switchings by a job. */
 export const night = pgTable(
   'night',
   {
     holdingId: holdingId(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     sourceId: uuid('source_id').notNull(),
     /** Date of its evening in the house's zone. */
     night: date('night', { mode: 'string' }).notNull(),
@@ -16,10 +16,7 @@ export const night = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.sourceId, table.night] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
+    inHouse(table),
     index('night_house').on(table.holdingId, table.houseId, table.night),
   ],
 );

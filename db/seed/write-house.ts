@@ -4,7 +4,9 @@ import { v7 as uuid } from 'uuid';
 import { everyHolding, type Holding } from '@/db/client';
 import { organization } from '@/db/schema/auth';
 import { rule, ruleVersion } from '@/db/schema/rule';
-import { calibration, channel, house, interlock, loop, node, point, source } from '@/db/schema/yard';
+import { channel, interlock, loop, source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
+import { calibration, node, point } from '@/db/schema/node';
 import { RuleBody } from '@/lib/schema/rule';
 import {
   ChannelCreate,

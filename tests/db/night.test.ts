@@ -6,7 +6,7 @@ import { listNights, nightSoFar, nightsKept, refreshNights, remakeNights } from 
 import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
 import { writeRunning, type DecisionRow } from '@/db/queries/running';
 import { night as nightTable } from '@/db/schema/study';
-import { calibration, point } from '@/db/schema/yard';
+import { calibration, point } from '@/db/schema/node';
 import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';
