@@ -6,7 +6,7 @@ import { closePools, inHolding, everyHolding } from '@/db/client';
 import { createHolding } from '@/db/queries/people';
 import { createHouse } from '@/db/queries/house';
 import { addAudit } from '@/db/queries/audit';
-import { HouseCreate } from '@/lib/schema/yard';
+import { HouseCreate } from '@/lib/schema/house';
 import { appUrl, ownerUrl } from '../support/own-database-address';
 
 const house = HouseCreate.parse({ name: 'House', zone: 'Europe/London', latitude: 54, longitude: -2 });
@@ -18,7 +18,7 @@ beforeAll(async () => {
   stonebeck = await createHolding('Stonebeck', 'stonebeck');
   for (const id of [larkmoor, stonebeck]) {
     await inHolding(id, async (holding) => {
-      await createHouse(holding, house);
+      await createHouse(holding, house, new Date());
       await addAudit(holding, { at: new Date(), by: 'test', action: 'test', subject: id, detail: {} });
     });
   }
@@ -87,7 +87,7 @@ test("a change without a clause of its own touches its own holding only, and ano
     { holding_id: stonebeck, name: 'House' },
     { holding_id: larkmoor, name: 'touched' },
   ]);
-  const smuggled = inHolding(larkmoor, ({ db }) => createHouse({ id: stonebeck, db }, house));
+  const smuggled = inHolding(larkmoor, ({ db }) => createHouse({ id: stonebeck, db }, house, new Date()));
   await expect(smuggled).rejects.toThrow();
 });
 
