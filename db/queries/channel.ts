@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { channel, interlock, loop } from '@/db/schema/channel';
-import type { ChannelCreate } from '@/lib/schema/yard';
+import type { ChannelCreate } from '@/lib/schema/channel';
 import { Channel } from '@/lib/schema/yard-view';
 import { ofARun, ofOwnNode } from './channel-points';
 import { listNodes } from './node';

@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { house } from '@/db/schema/house';
-import type { HouseCreate } from '@/lib/schema/yard';
+import type { HouseCreate } from '@/lib/schema/house';
 import type { House } from '@/lib/schema/yard-view';
 import { toLocal } from '@/lib/units/local-time';
 import { touchPlan } from './plan';

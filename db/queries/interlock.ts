@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { interlock } from '@/db/schema/channel';
-import type { InterlockCreate } from '@/lib/schema/yard';
+import type { InterlockCreate } from '@/lib/schema/channel';
 import { Interlock } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
 import { houseNames, inUse } from './reference';

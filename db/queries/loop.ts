@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { loop } from '@/db/schema/channel';
-import type { LoopCreate } from '@/lib/schema/yard';
+import type { LoopCreate } from '@/lib/schema/source';
 import type { Loop } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
 import { houseNames, inUse, isId } from './reference';

@@ -6,7 +6,7 @@ import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { channel } from '@/db/schema/channel';
 import { node, point } from '@/db/schema/node';
-import type { NodeCreate } from '@/lib/schema/yard';
+import type { NodeCreate } from '@/lib/schema/node';
 import { FieldNode } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
 import { inUse, isId } from './reference';

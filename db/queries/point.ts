@@ -5,7 +5,7 @@ import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { calibration, point } from '@/db/schema/node';
 import { needsCycle } from '@/lib/control/interlocks';
-import type { PointCreate } from '@/lib/schema/yard';
+import type { PointCreate } from '@/lib/schema/point';
 import { Point } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
 import { renamePoint, usesOfPoint } from './point-uses';

@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { channel, loop, source } from '@/db/schema/channel';
-import type { SourceCreate } from '@/lib/schema/yard';
+import type { SourceCreate } from '@/lib/schema/source';
 import { Source } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
 import { houseNames, inUse, isId, type HouseNames } from './reference';

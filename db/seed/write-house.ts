@@ -8,15 +8,11 @@ import { channel, interlock, loop, source } from '@/db/schema/channel';
 import { house } from '@/db/schema/house';
 import { calibration, node, point } from '@/db/schema/node';
 import { RuleBody } from '@/lib/schema/rule';
-import {
-  ChannelCreate,
-  HouseCreate,
-  InterlockCreate,
-  LoopCreate,
-  NodeCreate,
-  PointCreate,
-  SourceCreate,
-} from '@/lib/schema/yard';
+import { ChannelCreate, InterlockCreate } from '@/lib/schema/channel';
+import { HouseCreate } from '@/lib/schema/house';
+import { NodeCreate } from '@/lib/schema/node';
+import { PointCreate } from '@/lib/schema/point';
+import { LoopCreate, SourceCreate } from '@/lib/schema/source';
 import type { DemoHouse } from './demo-house';
 
 export interface NodeSecret {

@@ -4,7 +4,7 @@ import type { Holding } from '@/db/client';
 import { addPersonCommand } from '@/db/queries/person-command';
 import { readMemory } from '@/db/queries/running';
 import { migrateMemory, type Memory } from '@/lib/control/memory';
-import type { HandCommand } from '@/lib/schema/yard';
+import type { HandCommand } from '@/lib/schema/channel';
 import type { Channel, House } from '@/lib/schema/yard-view';
 import type { Caller } from './caller';
 import { Problem } from './errors';
