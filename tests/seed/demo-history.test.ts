@@ -9,7 +9,7 @@ import { loadHouse } from '@/db/queries/plan';
 import { listDecisions } from '@/db/queries/decision';
 import { listSwitchings, readMemory } from '@/db/queries/running';
 import { compile } from '@/lib/control/compile';
-import { migrateMemory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import { readWorld } from '@/worker/yard/store';
 import { fingerprint, houseId, playDemo, rowsOf, TO, type Played } from './scene';
 

@@ -4,7 +4,7 @@ import { commandsAfter, housesWithCommands } from '@/db/queries/waiting-command'
 import { correct, latestReadings } from '@/db/queries/reading';
 import { readMemory, writeNodeStatus } from '@/db/queries/running';
 import { leaseS } from '@/lib/field/frames';
-import { migrateMemory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import { controlFailed } from '../alarms/wanted';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
