@@ -8,8 +8,9 @@ import { migrateMemory } from '@/lib/control/memory-versions';
 import { controlFailed } from '../alarms/wanted';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
-import { House, type Seen } from './house';
+import { House } from './house';
 import type { HouseDeps } from './house-deps';
+import type { Seen } from './seen-points';
 
 /** One in case a notification was missed: level, not edge. */
 const LOOK_EVERY_MS = 30_000;
