@@ -5,7 +5,10 @@ import type { PgDatabase } from 'drizzle-orm/pg-core';
 import pg from 'pg';
 import { env } from '@/lib/server/env';
 import * as auth from './schema/auth';
+import * as channel from './schema/channel';
 import * as heap from './schema/heap';
+import * as house from './schema/house';
+import * as node from './schema/node';
 import * as money from './schema/money';
 import * as people from './schema/people';
 import * as report from './schema/report';
@@ -14,11 +17,13 @@ import * as nodeLog from './schema/node-log';
 import * as running from './schema/running';
 import * as study from './schema/study';
 import * as watch from './schema/watch';
-import * as yard from './schema/yard';
 
 export const schema = {
   ...auth,
+  ...channel,
   ...heap,
+  ...house,
+  ...node,
   ...money,
   ...people,
   ...report,
@@ -27,7 +32,6 @@ export const schema = {
   ...running,
   ...study,
   ...watch,
-  ...yard,
 };
 /** The pool's handle, or that of one transaction. */
 export type Db = PgDatabase<NodePgQueryResultHKT, typeof schema>;

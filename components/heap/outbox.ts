@@ -68,7 +68,7 @@ export async function dropPiece(id: string): Promise<void> {
 
 /** In the order in which they were written: a photograph comes behind its entry. */
 export async function piecesOf(owner: string): Promise<Piece[]> {
-  const all = await within<Piece[]>('readonly', (store) => store.getAll());
+  const all = await within<Piece[]>('readonly', (store) => store.getAll() as IDBRequest<Piece[]>);
   return all
     .filter((one) => one.owner === owner)
     .sort((a, b) => a.writtenAt - b.writtenAt || (a.id < b.id ? -1 : 1));

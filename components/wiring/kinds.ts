@@ -1,21 +1,10 @@
 /** What can be added and changed on the page Wiring: which form, which schema, which address. */
 import type { z } from 'zod';
-import {
-  ChannelAmend,
-  ChannelCreate,
-  HouseAmend,
-  HouseCreate,
-  InterlockAmend,
-  InterlockCreate,
-  LoopAmend,
-  LoopCreate,
-  NodeAmend,
-  NodeCreate,
-  PointAmend,
-  PointCreate,
-  SourceAmend,
-  SourceCreate,
-} from '@/lib/schema/yard';
+import { ChannelAmend, ChannelCreate, InterlockAmend, InterlockCreate } from '@/lib/schema/channel';
+import { HouseAmend, HouseCreate } from '@/lib/schema/house';
+import { NodeAmend, NodeCreate } from '@/lib/schema/node';
+import { PointAmend, PointCreate } from '@/lib/schema/point';
+import { LoopAmend, LoopCreate, SourceAmend, SourceCreate } from '@/lib/schema/source';
 import { channelGroups } from './forms/channel';
 import { houseGroups } from './forms/house';
 import { interlockGroups, loopGroups } from './forms/loop';

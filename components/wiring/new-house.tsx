@@ -15,7 +15,7 @@ export function NewHouse({ preferences }: { preferences: Preferences }) {
   const isAwake = useAwake();
   const { form, submit, failure } = useSpecForm({
     groups: houseGroups,
-    schema: () => import('@/lib/schema/yard').then((module) => module.HouseCreate),
+    schema: () => import('@/lib/schema/house').then((module) => module.HouseCreate),
     entity: { altitude: 0, frostLimit: 3, frostAlarm: 2 },
     preferences,
     method: 'POST',

@@ -2,7 +2,7 @@ import 'server-only';
 import { and, asc, eq, inArray } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { attachment, heapEntry } from '@/db/schema/heap';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import type { Photograph } from '@/lib/schema/heap-view';
 import { isId } from './reference';
 

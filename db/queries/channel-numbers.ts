@@ -1,7 +1,7 @@
 import 'server-only';
 import { and, eq } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { channel } from '@/db/schema/yard';
+import { channel } from '@/db/schema/channel';
 
 /** Numbers of a house's channels by id, those taken out of use too: what they did is still told. */
 export async function channelNumbers(holding: Holding, houseId: string): Promise<Map<string, number>> {

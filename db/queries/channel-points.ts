@@ -1,7 +1,7 @@
 import 'server-only';
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { point } from '@/db/schema/yard';
+import { point } from '@/db/schema/node';
 import { inUse, type Named } from './reference';
 import { Refusal } from './refusal';
 

@@ -1,7 +1,8 @@
 /** The nights that Duty's chosen ones are compared with: other nights, another source, or another house. */
 import { and, asc, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { house, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
 import { nightBefore } from '@/lib/analysis/night';
 import type { HouseNight, NightSummary } from '@/lib/analysis/nights';
 import { listHouseNights, listNights } from './night';

@@ -2,7 +2,7 @@
 import { and, asc, eq, gte, inArray, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { heapEntry } from '@/db/schema/heap';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import { nightBefore, nightNamed, nightOf } from '@/lib/analysis/night';
 import type { NightSummary } from '@/lib/analysis/nights';
 import { openNight, type OpenedNightData } from './duty-night';

@@ -1,7 +1,8 @@
 /** How a source comes back, week by week, with some of its rests as they were read. */
 import { and, asc, eq, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { calibration, point, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { calibration, point } from '@/db/schema/node';
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { EntryEffect, RecoveryTrend, RecoveryWeek } from '@/lib/analysis/recovery';
 import { entryEffects, recoveryTrend, recoveryWeeks } from '@/lib/analysis/recovery-weeks';

@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { findingDismissal } from '@/db/schema/heap';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import type { Dismissal, DismissalCreate } from '@/lib/schema/heap-finding';
 import { houseNames, isId } from './reference';
 

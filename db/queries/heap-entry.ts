@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { heapEntry } from '@/db/schema/heap';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import type { HeapEntryCreate } from '@/lib/schema/heap';
 import { HeapEntry, type Photograph } from '@/lib/schema/heap-view';
 import { photographsOf } from './attachment';

@@ -4,7 +4,8 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { heapJob } from '@/db/schema/heap';
-import { house, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
 import { HeapJob, type HeapJobAmend, type HeapJobCreate } from '@/lib/schema/heap-job';
 import { houseNames, isId } from './reference';
 

@@ -1,7 +1,7 @@
 import 'server-only';
 import { and, eq } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import { inUse, isId } from './reference';
 import { Refusal } from './refusal';
 

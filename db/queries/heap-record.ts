@@ -2,7 +2,8 @@
 import 'server-only';
 import { and, asc, desc, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { calibration, point, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { calibration, point } from '@/db/schema/node';
 import { reading } from '@/db/series';
 import { coreTrend, type CoreTrend, type Dawn } from '@/lib/analysis/core';
 import type { Findings, HeapFacts } from '@/lib/analysis/heap-facts';

@@ -1,6 +1,8 @@
 /** From rows to the core's configuration: references between parts become keys and slugs, as people write them. */
 import type { rule, ruleVersion } from '@/db/schema/rule';
-import type { channel, house, interlock, loop, node, point, source } from '@/db/schema/yard';
+import type { channel, interlock, loop, source } from '@/db/schema/channel';
+import type { house } from '@/db/schema/house';
+import type { node, point } from '@/db/schema/node';
 import type {
   ChannelConfig,
   HouseConfig,

@@ -2,7 +2,7 @@ import 'server-only';
 import { and, desc, eq, isNull, sql } from 'drizzle-orm';
 import { v7 as uuid } from 'uuid';
 import type { Holding } from '@/db/client';
-import { channel, lockout } from '@/db/schema/yard';
+import { channel, lockout } from '@/db/schema/channel';
 import type { Lockout } from '@/lib/schema/yard-view';
 import { addPersonCommand } from './person-command';
 import { touchPlan } from './plan';

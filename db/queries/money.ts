@@ -5,7 +5,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { heapCost, moneyBook } from '@/db/schema/money';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import { amountOf, HeapCost, type HeapCostCreate, MoneyBook, type MoneyBookWrite } from '@/lib/schema/money';
 import { microsText } from '@/lib/units/money';
 import { houseNames, isId } from './reference';

@@ -7,7 +7,7 @@ import { createHash } from 'node:crypto';
 import { and, eq, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { houseNight as houseNightTable, night as nightTable } from '@/db/schema/study';
-import { house } from '@/db/schema/yard';
+import { house } from '@/db/schema/house';
 import { houseNight } from '@/lib/analysis/house-night';
 import { type Night, nightOf, nightsBetween } from '@/lib/analysis/night';
 import { SUMMARY_VERSION } from '@/lib/analysis/nights';

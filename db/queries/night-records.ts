@@ -2,7 +2,9 @@
 import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import type { AnyPgColumn } from 'drizzle-orm/pg-core';
 import type { Holding } from '@/db/client';
-import { calibration, channel, house, loop, node, point, source } from '@/db/schema/yard';
+import { channel, loop, source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
+import { calibration, node, point } from '@/db/schema/node';
 import type { NightChannel, NightInput } from '@/lib/analysis/nights';
 import { CALIBRATED_SD_K, classSd } from '@/lib/analysis/sensor-class';
 import type { HouseNightInput } from '@/lib/analysis/house-night';

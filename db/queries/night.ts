@@ -5,7 +5,8 @@
 import { and, asc, desc, eq, gte, inArray, isNull, lt, lte, or, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { houseNight as houseNightTable, night as nightTable } from '@/db/schema/study';
-import { house, source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
 import { nightOf } from '@/lib/analysis/night';
 import { type HouseNight, type NightSummary, SUMMARY_VERSION } from '@/lib/analysis/nights';
 import { bringUp, zoneOf } from './night-making';

@@ -3,7 +3,9 @@ import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import type { AnyPgColumn } from 'drizzle-orm/pg-core';
 import type { Holding } from '@/db/client';
 import { rule, ruleVersion } from '@/db/schema/rule';
-import { calibration, channel, house, interlock, lockout, loop, node, point, source } from '@/db/schema/yard';
+import { channel, interlock, lockout, loop, source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
+import { calibration, node, point } from '@/db/schema/node';
 import type { Contact, HouseConfig } from '@/lib/control/types';
 import { houseConfig } from './house-config';
 

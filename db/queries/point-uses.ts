@@ -2,7 +2,8 @@ import 'server-only';
 import { and, eq, isNull, ne } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { rule, ruleVersion } from '@/db/schema/rule';
-import { channel, loop, point, source } from '@/db/schema/yard';
+import { channel, loop, source } from '@/db/schema/channel';
+import { point } from '@/db/schema/node';
 import { mapRulePoints } from '@/lib/schema/rule-points';
 import { inUse } from './reference';
 

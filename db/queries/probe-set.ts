@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { probeSet } from '@/db/schema/heap';
-import { source } from '@/db/schema/yard';
+import { source } from '@/db/schema/channel';
 import { ProbeSet, type ProbeSetAmend, type ProbeSetCreate } from '@/lib/schema/probe-set';
 import { doneAt, heapId } from './heap-record-of';
 import { cut, type Listed, type Page } from './page';

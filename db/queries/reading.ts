@@ -1,7 +1,7 @@
 import { and, asc, eq, gte, inArray, lt, sql } from 'drizzle-orm';
 import type { Db, Holding } from '@/db/client';
 import { reading } from '@/db/series';
-import { calibration, point } from '@/db/schema/yard';
+import { calibration, point } from '@/db/schema/node';
 import type { Calibration } from './plan';
 
 export interface LatestReading {

@@ -3,7 +3,8 @@ import { and, eq, isNull, type SQL } from 'drizzle-orm';
 import type { AnyPgColumn, PgTable } from 'drizzle-orm/pg-core';
 import { validate } from 'uuid';
 import type { Holding } from '@/db/client';
-import { channel, node, point, source } from '@/db/schema/yard';
+import { channel, source } from '@/db/schema/channel';
+import { node, point } from '@/db/schema/node';
 import { Refusal } from './refusal';
 
 /** An id, if the text is one: a path or body may name a thing by its id or by its slug, key or number. */

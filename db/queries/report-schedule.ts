@@ -5,7 +5,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Db, Holding } from '@/db/client';
 import { reportSchedule, reportSent } from '@/db/schema/report';
-import { house } from '@/db/schema/yard';
+import { house } from '@/db/schema/house';
 import { ReportSchedule, type ReportScheduleCreate } from '@/lib/schema/report';
 import { listMembers } from './member';
 import { isId } from './reference';

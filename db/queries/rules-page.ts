@@ -1,7 +1,7 @@
 /** What the pages of rules show: the rules of a house with what they name, and one rule with its versions and a night. */
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { point } from '@/db/schema/yard';
+import { point } from '@/db/schema/node';
 import { nightBefore, nightNamed, nightOf } from '@/lib/analysis/night';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { Rule, RuleWithVersions } from '@/lib/schema/rule-view';

@@ -3,7 +3,7 @@ import { and, asc, count, eq, isNull, or, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { rule, ruleVersion } from '@/db/schema/rule';
 import { alarm } from '@/db/schema/watch';
-import { house } from '@/db/schema/yard';
+import { house } from '@/db/schema/house';
 
 export interface HouseBadge {
   slug: string;

@@ -1,7 +1,7 @@
 /** What the page Wiring shows: everything wired in a house, and how the worker last saw it. */
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
-import { node } from '@/db/schema/yard';
+import { node } from '@/db/schema/node';
 import type { HouseState } from '@/lib/schema/house-state';
 import type {
   Channel,

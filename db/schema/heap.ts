@@ -15,7 +15,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
 import { organization } from './auth';
-import { source } from './yard';
+import { source } from './channel';
 
 const revision = () => integer('revision').notNull().default(1);
 /** Who wrote a row and when, by app time; an amendment stays beside it. */

@@ -12,7 +12,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { organization } from './auth';
 import { holdingId, instant } from './columns';
-import { source } from './yard';
+import { source } from './channel';
 
 /** A holding's prices: one book, written as a whole. What it said before stands in the audit log. */
 export const moneyBook = pgTable(

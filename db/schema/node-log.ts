@@ -1,7 +1,7 @@
 import { sql } from 'drizzle-orm';
 import { foreignKey, index, jsonb, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
-import { node } from './yard';
+import { node } from './node';
 
 /** As lib/field/fallback-log.ts reads it out of a text. */
 export interface KeptFallback {

@@ -1,6 +1,6 @@
 import { date, foreignKey, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
-import { house } from './yard';
+import { house } from './house';
 
 /** A report that is sent by mail when its week, month or winter has ended. */
 export const reportSchedule = pgTable(

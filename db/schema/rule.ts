@@ -12,14 +12,14 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { RuleBody } from '@/lib/schema/rule';
 import { holdingId, instant } from './columns';
-import { house } from './yard';
+import { inHouse, ofHouse } from './house';
 
 export const rule = pgTable(
   'rule',
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     channelId: uuid('channel_id').notNull(),
     slug: text('slug').notNull(),
     name: text('name').notNull(),
@@ -31,10 +31,7 @@ export const rule = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
+    inHouse(table),
     uniqueIndex('rule_slug').on(table.holdingId, table.slug),
   ],
 );

@@ -2,7 +2,6 @@ import { sql } from 'drizzle-orm';
 import {
   bigint,
   doublePrecision,
-  foreignKey,
   index,
   integer,
   jsonb,
@@ -14,7 +13,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { Explanation } from '@/lib/control/events';
 import { holdingId, instant } from './columns';
-import { house } from './yard';
+import { inHouse, ofHouse } from './house';
 
 /** One row a switching of a load, with the ladder that decided it, written before the command leaves. */
 export const switching = pgTable(
@@ -22,7 +21,7 @@ export const switching = pgTable(
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     channelId: uuid('channel_id').notNull(),
     at: instant('at').notNull(),
     from: text('from').$type<'on' | 'off'>().notNull(),
@@ -38,10 +37,7 @@ export const switching = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
+    inHouse(table),
     index('switching_at').on(table.holdingId, table.houseId, table.at),
     index('switching_channel').on(table.channelId, table.at),
     uniqueIndex('switching_number')
@@ -62,7 +58,7 @@ export const decision = pgTable(
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     channelId: uuid('channel_id').notNull(),
     at: instant('at').notNull(),
     state: text('state').$type<'on' | 'off'>().notNull(),
@@ -72,10 +68,7 @@ export const decision = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
+    inHouse(table),
     index('decision_channel').on(table.channelId, table.at),
     uniqueIndex('decision_once').on(table.channelId, table.at, table.claim, table.state),
   ],
@@ -103,19 +96,13 @@ export const personCommand = pgTable(
   'person_command',
   {
     holdingId: holdingId(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     number: bigint('number', { mode: 'number' }).notNull(),
     at: instant('at').notNull(),
     by: text('by').notNull(),
     body: jsonb('body').$type<Record<string, unknown>>().notNull(),
   },
-  (table) => [
-    primaryKey({ columns: [table.holdingId, table.houseId, table.number] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
-  ],
+  (table) => [primaryKey({ columns: [table.holdingId, table.houseId, table.number] }), inHouse(table)],
 );
 
 /** One row a house: the core's memory, and how things stood at its last step. */
@@ -123,7 +110,7 @@ export const controlMemory = pgTable(
   'control_memory',
   {
     holdingId: holdingId(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     /** Kept at each event. */
     memory: jsonb('memory').$type<Record<string, unknown>>(),
     memoryAt: instant('memory_at'),
@@ -135,13 +122,7 @@ export const controlMemory = pgTable(
     stateAt: instant('state_at'),
     epoch: bigint('epoch', { mode: 'number' }).notNull().default(0),
   },
-  (table) => [
-    primaryKey({ columns: [table.holdingId, table.houseId] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
-  ],
+  (table) => [primaryKey({ columns: [table.holdingId, table.houseId] }), inHouse(table)],
 );
 
 /** One row: who drives. Times here are real time, not app time. */

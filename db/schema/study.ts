@@ -11,14 +11,14 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
-import { house } from './yard';
+import { inHouse, ofHouse } from './house';
 
 /** A noon-to-noon summary of one source, re-made from readings and switchings by a job. */
 export const night = pgTable(
   'night',
   {
     holdingId: holdingId(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     sourceId: uuid('source_id').notNull(),
     /** Date of its evening in the house's zone. */
     night: date('night', { mode: 'string' }).notNull(),
@@ -27,10 +27,7 @@ export const night = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.sourceId, table.night] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
+    inHouse(table),
     index('night_house').on(table.holdingId, table.houseId, table.night),
   ],
 );
@@ -40,18 +37,12 @@ export const houseNight = pgTable(
   'house_night',
   {
     holdingId: holdingId(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     night: date('night', { mode: 'string' }).notNull(),
     body: jsonb('body').$type<Record<string, unknown>>().notNull(),
     madeAt: instant('made_at').notNull(),
   },
-  (table) => [
-    primaryKey({ columns: [table.holdingId, table.houseId, table.night] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
-  ],
+  (table) => [primaryKey({ columns: [table.holdingId, table.houseId, table.night] }), inHouse(table)],
 );
 
 /** One logger's file: from its first piece to its undoing. The file lies under the data directory while it is needed. */
@@ -60,7 +51,7 @@ export const importBatch = pgTable(
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    houseId: uuid('house_id').notNull(),
+    houseId: ofHouse(),
     name: text('name').notNull(),
     bytes: bigint('bytes', { mode: 'number' }).notNull(),
     received: bigint('received', { mode: 'number' }).notNull().default(0),
@@ -83,10 +74,7 @@ export const importBatch = pgTable(
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),
-    foreignKey({
-      columns: [table.holdingId, table.houseId],
-      foreignColumns: [house.holdingId, house.id],
-    }).onDelete('cascade'),
+    inHouse(table),
     index('import_batch_house').on(table.holdingId, table.houseId, table.createdAt),
   ],
 );

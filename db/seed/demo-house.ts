@@ -1,15 +1,11 @@
 /** A house of the demo holdings, in the same bodies that a person or program would send. */
 import type { z } from 'zod';
 import type { RuleBodyInput } from '@/lib/schema/rule';
-import type {
-  ChannelCreate,
-  HouseCreate,
-  InterlockCreate,
-  LoopCreate,
-  NodeCreate,
-  PointCreate,
-  SourceCreate,
-} from '@/lib/schema/yard';
+import type { ChannelCreate, InterlockCreate } from '@/lib/schema/channel';
+import type { HouseCreate } from '@/lib/schema/house';
+import type { NodeCreate } from '@/lib/schema/node';
+import type { PointCreate } from '@/lib/schema/point';
+import type { LoopCreate, SourceCreate } from '@/lib/schema/source';
 
 export interface DemoHouse {
   house: z.input<typeof HouseCreate>;

@@ -4,7 +4,7 @@ import { v7 as uuid } from 'uuid';
 import { z } from 'zod';
 import { everyHolding, type Holding } from '@/db/client';
 import { account, member, organization, user } from '@/db/schema/auth';
-import { point } from '@/db/schema/yard';
+import { point } from '@/db/schema/node';
 import { reading, rollup } from '@/db/series';
 
 const Metadata = z.object({ password: z.string() });

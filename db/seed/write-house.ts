@@ -4,17 +4,15 @@ import { v7 as uuid } from 'uuid';
 import { everyHolding, type Holding } from '@/db/client';
 import { organization } from '@/db/schema/auth';
 import { rule, ruleVersion } from '@/db/schema/rule';
-import { calibration, channel, house, interlock, loop, node, point, source } from '@/db/schema/yard';
+import { channel, interlock, loop, source } from '@/db/schema/channel';
+import { house } from '@/db/schema/house';
+import { calibration, node, point } from '@/db/schema/node';
 import { RuleBody } from '@/lib/schema/rule';
-import {
-  ChannelCreate,
-  HouseCreate,
-  InterlockCreate,
-  LoopCreate,
-  NodeCreate,
-  PointCreate,
-  SourceCreate,
-} from '@/lib/schema/yard';
+import { ChannelCreate, InterlockCreate } from '@/lib/schema/channel';
+import { HouseCreate } from '@/lib/schema/house';
+import { NodeCreate } from '@/lib/schema/node';
+import { PointCreate } from '@/lib/schema/point';
+import { LoopCreate, SourceCreate } from '@/lib/schema/source';
 import type { DemoHouse } from './demo-house';
 
 export interface NodeSecret {

@@ -6,9 +6,9 @@ import {
   pressureAtAltitude,
   saturationPressure,
 } from '@/lib/physics/air';
-import type { PointMemory } from './memory';
 import type { PlanDerived, PlanPoint } from './plan';
 import { keepQuality } from './quality';
+import { putReading, timeOf, valueOf } from './readings';
 import { entry, type Run } from './run';
 import type { HouseConfig, PointConfig, Quality } from './types';
 
@@ -63,7 +63,7 @@ export function settleDerived(run: Run): void {
     let goodRun = 3;
     for (const input of derived.inputs) {
       const memory = input < 0 ? null : entry(run.points, input);
-      at = Math.max(at, memory?.at ?? -Infinity);
+      at = Math.max(at, input < 0 ? -Infinity : (timeOf(run, input) ?? -Infinity));
       const worse = memory?.quality ?? 'bad';
       if (worse === 'bad' || (worse === 'uncertain' && quality === 'good')) quality = worse;
       if (worse !== 'good') why ??= `input-${worse}`;
@@ -75,15 +75,8 @@ export function settleDerived(run: Run): void {
       memory = { ...memory, goodRun };
       run.points[index] = memory;
     }
-    if (at > (memory.at ?? -Infinity) && quality !== 'bad') {
-      run.points[index] = reckon(
-        derived,
-        memory,
-        derived.inputs.map((input) => entry(run.points, input)),
-        at,
-      );
-    }
-    if (entry(run.points, index).value === null && quality !== 'bad') {
+    if (at > (timeOf(run, index) ?? -Infinity) && quality !== 'bad') reckon(run, index, derived, at);
+    if (!entry(run.points, index).hasValue && quality !== 'bad') {
       quality = 'bad';
       why = derived.of === 'trend' ? 'window-not-full' : 'cannot-be-reckoned';
     }
@@ -91,15 +84,19 @@ export function settleDerived(run: Run): void {
   }
 }
 
-function reckon(derived: PlanDerived, memory: PointMemory, inputs: PointMemory[], at: number): PointMemory {
-  const values = inputs.map((input) => input.value ?? NaN);
+function reckon(run: Run, index: number, derived: PlanDerived, at: number): void {
+  const memory = entry(run.points, index);
+  const values = derived.inputs.map((input) => valueOf(run, input) ?? NaN);
   let trail = memory.trail;
   let value: number | null;
   if (derived.of === 'trend') {
     trail = extendTrail(memory.trail ?? [], [at, values[0] ?? NaN], derived.windowMs);
     value = trend(trail, derived.windowMs);
   } else value = formulaWithinRange(derived, values);
-  return { ...memory, value: value !== null && Number.isFinite(value) ? value : null, at, lastAt: at, trail };
+  const hasValue = value !== null && Number.isFinite(value);
+  putReading(run.readings, index, { value: hasValue ? (value ?? 0) : 0, at, lastAt: at, sameSince: at });
+  if (hasValue !== memory.hasValue || trail !== memory.trail)
+    run.points[index] = { ...memory, hasValue, trail };
 }
 
 /** The handbook's equations throw outside their range; a reading must not stop a house, so there the value is unknown. */

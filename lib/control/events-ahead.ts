@@ -91,7 +91,7 @@ function answersAhead(base: Future, told: { claim: Claim }): NextWhen[] {
   return [...new Set(places)].flatMap((point) => {
     if (point === null || run.usable[point] === 'good') return [];
     const points = memory.points.map((one, at) =>
-      at === point ? { ...one, value: one.value ?? 0, dropped: null, why: null, uncertainSince: null } : one,
+      at === point ? { ...one, hasValue: true, dropped: null, why: null, uncertainSince: null } : one,
     );
     if (ifInstead(base, { memory: { points } }).claim === told.claim) return [];
     return [{ kind: 'when', what: 'answers', point: entry(plan.points, point).key } as const];

@@ -3,6 +3,7 @@ import { coldestPoint } from './claims/frost';
 import { wakeForDay } from './claims/rest';
 import { isUnderFloor } from './claims/source-guard';
 import { usedMs } from './day';
+import { timeOf, valueOf } from './readings';
 import { entry, type Run } from './run';
 import { isUnsteady } from './steady';
 import type { Fault } from './events';
@@ -43,7 +44,7 @@ function houseFaults(run: Run, stand: Stand): void {
       const coldest = coldestPoint(run);
       return {
         point: coldest === null ? null : entry(plan.points, coldest).key,
-        value: coldest === null ? null : entry(run.points, coldest).value,
+        value: coldest === null ? null : valueOf(run, coldest),
         limit: plan.house.frostLimit,
         alarm: plan.house.frostAlarm,
       };
@@ -54,15 +55,19 @@ function houseFaults(run: Run, stand: Stand): void {
 
 function pointFaults(run: Run, index: number, stand: Stand): void {
   const memory = entry(run.points, index);
-  const { id, quality, why, at, contradictedSince } = memory;
+  const { id, quality, why, contradictedSince } = memory;
   const { derived, key, isHouse } = entry(run.plan.points, index);
   // a derived point is bad by its inputs, which stand in this list themselves
   const tells = why !== 'never-spoke' || run.plan.usedPoints.has(index);
   // one that comes and goes is one fault, however it stands just now
   if (isUnsteady(memory))
-    stand('point-unsteady', { point: id }, () => ({ key, why: memory.doubts?.why ?? null, lastAt: at }));
+    stand('point-unsteady', { point: id }, () => ({
+      key,
+      why: memory.doubts?.why ?? null,
+      lastAt: timeOf(run, index),
+    }));
   else if (quality === 'bad' && derived === null && tells)
-    stand('point-bad', { point: id }, () => ({ key, why, lastAt: at }));
+    stand('point-bad', { point: id }, () => ({ key, why, lastAt: timeOf(run, index) }));
   const { frostLimit } = run.plan.house;
   const inFrost = isHouse && frostLimit !== null && contradictedSince !== null;
   if (inFrost && run.at >= contradictedSince + CONTRADICTED_MS)
@@ -72,7 +77,7 @@ function pointFaults(run: Run, index: number, stand: Stand): void {
 function sourceFaults(run: Run, index: number, stand: Stand): void {
   const { id, config, core, slug, dailyLimitMs } = entry(run.plan.sources, index);
   const memory = entry(run.sources, index);
-  const value = core === null ? null : entry(run.points, core).value;
+  const value = core === null ? null : valueOf(run, core);
   if (isUnderFloor(run, index))
     stand('core-under-floor', { source: id }, () => ({ source: slug, value, floor: config.coreFloor }));
   const needsCore = config.coreFloor !== null || (config.ready !== null && !memory.ready);

@@ -3,18 +3,20 @@ import {
   emptyMemory,
   type ChannelMemory,
   type Memory,
-  type PointMemory,
+  type ParkedPoint,
   type RuleMemory,
   type SourceMemory,
 } from './memory';
 import type { Plan } from './plan';
+import { inLists, NO_READING, withReadings } from './readings';
 import { creditAt } from './credit';
 import { settleDay } from './day';
 
 export function fit(plan: Plan, memory: Memory): Memory {
   if (memory.shape === plan.shape) return memory;
   const { parked } = memory;
-  const points = sort(plan.points, [...parked.points, ...memory.points], (one) => newPoint(one.id));
+  const hadPoints = [...parked.points, ...withReadings(memory.points, memory.readings)];
+  const points = sort(plan.points, hadPoints, (one) => newPoint(one.id));
   const rules = sort(plan.rules, [...parked.rules, ...memory.rules], (one) => newRule(one.id));
   const sources = sort(plan.sources, [...parked.sources, ...memory.sources], (one) =>
     newSource(one.id, memory.at ?? 0),
@@ -28,7 +30,7 @@ export function fit(plan: Plan, memory: Memory): Memory {
     ...emptyMemory(),
     ...memory,
     shape: plan.shape,
-    points: points.kept,
+    ...inLists(points.kept),
     rules: rules.kept,
     sources: sources.kept,
     channels: channels.kept.map((one, index) =>
@@ -73,12 +75,9 @@ function sort<P extends { id: string }, M extends { id: string }>(
   return { kept, parked: [...byId.values()].filter((one) => !ids.has(one.id)) };
 }
 
-const newPoint = (id: string): PointMemory => ({
+const newPoint = (id: string): ParkedPoint => ({
   id,
-  value: null,
-  at: null,
-  lastAt: null,
-  sameSince: null,
+  hasValue: false,
   suspects: 0,
   goodRun: 0,
   dropped: null,
@@ -88,6 +87,7 @@ const newPoint = (id: string): PointMemory => ({
   doubts: null,
   contradictedSince: null,
   trail: null,
+  reading: NO_READING,
 });
 
 const newRule = (id: string): RuleMemory => ({ id, latch: false, using: 0 });

@@ -1,6 +1,7 @@
 /** Two looks at whether a running fan really brings heat: its least gain, and the proof that it turns. */
 import { beginRest, draws, leastRestMs } from './credit';
 import { awaitReading, isDifferenceUnder, isOver } from './lines';
+import { timeOf, valueOf } from './readings';
 import { dueAt, entry, wakeAt, type Run } from './run';
 
 const LOW_MS = 120_000;
@@ -19,7 +20,8 @@ export function settleProof(run: Run, channel: number): void {
   }
   if (memory.counted === 'off' || run.usable[runProofPoint] === 'bad') standing = false;
   else if (run.usable[runProofPoint] === 'good') {
-    const { value, at } = entry(run.points, runProofPoint);
+    const value = valueOf(run, runProofPoint);
+    const at = timeOf(run, runProofPoint);
     const says = at !== null && at >= (memory.countedSince ?? -Infinity) + SPIN_UP_MS;
     if (!says) awaitReading(run, runProofPoint);
     else if (value !== null) standing = !isOver(run, runProofPoint, config.runProof.above);

@@ -8,6 +8,7 @@
 import { isBetweenLines } from './lines';
 import type { Memory } from './memory';
 import type { Plan } from './plan';
+import { valueOf } from './readings';
 import { entry, nextWake, type Run } from './run';
 import type { Observed } from './types';
 
@@ -49,9 +50,9 @@ export function isLull(run: Run, before: Run): boolean {
     if (run.usable[point] !== before.usable[point]) return false;
     const now = entry(run.points, point);
     const then = entry(before.points, point);
-    if (now === then) continue;
+    if (now === then && run.readings.at[point] === before.readings.at[point]) continue;
     if (now.quality !== then.quality || now.why !== then.why) return false;
-    if (!isBetweenLines(before, point, now.value)) return false;
+    if (!isBetweenLines(before, point, valueOf(run, point))) return false;
   }
   return true;
 }

@@ -6,7 +6,7 @@
 import type { Fault } from './events';
 import type { Claim, Quality, State } from './types';
 
-export const MEMORY_VERSION = 1;
+export const MEMORY_VERSION = 2;
 
 export interface Memory {
   version: typeof MEMORY_VERSION;
@@ -19,25 +19,21 @@ export interface Memory {
   /** Greatest number of a person's command taken. */
   taken: number;
   points: PointMemory[];
+  readings: Readings;
   rules: RuleMemory[];
   sources: SourceMemory[];
   channels: ChannelMemory[];
   frost: FrostMemory;
   faults: Fault[];
   /** Entries whose ids the plan no longer has; they come back with their ids. */
-  parked: { points: PointMemory[]; rules: RuleMemory[]; sources: SourceMemory[]; channels: ChannelMemory[] };
+  parked: { points: ParkedPoint[]; rules: RuleMemory[]; sources: SourceMemory[]; channels: ChannelMemory[] };
 }
 
 export interface PointMemory {
   id: string;
-  /** Last plausible value and the time of its reading. */
-  value: number | null;
-  at: number | null;
-  /** Time of the newest reading, plausible or not. */
-  lastAt: number | null;
-  /** Since when the value has been the same to the last bit, by readings' times. */
-  sameSince: number | null;
-  /** Implausible readings in a row. */
+  /** Whether it has a value in use: it spoke, or, being derived, could be reckoned. */
+  hasValue: boolean;
+  /** Implausible readings in a row, counted to 2. */
   suspects: number;
   /** Good readings in a row, counted to 3. */
   goodRun: number;
@@ -53,6 +49,26 @@ export interface PointMemory {
   contradictedSince: number | null;
   /** trend: [time, value], thinned to the window's needs. */
   trail: [number, number][] | null;
+}
+
+/**
+ * The reading in use of each point, in the order of `points`: the last plausible one. Every pack of readings changes all
+ * of them, and little else of a point; so they stand in lists of plain numbers, which a step copies at once.
+ */
+export interface Readings {
+  /** What counts only where the point's `hasValue` says so. */
+  value: number[];
+  /** Time of the reading; 0: there was none. */
+  at: number[];
+  /** Time of the newest reading, plausible or not; 0: there was none. */
+  lastAt: number[];
+  /** Since when the value has been the same to the last bit, by readings' times. */
+  sameSince: number[];
+}
+
+/** A point that the plan no longer has, with the reading that it had. */
+export interface ParkedPoint extends PointMemory {
+  reading: { value: number; at: number; lastAt: number; sameSince: number };
 }
 
 export interface DoubtMemory {
@@ -170,6 +186,7 @@ export function emptyMemory(): Memory {
     shape: '',
     taken: 0,
     points: [],
+    readings: { value: [], at: [], lastAt: [], sameSince: [] },
     rules: [],
     sources: [],
     channels: [],
@@ -177,20 +194,4 @@ export function emptyMemory(): Memory {
     faults: [],
     parked: { points: [], rules: [], sources: [], channels: [] },
   };
-}
-
-/**
- * A memory from storage, brought to today's version. Null and undefined give an empty one; anything else that is
- * not a memory, or is of a later version than this code, throws: dropping it in silence would forget a rest.
- */
-export function migrateMemory(json: unknown): Memory {
-  if (json === null || json === undefined) return emptyMemory();
-  if (typeof json !== 'object' || !('version' in json))
-    throw new Error('This is not a memory of the control core.');
-  if (json.version !== MEMORY_VERSION)
-    throw new Error(
-      `Memory of version ${String(json.version)} is unknown here; this code knows up to ${MEMORY_VERSION}.`,
-    );
-  // Written by this code alone and checked by its version; entries that lack a field are filled from an empty one.
-  return { ...emptyMemory(), ...(json as Memory) };
 }

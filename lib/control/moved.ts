@@ -1,7 +1,8 @@
 /** One reading moved, and all others left as they are: what a look ahead tries. */
-import type { Memory, PointMemory } from './memory';
+import type { Memory, Readings } from './memory';
 import type { Plan } from './plan';
-import { entry } from './run';
+import { copyReadings, putReading, valueOf } from './readings';
+import { entry, numberAt } from './run';
 import type { Threshold } from './thresholds';
 import type { Future } from './what-if';
 import { coldestPoint } from './claims/frost';
@@ -18,18 +19,22 @@ export function moved(
       : side === 'below'
         ? [coldestPoint(run)].flatMap((one) => one ?? [])
         : // the coldest rises only when none is left that is colder
-          plan.housePoints.filter((one) => (entry(memory.points, one).value ?? Infinity) < value);
-  const points = memory.points.map((one, place) => (places.includes(place) ? reads(one, value, at) : one));
+          plan.housePoints.filter((one) => (valueOf(run, one) ?? Infinity) < value);
+  const readings = copyReadings(memory.readings);
+  for (const place of places) putReading(readings, place, later(readings, place, value, at));
+  const points = memory.points.map((one, place) =>
+    places.includes(place) ? { ...one, hasValue: true } : one,
+  );
   const isDerived = point !== null && entry(plan.points, point).derived !== null;
-  return isDerived ? { memory: { points }, plan: asMeasured(plan, point) } : { memory: { points } };
+  const change = { memory: { points, readings } };
+  return isDerived ? { ...change, plan: asMeasured(plan, point) } : change;
 }
 
 /** A millisecond later than the one before, so that derived points see it as a new reading. */
-const reads = (memory: PointMemory, value: number, at: number): PointMemory => ({
-  ...memory,
-  value,
-  at: Math.max(memory.at ?? at, at) + 1,
-});
+function later({ at: times, lastAt, sameSince }: Readings, place: number, value: number, at: number) {
+  const next = Math.max(numberAt(times, place), at) + 1;
+  return { value, at: next, lastAt: numberAt(lastAt, place), sameSince: numberAt(sameSince, place) };
+}
 
 /** A derived point is made of others, and which of them would move cannot be said: here it is read like any other. */
 function asMeasured(plan: Plan, point: number): Plan {

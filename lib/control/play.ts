@@ -8,6 +8,7 @@ import { MEMORY_VERSION, type Memory, type PointMemory } from './memory';
 import type { Plan } from './plan';
 import { silenceAhead, takeReading } from './quality';
 import { takeRunsAlone } from './ran-alone';
+import { copyReadings } from './readings';
 import { entry, filled, nextWake, nothingFound, type Run } from './run';
 import { settle, settleDecisions, settleReadings, settleUndriven } from './settle';
 import type { Observed, Quality } from './types';
@@ -48,8 +49,7 @@ export function play(
   for (let index = 0; index < plan.points.length; index += 1) {
     const point = entry(plan.points, index);
     const seen = observed.points[point.id];
-    if (seen !== undefined && point.derived === null)
-      run.points[index] = takeReading(point, entry(run.points, index), seen, stepAt);
+    if (seen !== undefined && point.derived === null) takeReading(run, index, seen);
   }
   for (let index = 0; before === null && index < plan.channels.length; index += 1) {
     noteRelay(run, index);
@@ -86,6 +86,7 @@ function begin(
     awayFrom: null,
     silentAt: options.readingsHold === true ? memory.points.map(heldSilence) : null,
     points: memory.points.slice(),
+    readings: copyReadings(memory.readings),
     rules: memory.rules,
     sources: memory.sources,
     channels: memory.channels,
@@ -127,10 +128,7 @@ function pass(run: Run, first: number): void {
   const own = run.silentAt;
   for (let channel = 0; channel < run.plan.channels.length; channel += 1) extendLease(run, channel);
   run.silentAt =
-    own ??
-    run.plan.points.map((point, index) =>
-      silenceAhead(point, entry(run.points, index), run.observed.points[point.id]),
-    );
+    own ?? run.plan.points.map(({ id }, index) => silenceAhead(run, index, run.observed.points[id]));
   for (let at = first; at < run.stepAt; at = nextWake(run)) {
     run.at = at;
     settle(run);
@@ -159,6 +157,7 @@ function remember(run: Run, memory: Memory, taken: number, faults: Memory['fault
     shape: run.plan.shape,
     taken,
     points: run.points,
+    readings: run.readings,
     rules: run.rules,
     sources: run.sources,
     channels: run.channels,

@@ -1,99 +1,118 @@
 /** Which readings are believed, and how good a point is at an instant. */
 import type { PointMemory } from './memory';
-import type { PlanPoint } from './plan';
-import { entry, wakeForReadings, type Run } from './run';
+import { lastTimeOf, timeOf } from './readings';
+import { entry, numberAt, wakeForReadings, type Run } from './run';
 import { steadied } from './steady';
 import type { ObservedPoint, Quality } from './types';
 
 const AHEAD_MS = 120_000;
 const UNCERTAIN_MS = 600_000;
+const FROZEN = { quality: 'uncertain', why: 'frozen' } as const;
 
 /** What cannot be: outside the sensor's range, its fault values, faster than it can change. Null: plausible. */
-function implausible(point: PlanPoint, memory: PointMemory, seen: ObservedPoint): string | null {
+function implausible(run: Run, index: number, seen: ObservedPoint): string | null {
+  const { config, oneWire, maxRateMs } = entry(run.plan.points, index);
   const sent = seen.raw ?? seen.value;
-  const { min, max } = point.config;
-  if (point.oneWire && (sent === 85 || sent === -127)) return 'one-wire-fault';
+  const { min, max } = config;
+  if (oneWire && (sent === 85 || sent === -127)) return 'one-wire-fault';
   if ((min !== null && sent < min) || (max !== null && sent > max)) return 'out-of-range';
-  if (point.maxRateMs === null || memory.value === null || memory.at === null) return null;
-  const most = point.maxRateMs * (seen.at - memory.at);
+  if (maxRateMs === null || !entry(run.points, index).hasValue) return null;
+  const most = maxRateMs * (seen.at - numberAt(run.readings.at, index));
   // the last binary digit of a division must not make a change of exactly the limit too fast
-  return Math.abs(seen.value - memory.value) > most + 1e-9 ? 'too-fast' : null;
+  return Math.abs(seen.value - numberAt(run.readings.value, index)) > most + 1e-9 ? 'too-fast' : null;
 }
 
 /** Whether a reading moves control: finite, newer than the newest known, at most 2 min in the future. */
-const isNews = (memory: PointMemory, seen: ObservedPoint, now: number): boolean =>
-  Number.isFinite(seen.value) &&
-  (memory.lastAt === null || seen.at > memory.lastAt) &&
-  seen.at <= now + AHEAD_MS;
+const isNews = (run: Run, index: number, seen: ObservedPoint): boolean =>
+  Number.isFinite(seen.value) && seen.at > heardAt(run, index) && seen.at <= run.stepAt + AHEAD_MS;
+
+const heardAt = (run: Run, index: number): number => lastTimeOf(run, index) ?? -Infinity;
 
 /** Silence counts from the last plausible reading, or, once the quality is dropped, from any. */
-const spokeAt = (memory: PointMemory): number =>
-  (memory.dropped === null ? memory.at : memory.lastAt) ?? -Infinity;
+const spokeAt = (run: Run, index: number): number =>
+  entry(run.points, index).dropped === null ? (timeOf(run, index) ?? -Infinity) : heardAt(run, index);
 
 /** First instant of silence that the readings' times show up to the newest; null: none. */
-export function silenceIn(
-  point: PlanPoint,
-  memory: PointMemory,
-  seen: ObservedPoint | undefined,
-): number | null {
-  let last = spokeAt(memory);
+function silenceIn(run: Run, index: number, seen: ObservedPoint | undefined): number | null {
+  const { staleMs } = entry(run.plan.points, index);
+  let last = spokeAt(run, index);
   if (last === -Infinity) return null;
   // what was seen before has been judged: an implausible reading then fills no silence now
-  if (seen === undefined || seen.at <= (memory.lastAt ?? -Infinity)) return null;
+  if (seen === undefined || seen.at <= heardAt(run, index)) return null;
   if (seen.between !== undefined) {
     for (const time of seen.between) {
       if (time <= last) continue;
-      if (time - last > point.staleMs) return last + point.staleMs + 1;
+      if (time - last > staleMs) return last + staleMs + 1;
       last = time;
     }
   }
-  if (seen.at - last > point.staleMs) return last + point.staleMs + 1;
+  if (seen.at - last > staleMs) return last + staleMs + 1;
   return null;
 }
 
 /** When a point falls silent as far as the times of all its readings tell, those known only now included. */
-export function silenceAhead(point: PlanPoint, memory: PointMemory, seen: ObservedPoint | undefined): number {
-  const isNew = seen !== undefined && seen.at > (memory.lastAt ?? -Infinity);
-  const newest = isNew ? Math.max(spokeAt(memory), seen.at) : spokeAt(memory);
-  return silenceIn(point, memory, seen) ?? newest + point.staleMs + 1;
+export function silenceAhead(run: Run, index: number, seen: ObservedPoint | undefined): number {
+  const isNew = seen !== undefined && seen.at > heardAt(run, index);
+  const newest = isNew ? Math.max(spokeAt(run, index), seen.at) : spokeAt(run, index);
+  return silenceIn(run, index, seen) ?? newest + entry(run.plan.points, index).staleMs + 1;
 }
 
 /**
  * Takes a point's newest reading. One implausible reading leaves the last good one in force; a second in a row drops
  * the quality; three good ones in a row bring it back. The first good one is believed at once.
  */
-export function takeReading(
-  point: PlanPoint,
-  memory: PointMemory,
-  seen: ObservedPoint,
-  now: number,
-): PointMemory {
-  if (!isNews(memory, seen, now)) return memory;
-  const doubt = implausible(point, memory, seen);
+export function takeReading(run: Run, index: number, seen: ObservedPoint): void {
+  if (!isNews(run, index, seen)) return;
+  const { value, at, lastAt, sameSince } = run.readings;
+  const doubt = implausible(run, index, seen);
   if (doubt !== null) {
-    const suspects = memory.suspects + 1;
-    const drops = suspects >= 2 || memory.value === null;
-    const quality = doubt === 'too-fast' ? 'uncertain' : 'bad';
-    const dropped = drops ? ({ quality, why: doubt } as const) : memory.dropped;
-    return { ...memory, lastAt: seen.at, suspects, goodRun: 0, dropped };
+    lastAt[index] = seen.at;
+    suspect(run, index, doubt);
+    return;
   }
-  const sameSince = memory.value === seen.value ? (memory.sameSince ?? seen.at) : seen.at;
-  const frozen = point.frozenMs !== null && seen.at - sameSince > point.frozenMs;
-  const back = memory.why === 'silent' || silenceIn(point, memory, seen) !== null;
-  const goodRun = frozen ? 0 : back ? 1 : Math.min(3, memory.goodRun + 1);
-  const dropped = frozen
-    ? ({ quality: 'uncertain', why: 'frozen' } as const)
-    : memory.value === null || goodRun >= 3
-      ? null
-      : memory.dropped;
-  // written out: one is made for every reading, and a spread of it costs ten times as much
-  return {
+  const { hasValue, why, goodRun, dropped } = entry(run.points, index);
+  const { frozenMs } = entry(run.plan.points, index);
+  const isSame = hasValue && value[index] === seen.value;
+  const since = isSame ? numberAt(sameSince, index) : seen.at;
+  const frozen = frozenMs !== null && seen.at - since > frozenMs;
+  const back = why === 'silent' || silenceIn(run, index, seen) !== null;
+  const good = frozen ? 0 : back ? 1 : Math.min(3, goodRun + 1);
+  value[index] = seen.value;
+  at[index] = seen.at;
+  lastAt[index] = seen.at;
+  sameSince[index] = since;
+  keepTrust(run, index, true, 0, good, frozen ? FROZEN : !hasValue || good >= 3 ? null : dropped);
+}
+
+function suspect(run: Run, index: number, why: string): void {
+  const { hasValue, suspects, dropped } = entry(run.points, index);
+  const inRow = Math.min(2, suspects + 1);
+  const quality = why === 'too-fast' ? 'uncertain' : 'bad';
+  const drops = (inRow === 2 || !hasValue) && (dropped?.why !== why || dropped.quality !== quality);
+  keepTrust(run, index, hasValue, inRow, 0, drops ? { quality, why } : dropped);
+}
+
+/** Of most readings nothing else changes. Written out, since a spread of an entry costs ten times as much. */
+function keepTrust(
+  run: Run,
+  index: number,
+  hasValue: boolean,
+  suspects: number,
+  goodRun: number,
+  dropped: PointMemory['dropped'],
+): void {
+  const memory = entry(run.points, index);
+  if (
+    hasValue === memory.hasValue &&
+    suspects === memory.suspects &&
+    goodRun === memory.goodRun &&
+    dropped === memory.dropped
+  )
+    return;
+  run.points[index] = {
     id: memory.id,
-    value: seen.value,
-    at: seen.at,
-    lastAt: seen.at,
-    sameSince,
-    suspects: 0,
+    hasValue,
+    suspects,
     goodRun,
     dropped,
     quality: memory.quality,
@@ -114,16 +133,18 @@ export function settlePoints(run: Run): void {
     const memory = entry(run.points, index);
     let quality: Quality = memory.dropped?.quality ?? 'good';
     let why = memory.dropped?.why ?? null;
-    if (memory.value === null) {
+    if (!memory.hasValue) {
       quality = 'bad';
       why ??= 'never-spoke';
     } else {
-      const silentAt = run.silentAt?.[index] ?? spokeAt(memory) + point.staleMs + 1;
+      const silentAt = run.silentAt?.[index] ?? spokeAt(run, index) + point.staleMs + 1;
       if (run.at >= silentAt) {
         // our own absence is not the point's silence: it has its time again from the worker's start
         const excusedTill = run.observed.workerStartedAt + point.staleMs + 1;
         const excused =
-          memory.why !== 'silent' && run.observed.workerStartedAt > spokeAt(memory) && run.at < excusedTill;
+          memory.why !== 'silent' &&
+          run.observed.workerStartedAt > spokeAt(run, index) &&
+          run.at < excusedTill;
         quality = excused && quality !== 'bad' ? 'uncertain' : 'bad';
         why = excused ? (why ?? 'worker-was-away') : 'silent';
         if (excused) wakeForReadings(run, excusedTill);

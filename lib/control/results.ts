@@ -4,6 +4,7 @@ import { isReady, isUnderFloor } from './claims/source-guard';
 import { creditAt } from './credit';
 import { usedMs } from './day';
 import { becauseOf } from './ladder';
+import { timeOf, valueOf } from './readings';
 import { entry, told, type Run } from './run';
 import type { ChannelResult, PointResult, SourceResult } from './step-result';
 
@@ -26,7 +27,8 @@ export function channelResult(run: Run, index: number): ChannelResult {
 }
 
 export function pointResult(run: Run, index: number): PointResult {
-  const { id, value, at, quality, why, doubts } = entry(run.points, index);
+  const { id, quality, why, doubts } = entry(run.points, index);
+  const [value, at] = [valueOf(run, index), timeOf(run, index)];
   return { id, value, at, quality, why, doubtSince: doubts?.since ?? null, lastDoubt: doubts?.last ?? null };
 }
 

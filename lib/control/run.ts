@@ -1,5 +1,5 @@
 /** The working state of one step: copies of the memory's lists, whose entries are replaced, never changed. */
-import type { ChannelMemory, FrostMemory, PointMemory, RuleMemory, SourceMemory } from './memory';
+import type { ChannelMemory, FrostMemory, PointMemory, Readings, RuleMemory, SourceMemory } from './memory';
 import type { InterlockVerdict } from './interlocks';
 import type { RuleCalendar } from './calendar';
 import type { Plan } from './plan';
@@ -29,6 +29,8 @@ export interface Run {
   over: number[];
   under: number[];
   points: PointMemory[];
+  /** Values and times of the points' readings (readings.ts). */
+  readings: Readings;
   rules: RuleMemory[];
   sources: SourceMemory[];
   channels: ChannelMemory[];
@@ -109,6 +111,9 @@ export function entry<T>(list: readonly T[], index: number): T {
   if (found === undefined) throw new RangeError(`The plan names entry ${index} of a list of ${list.length}.`);
   return found;
 }
+
+/** The same of a list of numbers. Apart from it, since a line of code that meets lists of every kind is slow for all of them. */
+export const numberAt = (list: readonly number[], index: number): number => list[index] ?? NaN;
 
 /** Something happens by itself at `instant`: the step must be awake then. */
 export function wakeAt(run: Run, instant: number): void {

@@ -7,6 +7,7 @@
  * heard, since then it was the line that fell silent.
  */
 import type { DoubtMemory, PointMemory } from './memory';
+import { lastTimeOf } from './readings';
 import { entry, wakeForReadings, type Run } from './run';
 import type { Quality } from './types';
 import { UNSTEADY } from './unsteady';
@@ -66,7 +67,7 @@ function isOwnDoing(run: Run, index: number, why: string | null): boolean {
   if (why === 'worker-was-away') return false;
   if (why !== 'silent') return true;
   const { staleMs } = entry(run.plan.points, index);
-  const from = (entry(run.points, index).lastAt ?? -Infinity) + staleMs / 2;
+  const from = (lastTimeOf(run, index) ?? -Infinity) + staleMs / 2;
   return run.plan.points.some(
     ({ id, derived }, other) => other !== index && derived === null && spoke(run, other, id, from),
   );
@@ -75,10 +76,6 @@ function isOwnDoing(run: Run, index: number, why: string | null): boolean {
 /** Whether a point was heard after `from` and by `run.at`, by what is remembered and what this step was told. */
 function spoke(run: Run, index: number, id: string, from: number): boolean {
   const seen = run.observed.points[id];
-  const times = [
-    entry(run.points, index).lastAt ?? -Infinity,
-    ...(seen?.between ?? []),
-    seen?.at ?? -Infinity,
-  ];
+  const times = [lastTimeOf(run, index) ?? -Infinity, ...(seen?.between ?? []), seen?.at ?? -Infinity];
   return times.some((at) => at > from && at <= run.at);
 }

@@ -8,6 +8,7 @@ import { coldestPoint, ENDS_K } from './claims/frost';
 import { AGAIN_K as LIMIT_AGAIN_K } from './claims/limit';
 import { AGAIN_K as FLOOR_AGAIN_K } from './claims/source-guard';
 import type { Condition, ConditionNode } from './rule-body';
+import { valueOf } from './readings';
 import { entry, type Run } from './run';
 import type { Claim } from './types';
 
@@ -64,7 +65,7 @@ interface Compared {
 /** The way a point would have to go from where it is; none for one that is not to be trusted. */
 function past(run: Run, point: number | null, value: number, compared: Compared): Threshold[] {
   if (point === null || run.usable[point] !== 'good') return [];
-  const now = entry(run.points, point).value;
+  const now = valueOf(run, point);
   if (now === null) return [];
   const { of, lowIncludes, overTime = false } = compared;
   const isLow = lowIncludes ? now <= value : now < value;
@@ -160,8 +161,8 @@ function highLimit(run: Run, channel: number): Threshold[] {
 function leastGain(run: Run, channel: number, rule: number): Threshold[] {
   const gain = entry(run.plan.rules, rule).rest?.leastGain ?? null;
   if (gain === null || gain.intake === null || entry(run.channels, channel).counted === 'off') return [];
-  const intake = entry(run.points, gain.intake).value;
-  const back = gain.return === null ? null : entry(run.points, gain.return).value;
+  const intake = valueOf(run, gain.intake);
+  const back = gain.return === null ? null : valueOf(run, gain.return);
   if (intake === null || back === null) return [];
   const common = { of: 'rest', overTime: true } as const;
   return [

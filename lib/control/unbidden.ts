@@ -4,6 +4,7 @@
  * to another wire must not keep a house cold.
  */
 import { awaitReading, isOver } from './lines';
+import { timeOf, valueOf } from './readings';
 import { entry, type Run } from './run';
 
 /** A fan runs on for a while, and a clamp is read once a report: this long after the order a reading counts. */
@@ -16,7 +17,8 @@ export function settleUnbidden(run: Run, channel: number): void {
   let unbidden = memory.unbidden === true;
   if (memory.counted === 'on' || run.usable[runProofPoint] === 'bad') unbidden = false;
   else if (run.usable[runProofPoint] === 'good') {
-    const { value, at } = entry(run.points, runProofPoint);
+    const value = valueOf(run, runProofPoint);
+    const at = timeOf(run, runProofPoint);
     const says = at !== null && at >= (memory.countedSince ?? -Infinity) + RUN_DOWN_MS;
     if (!says) awaitReading(run, runProofPoint);
     else if (value !== null) unbidden = isOver(run, runProofPoint, config.runProof.above);

@@ -1,6 +1,10 @@
 /** The things of the yard as routes answer them and pages show them: what was given, with its id and how often it changed. */
 import { z } from 'zod';
-import { channelFields, houseFields, nodeFields, pointFields, sourceFields } from './yard';
+import { channelFields } from './channel';
+import { houseFields } from './house';
+import { nodeFields } from './node';
+import { pointFields } from './point';
+import { sourceFields } from './source';
 
 /** Grows by one with each change; the ETag is made of it. */
 const entity = { id: z.string(), revision: z.number() };

@@ -5,7 +5,7 @@ import { correct, latestReadings } from '@/db/queries/reading';
 import type { KeptMemory } from '@/db/queries/running';
 import { compile } from '@/lib/control/compile';
 import { explain } from '@/lib/control/explain';
-import { migrateMemory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import type { Explanation } from '@/lib/control/events';
 import type { Observed } from '@/lib/control/types';
 

@@ -71,7 +71,7 @@ export function adviceWords(mix: Mix, goals: Goals, adding: string, advice: Advi
 
 function bothWords(goals: Goals, adding: string, both: Advice['both']): string {
   if (both === null)
-    return `Both at once cannot be met with ${adding} and water: look for a material that is ${'drier or wetter, or of other C:N'}, or settle for one of the two.`;
+    return `Both at once cannot be met with ${adding} and water: look for a material that is drier or wetter, or of other C:N, or settle for one of the two.`;
   const parts = [
     both.massKg > 0 ? `${kilograms(both.massKg)} of ${adding}` : null,
     both.waterL >= 0.5 ? `${decimal(both.waterL, 0)}${space}L of water` : null,

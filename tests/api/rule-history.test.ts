@@ -1,6 +1,7 @@
 // Retired and brought back: who, when, why, and never into force by itself.
 import { beforeAll, expect, test } from 'vitest';
 import { type Asker, errorsOf, type Json, newHolding, personOf } from './asker';
+import { makeLongHouse } from './long-house';
 import * as shown from './shown';
 
 let owner: Asker;
@@ -14,11 +15,7 @@ beforeAll(async () => {
   grower = await personOf(larkmoor, 'grower', 'grower@larkmoor.example');
   installer = await personOf(larkmoor, 'installer', 'installer@larkmoor.example');
   stranger = await personOf(await newHolding('stonebeck'), 'owner', 'owner@stonebeck.example');
-  await owner.make('/houses', shown.house);
-  await owner.make('/houses/long-house/nodes', shown.node);
-  for (const point of [shown.bench, ...shown.otherPoints])
-    await owner.make('/houses/long-house/points', point);
-  await owner.make('/houses/long-house/sources', shown.source);
+  await makeLongHouse(owner);
   await owner.make('/houses/long-house/channels', shown.fan);
 });
 

@@ -1,17 +1,14 @@
 // Drafts, checks and what is in force.
 import { beforeAll, expect, test } from 'vitest';
 import { type Asker, errorsOf, itemsOf, type Json, newHolding, personOf } from './asker';
+import { makeLongHouse } from './long-house';
 import * as shown from './shown';
 
 let owner: Asker;
 let rule: string;
 beforeAll(async () => {
   owner = await personOf(await newHolding('larkmoor'), 'owner', 'owner@larkmoor.example');
-  await owner.make('/houses', shown.house);
-  await owner.make('/houses/long-house/nodes', shown.node);
-  for (const point of [shown.bench, ...shown.otherPoints])
-    await owner.make('/houses/long-house/points', point);
-  await owner.make('/houses/long-house/sources', shown.source);
+  await makeLongHouse(owner);
   await owner.make('/houses/long-house/channels', shown.fan);
   rule = `/rules/${String((await owner.make('/houses/long-house/rules', shown.rule))['id'])}`;
 });

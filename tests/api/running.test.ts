@@ -8,9 +8,9 @@ import { writeRunning } from '@/db/queries/running';
 import { emptyMemory } from '@/lib/control/memory';
 import { sql } from 'drizzle-orm';
 import { type Asker, errorsOf, itemsOf, type Json, newHolding, personOf } from './asker';
+import { AT, makeLongHouse } from './long-house';
 import * as shown from './shown';
 
-const AT = '/houses/long-house';
 const FAN = `${AT}/channels/1`;
 let larkmoor: Holding;
 let owner: Asker;
@@ -20,10 +20,7 @@ const channelIds = new Map<string, string>();
 beforeAll(async () => {
   larkmoor = await newHolding('larkmoor');
   owner = await personOf(larkmoor, 'owner', 'owner@larkmoor.example');
-  houseId = String((await owner.make('/houses', shown.house))['id']);
-  await owner.make(`${AT}/nodes`, shown.node);
-  for (const point of [shown.bench, ...shown.otherPoints]) await owner.make(`${AT}/points`, point);
-  await owner.make(`${AT}/sources`, shown.source);
+  houseId = await makeLongHouse(owner);
   const mat = {
     ...shown.vent,
     number: 3,

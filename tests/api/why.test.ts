@@ -8,9 +8,9 @@ import { downTo } from '@/lib/server/why-ladder';
 import type { Explanation } from '@/lib/control/events';
 import type { Claim, Data, State } from '@/lib/control/types';
 import { type Asker, type Json, newHolding, personOf } from './asker';
+import { AT, makeLongHouse } from './long-house';
 import * as shown from './shown';
 
-const AT = '/houses/long-house';
 const MIN = 60_000;
 /** A night that is over: nothing of it hangs on the time of the test. */
 const DUSK = Date.now() - 20 * 3_600_000;
@@ -24,10 +24,7 @@ let fan: string;
 beforeAll(async () => {
   larkmoor = await newHolding('larkmoor');
   owner = await personOf(larkmoor, 'owner', 'owner@larkmoor.example');
-  houseId = String((await owner.make('/houses', shown.house))['id']);
-  await owner.make(`${AT}/nodes`, shown.node);
-  for (const point of [shown.bench, ...shown.otherPoints]) await owner.make(`${AT}/points`, point);
-  await owner.make(`${AT}/sources`, shown.source);
+  houseId = await makeLongHouse(owner);
   fan = String((await owner.make(`${AT}/channels`, shown.fan))['id']);
   await writeRunning(everyHolding(), {
     switchings: [

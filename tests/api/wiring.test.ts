@@ -5,16 +5,13 @@ import { everyHolding } from '@/db/client';
 import { findNodeByToken } from '@/db/queries/plan';
 import { hashToken } from '@/lib/server/tokens';
 import { type Asker, errorsOf, type Json, newHolding, personOf } from './asker';
+import { AT, makeLongHouse } from './long-house';
 import * as shown from './shown';
 
-const AT = '/houses/long-house';
 let owner: Asker;
 beforeAll(async () => {
   owner = await personOf(await newHolding('larkmoor'), 'owner', 'owner@larkmoor.example');
-  await owner.make('/houses', shown.house);
-  await owner.make(`${AT}/nodes`, shown.node);
-  for (const point of [shown.bench, ...shown.otherPoints]) await owner.make(`${AT}/points`, point);
-  await owner.make(`${AT}/sources`, shown.source);
+  await makeLongHouse(owner);
   for (const number of [1, 2, 3]) {
     await owner.make(`${AT}/channels`, { ...shown.fan, number, relay: number, key: `c${number}` });
   }

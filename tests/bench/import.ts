@@ -24,7 +24,7 @@ export async function bench() {
   const imports = await import('@/db/queries/import');
   const { createPoint } = await import('@/db/queries/point');
   const { storeReadings } = await import('@/db/queries/reading-write');
-  const { PointCreate } = await import('@/lib/schema/yard');
+  const { PointCreate } = await import('@/lib/schema/point');
   const { writePiece } = await import('@/lib/server/import-file');
   const { clockFrom } = await import('@/worker/clock');
   const { runImports } = await import('@/worker/jobs/import-run');

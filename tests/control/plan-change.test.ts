@@ -1,7 +1,8 @@
 /** Changes in mid-draw, and a memory that outlives them. On paper. */
 import { describe, expect, it } from 'vitest';
 import { compile } from '@/lib/control/compile';
-import { MEMORY_VERSION, migrateMemory } from '@/lib/control/memory';
+import { MEMORY_VERSION } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import { step } from '@/lib/control/step';
 import type { HouseConfig } from '@/lib/control/types';
 import { body, channel, house, MIN, point, rest, rule, S, source, START } from './house';
@@ -15,16 +16,11 @@ const config = (more: Partial<HouseConfig> = {}, own = rest(600, 1200)) =>
     rules: [rule('fan', body({ rest: own }))],
     ...more,
   });
-const change = (player: Player, to: HouseConfig) => {
-  player.plan = compile(to);
-  player.step();
-};
-
 describe('a change in mid-draw', () => {
   it('of the longest draw counts from its step on', () => {
     const player = new Player(config(), cold);
     player.pass(300 * S);
-    change(player, config({}, rest(300, 1200)));
+    player.replan(config({}, rest(300, 1200)));
     player.pass(10 * MIN);
     // half is left, and carries half of 300 s
     expect(player.switchings().slice(0, 2)).toEqual([
@@ -36,7 +32,7 @@ describe('a change in mid-draw', () => {
   it('of the least rest moves the end of a rest that is on', () => {
     const player = new Player(config(), cold);
     player.pass(700 * S);
-    change(player, config({}, rest(600, 300)));
+    player.replan(config({}, rest(600, 300)));
     player.until(START + 899.999 * S);
     expect(player.says()).toBe('off rest');
     player.until(START + 900 * S);
@@ -46,7 +42,7 @@ describe('a change in mid-draw', () => {
   it('that takes the rule away leaves the channel idle, once its least on has passed', () => {
     const player = new Player(config(), cold);
     player.pass(30 * S);
-    change(player, config({ rules: [] }));
+    player.replan(config({ rules: [] }));
     expect(player.says()).toBe('on short-cycle');
     player.pass(MIN);
     expect(player.switchings().at(-1)).toEqual([60, 'off', 'idle']);
@@ -58,12 +54,12 @@ describe('a change in mid-draw', () => {
     const fan = (more: object) => [channel('fan', 1, { source: 'heap', ...more })];
     const over = new Player(config({ points, channels: fan(limited) }), { ...cold, air: 21, amps: 0 });
     expect(over.says()).toBe('off limit');
-    change(over, config({ points, channels: fan({}) }));
+    over.replan(config({ points, channels: fan({}) }));
     expect(over.says()).toBe('on band');
     const standing = new Player(config({ points, channels: fan(limited) }), { ...cold, amps: 0 });
     standing.pass(MIN);
     expect(standing.faults()).toContain('fan-standing');
-    change(standing, config({ points, channels: fan({}) }));
+    standing.replan(config({ points, channels: fan({}) }));
     expect(standing.faults()).not.toContain('fan-standing');
     expect(standing.heap().drawing).toBe(true);
   });
@@ -74,7 +70,7 @@ describe('a change in mid-draw', () => {
     ];
     const player = new Player(config({ channels: fan(300) }), cold);
     player.until(START + 310 * S);
-    change(player, config({ channels: fan(null) }));
+    player.replan(config({ channels: fan(null) }));
     player.until(START + 500 * S);
     expect(player.says()).toBe('off limit');
     player.at({ bench: 8 }).at({ bench: 3 });
@@ -97,10 +93,10 @@ describe('what is kept with its id', () => {
     player.pass(100 * S);
     player.order({ kind: 'hand', channel: 'fan', state: 'off', seconds: 3600, holdInFrost: false });
     const without = config({ channels: [channel('lamp', 2)], rules: [] });
-    change(player, without);
+    player.replan(without);
     expect(player.result.channels.map((one) => one.id)).toEqual(['lamp']);
     player.until(START + 160 * S);
-    change(player, config());
+    player.replan(config());
     expect(player.says()).toBe('off short-cycle');
     player.until(START + 220 * S);
     expect(player.says()).toBe('on band');
@@ -110,12 +106,12 @@ describe('what is kept with its id', () => {
     const player = new Player(config(), cold);
     player.pass(100 * S);
     expect(player.says()).toBe('on band');
-    change(player, config({ channels: [channel('lamp', 2)], rules: [] }));
+    player.replan(config({ channels: [channel('lamp', 2)], rules: [] }));
     // 100 of 600 s are drawn, and without a rule there is no rest that would bring them back
     player.until(START + 160 * S);
     expect(player.heap()).toMatchObject({ drawing: false, drawnTodayS: 100 });
     expect(player.heap().credit).toBeCloseTo(1 - 100 / 600, 6);
-    change(player, config());
+    player.replan(config());
     expect(player.says()).toBe('off short-cycle');
     player.until(START + 219.999 * S);
     expect(player.says()).toBe('off short-cycle');
@@ -128,9 +124,9 @@ describe('what is kept with its id', () => {
     const player = new Player(config(), cold);
     player.pass(300 * S);
     const free = [channel('fan', 1), channel('lamp', 2)];
-    change(player, config({ sources: [], channels: free, rules: [rule('fan', body())] }));
+    player.replan(config({ sources: [], channels: free, rules: [rule('fan', body())] }));
     player.pass(5000 * S, MIN);
-    change(player, config());
+    player.replan(config());
     expect(player.heap()).toMatchObject({ drawing: true, drawnTodayS: 300 });
     expect(player.heap().credit).toBeCloseTo(0.5, 6);
   });
@@ -140,14 +136,14 @@ describe('what is kept with its id', () => {
     player.at({ bench: 5 });
     const [own] = config().rules;
     if (own === undefined) throw new Error('The house has a rule.');
-    change(player, config({ rules: [{ ...own, versionId: 'second', version: 2 }] }));
+    player.replan(config({ rules: [{ ...own, versionId: 'second', version: 2 }] }));
     expect(player.says()).toBe('on band');
   });
 
   it('channels in another order keep what is theirs', () => {
     const player = new Player(config(), cold);
     player.order({ kind: 'hand', channel: 'lamp', state: 'on', seconds: 600, holdInFrost: false });
-    change(player, { ...config(), channels: config().channels.toReversed() });
+    player.replan({ ...config(), channels: config().channels.toReversed() });
     expect([player.says('fan'), player.says('lamp')]).toEqual(['on band', 'on hand']);
   });
 });

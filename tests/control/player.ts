@@ -1,7 +1,8 @@
 /** Runs a house through time: what its points show, what people order, and steps whenever the core asked for one. */
 import { compile } from '@/lib/control/compile';
 import type { ControlEvent } from '@/lib/control/events';
-import { emptyMemory, migrateMemory, type Memory } from '@/lib/control/memory';
+import { emptyMemory, type Memory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import type { Plan } from '@/lib/control/plan';
 import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
@@ -67,6 +68,13 @@ export class Player {
 
   pass(ms: number, every?: number): this {
     return this.until(this.now + ms, every);
+  }
+
+  /** Another plan from this step on. */
+  replan(config: HouseConfig): this {
+    this.plan = compile(config);
+    this.step();
+    return this;
   }
 
   /** New readings a ms later: two of one point at one time would be one reading. */

@@ -7,7 +7,7 @@ import { refreshNights, remakeNights } from '@/db/queries/night-making';
 import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
 import { writeRunning, type DecisionRow } from '@/db/queries/running';
 import { night as nightTable } from '@/db/schema/study';
-import { calibration, point } from '@/db/schema/yard';
+import { calibration, point } from '@/db/schema/node';
 import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';

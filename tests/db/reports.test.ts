@@ -14,7 +14,7 @@ import { readReport } from '@/db/queries/report-page';
 import { createReportSchedule, findReportSchedule } from '@/db/queries/report-schedule';
 import { findHouse } from '@/db/queries/house';
 import { writeRunning } from '@/db/queries/running';
-import { point } from '@/db/schema/yard';
+import { point } from '@/db/schema/node';
 import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';

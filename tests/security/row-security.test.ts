@@ -6,7 +6,7 @@ import { closePools, inHolding, everyHolding } from '@/db/client';
 import { createHolding } from '@/db/queries/people';
 import { createHouse } from '@/db/queries/house';
 import { addAudit } from '@/db/queries/audit';
-import { HouseCreate } from '@/lib/schema/yard';
+import { HouseCreate } from '@/lib/schema/house';
 import { appUrl, ownerUrl } from '../support/own-database-address';
 
 const house = HouseCreate.parse({ name: 'House', zone: 'Europe/London', latitude: 54, longitude: -2 });

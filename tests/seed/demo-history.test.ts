@@ -10,7 +10,7 @@ import { listDecisions } from '@/db/queries/decision';
 import { listProbeSets } from '@/db/queries/probe-set';
 import { listSwitchings, readMemory } from '@/db/queries/running';
 import { compile } from '@/lib/control/compile';
-import { migrateMemory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import { readWorld } from '@/worker/yard/store';
 import { fingerprint, houseId, playDemo, rowsOf, TO, type Played } from './scene';
 

@@ -8,7 +8,7 @@ import { loadHouseConfig } from '@/db/queries/plan';
 import { storeReadings, type ReadingRow } from '@/db/queries/reading-write';
 import { findRule } from '@/db/queries/rule';
 import { writeRunning, type DecisionRow } from '@/db/queries/running';
-import { point } from '@/db/schema/yard';
+import { point } from '@/db/schema/node';
 import { longHouse } from '@/db/seed/long-house';
 import { writeHolding } from '@/db/seed/people';
 import { writeHouse, type SeededHouse } from '@/db/seed/write-house';

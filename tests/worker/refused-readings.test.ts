@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, expect, it } from 'vitest';
 import { eq } from 'drizzle-orm';
 import { closePools } from '@/db/client';
-import { node as nodes } from '@/db/schema/yard';
+import { node as nodes } from '@/db/schema/node';
 import { makeScene, pack, type Scene } from '../support/field-scene';
 import { OutsideNode } from '../support/outside-node';
 import { ownWorker, type OwnWorker } from '../support/own-worker';

@@ -2,7 +2,8 @@ import { sql } from 'drizzle-orm';
 import { afterAll, describe, expect, it, onTestFinished } from 'vitest';
 import { closePools } from '@/db/client';
 import { readMemory } from '@/db/queries/running';
-import { migrateMemory, type Memory } from '@/lib/control/memory';
+import type { Memory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import { CutLine } from '../support/cut-line';
 import {
   force,

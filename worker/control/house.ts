@@ -1,59 +1,38 @@
 /**
- * One house under control: what was observed, the core's memory, its nodes' relays, and the loop that steps whenever
- * something came in or falls due. Nothing that goes wrong in here leaves it.
+ * One house under control: the core's memory, and the loop that steps whenever something came in or falls due. Nothing
+ * that goes wrong in here leaves it.
  */
 import type { HouseRecord } from '@/db/queries/plan';
-import type { MemoryRow } from '@/db/queries/running';
 import { compile } from '@/lib/control/compile';
 import type { Memory } from '@/lib/control/memory';
 import type { Plan } from '@/lib/control/plan';
 import { step } from '@/lib/control/step';
 import type { StepResult } from '@/lib/control/step-result';
-import type { Observed, ObservedPoint, PersonCommand } from '@/lib/control/types';
+import type { Observed, PersonCommand } from '@/lib/control/types';
 import type { HouseState } from '@/lib/schema/house-state';
 import { controlFailed, wantedAlarms } from '../alarms/wanted';
 import type { Cancel } from '../clock';
 import { decisionRows, switchingRows } from './house-record';
 import type { ControlledHouse, HouseDeps } from './house-deps';
 import { HouseNodes } from './house-nodes';
+import { HouseRows } from './house-rows';
 import type { Entry } from './journal';
-
-/** A reading as control takes it. */
-export interface Seen {
-  pointId: string;
-  at: number;
-  /** Corrected by calibration. */
-  value: number;
-  /** As sent. */
-  raw: number;
-}
+import { SeenPoints, type Seen } from './seen-points';
 
 /** A look at least this often, real time, should a wake be lost; the step itself finds nothing new then. */
 const LOOK_EVERY_MS = 15_000;
 const RETRY_FAILED_MS = 30_000;
-/** States go to browsers and database at most five times a second. */
-const STATE_EVERY_MS = 200;
-/** Without any event the memory is kept this often all the same. */
-const MEMORY_EVERY_MS = 60_000;
-/** Times of a point's readings that are remembered between two steps. */
-const BETWEEN_MAX = 1000;
 
 export class House implements ControlledHouse {
   readonly nodes: HouseNodes;
   last: StepResult | null = null;
-  state: HouseState | null = null;
   /** Null: what is to be driven by has not been compiled yet, or cannot be. */
   private plan: Plan | null;
-  private readonly points = new Map<string, ObservedPoint>();
-  /** Points whose newest reading no step has seen yet. */
-  private readonly untold = new Set<string>();
+  private readonly points = new SeenPoints();
+  private readonly rows: HouseRows;
   private commands: PersonCommand[] = [];
   private failure: { why: string; since: number } | null = null;
   private cancelWake: Cancel = () => undefined;
-  private cancelState: Cancel | null = null;
-  private stateAtMs = -Infinity;
-  private memoryAtMs = -Infinity;
-  private takenKept: number;
   private stopped = false;
 
   constructor(
@@ -65,8 +44,8 @@ export class House implements ControlledHouse {
     private readonly deps: HouseDeps,
   ) {
     this.plan = compile(record.config);
-    this.takenKept = memory.taken;
     this.nodes = new HouseNodes(this, memory, formerLeaseEnd, deps);
+    this.rows = new HouseRows(this, memory.taken, deps);
     this.observe(latest);
   }
 
@@ -90,30 +69,18 @@ export class House implements ControlledHouse {
     return this.failure !== null;
   }
 
-  /** Takes readings in; one older than the newest of its point only tells that there was no silence. */
+  /** How the house stood when that was last told. */
+  get state(): HouseState | null {
+    return this.rows.state;
+  }
+
   observe(readings: readonly Seen[]): void {
-    for (const { pointId, at, value, raw } of readings) {
-      const before = this.points.get(pointId);
-      const between = before?.between ?? [];
-      if (before !== undefined && at <= before.at) {
-        if (at < before.at && between.length < BETWEEN_MAX)
-          before.between = [...between, at].sort((a, b) => a - b);
-        continue;
-      }
-      const times = before !== undefined && this.untold.has(pointId) ? [...between, before.at] : between;
-      this.untold.add(pointId);
-      this.points.set(pointId, {
-        value,
-        at,
-        ...(raw === value ? {} : { raw }),
-        between: times.slice(-BETWEEN_MAX),
-      });
-    }
+    this.points.observe(readings);
   }
 
   /** Time of the newest reading of a point, believed or not. */
   newestAt(pointId: string): number | null {
-    return this.points.get(pointId)?.at ?? null;
+    return this.points.newestAt(pointId);
   }
 
   /** Commands of people; each number is taken once. */
@@ -144,14 +111,15 @@ export class House implements ControlledHouse {
   stop(): void {
     this.stopped = true;
     this.cancelWake();
-    this.cancelState?.();
+    this.rows.stop();
     this.deps.alarms.forget(this.id);
   }
 
   /** What a clean end keeps: the memory as it stands, so that no second of it is lost. */
   keepMemory(): void {
-    if (this.last !== null)
-      void this.deps.journal.append({ memory: this.memoryRow(this.deps.clock.appNow()) });
+    if (this.last === null) return;
+    const memory = this.rows.memoryRow(this.memory, this.deps.clock.appNow());
+    void this.deps.journal.append({ memory });
   }
 
   private stepOnce(): void {
@@ -168,8 +136,7 @@ export class House implements ControlledHouse {
     this.memory = result.memory;
     this.last = result;
     this.commands = this.commands.filter((one) => one.number > result.memory.taken);
-    for (const point of this.points.values()) delete point.between;
-    this.untold.clear();
+    this.points.told();
     this.nodes.told();
 
     const orders = this.nodes.order(result);
@@ -178,8 +145,8 @@ export class House implements ControlledHouse {
       decisions: decisionRows(this.record, result.events),
     };
     metrics.add('switchings_total', entry.switchings?.length ?? 0);
-    const isEvent = result.events.length > 0 || result.memory.taken > this.takenKept;
-    const memory = this.rowToKeep(now, isEvent);
+    const isEvent = result.events.length > 0 || result.memory.taken > this.rows.takenKept;
+    const memory = this.rows.toKeep(result.memory, () => this.nodes.state(result, now), now, isEvent);
     if (memory !== null) entry.memory = memory;
     const committed = memory !== null || isEvent ? journal.append(entry) : null;
     this.nodes.release(orders, wasFailed, committed);
@@ -195,50 +162,9 @@ export class House implements ControlledHouse {
   private observed(): Observed {
     return {
       workerStartedAt: this.deps.startedAt,
-      points: Object.fromEntries(this.points),
+      points: this.points.observed(),
       relays: this.nodes.observed(),
       commands: this.commands,
-    };
-  }
-
-  /** State always, memory where something happened; null while the last one is too fresh to write again. */
-  private rowToKeep(now: number, isEvent: boolean): MemoryRow | null {
-    const nowMs = this.deps.clock.monotonicMs();
-    const isDue = nowMs - this.stateAtMs >= STATE_EVERY_MS;
-    if (!isEvent && !isDue) {
-      this.cancelState ??= this.deps.clock.after(STATE_EVERY_MS, () => {
-        this.cancelState = null;
-        this.step();
-      });
-      return null;
-    }
-    this.stateAtMs = nowMs;
-    this.state = this.last === null ? null : this.nodes.state(this.last, now);
-    if (this.state === null) return null;
-    this.deps.onState(this, this.state);
-    const withMemory = isEvent || nowMs - this.memoryAtMs >= MEMORY_EVERY_MS;
-    if (withMemory) this.memoryAtMs = nowMs;
-    return withMemory ? this.memoryRow(now) : this.stateRow(now);
-  }
-
-  private stateRow(now: number): MemoryRow {
-    return {
-      holdingId: this.holdingId,
-      houseId: this.id,
-      state: this.state === null ? null : { ...this.state },
-      stateAt: new Date(now),
-    };
-  }
-
-  private memoryRow(now: number): MemoryRow {
-    this.takenKept = this.memory.taken;
-    return {
-      ...this.stateRow(now),
-      memory: { ...this.memory },
-      memoryAt: new Date(now),
-      taken: this.memory.taken,
-      planRevision: this.record.planRevision,
-      epoch: this.deps.epoch(),
     };
   }
 

@@ -4,12 +4,13 @@ import { commandsAfter, housesWithCommands } from '@/db/queries/waiting-command'
 import { correct, latestReadings } from '@/db/queries/reading';
 import { readMemory, writeNodeStatus } from '@/db/queries/running';
 import { leaseS } from '@/lib/field/frames';
-import { migrateMemory } from '@/lib/control/memory';
+import { migrateMemory } from '@/lib/control/memory-versions';
 import { controlFailed } from '../alarms/wanted';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
-import { House, type Seen } from './house';
+import { House } from './house';
 import type { HouseDeps } from './house-deps';
+import type { Seen } from './seen-points';
 
 /** One in case a notification was missed: level, not edge. */
 const LOOK_EVERY_MS = 30_000;

@@ -3,29 +3,24 @@
  * clock and the wire are played; no figure is made up. The yard's process then goes on from the world that is saved here.
  */
 import { v7 } from 'uuid';
-import { everyHolding, everyPool, type Holding } from '@/db/client';
+import { everyHolding, everyPool } from '@/db/client';
 import { createHeapEntry } from '@/db/queries/heap-entry';
 import { releaseLead, takeLead } from '@/db/queries/leader';
-import { addPersonCommand } from '@/db/queries/person-command';
-import { loadHouse, type HouseRecord } from '@/db/queries/plan';
-import { rollUp } from '@/db/queries/reading-write';
 import { createProbeSet } from '@/db/queries/probe-set';
-import { findRule } from '@/db/queries/rule';
-import { forceDraft, writeDraft } from '@/db/queries/rule-version';
-import { writeNodeStatus, writeRunning } from '@/db/queries/running';
-import { commandsAfter } from '@/db/queries/waiting-command';
+import { loadHouse } from '@/db/queries/plan';
 import { roundOf, type RoundDeed } from '@/db/seed/heap-rounds';
-import { readyBy, type HeapEffect, type PersonDeed } from '@/db/seed/winter';
+import type { HeapEffect } from '@/db/seed/winter';
 import type { SeededHouse } from '@/db/seed/write-house';
 import { HeapEntryCreate } from '@/lib/schema/heap';
-import { RuleBody } from '@/lib/schema/rule';
 import { sensorReadings } from '../yard/sensors';
 import { saveWorld } from '../yard/store';
 import { createWorld, feedHeap, stepWorld, turnHeap, type World, type YardRelays } from '../yard/world';
 import { deedsUntil, silencesUntil, type Deed, type Silence } from './demo-history/deeds';
+import { keepEnd } from './demo-history/end';
 import { HouseRun } from './demo-history/house-run';
 import { Kept } from './demo-history/kept';
-import { refreshNights } from './nights';
+import { actPerson, sayReady } from './demo-history/people';
+import type { Place } from './demo-history/place';
 
 export interface HistoryHolding {
   holdingId: string;
@@ -48,12 +43,6 @@ const WRITE_EVERY_MS = 6 * 3_600_000;
 /** So often the event loop gets its turn, or nothing would be written meanwhile. */
 const PAUSE_EVERY_MS = 20 * 60_000;
 const SAY_EVERY_MS = 7 * 86_400_000;
-
-interface Place {
-  run: HouseRun;
-  holding: Holding;
-  record: HouseRecord;
-}
 
 export async function playHistory(holdings: readonly HistoryHolding[], span: HistorySpan): Promise<void> {
   if (span.to <= span.from) return saveWorld(span.stateFile, createWorld(span.seed, span.to));
@@ -91,7 +80,7 @@ class History {
     this.silences = silencesUntil(to, zoneOf);
     // a node sends what it reads as soon as it is welcome
     this.sample(from);
-    await this.sayReady();
+    for (const place of this.places.values()) await sayReady(place, from);
 
     let writeAt = from + WRITE_EVERY_MS;
     let sayAt = from + SAY_EVERY_MS;
@@ -135,19 +124,6 @@ class History {
     }
   }
 
-  /** The heaps were warm when the controller was put in: somebody says so, or they would have to prove it for days. */
-  private async sayReady(): Promise<void> {
-    const { from } = this.span;
-    for (const { run, holding, record } of this.places.values()) {
-      const by = readyBy[record.slug] ?? record.slug;
-      for (const source of record.config.sources.filter((one) => one.kind === 'heap' && one.ready !== null)) {
-        const order = { at: new Date(from), by, body: { kind: 'ready', source: source.slug } } as const;
-        await addPersonCommand(holding, record.id, order);
-      }
-      run.order(await commandsAfter(holding, record.id, run.taken), from);
-    }
-  }
-
   /** Lets every house step when it wants to, in order of time, up to but not at `until`. */
   private wakeUntil(until: number): void {
     for (;;) {
@@ -180,7 +156,8 @@ class History {
   private async act({ at, house, ...deed }: Deed): Promise<void> {
     const place = this.places.get(house);
     if (place === undefined) return;
-    if (deed.what === 'person') return this.actPerson(place, deed.deed, at);
+    if (deed.what === 'person')
+      return at < this.span.from ? undefined : actPerson(place, this.kept, deed.deed, at);
     if (deed.what === 'round') return this.actRound(place, deed.deed, at);
     const { entry, by, effect } = deed.deed;
     const given = HeapEntryCreate.parse({ ...entry, at: new Date(at).toISOString() });
@@ -204,36 +181,6 @@ class History {
     await createProbeSet(holding, record.id, given, { by: deed.by, now: new Date(at) });
   }
 
-  private async actPerson({ run, holding, record }: Place, deed: PersonDeed, at: number): Promise<void> {
-    if (at < this.span.from) return;
-    const act = { by: deed.by, now: new Date(at) };
-    if (deed.does === 'acknowledge') {
-      const { by, note } = deed;
-      this.kept.alarms.push({ holdingId: holding.id, houseId: record.id, does: 'acknowledge', at, by, note });
-    } else if (deed.does === 'force') {
-      const rule = await findRule(holding, deed.rule);
-      if (rule === null) throw new Error(`The demo has no rule ${deed.rule}.`);
-      const drafted = await writeDraft(holding, rule, RuleBody.parse(deed.body), act);
-      await forceDraft(holding, drafted, deed.why, act);
-      const changedRecord = await loadHouse(holding, record.id);
-      if (changedRecord !== null) run.replan(changedRecord, at);
-    } else {
-      const { channel } = deed;
-      const body =
-        deed.does === 'auto'
-          ? ({ kind: 'auto', channel } as const)
-          : ({
-              kind: 'hand',
-              channel,
-              state: deed.state,
-              seconds: deed.seconds,
-              holdInFrost: false,
-            } as const);
-      await addPersonCommand(holding, record.id, { at: act.now, by: act.by, body });
-      run.order(await commandsAfter(holding, record.id, run.taken), at);
-    }
-  }
-
   /** Begins to write once what was begun before is written. */
   private async write(): Promise<void> {
     await this.writing;
@@ -246,23 +193,11 @@ class History {
   private async end(): Promise<void> {
     const { from, to, stateFile } = this.span;
     this.advance(to);
-    const db = everyHolding();
-    const runs = [...this.places.values()];
-    for (const { run } of runs) run.stepAt(to);
+    const places = [...this.places.values()];
+    for (const { run } of places) run.stepAt(to);
     await this.write();
     await this.writing;
-    const memories = runs.map(({ run }) => run.memoryRow(to));
-    await writeRunning(db, { switchings: [], decisions: [], reports: [], memories });
-    await writeNodeStatus(
-      db,
-      runs.map(({ run }) => run.nodeStatus(to)),
-    );
-    for (const { record } of runs) {
-      const numbers = record.points.map((point) => point.number);
-      for (let weekAt = from; weekAt <= to; weekAt += SAY_EVERY_MS)
-        await rollUp(everyPool(), numbers, weekAt, Math.min(weekAt + SAY_EVERY_MS, to));
-    }
-    for (const { holding, record } of runs) await refreshNights(holding, record.id, to);
+    await keepEnd(places, from, to);
     saveWorld(stateFile, this.world);
     const { readings, switchings, alarms } = this.kept.counts;
     console.log(`History kept. Readings: ${readings}. Switchings: ${switchings}. Alarms: ${alarms}.`);

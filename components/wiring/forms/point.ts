@@ -1,4 +1,4 @@
-import { POINT_ROLES, UNITS } from '@/lib/schema/yard';
+import { POINT_ROLES, UNITS } from '@/lib/schema/point';
 import type { Point } from '@/lib/schema/yard-view';
 import type { Group } from '../spec';
 import { nodeOptions, roleWords, type Yard } from './options';

@@ -6,6 +6,7 @@
 import type { BandReason, RuleStanding } from '../because';
 import type { FactValue } from '../conditions';
 import { awaitReading, exactly, isOver, isUnder, noteLines } from '../lines';
+import { valueOf } from '../readings';
 import { entry, wakeAt, type Run, type RuleCode } from '../run';
 import type { ClaimRung } from './claim';
 
@@ -97,7 +98,7 @@ function codeOf(run: Run, index: number, using: number, latch: boolean): RuleCod
 /** A fact's value now; null where it has no good reading. */
 export function readFact(run: Run, fact: string): FactValue | null {
   const place = run.plan.pointPlaces.get(fact);
-  if (place !== undefined) return run.usable[place] === 'good' ? entry(run.points, place).value : null;
+  if (place !== undefined) return run.usable[place] === 'good' ? valueOf(run, place) : null;
   const now = run.plan.timeFacts(run.at);
   switch (fact) {
     case 'time.hour':
@@ -119,7 +120,7 @@ export function ruleStanding(run: Run, index: number): RuleStanding {
   const { low, high } = entry(run.calendars, index);
   const { using, latch } = entry(run.rules, index);
   const { point, key, offset } = entry(points, using);
-  const value = point === null ? null : entry(run.points, point).value;
+  const value = point === null ? null : valueOf(run, point);
   const why = entry(run.standing, index);
   const standing: RuleStanding = {
     rule: config.name,

@@ -1,5 +1,6 @@
 /** Fail-safe: the channel has rules in season, and none of them has a point or stand-in that is not bad. */
 import type { FailSafeReason } from '../because';
+import { lastTimeOf } from '../readings';
 import { entry } from '../run';
 import type { ClaimRung } from './claim';
 import { hasUsablePoint } from './hand';
@@ -26,7 +27,7 @@ export const failSafe: ClaimRung<'fail-safe'> = {
         named.set(key, {
           point: key,
           why: memory === null ? 'no-such-point' : memory.why,
-          lastAt: memory?.lastAt ?? null,
+          lastAt: point === null ? null : lastTimeOf(run, point),
         });
       }
     }

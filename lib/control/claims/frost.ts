@@ -5,6 +5,7 @@
  */
 import type { FrostReason } from '../because';
 import { isOver, isUnder } from '../lines';
+import { valueOf } from '../readings';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 import { rest, restForbids } from './rest';
@@ -35,7 +36,7 @@ export const frost: ClaimRung<'frost'> = {
     const borrows = forbidden === 'credit-spent' ? 'rest' : forbidden;
     const reason = {
       point: coldest === null ? null : entry(run.plan.points, coldest).key,
-      value: coldest === null ? null : entry(run.points, coldest).value,
+      value: coldest === null ? null : valueOf(run, coldest),
       limit,
       endsAtOrAbove: limit + ENDS_K,
       frostSince: run.frost.since ?? run.at,
@@ -52,7 +53,7 @@ export function coldestPoint(run: Run): number | null {
   let coldest: number | null = null;
   let lowest = Infinity;
   for (const index of run.plan.housePoints) {
-    const { value } = entry(run.points, index);
+    const value = valueOf(run, index);
     if (value === null || value >= lowest || !isBelieved(run, index)) continue;
     lowest = value;
     coldest = index;
@@ -62,15 +63,15 @@ export function coldestPoint(run: Run): number | null {
 
 /** Not bad, or bad only for standing still in the cold, or for having come and gone: it speaks again just now. */
 function isBelieved(run: Run, index: number): boolean {
-  const { value, why, contradictedSince } = entry(run.points, index);
-  if (value === null) return false;
+  const { hasValue, why, contradictedSince } = entry(run.points, index);
+  if (!hasValue) return false;
   if (!isFrozenCold(run, index)) return run.usable[index] !== 'bad' || why === 'unsteady';
   return contradictedSince === null || run.at < contradictedSince + CONTRADICTED_MS;
 }
 
 const isFrozenCold = (run: Run, index: number): boolean => {
-  const { value, why } = entry(run.points, index);
-  return why === 'frozen' && value !== null && !isOver(run, index, STILL_TRUE_C);
+  const { hasValue, why } = entry(run.points, index);
+  return why === 'frozen' && hasValue && !isOver(run, index, STILL_TRUE_C);
 };
 
 /** Whether the coldest point is under a limit, without saying which one it is: another that is colder changes nothing. */

@@ -5,6 +5,7 @@
  */
 import type { LimitReason } from '../because';
 import { isOver } from '../lines';
+import { valueOf } from '../readings';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 
@@ -23,7 +24,7 @@ export const limit: ClaimRung<'limit'> = {
       return {
         cause: memory.overHighLimit ? 'high-limit' : 'high-limit-point-bad',
         point: config.highLimit.point,
-        value: highLimitPoint === null ? null : entry(run.points, highLimitPoint).value,
+        value: highLimitPoint === null ? null : valueOf(run, highLimitPoint),
         above: config.highLimit.above,
         againAtOrBelow: config.highLimit.above - AGAIN_K,
       };

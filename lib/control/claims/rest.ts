@@ -6,6 +6,7 @@
 import type { RestReason } from '../because';
 import { creditAt, drawCost, leastRestMs, recovered, waitingRules } from '../credit';
 import { usedMs } from '../day';
+import { valueOf } from '../readings';
 import { entry, wakeAt, type Run } from '../run';
 import { bandWants } from './band';
 import type { ClaimRung } from './claim';
@@ -146,7 +147,7 @@ export function restTimes(run: Run, place: number): RestTimes {
       : [
           {
             point: own.until.key,
-            value: own.until.point === null ? null : entry(run.points, own.until.point).value,
+            value: own.until.point === null ? null : valueOf(run, own.until.point),
             level: own.until.level,
             good: own.until.point !== null && run.usable[own.until.point] === 'good',
           },

@@ -1,6 +1,7 @@
 /** Source guard: the core is under its floor (1 K to begin again), or the heap is not ready yet. Off. */
 import type { SourceGuardReason } from '../because';
 import { isOver, isUnder } from '../lines';
+import { valueOf } from '../readings';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
 
@@ -19,7 +20,7 @@ export const sourceGuard: ClaimRung<'source-guard'> = {
     const common = {
       source: slug,
       point: config.corePoint,
-      value: core === null ? null : entry(run.points, core).value,
+      value: core === null ? null : valueOf(run, core),
     };
     if (isUnderFloor(run, place)) {
       const floor = config.coreFloor ?? 0;

@@ -8,7 +8,7 @@ import {
   Why,
   WhyQuery,
 } from '@/lib/schema/running';
-import { AllOff, HandCommand } from '@/lib/schema/yard';
+import { AllOff, HandCommand } from '@/lib/schema/channel';
 import { operation } from '../operation';
 
 export const getState = operation({

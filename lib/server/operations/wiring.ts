@@ -5,11 +5,9 @@ import {
   InterlockAmend,
   InterlockCreate,
   LockoutCreate,
-  NodeAmend,
-  NodeCreate,
-  PointAmend,
-  PointCreate,
-} from '@/lib/schema/yard';
+} from '@/lib/schema/channel';
+import { NodeAmend, NodeCreate } from '@/lib/schema/node';
+import { PointAmend, PointCreate } from '@/lib/schema/point';
 import { Channel, FieldNode, FieldNodeWithToken, Interlock, Lockout, Point } from '@/lib/schema/yard-view';
 import { operation } from '../operation';
 

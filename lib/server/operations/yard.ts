@@ -1,5 +1,6 @@
 import { listOf, PageQuery } from '@/lib/schema/common';
-import { HouseAmend, HouseCreate, LoopAmend, LoopCreate, SourceAmend, SourceCreate } from '@/lib/schema/yard';
+import { HouseAmend, HouseCreate } from '@/lib/schema/house';
+import { LoopAmend, LoopCreate, SourceAmend, SourceCreate } from '@/lib/schema/source';
 import { House, Loop, Source } from '@/lib/schema/yard-view';
 import { operation } from '../operation';
 

@@ -2,7 +2,7 @@ import { expect, it } from 'vitest';
 import { channelGroups } from '@/components/wiring/forms/channel';
 import type { Yard } from '@/components/wiring/forms/options';
 import { bodyOf, valuesOf } from '@/components/wiring/spec';
-import { ChannelCreate } from '@/lib/schema/yard';
+import { ChannelCreate } from '@/lib/schema/channel';
 import { USUAL } from '@/lib/units/preferences';
 
 const yard = { points: [], nodes: [], sources: [], channels: [] } as unknown as Yard;

@@ -1,5 +1,5 @@
 import * as houses from '@/db/queries/house';
-import { HouseCreate } from '@/lib/schema/yard';
+import { HouseCreate } from '@/lib/schema/house';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendHouse, getHouse, removeHouse } from '@/lib/server/operations/yard';

@@ -1,5 +1,5 @@
 import * as channels from '@/db/queries/channel';
-import { ChannelCreate } from '@/lib/schema/yard';
+import { ChannelCreate } from '@/lib/schema/channel';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendChannel, getChannel, removeChannel } from '@/lib/server/operations/wiring';

@@ -1,5 +1,5 @@
 import * as interlocks from '@/db/queries/interlock';
-import { InterlockCreate } from '@/lib/schema/yard';
+import { InterlockCreate } from '@/lib/schema/channel';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendInterlock, getInterlock, removeInterlock } from '@/lib/server/operations/wiring';

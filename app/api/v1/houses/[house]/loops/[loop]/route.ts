@@ -1,5 +1,5 @@
 import * as loops from '@/db/queries/loop';
-import { LoopCreate } from '@/lib/schema/yard';
+import { LoopCreate } from '@/lib/schema/source';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendLoop, getLoop, removeLoop } from '@/lib/server/operations/yard';

@@ -1,5 +1,5 @@
 import * as nodes from '@/db/queries/node';
-import { NodeCreate } from '@/lib/schema/yard';
+import { NodeCreate } from '@/lib/schema/node';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendNode, getNode, removeNode } from '@/lib/server/operations/wiring';

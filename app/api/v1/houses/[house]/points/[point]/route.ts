@@ -1,5 +1,5 @@
 import * as points from '@/db/queries/point';
-import { PointCreate } from '@/lib/schema/yard';
+import { PointCreate } from '@/lib/schema/point';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendPoint, getPoint, removePoint } from '@/lib/server/operations/wiring';

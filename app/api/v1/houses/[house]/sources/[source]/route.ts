@@ -1,5 +1,5 @@
 import * as sources from '@/db/queries/source';
-import { SourceCreate } from '@/lib/schema/yard';
+import { SourceCreate } from '@/lib/schema/source';
 import { merged } from '@/lib/server/check';
 import { serve } from '@/lib/server/guard';
 import { amendSource, getSource, removeSource } from '@/lib/server/operations/yard';

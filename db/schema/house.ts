@@ -1,0 +1,57 @@
+import { sql } from 'drizzle-orm';
+import {
+  type AnyPgColumn,
+  bigint,
+  doublePrecision,
+  foreignKey,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import { organization } from './auth';
+import { createdAt, holdingId, removedAt, revision } from './columns';
+
+export const house = pgTable(
+  'house',
+  {
+    holdingId: holdingId().references(() => organization.id, { onDelete: 'cascade' }),
+    id: uuid('id').notNull(),
+    slug: text('slug').notNull(),
+    name: text('name').notNull(),
+    zone: text('zone').notNull(),
+    latitude: doublePrecision('latitude').notNull(),
+    longitude: doublePrecision('longitude').notNull(),
+    altitude: doublePrecision('altitude').notNull(),
+    frostLimit: doublePrecision('frost_limit'),
+    frostAlarm: doublePrecision('frost_alarm'),
+    /** A thermostat that keeps the house without any software; null: nobody has said that there is one. */
+    lastResort: jsonb('last_resort').$type<{ below: number; provedOn: string | null }>(),
+    /** Grows with every change of anything the core reads of this house. */
+    planRevision: bigint('plan_revision', { mode: 'number' }).notNull().default(1),
+    revision: revision(),
+    createdAt: createdAt(),
+    removedAt: removedAt(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.holdingId, table.id] }),
+    uniqueIndex('house_slug')
+      .on(table.holdingId, table.slug)
+      .where(sql`removed_at is null`),
+  ],
+);
+
+/** The column that says which house a row belongs to; `inHouse` is its key. */
+export const ofHouse = () => uuid('house_id').notNull();
+
+/** A row of a house goes with it. */
+export const inHouse = <T extends string>(table: {
+  holdingId: AnyPgColumn<{ tableName: T }>;
+  houseId: AnyPgColumn<{ tableName: T }>;
+}) =>
+  foreignKey({
+    columns: [table.holdingId, table.houseId],
+    foreignColumns: [house.holdingId, house.id],
+  }).onDelete('cascade');
