@@ -4,7 +4,8 @@
 import { spawn } from 'node:child_process';
 import { readdirSync } from 'node:fs';
 import path from 'node:path';
-import { ROOT } from './places.mjs';
+import { bundleSettings } from './build.mjs';
+import { BUILD, ROOT } from './places.mjs';
 import { giveUp, Trouble } from './say.mjs';
 
 const FOLDER = path.join(ROOT, 'tests', 'bench');
@@ -22,10 +23,22 @@ async function main() {
   process.exitCode = failed === 0 ? 0 : 1;
 }
 
-/** A process each, so that one does not measure the heap and the compiled code that another left. */
-function runOne(name) {
-  const tsx = path.join(ROOT, 'node_modules', 'tsx', 'dist', 'cli.mjs');
-  const args = [tsx, '--conditions=react-server', '--expose-gc', path.join(FOLDER, 'run-one.ts'), name];
+/**
+ * A process each, so that one does not measure the heap and the compiled code that another left. What is measured is built
+ * as the programs are: a runner that compiles each module by itself makes a call of every function that is written down.
+ */
+async function runOne(name) {
+  const { build } = await import('esbuild');
+  const result = await build({
+    ...bundleSettings(),
+    entryPoints: ['run-one', name].map((one) => path.join(FOLDER, `${one}.ts`)),
+    outdir: path.join(BUILD, 'bench'),
+    outExtension: { '.js': '.mjs' },
+    plugins: [SCRIPTS_STAY_OUTSIDE],
+  }).catch((error) => error);
+  if (result instanceof Error) throw new Trouble(`The benchmark ${name} does not build:\n${result.message}`);
+  const built = (one) => path.join(BUILD, 'bench', `${one}.mjs`);
+  const args = ['--conditions=react-server', '--expose-gc', built('run-one'), built(name)];
   return new Promise((resolve) => {
     const child = spawn(process.execPath, args, { cwd: ROOT, stdio: ['ignore', 'pipe', 'inherit'] });
     // a library that prints must not come between the lines
@@ -39,5 +52,15 @@ function runOne(name) {
     child.once('close', (code) => resolve(code ?? 1));
   });
 }
+
+/** They find the project by where they lie. */
+const SCRIPTS_STAY_OUTSIDE = {
+  name: 'scripts-stay-outside',
+  setup: (build) =>
+    build.onResolve({ filter: /\/scripts\/[\w-]+\.mjs$/ }, ({ path: asked, resolveDir }) => ({
+      path: path.resolve(resolveDir, asked),
+      external: true,
+    })),
+};
 
 main().catch(giveUp);

@@ -1,13 +1,13 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
-import { Button } from '@/components/ui/button';
-import { Dialog } from '@/components/ui/dialog';
 import { Select, TextField } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import { pointsOfRule } from '@/lib/schema/rule-points';
+import { ChannelSelect } from './channel-select';
 import { CopyPoints } from './copy-points';
+import { DraftDialog } from './draft-dialog';
 import type { KeepRuleProps } from './keeping';
 import { suggestPoint } from './suggest-points';
 import { useTarget } from './use-target';
@@ -58,26 +58,18 @@ export function CopyDialog({ rule, house, points, onClose }: KeepRuleProps & { o
   }
 
   return (
-    <Dialog
-      open
-      onOpenChange={(open) => {
-        if (!open) onClose();
-      }}
+    <DraftDialog
       title={`Copy ${rule.name}`}
       description="A new rule comes of it, as a draft: nothing moves until you put it into force. Later changes of this rule do not reach the copy."
-      actions={
-        <>
-          <Button kind="primary" busy={busy} disabled={target === null} onClick={() => void copy()}>
-            Write the copy
-          </Button>
-          <Button onClick={onClose}>Not now</Button>
-          <p role="alert" className="w-full font-semibold text-alarm empty:hidden">
-            {errors.all ??
-              errors.version ??
-              (isLost ? 'The server does not answer. Close this and try again.' : null)}
-          </p>
-        </>
+      write="Write the copy"
+      disabled={target === null}
+      failure={
+        errors.all ??
+        errors.version ??
+        (isLost ? 'The server does not answer. Close this and try again.' : null)
       }
+      onWrite={() => void copy()}
+      {...{ busy, onClose }}
     >
       <Select
         label="House"
@@ -96,19 +88,13 @@ export function CopyDialog({ rule, house, points, onClose }: KeepRuleProps & { o
           </option>
         ))}
       </Select>
-      <Select
+      <ChannelSelect
         label="Runs there"
         value={to.channel}
         error={errors.channel}
-        onChange={(event) => setTo({ ...to, channel: event.target.value })}
-      >
-        <option value="">Choose …</option>
-        {target?.channels.map((one) => (
-          <option key={one.key} value={one.key}>
-            {one.number} · {one.label}
-          </option>
-        ))}
-      </Select>
+        channels={target?.channels ?? []}
+        onChoose={(channel) => setTo({ ...to, channel })}
+      />
       <TextField
         label="Name"
         value={to.name}
@@ -129,6 +115,6 @@ export function CopyDialog({ rule, house, points, onClose }: KeepRuleProps & { o
         there={target?.points ?? []}
         onChoose={(key, there) => setChosen({ ...chosen, [key]: there })}
       />
-    </Dialog>
+    </DraftDialog>
   );
 }

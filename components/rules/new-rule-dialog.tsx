@@ -1,8 +1,6 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
-import { Button } from '@/components/ui/button';
-import { Dialog } from '@/components/ui/dialog';
 import { Select, TextField } from '@/components/ui/field';
 import { Phrases } from '@/components/ui/sentence';
 import { send } from '@/components/ui/send';
@@ -11,6 +9,8 @@ import type { Channel, Point, Source } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { ruleSentence } from '@/lib/wording/rule';
 import { midSentence, pointWords } from '@/lib/wording/rule-names';
+import { ChannelSelect } from './channel-select';
+import { DraftDialog } from './draft-dialog';
 import { firstBody } from './first-body';
 
 export interface NewRuleProps {
@@ -70,38 +70,21 @@ export function NewRuleDialog({
   }
 
   return (
-    <Dialog
-      open
-      onOpenChange={(open) => {
-        if (!open) onClose();
-      }}
+    <DraftDialog
       title="New rule"
       description="It begins as a draft: nothing moves until you put it into force."
-      actions={
-        <>
-          <Button kind="primary" busy={busy} onClick={() => void create()}>
-            Write the draft
-          </Button>
-          <Button onClick={onClose}>Not now</Button>
-          <p role="alert" className="w-full font-semibold text-alarm empty:hidden">
-            {errors.all}
-          </p>
-        </>
-      }
+      write="Write the draft"
+      failure={errors.all}
+      onWrite={() => void create()}
+      {...{ busy, onClose }}
     >
-      <Select
+      <ChannelSelect
         label="Runs"
         value={channelKey}
         error={errors.channel}
-        onChange={(event) => setChannel(event.target.value)}
-      >
-        <option value="">Choose …</option>
-        {channels.map((one) => (
-          <option key={one.key} value={one.key}>
-            {one.number} · {one.label}
-          </option>
-        ))}
-      </Select>
+        channels={channels}
+        onChoose={setChannel}
+      />
       <Select
         label="Goes by"
         value={pointKey}
@@ -128,6 +111,6 @@ export function NewRuleDialog({
           <Phrases phrases={ruleSentence(RuleBody.parse(body), names, preferences)} />
         </p>
       )}
-    </Dialog>
+    </DraftDialog>
   );
 }

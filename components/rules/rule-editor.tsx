@@ -1,6 +1,4 @@
 'use client';
-import dynamic from 'next/dynamic';
-import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { FormProvider, type FieldErrors } from 'react-hook-form';
 import { Sentence } from '@/components/ui/sentence';
@@ -10,6 +8,7 @@ import { ruleSentence } from '@/lib/wording/rule';
 import { BandSection } from './band-section';
 import { EditorFactsProvider } from './context';
 import type { RuleEditorData, RuleEditorParts } from './editor-data';
+import { EditorDialogs } from './editor-dialogs';
 import { EditorFoot } from './editor-foot';
 import { EditorSide } from './editor-side';
 import { fieldOfPath, focusField } from './field-paths';
@@ -23,13 +22,9 @@ import { useRuleActions } from './use-rule-actions';
 import { VersionActsProvider } from './version-acts';
 import { WhenSection } from './when-section';
 
-const ForceDialog = dynamic(() => import('./force-dialog').then((module) => module.ForceDialog));
-const LeaveDialog = dynamic(() => import('./leave-dialog').then((module) => module.LeaveDialog));
-
 /** A rule as a form: its sentence on top and its effect at the right change as one types. */
 export function RuleEditor({ data, parts }: { data: RuleEditorData; parts: RuleEditorParts }) {
   const { rule, points, names, clock, preferences, mayWrite } = data;
-  const router = useRouter();
   const [isForcing, setForcing] = useState(false);
   const [isBuilding, setBuilding] = useState(false);
   const { form, factOf, body, isWhole, bodyNow, valuesOf } = useEditedRule(data);
@@ -97,33 +92,11 @@ export function RuleEditor({ data, parts }: { data: RuleEditorData; parts: RuleE
             <EditorSide {...{ data, body, findings, actions }} versions={parts.versions} onGo={goTo} />
           </VersionActsProvider>
         </div>
-        {isForcing ? (
-          <ForceDialog
-            {...{ body, names, preferences }}
-            inForce={rule.inForce?.body ?? null}
-            version={draftNumber}
-            channelLabel={data.channel.label}
-            isProved={data.channel.isProved}
-            onForce={actions.force}
-            onClose={() => setForcing(false)}
-          />
-        ) : null}
-        {leave.wanted === null ? null : (
-          <LeaveDialog
-            onStay={leave.stay}
-            onLeave={() => {
-              const to = leave.wanted ?? '/';
-              form.reset(form.getValues());
-              router.push(to);
-            }}
-            onSave={async () => {
-              const to = leave.wanted ?? '/';
-              const answer = await actions.save();
-              if (answer.ok) router.push(to);
-              return answer.ok ? null : answer.message;
-            }}
-          />
-        )}
+        <EditorDialogs
+          {...{ data, body, draftNumber, isForcing, actions, leave }}
+          onForced={() => setForcing(false)}
+          onThrowAway={() => form.reset(form.getValues())}
+        />
       </EditorFactsProvider>
     </FormProvider>
   );

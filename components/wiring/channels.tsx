@@ -1,25 +1,12 @@
 import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
-import { Phrases } from '@/components/ui/sentence';
 import { Empty } from '@/components/ui/states';
-import { Cell, Row, RowHead, Table } from '@/components/ui/table';
-import { day } from '@/lib/units/time';
-import type { Channel, Lockout, Point, Source } from '@/lib/schema/yard-view';
-import type { Preferences } from '@/lib/units/preferences';
-import { exactly } from '@/lib/wording/settings';
-import {
-  SHARE_NOTE,
-  circuitWords,
-  contactFit,
-  isMains,
-  LOAD_WORDS,
-  ratedWords,
-  safeStateWords,
-} from '@/lib/wording/wiring-load';
+import { Table } from '@/components/ui/table';
+import type { Channel, Lockout, Source } from '@/lib/schema/yard-view';
+import { isMains, SHARE_NOTE } from '@/lib/wording/wiring-load';
 import { MAINS_CAUTION } from '@/lib/wording/wiring-parts';
-import { AddButton, ChangeButton } from './editing';
-import { FallbackLine, type Alone } from './fallback-line';
-import { LockOutButton } from './lock-out';
+import { ChannelRow, type ChannelReading } from './channel-row';
+import { AddButton } from './editing';
 
 const columns = [
   { key: 'number', label: 'Ch', figure: false },
@@ -32,86 +19,6 @@ const columns = [
   { key: 'act', label: 'Change', labelHidden: true },
 ];
 
-/** What a channel's fallback is read with. */
-interface Reading {
-  alone: Alone;
-  points: Point[];
-  zone: string;
-  /** Epoch ms of app time. */
-  now: number;
-  preferences: Preferences;
-}
-
-function ChannelRow({
-  channel,
-  source,
-  lockout,
-  zone,
-  house,
-  ...reading
-}: Reading & {
-  channel: Channel;
-  source: Source | undefined;
-  lockout: Lockout | undefined;
-  house: string;
-}) {
-  const fit = contactFit(channel.load);
-  return (
-    <Row>
-      <Cell className="font-semibold tabular-nums">{channel.number}</Cell>
-      <RowHead className="min-w-44">
-        {channel.label}
-        <span className="block text-[0.85rem] font-normal text-soft">
-          {LOAD_WORDS[channel.load.kind]}
-          {source === undefined ? '' : `, from the ${source.name.toLowerCase()}`}
-          {channel.frostHelp ? ', helps against frost' : ''}. At least {exactly(channel.minOn)} on,{' '}
-          {exactly(channel.minOff)} off.
-        </span>
-        <FallbackLine channel={channel} zone={zone} {...reading} />
-        {lockout === undefined ? null : (
-          <span className="block text-[0.9rem] text-warn">Locked out: {lockout.why}</span>
-        )}
-      </RowHead>
-      <Cell>
-        <span className="whitespace-nowrap">{circuitWords(channel.load)}</span>
-        <span className="block text-[0.85rem] text-soft">
-          {channel.node}, relay {channel.relay}
-        </span>
-      </Cell>
-      <Cell figure>
-        {ratedWords(channel.load)}
-        {fit === null ? null : (
-          <span className="ml-auto block max-w-48 font-sans text-[0.85rem] whitespace-normal text-soft">
-            <Phrases phrases={fit.words} />
-          </span>
-        )}
-      </Cell>
-      <Cell wideOnly>{channel.contact}</Cell>
-      <Cell>{safeStateWords(channel.contact, channel.load.kind)}</Cell>
-      <Cell>
-        {channel.provedAt === null ? (
-          <span className="font-semibold text-warn">Not proved</span>
-        ) : (
-          <span className="whitespace-nowrap">{day(Date.parse(channel.provedAt), zone)}</span>
-        )}
-      </Cell>
-      <Cell className="align-middle">
-        <div className="flex justify-end">
-          <ChangeButton kind="channel" id={channel.id} of={channel.label} />
-          {lockout === undefined ? (
-            <LockOutButton
-              house={house}
-              channel={channel.key}
-              label={channel.label}
-              contact={channel.contact}
-            />
-          ) : null}
-        </div>
-      </Cell>
-    </Row>
-  );
-}
-
 /** Channels with what they carry, what they fall to, and whether somebody saw them run. */
 export function Channels({
   channels,
@@ -120,7 +27,7 @@ export function Channels({
   house,
   hasNode,
   ...reading
-}: Reading & {
+}: ChannelReading & {
   channels: Channel[];
   sources: Source[];
   lockouts: Lockout[];

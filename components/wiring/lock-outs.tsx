@@ -5,7 +5,7 @@ import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 import type { Channel, Lockout } from '@/lib/schema/yard-view';
 import { LOCKOUT_CAUTION } from '@/lib/wording/wiring-parts';
-import { RemoveLockOutButton } from './lock-out';
+import { RemoveLockOutButton } from './remove-lock-out';
 
 /** Standing lock-outs, large and above everything else of the page. */
 export function StandingLockOuts({

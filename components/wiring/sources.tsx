@@ -1,14 +1,14 @@
 import { Panel } from '@/components/ui/panel';
 import { Phrases } from '@/components/ui/sentence';
 import { Empty } from '@/components/ui/states';
-import type { Channel, Interlock, Loop, Point, Source } from '@/lib/schema/yard-view';
+import type { Channel, Loop, Point, Source } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { exactly, level } from '@/lib/wording/settings';
-import { interlockSentence, LOOP_CAUTION, loopSentence } from '@/lib/wording/wiring-parts';
+import { LOOP_CAUTION, loopSentence } from '@/lib/wording/wiring-parts';
 import { AddButton, ChangeButton } from './editing';
+import { partLine } from './part-line';
 
 const kinds = { heap: 'compost heap', ground: 'ground tubes', heater: 'heater', other: 'source' };
-const line = 'flex flex-wrap items-center justify-between gap-x-4 py-2';
 
 function sourceWords(source: Source, points: Point[], preferences: Preferences): string {
   const name = (key: string | null) => points.find((point) => point.key === key)?.name ?? null;
@@ -51,7 +51,7 @@ export function Sources({
       ) : (
         <ul className="divide-y divide-line border-t border-line">
           {sources.map((source) => (
-            <li key={source.id} className={line}>
+            <li key={source.id} className={partLine}>
               <div className="min-w-0 flex-1">
                 <strong>{source.name}</strong>, {kinds[source.kind]}
                 <span className="block text-[0.9rem] text-soft">
@@ -74,7 +74,7 @@ export function Sources({
       ) : (
         <ul className="divide-y divide-line">
           {loops.map((loop) => (
-            <li key={loop.id} className={line}>
+            <li key={loop.id} className={partLine}>
               <p className="min-w-0 flex-1">
                 <strong>{loop.name}.</strong>{' '}
                 <Phrases
@@ -94,47 +94,6 @@ export function Sources({
       {sources.some((source) => source.kind === 'heap') ? (
         <p className="mt-3 border-l-4 border-warn pl-3 text-[0.9rem] text-soft">{LOOP_CAUTION}</p>
       ) : null}
-    </Panel>
-  );
-}
-
-/** Which channels must not, or must, run together. */
-export function Interlocks({ interlocks, channels }: { interlocks: Interlock[]; channels: Channel[] }) {
-  const label = (key: string) => channels.find((one) => one.key === key)?.label ?? key;
-  return (
-    <Panel
-      title="Interlocks"
-      actions={channels.length < 2 ? undefined : <AddButton kind="interlock" label="Add an interlock…" />}
-    >
-      {interlocks.length === 0 ? (
-        <p className="text-soft">
-          None. A vent that must not open while a fan heats, and a drive with two relays for two directions,
-          each want one.
-        </p>
-      ) : (
-        <ul className="divide-y divide-line border-t border-line">
-          {interlocks.map((one) => (
-            <li key={one.id} className={line}>
-              <p className="min-w-0 flex-1">
-                <Phrases
-                  phrases={interlockSentence({
-                    kind: one.kind,
-                    channel: label(one.channel),
-                    other: label(one.other),
-                    delayS: one.delay,
-                    frostMayBreak: one.frostMayBreak,
-                  })}
-                />
-              </p>
-              <ChangeButton
-                kind="interlock"
-                id={one.id}
-                of={`of ${label(one.channel)} and ${label(one.other)}`}
-              />
-            </li>
-          ))}
-        </ul>
-      )}
     </Panel>
   );
 }

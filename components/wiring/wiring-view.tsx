@@ -12,7 +12,8 @@ import { canFallback } from './node-status';
 import { Nodes } from './nodes';
 import { Points } from './points';
 import { RelayBoard } from './relay-board';
-import { Interlocks, Sources } from './sources';
+import { Interlocks } from './interlocks';
+import { Sources } from './sources';
 
 export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;

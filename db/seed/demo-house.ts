@@ -33,5 +33,16 @@ export function probe(
   return { key, node, name, role, unit: 'Cel', min: -40, max: 85, sensor: 'one-wire', ...more };
 }
 
+/** What reads anything but a temperature, with the least and greatest that it can read. */
+export function gauge(
+  node: string,
+  key: string,
+  name: string,
+  reads: Pick<Point, 'role' | 'unit'>,
+  [min, max]: [number, number],
+): Point {
+  return { key, node, name, ...reads, min, max };
+}
+
 /** The season in which the demo houses are kept warm. */
 export const winter = { from: '10-01', to: '04-30' };

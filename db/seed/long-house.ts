@@ -1,5 +1,5 @@
 /** The long house of Larkmoor Growers: a heap, the ground and a bench mat. Invented throughout. */
-import { probe, winter, type DemoHouse } from './demo-house';
+import { gauge, probe, winter, type DemoHouse } from './demo-house';
 
 export const longHouse: DemoHouse = {
   house: {
@@ -16,17 +16,9 @@ export const longHouse: DemoHouse = {
     probe('LH-1', 'house-air', 'House air', 'house-air', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('LH-1', 'bench-1', 'Bench probe 1', 'bench', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('LH-1', 'bench-2', 'Bench probe 2', 'bench', { maxRate: 0.5, frozenAfter: 14_400 }),
-    {
-      key: 'humidity',
-      node: 'LH-1',
-      name: 'House humidity',
-      role: 'humidity',
-      unit: '%RH',
-      min: 0,
-      max: 110,
-    },
+    gauge('LH-1', 'humidity', 'House humidity', { role: 'humidity', unit: '%RH' }, [0, 110]),
     probe('LH-1', 'outdoors', 'Outdoors', 'outdoors', { maxRate: 0.5, frozenAfter: 14_400 }),
-    { key: 'light', node: 'LH-1', name: 'Light', role: 'light', unit: 'W/m2', min: 0, max: 1400 },
+    gauge('LH-1', 'light', 'Light', { role: 'light', unit: 'W/m2' }, [0, 1400]),
     probe('LH-1', 'loop-intake', 'Loop intake', 'loop-intake', { maxRate: 1 }),
     probe('LH-1', 'loop-return', 'Loop return', 'loop-return', { maxRate: 2 }),
     probe('LH-1', 'gate-core', 'Gate heap core', 'heap-core', { maxRate: 0.1 }),
@@ -34,15 +26,7 @@ export const longHouse: DemoHouse = {
     probe('LH-1', 'gate-edge', 'Gate heap edge', 'heap-edge', { maxRate: 0.2 }),
     probe('LH-1', 'ground', 'Ground at 1.5 m', 'ground', { maxRate: 0.2 }),
     probe('LH-1', 'ground-return', 'Ground tubes return', 'loop-return', { maxRate: 2 }),
-    {
-      key: 'fan-amps',
-      node: 'LH-1',
-      name: 'Gate-heap fan current',
-      role: 'current',
-      unit: 'A',
-      min: 0,
-      max: 5,
-    },
+    gauge('LH-1', 'fan-amps', 'Gate-heap fan current', { role: 'current', unit: 'A' }, [0, 5]),
   ],
   sources: [
     {

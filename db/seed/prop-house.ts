@@ -1,5 +1,5 @@
 /** The propagation house of Larkmoor Growers: a heap and a mat for cuttings. Invented throughout. */
-import { probe, winter, type DemoHouse } from './demo-house';
+import { gauge, probe, winter, type DemoHouse } from './demo-house';
 
 export const propHouse: DemoHouse = {
   house: {
@@ -15,30 +15,14 @@ export const propHouse: DemoHouse = {
   points: [
     probe('PH-1', 'house-air', 'House air', 'house-air', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('PH-1', 'bench-1', 'Bench probe 1', 'bench', { maxRate: 0.5, frozenAfter: 14_400 }),
-    {
-      key: 'humidity',
-      node: 'PH-1',
-      name: 'House humidity',
-      role: 'humidity',
-      unit: '%RH',
-      min: 0,
-      max: 110,
-    },
+    gauge('PH-1', 'humidity', 'House humidity', { role: 'humidity', unit: '%RH' }, [0, 110]),
     probe('PH-1', 'outdoors', 'Outdoors', 'outdoors', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('PH-1', 'loop-intake', 'Loop intake', 'loop-intake', { maxRate: 1 }),
     probe('PH-1', 'loop-return', 'Loop return', 'loop-return', { maxRate: 2 }),
     probe('PH-1', 'yew-core', 'Yew heap core', 'heap-core', { maxRate: 0.1 }),
     probe('PH-1', 'yew-base', 'Yew heap beside the pipe', 'heap-base', { maxRate: 0.2 }),
-    {
-      key: 'fan-amps',
-      node: 'PH-1',
-      name: 'Yew-heap fan current',
-      role: 'current',
-      unit: 'A',
-      min: 0,
-      max: 5,
-    },
-    { key: 'light', node: 'PH-1', name: 'Light', role: 'light', unit: 'W/m2', min: 0, max: 1400 },
+    gauge('PH-1', 'fan-amps', 'Yew-heap fan current', { role: 'current', unit: 'A' }, [0, 5]),
+    gauge('PH-1', 'light', 'Light', { role: 'light', unit: 'W/m2' }, [0, 1400]),
   ],
   sources: [
     {

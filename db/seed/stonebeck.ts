@@ -1,5 +1,5 @@
 /** The second demo holding, Stonebeck Nursery, whose rows Larkmoor must never see. Invented throughout. */
-import { probe, type DemoHouse } from './demo-house';
+import { gauge, probe, type DemoHouse } from './demo-house';
 
 export const beckHouse: DemoHouse = {
   house: {
@@ -15,29 +15,13 @@ export const beckHouse: DemoHouse = {
   points: [
     probe('SN-1', 'house-air', 'House air', 'house-air', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('SN-1', 'bench-1', 'Bench probe 1', 'bench', { maxRate: 0.5, frozenAfter: 14_400 }),
-    {
-      key: 'humidity',
-      node: 'SN-1',
-      name: 'House humidity',
-      role: 'humidity',
-      unit: '%RH',
-      min: 0,
-      max: 110,
-    },
+    gauge('SN-1', 'humidity', 'House humidity', { role: 'humidity', unit: '%RH' }, [0, 110]),
     probe('SN-1', 'outdoors', 'Outdoors', 'outdoors', { maxRate: 0.5, frozenAfter: 14_400 }),
     probe('SN-1', 'loop-intake', 'Loop intake', 'loop-intake', { maxRate: 1 }),
     probe('SN-1', 'loop-return', 'Loop return', 'loop-return', { maxRate: 2 }),
     probe('SN-1', 'beck-core', 'Beck heap core', 'heap-core', { maxRate: 0.1 }),
     probe('SN-1', 'beck-base', 'Beck heap beside the pipe', 'heap-base', { maxRate: 0.2 }),
-    {
-      key: 'fan-amps',
-      node: 'SN-1',
-      name: 'Beck-heap fan current',
-      role: 'current',
-      unit: 'A',
-      min: 0,
-      max: 5,
-    },
+    gauge('SN-1', 'fan-amps', 'Beck-heap fan current', { role: 'current', unit: 'A' }, [0, 5]),
   ],
   sources: [
     {

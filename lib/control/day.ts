@@ -37,14 +37,21 @@ export function addSpans(memory: SourceMemory, told: SourceMemory['spans'], at: 
 }
 
 function dayOf(spans: SourceMemory['spans'], draws: number, at: number): SourceMemory['day'] {
-  let nextAt: number | null = null;
+  let nextAt = Infinity;
   let leaving = 0;
   for (const [from, to, channels] of spans) {
     if (from <= at - DAY_MS && (to ?? at) > at - DAY_MS) leaving += channels;
-    for (const edge of [from + DAY_MS, to === null ? Infinity : to + DAY_MS])
-      if (edge > at && (nextAt === null || edge < nextAt)) nextAt = edge;
+    // a span's end comes after its beginning, so only the first of the two that is still to come counts
+    const enters = from + DAY_MS;
+    const edge = enters > at ? enters : to === null ? Infinity : to + DAY_MS;
+    if (edge > at && edge < nextAt) nextAt = edge;
   }
-  return { usedMs: reckon(spans, at), at, slope: draws - leaving, nextAt };
+  return {
+    usedMs: reckon(spans, at),
+    at,
+    slope: draws - leaving,
+    nextAt: nextAt === Infinity ? null : nextAt,
+  };
 }
 
 function reckon(spans: SourceMemory['spans'], at: number): number {

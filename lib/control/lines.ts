@@ -3,19 +3,19 @@
  * point stays between the nearest lines on either side, every look at it would answer as it did, so nothing need be
  * decided anew (lull.ts). A value that is only told, in a reason or an alarm, needs no line.
  */
-import { valueOf } from './readings';
-import { numberAt, type Run } from './run';
+import { comparable, valueOf } from './readings';
+import type { Run } from './run';
 
 /** value < limit, strictly. A point without a value is under nothing. */
 export function isUnder(run: Run, point: number, limit: number): boolean {
-  const value = valueOf(run, point) ?? NaN;
+  const value = comparable(run, point);
   noteLine(run, point, value, limit);
   return value < limit;
 }
 
 /** value > limit, strictly. A point without a value is over nothing. */
 export function isOver(run: Run, point: number, limit: number): boolean {
-  const value = valueOf(run, point) ?? NaN;
+  const value = comparable(run, point);
   noteLine(run, point, value, limit);
   return value > limit;
 }
@@ -29,8 +29,8 @@ export function exactly(run: Run, point: number): number | null {
 
 /** first − second < limit, strictly; false without either value. */
 export function isDifferenceUnder(run: Run, first: number, second: number, limit: number): boolean {
-  const a = valueOf(run, first) ?? NaN;
-  const b = valueOf(run, second) ?? NaN;
+  const a = comparable(run, first);
+  const b = comparable(run, second);
   // each may go half of the way; a billionth less, as sums of rounded numbers may end on the wrong side
   const free = Math.abs(a - b - limit) / 2 - 1e-9;
   for (const [point, value] of [
@@ -48,7 +48,7 @@ export function isDifferenceUnder(run: Run, first: number, second: number, limit
 
 /** Whoever compares elsewhere, and exactly with these. */
 export function noteLines(run: Run, point: number, limits: readonly number[]): void {
-  const value = valueOf(run, point) ?? NaN;
+  const value = comparable(run, point);
   for (const limit of limits) noteLine(run, point, value, limit);
 }
 
@@ -60,14 +60,15 @@ export function awaitReading(run: Run, point: number): void {
 
 /** Narrows what the point may do; a line on the value itself leaves it no room. NaN, which nothing passes, stays. */
 function noteLine(run: Run, point: number, value: number, limit: number): void {
-  if (limit <= value && limit > numberAt(run.over, point)) run.over[point] = limit;
-  if (limit >= value && limit < numberAt(run.under, point)) run.under[point] = limit;
+  if (limit <= value && limit > (run.over[point] ?? NaN)) run.over[point] = limit;
+  if (limit >= value && limit < (run.under[point] ?? NaN)) run.under[point] = limit;
 }
 
-/** Whether no look at a point would answer otherwise, were its value this one. */
-export function isBetweenLines(run: Run, point: number, value: number | null): boolean {
-  const over = numberAt(run.over, point);
-  const under = numberAt(run.under, point);
-  if (value === null) return over === -Infinity && under === Infinity;
+/** Whether no look at a point would answer otherwise in `now`, a later instant than the `run` in which it was looked at. */
+export function isBetweenLines(run: Run, point: number, now: Run): boolean {
+  const over = run.over[point] ?? NaN;
+  const under = run.under[point] ?? NaN;
+  const value = comparable(now, point);
+  if (Number.isNaN(value)) return over === -Infinity && under === Infinity;
   return (value > over && value < under) || (value === over && value === under);
 }

@@ -2,7 +2,7 @@
  * Clock times of a place as instants, across changes of its clock. Local dates are day numbers: whole days of the
  * wall clock since 1970-01-01, so that tomorrow is one more and never "now + 86 400 s".
  */
-import { DateTime, IANAZone } from 'luxon';
+import { IANAZone } from 'luxon';
 import { sunOfDay, type SunDay } from './sun';
 
 const DAY = 86_400_000;
@@ -46,8 +46,7 @@ export const wallAt = (where: Place, at: number): number => at + offsetAt(where,
 export const dayNumber = (where: Place, at: number): number => Math.floor(wallAt(where, at) / DAY);
 
 /** `MM-DD` of a day number. */
-export const monthDay = (day: number): string =>
-  DateTime.fromMillis(day * DAY, { zone: 'utc' }).toFormat('MM-dd');
+export const monthDay = (day: number): string => new Date(day * DAY).toISOString().slice(5, 10);
 
 /**
  * The instant at which the wall clock of `day` shows `minutes` after midnight. A time that comes twice: the first

@@ -8,7 +8,6 @@
 import { isBetweenLines } from './lines';
 import type { Memory } from './memory';
 import type { Plan } from './plan';
-import { valueOf } from './readings';
 import { entry, nextWake, type Run } from './run';
 import type { Observed } from './types';
 
@@ -52,7 +51,7 @@ export function isLull(run: Run, before: Run): boolean {
     const then = entry(before.points, point);
     if (now === then && run.readings.at[point] === before.readings.at[point]) continue;
     if (now.quality !== then.quality || now.why !== then.why) return false;
-    if (!isBetweenLines(before, point, valueOf(run, point))) return false;
+    if (!isBetweenLines(before, point, run)) return false;
   }
   return true;
 }

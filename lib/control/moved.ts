@@ -2,7 +2,7 @@
 import type { Memory, Readings } from './memory';
 import type { Plan } from './plan';
 import { copyReadings, putReading, valueOf } from './readings';
-import { entry, numberAt } from './run';
+import { entry } from './run';
 import type { Threshold } from './thresholds';
 import type { Future } from './what-if';
 import { coldestPoint } from './claims/frost';
@@ -32,8 +32,8 @@ export function moved(
 
 /** A millisecond later than the one before, so that derived points see it as a new reading. */
 function later({ at: times, lastAt, sameSince }: Readings, place: number, value: number, at: number) {
-  const next = Math.max(numberAt(times, place), at) + 1;
-  return { value, at: next, lastAt: numberAt(lastAt, place), sameSince: numberAt(sameSince, place) };
+  const next = Math.max(times[place] ?? 0, at) + 1;
+  return { value, at: next, lastAt: lastAt[place] ?? 0, sameSince: sameSince[place] ?? 0 };
 }
 
 /** A derived point is made of others, and which of them would move cannot be said: here it is read like any other. */

@@ -1,7 +1,6 @@
 /** Which readings are believed, and how good a point is at an instant. */
 import type { PointMemory } from './memory';
-import { lastTimeOf, timeOf } from './readings';
-import { entry, numberAt, wakeForReadings, type Run } from './run';
+import { entry, wakeForReadings, type Run } from './run';
 import { steadied } from './steady';
 import type { ObservedPoint, Quality } from './types';
 
@@ -17,28 +16,27 @@ function implausible(run: Run, index: number, seen: ObservedPoint): string | nul
   if (oneWire && (sent === 85 || sent === -127)) return 'one-wire-fault';
   if ((min !== null && sent < min) || (max !== null && sent > max)) return 'out-of-range';
   if (maxRateMs === null || !entry(run.points, index).hasValue) return null;
-  const most = maxRateMs * (seen.at - numberAt(run.readings.at, index));
+  const most = maxRateMs * (seen.at - (run.readings.at[index] ?? 0));
   // the last binary digit of a division must not make a change of exactly the limit too fast
-  return Math.abs(seen.value - numberAt(run.readings.value, index)) > most + 1e-9 ? 'too-fast' : null;
+  return Math.abs(seen.value - (run.readings.value[index] ?? NaN)) > most + 1e-9 ? 'too-fast' : null;
 }
 
 /** Whether a reading moves control: finite, newer than the newest known, at most 2 min in the future. */
 const isNews = (run: Run, index: number, seen: ObservedPoint): boolean =>
-  Number.isFinite(seen.value) && seen.at > heardAt(run, index) && seen.at <= run.stepAt + AHEAD_MS;
+  Number.isFinite(seen.value) &&
+  seen.at > (run.readings.lastAt[index] ?? 0) &&
+  seen.at <= run.stepAt + AHEAD_MS;
 
-const heardAt = (run: Run, index: number): number => lastTimeOf(run, index) ?? -Infinity;
+/** Silence counts from the last plausible reading, or, once the quality is dropped, from any; 0: it never spoke. */
+const spokeAt = ({ points, readings: { at, lastAt } }: Run, index: number): number =>
+  entry(points, index).dropped === null ? (at[index] ?? 0) : (lastAt[index] ?? 0);
 
-/** Silence counts from the last plausible reading, or, once the quality is dropped, from any. */
-const spokeAt = (run: Run, index: number): number =>
-  entry(run.points, index).dropped === null ? (timeOf(run, index) ?? -Infinity) : heardAt(run, index);
-
-/** First instant of silence that the readings' times show up to the newest; null: none. */
-function silenceIn(run: Run, index: number, seen: ObservedPoint | undefined): number | null {
+/** First instant of silence that the readings' times show up to the newest; Infinity: none. */
+function silenceIn(run: Run, index: number, seen: ObservedPoint): number {
   const { staleMs } = entry(run.plan.points, index);
   let last = spokeAt(run, index);
-  if (last === -Infinity) return null;
   // what was seen before has been judged: an implausible reading then fills no silence now
-  if (seen === undefined || seen.at <= heardAt(run, index)) return null;
+  if (last === 0 || seen.at <= (run.readings.lastAt[index] ?? 0)) return Infinity;
   if (seen.between !== undefined) {
     for (const time of seen.between) {
       if (time <= last) continue;
@@ -46,15 +44,15 @@ function silenceIn(run: Run, index: number, seen: ObservedPoint | undefined): nu
       last = time;
     }
   }
-  if (seen.at - last > staleMs) return last + staleMs + 1;
-  return null;
+  return seen.at - last > staleMs ? last + staleMs + 1 : Infinity;
 }
 
 /** When a point falls silent as far as the times of all its readings tell, those known only now included. */
 export function silenceAhead(run: Run, index: number, seen: ObservedPoint | undefined): number {
-  const isNew = seen !== undefined && seen.at > heardAt(run, index);
-  const newest = isNew ? Math.max(spokeAt(run, index), seen.at) : spokeAt(run, index);
-  return silenceIn(run, index, seen) ?? newest + entry(run.plan.points, index).staleMs + 1;
+  const { staleMs } = entry(run.plan.points, index);
+  const spoke = spokeAt(run, index) || -Infinity;
+  if (seen === undefined || seen.at <= (run.readings.lastAt[index] ?? 0)) return spoke + staleMs + 1;
+  return Math.min(silenceIn(run, index, seen), Math.max(spoke, seen.at) + staleMs + 1);
 }
 
 /**
@@ -73,9 +71,9 @@ export function takeReading(run: Run, index: number, seen: ObservedPoint): void 
   const { hasValue, why, goodRun, dropped } = entry(run.points, index);
   const { frozenMs } = entry(run.plan.points, index);
   const isSame = hasValue && value[index] === seen.value;
-  const since = isSame ? numberAt(sameSince, index) : seen.at;
+  const since = isSame ? (sameSince[index] ?? 0) : seen.at;
   const frozen = frozenMs !== null && seen.at - since > frozenMs;
-  const back = why === 'silent' || silenceIn(run, index, seen) !== null;
+  const back = why === 'silent' || silenceIn(run, index, seen) < Infinity;
   const good = frozen ? 0 : back ? 1 : Math.min(3, goodRun + 1);
   value[index] = seen.value;
   at[index] = seen.at;
@@ -131,32 +129,39 @@ export function settlePoints(run: Run): void {
     const point = entry(plan.points, index);
     if (point.derived !== null) continue;
     const memory = entry(run.points, index);
-    let quality: Quality = memory.dropped?.quality ?? 'good';
-    let why = memory.dropped?.why ?? null;
-    if (!memory.hasValue) {
-      quality = 'bad';
-      why ??= 'never-spoke';
-    } else {
-      const silentAt = run.silentAt?.[index] ?? spokeAt(run, index) + point.staleMs + 1;
-      if (run.at >= silentAt) {
-        // our own absence is not the point's silence: it has its time again from the worker's start
-        const excusedTill = run.observed.workerStartedAt + point.staleMs + 1;
-        const excused =
-          memory.why !== 'silent' &&
-          run.observed.workerStartedAt > spokeAt(run, index) &&
-          run.at < excusedTill;
-        quality = excused && quality !== 'bad' ? 'uncertain' : 'bad';
-        why = excused ? (why ?? 'worker-was-away') : 'silent';
-        if (excused) wakeForReadings(run, excusedTill);
-      } else wakeForReadings(run, silentAt);
-    }
-    // most points are good most of the time
-    if (quality === 'good' && memory.quality === 'good') keepQuality(run, index, quality, why);
-    else {
-      const judged = steadied(run, index, quality, why);
-      keepQuality(run, index, judged.quality, judged.why);
-    }
+    const silentAt = silentFrom(run, index);
+    // most points are good most of the time, and then nothing about them changes
+    if (memory.quality === 'good' && memory.dropped === null && run.at < silentAt) {
+      run.usable[index] = 'good';
+      wakeForReadings(run, silentAt);
+    } else settleDoubt(run, index, silentAt);
   }
+}
+
+/** When a point is silent if nothing more is heard of it. */
+function silentFrom(run: Run, index: number): number {
+  if (run.silentAt !== null) return run.silentAt[index] ?? 0;
+  return spokeAt(run, index) + entry(run.plan.points, index).staleMs + 1;
+}
+
+function settleDoubt(run: Run, index: number, silentAt: number): void {
+  const memory = entry(run.points, index);
+  let quality: Quality = memory.dropped?.quality ?? 'good';
+  let why = memory.dropped?.why ?? null;
+  if (!memory.hasValue) {
+    quality = 'bad';
+    why ??= 'never-spoke';
+  } else if (run.at >= silentAt) {
+    const { workerStartedAt } = run.observed;
+    // our own absence is not the point's silence: it has its time again from the worker's start
+    const excusedTill = workerStartedAt + entry(run.plan.points, index).staleMs + 1;
+    const excused = memory.why !== 'silent' && workerStartedAt > spokeAt(run, index) && run.at < excusedTill;
+    quality = excused && quality !== 'bad' ? 'uncertain' : 'bad';
+    why = excused ? (why ?? 'worker-was-away') : 'silent';
+    if (excused) wakeForReadings(run, excusedTill);
+  } else wakeForReadings(run, silentAt);
+  const judged = steadied(run, index, quality, why);
+  keepQuality(run, index, judged.quality, judged.why);
 }
 
 /** Notes a point's quality, tells a change of it, and reckons what control may use. */

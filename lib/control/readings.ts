@@ -1,6 +1,6 @@
 /** The readings in use, which a memory keeps in lists apart from the points' entries: looked at, put and copied. */
 import type { ParkedPoint, PointMemory, Readings } from './memory';
-import { entry, numberAt, type Run } from './run';
+import { entry, type Run } from './run';
 
 export const NO_READING: ParkedPoint['reading'] = { value: 0, at: 0, lastAt: 0, sameSince: 0 };
 
@@ -21,24 +21,27 @@ export function putReading(readings: Readings, index: number, reading: ParkedPoi
 
 /** Null: the point has none. */
 export const valueOf = (run: Run, index: number): number | null =>
-  entry(run.points, index).hasValue ? numberAt(run.readings.value, index) : null;
+  entry(run.points, index).hasValue ? (run.readings.value[index] ?? NaN) : null;
+
+/** The same as a number that no comparison passes where there is none. */
+export const comparable = (run: Run, index: number): number =>
+  entry(run.points, index).hasValue ? (run.readings.value[index] ?? NaN) : NaN;
 
 /** Time of the reading in use; null: the point never spoke. */
-export const timeOf = (run: Run, index: number): number | null => numberAt(run.readings.at, index) || null;
+export const timeOf = (run: Run, index: number): number | null => run.readings.at[index] || null;
 
 /** Time of the newest reading, plausible or not; null: the point never spoke. */
-export const lastTimeOf = (run: Run, index: number): number | null =>
-  numberAt(run.readings.lastAt, index) || null;
+export const lastTimeOf = (run: Run, index: number): number | null => run.readings.lastAt[index] || null;
 
 /** Each point with its reading, as they are parked. */
 export const withReadings = (points: readonly PointMemory[], readings: Readings): ParkedPoint[] =>
   points.map((point, index) => ({
     ...point,
     reading: {
-      value: numberAt(readings.value, index),
-      at: numberAt(readings.at, index),
-      lastAt: numberAt(readings.lastAt, index),
-      sameSince: numberAt(readings.sameSince, index),
+      value: readings.value[index] ?? 0,
+      at: readings.at[index] ?? 0,
+      lastAt: readings.lastAt[index] ?? 0,
+      sameSince: readings.sameSince[index] ?? 0,
     },
   }));
 

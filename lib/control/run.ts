@@ -93,7 +93,12 @@ export function nothingFound({ points, channels, sources }: Plan): Found {
   };
 }
 
-export const filled = <T>(length: number, value: T): T[] => new Array<T>(length).fill(value);
+/** Grown one by one: a list made with a length keeps room for holes, and whatever reads it then looks for them. */
+export function filled<T>(length: number, value: T): T[] {
+  const list: T[] = [];
+  while (list.length < length) list.push(value);
+  return list;
+}
 
 /** Why a rule wants its channel on, or not. */
 export type RuleCode =
@@ -105,15 +110,15 @@ export type RuleCode =
   | 'condition-unknown'
   | 'point-bad';
 
-/** The entry of a list that the plan says is there. */
+/** The entry of a list that the plan says is there. Not for lists of numbers: one line that reads lists of all kinds is slow for each. */
 export function entry<T>(list: readonly T[], index: number): T {
   const found = list[index];
-  if (found === undefined) throw new RangeError(`The plan names entry ${index} of a list of ${list.length}.`);
+  if (found === undefined) throw absent(list, index);
   return found;
 }
 
-/** The same of a list of numbers. Apart from it, since a line of code that meets lists of every kind is slow for all of them. */
-export const numberAt = (list: readonly number[], index: number): number => list[index] ?? NaN;
+const absent = (list: readonly unknown[], index: number): Error =>
+  new RangeError(`The plan names entry ${index} of a list of ${list.length}.`);
 
 /** Something happens by itself at `instant`: the step must be awake then. */
 export function wakeAt(run: Run, instant: number): void {

@@ -141,8 +141,14 @@ function keep(run: Run, channel: number, claim: Claim, state: State): boolean {
 }
 
 const unexplained = (channel: string, at: number, state: State, claim: Claim): Explanation => ({
-  ...{ channel, at, state, claim },
-  ...{ until: null, ladder: bareLadder(claim, state), next: [], rule: null },
+  channel,
+  at,
+  state,
+  claim,
+  until: null,
+  ladder: [],
+  next: [],
+  rule: null,
 });
 
 function countDraw(run: Run, channel: number, state: State): void {
@@ -161,10 +167,12 @@ function explainDecisions(run: Run, firstEvent: number): void {
     if (event.kind !== 'switching' && event.kind !== 'decision') continue;
     const channel = run.channels.findIndex((one) => one.id === event.channel);
     const explanation = explainSettled(run, channel);
+    const isOvertaken =
+      event.kind === 'switching'
+        ? event.to !== explanation.state
+        : event.claim !== explanation.claim || event.state !== explanation.state;
     // what a later round of the same instant overtook has the names of its ladder alone
-    if (event.kind === 'decision' && (event.claim !== explanation.claim || event.state !== explanation.state))
-      continue;
-    if (event.kind === 'switching' && event.to !== explanation.state) continue;
-    run.events[place] = { ...event, claim: explanation.claim, explanation };
+    if (isOvertaken) event.explanation.ladder = bareLadder(event.claim, event.explanation.state);
+    else run.events[place] = { ...event, claim: explanation.claim, explanation };
   }
 }

@@ -19,6 +19,8 @@ export interface HouseAnswers {
   coldestOutdoors: number | null;
 }
 
+type MeasuredChannel = Pick<Channel, 'id' | 'key' | 'node' | 'contact'>;
+
 const DAY_MS = 86_400_000;
 const NIGHTS_MS = 14 * DAY_MS;
 /** Many a draw lasts a quarter of an hour: five-minute means would see little of it. */
@@ -36,7 +38,7 @@ const kept = new Map<string, { at: number; answers: HouseAnswers }>();
 export async function answersOf(
   holding: Holding,
   config: HouseConfig,
-  channel: Pick<Channel, 'id' | 'key' | 'node' | 'contact'>,
+  channel: MeasuredChannel,
   pointKey: string,
   nowMs: number,
 ): Promise<HouseAnswers> {
@@ -52,7 +54,7 @@ export async function answersOf(
 async function measure(
   holding: Holding,
   config: HouseConfig,
-  channel: Pick<Channel, 'id' | 'key' | 'node' | 'contact'>,
+  channel: MeasuredChannel,
   pointKey: string,
   nowMs: number,
 ): Promise<HouseAnswers> {

@@ -1,20 +1,18 @@
-// Runs one benchmark in a process of its own and prints its line.
+// Runs one benchmark, given by the file that it was built into, in a process of its own, and prints its line.
 import { cpus, totalmem } from 'node:os';
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
-import { ROOT } from '../../scripts/places.mjs';
 
-const name = process.argv[2] ?? '';
-
-const file = pathToFileURL(path.join(ROOT, 'tests', 'bench', `${name}.ts`)).href;
-const module: unknown = await import(file);
+const built = process.argv[2] ?? '';
+const name = path.basename(built, '.mjs');
+const module: unknown = await import(pathToFileURL(built).href);
 if (
   typeof module !== 'object' ||
   module === null ||
   !('bench' in module) ||
   typeof module.bench !== 'function'
 ) {
-  throw new Error(`tests/bench/${name}.ts exports no function "bench".`);
+  throw new Error(`The benchmark ${name} exports no function "bench".`);
 }
 const bench = module.bench as () => unknown;
 const figures: unknown = await bench();

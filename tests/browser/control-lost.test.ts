@@ -32,6 +32,11 @@ beforeEach(async () => {
 });
 
 const notice = (page: Page) => page.getByRole('alert').filter({ hasText: 'Control is not running.' });
+/** How many notices the page has as the server sends it now. */
+async function noticesAnew(page: Page): Promise<number> {
+  await page.goto('/long-house/watch');
+  return notice(page).count();
+}
 
 function workerPid(): number {
   const pid = app.pid('worker');
@@ -79,22 +84,12 @@ describe('A worker that says nothing any more', () => {
     await whileFrozen(async () => {
       await until(
         'the page as the server sends it says so',
-        async () => {
-          await page.goto('/long-house/watch');
-          return (await notice(page).count()) === 1;
-        },
+        async () => (await noticesAnew(page)) === 1,
         SAID_WITHIN_MS,
       );
       expect(await notice(page).innerText()).toContain('Every relay is in its safe state');
     });
-    await until(
-      'the page no longer says so',
-      async () => {
-        await page.goto('/long-house/watch');
-        return (await notice(page).count()) === 0;
-      },
-      BACK_WITHIN_MS,
-    );
+    await until('the page no longer says so', async () => (await noticesAnew(page)) === 0, BACK_WITHIN_MS);
     await plain.close();
   }, 90_000);
 });

@@ -1,14 +1,13 @@
 // Every figure on a page agrees with every other on it, with the file and with the interface. What a night in progress says
 // grows meanwhile, so pages and interface are read again until both were read in the same minute.
-import type { Browser, BrowserContext, Page } from 'playwright-core';
-import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from 'vitest';
+import type { BrowserContext, Page } from 'playwright-core';
+import { describe, expect, it, vi } from 'vitest';
 import type { NightAnswer } from '@/lib/analysis/night-answer';
 import { count, decimal, energy, share, temperature } from '@/lib/units/format';
 import { USUAL } from '@/lib/units/preferences';
 import { duration } from '@/lib/units/time';
-import { launchBrowser, signedIn } from '../support/browser';
-import { sharedApp } from '../support/shared-app';
 import { figuresIn, nightsTold, plain } from '../support/shown-figures';
+import { ownersPages } from './owners-pages';
 
 const AGREE = { timeout: 50_000, interval: 300 };
 const SOURCES = [
@@ -18,21 +17,10 @@ const SOURCES = [
   ['prop-house', 'yew-heap'],
 ] as const;
 
-let browser: Browser;
 let owner: BrowserContext;
 let page: Page;
 
-beforeAll(async () => {
-  browser = await launchBrowser();
-  owner = await signedIn(browser, sharedApp(), 'owner@larkmoor.example', {
-    viewport: { width: 1400, height: 900 },
-  });
-});
-afterAll(() => browser.close());
-beforeEach(async () => {
-  page = await owner.newPage();
-  return async () => page.close();
-});
+ownersPages((opened) => ({ owner, page } = opened));
 
 const nightsOf = (house: string, source: string) => nightsTold(owner, house, source);
 /** The file's rows, newest last, by head. */

@@ -1,19 +1,15 @@
 // Conditions are built without a mouse, read with how they stand, and lose nothing that was typed.
-import type { Browser, BrowserContext, Page } from 'playwright-core';
+import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { accessibilityFaults, faultsOf, launchBrowser, signedIn } from '../support/browser';
-import { makeHouse, wireHouse, type OwnHouse } from '../support/browser-house';
+import { accessibilityFaults, faultsOf, signedIn } from '../support/browser';
+import { openOwnHouse, type OwnHouse } from '../support/browser-house';
 import { sharedApp } from '../support/shared-app';
 
 let browser: Browser;
-let owner: BrowserContext;
 let house: OwnHouse;
 
 beforeAll(async () => {
-  browser = await launchBrowser();
-  owner = await signedIn(browser, sharedApp(), 'owner@larkmoor.example');
-  house = await makeHouse(owner, sharedApp().url);
-  await wireHouse(house);
+  ({ browser, house } = await openOwnHouse());
 });
 afterAll(async () => browser.close());
 

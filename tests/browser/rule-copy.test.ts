@@ -1,8 +1,8 @@
 // A rule's times by the sun, its copy in another house, its comparison.
 import type { Browser, BrowserContext, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { accessibilityFaults, launchBrowser, signedIn } from '../support/browser';
-import { makeHouse, wireHouse, type OwnHouse } from '../support/browser-house';
+import { accessibilityFaults, signedIn } from '../support/browser';
+import { makeHouse, openOwnHouse, wireHouse, type OwnHouse } from '../support/browser-house';
 import { sharedApp } from '../support/shared-app';
 
 let browser: Browser;
@@ -11,10 +11,9 @@ let house: OwnHouse;
 let other: OwnHouse;
 
 beforeAll(async () => {
-  browser = await launchBrowser();
-  owner = await signedIn(browser, sharedApp(), 'owner@larkmoor.example');
-  [house, other] = [await makeHouse(owner, sharedApp().url), await makeHouse(owner, sharedApp().url)];
-  for (const one of [house, other]) await wireHouse(one);
+  ({ browser, owner, house } = await openOwnHouse());
+  other = await makeHouse(owner, sharedApp().url);
+  await wireHouse(other);
   const air = { node: 'T-1', role: 'humidity', unit: '%RH' };
   await house.post('/points', { ...air, key: 'damp', name: 'Damp' });
   await other.post('/points', { ...air, key: 'wet', name: 'Wet' });

@@ -1,7 +1,7 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { accessibilityFaults, launchBrowser, signedIn } from '../support/browser';
-import { makeHouse, wireHouse, type OwnHouse } from '../support/browser-house';
+import { accessibilityFaults, signedIn } from '../support/browser';
+import { makeHouse, openOwnHouse, wireHouse, type OwnHouse } from '../support/browser-house';
 import { sharedApp } from '../support/shared-app';
 
 let browser: Browser;
@@ -9,10 +9,7 @@ let owner: BrowserContext;
 let house: OwnHouse;
 
 beforeAll(async () => {
-  browser = await launchBrowser();
-  owner = await signedIn(browser, sharedApp(), 'owner@larkmoor.example');
-  house = await makeHouse(owner, sharedApp().url);
-  await wireHouse(house);
+  ({ browser, owner, house } = await openOwnHouse());
 });
 afterAll(async () => browser.close());
 

@@ -1,33 +1,21 @@
 // Watch says of this night and of each channel what the interface tells. Both change meanwhile, so both are read again until
 // they were read in the same moment.
-import type { Browser, BrowserContext, Page } from 'playwright-core';
-import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from 'vitest';
+import type { BrowserContext, Page } from 'playwright-core';
+import { describe, expect, it, vi } from 'vitest';
 import { count, energy, temperature } from '@/lib/units/format';
 import { USUAL } from '@/lib/units/preferences';
 import { duration } from '@/lib/units/time';
-import { launchBrowser, signedIn } from '../support/browser';
-import { sharedApp } from '../support/shared-app';
 import { figuresIn, nightsTold, plain, told } from '../support/shown-figures';
+import { ownersPages } from './owners-pages';
 
 const AGREE = { timeout: 50_000, interval: 300 };
 /** A strip's part is drawn at least a unit wide, which is some two minutes: what is newer cannot be read off it. */
 const DRAWN_AFTER_MS = 5 * 60_000;
 
-let browser: Browser;
 let owner: BrowserContext;
 let page: Page;
 
-beforeAll(async () => {
-  browser = await launchBrowser();
-  owner = await signedIn(browser, sharedApp(), 'owner@larkmoor.example', {
-    viewport: { width: 1400, height: 900 },
-  });
-});
-afterAll(() => browser.close());
-beforeEach(async () => {
-  page = await owner.newPage();
-  return async () => page.close();
-});
+ownersPages((opened) => ({ owner, page } = opened));
 
 interface State {
   at: string;

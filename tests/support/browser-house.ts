@@ -1,5 +1,7 @@
 // A small house of a test's own in the running program, made through the interface, so that no other test's rules move.
-import type { BrowserContext } from 'playwright-core';
+import type { Browser, BrowserContext } from 'playwright-core';
+import { launchBrowser, signedIn } from './browser';
+import { sharedApp } from './shared-app';
 
 export interface OwnHouse {
   slug: string;
@@ -26,6 +28,15 @@ export async function makeHouse(owner: BrowserContext, origin: string): Promise<
   });
   const slug = String((house as { slug: unknown }).slug);
   return { slug, post: (path, data) => post(`/houses/${slug}${path}`, data) };
+}
+
+/** A browser with Larkmoor's owner signed in to the shared program, and a house of the owner's that is wired. */
+export async function openOwnHouse(): Promise<{ browser: Browser; owner: BrowserContext; house: OwnHouse }> {
+  const browser = await launchBrowser();
+  const owner = await signedIn(browser, sharedApp(), 'owner@larkmoor.example');
+  const house = await makeHouse(owner, sharedApp().url);
+  await wireHouse(house);
+  return { browser, owner, house };
 }
 
 /** A node with one fan on each contact and one probe on the bench; nothing is proved. */

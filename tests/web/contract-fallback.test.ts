@@ -1,25 +1,15 @@
 /** What a node does by itself, and loads that do not do as they are told, at twenty times: from outside, with the yard beside. */
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { startApp, type RunningApp } from '../support/app';
-import { listOf, OutsideApi } from '../support/outside-api';
+import { describe, expect, it } from 'vitest';
+import { listOf } from '../support/outside-api';
 import { until } from '../support/until';
-import { Scene } from './contract-scene';
+import { fastProgram } from './fast-program';
 
 const RATE = 20;
 const SLACK = 6;
 const fallback = { point: 'bench', below: 2, above: 5, onFor: 1200, offFor: 2400 };
 const rest = { longestDraw: 1200, least: 1800 };
-let app: RunningApp;
-let api: OutsideApi;
-
-beforeAll(async () => {
-  app = await startApp({ yard: true, rate: RATE, seed: { nights: 0 } });
-  api = await OutsideApi.signIn(app.url, 'owner@larkmoor.example', app.password);
-}, 120_000);
-afterAll(() => app.stop());
-
-const open = () =>
-  Scene.open(app, api, RATE, { points: { amps: { role: 'current', unit: 'A', min: 0, max: 5 } } });
+const program = fastProgram(RATE, { yard: true });
+const open = () => program.open({ points: { amps: { role: 'current', unit: 'A', min: 0, max: 5 } } });
 
 describe('A node that was away', () => {
   it('tells its fallback’s runs at their own times: switchings without a number, drawn credit, and why', async () => {
@@ -58,7 +48,7 @@ describe('A node that was away', () => {
     expect(Number(credit)).toBeGreaterThanOrEqual(0.925);
     expect(Number(credit)).toBeLessThan(0.925 + (scene.now() - off + SLACK) / 1800);
     const at = new Date((begun + 50) * 1000).toISOString();
-    const why = (await api.get(`${scene.at}/channels/1/why?at=${encodeURIComponent(at)}`)).body;
+    const why = (await program.api.get(`${scene.at}/channels/1/why?at=${encodeURIComponent(at)}`)).body;
     expect(why).toMatchObject({ state: 'on', claim: 'fail-safe' });
     scene.node.close();
   }, 60_000);
@@ -66,35 +56,43 @@ describe('A node that was away', () => {
   it('may be the yard’s own: with its server stopped it keeps the house by what it was told', async () => {
     const channel = '/houses/long-house/channels/gate-heap-fan';
     const warm = { ...fallback, point: 'bench-1', below: 60, above: 70 };
-    expect((await api.call('PATCH', channel, { fallback: warm })).status).toBe(200);
-    const log = () => app.log('yard');
+    expect((await program.api.call('PATCH', channel, { fallback: warm })).status).toBe(200);
+    const log = () => program.app.log('yard');
     await until('it was told', () => log().includes('"LH-1"') && log().includes('"event":"command"'), 15_000);
-    const worker = app.pid('worker') ?? 0;
-    await api.call('POST', '/houses/long-house/all-off', {});
+    const worker = program.app.pid('worker') ?? 0;
+    await program.api.call('POST', '/houses/long-house/all-off', {});
     process.kill(worker, 'SIGSTOP');
     await until('it runs by itself', () => /"event":"fallback".*"what":"on"/.test(log()), 15_000);
     process.kill(worker, 'SIGCONT');
     const told = async () =>
-      listOf((await api.get('/houses/long-house/switchings?channel=gate-heap-fan')).body).filter(
+      listOf((await program.api.get('/houses/long-house/switchings?channel=gate-heap-fan')).body).filter(
         (one) => one['claim'] === 'fail-safe' && one['number'] === null,
       );
     await until('it is stored', async () => (await told()).some((one) => one['to'] === 'on'), 20_000);
-    expect(await api.page('/long-house/watch')).toMatch(
+    expect(await program.api.page('/long-house/watch')).toMatch(
       /The field box kept the house by itself from \d\d:\d\d to \d\d:\d\d/,
     );
   }, 60_000);
 
   it('has a fallback by its own points alone, in °C', async () => {
     const scene = await open();
-    await api.make(`${scene.at}/nodes`, { key: 'M', kind: 'socket', channels: 2 });
-    await api.make(`${scene.at}/points`, { key: 'far', node: 'M', name: 'Far', role: 'bench', unit: 'Cel' });
+    await program.api.make(`${scene.at}/nodes`, { key: 'M', kind: 'socket', channels: 2 });
+    await program.api.make(`${scene.at}/points`, {
+      key: 'far',
+      node: 'M',
+      name: 'Far',
+      role: 'bench',
+      unit: 'Cel',
+    });
     await scene.channel(1, 'a', { fallback });
     for (const [point, why] of [
       ['far', /does not measure far/],
       ['amps', /temperature/],
       ['nobody', /no point/],
     ] as const) {
-      const answer = await api.call('PATCH', `${scene.at}/channels/1`, { fallback: { ...fallback, point } });
+      const answer = await program.api.call('PATCH', `${scene.at}/channels/1`, {
+        fallback: { ...fallback, point },
+      });
       expect(answer.status).toBe(422);
       const [error] = listOf(answer.body, 'errors');
       expect(error?.['path']).toBe('fallback.point');
@@ -116,7 +114,7 @@ describe('A fan with a proof that it runs', () => {
     await scene.pass(20);
     await scene.sendAmps(0);
     const kinds = async () =>
-      listOf((await api.get(`${scene.at}/state`)).body, 'alarms').map((one) => one['kind']);
+      listOf((await program.api.get(`${scene.at}/state`)).body, 'alarms').map((one) => one['kind']);
     await until('the alarm stands', async () => (await kinds()).includes('fan-standing'));
     const { drawnToday } = await scene.source();
     await scene.pass(120);
@@ -137,7 +135,7 @@ describe('A fan with a proof that it runs', () => {
     await scene.pass(40);
     await scene.sendAmps(0.5);
     await until('the alarm stands', async () =>
-      listOf((await api.get(`${scene.at}/state`)).body, 'alarms').some(
+      listOf((await program.api.get(`${scene.at}/state`)).body, 'alarms').some(
         (one) => one['kind'] === 'runs-though-off',
       ),
     );

@@ -1,25 +1,12 @@
 /** Frost, interlocks and limits at twenty times, from outside. */
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { startApp, type RunningApp } from '../support/app';
-import { OutsideApi } from '../support/outside-api';
-import { Scene } from './contract-scene';
+import { describe, expect, it } from 'vitest';
+import { fastProgram, nearWithin } from './fast-program';
 
 const RATE = 20;
 const SLACK = 4;
-let app: RunningApp;
-let api: OutsideApi;
-
-beforeAll(async () => {
-  app = await startApp({ yard: false, rate: RATE, seed: { nights: 0 } });
-  api = await OutsideApi.signIn(app.url, 'owner@larkmoor.example', app.password);
-}, 120_000);
-afterAll(() => app.stop());
-
-const open = (more: Parameters<typeof Scene.open>[3] = {}) => Scene.open(app, api, RATE, more);
-const near = (value: number, wanted: number) => {
-  expect(value, `${value} s, wanted ${wanted} s`).toBeGreaterThan(wanted - SLACK);
-  expect(value, `${value} s, wanted ${wanted} s`).toBeLessThan(wanted + SLACK);
-};
+const program = fastProgram(RATE);
+const { open } = program;
+const near = nearWithin(SLACK);
 
 describe.concurrent('Frost', () => {
   it('begins under the limit, not at it, and ends 1 K above', async () => {
@@ -96,7 +83,7 @@ describe.concurrent('Frost', () => {
     await scene.join();
     await scene.send({ bench: 5, air: 6 });
     await scene.claim(1, 'band');
-    await api.call('PATCH', scene.at, { frostLimit: 7 });
+    await program.api.call('PATCH', scene.at, { frostLimit: 7 });
     await scene.claim(1, 'frost');
     await scene.node.coil(1, 'off');
     scene.node.close();
@@ -108,7 +95,7 @@ describe.concurrent('Interlocks and limits', () => {
     const scene = await open();
     await scene.channel(1, 'fan');
     await scene.channel(2, 'vent', { load: { kind: 'vent' }, source: null, frostHelp: false });
-    await api.make(`${scene.at}/interlocks`, {
+    await program.api.make(`${scene.at}/interlocks`, {
       channel: 'vent',
       kind: 'never-with',
       other: 'fan',
@@ -136,7 +123,12 @@ describe.concurrent('Interlocks and limits', () => {
     const scene = await open();
     await scene.channel(1, 'pump', { source: null, frostHelp: false });
     await scene.channel(2, 'fan');
-    await api.make(`${scene.at}/interlocks`, { channel: 'fan', kind: 'needs', other: 'pump', delay: 20 });
+    await program.api.make(`${scene.at}/interlocks`, {
+      channel: 'fan',
+      kind: 'needs',
+      other: 'pump',
+      delay: 20,
+    });
     await scene.join();
     await scene.hand(2, { state: 'on', seconds: 3000 });
     await scene.claim(2, 'interlock');

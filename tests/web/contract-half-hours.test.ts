@@ -1,26 +1,13 @@
 /** Half hours of control.md, at forty times: a hand on whose point dies, and a frost that nobody can measure any more. */
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { startApp, type RunningApp } from '../support/app';
-import { OutsideApi } from '../support/outside-api';
-import { Scene } from './contract-scene';
+import { describe, expect, it } from 'vitest';
+import { fastProgram, nearWithin } from './fast-program';
 
 const RATE = 40;
 /** Long enough for orders to be given on a busy machine before the point is silent. */
 const STALE = 400;
-let app: RunningApp;
-let api: OutsideApi;
-
-beforeAll(async () => {
-  app = await startApp({ yard: false, rate: RATE, seed: { nights: 0 } });
-  api = await OutsideApi.signIn(app.url, 'owner@larkmoor.example', app.password);
-}, 120_000);
-afterAll(() => app.stop());
-
-const open = (more: Parameters<typeof Scene.open>[3] = {}) => Scene.open(app, api, RATE, more);
-const near = (value: number, wanted: number, slack = 8) => {
-  expect(value, `${value} s, wanted ${wanted} s`).toBeGreaterThan(wanted - slack);
-  expect(value, `${value} s, wanted ${wanted} s`).toBeLessThan(wanted + slack);
-};
+const program = fastProgram(RATE);
+const { open } = program;
+const near = nearWithin(8);
 
 describe.concurrent('Half an hour', () => {
   it('is what a hand on runs whose point died; a heater not at all', async () => {
@@ -49,7 +36,7 @@ describe.concurrent('Half an hour', () => {
     await scene.claim(1, 'frost');
     await scene.pass(STALE + 40);
     expect(await scene.state(1)).toMatchObject({ claim: 'frost', state: 'on' });
-    const alarms = (await api.get(`${scene.at}/alarms`)).body['items'] as { kind: string }[];
+    const alarms = (await program.api.get(`${scene.at}/alarms`)).body['items'] as { kind: string }[];
     expect(alarms.map(({ kind }) => kind)).toContain('frost-without-reading');
     const [, off] = await scene.waitTold(1, 2, 60_000);
     near((off?.at ?? 0) - at, STALE + 1800);

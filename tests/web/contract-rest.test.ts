@@ -1,26 +1,12 @@
 /** Rest, credit and least times at twenty times, from outside; the times are worked out from control.md on paper. */
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { startApp, type RunningApp } from '../support/app';
-import { OutsideApi } from '../support/outside-api';
-import { Scene } from './contract-scene';
+import { describe, expect, it } from 'vitest';
+import { fastProgram, nearWithin } from './fast-program';
 
 const RATE = 20;
 /** A step is taken late by some real milliseconds, each of which is RATE of app time. */
 const SLACK = 4;
-let app: RunningApp;
-let api: OutsideApi;
-
-beforeAll(async () => {
-  app = await startApp({ yard: false, rate: RATE, seed: { nights: 0 } });
-  api = await OutsideApi.signIn(app.url, 'owner@larkmoor.example', app.password);
-}, 120_000);
-afterAll(() => app.stop());
-
-const open = (more: Parameters<typeof Scene.open>[3] = {}) => Scene.open(app, api, RATE, more);
-const near = (value: number, wanted: number) => {
-  expect(value, `${value} s, wanted ${wanted} s`).toBeGreaterThan(wanted - SLACK);
-  expect(value, `${value} s, wanted ${wanted} s`).toBeLessThan(wanted + SLACK);
-};
+const { open } = fastProgram(RATE);
+const near = nearWithin(SLACK);
 
 describe.concurrent('Rest and draw credit, in times worked out on paper', () => {
   it('spends one credit by two fans at the sum of their rates, and gives it back after the least rest', async () => {

@@ -1,29 +1,17 @@
 /** What a killed worker must find again: rest, least times, hand, frost and limits. */
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { startApp, type RunningApp } from '../support/app';
-import { OutsideApi } from '../support/outside-api';
+import { describe, expect, it } from 'vitest';
 import { until } from '../support/until';
-import { Scene } from './contract-scene';
+import type { Scene } from './contract-scene';
+import { fastProgram, nearWithin } from './fast-program';
 
 const RATE = 20;
-let app: RunningApp;
-let api: OutsideApi;
-
-beforeAll(async () => {
-  app = await startApp({ yard: false, rate: RATE, seed: { nights: 0 } });
-  api = await OutsideApi.signIn(app.url, 'owner@larkmoor.example', app.password);
-}, 120_000);
-afterAll(() => app.stop());
-
-const open = (more: Parameters<typeof Scene.open>[3] = {}) => Scene.open(app, api, RATE, more);
-const near = (value: number, wanted: number, slack = 4) => {
-  expect(value, `${value} s, wanted ${wanted} s`).toBeGreaterThan(wanted - slack);
-  expect(value, `${value} s, wanted ${wanted} s`).toBeLessThan(wanted + slack);
-};
+const program = fastProgram(RATE);
+const { open } = program;
+const near = nearWithin(4);
 
 /** Kills the worker and joins again as soon as another leads. */
 async function killed(scenes: Scene[]): Promise<void> {
-  const pid = app.pid('worker');
+  const pid = program.app.pid('worker');
   if (pid === null) throw new Error('no worker runs');
   process.kill(pid, 'SIGKILL');
   await until('the lines are cut', () => scenes.every(({ node }) => node.closed !== undefined));

@@ -1,26 +1,13 @@
 /** Calendar and distrusted readings at twenty times, from outside. */
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { startApp, type RunningApp } from '../support/app';
-import { OutsideApi } from '../support/outside-api';
+import { describe, expect, it } from 'vitest';
 import { until } from '../support/until';
-import { Scene } from './contract-scene';
+import { fastProgram, nearWithin } from './fast-program';
 
 const RATE = 20;
 const SLACK = 4;
-let app: RunningApp;
-let api: OutsideApi;
-
-beforeAll(async () => {
-  app = await startApp({ yard: false, rate: RATE, seed: { nights: 0 } });
-  api = await OutsideApi.signIn(app.url, 'owner@larkmoor.example', app.password);
-}, 120_000);
-afterAll(() => app.stop());
-
-const open = (more: Parameters<typeof Scene.open>[3] = {}) => Scene.open(app, api, RATE, more);
-const near = (value: number, wanted: number) => {
-  expect(value, `${value} s, wanted ${wanted} s`).toBeGreaterThan(wanted - SLACK);
-  expect(value, `${value} s, wanted ${wanted} s`).toBeLessThan(wanted + SLACK);
-};
+const program = fastProgram(RATE);
+const { open } = program;
+const near = nearWithin(SLACK);
 
 const clock = (seconds: number) => new Date(seconds * 1000).toISOString().slice(11, 16);
 
@@ -88,7 +75,7 @@ describe.concurrent('Readings that cannot be trusted', () => {
     await scene.join();
     await scene.send({ bench: 5, air: 5 });
     const bench = async () =>
-      ((await api.get(`${scene.at}/state`)).body['points'] as Record<string, unknown>[]).find(
+      ((await program.api.get(`${scene.at}/state`)).body['points'] as Record<string, unknown>[]).find(
         ({ key }) => key === 'bench',
       );
     await scene.send({ bench: -127 });
@@ -100,7 +87,7 @@ describe.concurrent('Readings that cannot be trusted', () => {
     await scene.claim(1, 'fail-safe');
     for (const value of [3, 3.1, 3.2]) await scene.send({ bench: value });
     await scene.claim(1, 'band');
-    const raw = await api.get(`${scene.at}/readings?points=bench`);
+    const raw = await program.api.get(`${scene.at}/readings?points=bench`);
     expect(raw.body).toMatchObject({ points: { bench: { value: [5, -127, 85, 3, 3.1, 3.2] } } });
     scene.node.close();
   });

@@ -23,7 +23,7 @@ export function houseState(
   now: number,
 ): HouseState {
   const { zone } = record.config.house;
-  const iso = (at: number | null) => (at === null ? null : isoIn(zone, at));
+  const iso = isoOf(zone);
   const points = new Map(result.points.map((point) => [point.id, point]));
   const channels = new Map(result.channels.map((channel) => [channel.id, channel]));
   const sources = new Map(result.sources.map((source) => [source.id, source]));
@@ -80,6 +80,19 @@ export function houseState(
       const standing = nodes.get(id);
       return { key, online: standing?.online ?? false, lastHeardAt: iso(standing?.lastHeardAt ?? null) };
     }),
+  };
+}
+
+/** The points of a pack share its instant: most are told as the one before. */
+function isoOf(zone: string): (at: number | null) => string | null {
+  let last: number | null = null;
+  let text: string | null = null;
+  return (at) => {
+    if (at !== last) {
+      last = at;
+      text = at === null ? null : isoIn(zone, at);
+    }
+    return text;
   };
 }
 
