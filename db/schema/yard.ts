@@ -36,6 +36,8 @@ export const house = pgTable(
     frostAlarm: doublePrecision('frost_alarm'),
     /** A thermostat that keeps the house without any software; null: nobody has said that there is one. */
     lastResort: jsonb('last_resort').$type<{ below: number; provedOn: string | null }>(),
+    /** Out of an archive and not put in service yet: the worker does not take it up, and no node can call it. */
+    laidUpAt: instant('laid_up_at'),
     /** Grows with every change of anything the core reads of this house. */
     planRevision: bigint('plan_revision', { mode: 'number' }).notNull().default(1),
     revision: revision(),

@@ -6,7 +6,13 @@ import { channelFields, houseFields, nodeFields, pointFields, sourceFields } fro
 const entity = { id: z.string(), revision: z.number() };
 const at = z.string();
 
-export const House = z.strictObject({ ...entity, slug: z.string(), ...houseFields });
+export const House = z.strictObject({
+  ...entity,
+  slug: z.string(),
+  ...houseFields,
+  /** Out of an archive and not in service: nothing drives it. */
+  laidUpAt: at.nullable(),
+});
 export type House = z.infer<typeof House>;
 
 export const FieldNode = z.strictObject({

@@ -129,7 +129,10 @@ async function bring(deps: ImportDeps, work: ImportWork): Promise<void> {
     // what an earlier try has brought is read again, for the order of the lines, and not stored again
     if (reader.lines <= work.doneLines) [reader.readings, reader.faults, reader.doubts] = [[], [], []];
     if (reader.readings.length + reader.faults.length < ROWS_A_PART) continue;
-    if (!deps.isLeading() || !(await store(done))) return;
+    // what is being stored is waited for: a next turn would read how far the file is before it is kept
+    if (deps.isLeading() && (await store(done))) continue;
+    await storing;
+    return;
   }
   reader.end();
   if (!(await store(work.bytes)) || !(await storing)) return;
