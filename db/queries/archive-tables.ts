@@ -61,7 +61,7 @@ const GIVEN: [TableKey, Given][] = [
     'importPart',
     { only: `batch_id in (select id from import_batch where state in ('done', 'undone', 'failed'))` },
   ],
-  ['nodeLog', {}],
+  ['nodeLog', { refs: { house_id: 'house' } }],
   ['switching', { refs: { channel_id: 'channel', rule_id: 'rule' } }],
   ['decision', { refs: { channel_id: 'channel' } }],
   ['relayReport', { refs: { channel_id: 'channel' } }],

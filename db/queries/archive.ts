@@ -33,6 +33,15 @@ export async function listArchives(holding: Holding): Promise<Archive[]> {
   return rows.map(toArchive);
 }
 
+/** The list, and the one that a page's address names; without a name the one that is still under way. */
+export async function readArchives(holding: Holding, name: unknown) {
+  const list = await listArchives(holding);
+  const wanted = typeof name === 'string' ? await findArchive(holding, name) : null;
+  return { list, open: wanted ?? list.find((one) => UNDER_WAY.has(one.state)) ?? null };
+}
+
+const UNDER_WAY = new Set<ArchiveState>(['receiving', 'to-check', 'checked', 'to-bring']);
+
 export async function findArchive(holding: Holding, id: string): Promise<Archive | null> {
   if (!isId(id)) return null;
   const [row] = await holding.db.select().from(archive).where(own(holding, id));
