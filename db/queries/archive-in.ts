@@ -104,7 +104,10 @@ export class Bringing {
 
   async rollUpMonth(month: string): Promise<void> {
     const from = Date.parse(`${month}-01T00:00:00Z`);
-    await rollUp(this.client, [...this.numbers.values()], from, monthAfter(from) - 1);
+    const points = [...this.numbers.values()];
+    // a query may last no longer than the pool allows
+    for (let first = 0; first < points.length; first += POINTS_A_ROLL_UP)
+      await rollUp(this.client, points.slice(first, first + POINTS_A_ROLL_UP), from, monthAfter(from) - 1);
   }
 
   /** Makes the nights of every house that is in use, and the holding visible to its one owner. @returns false: not wanted any more */
@@ -179,6 +182,8 @@ export class Bringing {
     }
   }
 }
+
+const POINTS_A_ROLL_UP = 5;
 
 const listed = (names: readonly string[]) => names.map((name) => `"${name}"`).join();
 
