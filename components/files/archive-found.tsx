@@ -57,7 +57,7 @@ export function ArchiveFoundPart({
             {
               name: 'People it lists',
               value: (
-                <span className="break-all font-sans">
+                <span className="font-sans break-words">
                   {found.people.map((person) => `${person.email} (${person.role})`).join(', ') || 'none'}
                 </span>
               ),

@@ -28,6 +28,8 @@ export interface ArchiveSink {
   ) => Promise<void>;
   readings: (rows: readonly ReadingRow[]) => Promise<void>;
   monthEnds: (month: string) => Promise<void>;
+  /** Readings later than this would be taken for news by whoever drives the house later; epoch ms. */
+  newest: number;
   /** Told how far it is, of how many bytes; throws where it is not wanted any more. */
   step: (done: number, of: number) => Promise<void>;
   /** Tables that are only there to be read are passed over. */
@@ -197,6 +199,7 @@ async function readReadings(
     if (!points.has(point))
       throw new RowFault(`point ${shown(number)} is no number of ${tablePath('point')}.`);
     if (!(at >= begin && at < end)) throw new RowFault(`at must be a time in UTC within ${month}.`);
+    if (at > sink.newest) throw new RowFault('at lies ahead of the clock of this installation.');
     if (text === '' || !Number.isFinite(value)) throw new RowFault(`value ${shown(text)} is no number.`);
     if (point < last.point || (point === last.point && at <= last.at))
       throw new RowFault('Readings must be in the order of point and time, each once.');

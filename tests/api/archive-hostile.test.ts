@@ -155,6 +155,11 @@ describe('a row that is wrong is told by its file and line:', () => {
       'line 2: at must be a time in UTC within',
     ],
     [
+      'a time that is still to come',
+      (text: string) => text.replace('2026-12-01T18:00:00', '2026-12-01T18:02:01'),
+      'at lies ahead of the clock of this installation.',
+    ],
+    [
       'no number',
       (text: string) => text.replace(/,4\.\d+,good/, ',warm,good'),
       'line 2: value "warm" is no number.',

@@ -179,6 +179,14 @@ it('it belongs to whoever brought it in, and to nobody else', async () => {
   expect(one).toMatchObject({ state: 'done', into: { name: 'Larkmoor again' } });
 });
 
+it('nobody orders anything by hand in a house that is laid up', async () => {
+  for (const path of ['all-off', 'channels/1/hand']) {
+    const body = path === 'all-off' ? {} : { state: 'on' };
+    const told = await owner.ask('POST', `/houses/long-house/${path}`, body);
+    expect([path, told.status, told.text]).toEqual([path, 409, expect.stringContaining('laid up')]);
+  }
+});
+
 it('a house is put in service by its owner’s word, and unproved wiring must be accepted outright', async () => {
   const path = '/houses/long-house/in-service';
   const refused = await owner.ask('POST', path, {});

@@ -19,6 +19,8 @@ export interface ArchiveDeps extends Pick<Base, 'clock' | 'pool' | 'log'> {
 class Unwanted extends Error {}
 
 const NOTE_EVERY_MS = 500;
+/** As far as a node's clock may run ahead. */
+const AHEAD_MS = 2 * 60_000;
 
 /** Does what waits, one after another. @returns how many were taken to an end */
 export async function runArchives(deps: ArchiveDeps): Promise<number> {
@@ -69,7 +71,7 @@ async function lookThrough(deps: ArchiveDeps, work: ArchiveWork): Promise<void> 
   try {
     const found = await readArchive(open, open.manifest.schema < schema, {
       ...{ rows: nothing, photograph: nothing, readings: nothing, monthEnds: nothing },
-      ...{ step: stepper(deps, work), skips: () => false },
+      ...{ step: stepper(deps, work), skips: () => false, newest: deps.clock.appNow() + AHEAD_MS },
     });
     await endWork(deps.pool, work, { state: 'checked', now: deps.clock.appNow(), found });
   } finally {
@@ -100,6 +102,7 @@ async function bring(deps: ArchiveDeps, work: ArchiveWork): Promise<void> {
         readings: (rows) => bringing.readings(rows),
         monthEnds: (month) => bringing.rollUpMonth(month),
         step,
+        newest: clock.appNow() + AHEAD_MS,
         skips: (one) => one.outOnly !== undefined,
       });
       isDone = await bringing.finish(work, () => noteWork(pool, work, 1, 1));
