@@ -75,6 +75,20 @@ it('hours at a rate are an amount, to the last place, and a cost is an amount or
   expect(left.map((one) => one['kind'])).toEqual(['pipe']);
 });
 
+it('a cost that was entered wrong is written anew, under the same name', async () => {
+  const pipe = itemsOf(await owner.get(`${at}/heap-costs`)).find((one) => one['kind'] === 'pipe') ?? {};
+  const path = `${at}/heap-costs/${String(pipe['id'])}`;
+  const anew = { source: 'gate-heap', kind: 'haulage', on: '2026-10-04', text: 'Not the pipe.', years: 2 };
+  expect((await grower.ask('PUT', path, { ...anew, amount: '95' })).status).toBe(403);
+  expect((await owner.ask('PUT', path, anew)).status).toBe(422);
+  const told = await owner.ask('PUT', path, { ...anew, amount: '95' });
+  expect([told.status, told.body]).toEqual([
+    200,
+    expect.objectContaining({ ...anew, id: pipe['id'], amount: '95' }),
+  ]);
+  expect(itemsOf(await owner.get(`${at}/heap-costs`))).toEqual([told.body]);
+});
+
 it('a report is sent to people of the holding only', async () => {
   const told = await owner.ask('POST', `${at}/report-schedules`, {
     span: 'week',
