@@ -81,7 +81,7 @@ export function CostForm({
       }
     >
       <legend className="sr-only">{cost === undefined ? 'One more cost' : 'This cost'}</legend>
-      <div className="grid items-start gap-3 sm:grid-cols-3">
+      <div className={`grid items-start gap-3 ${cost === undefined ? 'sm:grid-cols-3' : 'sm:grid-cols-2'}`}>
         <Select label="Cost of" {...at('kind')}>
           {COST_KINDS.map((kind) => (
             <option key={kind} value={kind}>
