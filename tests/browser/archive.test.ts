@@ -60,7 +60,7 @@ describe('the whole holding on the page of files', () => {
     const dialog = page.getByRole('dialog');
     const serve = dialog.getByRole('button', { name: 'Put it in service' });
     await serve.click();
-    await dialog.getByText('Nobody has proved').waitFor();
+    await dialog.getByRole('alert').filter({ hasText: 'Nobody has proved' }).waitFor();
     await dialog.getByLabel('Rules may drive channels that nobody has proved here').check();
     await serve.click();
     await until('the notice is gone', async () => (await page.getByText('is laid up').count()) === 0, 20_000);
