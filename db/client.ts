@@ -4,6 +4,7 @@ import { drizzle, type NodePgQueryResultHKT } from 'drizzle-orm/node-postgres';
 import type { PgDatabase } from 'drizzle-orm/pg-core';
 import pg from 'pg';
 import { env } from '@/lib/server/env';
+import * as archive from './schema/archive';
 import * as auth from './schema/auth';
 import * as channel from './schema/channel';
 import * as heap from './schema/heap';
@@ -19,6 +20,7 @@ import * as study from './schema/study';
 import * as watch from './schema/watch';
 
 export const schema = {
+  ...archive,
   ...auth,
   ...channel,
   ...heap,
@@ -78,6 +80,26 @@ export async function inHolding<T>(holdingId: string, work: (holding: Holding) =
     await db.execute(sql`select set_config('app.holding', ${holdingId}, true)`);
     return work({ id: holdingId, db });
   });
+}
+
+/**
+ * A connection of its own that sees one holding, without the pools' limit on how long a query may last: an archive is one
+ * snapshot from its first row to its last. Whoever asks for it ends it.
+ */
+export async function ownConnection(holdingId: string): Promise<pg.Client> {
+  const client = new pg.Client({
+    connectionString: env().DATABASE_URL,
+    connectionTimeoutMillis: 2000,
+    options: `-c app.holding=${holdingId} -c timezone=UTC`,
+  });
+  client.on('error', () => undefined);
+  await client.connect();
+  return client;
+}
+
+/** Drizzle on a connection in whose transaction other things go on too. */
+export function onConnection(client: pg.PoolClient): Db {
+  return drizzle({ client, schema });
 }
 
 /** Sees every holding: for the worker, for sign-in, and for finding which holding a key or token belongs to. */

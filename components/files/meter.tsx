@@ -10,7 +10,12 @@ export function Meter({ label, part }: { label: string; part: number }) {
         <span id={id}>{label}</span>
         <span className="font-mono">{percent} %</span>
       </div>
-      <progress aria-labelledby={id} value={percent} max={100} className="h-3 w-full accent-ink" />
+      <progress
+        aria-labelledby={id}
+        value={percent}
+        max={100}
+        className="h-3 w-full appearance-none overflow-hidden rounded-sm border border-edge bg-faint [&::-moz-progress-bar]:bg-ink [&::-webkit-progress-bar]:bg-faint [&::-webkit-progress-value]:bg-ink"
+      />
     </div>
   );
 }

@@ -5,7 +5,7 @@ import { Button } from '@/components/ui/button';
 import { NumberField, Select, TextField } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
-import { COST_KINDS, HeapCostCreate } from '@/lib/schema/money';
+import { COST_KINDS, type HeapCost, HeapCostCreate } from '@/lib/schema/money';
 import { COST_WORDS } from './cost-words';
 
 const EMPTY = { kind: 'materials', on: '', text: '', amount: '', hours: '', rate: '', years: '1' };
@@ -21,19 +21,33 @@ function bodyOf(typed: Typed, source: string) {
   });
 }
 
+const typedOf = (cost: HeapCost): Typed => ({
+  ...{ kind: cost.kind, on: cost.on, text: cost.text, years: String(cost.years) },
+  ...{
+    amount: cost.work === null ? cost.amount : '',
+    hours: cost.work?.hours ?? '',
+    rate: cost.work?.rate ?? '',
+  },
+});
+
+/** Enters a cost, or writes one anew. */
 export function CostForm({
   house,
   source,
   currency,
   today,
+  cost,
+  onDone,
 }: {
   house: string;
   source: string;
   currency: string;
   today: string;
+  cost?: HeapCost;
+  onDone?: () => void;
 }) {
   const router = useRouter();
-  const [typed, setTyped] = useState<Typed>({ ...EMPTY, on: today });
+  const [typed, setTyped] = useState<Typed>(cost === undefined ? { ...EMPTY, on: today } : typedOf(cost));
   const [errors, setErrors] = useState<Record<string, string>>({});
   const [failure, setFailure] = useState('');
   const [isBusy, setBusy] = useState(false);
@@ -49,17 +63,25 @@ export function CostForm({
     setFailure(body.success ? '' : 'Not right yet: see what is marked.');
     if (!body.success) return;
     setBusy(true);
-    const answer = await send('POST', `/houses/${house}/heap-costs`, body.data);
+    const path = `/houses/${house}/heap-costs`;
+    const answer = await (cost === undefined
+      ? send('POST', path, body.data)
+      : send('PUT', `${path}/${cost.id}`, body.data));
     setBusy(false);
     if (!answer.ok) return setFailure(answer.message);
-    setTyped({ ...EMPTY, on: typed.on });
-    say('The cost is entered.');
+    if (cost === undefined) setTyped({ ...EMPTY, on: typed.on });
+    say(cost === undefined ? 'The cost is entered.' : 'The cost is changed.');
+    onDone?.();
     router.refresh();
   }
   return (
-    <fieldset className="mt-3 flex flex-col gap-3 border-t border-line pt-3">
-      <legend className="sr-only">One more cost</legend>
-      <div className="grid items-start gap-3 sm:grid-cols-3">
+    <fieldset
+      className={
+        cost === undefined ? 'mt-3 flex flex-col gap-3 border-t border-line pt-3' : 'flex flex-col gap-3'
+      }
+    >
+      <legend className="sr-only">{cost === undefined ? 'One more cost' : 'This cost'}</legend>
+      <div className={`grid items-start gap-3 ${cost === undefined ? 'sm:grid-cols-3' : 'sm:grid-cols-2'}`}>
         <Select label="Cost of" {...at('kind')}>
           {COST_KINDS.map((kind) => (
             <option key={kind} value={kind}>
@@ -80,7 +102,7 @@ export function CostForm({
         <TextField label="Note" error={errors['text']} {...at('text')} />
       </div>
       <Button className="self-start" busy={isBusy} onClick={() => void save()}>
-        Enter this cost
+        {cost === undefined ? 'Enter this cost' : 'Change this cost'}
       </Button>
       <p role="alert" className="font-semibold text-alarm empty:hidden">
         {failure}

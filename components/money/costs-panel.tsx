@@ -3,6 +3,7 @@ import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import type { HeapCost } from '@/lib/schema/money';
 import { count } from '@/lib/units/format';
 import { microsOf, moneyFigure } from '@/lib/units/money';
+import { ChangeCost } from './change-cost';
 import { CostForm } from './cost-form';
 import { COST_WORDS } from './cost-words';
 import { RemoveButton } from './remove-button';
@@ -56,6 +57,11 @@ export function CostsPanel({
               <Cell figure>{moneyFigure(cost.share, currency)}</Cell>
               {mayWrite ? (
                 <Cell className="text-right">
+                  <ChangeCost
+                    {...{ house, source, currency, today }}
+                    cost={bare(cost)}
+                    what={`${COST_WORDS[cost.kind]} of ${cost.on}`}
+                  />
                   <RemoveButton
                     path={`/houses/${house}/heap-costs/${cost.id}`}
                     what={`${COST_WORDS[cost.kind]} of ${cost.on}`}
@@ -70,6 +76,8 @@ export function CostsPanel({
     </Panel>
   );
 }
+
+const bare = ({ share: _, ...cost }: HeapCost & { share: number }): HeapCost => cost;
 
 const hoursOf = ({ work }: HeapCost, currency: string) =>
   work === null ? '' : `${work.hours} h at ${work.rate} ${currency}`;

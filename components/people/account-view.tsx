@@ -5,6 +5,7 @@ import { Sentence } from '@/components/ui/sentence';
 import type { Preferences } from '@/lib/units/preferences';
 import { day } from '@/lib/units/time';
 import { roleSays, type RoleFacts } from '@/lib/wording/people';
+import { Holdings } from './holdings';
 import { PasswordForm } from './password-form';
 import { SignOutElsewhere } from './sign-out-elsewhere';
 
@@ -20,12 +21,14 @@ export function AccountView({
   person,
   role,
   sessions,
+  holdings,
   theme,
   preferences,
 }: {
-  person: { name: string; email: string; holdingName: string; sessionId: string };
+  person: { name: string; email: string; holdingId: string; holdingName: string; sessionId: string };
   role: RoleFacts;
   sessions: OpenSession[];
+  holdings: { holdingId: string; holdingName: string; role: string }[];
   theme: ThemeChoice;
   preferences: Preferences;
 }) {
@@ -50,6 +53,11 @@ export function AccountView({
             />
             <p className="pt-2 text-soft">{roleSays(role)}</p>
           </Panel>
+          {holdings.length < 2 ? null : (
+            <Panel title="Your holdings">
+              <Holdings holdings={holdings} here={person.holdingId} />
+            </Panel>
+          )}
           <Panel title="How you read">
             <Reading preferences={preferences} theme={theme} />
           </Panel>

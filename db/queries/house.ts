@@ -19,7 +19,7 @@ function toHouse(row: Row): House {
   const { frostLimit, frostAlarm, lastResort } = row;
   return {
     ...{ id, revision, slug, name, zone, latitude, longitude, altitude },
-    ...{ frostLimit, frostAlarm, lastResort },
+    ...{ frostLimit, frostAlarm, lastResort, laidUpAt: row.laidUpAt?.toISOString() ?? null },
   };
 }
 
@@ -91,6 +91,17 @@ export async function amendHouse(
   const rows = await holding.db
     .update(house)
     .set({ ...given, revision: sql`${house.revision} + 1` })
+    .where(and(eq(house.holdingId, holding.id), eq(house.id, id)))
+    .returning();
+  await touchPlan(holding, id);
+  return one(rows);
+}
+
+/** From here on the worker takes it up: rules in force decide, and nodes with a new token are let in. */
+export async function putInService(holding: Holding, id: string): Promise<House> {
+  const rows = await holding.db
+    .update(house)
+    .set({ laidUpAt: null, revision: sql`${house.revision} + 1` })
     .where(and(eq(house.holdingId, holding.id), eq(house.id, id)))
     .returning();
   await touchPlan(holding, id);

@@ -72,18 +72,40 @@ export async function createHeapCost(
   given: z.infer<typeof HeapCostCreate>,
   act: Act,
 ): Promise<HeapCost> {
-  const sourceId = (await houseNames(holding, houseId)).sources.find(given.source, 'source').id;
   const id = uuid();
+  await holding.db
+    .insert(heapCost)
+    .values({ holdingId: holding.id, id, ...(await rowOf(holding, houseId, given, act)) });
+  return written(holding, houseId, id);
+}
+
+/** As a whole, under the same id; who entered it is from then on who amended it. */
+export async function amendHeapCost(
+  holding: Holding,
+  houseId: string,
+  id: string,
+  given: z.infer<typeof HeapCostCreate>,
+  act: Act,
+): Promise<HeapCost> {
+  await holding.db
+    .update(heapCost)
+    .set(await rowOf(holding, houseId, given, act))
+    .where(and(eq(heapCost.holdingId, holding.id), eq(heapCost.id, id)));
+  return written(holding, houseId, id);
+}
+
+async function rowOf(holding: Holding, houseId: string, given: z.infer<typeof HeapCostCreate>, act: Act) {
+  const sourceId = (await houseNames(holding, houseId)).sources.find(given.source, 'source').id;
   const { kind, text, work, years } = given;
   const micros = amountOf(given);
   if (micros === null) throw new Error('the schema lets no cost through that has no amount');
-  await holding.db.insert(heapCost).values({
-    ...{ holdingId: holding.id, id, sourceId, kind, text, micros, work, years },
-    ...{ paidOn: given.on, by: act.by, enteredAt: act.now },
-  });
-  const made = await findHeapCost(holding, houseId, id);
-  if (made === null) throw new Error('the cost was written and did not come back');
-  return made;
+  return { sourceId, kind, text, micros, work, years, paidOn: given.on, by: act.by, enteredAt: act.now };
+}
+
+async function written(holding: Holding, houseId: string, id: string): Promise<HeapCost> {
+  const cost = await findHeapCost(holding, houseId, id);
+  if (cost === null) throw new Error('the cost was written and did not come back');
+  return cost;
 }
 
 export async function removeHeapCost(holding: Holding, id: string, now: Date): Promise<void> {

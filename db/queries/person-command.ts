@@ -2,19 +2,31 @@ import 'server-only';
 import { and, eq, gt, asc, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { controlMemory, personCommand } from '@/db/schema/running';
+import { house } from '@/db/schema/house';
 import type { PersonCommand } from '@/lib/control/types';
+import { Refusal } from './refusal';
 
 type Body<C = PersonCommand> = C extends PersonCommand ? Omit<C, 'number' | 'at' | 'by'> : never;
 
 /**
  * Writes down what a person orders and wakes the worker, whose core takes each number once.
  * @returns its number in the house
+ * @throws Refusal for a house that is laid up: an order that nobody takes would be carried out when it is put in service
  */
 export async function addPersonCommand(
   holding: Holding,
   houseId: string,
   order: { at: Date; by: string; body: Body },
 ): Promise<number> {
+  const [row] = await holding.db
+    .select({ laidUpAt: house.laidUpAt })
+    .from(house)
+    .where(and(eq(house.holdingId, holding.id), eq(house.id, houseId)));
+  if (row !== undefined && row.laidUpAt !== null)
+    throw new Refusal(
+      null,
+      'This house is laid up, so nothing drives it; an owner puts it in service first.',
+    );
   // Two orders at once must not get one number, nor the later one commit first and hide the earlier.
   await holding.db.execute(sql`select pg_advisory_xact_lock(hashtext(${houseId}))`);
   const rows = await holding.db

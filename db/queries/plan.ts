@@ -84,7 +84,7 @@ export async function listHouses(db: Holding['db']): Promise<HouseHead[]> {
   return db
     .select({ id: house.id, holdingId: house.holdingId, slug: house.slug, planRevision: house.planRevision })
     .from(house)
-    .where(isNull(house.removedAt));
+    .where(and(isNull(house.removedAt), isNull(house.laidUpAt)));
 }
 
 /** Which house a node belongs to, by the hash of its token. */
@@ -95,8 +95,10 @@ export async function findNodeByToken(
   const [row] = await db
     .select({ holdingId: node.holdingId, houseId: node.houseId, nodeId: node.id })
     .from(node)
+    .innerJoin(house, and(eq(house.holdingId, node.holdingId), eq(house.id, node.houseId)))
     .where(
       and(
+        isNull(house.laidUpAt),
         sql`(${node.tokenHash} = ${tokenHash} or (${node.formerTokenHash} = ${tokenHash} and ${node.formerTokenUntil} > now()))`,
         isNull(node.removedAt),
         isNull(node.revokedAt),
@@ -108,6 +110,15 @@ export async function findNodeByToken(
 /** Configuration as the core compiles it; null where the house is not there or was taken out of use. */
 export async function loadHouseConfig(holding: Holding, houseId: string): Promise<HouseConfig | null> {
   return (await loadHouse(holding, houseId))?.config ?? null;
+}
+
+/** A house that may be driven; null too for one that is laid up, whoever asks for it. */
+export async function loadHouseInService(holding: Holding, houseId: string): Promise<HouseRecord | null> {
+  const rows = await holding.db
+    .select({ id: house.id })
+    .from(house)
+    .where(and(eq(house.holdingId, holding.id), eq(house.id, houseId), isNull(house.laidUpAt)));
+  return rows.length === 0 ? null : loadHouse(holding, houseId);
 }
 
 /** Everything of a house that the worker drives it by. */

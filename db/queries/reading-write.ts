@@ -60,6 +60,11 @@ export async function copyStored<Row extends ReadingRow>(
   return rows.filter((row) => stored.delete(keyOf(row)));
 }
 
+/** The same where no point and time can be there yet: a reading that is there already ends the transaction. */
+export async function copyNew(client: pg.PoolClient, rows: readonly ReadingRow[]): Promise<void> {
+  await pipeline(binaryRows(rows), client.query(copyFrom(INTO_READING)));
+}
+
 async function copyStraight(client: pg.PoolClient, rows: readonly ReadingRow[]): Promise<boolean> {
   try {
     await pipeline(binaryRows(rows), client.query(copyFrom(INTO_READING)));
@@ -160,7 +165,7 @@ function writeRow(bytes: Buffer, start: number, row: ReadingRow): void {
  * Bad readings are left out. Safe to repeat.
  */
 export async function rollUp(
-  pool: pg.Pool,
+  pool: Pick<pg.Pool, 'query'> | pg.PoolClient,
   points: readonly number[],
   from: number,
   to: number,

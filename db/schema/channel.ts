@@ -13,7 +13,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { createdAt, holdingId, instant, removedAt, revision } from './columns';
-import { inHouse, ofHouse } from './house';
+import { inHouse, ofHouse } from './of-house';
 import { node } from './node';
 
 export const source = pgTable(

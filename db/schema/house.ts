@@ -1,9 +1,7 @@
 import { sql } from 'drizzle-orm';
 import {
-  type AnyPgColumn,
   bigint,
   doublePrecision,
-  foreignKey,
   jsonb,
   pgTable,
   primaryKey,
@@ -12,7 +10,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { organization } from './auth';
-import { createdAt, holdingId, removedAt, revision } from './columns';
+import { createdAt, holdingId, instant, removedAt, revision } from './columns';
 
 export const house = pgTable(
   'house',
@@ -29,6 +27,8 @@ export const house = pgTable(
     frostAlarm: doublePrecision('frost_alarm'),
     /** A thermostat that keeps the house without any software; null: nobody has said that there is one. */
     lastResort: jsonb('last_resort').$type<{ below: number; provedOn: string | null }>(),
+    /** Out of an archive and not put in service yet: the worker does not take it up, and no node can call it. */
+    laidUpAt: instant('laid_up_at'),
     /** Grows with every change of anything the core reads of this house. */
     planRevision: bigint('plan_revision', { mode: 'number' }).notNull().default(1),
     revision: revision(),
@@ -42,16 +42,3 @@ export const house = pgTable(
       .where(sql`removed_at is null`),
   ],
 );
-
-/** The column that says which house a row belongs to; `inHouse` is its key. */
-export const ofHouse = () => uuid('house_id').notNull();
-
-/** A row of a house goes with it. */
-export const inHouse = <T extends string>(table: {
-  holdingId: AnyPgColumn<{ tableName: T }>;
-  houseId: AnyPgColumn<{ tableName: T }>;
-}) =>
-  foreignKey({
-    columns: [table.holdingId, table.houseId],
-    foreignColumns: [house.holdingId, house.id],
-  }).onDelete('cascade');

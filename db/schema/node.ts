@@ -14,7 +14,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { createdAt, holdingId, instant, removedAt, revision } from './columns';
-import { inHouse, ofHouse } from './house';
+import { inHouse, ofHouse } from './of-house';
 
 export const node = pgTable(
   'node',

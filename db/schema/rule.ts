@@ -12,7 +12,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { RuleBody } from '@/lib/schema/rule';
 import { holdingId, instant } from './columns';
-import { inHouse, ofHouse } from './house';
+import { inHouse, ofHouse } from './of-house';
 
 export const rule = pgTable(
   'rule',

@@ -13,7 +13,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import type { Explanation } from '@/lib/control/events';
 import { holdingId, instant } from './columns';
-import { inHouse, ofHouse } from './house';
+import { inHouse, ofHouse } from './of-house';
 
 /** One row a switching of a load, with the ladder that decided it, written before the command leaves. */
 export const switching = pgTable(

@@ -11,7 +11,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { holdingId, instant } from './columns';
-import { inHouse, ofHouse } from './house';
+import { inHouse, ofHouse } from './of-house';
 
 /** A noon-to-noon summary of one source, re-made from readings and switchings by a job. */
 export const night = pgTable(

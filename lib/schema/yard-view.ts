@@ -10,7 +10,13 @@ import { sourceFields } from './source';
 const entity = { id: z.string(), revision: z.number() };
 const at = z.string();
 
-export const House = z.strictObject({ ...entity, slug: z.string(), ...houseFields });
+export const House = z.strictObject({
+  ...entity,
+  slug: z.string(),
+  ...houseFields,
+  /** Out of an archive and not in service: nothing drives it. */
+  laidUpAt: at.nullable(),
+});
 export type House = z.infer<typeof House>;
 
 export const FieldNode = z.strictObject({

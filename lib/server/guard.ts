@@ -35,7 +35,7 @@ export interface Answer {
   /** An answer that is not JSON. */
   file?: { type: string; name: string; text: string };
   /** The same of any length, made while it is sent: it reads in transactions of its own, after this one has ended. */
-  stream?: { type: string; name: string; parts: AsyncIterable<string> };
+  stream?: { type: string; name: string; parts: AsyncIterable<string | Uint8Array> };
   /** An answer to be shown where it stands, such as a picture. */
   inline?: { type: string; bytes: Uint8Array<ArrayBuffer> };
   headers?: Record<string, string>;
@@ -206,7 +206,8 @@ function respond(status: number, answer: Answer): Response {
     return new Response(file.text, { status, headers });
   }
   if (stream !== undefined) {
-    headers.set('content-type', `${stream.type}; charset=utf-8`);
+    const isText = stream.type.startsWith('text/');
+    headers.set('content-type', isText ? `${stream.type}; charset=utf-8` : stream.type);
     headers.set('content-disposition', `attachment; filename="${stream.name}"`);
     return new Response(streamed(stream.parts), { status, headers });
   }

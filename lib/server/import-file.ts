@@ -15,9 +15,9 @@ export const faultFile = (id: string) => path.join(folder(), `${id}.faults.csv`)
  * Writes a piece at its place. What lies behind it is of a try that broke off, and goes.
  * @returns length of the file then; null where the piece does not join on to what is there
  */
-export async function writePiece(id: string, from: number, bytes: Uint8Array): Promise<number | null> {
-  await mkdir(folder(), { recursive: true });
-  const file = await open(importFile(id), from === 0 ? 'w' : 'r+');
+export async function writePiece(name: string, from: number, bytes: Uint8Array): Promise<number | null> {
+  await mkdir(path.dirname(name), { recursive: true });
+  const file = await open(name, from === 0 ? 'w' : 'r+');
   try {
     const { size } = await file.stat();
     if (from > size) return null;

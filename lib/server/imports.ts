@@ -10,7 +10,7 @@ import type { Import, ImportCreate, ImportLayout, ImportPreview, ImportState } f
 import type { House, Point } from '@/lib/schema/yard-view';
 import { fileUnitsOf } from '@/lib/units/file-units';
 import { Problem } from './errors';
-import { decoderOf, dropAll, firstBytes, writePiece } from './import-file';
+import { decoderOf, dropAll, firstBytes, importFile, writePiece } from './import-file';
 import { isoIn } from './wire';
 
 const DAY_MS = 86_400_000;
@@ -50,7 +50,7 @@ export async function takePiece(
   if (bytes.length === 0 || from + bytes.length > one.bytes)
     throw new Refusal('from', `This piece lies outside the ${one.bytes} bytes that were announced.`);
   // what was written before may be sent again; a piece further on would leave a hole
-  const received = from > one.received ? null : await writePiece(one.id, from, bytes);
+  const received = from > one.received ? null : await writePiece(importFile(one.id), from, bytes);
   if (received === null) throw new Refusal('from', `The piece that begins at ${one.received} comes next.`);
   await imports.noteReceived(holding, one.id, received);
   return imports.findImport(holding, house.id, one.id);

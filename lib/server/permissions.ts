@@ -30,6 +30,7 @@ export const PERMISSIONS = {
   'key.manage': ['owner'],
   'audit.see': ['owner'],
   'holding.manage': ['owner'],
+  'holding.archive': ['owner'],
 } as const satisfies Record<string, readonly Role[]>;
 
 export type Action = keyof typeof PERMISSIONS;

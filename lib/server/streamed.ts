@@ -1,7 +1,7 @@
 import { log } from './log';
 
-/** Parts of text as a body that is made no faster than it is fetched. One that fails is cut off, never ended as if whole. */
-export function streamed(parts: AsyncIterable<string>): ReadableStream<Uint8Array> {
+/** Parts, of text or bytes, as a body that is made no faster than it is fetched. One that fails is cut off, never ended as if whole. */
+export function streamed(parts: AsyncIterable<string | Uint8Array>): ReadableStream<Uint8Array> {
   const iterator = parts[Symbol.asyncIterator]();
   const encoder = new TextEncoder();
   return new ReadableStream({
@@ -9,7 +9,7 @@ export function streamed(parts: AsyncIterable<string>): ReadableStream<Uint8Arra
       try {
         const next = await iterator.next();
         if (next.done === true) controller.close();
-        else controller.enqueue(encoder.encode(next.value));
+        else controller.enqueue(typeof next.value === 'string' ? encoder.encode(next.value) : next.value);
       } catch (error) {
         log().error({ err: error }, 'a file that was being sent broke off');
         controller.error(error);

@@ -1,6 +1,7 @@
 import 'server-only';
 import type { Holding } from '@/db/client';
 import { findAlarm, type Alarm } from '@/db/queries/alarm';
+import { findArchive } from '@/db/queries/archive';
 import { findPhotograph } from '@/db/queries/attachment';
 import { findCalendarLink, type OwnLink } from '@/db/queries/calendar-link';
 import { findChannel } from '@/db/queries/channel';
@@ -24,6 +25,7 @@ import { isId } from '@/db/queries/reference';
 import { findReportSchedule } from '@/db/queries/report-schedule';
 import { findRule, type FoundRule } from '@/db/queries/rule';
 import { findSource } from '@/db/queries/source';
+import type { Archive } from '@/lib/schema/archive';
 import type { Dismissal } from '@/lib/schema/heap-finding';
 import type { HeapJob } from '@/lib/schema/heap-job';
 import type { HeapEntry, Photograph } from '@/lib/schema/heap-view';
@@ -65,6 +67,7 @@ export interface Things {
   schedule: ReportSchedule;
   rule: FoundRule;
   alarm: Alarm;
+  archive: Archive;
   member: MemberRow;
   invitation: InvitationRow;
   key: KeyRow;
@@ -95,6 +98,7 @@ export const FIND: { [K in ThingName]: Find<Things[K]> } = {
   schedule: (holding, ref, house) => findReportSchedule(holding, house, ref),
   rule: findRule,
   alarm: async (holding, ref) => (isId(ref) ? findAlarm(holding, ref) : null),
+  archive: findArchive,
   member: findMember,
   invitation: async (holding, ref) =>
     (await listInvitations(holding, new Date())).find((row) => row.id === ref) ?? null,

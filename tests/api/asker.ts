@@ -12,6 +12,7 @@ export interface Told {
   headers: Headers;
   body: Json;
   text: string;
+  bytes: Buffer;
 }
 type Handler = (request: Request, context: { params: Promise<Record<string, string>> }) => Promise<Response>;
 type Loader = () => Promise<Record<string, Handler>>;
@@ -68,13 +69,15 @@ export class Asker {
       ...(body === undefined ? {} : { body: asBody(body) }),
     });
     const response = await handler(request, { params: Promise.resolve(params) });
-    const text = await response.text();
+    const bytes = Buffer.from(await response.arrayBuffer());
+    const text = bytes.toString('utf8');
     const isJson = /json/.test(response.headers.get('content-type') ?? '');
     return {
       status: response.status,
       headers: response.headers,
       body: isJson ? (JSON.parse(text) as Json) : {},
       text,
+      bytes,
     };
   }
 

@@ -22,6 +22,7 @@ const QUERY: Record<string, string> = {
   '/houses/{house}/readings': '?points=bench-1',
   '/houses/{house}/heap-findings': '?source=gate-heap',
   '/houses/{house}/imports/{import}/piece': '?from=0',
+  '/archives/{archive}/piece': '?from=0',
   '/houses/{house}/export/readings': '?points=bench-1&from=2026-11-01T00:00:00Z&to=2026-11-02T00:00:00Z',
   '/houses/{house}/export/switchings': '?from=2026-11-01T00:00:00Z&to=2026-11-02T00:00:00Z',
 };
@@ -61,6 +62,7 @@ export async function furnish(holding: Holding, owner: Asker): Promise<Furnished
     amount: '85',
   });
   await keep('schedule', `${at}/report-schedules`, { span: 'week', to: ['owner@larkmoor.example'] });
+  await keep('archive', '/archives/out', {});
   await keep('calendar', '/calendar-links', {});
   await keep('invitation', '/invitations', { email: 'invited@larkmoor.example', role: 'grower' });
   await keep('key', '/api-keys', { name: 'a key to end', role: 'grower' });

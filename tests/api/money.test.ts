@@ -1,6 +1,7 @@
 // Prices, costs of heaps and reports by mail, by their interface.
 import { beforeAll, expect, it } from 'vitest';
-import { Asker, errorsOf, itemsOf, type Json, newHolding, personOf } from './asker';
+import type { Asker} from './asker';
+import { errorsOf, itemsOf, type Json, newHolding, personOf } from './asker';
 import { furnish } from './furnished';
 
 let owner: Asker;
@@ -73,6 +74,20 @@ it('hours at a rate are an amount, to the last place, and a cost is an amount or
   expect((await owner.ask('DELETE', `${at}/heap-costs/${String(made['id'])}`)).status).toBe(204);
   const left = itemsOf(await owner.get(`${at}/heap-costs?source=gate-heap`));
   expect(left.map((one) => one['kind'])).toEqual(['pipe']);
+});
+
+it('a cost that was entered wrong is written anew, under the same name', async () => {
+  const pipe = itemsOf(await owner.get(`${at}/heap-costs`)).find((one) => one['kind'] === 'pipe') ?? {};
+  const path = `${at}/heap-costs/${String(pipe['id'])}`;
+  const anew = { source: 'gate-heap', kind: 'haulage', on: '2026-10-04', text: 'Not the pipe.', years: 2 };
+  expect((await grower.ask('PUT', path, { ...anew, amount: '95' })).status).toBe(403);
+  expect((await owner.ask('PUT', path, anew)).status).toBe(422);
+  const told = await owner.ask('PUT', path, { ...anew, amount: '95' });
+  expect([told.status, told.body]).toEqual([
+    200,
+    expect.objectContaining({ ...anew, id: pipe['id'], amount: '95' }),
+  ]);
+  expect(itemsOf(await owner.get(`${at}/heap-costs`))).toEqual([told.body]);
 });
 
 it('a report is sent to people of the holding only', async () => {

@@ -36,6 +36,8 @@ const YARD: Record<string, Shown> = {
   '[house]/money/page.tsx': { at: '/long-house/money', heading: /heat/ },
   '[house]/reports/page.tsx': { at: '/long-house/reports', heading: /Long house: Week of/, drawn: true },
   '[house]/alarms/page.tsx': { at: '/long-house/alarms', heading: /alarm/i },
+  '[house]/files/page.tsx': { at: '/long-house/files', heading: /logger|file/ },
+  'houses/page.tsx': { at: '/houses', heading: /house/ },
   'people/page.tsx': { at: '/people', heading: /Larkmoor Growers/ },
   'people/mail/page.tsx': {
     at: '/people/mail',
@@ -49,6 +51,7 @@ const YARD: Record<string, Shown> = {
 /** Pages before the sign-in. */
 const DOOR: Record<string, Shown> = {
   'sign-in/page.tsx': { at: '/sign-in', heading: /./ },
+  'offline-book/page.tsx': { at: '/offline-book', heading: /./ },
   'forgot-password/page.tsx': { at: '/forgot-password', heading: /./ },
   'reset-password/page.tsx': { at: '/reset-password?token=no-such-token', heading: /./ },
   'invitation/[id]/page.tsx': {

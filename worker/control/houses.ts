@@ -1,5 +1,5 @@
 /** Every house that this worker leads: loaded at the start, looked at again when told and each 30 s. */
-import { listHouses, loadHouse, type HouseHead } from '@/db/queries/plan';
+import { listHouses, loadHouseInService, type HouseHead } from '@/db/queries/plan';
 import { commandsAfter, housesWithCommands } from '@/db/queries/waiting-command';
 import { correct, latestReadings } from '@/db/queries/reading';
 import { readMemory, writeNodeStatus } from '@/db/queries/running';
@@ -132,7 +132,7 @@ export class Houses {
 
   private async load(holdingId: string, houseId: string): Promise<void> {
     const holding = { id: holdingId, db: this.base.db };
-    const record = await loadHouse(holding, houseId);
+    const record = await loadHouseInService(holding, houseId);
     const known = this.houses.get(houseId);
     if (record === null) return known === undefined ? undefined : this.drop(known);
     if (known !== undefined) return known.replan(record);

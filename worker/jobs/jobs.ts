@@ -9,6 +9,7 @@ import type { Base } from '../base';
 import type { Cancel } from '../clock';
 import type { Houses } from '../control/houses';
 import type { Ingest } from '../field/ingest';
+import { runArchives } from './archive-run';
 import { runImports } from './import-run';
 import { refreshNights } from './nights';
 import { sendReports } from './reports';
@@ -29,7 +30,7 @@ export interface JobDeps extends Base {
 
 export class Jobs {
   private tasks: ScheduledTask[] = [];
-  private cancelImports: Cancel = () => undefined;
+  private cancels: Cancel[] = [];
   private readonly running = new Set<string>();
 
   constructor(private readonly deps: JobDeps) {}
@@ -38,10 +39,10 @@ export class Jobs {
     void this.run('roll-ups', () => this.rollUpAfresh());
     void this.run('months', () => this.makeMonths());
     void this.run('nights', () => this.keepNights());
-    this.cancelImports = this.deps.clock.every(
-      IMPORTS_MS,
-      () => void this.run('imports', () => this.bringIn()),
-    );
+    this.cancels = [
+      this.deps.clock.every(IMPORTS_MS, () => void this.run('imports', () => this.bringIn())),
+      this.deps.clock.every(IMPORTS_MS, () => void this.run('archives', () => this.readArchives())),
+    ];
     const each = (expression: string, name: string, work: () => Promise<void>) =>
       cron.schedule(expression, () => void this.run(name, work), { timezone: 'UTC' });
     this.tasks = [
@@ -57,7 +58,8 @@ export class Jobs {
   stop(): void {
     for (const task of this.tasks) void task.stop();
     this.tasks = [];
-    this.cancelImports();
+    for (const cancel of this.cancels) cancel();
+    this.cancels = [];
   }
 
   /** One at a time of a kind; a failure is logged, and the next turn tries again. */
@@ -88,6 +90,10 @@ export class Jobs {
 
   private async bringIn(): Promise<void> {
     await runImports(this.deps);
+  }
+
+  private async readArchives(): Promise<void> {
+    await runArchives(this.deps);
   }
 
   private async makeLate(): Promise<void> {

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { cookies } from 'next/headers';
 import { AccountView } from '@/components/people/account-view';
+import { listMemberships } from '@/db/queries/people';
 import { listSessions } from '@/db/queries/people-page';
 import { requireViewer } from '@/lib/server/next-session';
 import { allowedTo } from '@/lib/server/permissions';
@@ -19,6 +20,7 @@ export default async function AccountPage() {
       person={viewer}
       role={{ role: viewer.role, actions: allowedTo(viewer.role) }}
       sessions={sessions}
+      holdings={await listMemberships(viewer.userId)}
       theme={theme === 'light' || theme === 'dark' ? theme : 'system'}
       preferences={preferences}
     />

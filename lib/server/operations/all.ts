@@ -1,4 +1,5 @@
 import type { Operation } from '../operation';
+import * as archives from './archives';
 import * as files from './files';
 import * as heap from './heap';
 import * as heapYear from './heap-year';
@@ -21,6 +22,7 @@ export const OPERATIONS: readonly Operation[] = [
   heap,
   heapYear,
   files,
+  archives,
   money,
   people,
   open,

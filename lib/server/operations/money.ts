@@ -44,6 +44,15 @@ export const createHeapCost = operation({
   body: HeapCostCreate,
   answers: { 201: HeapCost },
 });
+export const amendHeapCost = operation({
+  id: 'heap-cost.amend',
+  method: 'PUT',
+  path: '/houses/{house}/heap-costs/{cost}',
+  action: 'money.write',
+  summary: 'Write a cost anew, as a whole; what it said before stands in the audit log',
+  body: HeapCostCreate,
+  answers: { 200: HeapCost },
+});
 export const removeHeapCost = operation({
   id: 'heap-cost.remove',
   method: 'DELETE',

@@ -12,7 +12,7 @@ import {
 } from '@/components/heap/round-draft';
 import { USUAL } from '@/lib/units/preferences';
 
-const typing = (keys: string) => [...keys].reduce(pressed, '');
+const typing = (keys: string) => Array.from(keys).reduce(pressed, '');
 const draft = (change: Partial<RoundDraft> = {}): RoundDraft => ({
   ...{ section: sectionDraft(FIRST_SECTION), typed: {}, place: { column: 0, row: 0 }, text: '' },
   ...change,
