@@ -21,6 +21,9 @@ export function HousePanel({
   const low = lastNight?.lowest?.value ?? null;
   const isCold = (value: number | null) => value !== null && frostLimit !== null && value < frostLimit;
   const running = house.running.length === 0 ? 'nothing runs' : `${house.running.join(', ')} on`;
+  const standing = house.isLaidUp
+    ? 'laid up: nobody controls it'
+    : [oldWords(house.at, now), running].filter(Boolean).join(', ');
   return (
     <Panel
       title={
@@ -38,7 +41,7 @@ export function HousePanel({
           <Fact
             name="Now"
             value={temperature(coldest, preferences)}
-            note={[oldWords(house.at, now), running].filter(Boolean).join(', ')}
+            note={standing}
             isAlarm={isCold(coldest)}
           />
           <Fact

@@ -3,7 +3,7 @@ import { Button } from '@/components/ui/button';
 import { Figures } from '@/components/ui/panel';
 import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import type { ImportFound } from '@/lib/schema/import';
-import { count } from '@/lib/units/format';
+import { count, grouped } from '@/lib/units/format';
 import { isoMinute } from './iso-minute';
 import type { FilesScene } from './files-data';
 
@@ -27,7 +27,7 @@ export function FoundPart({
       <div className="max-w-xl">
         <Figures
           rows={[
-            { name: 'Readings', value: found.readings },
+            { name: 'Readings', value: grouped(found.readings) },
             { name: 'From', value: time(found.from) },
             { name: 'To', value: time(found.to) },
             {

@@ -8,7 +8,7 @@ import { send } from '@/components/ui/send';
 import { Cell, Row, RowHead, Table } from '@/components/ui/table';
 import { say } from '@/components/ui/toast';
 import type { Import } from '@/lib/schema/import';
-import { count } from '@/lib/units/format';
+import { count, grouped } from '@/lib/units/format';
 import { moment } from '@/lib/units/time';
 import type { FilesScene } from './files-data';
 
@@ -79,7 +79,7 @@ export function ImportsTable({
             </RowHead>
             <Cell className="py-4">{STATES[one.state]}</Cell>
             <Cell figure className="py-4">
-              {one.brought}
+              {grouped(one.brought)}
             </Cell>
             <Cell wideOnly className="break-all py-4">
               {one.by}, {moment(Date.parse(one.createdAt), now, house.zone, preferences)}

@@ -36,7 +36,11 @@ export function OtherHouses({
                 <span>
                   <span className="font-semibold underline underline-offset-4">{card.name}</span>
                   <span className="block text-[0.9rem] text-soft">
-                    {card.running.length === 0 ? 'Nothing runs' : `${card.running.join(', ')} on`}
+                    {card.isLaidUp
+                      ? 'Laid up: nobody controls it'
+                      : card.running.length === 0
+                        ? 'Nothing runs'
+                        : `${card.running.join(', ')} on`}
                     {card.at === null ? '' : `, ${moment(card.at, now, card.zone, preferences)}`}
                   </span>
                 </span>

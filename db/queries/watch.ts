@@ -147,6 +147,7 @@ export async function readCards(holding: Holding, butHouseId: string | null): Pr
       alarms: alarms.find((row) => row.houseId === house.id)?.many ?? 0,
       running: (stood?.channels ?? []).filter((one) => one.state === 'on').map((one) => one.label),
       at: stateAt?.getTime() ?? null,
+      isLaidUp: house.laidUpAt !== null,
     };
   });
 }

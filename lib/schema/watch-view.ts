@@ -97,6 +97,8 @@ export interface WatchCard {
   running: string[];
   /** Epoch ms of the state that this is from. */
   at: number | null;
+  /** Out of an archive and not put in service yet: nobody controls it. */
+  isLaidUp: boolean;
 }
 
 export interface WatchView {

@@ -126,7 +126,13 @@ export function pointValue(value: number | null, unit: string, preferences: Pref
   }
 }
 
-/** A count with its noun. @example count(1, 'start') === '1 start' */
+/** A count with its noun, in groups of three. @example count(2419162, 'reading') === '2 419 162 readings' */
 export function count(many: number, one: string, more = `${one}s`): string {
-  return `${many}${space}${many === 1 ? one : more}`;
+  return `${grouped(many)}${space}${many === 1 ? one : more}`;
+}
+
+/** Whole numbers of five digits and more in groups of three, as ISO 80000-1 has them. */
+export function grouped(many: number): string {
+  const digits = String(many);
+  return digits.length < 5 ? digits : digits.replaceAll(/\B(?=(\d{3})+$)/g, space);
 }

@@ -16,15 +16,17 @@ export interface HouseFacts {
   alarms: number;
   lastLowest: number | null;
   fallingCores: string[];
+  isLaidUp: boolean;
 }
 
-/** Worst first: open alarms, then under the frost limit now or last night, falling cores, and how near the limit is. */
+/** Those that are laid up last. Worst first: open alarms, then under the frost limit now or last night, falling cores, and how near the limit is. */
 export function worstOf<House extends HouseFacts>(houses: readonly House[]): House[] {
   const under = ({ frostLimit }: House, value: number | null) =>
     Number(value !== null && frostLimit !== null && value < frostLimit);
   const room = ({ coldest, frostLimit }: House) =>
     coldest === null ? -Infinity : coldest - (frostLimit ?? 0);
   const weights = (house: House) => [
+    -Number(house.isLaidUp),
     house.alarms,
     under(house, house.coldest),
     under(house, house.lastLowest),
@@ -57,11 +59,23 @@ export function housesSentence(
             tone: 'alarm',
           },
         ],
-    ofHouses(houses, ofHolding, preferences),
+    ofHouses(
+      houses.filter((house) => !house.isLaidUp),
+      ofHolding,
+      preferences,
+    ),
+    laidUp(houses.filter((house) => house.isLaidUp)),
   );
 }
 
+function laidUp(houses: readonly HouseFacts[]): Phrase[] {
+  if (houses.length === 0) return [];
+  const names = houses.map((house) => midSentence(house.name)).join(', the ');
+  return [`Nobody controls the ${names}: ${houses.length === 1 ? 'it is' : 'they are'} laid up.`];
+}
+
 function ofHouses(houses: readonly HouseFacts[], ofHolding: number, preferences: Preferences): Phrase[] {
+  if (houses.length === 0) return [{ text: 'No house is in service.', tone: 'strong' }];
   const wanting = houses.filter((house) => needs(house, preferences).length > 0);
   const [worst] = wanting;
   if (worst === undefined) return allHold(houses, ofHolding, preferences);

@@ -2,7 +2,7 @@
 import { v7 as uuid } from 'uuid';
 import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
-import type { Asker} from './asker';
+import type { Asker } from './asker';
 import { errorsOf, itemsOf, newHolding, NOBODY, personOf, type Json } from './asker';
 import { furnish, type Furnished } from './furnished';
 import { picture } from './picture';

@@ -1,6 +1,6 @@
 // What a heap book does not take, each refused at its field with what to give instead.
 import { beforeAll, expect, it } from 'vitest';
-import type { Asker} from './asker';
+import type { Asker } from './asker';
 import { errorsOf, newHolding, personOf, type Json } from './asker';
 import * as shown from './shown';
 

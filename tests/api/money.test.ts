@@ -1,6 +1,6 @@
 // Prices, costs of heaps and reports by mail, by their interface.
 import { beforeAll, expect, it } from 'vitest';
-import type { Asker} from './asker';
+import type { Asker } from './asker';
 import { errorsOf, itemsOf, type Json, newHolding, personOf } from './asker';
 import { furnish } from './furnished';
 

@@ -4,7 +4,7 @@ import { coreTrendWords, type HouseFacts, housesSentence, oldWords, worstOf } fr
 import { plainText } from '@/lib/wording/phrase';
 
 const house = (name: string, more: Partial<HouseFacts> = {}): HouseFacts => ({
-  ...{ name, frostLimit: 3, coldest: 6, alarms: 0, lastLowest: 4.1, fallingCores: [] },
+  ...{ name, frostLimit: 3, coldest: 6, alarms: 0, lastLowest: 4.1, fallingCores: [], isLaidUp: false },
   ...more,
 });
 const said = (houses: HouseFacts[], ofHolding = 0) =>
@@ -32,6 +32,14 @@ describe('the sentence over all houses', () => {
     expect(said([house('Long house', { coldest: null, lastLowest: null })])).toContain(
       'no good reading of it now',
     );
+  });
+
+  it('asks nothing for a house that is laid up, and says that nobody controls it', () => {
+    const old = house('Old house', { coldest: null, lastLowest: null, isLaidUp: true });
+    expect(said([old, house('Long house')])).toBe(
+      'The long house holds. No alarm stands, and the coldest came down to 4.1 °C last night. Nobody controls the old house: it is laid up.',
+    );
+    expect(said([old])).toBe('No house is in service. Nobody controls the old house: it is laid up.');
   });
 
   it('says what is of no single house before all', () => {
