@@ -44,7 +44,7 @@ export function SectionDrawing({
       role="img"
       aria-label={saidOf(section, places, preferences)}
       viewBox={`0 0 ${wide} ${high}`}
-      className="w-full font-mono text-[16px] sm:text-[12px]"
+      className="mx-auto max-h-[36rem] w-full font-mono text-[16px] sm:text-[12px]"
     >
       <defs>
         <clipPath id={clip}>
