@@ -66,6 +66,13 @@ export class ArchiveSnapshot {
     await this.client.end().catch(() => undefined);
   }
 
+  private copied(statement: string): AsyncIterable<Buffer> {
+    const stream = this.client.query(copyTo(statement));
+    // an error that comes before anybody reads must be kept for who does, and end neither the process nor wait for ever
+    stream.on('error', (error) => stream.destroy(error));
+    return stream;
+  }
+
   async countRows(): Promise<number> {
     let rows = 0;
     for (const one of ARCHIVE_TABLES) rows += await this.count(`${quoted(one.name)} where ${whereOf(one)}`);
@@ -80,18 +87,14 @@ export class ArchiveSnapshot {
   table(one: ArchiveTable): AsyncIterable<Buffer> {
     const columns = columnsOf(one).map((column) => quoted(column.name));
     const rows = `select ${columns.join()} from ${quoted(one.name)} where ${whereOf(one)} ${orderOf(one)}`;
-    return this.client.query(
-      copyTo(`copy (select row_to_json(kept) from (${rows}) kept) to stdout with ${RAW_LINES}`),
-    );
+    return this.copied(`copy (select row_to_json(kept) from (${rows}) kept) to stdout with ${RAW_LINES}`);
   }
 
   /** Name, e-mail and role of everybody who belongs to the holding: better-auth's tables stand outside row security. */
   people(): AsyncIterable<Buffer> {
     const rows = `select u.name, u.email, m.role, m.created_at as since from member m join "user" u on u.id = m.user_id
       where m.organization_id = current_setting('app.holding')::uuid order by m.created_at, m.id`;
-    return this.client.query(
-      copyTo(`copy (select row_to_json(kept) from (${rows}) kept) to stdout with ${RAW_LINES}`),
-    );
+    return this.copied(`copy (select row_to_json(kept) from (${rows}) kept) to stdout with ${RAW_LINES}`);
   }
 
   /** Months that hold readings, as `2026-11`, with how many they hold. */
@@ -122,10 +125,7 @@ export class ArchiveSnapshot {
       const rows = `select point, to_char(at, 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"'), value,
         case quality when 0 then 'good' when 1 then 'uncertain' else 'bad' end
         from reading where point = ${point} and ${within(at)} order by at`;
-      const stream: AsyncIterable<Buffer> = this.client.query(
-        copyTo(`copy (${rows}) to stdout with (format csv)`),
-      );
-      yield* stream;
+      yield* this.copied(`copy (${rows}) to stdout with (format csv)`);
     }
   }
 

@@ -36,7 +36,8 @@ export async function* packed(holdingId: string, now: Date, packing: Packing): A
   // it is a PassThrough, which the types hide
   if (!(output instanceof Readable)) throw new Error('the zip gives no stream that can be ended');
   zip.on('error', (error: Error) => output.destroy(error));
-  const filling = fill(zip, snapshot, now, packing).catch((error: unknown) => {
+  const gone = new AbortController();
+  const filling = fill(zip, snapshot, { now, packing, gone: gone.signal }).catch((error: unknown) => {
     output.destroy(error instanceof Error ? error : new Error(String(error)));
   });
   try {
@@ -46,18 +47,27 @@ export async function* packed(holdingId: string, now: Date, packing: Packing): A
       yield chunk;
     }
   } finally {
+    gone.abort();
     await snapshot.end();
     output.destroy();
     await filling;
   }
 }
 
-async function fill(zip: ZipFile, snapshot: ArchiveSnapshot, now: Date, packing: Packing): Promise<void> {
+interface Filling {
+  now: Date;
+  packing: Packing;
+  /** Nobody takes any more: what waits to be taken would wait for ever. */
+  gone: AbortSignal;
+}
+
+async function fill(zip: ZipFile, snapshot: ArchiveSnapshot, filling: Filling): Promise<void> {
+  const { now, packing } = filling;
   const months = await snapshot.months();
   packing.ofRows = (await snapshot.countRows()) + months.reduce((sum, one) => sum + one.readings, 0);
   const files: ManifestFile[] = [];
   const add = async (path: string, parts: AsyncIterable<Buffer>, kind: 'lines' | 'table' | 'picture') => {
-    files.push(await addFile(zip, path, parts, kind, now, packing));
+    files.push(await addFile(zip, path, parts, kind, filling));
   };
   await add(PEOPLE, snapshot.people(), 'lines');
   for (const one of ARCHIVE_TABLES) await add(tablePath(one.name), snapshot.table(one), 'lines');
@@ -77,8 +87,7 @@ async function addFile(
   path: string,
   parts: AsyncIterable<Buffer>,
   kind: 'lines' | 'table' | 'picture',
-  now: Date,
-  packing: Packing,
+  { now, packing, gone }: Filling,
 ): Promise<ManifestFile> {
   const hash = createHash('sha256');
   let [bytes, lines] = [0, 0];
@@ -92,7 +101,7 @@ async function addFile(
       yield part;
     }
   }
-  const stream = Readable.from(metered(), { objectMode: false });
+  const stream = Readable.from(metered(), { objectMode: false, signal: gone });
   // a picture is packed already
   zip.addReadStream(stream, path, { mtime: now, compress: kind !== 'picture' });
   await finished(stream, { writable: false });

@@ -3,6 +3,8 @@ import { afterAll, beforeAll, expect, it } from 'vitest';
 import { closePools, everyHolding, everyPool, type Holding } from '@/db/client';
 import { createHolding } from '@/db/queries/people';
 import { makeReadingMonth } from '@/db/queries/reading-write';
+import { ArchiveSnapshot } from '@/db/queries/archive-out';
+import { ARCHIVE_TABLES } from '@/db/queries/archive-tables';
 import { longHouse } from '@/db/seed/long-house';
 import { writeHouse } from '@/db/seed/write-house';
 import { packed, type Packing } from '@/lib/server/archive-pack';
@@ -53,9 +55,14 @@ it('who takes no more of it is given no more: what was read ahead is a small par
   expect(packing.rows).toBe(packing.ofRows + 1);
 }, 60_000);
 
-it('who goes away in the middle leaves no snapshot behind', async () => {
-  const parts = packed(holding.id, new Date(FROM), { rows: 0, ofRows: 0, bytes: 0 });
-  await parts.next();
+it.each([
+  ['at the beginning', 0],
+  ['among the readings', 1000],
+])('who goes away %s leaves no snapshot behind', async (_where, rows) => {
+  const packing: Packing = { rows: 0, ofRows: 0, bytes: 0 };
+  const parts = packed(holding.id, new Date(FROM), packing);
+  do await parts.next();
+  while (packing.rows < rows);
   await parts.return(undefined);
   const isGone = async () => {
     const { rows } = await everyPool().query<{ open: number }>(
@@ -65,4 +72,21 @@ it('who goes away in the middle leaves no snapshot behind', async () => {
     return rows[0]?.open === 0;
   };
   await expect(until('the connection is gone', isGone)).resolves.toBeUndefined();
+});
+
+it('a table that is asked for as its connection goes is told so to whoever reads it later, and ends nothing else', async () => {
+  const snapshot = await ArchiveSnapshot.take(holding.id);
+  const [first] = ARCHIVE_TABLES;
+  if (first === undefined) throw new Error('an archive has no table');
+  const ended = snapshot.end();
+  const table = snapshot.table(first);
+  await ended;
+  // a turn of the loop on, the error has come with nobody there to hear it
+  await new Promise((resolve) => {
+    setImmediate(resolve);
+  });
+  const read = async () => {
+    for await (const part of table) expect(part).toBeInstanceOf(Buffer);
+  };
+  await expect(read()).rejects.toThrow();
 });
