@@ -5,24 +5,24 @@
  * Volume flow is meant where the fan is, at the intake, so the air's mass is taken at the intake's temperature and at the
  * pressure of the house's altitude. The air counts as dry: at 10 °C and saturated the difference is under 1 %.
  *
- * Warm-up counts, and so does what the probe in the return misses of it: a probe follows the air with a delay, so the air
- * is ahead of what is read by delay × (rate at which the reading rises). Over a draw that adds (ρ V̇ c_p) · delay · (rise of
- * the reading from its beginning to its end). The intake's air is the same before a draw as in it, and needs none of this.
+ * Warm-up counts as it is read. A probe follows the air with a delay, so the air is ahead of what is read by delay × (rate at
+ * which the reading rises), and over a draw that is missed: (ρ V̇ c_p) · delay · (rise of the reading from its beginning to
+ * its end). Nobody knows a probe's delay in its place, so the figure stays what anybody reckons from the readings, and what
+ * may be missed is in the deviation. The intake's air is the same before a draw as in it, and needs none of this.
  *
  * Uncertainty. None of the three things that may be wrong averages out over a night, since each is wrong all the time: the
  * flow, |Q| · sd(V̇)/V̇; the two probes, (ρ V̇ c_p) · sd(ΔT) · time, sd(ΔT) = √(sd² + sd²) of their calibrations or classes
- * (probes of one batch share part of their error: the true figure is then smaller); and the delay, by half of what it adds.
+ * (probes of one batch share part of their error: the true figure is then smaller); and the delay, by what it hides.
  * They are independent of each other and add in squares; over draws, loops and nights the deviations add as they are.
  */
 import { heatCapacityFlow, pressureAtAltitude } from '@/lib/physics/air';
 import { type Extent, liner, type Series } from './series';
 
 /**
- * s until a probe shows 63 % of a step of the air that moves past it, and its deviation: makers' tables of sheathed
- * thermometers give 55 to 155 s for sheaths of 6 to 8 mm in slow air.
+ * s until a probe shows 63 % of a step of the air that moves past it: makers' tables of sheathed thermometers give 55 to
+ * 155 s for sheaths of 6 to 8 mm in slow air. The slow end, since the figure itself makes nothing good of it.
  */
-const PROBE_DELAY_S = 90;
-const PROBE_DELAY_SD_S = 45;
+const PROBE_DELAY_S = 155;
 
 const J_PER_KWH = 3_600_000;
 
@@ -91,7 +91,7 @@ export function loopHeat(
   let joule = 0;
   let perKelvinJ = 0;
   let measuredMs = 0;
-  let followedJ = 0;
+  let behindJ = 0;
   for (const [from, to] of pieces(runs, intake, back)) {
     // both points silent together: the lines that meet at its ends must not bridge it
     if (to - from > longestMs) continue;
@@ -100,9 +100,8 @@ export function loopHeat(
     if (start === null || end === null) continue;
     const seconds = (to - from) / 1000;
     const wattPerK = heatCapacityFlow(flow.m3PerS, (start.intake + end.intake) / 2, pressurePa);
-    const behindJ = wattPerK * PROBE_DELAY_S * (end.back - start.back);
-    joule += (wattPerK * seconds * (start.gain + end.gain)) / 2 + behindJ;
-    followedJ += behindJ;
+    joule += (wattPerK * seconds * (start.gain + end.gain)) / 2;
+    behindJ += wattPerK * PROBE_DELAY_S * (end.back - start.back);
     perKelvinJ += wattPerK * seconds;
     measuredMs += to - from;
   }
@@ -110,7 +109,7 @@ export function loopHeat(
   const parts = {
     flow: (joule * ofFlow) / J_PER_KWH,
     probes: (perKelvinJ * Math.hypot(intake.sd, back.sd)) / J_PER_KWH,
-    delay: ((followedJ / PROBE_DELAY_S) * PROBE_DELAY_SD_S) / J_PER_KWH,
+    delay: behindJ / J_PER_KWH,
   };
   return { kWh: joule / J_PER_KWH, sd: deviation(parts), measuredS: measuredMs / 1000, parts };
 }

@@ -44,7 +44,7 @@ describe('the deviation of heat', () => {
   });
 
   it.each([55, 90, 155])(
-    'counts the warm air that a probe of %i s has not followed yet, within two deviations',
+    'covers the warm air that a probe of %i s has not followed yet, within two deviations',
     (delayS) => {
       const lagging = measured(0, 0, 0, delayS);
       expect(lagging.parts.delay).toBeGreaterThan(0);
