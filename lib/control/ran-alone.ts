@@ -1,7 +1,7 @@
 /**
  * Draws that are told afterwards: a node ran its fallback while nobody heard it, and tells from its log when it is back.
- * They count in the rolling 24 h as any other, and the credit is reckoned anew from the draws of that day: a heap that
- * was drawn on has not rested, whoever drew. So the credit can only fall by it, never rise.
+ * The rolling 24 h counts them like all draws, and the credit is reckoned anew from the draws of that day: whoever drew,
+ * a heap that was drawn on has not rested. So the credit can only fall by it, never rise.
  */
 import { beginRest, creditAt, drawCost, leastRestMs } from './credit';
 import { addSpans } from './day';
