@@ -17,10 +17,10 @@ export interface GroupOptions<Item, Result> {
   weigh: (item: Item) => number;
   write: (items: Item[]) => Promise<Result[]>;
   /**
-   * What need not be durable at once waits until `ms` after the write before it, so that many houses share a commit; what
-   * is urgent takes all that waits along with it, and so does a weight that fills a commit well by itself.
+   * What need not be durable at once waits until so long (ms) after the write before it, so that many houses share a
+   * commit; what is more urgent takes all that waits along with it, and so does a weight that fills a commit well by itself.
    */
-  gather: { ms: number; fullWeight: number; isUrgent: (item: Item) => boolean };
+  gather: { fullWeight: number; waitMs: (item: Item) => number };
 }
 
 interface Waiting<Item, Result> {
@@ -38,7 +38,7 @@ export class GroupWriter<Item, Result> {
   private stopped = false;
   private awaySince: number | null = null;
   private wroteAtMs = -Infinity;
-  private endGathering: (() => void) | null = null;
+  private gathering: { ms: number; end: () => void } | null = null;
 
   constructor(
     private readonly base: Pick<Base, 'clock' | 'log' | 'metrics'>,
@@ -65,7 +65,9 @@ export class GroupWriter<Item, Result> {
     const result = new Promise<Result>((done, failed) => {
       this.waiting.push({ item, done, failed });
     });
-    if (this.isHurried()) this.endGathering?.();
+    const { gathering } = this;
+    if (gathering !== null && (this.isFull() || this.options.gather.waitMs(item) < gathering.ms))
+      gathering.end();
     void this.run();
     return result;
   }
@@ -94,23 +96,26 @@ export class GroupWriter<Item, Result> {
     this.running = false;
   }
 
-  private isHurried(): boolean {
-    const { fullWeight, isUrgent } = this.options.gather;
-    return this.weight >= fullWeight || this.waiting.some(({ item }) => isUrgent(item));
+  private isFull(): boolean {
+    return this.weight >= this.options.gather.fullWeight;
   }
 
   private async gather(): Promise<void> {
     const { clock } = this.base;
-    const leftMs = this.wroteAtMs + this.options.gather.ms - clock.monotonicMs();
-    if (leftMs <= 0 || this.isHurried()) return;
-    await new Promise<void>((resolve) => {
-      const cancel = clock.after(leftMs, resolve);
-      this.endGathering = () => {
-        cancel();
-        resolve();
-      };
-    });
-    this.endGathering = null;
+    while (!this.isFull()) {
+      const ms = Math.min(...this.waiting.map(({ item }) => this.options.gather.waitMs(item)));
+      const leftMs = this.wroteAtMs + ms - clock.monotonicMs();
+      if (leftMs <= 0) return;
+      await new Promise<void>((resolve) => {
+        const cancel = clock.after(leftMs, resolve);
+        const end = () => {
+          cancel();
+          resolve();
+        };
+        this.gathering = { ms, end };
+      });
+      this.gathering = null;
+    }
   }
 
   private nextGroup(): Waiting<Item, Result>[] {

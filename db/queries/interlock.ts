@@ -4,6 +4,7 @@ import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { interlock } from '@/db/schema/channel';
+import { needsCycle } from '@/lib/control/interlocks';
 import type { InterlockCreate } from '@/lib/schema/channel';
 import { Interlock } from '@/lib/schema/yard-view';
 import { touchPlan } from './plan';
@@ -59,22 +60,10 @@ function refuseContradiction(given: Given, others: Interlock[]): void {
     }
   }
   if (given.kind !== 'needs') return;
-  const ring = pathOfNeeds(others, given.other, given.channel);
-  if (ring !== null) {
-    throw new Refusal(null, `Each would wait for the next: ${[given.channel, ...ring].join(' needs ')}.`);
+  const [first, ...ring] = needsCycle([given, ...others.filter((one) => one.kind === 'needs')]);
+  if (first !== undefined) {
+    throw new Refusal(null, `Each would wait for the next: ${[first, ...ring, first].join(' needs ')}.`);
   }
-}
-
-function pathOfNeeds(rows: Interlock[], from: string, to: string, seen = new Set<string>()): string[] | null {
-  if (from === to) return [from];
-  if (seen.has(from)) return null;
-  seen.add(from);
-  for (const row of rows) {
-    if (row.kind !== 'needs' || row.channel !== from) continue;
-    const onward = pathOfNeeds(rows, row.other, to, seen);
-    if (onward !== null) return [from, ...onward];
-  }
-  return null;
 }
 
 async function columns(holding: Holding, houseId: string, given: Given, others: Interlock[]) {

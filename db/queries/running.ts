@@ -29,25 +29,17 @@ export interface RunningBatch {
  * round. Safe to repeat: what is there already stays.
  */
 export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
+  const { switchings, decisions, reports, logs = [], memories } = batch;
+  const isQuiet =
+    memories.length > 0 && switchings.length + decisions.length + reports.length + logs.length === 0;
+  // most often nothing happened but readings: one statement is a transaction by itself
+  if (isQuiet && memories.every(isStateAlone)) return writeMemories(db, memories);
   await db.transaction(async (tx) => {
-    if (batch.switchings.length > 0)
-      await tx.insert(switching).values(batch.switchings).onConflictDoNothing();
-    if (batch.decisions.length > 0) await tx.insert(decision).values(batch.decisions).onConflictDoNothing();
-    if (batch.reports.length > 0) await tx.insert(relayReport).values(batch.reports).onConflictDoNothing();
-    if (batch.logs !== undefined && batch.logs.length > 0)
-      await tx.insert(nodeLog).values(batch.logs).onConflictDoNothing();
-    await writeStates(
-      tx,
-      batch.memories.filter((row) => isStateAlone(row)),
-    );
-    for (const row of batch.memories) {
-      if (isStateAlone(row)) continue;
-      const { holdingId: _holding, houseId: _house, ...changed } = row;
-      await tx
-        .insert(controlMemory)
-        .values(row)
-        .onConflictDoUpdate({ target: [controlMemory.holdingId, controlMemory.houseId], set: changed });
-    }
+    if (switchings.length > 0) await tx.insert(switching).values(switchings).onConflictDoNothing();
+    if (decisions.length > 0) await tx.insert(decision).values(decisions).onConflictDoNothing();
+    if (reports.length > 0) await tx.insert(relayReport).values(reports).onConflictDoNothing();
+    if (logs.length > 0) await tx.insert(nodeLog).values(logs).onConflictDoNothing();
+    await writeMemories(tx, memories);
   });
 }
 
@@ -55,23 +47,48 @@ export async function writeRunning(db: Db, batch: RunningBatch): Promise<void> {
 const isStateAlone = ({ state, stateAt, ...rest }: MemoryRow): boolean =>
   state !== undefined && stateAt !== undefined && Object.keys(rest).length === 2;
 
-/** Each house writes its state at each report: a statement a house would cost many times what the rows do. */
-async function writeStates(db: Db, rows: MemoryRow[]): Promise<void> {
+const STATE_COLUMNS = [
+  ['state', 'jsonb', (row: MemoryRow) => row.state],
+  ['state_at', 'timestamptz', (row: MemoryRow) => row.stateAt],
+] as const;
+const ALL_COLUMNS = [
+  ...STATE_COLUMNS,
+  ['memory', 'jsonb', (row: MemoryRow) => row.memory],
+  ['memory_at', 'timestamptz', (row: MemoryRow) => row.memoryAt],
+  ['taken', 'bigint', (row: MemoryRow) => row.taken],
+  ['plan_revision', 'bigint', (row: MemoryRow) => row.planRevision],
+  ['epoch', 'bigint', (row: MemoryRow) => row.epoch],
+] as const;
+type Columns = typeof STATE_COLUMNS | typeof ALL_COLUMNS;
+
+async function writeMemories(db: Db, rows: MemoryRow[]): Promise<void> {
+  const isWhole = (row: MemoryRow) => ALL_COLUMNS.every(([, , of]) => of(row) !== undefined);
+  await writeTold(db, rows.filter(isStateAlone), STATE_COLUMNS);
+  await writeTold(db, rows.filter(isWhole), ALL_COLUMNS);
+  for (const row of rows.filter((one) => !isStateAlone(one) && !isWhole(one))) {
+    const { holdingId: _holding, houseId: _house, ...changed } = row;
+    await db
+      .insert(controlMemory)
+      .values(row)
+      .onConflictDoUpdate({ target: [controlMemory.holdingId, controlMemory.houseId], set: changed });
+  }
+}
+
+/** Each house is written at each report: a statement a house would cost many times what the rows do. */
+async function writeTold(db: Db, rows: MemoryRow[], columns: Columns): Promise<void> {
   if (rows.length === 0) return;
-  const told = JSON.stringify(
-    rows.map(({ holdingId, houseId, state, stateAt }) => ({
-      holding_id: holdingId,
-      house_id: houseId,
-      state,
-      state_at: stateAt,
-    })),
-  );
+  const told = rows.map((row) => ({
+    ...{ holding_id: row.holdingId, house_id: row.houseId },
+    ...Object.fromEntries(columns.map(([name, , of]) => [name, of(row)])),
+  }));
+  const names = sql.raw(columns.map(([name]) => name).join(', '));
+  const types = sql.raw(columns.map(([name, type]) => `${name} ${type}`).join(', '));
+  const changes = sql.raw(columns.map(([name]) => `${name} = excluded.${name}`).join(', '));
   await db.execute(sql`
-    insert into control_memory (holding_id, house_id, state, state_at)
-    select holding_id, house_id, state, state_at
-    from jsonb_to_recordset(${told}::jsonb)
-      as told(holding_id uuid, house_id uuid, state jsonb, state_at timestamptz)
-    on conflict (holding_id, house_id) do update set state = excluded.state, state_at = excluded.state_at`);
+    insert into control_memory (holding_id, house_id, ${names})
+    select holding_id, house_id, ${names} from jsonb_to_recordset(${JSON.stringify(told)}::jsonb)
+      as told(holding_id uuid, house_id uuid, ${types})
+    on conflict (holding_id, house_id) do update set ${changes}`);
 }
 
 export interface KeptMemory {
@@ -192,14 +209,27 @@ export const storableText = (text: string): string => text.replace(/[\0\p{Surrog
 const storable = (_key: string, value: unknown): unknown =>
   typeof value === 'string' ? storableText(value) : value;
 
+/** Rows of one statement: a thousand nodes are not held up by one another's locks for long. */
+const NODES_A_STATEMENT = 500;
+
 /** What the link last knew of each node, for the wiring page and for a restarted worker. */
 export async function writeNodeStatus(
   db: Db,
   nodes: readonly { id: string; holdingId: string; lastHeardAt: number; status: Record<string, unknown> }[],
 ): Promise<void> {
-  for (const node of nodes) {
+  for (let first = 0; first < nodes.length; first += NODES_A_STATEMENT) {
+    const told = nodes
+      .slice(first, first + NODES_A_STATEMENT)
+      .map(({ id, holdingId, lastHeardAt, status }) => ({
+        holding_id: holdingId,
+        id,
+        status,
+        heard_at: new Date(lastHeardAt),
+      }));
     await db.execute(sql`
-      update node set status = ${JSON.stringify(node.status, storable)}::jsonb, last_heard_at = ${new Date(node.lastHeardAt)}
-      where holding_id = ${node.holdingId} and id = ${node.id}`);
+      update node set status = told.status, last_heard_at = told.heard_at
+      from jsonb_to_recordset(${JSON.stringify(told, storable)}::jsonb)
+        as told(holding_id uuid, id uuid, status jsonb, heard_at timestamptz)
+      where node.holding_id = told.holding_id and node.id = told.id`);
   }
 }

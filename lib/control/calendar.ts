@@ -49,7 +49,10 @@ function remembering<T extends { from: number; until: number }>(ask: (at: number
 }
 
 export function compileCalendar(body: RuleBody, where: Place): (at: number) => RuleCalendar {
-  const periods = body.band.map((period) => ({ ...period, time: parseDayTime(period.from) }));
+  // two that the same gap of the clock begins go by their times, not by how they were written down
+  const periods = body.band
+    .map((period) => ({ ...period, time: parseDayTime(period.from) }))
+    .sort((a, b) => clockOf(a.time) - clockOf(b.time));
   const hours =
     body.hours === undefined
       ? null
@@ -64,6 +67,8 @@ export function compileCalendar(body: RuleBody, where: Place): (at: number) => R
     return { from: at, until, inSeason, inHours, low: period.low, high: period.high };
   });
 }
+
+const clockOf = (time: DayTimeOf): number => (time.kind === 'clock' ? time.minutes : -1);
 
 /** Both days belong to the season; it may run over new year. */
 export function withinSeason(today: string, season: { from: string; to: string }): boolean {
@@ -144,13 +149,25 @@ function spanOf(
   }
   const begins = eventOf(where, day, hours.from);
   const endsToday = eventOf(where, day, hours.to);
-  if (endsToday > begins) return [begins, endsToday];
+  if (!runOverMidnight(hours, endsToday <= begins)) return begins < endsToday ? [begins, endsToday] : null;
   const next = instantOf(where, day + 1, hours.to);
   // tomorrow the sun does not do it: these hours end with today, and tomorrow's polar day or night speaks for itself
   return [
     begins,
     bySun && next === null ? wallInstant(where, day + 1, 0) : eventOf(where, day + 1, hours.to),
   ];
+}
+
+/**
+ * Whether hours end on the next date: a change of the clock or a short day may bring both ends together or turn them round,
+ * and hours of the clock, of a night or of a day stay what they are all the same.
+ * @param turned the end of that date is not after the beginning, which decides where clock and sun are mixed
+ */
+function runOverMidnight({ from, to }: { from: DayTimeOf; to: DayTimeOf }, turned: boolean): boolean {
+  if (from.kind === 'clock' && to.kind === 'clock') return to.minutes <= from.minutes;
+  if (from.kind === 'sunset' && to.kind === 'sunrise') return true;
+  if (from.kind === 'sunrise' && to.kind === 'sunset') return false;
+  return turned;
 }
 
 /** Where the sun does nothing: a night of 24 h begins and ends at noon, one of none at midnight. */

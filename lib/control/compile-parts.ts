@@ -2,6 +2,7 @@
 import { compileConditions } from './conditions';
 import { compileDerived } from './derived';
 import type { PlanInterlock } from './interlocks';
+import { pointsOfRule } from './parts';
 import type { PlanChannel, PlanPoint, PlanRest, PlanRule, PlanSource } from './plan';
 import type { ChannelConfig, HouseConfig, PointConfig, RuleConfig, SourceConfig } from './types';
 
@@ -134,20 +135,19 @@ export function addOwnSources(channels: PlanChannel[], sources: PlanSource[], ru
   });
 }
 
-export function usedPoints(points: PlanPoint[], rules: PlanRule[], channels: PlanChannel[]): Set<number> {
+export function usedPoints(
+  points: PlanPoint[],
+  places: Map<string, number>,
+  rules: PlanRule[],
+  channels: PlanChannel[],
+): Set<number> {
   const used = new Set<number>();
   const use = (index: number | null | undefined): void => {
     if (index === null || index === undefined || index < 0 || used.has(index)) return;
     used.add(index);
     for (const input of points[index]?.derived?.inputs ?? []) use(input);
   };
-  for (const { points: own, rest, only } of rules) {
-    for (const { point } of own) use(point);
-    use(rest?.until?.point);
-    use(rest?.leastGain?.intake);
-    use(rest?.leastGain?.return);
-    for (const fact of only?.facts ?? []) use(points.findIndex((one) => one.key === fact));
-  }
+  for (const rule of rules) for (const point of pointsOfRule(rule, places)) use(point);
   for (const { highLimitPoint, runProofPoint } of channels) {
     use(highLimitPoint);
     use(runProofPoint);

@@ -11,6 +11,7 @@ import {
 } from './compile-parts';
 import { derivedOrder } from './derived';
 import { needsOrder, type PlanInterlock } from './interlocks';
+import { partByChannel, partsByPoint, partsOf } from './parts';
 import type { Plan, PlanChannel, PlanRule } from './plan';
 import type { HouseConfig } from './types';
 
@@ -58,18 +59,24 @@ export function compile(config: HouseConfig): Plan {
   const sources = config.sources.map((one, index) => compileSource(one, index, channels, rules, point));
   addOwnSources(channels, sources, rules);
   const points = config.points.map((one) => compilePoint(one, config, point));
+  const pointPlaces = new Map(points.map((one, index) => [one.key, index]));
+  const order = channels
+    .map((_, index) => index)
+    .sort((a, b) => numberOf(channels, a) - numberOf(channels, b));
+  const joined = {
+    ...{ points, pointPlaces, sources, channels, rules, order },
+    needsOrder: needsOrder(channels.length, interlocks),
+  };
+  const parts = partsOf(joined);
   return {
+    ...joined,
     shape: [points, rules, sources, channels].map((list) => list.map((one) => one.id).join(',')).join(';'),
     house: config.house,
-    points,
-    pointPlaces: new Map(points.map((one, index) => [one.key, index])),
-    usedPoints: usedPoints(points, rules, channels),
-    sources,
-    channels,
-    rules,
+    parts,
+    partOf: partByChannel(parts),
+    askedBy: partsByPoint({ ...joined, parts }),
+    usedPoints: usedPoints(points, pointPlaces, rules, channels),
     interlocks,
-    needsOrder: needsOrder(channels.length, interlocks),
-    order: channels.map((_, index) => index).sort((a, b) => numberOf(channels, a) - numberOf(channels, b)),
     derivedOrder: derivedOrder(points),
     housePoints: points.flatMap((one, index) => (one.isHouse ? [index] : [])),
     timeFacts: compileTimeFacts(where),

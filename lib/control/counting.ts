@@ -18,7 +18,13 @@ export function noteRelay(run: Run, index: number): void {
   const { safe } = entry(run.plan.channels, index);
   const before = memory.relay;
   const { reported, reportedAt, acknowledges, leaseEndsAt, isAlone = false } = seen;
-  const relay = { reported, reportedAt, acknowledges, leaseEndsAt, isAlone, seenAt: run.stepAt };
+  // a worker that has just started has heard nothing yet, which takes nothing back of what was said before; a node
+  // that has had a lease of this one has spoken, and knows no such relay
+  const isUnheard = (leaseEndsAt ?? Infinity) <= run.observed.workerStartedAt + LEASE_MS;
+  const relay =
+    reported === null && before !== null && isUnheard
+      ? { ...before, leaseEndsAt }
+      : { reported, reportedAt, acknowledges, leaseEndsAt, isAlone, seenAt: run.stepAt };
   memory = { ...memory, relay };
   // it ran by its own report and now says it stands: a lease trip, told as a switching of its own, not of ours
   const ran = before !== null && before.reported !== null && before.reported !== safe;
@@ -104,5 +110,7 @@ function knownState(
   if (fresh) return relay.reported;
   if (wanted === safe && known === safe) return safe;
   if (relay.leaseEndsAt === null) return wanted === safe ? safe : null;
-  return at >= relay.leaseEndsAt ? safe : null;
+  if (at >= relay.leaseEndsAt) return safe;
+  // a lease holds the coil as it was last known; one that is ordered another way may have followed or not
+  return relay.reported !== null && known === wanted ? known : null;
 }

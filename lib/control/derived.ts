@@ -6,6 +6,7 @@ import {
   pressureAtAltitude,
   saturationPressure,
 } from '@/lib/physics/air';
+import { plain } from './plain';
 import type { PlanDerived, PlanPoint } from './plan';
 import { keepQuality } from './quality';
 import { putReading, timeOf, valueOf } from './readings';
@@ -117,9 +118,9 @@ function formula(derived: PlanDerived, values: number[]): number | null {
   switch (derived.of) {
     case 'difference':
     case 'lift':
-      return first - second;
+      return plain(first - second);
     case 'mean':
-      return values.reduce((sum, value) => sum + value, 0) / values.length;
+      return plain(values.reduce((sum, value) => sum + value, 0) / values.length);
     case 'least':
       return Math.min(...values);
     case 'greatest':

@@ -1,5 +1,5 @@
 /** Standing conditions that somebody should know of: the whole list at every step, told when one begins or ends. */
-import { coldestPoint } from './claims/frost';
+import { coldestPoint, CONTRADICTED_MS } from './claims/frost';
 import { wakeForDay } from './claims/rest';
 import { isUnderFloor } from './claims/source-guard';
 import { usedMs } from './day';
@@ -12,24 +12,24 @@ import type { Data } from './types';
 type About = Fault['about'];
 type Stand = (kind: Fault['kind'], about: About, data?: () => Data) => void;
 
-const CONTRADICTED_MS = 12 * 3_600_000;
+const NONE: ReadonlyMap<string, Fault> = new Map();
 
 /** The faults at `run.at`; those that stood before keep their beginning. */
 export function faultsNow(run: Run, before: readonly Fault[]): Fault[] {
   const faults: Fault[] = [];
+  const stood = before.length === 0 ? NONE : new Map(before.map((one) => [one.key, one]));
   const stand: Stand = (kind, about, data) => {
     const key = [kind, ...Object.values(about)].join(':');
-    faults.push(
-      before.find((one) => one.key === key) ?? { key, kind, about, since: run.at, data: data?.() ?? {} },
-    );
+    faults.push(stood.get(key) ?? { key, kind, about, since: run.at, data: data?.() ?? {} });
   };
   houseFaults(run, stand);
   for (let index = 0; index < run.plan.points.length; index += 1) pointFaults(run, index, stand);
   for (let index = 0; index < run.plan.sources.length; index += 1) sourceFaults(run, index, stand);
   for (let index = 0; index < run.plan.channels.length; index += 1) channelFaults(run, index, stand);
   if (faults.length === 0 && before.length === 0) return faults;
-  for (const fault of faults) if (!before.includes(fault)) tell(run, 'fault-begun', fault);
-  for (const fault of before) if (!faults.includes(fault)) tell(run, 'fault-ended', fault);
+  for (const fault of faults) if (stood.get(fault.key) !== fault) tell(run, 'fault-begun', fault);
+  const stands = new Set(faults);
+  for (const fault of before) if (!stands.has(fault)) tell(run, 'fault-ended', fault);
   return faults;
 }
 

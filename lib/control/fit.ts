@@ -109,7 +109,7 @@ const newSource = (id: string, at: number): SourceMemory => ({
   aboveSince: null,
 });
 
-const newChannel = (id: string, safe: ChannelMemory['wanted']): ChannelMemory => ({
+export const newChannel = (id: string, safe: ChannelMemory['wanted']): ChannelMemory => ({
   id,
   wanted: safe,
   orderedAt: null,

@@ -53,7 +53,7 @@ export function settleGain(run: Run, channel: number): void {
         // where frost draws on all the same, the two minutes begin anew now, not at whatever step comes next
         gainLowSince = run.at;
         noGainUntil = run.at + leastRestMs(run, entry(run.plan.sources, source));
-        spendAll(run, source);
+        spendAll(run, source, channel);
       }
       wakeAt(run, gainLowSince + LOW_MS);
     } else gainLowSince = null;
@@ -78,8 +78,16 @@ function isLow(run: Run, { intake, return: back, kelvin }: Gain): boolean {
   return isDifferenceUnder(run, back, intake, kelvin);
 }
 
-function spendAll(run: Run, source: number): void {
+/** Nothing else draws but what ends in this very instant for the same reason. */
+function spendAll(run: Run, source: number, channel: number): void {
   const memory = entry(run.sources, source);
-  if ((run.drawCount[source] ?? 0) <= 1 && !memory.resting)
+  if (memory.resting) return;
+  const others = entry(run.plan.sources, source).channels.filter((one) => one !== channel);
+  if (!others.some((one) => draws(run, one) && !endsNow(run, one)))
     run.sources[source] = beginRest(run, memory, 'no-gain');
+}
+
+function endsNow(run: Run, channel: number): boolean {
+  const { gainLowSince, noGainUntil } = entry(run.channels, channel);
+  return noGainUntil !== null && gainLowSince === run.at;
 }

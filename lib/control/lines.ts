@@ -3,7 +3,8 @@
  * point stays between the nearest lines on either side, every look at it would answer as it did, so nothing need be
  * decided anew (lull.ts). A value that is only told, in a reason or an alarm, needs no line.
  */
-import { comparable, valueOf } from './readings';
+import { plain } from './plain';
+import { comparable } from './readings';
 import type { Run } from './run';
 
 /** value < limit, strictly. A point without a value is under nothing. */
@@ -20,14 +21,7 @@ export function isOver(run: Run, point: number, limit: number): boolean {
   return value > limit;
 }
 
-/** A value that is not compared with one limit: any other value is looked at anew. Null: it has none. */
-export function exactly(run: Run, point: number): number | null {
-  const value = valueOf(run, point);
-  noteLine(run, point, value ?? NaN, value ?? NaN);
-  return value;
-}
-
-/** first − second < limit, strictly; false without either value. */
+/** first − second < limit, strictly and as on paper; false without either value. */
 export function isDifferenceUnder(run: Run, first: number, second: number, limit: number): boolean {
   const a = comparable(run, first);
   const b = comparable(run, second);
@@ -43,7 +37,7 @@ export function isDifferenceUnder(run: Run, first: number, second: number, limit
       noteLine(run, point, value, value + free);
     }
   }
-  return a - b < limit;
+  return plain(a - b) < limit;
 }
 
 /** Whoever compares elsewhere, and exactly with these. */
@@ -64,11 +58,11 @@ function noteLine(run: Run, point: number, value: number, limit: number): void {
   if (limit >= value && limit < (run.under[point] ?? NaN)) run.under[point] = limit;
 }
 
-/** Whether no look at a point would answer otherwise in `now`, a later instant than the `run` in which it was looked at. */
-export function isBetweenLines(run: Run, point: number, now: Run): boolean {
+/** Whether no look at a point would answer otherwise now than when its lines were drawn. */
+export function isBetweenLines(run: Run, point: number): boolean {
   const over = run.over[point] ?? NaN;
   const under = run.under[point] ?? NaN;
-  const value = comparable(now, point);
+  const value = comparable(run, point);
   if (Number.isNaN(value)) return over === -Infinity && under === Infinity;
   return (value > over && value < under) || (value === over && value === under);
 }

@@ -17,20 +17,35 @@ const AHEAD_MS = 24 * 3_600_000;
 /** What a reading sets going comes within a few instants: a least time, two minutes without gain, a delay. */
 const NEAR_WAKES = 5;
 
+/** What an explanation's look ahead starts from, and what it found. */
+interface Ahead {
+  run: Run;
+  memory: Memory;
+  told: Explanation;
+  next: Data[] | null;
+}
+
+/**
+ * One getter for all: an object with a getter of its own gets a hidden class of its own, and that keeps the whole step
+ * alive until the next great collection of garbage.
+ */
+const NEXT = {
+  enumerable: true,
+  get(this: { ahead: Ahead }): Data[] {
+    const { ahead } = this;
+    // reasons are plain JSON by their types; an interface only lacks the index that Data asks for
+    ahead.next ??= whatNext(ahead.run, ahead.memory, ahead.told).map((one) => one as unknown as Data);
+    return ahead.next;
+  },
+};
+
 /**
  * Adds what follows to an explanation of the instant at which `run` stands. It costs some dozens of steps, so it is
  * reckoned when somebody reads it: a replay of a winter never does. @param memory as the step left it
  */
-export function addLookAhead(run: Run, memory: Memory, explanation: Explanation): Explanation {
-  let next: Data[] | null = null;
-  return {
-    ...explanation,
-    get next() {
-      // reasons are plain JSON by their types; an interface only lacks the index that Data asks for
-      next ??= whatNext(run, memory, explanation).map((one) => one as unknown as Data);
-      return next;
-    },
-  };
+export function addLookAhead(run: Run, memory: Memory, told: Explanation): Explanation {
+  const ahead: Ahead = { run, memory, told, next: null };
+  return Object.defineProperties({ ...told }, { ahead: { value: ahead }, next: NEXT });
 }
 
 function whatNext(run: Run, memory: Memory, { channel: id, state, claim }: Explanation): NextReason[] {

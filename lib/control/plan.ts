@@ -28,10 +28,26 @@ export interface Plan {
   derivedOrder: number[];
   /** house-air and bench points, which frost looks at. */
   housePoints: number[];
+  parts: PlanPart[];
+  /** By channel: its part. */
+  partOf: number[];
+  /** By point: the parts that ask for it. */
+  askedBy: number[][];
   timeFacts: (at: number) => TimeFacts;
   usesTimeFacts: boolean;
   /** Keys that a rule, channel or point names and that do not exist: what hangs on them counts as bad. */
   missing: string[];
+}
+
+/** Places of what bears on each other: a part of the house (parts.ts). */
+export interface PlanPart {
+  channels: number[];
+  sources: number[];
+  rules: number[];
+  /** The same channels, as in the plan's `order` and `needsOrder`. */
+  order: number[];
+  needsOrder: number[];
+  hasInterlocks: boolean;
 }
 
 export interface PlanPoint {

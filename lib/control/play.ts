@@ -3,14 +3,14 @@ import { takeCommands } from './commands';
 import { extendLease, noteRelay } from './counting';
 import { faultsNow } from './faults';
 import { fit } from './fit';
-import { isLull, lullSince } from './lull';
+import { pointsStirred, stepBefore } from './lull';
 import { MEMORY_VERSION, type Memory, type PointMemory } from './memory';
 import type { Plan } from './plan';
 import { silenceAhead, takeReading } from './quality';
 import { takeRunsAlone } from './ran-alone';
 import { copyReadings } from './readings';
-import { entry, filled, nextWake, nothingFound, type Run } from './run';
-import { settle, settleDecisions, settleReadings, settleUndriven } from './settle';
+import { copyFound, entry, filled, nextWake, nothingFound, type Run } from './run';
+import { settleDecisions, settleReadings, settleUndriven } from './settle';
 import type { Observed, Quality } from './types';
 
 export interface Played {
@@ -36,14 +36,19 @@ export function play(
   now: number,
   options: PlayOptions,
 ): Played {
-  const memory = fit(plan, given);
+  const memory = given.shape === plan.shape ? given : fit(plan, given);
   // a clock that went back stands still for control
   const stepAt = memory.at === null ? now : Math.max(now, memory.at);
-  const before = lullSince(plan, memory, observed, stepAt);
+  const before = stepBefore(plan, memory, observed);
   const run = begin(plan, memory, observed, stepAt, options, before);
+  let isOwn = before === null;
   if (memory.at !== null && memory.at < stepAt) {
     if (observed.workerStartedAt > memory.at) passUndriven(run, memory.at);
-    else if (memory.wakeAt !== null && memory.wakeAt < stepAt) pass(run, memory.wakeAt);
+    else if (memory.wakeAt !== null && memory.wakeAt < stepAt) {
+      if (!isOwn) leaveLull(run);
+      isOwn = true;
+      pass(run, memory.wakeAt);
+    }
   }
   run.at = stepAt;
   for (let index = 0; index < plan.points.length; index += 1) {
@@ -51,21 +56,25 @@ export function play(
     const seen = observed.points[point.id];
     if (seen !== undefined && point.derived === null) takeReading(run, index, seen);
   }
-  for (let index = 0; before === null && index < plan.channels.length; index += 1) {
+  const taken = before === null ? takeOrders(run, memory.taken) : memory.taken;
+  settleReadings(run);
+  const points = before === null ? null : pointsStirred(run, before);
+  if (!isOwn && points === null && stepAt < run.wake && stepAt < run.due)
+    return { run, memory: remember(run, memory, taken, memory.faults) };
+  if (!isOwn) leaveLull(run);
+  settleDecisions(run, points ?? []);
+  const faults = faultsNow(run, memory.faults);
+  return { run, memory: remember(run, memory, taken, faults) };
+}
+
+/** What relays report and people order, which may bear on anything. Gives the greatest number of an order taken. */
+function takeOrders(run: Run, taken: number): number {
+  for (let index = 0; index < run.plan.channels.length; index += 1) {
     noteRelay(run, index);
     takeRunsAlone(run, index);
   }
-  const taken = takeCommands(run, memory.taken);
-  settleReadings(run);
-  if (before !== null) {
-    if (isLull(run, before)) return { run, memory: remember(run, memory, taken, memory.faults) };
-    // from here on everything is found anew, and the step before keeps what it found
-    Object.assign(run, nothingFound(plan));
-    ownLists(run);
-  }
-  settleDecisions(run);
-  const faults = faultsNow(run, memory.faults);
-  return { run, memory: remember(run, memory, taken, faults) };
+  run.houseWake = -Infinity;
+  return takeCommands(run, taken);
 }
 
 function begin(
@@ -92,8 +101,11 @@ function begin(
     channels: memory.channels,
     frost: memory.frost,
     wake: found.wake,
-    readingsWake: Infinity,
+    readingsWake: before?.readingsWake ?? -Infinity,
     due: found.due,
+    partWake: found.partWake,
+    partDue: found.partDue,
+    houseWake: found.houseWake,
     over: found.over,
     under: found.under,
     usable: before === null ? filled<Quality>(plan.points.length, 'bad') : before.usable.slice(),
@@ -120,6 +132,12 @@ function ownLists(run: Run): void {
   run.channels = run.channels.slice();
 }
 
+/** From here on something is found anew, and the step before keeps what it found. */
+function leaveLull(run: Run): void {
+  Object.assign(run, copyFound(run));
+  ownLists(run);
+}
+
 const heldSilence = ({ why }: PointMemory): number =>
   why === 'silent' || why === 'worker-was-away' ? -Infinity : Infinity;
 
@@ -129,10 +147,18 @@ function pass(run: Run, first: number): void {
   for (let channel = 0; channel < run.plan.channels.length; channel += 1) extendLease(run, channel);
   run.silentAt =
     own ?? run.plan.points.map(({ id }, index) => silenceAhead(run, index, run.observed.points[id]));
+  let isAnew = false;
   for (let at = first; at < run.stepAt; at = nextWake(run)) {
     run.at = at;
-    settle(run);
+    if (at >= run.readingsWake) {
+      settleReadings(run);
+      run.houseWake = -Infinity;
+      isAnew = true;
+    }
+    settleDecisions(run, []);
   }
+  // a point that fell silent in between and speaks again is as the step before found it, but not as it was found since
+  if (isAnew) run.houseWake = -Infinity;
   run.silentAt = own;
 }
 

@@ -25,6 +25,10 @@ export interface Run {
   readingsWake: number;
   /** Something kept is to be looked at then, though nobody need be woken for it. */
   due: number;
+  /** `wake` and `due` of each part of the house, and the `wake` of what is all the house's (frost, facts of the time): from then on nothing holds. */
+  partWake: number[];
+  partDue: number[];
+  houseWake: number;
   /** By point: what was found holds while its value stays between these two (lines.ts). */
   over: number[];
   under: number[];
@@ -61,6 +65,9 @@ type Found = Pick<
   Run,
   | 'wake'
   | 'due'
+  | 'partWake'
+  | 'partDue'
+  | 'houseWake'
   | 'over'
   | 'under'
   | 'calendars'
@@ -75,14 +82,17 @@ type Found = Pick<
 >;
 
 /** Before it has found anything. */
-export function nothingFound({ points, channels, sources }: Plan): Found {
+export function nothingFound({ points, channels, sources, rules, parts }: Plan): Found {
   return {
     wake: Infinity,
     due: Infinity,
+    partWake: filled(parts.length, Infinity),
+    partDue: filled(parts.length, Infinity),
+    houseWake: Infinity,
     over: filled(points.length, -Infinity),
     under: filled(points.length, Infinity),
-    calendars: [],
-    standing: [],
+    calendars: filled(rules.length, NEVER),
+    standing: filled<RuleCode>(rules.length, 'out-of-season'),
     lowerClaim: filled<Claim>(channels.length, 'idle'),
     lowerState: filled<State>(channels.length, 'off'),
     demandClaim: filled<Claim>(channels.length, 'idle'),
@@ -92,6 +102,28 @@ export function nothingFound({ points, channels, sources }: Plan): Found {
     drawCount: filled(sources.length, 0),
   };
 }
+
+const NEVER: RuleCalendar = { from: 0, until: 0, inSeason: false, inHours: false, low: 0, high: 0 };
+
+/** What a run found, in lists of another's own. */
+export const copyFound = (run: Run): Found => ({
+  wake: run.wake,
+  due: run.due,
+  partWake: run.partWake.slice(),
+  partDue: run.partDue.slice(),
+  houseWake: run.houseWake,
+  over: run.over.slice(),
+  under: run.under.slice(),
+  calendars: run.calendars.slice(),
+  standing: run.standing.slice(),
+  lowerClaim: run.lowerClaim.slice(),
+  lowerState: run.lowerState.slice(),
+  demandClaim: run.demandClaim.slice(),
+  demandState: run.demandState.slice(),
+  interlocked: run.interlocked.slice(),
+  drawRate: run.drawRate.slice(),
+  drawCount: run.drawCount.slice(),
+});
 
 /** Grown one by one: a list made with a length keeps room for holes, and whatever reads it then looks for them. */
 export function filled<T>(length: number, value: T): T[] {

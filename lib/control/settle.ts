@@ -1,4 +1,4 @@
-/** Brings a house to rest at one instant: looks at everything again until nothing more follows from it. */
+/** Brings a house to rest at one instant: looks at it part by part, at each until nothing more follows from it. */
 import { settleRule } from './claims/band';
 import { settleFrost } from './claims/frost';
 import { endHand, settleHand } from './claims/hand';
@@ -12,17 +12,13 @@ import { settleDerived } from './derived';
 import { explainSettled } from './explanation';
 import { askDemand, askLower, bareLadder, decide } from './ladder';
 import { settleGain, settleProof } from './least-gain';
+import { stir, stirAll } from './lull';
 import { settlePoints } from './quality';
 import { entry, type Run } from './run';
 import { settleUnbidden } from './unbidden';
 import type { Explanation } from './events';
+import type { PlanPart } from './plan';
 import type { Claim, State } from './types';
-
-/** Settles `run.at`; afterwards `nextWake(run)` is the earliest instant at which something changes by itself. */
-export function settle(run: Run): void {
-  settleReadings(run);
-  settleDecisions(run);
-}
 
 /** How good every point is, and what the derived ones are. */
 export function settleReadings(run: Run): void {
@@ -31,26 +27,47 @@ export function settleReadings(run: Run): void {
   settleDerived(run);
 }
 
-/** Everything that follows from the readings. */
-export function settleDecisions(run: Run): void {
-  const { plan } = run;
-  run.wake = Infinity;
+/**
+ * All that follows at `run.at`, from readings of these points that say something else than before, and from what falls
+ * due. Afterwards `nextWake(run)` is the earliest instant at which something changes by itself.
+ */
+export function settleDecisions(run: Run, points: readonly number[]): void {
+  const { plan, frost } = run;
+  const stirred = run.at >= run.houseWake ? stirAll(run) : stir(run, points);
+  if (stirred === null || stirred.house) settleHouse(run);
+  let wake = run.houseWake;
+  let due = Infinity;
+  for (let part = 0; part < plan.parts.length; part += 1) {
+    if (stirred === null || run.frost !== frost || stirred.parts.has(part)) settlePart(run, part);
+    wake = Math.min(wake, run.partWake[part] ?? Infinity);
+    due = Math.min(due, run.partDue[part] ?? Infinity);
+  }
+  run.wake = wake;
+  run.due = due;
+}
+
+/** Frost, and until when the facts of the time hold. */
+function settleHouse(run: Run): void {
+  run.wake = run.plan.usesTimeFacts ? run.plan.timeFacts(run.at).until : Infinity;
+  settleFrost(run);
+  run.houseWake = run.wake;
+}
+
+function settlePart(run: Run, index: number): void {
+  const part = entry(run.plan.parts, index);
   run.due = Infinity;
-  run.over.fill(-Infinity);
-  run.under.fill(Infinity);
-  for (let rule = 0; rule < plan.rules.length; rule += 1)
-    run.calendars[rule] = entry(plan.rules, rule).calendar(run.at);
-  if (plan.usesTimeFacts) run.wake = Math.min(run.wake, plan.timeFacts(run.at).until);
-  const wake = run.wake;
+  for (const rule of part.rules) run.calendars[rule] = entry(run.plan.rules, rule).calendar(run.at);
   const firstEvent = run.events.length;
   // each round can only let a channel follow another, so a chain through all of them is the longest
-  for (let round = 0; round < plan.channels.length + 4; round += 1) {
-    run.wake = wake;
-    settleSources(run);
-    const handsEnded = settleDemands(run);
-    if (!decideAll(run) && !handsEnded) break;
+  for (let round = 0; round < run.plan.channels.length + 4; round += 1) {
+    run.wake = Infinity;
+    settleSources(run, part);
+    const handsEnded = settleDemands(run, part);
+    if (!decideAll(run, part) && !handsEnded) break;
   }
-  explainDecisions(run, firstEvent);
+  explainDecisions(run, part, firstEvent);
+  run.partWake[index] = run.wake;
+  run.partDue[index] = run.due;
 }
 
 /** While nobody drove: loads dropped with their leases, time went on, and that is all that can be said. */
@@ -67,26 +84,24 @@ export function settleUndriven(run: Run): void {
   }
 }
 
-function settleSources(run: Run): void {
-  const { channels, sources, rules } = run.plan;
-  for (let channel = 0; channel < channels.length; channel += 1) {
+function settleSources(run: Run, { channels, sources, rules }: PlanPart): void {
+  for (const channel of channels) {
     settleCounted(run, channel);
     settleProof(run, channel);
     settleUnbidden(run, channel);
   }
-  for (let source = 0; source < sources.length; source += 1) {
+  for (const source of sources) {
     settleSource(run, source);
     settleGuard(run, source);
   }
-  for (let channel = 0; channel < channels.length; channel += 1) settleGain(run, channel);
-  for (let rule = 0; rule < rules.length; rule += 1) settleRule(run, rule);
-  settleFrost(run);
+  for (const channel of channels) settleGain(run, channel);
+  for (const rule of rules) settleRule(run, rule);
 }
 
 /** Whether a limit ended a hand on: its end is then no longer waited for. */
-function settleDemands(run: Run): boolean {
+function settleDemands(run: Run, part: PlanPart): boolean {
   let handsEnded = false;
-  for (let channel = 0; channel < run.plan.channels.length; channel += 1) {
+  for (const channel of part.channels) {
     settleHand(run, channel);
     askLower(run, channel);
     settleLimit(run, channel);
@@ -99,14 +114,14 @@ function settleDemands(run: Run): boolean {
     settleProving(run, channel);
     askDemand(run, channel);
   }
-  settleInterlocks(run);
+  settleInterlocks(run, part);
   return handsEnded;
 }
 
 /** Whether any load is to change. Channels are asked by number, so the first has the last of a credit. */
-function decideAll(run: Run): boolean {
+function decideAll(run: Run, { order }: PlanPart): boolean {
   let changed = false;
-  for (const channel of run.plan.order) {
+  for (const channel of order) {
     // what the channels before it were just given is no longer there for this one
     if (changed) askLower(run, channel);
     const { claim, state } = decide(run, channel);
@@ -160,12 +175,13 @@ function countDraw(run: Run, channel: number, state: State): void {
 }
 
 /** A decision's ladder is taken once the instant is settled, so that what follows it can be foreseen. */
-function explainDecisions(run: Run, firstEvent: number): void {
+function explainDecisions(run: Run, { channels }: PlanPart, firstEvent: number): void {
   if (!run.explains) return;
   for (let place = firstEvent; place < run.events.length; place += 1) {
     const event = entry(run.events, place);
     if (event.kind !== 'switching' && event.kind !== 'decision') continue;
-    const channel = run.channels.findIndex((one) => one.id === event.channel);
+    const channel = channels.find((one) => run.channels[one]?.id === event.channel);
+    if (channel === undefined) continue;
     const explanation = explainSettled(run, channel);
     const isOvertaken =
       event.kind === 'switching'

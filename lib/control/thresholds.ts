@@ -8,6 +8,7 @@ import { coldestPoint, ENDS_K } from './claims/frost';
 import { AGAIN_K as LIMIT_AGAIN_K } from './claims/limit';
 import { AGAIN_K as FLOOR_AGAIN_K } from './claims/source-guard';
 import type { Condition, ConditionNode } from './rule-body';
+import { plain } from './plain';
 import { valueOf } from './readings';
 import { entry, type Run } from './run';
 import type { Claim } from './types';
@@ -82,7 +83,7 @@ function band(run: Run, rule: number, hour: RuleCalendar, isLater: boolean): Thr
   // a latch turns on at one end of the band and off at the other
   const isHigh = warm === latch;
   // the last digits of a subtraction are nobody's setting
-  const value = Math.round(((isHigh ? high : low) - offset) * 1e9) / 1e9;
+  const value = plain((isHigh ? high : low) - offset);
   const side = isHigh ? 'above' : 'below';
   return past(run, point, value, { of: 'band', lowIncludes: isHigh, overTime: isLater, side });
 }

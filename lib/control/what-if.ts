@@ -37,28 +37,15 @@ export interface Future extends Told {
  * where a reading that is tried would come: frost that begins then is after an order of this instant.
  */
 export function asItIs(run: Run, memory: Memory, channel: number): Future {
-  const bound = boundTo(run.plan, channel);
+  const own = run.plan.partOf[channel];
   // loads that can never turn this one are kept still: their draws and rests would be played through for nothing
   const still = [{ id: '', why: '', by: '', placedAt: run.at }];
   const channels = memory.channels.map((one, place) => {
     const { lockouts } = one;
-    return { ...one, relay: null, lockouts: bound.has(place) ? lockouts : still };
+    return { ...one, relay: null, lockouts: run.plan.partOf[place] === own ? lockouts : still };
   });
   const startedAt = run.observed.workerStartedAt;
   return settled(run.plan, { ...memory, channels }, channel, (memory.at ?? run.at) + 1, startedAt);
-}
-
-/** The channel and all that share a source or an interlock with it, with each other too. */
-function boundTo(plan: Plan, channel: number): Set<number> {
-  const bound = new Set([channel]);
-  for (const one of bound) {
-    const { source, neverWith, needs, neededBy } = entry(plan.channels, one);
-    const beside = source === null ? [] : entry(plan.sources, source).channels;
-    for (const other of beside) bound.add(other);
-    for (const { other } of [...neverWith, ...needs]) bound.add(other);
-    for (const lock of neededBy) bound.add(lock.channel);
-  }
-  return bound;
 }
 
 /** The same instant with another memory, or another plan. */

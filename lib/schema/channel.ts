@@ -1,5 +1,6 @@
 /** Channels, what keeps them off, and what a person orders of them. */
 import { z } from 'zod';
+import { plain } from '@/lib/control/plain';
 import { Celsius, finite, Key, Name, wholeSeconds, Why } from './common';
 
 export const LOAD_KINDS = ['motor', 'vent', 'heater', 'valve', 'lamp', 'other'] as const;
@@ -39,7 +40,7 @@ export const channelFields = {
       onFor: wholeSeconds(1, 86_400),
       offFor: wholeSeconds(1, 86_400),
     })
-    .refine((fallback) => fallback.above - fallback.below >= 0.5, {
+    .refine((fallback) => plain(fallback.above - fallback.below) >= 0.5, {
       path: ['above'],
       error: 'Off over must be at least 0.5 °C over on under.',
     })

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { pointUnits } from '@/lib/field/units';
 import { Key, Name, wholeSeconds } from './common';
 
 export const POINT_ROLES = [
@@ -25,22 +26,7 @@ export const POINT_ROLES = [
 ] as const;
 export type PointRole = (typeof POINT_ROLES)[number];
 
-export const UNITS = [
-  'Cel',
-  'K',
-  '%RH',
-  '/',
-  '%',
-  'W/m2',
-  'ppm',
-  'Pa',
-  'm/s',
-  'W',
-  'Wh',
-  'V',
-  'A',
-  'm3/s',
-] as const;
+export const PointUnit = z.enum(pointUnits);
 
 /** Kinds of derived point; which of them the core reckons yet is told by the check of a rule that uses one. */
 export const DERIVED = [
@@ -69,7 +55,7 @@ const Derived = z
   .strictObject({
     of: z.enum(DERIVED),
     points: z.array(Key).min(1).max(12),
-    window: wholeSeconds(60, 86_400).optional(),
+    window: wholeSeconds(1, 86_400).optional(),
   })
   .superRefine(({ of, points }, context) => {
     const takes = TAKES[of];
@@ -84,12 +70,12 @@ export const pointFields = {
   node: Key.nullable(),
   name: Name,
   role: z.enum(POINT_ROLES),
-  unit: z.enum(UNITS),
+  unit: PointUnit,
   min: z.number().nullable(),
   max: z.number().nullable(),
   staleAfter: wholeSeconds(1, 86_400).nullable(),
   maxRate: z.number().positive('Above 0 a second, or leave it out.').nullable(),
-  frozenAfter: wholeSeconds(60, 31 * 86_400).nullable(),
+  frozenAfter: wholeSeconds(1, 31 * 86_400).nullable(),
   offset: z.number().min(-50).max(50),
   gain: z.number().min(0.1, 'Between 0.1 and 10.').max(10, 'Between 0.1 and 10.'),
   sensor: z.string().trim().max(60).nullable(),

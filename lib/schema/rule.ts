@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { plain } from '@/lib/control/plain';
 import { Celsius, DayTime, finite, Key, MonthDay, Name, wholeSeconds, Why } from './common';
 
 export const OPERATORS = [
@@ -79,7 +80,7 @@ export const BandPeriod = z
     low: Celsius,
     high: Celsius,
   })
-  .refine((period) => period.high - period.low >= 0.5, {
+  .refine((period) => plain(period.high - period.low) >= 0.5, {
     path: ['high'],
     error: 'Off above must be at least 0.5 °C over on below, or the fan would chatter.',
   });

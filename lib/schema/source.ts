@@ -9,8 +9,8 @@ export const sourceFields = {
   corePoint: Key.nullable(),
   basePoint: Key.nullable(),
   coreFloor: Celsius.nullable(),
-  dailyLimit: wholeSeconds(60, 10 * 86_400).nullable(),
-  ready: z.strictObject({ level: Celsius, for: wholeSeconds(60, 30 * 86_400) }).nullable(),
+  dailyLimit: wholeSeconds(1, 10 * 86_400).nullable(),
+  ready: z.strictObject({ level: Celsius, for: wholeSeconds(1, 30 * 86_400) }).nullable(),
 };
 const floorNeedsCore = {
   path: ['coreFloor'],

@@ -13,6 +13,8 @@ import { Problem } from './errors';
 const HOUR_S = 3600;
 const DEFAULT_S = { off: HOUR_S, on: HOUR_S / 2 };
 const HEATER_ON_S = HOUR_S;
+/** So the core cuts a vent that is opened in frost. */
+const VENT_IN_FROST_S = HOUR_S / 2;
 
 /**
  * Writes down a hand command. The limits that the body alone shows are 422; frost and lock-outs are states of the house
@@ -34,8 +36,8 @@ export async function orderByHand(
     throw refuse('seconds', 'A heater runs by hand for an hour at most; give it again then.');
   }
   const memory = await memoryOf(holding, house.id);
-  const isLocked = memory.channels.some((row) => row.id === channel.id && row.lockouts.length > 0);
-  if (isLocked)
+  const own = memory.channels.find((row) => row.id === channel.id);
+  if (own !== undefined && own.lockouts.length > 0)
     throw new Problem('conflict', { detail: 'This channel is locked out; remove the lock-out first.' });
   const holdInFrost = given.holdInFrost ?? false;
   if (given.state === 'off' && channel.frostHelp && memory.frost.on && !holdInFrost) {
@@ -44,12 +46,20 @@ export async function orderByHand(
         'There is frost, and this channel helps against it: say that it is to stay off in frost (holdInFrost), or leave it on.',
     });
   }
+  if (given.state === 'on' && channel.load.kind === 'heater' && (own?.pointDeadSince ?? null) !== null) {
+    throw new Problem('conflict', {
+      detail:
+        'The sensor that this heater goes by tells nothing, and a heater never runs blind: mend the sensor first.',
+    });
+  }
+  const isVentInFrost = given.state === 'on' && channel.load.kind === 'vent' && memory.frost.on;
+  const holdsS = isVentInFrost ? Math.min(seconds, VENT_IN_FROST_S) : seconds;
   const number = await addPersonCommand(holding, house.id, {
     at: act.now,
     by: act.caller.by,
     body: { kind: 'hand', channel: channel.id, state: given.state, seconds, holdInFrost },
   });
-  return { number, seconds };
+  return { number, seconds: holdsS };
 }
 
 async function memoryOf(holding: Holding, houseId: string): Promise<Memory> {

@@ -3,7 +3,7 @@ import type { Holding } from '@/db/client';
 import { listChannels } from '@/db/queries/channel';
 import { findHouse } from '@/db/queries/house';
 import { loadHouseConfig } from '@/db/queries/plan';
-import { pointNumbers } from '@/db/queries/point';
+import { listPoints, pointNumbers } from '@/db/queries/point';
 import { readSeries } from '@/db/queries/reading';
 import { resolveBody, type FoundRule } from '@/db/queries/rule';
 import { readPreferences } from '@/db/queries/preferences';
@@ -39,6 +39,7 @@ export async function findingsOf(
   const config = await loadHouseConfig(holding, houseId);
   if (config === null) throw new Problem('not-found');
   const channels = await listChannels(holding, houseId);
+  const points = await listPoints(holding, houseId);
   const greatest = await greatestOf(holding, houseId, body.rest?.until?.point, now);
   const own = channels.find((one) => one.key === channel);
   const answers =
@@ -47,6 +48,7 @@ export async function findingsOf(
   const resort = (await findHouse(holding, houseId))?.lastResort ?? null;
   const context: CheckContext = {
     channels: factsOf(channels),
+    corrected: points.flatMap(({ key, offset, gain }) => (offset === 0 && gain === 1 ? [] : [key])),
     lastResort: resort === null ? null : { below: resort.below, isProved: resort.provedOn !== null },
     ...(greatest === null ? {} : { greatest }),
     ...(liftK === null ? {} : { liftK }),

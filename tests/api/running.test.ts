@@ -5,7 +5,8 @@ import { raiseAlarm } from '@/db/queries/alarm';
 import { listPersonCommands } from '@/db/queries/person-command';
 import { pointNumbers } from '@/db/queries/point';
 import { writeRunning } from '@/db/queries/running';
-import { emptyMemory } from '@/lib/control/memory';
+import { emptyMemory, type Memory } from '@/lib/control/memory';
+import { newChannel } from '@/lib/control/fit';
 import { sql } from 'drizzle-orm';
 import { type Asker, errorsOf, itemsOf, type Json, newHolding, personOf } from './asker';
 import { AT, makeLongHouse } from './long-house';
@@ -43,8 +44,11 @@ const hand = (body: Json, channel = FAN) => owner.ask('POST', `${channel}/hand`,
 const lastOrder = async () => (await listPersonCommands(larkmoor, houseId, 0)).at(-1);
 
 /** What the worker would have kept. */
-async function keepMemory(frost: boolean): Promise<void> {
-  const memory = { ...emptyMemory(), frost: { on: frost, since: null, blindSince: null, alarm: false } };
+async function keepMemory(frost: boolean, channels: Memory['channels'] = []): Promise<void> {
+  const memory = {
+    ...{ ...emptyMemory(), channels },
+    frost: { on: frost, since: null, blindSince: null, alarm: false },
+  };
   const row = { holdingId: larkmoor.id, houseId, memory: { ...memory }, memoryAt: new Date(), taken: 1000 };
   await writeRunning(everyHolding(), { switchings: [], decisions: [], reports: [], memories: [row] });
 }
@@ -246,4 +250,21 @@ test('nights come as JSON and as a file for a spreadsheet', async () => {
   expect(file.headers.get('content-type')).toMatch(/^text\/csv/);
   expect(file.text).toContain('night,source,');
   expect(await owner.get(`${AT}/nights?source=none`)).toMatchObject({ status: 422 });
+});
+
+test('a heater whose sensor is dead is not turned on by hand, and may be turned off', async () => {
+  const mat = { ...newChannel(channelIds.get('mat') ?? '', 'off'), pointDeadSince: Date.now() };
+  await keepMemory(false, [mat]);
+  const told = await hand({ state: 'on' }, `${AT}/channels/3`);
+  expect([told.status, told.body['detail']]).toEqual([409, expect.stringContaining('mend the sensor')]);
+  expect((await hand({ state: 'off' }, `${AT}/channels/3`)).status).toBe(200);
+  await keepMemory(false);
+});
+
+test('a vent that is opened in frost is answered with the half an hour that the core gives it', async () => {
+  await keepMemory(true);
+  const told = await hand({ state: 'on', seconds: 3600 }, `${AT}/channels/2`);
+  const [at, until] = [told.body['at'], told.body['until']].map((one) => Date.parse(String(one)));
+  expect([told.status, (until ?? 0) - (at ?? 0)]).toEqual([200, 1_800_000]);
+  await keepMemory(false);
 });

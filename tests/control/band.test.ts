@@ -120,6 +120,18 @@ describe('the latch', () => {
     ],
   });
 
+  holds('compares a stand-in as on paper: 4.6 − 0.6 is not under 4, and 8.1 − 0.6 not over 7.5', {
+    config: fan({ standIns: [{ point: 'air', offset: -0.6 }] }),
+    reads: { bench: 5, air: 6 },
+    rows: [
+      [60, silent('bench'), 'off idle'],
+      [200, { air: 4.6 }, 'off idle'],
+      [260, { air: 4.5999 }, 'on band'],
+      [320, { air: 8.1 }, 'on band'],
+      [380, { air: 8.1001 }, 'off idle'],
+    ],
+  });
+
   holds('several rules of a channel: on if any wants on', {
     config: fan({}, { point: 'air', band: [{ from: '00:00', low: 10, high: 12 }] }),
     reads: { bench: 9, air: 11 },

@@ -159,3 +159,49 @@ describe('the sun', () => {
     }
   });
 });
+
+describe('hours whose ends meet or turn round', () => {
+  const spans = (
+    where: ReturnType<typeof zone>,
+    hours: { from: string; to: string },
+    from: string,
+    h: number,
+  ) => {
+    const asked = compileCalendar(body({ hours }), where);
+    const minutes = Array.from({ length: h * 60 }, (_, minute) => at(from) + minute * MIN);
+    return minutes.filter((instant) => asked(instant).inHours).length;
+  };
+  const helsinki = () => zone('Europe/Helsinki', 60.17, 24.94);
+
+  it.each([
+    ['02:00', '03:00'],
+    ['02:15', '02:45'],
+  ])('are none where the change of the clock leaves them out: %s to %s', (from, to) => {
+    expect(spans(zone('Europe/Zurich'), { from, to }, '2026-03-28T12:00Z', 36)).toBe(0);
+    expect(spans(zone('Europe/Zurich'), { from, to }, '2026-03-29T12:00Z', 24)).toBeGreaterThan(0);
+  });
+
+  // the sun is up from about 09:24 to 15:13 there: three hours in from either end nothing is left
+  it('of the day are none on a day shorter than what is cut off it', () => {
+    expect(spans(helsinki(), { from: 'sunrise+03:00', to: 'sunset-03:00' }, '2026-12-20T22:00Z', 24)).toBe(0);
+  });
+
+  it('of the night are all of a day shorter than what is added to it', () => {
+    expect(spans(helsinki(), { from: 'sunset-04:00', to: 'sunrise+03:00' }, '2026-12-20T22:00Z', 24)).toBe(
+      24 * 60,
+    );
+  });
+
+  it('that begin when they end are the whole day', () => {
+    expect(spans(zone('Europe/Zurich'), { from: '06:00', to: '06:00' }, '2026-01-10T00:00Z', 24)).toBe(1440);
+  });
+});
+
+it('of two periods that a gap of the clock begins together the later on the clock holds, however they are listed', () => {
+  const band = [
+    { from: '02:30', low: 2, high: 4 },
+    { from: '02:15', low: 6, high: 8 },
+  ];
+  const asked = compileCalendar(body({ band }), zone('Europe/Zurich'));
+  expect(asked(at('2026-03-29T02:00Z')).low).toBe(2);
+});

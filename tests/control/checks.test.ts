@@ -29,6 +29,10 @@ const needs = (a: string, b: string) => interlock('needs', a, b);
 const loops = [{ id: 'loop', name: 'loop', source: 'heap', channel: 'fan', intake: 'in', return: 'out' }];
 const loopPoints = [...house().points, point('in', 'loop-intake'), point('out', 'loop-return')];
 
+const ranged = long({
+  points: long().points.map((one) => (one.key === 'core' ? { ...one, min: -50, max: 120 } : one)),
+});
+
 interface Case {
   kind: string;
   fires: () => string[];
@@ -45,6 +49,12 @@ const CASES: Case[] = [
     kind: 'stop never-holds',
     fires: () => kinds(body({ only: { all: [core('greaterThan', 50), core('lessThan', 40)] } })),
     not: () => kinds(body({ only: { all: [core('greaterThan', 40), core('lessThan', 50)] } })),
+  },
+  {
+    // the sensor says 120 at most; corrected it may tell more
+    kind: 'stop never-holds',
+    fires: () => kinds(body({ only: { all: [core('greaterThan', 1e6)] } }), ranged),
+    not: () => kinds(body({ only: { all: [core('greaterThan', 1e6)] } }), ranged, { corrected: ['core'] }),
   },
   {
     kind: 'stop cycle',

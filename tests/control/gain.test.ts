@@ -1,6 +1,7 @@
 /** A loop that moves air and no heat: least gain to the second. On paper; the wait is 900 s and the doubt 120 s. */
-import { describe } from 'vitest';
-import { body, channel, house, point, rest, rule, source } from './house';
+import { describe, expect, it } from 'vitest';
+import { body, channel, house, point, rest, rule, S, source, START } from './house';
+import { Player } from './player';
 import { hand, holds, silent, speaking } from './table';
 
 const cold = { bench: 3, air: 10, core: 50, base: 40, in: 5, out: 5 };
@@ -94,6 +95,44 @@ describe('least gain', () => {
       [4799.999, null, { fan: 'on band', second: 'on band' }],
       [4800, null, { fan: 'off rest', second: 'off rest' }],
     ],
+  });
+
+  // least 1,200 s, then until the base, which stays at 40, or 3,600 s in all: without a rest they would run at 2,220
+  const slow = { leastGain: gain, until: { point: 'base', level: 45 }, most: 3600 };
+  const twin = (more = {}) => {
+    const both = config(more, slow);
+    both.rules = [
+      ...both.rules.slice(0, 1),
+      rule('second', body({ point: 'air', rest: rest(7200, 1200, slow) })),
+    ];
+    return both;
+  };
+  holds('of two that end in the same instant neither still draws: the heap rests', {
+    config: twin(),
+    reads: { ...cold, air: 3 },
+    rows: [
+      [1019.999, null, { fan: 'on band', second: 'on band' }],
+      [1020, null, { fan: 'off rest', second: 'off rest' }],
+      [2220, null, { fan: 'off rest', second: 'off rest' }],
+      [4619.999, null, { fan: 'off rest', second: 'off rest' }],
+      [4620, null, { fan: 'on band', second: 'on band' }],
+    ],
+  });
+
+  it('a rest that it began says so, and how long it takes', () => {
+    const player = new Player(twin(), { ...cold, air: 10 });
+    player.pass(1020 * S, 10 * S);
+    expect(player.of().because).toMatchObject({
+      ...{ cause: 'no-gain', leastGainK: 3 },
+      ...{ restUntil: START + 2220 * S, restAtMostUntil: START + 4620 * S },
+      recovery: { point: 'base', value: 40, level: 45 },
+    });
+  });
+
+  holds('exactly it is enough, whatever the figures are in binary: 8.2 − 5.2', {
+    config: config(),
+    reads: { ...cold, in: 5.2, out: 8.2 },
+    rows: [[7199, null, 'on band']],
   });
 
   holds('frost breaks it', {

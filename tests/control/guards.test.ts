@@ -116,6 +116,22 @@ describe('frost', () => {
     player.pass(700 * S);
     expect(player.says()).toBe('off rest');
   });
+
+  // 10 of 600 s are left, and 60 s of 36 000 came back 1 s of draw: under its least on of 120 s
+  it('nor begins a draw that such a heap’s credit is not worth', () => {
+    const config = one(
+      { frostHelp: true, source: 'heap', minOnS: 120 },
+      body({ rest: rest(600, 36_000, { frostMayBreak: false }) }),
+      { frostLimit: 3, sources: [source('heap')] },
+    );
+    const player = new Player(config, { ...warm, bench: 3.5 });
+    player.pass(590 * S, 10 * S);
+    player.at({ bench: 8 });
+    expect(player.says()).toBe('off idle');
+    player.pass(60 * S).at({ air: 2 });
+    expect(player.says()).toBe('off rest');
+    expect(player.of().because).toMatchObject({ cause: 'not-worth-a-start', leastOnS: 120 });
+  });
 });
 
 describe('interlocks', () => {

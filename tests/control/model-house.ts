@@ -77,6 +77,7 @@ export type Deed =
 export type Outside =
   | Deed
   | { do: 'report'; channel: string; relay: Omit<ObservedRelay, 'reportedAt' | 'leaseEndsAt'> }
+  | { do: 'follow' }
   | { do: 'gap'; s: number };
 export const deeds: fc.Arbitrary<Deed> = fc.oneof(
   {
@@ -137,6 +138,7 @@ export const outside: fc.Arbitrary<Outside> = fc.oneof(
       }),
     }),
   },
+  { weight: 1, arbitrary: fc.record({ do: fc.constant('follow' as const) }) },
   { weight: 1, arbitrary: fc.record({ do: fc.constant('gap' as const), s: seconds(5, 40, 400, 5000) }) },
 );
 
@@ -174,9 +176,35 @@ export function act(player: Player, deed: Outside): void {
       player.step();
       return;
     }
-    case 'gap':
+    case 'follow': {
+      // all relays say that they are as they are wanted
+      player.now += 1000;
+      const [reportedAt, leaseEndsAt] = [player.now, player.now + 30_000];
+      player.observed.relays = Object.fromEntries(
+        player.result.channels.map(({ id, state }) => [
+          id,
+          { reported: state, reportedAt, acknowledges: true, leaseEndsAt },
+        ]),
+      );
+      player.step();
+      return;
+    }
+    case 'gap': {
+      const killedAt = player.now;
       player.now += deed.s * 1000;
       player.observed.workerStartedAt = player.now;
+      player.observed.relays = blanked(player.observed.relays, Math.min(player.now, killedAt + 2500));
       player.restart().step();
+    }
   }
+}
+
+/** A worker that has just started has heard no node: it knows only when leases can last have ended. */
+export function blanked(
+  relays: Record<string, ObservedRelay>,
+  drivenTill: number,
+): Record<string, ObservedRelay> {
+  const leaseEndsAt = drivenTill + 30_000;
+  const blank = { reported: null, reportedAt: null, acknowledges: false, leaseEndsAt };
+  return Object.fromEntries(Object.keys(relays).map((id) => [id, blank]));
 }

@@ -8,7 +8,7 @@ import type { ControlEvent } from '@/lib/control/events';
 import type { HouseConfig } from '@/lib/control/types';
 import { Player } from './player';
 import { checkClaims, checkDraws, checkLeastOn, checkPairs, checkStanding } from './model-claims';
-import { act, AT_FIRST, deeds, houses, outside } from './model-house';
+import { act, AT_FIRST, blanked, deeds, houses, outside } from './model-house';
 
 /** More of them for a long night: `MODEL_RUNS=5000 npx vitest run --project pure tests/control/model.test.ts`. */
 const RUNS = Number(process.env['MODEL_RUNS'] ?? 150);
@@ -157,4 +157,43 @@ describe('whatever happens', () => {
     },
     LONGEST_MS,
   );
+
+  it(
+    'a worker that is back within all leases switches nothing that it would not have switched',
+    () => {
+      const KEYS = ['bench', 'air', 'core', 'base'];
+      fc.assert(
+        fc.property(houses, fc.array(deeds, { minLength: 5, maxLength: 40 }), (config, list) => {
+          const player = new Player(config, { ...AT_FIRST, bench: 3, air: 3 });
+          for (const deed of list) {
+            if (deed.do === 'say') player.at({ [deed.point]: deed.value });
+            else if (deed.do === 'order') act(player, deed);
+            else if (deed.do === 'pass') passFollowed(player, Math.min(deed.s, 300));
+            act(player, { do: 'follow' });
+            const now = player.now + 5000;
+            const points = Object.fromEntries(
+              KEYS.map((key) => [key, { value: player.observed.points[key]?.value ?? 0, at: now }]),
+            );
+            const observed = { ...player.observed, points };
+            const stayed = step(player.plan, player.memory, observed, now);
+            if (turns(stayed.events).length > 0) continue;
+            const relays = blanked(observed.relays, player.now + 2500);
+            const back = step(player.plan, player.memory, { ...observed, relays, workerStartedAt: now }, now);
+            expect(turns(back.events)).toEqual([]);
+          }
+        }),
+        { numRuns: RUNS },
+      );
+    },
+    LONGEST_MS,
+  );
 });
+
+/** Time in which nodes do what they are told, and say so. */
+function passFollowed(player: Player, s: number): void {
+  const untilAt = player.now + s * 1000;
+  while (player.now < untilAt) {
+    act(player, { do: 'follow' });
+    player.until(Math.min(untilAt, player.now + 10_000));
+  }
+}

@@ -182,7 +182,12 @@ describe('the reason of rest', () => {
     const own = body({ rest: rest(7200, 1200, { leastGain }) });
     const player = played({ bench: 3, air: 38 }, {}, {}, own);
     player.pass(1030 * S);
-    expect(player.of().because).toMatchObject({ cause: 'credit-spent', credit: 0, until: at(2220) });
+    expect(player.of().because).toMatchObject({
+      cause: 'no-gain',
+      leastGainK: 3,
+      credit: 0,
+      until: at(2220),
+    });
     const two = played(
       { bench: 3, air: 38 },
       {

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { commandNumber, epochOf, parseNodeFrame, parseServerFrame } from '@/lib/field/frames';
+import { commandNumber, epochOf, nodeFrame, parseNodeFrame, parseServerFrame } from '@/lib/field/frames';
 
 const hello = { type: 'hello', node: 'LH-1', firmware: 'y1', channels: 8, boot: 'b7', clock: null };
 const relays = { type: 'relays', seq: 4, channels: { '1': 'on', '2': 'off' }, number: 0, trips: 0 };
@@ -33,6 +33,32 @@ describe('frames of a node', () => {
     const parsed = parseNodeFrame(text);
     expect(parsed.ok).toBe(false);
     expect(parsed.ok ? '' : parsed.why).toContain(why);
+  });
+
+  // most frames are readings, which are read without their schema where nothing is wrong with them
+  test.each([
+    '{"type":"readings","seq":3,"pack":[]}',
+    '{"pack":[{"n":"a","v":1}],"seq":0,"type":"readings"}',
+    '{"type":"readings","seq":9007199254740991,"pack":[1]}',
+    '{"type":"readings","seq":9007199254740993,"pack":[]}',
+    '{"type":"readings","seq":-1,"pack":[]}',
+    '{"type":"readings","seq":1.5,"pack":[]}',
+    '{"type":"readings","seq":1e999,"pack":[]}',
+    '{"type":"readings","seq":"1","pack":[]}',
+    '{"type":"readings","seq":1,"pack":null}',
+    '{"type":"readings","seq":1,"pack":{"length":0}}',
+    '{"type":"readings","seq":1}',
+    '{"type":"readings","pack":[]}',
+    '{"type":"readings","seq":1,"pack":[],"mood":1}',
+    '{"type":"readings","seq":1,"pack":[],"__proto__":{}}',
+    '{"type":"reading","seq":1,"pack":[]}',
+    '["readings",1,[]]',
+    'null',
+  ])('%s is read as its schema says', (text) => {
+    const { success, data } = nodeFrame.safeParse(JSON.parse(text));
+    const parsed = parseNodeFrame(text);
+    expect(parsed.ok).toBe(success);
+    if (parsed.ok) expect(parsed.frame).toEqual(data);
   });
 
   test('a malformed frame still tells its seq, so that the error can name it', () => {

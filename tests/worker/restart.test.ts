@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { sql } from 'drizzle-orm';
 import { afterAll, describe, expect, it, onTestFinished } from 'vitest';
 import { closePools } from '@/db/client';
@@ -40,6 +41,17 @@ async function memoryOf(scene: Scene): Promise<Memory> {
 }
 
 const slow: FanRule = { rest: { longestDraw: 600, least: 600 } };
+
+/** A house at 5 °C whose worker is killed, and whose fan's rule is made to want 6 °C before another leads. */
+async function warmerWhileAway(): Promise<Scene> {
+  const scene = await makeScene();
+  const first = await start();
+  const node = await join(first, scene);
+  await node.readings(pack({ 'bench-1': 5, 'house-air': 5 }));
+  await first.end('SIGKILL');
+  await force(scene, { band: [{ from: '00:00', low: 6, high: 8 }] });
+  return scene;
+}
 
 describe('A worker that is killed', () => {
   it('in mid-draw drives on when it is back: latch, credit and number as they were or above', async () => {
@@ -92,12 +104,7 @@ describe('A worker that is killed', () => {
   });
 
   it('takes what people ordered and changed meanwhile', async () => {
-    const scene = await makeScene();
-    const first = await start();
-    const node = await join(first, scene);
-    await node.readings(pack({ 'bench-1': 5, 'house-air': 5 }));
-    await first.end('SIGKILL');
-    await force(scene, { band: [{ from: '00:00', low: 6, high: 8 }] });
+    const scene = await warmerWhileAway();
     await give(scene, {
       kind: 'hand',
       channel: scene.channelIds.get('fan-2') ?? '',
@@ -110,6 +117,15 @@ describe('A worker that is killed', () => {
     await again.readings(pack({ 'bench-1': 5, 'house-air': 5 }));
     await again.coil(1, 'on');
     await again.coil(2, 'on');
+  });
+
+  it('starts nothing that was locked out meanwhile', async () => {
+    const scene = await warmerWhileAway();
+    await give(scene, { kind: 'lock-out', channel: scene.fan, lockout: randomUUID(), why: 'belt' });
+
+    await start();
+    await until('the lock-out is taken', async () => (await memoryOf(scene)).taken === 1);
+    expect(await switchings(scene)).toEqual([]);
   });
 });
 

@@ -1,7 +1,8 @@
 /** One node under control: its relays, its link, and what its row keeps of it. */
 import type { ChannelWiring, NodeWiring } from '@/db/queries/plan';
+import type { ChannelMemory } from '@/lib/control/memory';
 import type { State } from '@/lib/control/types';
-import type { BootId, HelloFrame, RefusedRecord } from '@/lib/field/frames';
+import type { BootId, Coils, HelloFrame, RefusedRecord } from '@/lib/field/frames';
 import type { CommandLink } from './command-link';
 import type { ControlledHouse, HouseDeps } from './house-deps';
 import { keptAlone, NodeFallback } from './node-fallback';
@@ -10,6 +11,9 @@ import { NodeOrders } from './node-orders';
 import { refusalsOfBoot, withRefused } from './node-refusals';
 import { NodeRelays, loadState } from './node-relays';
 import type { NodeStanding } from './state';
+
+/** What the core remembers of loads, by channel. */
+export type RememberedLoads = ReadonlyMap<string, ChannelMemory>;
 
 export class AttachedNode {
   readonly relays: NodeRelays;
@@ -24,25 +28,23 @@ export class AttachedNode {
   /** There is something worth keeping in the node's row that has not been kept. */
   private isNoted = false;
 
-  /** @param known states of loads as last known, by channel */
   constructor(
     public wiring: NodeWiring,
     private readonly house: ControlledHouse,
     formerLeaseEnd: number | null,
-    known: ReadonlyMap<string, State>,
+    remembered: RememberedLoads,
     deps: HouseDeps,
   ) {
     const channels = this.channels();
-    const coils = channels.flatMap((channel) => {
-      const state = known.get(channel.id);
-      // loadState is its own inverse: what turns a coil into a load turns a load into a coil.
-      return state === undefined ? [] : [[String(channel.relay), loadState(channel, state)] as const];
-    });
     this.relays = new NodeRelays(
       channels,
       formerLeaseEnd,
       keptTrips(wiring.status),
-      Object.fromEntries(coils),
+      coilsOf(channels, remembered, ({ relay, wanted }) => relay?.reported ?? wanted),
+      {
+        counted: coilsOf(channels, remembered, ({ counted }) => counted),
+        known: coilsOf(channels, remembered, ({ known }) => known),
+      },
     );
     this.standing = {
       online: false,
@@ -116,4 +118,18 @@ function keptTrips(status: Record<string, unknown>): { boot: BootId; trips: numb
   const { boot, trips } = status;
   const isBoot = typeof boot === 'string' || typeof boot === 'number';
   return isBoot && typeof trips === 'number' ? { boot, trips } : null;
+}
+
+function coilsOf(
+  channels: readonly ChannelWiring[],
+  remembered: RememberedLoads,
+  stateOf: (load: ChannelMemory) => State | null,
+): Coils {
+  const coils = channels.flatMap((channel) => {
+    const load = remembered.get(channel.id);
+    const state = load === undefined ? null : stateOf(load);
+    // loadState is its own inverse: what turns a coil into a load turns a load into a coil.
+    return state === null ? [] : [[String(channel.relay), loadState(channel, state)] as const];
+  });
+  return Object.fromEntries(coils);
 }

@@ -16,6 +16,8 @@ export interface ControlledHouse {
   readonly isFailed: boolean;
   /** Looks at everything again. */
   step(): void;
+  /** Looks again after so long (real time) at the latest: something came in that decides nothing by itself. */
+  stepWithin(ms: number): void;
 }
 
 export interface HouseDeps extends Base {

@@ -2,10 +2,10 @@
 import type { HouseRecord, NodeWiring } from '@/db/queries/plan';
 import type { Memory } from '@/lib/control/memory';
 import type { StepResult } from '@/lib/control/step-result';
-import type { ObservedRelay, State } from '@/lib/control/types';
+import type { ObservedRelay } from '@/lib/control/types';
 import type { HelloFrame, LogFrame, RefusedRecord, RelaysFrame } from '@/lib/field/frames';
 import type { HouseState } from '@/lib/schema/house-state';
-import { AttachedNode } from './attached-node';
+import { AttachedNode, type RememberedLoads } from './attached-node';
 import type { CommandLink } from './command-link';
 import type { ControlledHouse, HouseDeps } from './house-deps';
 import { NodeReports } from './node-reports';
@@ -22,8 +22,8 @@ export class HouseNodes {
     private readonly deps: HouseDeps,
   ) {
     this.reports = new NodeReports(house, deps);
-    const known = new Map(memory.channels.map((one) => [one.id, one.relay?.reported ?? one.wanted]));
-    for (const wiring of house.record.nodes) this.add(wiring, formerLeaseEnd, known);
+    const remembered = new Map(memory.channels.map((one) => [one.id, one]));
+    for (const wiring of house.record.nodes) this.add(wiring, formerLeaseEnd, remembered);
   }
 
   /** Nodes may have come, gone, or lost their token. */
@@ -183,7 +183,7 @@ export class HouseNodes {
     });
   }
 
-  private add(wiring: NodeWiring, formerLeaseEnd: number | null, known: ReadonlyMap<string, State>): void {
-    this.nodes.set(wiring.id, new AttachedNode(wiring, this.house, formerLeaseEnd, known, this.deps));
+  private add(wiring: NodeWiring, formerLeaseEnd: number | null, remembered: RememberedLoads): void {
+    this.nodes.set(wiring.id, new AttachedNode(wiring, this.house, formerLeaseEnd, remembered, this.deps));
   }
 }

@@ -2,46 +2,42 @@
 import type { MemoryRow } from '@/db/queries/running';
 import type { Memory } from '@/lib/control/memory';
 import type { HouseState } from '@/lib/schema/house-state';
-import type { Cancel } from '../clock';
 import type { ControlledHouse, HouseDeps } from './house-deps';
+import { MemoryKeeping } from './memory-keeping';
 
 /** States go to browsers and database at most five times a second. */
 const STATE_EVERY_MS = 200;
-/** Without any event the memory is kept this often all the same. */
-const MEMORY_EVERY_MS = 60_000;
 
 export class HouseRows {
   state: HouseState | null = null;
-  private cancelState: Cancel | null = null;
   private stateAtMs = -Infinity;
-  private memoryAtMs = -Infinity;
+  private readonly keeping: MemoryKeeping;
 
   constructor(
     private readonly house: ControlledHouse,
     /** Greatest number of a person's command whose taking is kept. */
     public takenKept: number,
     private readonly deps: HouseDeps,
-  ) {}
+  ) {
+    this.keeping = new MemoryKeeping(deps.clock.rate);
+  }
 
   /**
-   * State always, memory where something happened; null while the last one is too fresh to write again.
+   * State always, memory where something happened or changed silently; null while the last one is too fresh to write again.
    * @param stateNow how the house stands by the step that left this memory
    */
   toKeep(memory: Memory, stateNow: () => HouseState, now: number, isEvent: boolean): MemoryRow | null {
     const nowMs = this.deps.clock.monotonicMs();
     const isDue = nowMs - this.stateAtMs >= STATE_EVERY_MS;
     if (!isEvent && !isDue) {
-      this.cancelState ??= this.deps.clock.after(STATE_EVERY_MS, () => {
-        this.cancelState = null;
-        this.house.step();
-      });
+      this.house.stepWithin(STATE_EVERY_MS);
       return null;
     }
     this.stateAtMs = nowMs;
     this.state = stateNow();
     this.deps.onState(this.house, this.state);
-    const withMemory = isEvent || nowMs - this.memoryAtMs >= MEMORY_EVERY_MS;
-    if (withMemory) this.memoryAtMs = nowMs;
+    const withMemory = isEvent || this.keeping.isDue(memory, nowMs);
+    if (withMemory) this.keeping.keep(memory, nowMs);
     return withMemory ? this.memoryRow(memory, now) : this.stateRow(now);
   }
 
@@ -55,10 +51,6 @@ export class HouseRows {
       planRevision: this.house.record.planRevision,
       epoch: this.deps.epoch(),
     };
-  }
-
-  stop(): void {
-    this.cancelState?.();
   }
 
   private stateRow(now: number): MemoryRow {

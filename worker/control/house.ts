@@ -33,6 +33,8 @@ export class House implements ControlledHouse {
   private commands: PersonCommand[] = [];
   private failure: { why: string; since: number } | null = null;
   private cancelWake: Cancel = () => undefined;
+  /** A look that was asked for within a time; whatever is looked at earlier makes it needless. */
+  private soon: { atMs: number; cancel: Cancel } | null = null;
   private stopped = false;
 
   constructor(
@@ -104,14 +106,23 @@ export class House implements ControlledHouse {
   /** Looks at everything again. */
   step(): void {
     if (this.stopped) return;
+    this.forgetSoon();
     this.guard(() => this.stepOnce());
     this.sleep();
+  }
+
+  stepWithin(ms: number): void {
+    const { clock } = this.deps;
+    const atMs = clock.monotonicMs() + ms;
+    if (this.stopped || (this.soon !== null && this.soon.atMs <= atMs)) return;
+    this.forgetSoon();
+    this.soon = { atMs, cancel: clock.after(ms, () => this.step()) };
   }
 
   stop(): void {
     this.stopped = true;
     this.cancelWake();
-    this.rows.stop();
+    this.forgetSoon();
     this.deps.alarms.forget(this.id);
   }
 
@@ -148,7 +159,9 @@ export class House implements ControlledHouse {
     const isEvent = result.events.length > 0 || result.memory.taken > this.rows.takenKept;
     const memory = this.rows.toKeep(result.memory, () => this.nodes.state(result, now), now, isEvent);
     if (memory !== null) entry.memory = memory;
-    const committed = memory !== null || isEvent ? journal.append(entry) : null;
+    // an order that nothing happened for (another plan, another epoch) has nothing that must be stored before it
+    const committed = isEvent ? journal.append(entry) : null;
+    if (!isEvent && memory !== null) void journal.keep({ ...entry, mayWait: true });
     this.nodes.release(orders, wasFailed, committed);
 
     this.deps.alarms.want(
@@ -157,6 +170,11 @@ export class House implements ControlledHouse {
       wantedAlarms(this.record, result, this.nodes.standings(), this.deps.startedAt, now),
     );
     this.tell(result);
+  }
+
+  private forgetSoon(): void {
+    this.soon?.cancel();
+    this.soon = null;
   }
 
   private observed(): Observed {

@@ -8,6 +8,7 @@ import { migrateMemory } from '@/lib/control/memory-versions';
 import { controlFailed } from '../alarms/wanted';
 import type { Base } from '../base';
 import type { Cancel } from '../clock';
+import { OnceMore } from '../once-more';
 import { House } from './house';
 import type { HouseDeps } from './house-deps';
 import type { Seen } from './seen-points';
@@ -21,7 +22,9 @@ const BEAT_SLACK_MS = 2500;
 
 export class Houses {
   private readonly houses = new Map<string, House>();
-  private readonly loading = new Map<string, Promise<void>>();
+  private readonly loading = new Map<string, OnceMore>();
+  /** A thousand new houses are told one by one: each look takes up all that there are. */
+  private readonly looking = new OnceMore(() => this.lookOnce());
   private cancels: Cancel[] = [];
   private startedAt = 0;
   private formerLeaseEnd: number | null = null;
@@ -85,7 +88,11 @@ export class Houses {
   }
 
   /** All houses: new ones are taken up, changed ones looked at again, removed ones let go; waiting commands are taken. */
-  async look(): Promise<void> {
+  look(): Promise<void> {
+    return this.looking.run();
+  }
+
+  private async lookOnce(): Promise<void> {
     const heads = await listHouses(this.base.db);
     const present = new Set(heads.map((head) => head.id));
     for (const house of this.all()) if (!present.has(house.id)) this.drop(house);
@@ -118,16 +125,19 @@ export class Houses {
   }
 
   /** One after the other for a house, so that an older record never lands on a newer one. */
-  private reload(holdingId: string, houseId: string): Promise<void> {
-    const before = this.loading.get(houseId) ?? Promise.resolve();
-    const work = before
-      .then(() => this.load(holdingId, houseId))
-      .catch((error: unknown) => this.failedToLoad(holdingId, houseId, error))
-      .finally(() => {
-        if (this.loading.get(houseId) === work) this.loading.delete(houseId);
-      });
+  private async reload(holdingId: string, houseId: string): Promise<void> {
+    const work = this.loading.get(houseId) ?? new OnceMore(() => this.loadOrTell(holdingId, houseId));
     this.loading.set(houseId, work);
-    return work;
+    await work.run();
+    if (work.idle) this.loading.delete(houseId);
+  }
+
+  private async loadOrTell(holdingId: string, houseId: string): Promise<void> {
+    try {
+      await this.load(holdingId, houseId);
+    } catch (error) {
+      this.failedToLoad(holdingId, houseId, error);
+    }
   }
 
   private async load(holdingId: string, houseId: string): Promise<void> {
@@ -148,8 +158,9 @@ export class Houses {
     const deps = { ...this.base, ...this.deps, startedAt: this.startedAt };
     const house = new House(record, memory, latest, this.formerLeaseEnd, deps);
     this.houses.set(houseId, house);
-    house.step();
+    // what people ordered meanwhile counts from its first step on: it starts nothing that somebody has stopped
     house.order(commands);
+    house.step();
   }
 
   private drop(house: House): void {

@@ -22,11 +22,15 @@ export interface Entry {
   logs?: NodeLogRow[];
   /** Columns of the house's row that change. */
   memory?: MemoryRow;
+  /** Nothing happened: it is kept only since it was last kept long ago, and nothing waits for it. */
+  mayWait?: true;
 }
 
 /** A switching with its ladder is some 3 kB: a hundred megabytes at most. */
 const HELD_ROWS = 30_000;
 const GROUP_ROWS = 500;
+/** A state is only for those who open a page: the next one follows at the next report anyway. */
+const STATE_WAIT_MS = 250;
 /** A command waits this long for its switching to be committed; then control goes on and the row follows. */
 const COMMIT_LIMIT_MS = 400;
 
@@ -39,12 +43,7 @@ export class Journal {
       groupWeight: GROUP_ROWS,
       heldWeight: HELD_ROWS,
       weigh: (entry) => rowsOf(entry) + 1,
-      // a state is only for those who open a page: the next one follows at the next report anyway
-      gather: {
-        ms: 250,
-        fullWeight: GROUP_ROWS,
-        isUrgent: (entry) => rowsOf(entry) > 0 || entry.memory?.memory !== undefined,
-      },
+      gather: { fullWeight: GROUP_ROWS, waitMs: (entry) => (isUrgent(entry) ? 0 : STATE_WAIT_MS) },
       write: async (entries) => {
         await writeRunning(base.db, batchOf(entries));
         return entries.map(() => null);
@@ -96,6 +95,10 @@ export class Journal {
   stop(): void {
     this.writer.stop();
   }
+}
+
+function isUrgent(entry: Entry): boolean {
+  return rowsOf(entry) > 0 || (entry.memory?.memory !== undefined && entry.mayWait !== true);
 }
 
 function rowsOf({ switchings, decisions, reports, logs }: Entry): number {

@@ -4,7 +4,7 @@ import type { ControlledHouse, HouseDeps } from './house-deps';
 import type { NodeRelays } from './node-relays';
 
 export class NodeOrders {
-  /** Orders whose switchings are still being written. */
+  /** What is still being written before orders may leave. */
   private pending = 0;
   /** Ends when all that was asked to be written so far is written. */
   private tail: Promise<unknown> = Promise.resolve();
@@ -18,7 +18,10 @@ export class NodeOrders {
 
   /** Orders from now on leave after this is written. */
   waitFor(written: Promise<unknown>): void {
-    this.tail = Promise.all([this.tail, written]);
+    this.pending += 1;
+    this.tail = Promise.all([this.tail, written]).then(() => {
+      this.pending -= 1;
+    });
   }
 
   /**

@@ -57,6 +57,8 @@ export class NodeRelays {
     private leaseEndsAt: number | null,
     kept: { boot: BootId; trips: number } | null,
     lastCoils: Coils,
+    /** What the worker before left: coils by what counted, and those that were known to be as they were ordered. */
+    private readonly former: { counted: Coils; known: Coils } = { counted: lastCoils, known: lastCoils },
   ) {
     this.trips = kept === null ? null : { boot: kept.boot, count: kept.trips };
     this.lastCoils = lastCoils;
@@ -92,8 +94,9 @@ export class NodeRelays {
       return { number: before.number, isNew: false };
     }
     const number = nextNumber(before, epoch);
+    const former = before?.channels ?? this.former.known;
     for (const [relay, coil] of Object.entries(channels)) {
-      if (before?.channels[relay] !== coil) this.changedBy.set(Number(relay), number);
+      if (former[relay] !== coil) this.changedBy.set(Number(relay), number);
     }
     this.wanted = { number, channels, fallback };
     return { number, isNew: true };
@@ -105,7 +108,7 @@ export class NodeRelays {
     if (before === null) return 0;
     const number = Math.max(nextNumber(before, epoch), above + 1);
     this.wanted = { ...before, number };
-    for (const relay of this.changedBy.keys()) this.changedBy.set(relay, number);
+    for (const relay of Object.keys(before.channels)) this.changedBy.set(Number(relay), number);
     return number;
   }
 
@@ -142,15 +145,17 @@ export class NodeRelays {
   /**
    * Takes a report in.
    * @param canFallback the node can run fallbacks by itself
-   * @returns the channels whose relay now says another thing than before, and a trip if it tells of a new one
+   * @returns the channels whose relay now says another thing than before, a trip if it tells of a new one, and whether it
+   * says anything at all that the report before it did not
    */
   take(
     boot: BootId,
     frame: RelaysFrame,
     at: number,
     canFallback = false,
-  ): { changed: ChannelWiring[]; trip: Trip | null } {
+  ): { changed: ChannelWiring[]; trip: Trip | null; isNews: boolean } {
     const before = this.lastCoils;
+    const former = this.report;
     const known = this.trips?.boot === boot ? this.trips.count : 0;
     const changed = this.channels.filter(({ relay }) => {
       const now = frame.channels[String(relay)];
@@ -158,8 +163,10 @@ export class NodeRelays {
     });
     let trip: Trip | null = null;
     if (frame.trips > known) {
+      // one that was ordered on and never heard of may have been on all the same
+      const were = former === null ? this.former.counted : before;
       const dropped = this.channels.filter(({ relay, fallback }) => {
-        if (before[String(relay)] !== 'on') return false;
+        if (were[String(relay)] !== 'on') return false;
         // one that is on again was put on by its fallback: the trip dropped it all the same
         return frame.channels[String(relay)] === 'off' || (canFallback && fallback !== null);
       });
@@ -170,7 +177,8 @@ export class NodeRelays {
     const isAlone = canFallback && (isOver || trip !== null);
     this.report = { at, boot, channels: frame.channels, number: frame.number, isAlone };
     this.lastCoils = { ...before, ...frame.channels };
-    return { changed, trip };
+    const isNews = trip !== null || changed.length > 0 || former === null || !saysSame(former, this.report);
+    return { changed, trip, isNews };
   }
 
   observed(channel: ChannelWiring): ObservedRelay | null {
@@ -213,9 +221,18 @@ function nextNumber(before: Order | null, epoch: number): number {
   return before.number + 1;
 }
 
-function sameOrder(before: Order, channels: Coils, fallback: Record<string, FallbackSetting>): boolean {
+/** But for its time. */
+function saysSame(before: Report, now: Report): boolean {
   return (
-    JSON.stringify(before.channels) === JSON.stringify(channels) &&
-    JSON.stringify(before.fallback) === JSON.stringify(fallback)
+    before.boot === now.boot &&
+    before.number === now.number &&
+    before.isAlone === now.isAlone &&
+    isSame(before.channels, now.channels)
   );
+}
+
+const isSame = (one: object, other: object): boolean => JSON.stringify(one) === JSON.stringify(other);
+
+function sameOrder(before: Order, channels: Coils, fallback: Record<string, FallbackSetting>): boolean {
+  return isSame(before.channels, channels) && isSame(before.fallback, fallback);
 }

@@ -33,7 +33,10 @@ export function houseState(
       const point = points.get(id);
       const last = point?.lastDoubt ?? null;
       return {
-        ...{ key, name, role, unit },
+        key,
+        name,
+        role,
+        unit,
         value: point?.value ?? null,
         at: iso(point?.at ?? null),
         quality: point?.quality ?? 'bad',
@@ -66,7 +69,9 @@ export function houseState(
       const source = sources.get(id);
       if (source === undefined) return [];
       return {
-        ...{ slug, name, kind },
+        slug,
+        name,
+        kind,
         credit: source.credit,
         restSince: iso(source.restSince),
         restUntil: iso(source.restUntil),

@@ -4,8 +4,9 @@ import type { IncomingMessage, ServerResponse } from 'node:http';
 import type { Duplex } from 'node:stream';
 import { WebSocketServer } from 'ws';
 import { findNodeByToken, type NodeWiring } from '@/db/queries/plan';
-import { closeCode, frameBytesMax } from '@/lib/field/frames';
+import { closeCode, frameBytesMax, pingEveryMs } from '@/lib/field/frames';
 import type { Base } from '../base';
+import type { Cancel } from '../clock';
 import type { House } from '../control/house';
 import type { Houses } from '../control/houses';
 import type { Ingest } from './ingest';
@@ -39,6 +40,8 @@ export class Gate {
   });
   private readonly links = new Map<string, NodeLink>();
   private readonly open = new Set<NodeLink>();
+  /** One timer for all lines: a thousand of their own would wake the process more often than the nodes' packs do. */
+  private cancelWatch: Cancel | null = null;
   private readonly takeovers = new Map<string, number[]>();
 
   constructor(private readonly deps: GateDeps) {}
@@ -60,6 +63,7 @@ export class Gate {
       });
       this.takeOver(link);
       this.open.add(link);
+      this.cancelWatch ??= this.deps.clock.every(pingEveryMs / 4, () => this.watch());
       this.deps.stall.add(link);
     });
   }
@@ -134,8 +138,16 @@ export class Gate {
     });
   }
 
+  private watch(): void {
+    for (const link of this.open) link.watch();
+  }
+
   private closed(link: NodeLink): void {
     this.open.delete(link);
+    if (this.open.size === 0) {
+      this.cancelWatch?.();
+      this.cancelWatch = null;
+    }
     this.deps.stall.remove(link);
     if (this.links.get(link.nodeId) === link) this.links.delete(link.nodeId);
     link.house.nodes.detach(link.nodeId, link);

@@ -11,6 +11,11 @@ const GROUP_ROWS = 20_000;
 export const LATE_MS = 20 * 3_600_000;
 /** Packs of a backlog are a hundred each: some of them under way at once are not held up. */
 const FULL_ROWS = 400;
+/** A node's next report is seconds away, and five commits a second are little work for the disk. */
+const WAIT_MS = 200;
+/** A pack as long as this is one of many: the next one leaves once it is acknowledged. */
+const BACKLOG_ROWS = 50;
+const BACKLOG_WAIT_MS = 50;
 
 export interface Stored {
   stored: number;
@@ -27,8 +32,10 @@ export class Ingest {
       name: 'readings',
       groupWeight: GROUP_ROWS,
       heldWeight: HELD_ROWS,
-      // nodes have time, and twenty commits a second are little work for the disk
-      gather: { ms: 50, fullWeight: FULL_ROWS, isUrgent: () => false },
+      gather: {
+        fullWeight: FULL_ROWS,
+        waitMs: ({ length }) => (length < BACKLOG_ROWS ? WAIT_MS : BACKLOG_WAIT_MS),
+      },
       // An empty pack weighs too: it waits for its turn, so acknowledgements keep their order.
       weigh: (rows) => Math.max(rows.length, 1),
       write: async (packs) => {

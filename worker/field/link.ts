@@ -15,7 +15,6 @@ import {
   type ServerFrame,
 } from '@/lib/field/frames';
 import type { Base } from '../base';
-import type { Cancel } from '../clock';
 import type { CommandLink } from '../control/command-link';
 import type { House } from '../control/house';
 import { rawText } from '../raw-text';
@@ -26,6 +25,8 @@ import type { Stall } from './stall';
 /** A command that leaves later than this after it was made is not sent: the state of the house has moved on. */
 const COMMAND_AGE_MS = 2000;
 const MINUTE_MS = 60_000;
+/** Looks come each quarter of the time between two pings; one that comes a little early must not make a ping wait for the next. */
+const PING_SLACK_MS = pingEveryMs / 8;
 /** What our own log keeps of a node's text. */
 const LOG_TEXT_MAX = 4000;
 
@@ -45,7 +46,7 @@ export class NodeLink implements CommandLink {
   private malformedAt: number[] = [];
   private heardAtMs: number;
   private isClosed = false;
-  private readonly cancelWatch: Cancel;
+  private lastPingMs = -Infinity;
 
   constructor(
     private readonly socket: WebSocket,
@@ -55,7 +56,6 @@ export class NodeLink implements CommandLink {
     private readonly deps: LinkDeps,
   ) {
     this.heardAtMs = deps.clock.monotonicMs();
-    this.cancelWatch = deps.clock.every(pingEveryMs / 4, () => this.watch());
     socket.on('message', (data, isBinary) => this.guard(() => this.take(rawText(data), isBinary)));
     socket.on('pong', (data) => this.guard(() => this.takePong(data)));
     socket.on('ping', () => this.guard(() => this.heard()));
@@ -184,16 +184,15 @@ export class NodeLink implements CommandLink {
     this.deps.stall.pong(this, data);
   }
 
-  private lastPingMs = -Infinity;
-
-  private watch(): void {
+  /** Called each quarter of the time between two pings. */
+  watch(): void {
     const now = this.deps.clock.monotonicMs();
     if (now - this.heardAtMs > silenceMs) {
       this.deps.log.info({ node: this.nodeId }, 'a node is silent; its line is cut');
       this.socket.terminate();
       return this.closed();
     }
-    if (now - this.lastPingMs < pingEveryMs) return;
+    if (now - this.lastPingMs < pingEveryMs - PING_SLACK_MS) return;
     this.lastPingMs = now;
     this.ping('');
   }
@@ -205,7 +204,6 @@ export class NodeLink implements CommandLink {
   private closed(): void {
     if (this.isClosed) return;
     this.isClosed = true;
-    this.cancelWatch();
     this.deps.onClose(this);
   }
 

@@ -83,7 +83,9 @@ export class Jobs {
     for (const [point, from] of touched) {
       // what is older is noted as late, hour by hour
       const hour = Math.floor(Math.max(from, to - AFRESH_MS) / 3_600_000);
-      hours.set(hour, [...(hours.get(hour) ?? []), point]);
+      const others = hours.get(hour);
+      if (others === undefined) hours.set(hour, [point]);
+      else others.push(point);
     }
     for (const [hour, points] of hours) await rollUp(this.deps.pool, points, hour * 3_600_000, to);
   }

@@ -1,4 +1,4 @@
-import { POINT_ROLES, UNITS } from '@/lib/schema/point';
+import { POINT_ROLES, PointUnit } from '@/lib/schema/point';
 import type { Point } from '@/lib/schema/yard-view';
 import type { Group } from '../spec';
 import { nodeOptions, roleWords, type Yard } from './options';
@@ -27,7 +27,7 @@ const first: Group['specs'] = [
     as: 'choice',
     path: 'unit',
     label: 'Unit it is kept in',
-    options: UNITS.map((unit) => ({ value: unit, label: unitWords[unit] ?? unit })),
+    options: PointUnit.options.map((unit) => ({ value: unit, label: unitWords[unit] ?? unit })),
   },
 ];
 

@@ -20,6 +20,8 @@ export interface CheckContext {
   channels?: Record<string, ChannelFacts>;
   /** By point key: the greatest value of the last 14 nights. */
   greatest?: Record<string, number>;
+  /** Keys of points whose readings are corrected: what their sensor can say is not what conditions see. */
+  corrected?: readonly string[];
   /** The thermostat of last resort: what it is set to, °C, and whether somebody saw it work. Null: there is none. */
   lastResort?: { below: number; isProved: boolean } | null;
   /** How much warmer than outdoors the rule's point gets at most while the channel runs, K. */

@@ -87,11 +87,12 @@ function rings({ config }: CheckInput): Finding[] {
   return found;
 }
 
-function conditionChecks({ config, rule }: CheckInput): Finding[] {
+function conditionChecks({ config, rule, context }: CheckInput): Finding[] {
   const { only } = rule.body;
   if (only === undefined) return [];
   const found: Finding[] = [];
-  const ranges = Object.fromEntries(config.points.map(({ key, min, max }) => [key, { min, max }]));
+  const plain = config.points.filter(({ key }) => context.corrected?.includes(key) !== true);
+  const ranges = Object.fromEntries(plain.map(({ key, min, max }) => [key, { min, max }]));
   if (canNeverHold(only, ranges))
     found.push(
       stop(

@@ -5,7 +5,8 @@
  */
 import type { BandReason, RuleStanding } from '../because';
 import type { FactValue } from '../conditions';
-import { awaitReading, exactly, isOver, isUnder, noteLines } from '../lines';
+import { awaitReading, isOver, isUnder, noteLines } from '../lines';
+import { plain } from '../plain';
 import { valueOf } from '../readings';
 import { entry, wakeAt, type Run, type RuleCode } from '../run';
 import type { ClaimRung } from './claim';
@@ -69,13 +70,11 @@ function settleLatch(run: Run, index: number, using: number, latch: boolean): bo
   if (quality === 'bad') return false;
   if (quality === 'uncertain') return latch;
   // a latch turns on at one end of the band and off at the other: only that end is looked at
-  if (offset === 0) {
-    const turns = warm === latch ? isOver(run, point, high) : isUnder(run, point, low);
-    return turns ? !latch : latch;
-  }
-  // to the last digit it is the sum that counts, so no line can be drawn for the reading itself
-  const value = (exactly(run, point) ?? NaN) + offset;
-  return value < low ? warm : value > high ? !warm : latch;
+  const turns =
+    warm === latch
+      ? isOver(run, point, offset === 0 ? high : plain(high - offset))
+      : isUnder(run, point, offset === 0 ? low : plain(low - offset));
+  return turns ? !latch : latch;
 }
 
 function codeOf(run: Run, index: number, using: number, latch: boolean): RuleCode {

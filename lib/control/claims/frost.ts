@@ -15,7 +15,7 @@ const BLIND_MS = 1_800_000;
 /** Wet things freezing stand still at 0 °C, so a frozen point is believed in the cold … */
 const STILL_TRUE_C = 2;
 /** … but not for ever against another point of the house. */
-const CONTRADICTED_MS = 12 * 3_600_000;
+export const CONTRADICTED_MS = 12 * 3_600_000;
 
 export const frost: ClaimRung<'frost'> = {
   claim: 'frost',

@@ -5,6 +5,7 @@
  */
 import type { InterlockReason } from '../because';
 import type { InterlockVerdict, PlanInterlock } from '../interlocks';
+import type { PlanPart } from '../plan';
 import { entry, wakeAt, type Run } from '../run';
 import { CLAIMS } from '../types';
 import type { ClaimRung } from './claim';
@@ -26,14 +27,14 @@ export const interlock: ClaimRung<'interlock'> = {
   },
 };
 
-/** Works out `run.interlocked` from the demands. */
-export function settleInterlocks(run: Run): void {
-  run.interlocked.fill(null);
-  if (run.plan.interlocks.length === 0) return;
-  for (const channel of run.plan.needsOrder) run.interlocked[channel] = needs(run, channel);
-  neverWith(run);
-  for (let place = run.plan.needsOrder.length - 1; place >= 0; place -= 1) {
-    const channel = entry(run.plan.needsOrder, place);
+/** Works out `run.interlocked` of a part of the house from its demands. */
+export function settleInterlocks(run: Run, { order, needsOrder, hasInterlocks }: PlanPart): void {
+  for (const channel of order) run.interlocked[channel] = null;
+  if (!hasInterlocks) return;
+  for (const channel of needsOrder) run.interlocked[channel] = needs(run, channel);
+  neverWith(run, order);
+  for (let place = needsOrder.length - 1; place >= 0; place -= 1) {
+    const channel = entry(needsOrder, place);
     const verdict = entry(run.interlocked, channel);
     if (verdict === null) run.interlocked[channel] = holds(run, channel);
     else if (verdict.kind === 'needs') run.interlocked[channel] = lastInChain(run, channel) ?? verdict;
@@ -61,8 +62,7 @@ function needs(run: Run, channel: number): InterlockVerdict | null {
  * runs, else the lower number. The one that keeps starts once the other has been off for the delay; frost may start
  * at once where the interlock allows it.
  */
-function neverWith(run: Run): void {
-  const { order } = run.plan;
+function neverWith(run: Run, order: readonly number[]): void {
   const wanting = order.filter(
     (channel) =>
       run.demandState[channel] === 'on' &&

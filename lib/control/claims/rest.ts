@@ -1,6 +1,6 @@
 /**
  * Rest: the source's draw credit is spent and its rest has not ended, or the rolling day's limit is used up, or the
- * channel's last draw brought no gain, or the band wants a start that credit and limit are not worth. Off.
+ * channel's last draw brought no gain, or the band, or a frost that may not break a rest, wants a start that credit and limit are not worth. Off.
  * The accounts themselves are kept in ../credit.ts and ../day.ts.
  */
 import type { RestReason } from '../because';
@@ -14,11 +14,19 @@ import type { ClaimRung } from './claim';
 export const rest: ClaimRung<'rest'> = {
   claim: 'rest',
   speaks: (run, channel) =>
-    restForbids(run, channel) !== null || (bandWants(run, channel) && !isWorthAStart(run, channel))
+    restForbids(run, channel) !== null || (isAskedOn(run, channel) && !isWorthAStart(run, channel))
       ? 'off'
       : null,
   because,
 };
+
+/** By its band, or by a frost that may not break a rest. */
+function isAskedOn(run: Run, channel: number): boolean {
+  if (bandWants(run, channel)) return true;
+  const { inFrost, frostMayBreakRest, config } = entry(run.plan.channels, channel);
+  const isBlind = config.loadKind === 'heater' && run.frost.blindSince !== null;
+  return run.frost.on && inFrost === 'helps' && !frostMayBreakRest && !isBlind;
+}
 
 /** What forbids a draw, frost's own leave aside; null: nothing. */
 export function restForbids(run: Run, channel: number): 'credit-spent' | 'daily-limit' | 'no-gain' | null {
@@ -109,19 +117,13 @@ function because(run: Run, channel: number): RestReason {
       ? { frostBreaksBelow: frostLimit }
       : {}),
   };
+  const gain = leastGainOf(run, channel);
+  if (memory.resting && memory.restWhy === 'no-gain' && gain.leastGainK !== undefined)
+    return { ...common, cause: 'no-gain', ...gain, ...restTimes(run, place) };
   if (cause === 'credit-spent') return { ...common, ...restTimes(run, place) };
   if (cause === 'no-gain') {
     const { noGainUntil } = entry(run.channels, channel);
-    const rules = entry(run.plan.channels, channel).rules.map(
-      (rule) => entry(run.plan.rules, rule).rest?.leastGain?.kelvin,
-    );
-    const kelvin = rules.find((one) => one !== undefined);
-    return {
-      ...common,
-      ...(kelvin === undefined ? {} : { leastGainK: kelvin }),
-      restUntil: noGainUntil,
-      until: noGainUntil,
-    };
+    return { ...common, ...gain, restUntil: noGainUntil, until: noGainUntil };
   }
   const drawnS = usedMs(memory, run.at) / 1000;
   const limitS = source.dailyLimitMs === null ? null : source.dailyLimitMs / 1000;
@@ -129,6 +131,14 @@ function because(run: Run, channel: number): RestReason {
   const { creditMs, dayMs } = worth(run, channel, place, drawCost(run, channel));
   const worthS = Math.min(creditMs, dayMs) / 1000;
   return { ...common, drawnS, limitS, leastOnS: minOnMs / 1000, worthS, until: null };
+}
+
+function leastGainOf(run: Run, channel: number): { leastGainK?: number } {
+  const rules = entry(run.plan.channels, channel).rules.map(
+    (rule) => entry(run.plan.rules, rule).rest?.leastGain?.kelvin,
+  );
+  const kelvin = rules.find((one) => one !== undefined);
+  return kelvin === undefined ? {} : { leastGainK: kelvin };
 }
 
 type RestTimes = Pick<

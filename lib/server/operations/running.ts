@@ -63,6 +63,14 @@ export const giveBack = operation({
   summary: 'Give a channel back to its rules',
   answers: { 204: null },
 });
+export const sayReady = operation({
+  id: 'source.ready',
+  method: 'POST',
+  path: '/houses/{house}/sources/{source}/ready',
+  action: 'channel.hand',
+  summary: 'Say that a heap is ready, without waiting for its core to show it',
+  answers: { 200: OrderAnswer },
+});
 export const allOff = operation({
   id: 'hand.all-off',
   method: 'POST',
