@@ -6,8 +6,12 @@ import { FILE_UNITS, type FileUnitKey, fileUnitsOf, isFileUnit } from '@/lib/uni
 import type { FilesPoint } from './files-data';
 
 type Layout = ImportPreview['layout'];
+type Shown = ImportPreview['columns'][number];
 
-/** Each column of the file on a row: its head, its first cells, and the point it goes to. */
+const isOf = (one: Layout['columns'][number], { column, sensor }: Shown) =>
+  one.column === column && (one.sensor ?? null) === sensor;
+
+/** Each column of the file, or each sensor that one names, on a row: its head, its first cells, and the point it goes to. */
 export function ColumnsTable({
   layout,
   columns,
@@ -22,12 +26,14 @@ export function ColumnsTable({
   points: FilesPoint[];
   onChange: (layout: Layout) => void;
 }) {
-  const put = (column: number, to: { point: string; unit: FileUnitKey } | null) =>
+  const put = (from: Shown, to: { point: string; unit: FileUnitKey } | null) =>
     onChange({
       ...layout,
       columns: [
-        ...layout.columns.filter((one) => one.column !== column && one.point !== to?.point),
-        ...(to === null ? [] : [{ column, ...to }]),
+        ...layout.columns.filter((one) => !isOf(one, from) && one.point !== to?.point),
+        ...(to === null
+          ? []
+          : [{ column: from.column, ...to, ...(from.sensor === null ? {} : { sensor: from.sensor }) }]),
       ].sort((a, b) => a.column - b.column),
     });
   return (
@@ -41,14 +47,15 @@ export function ColumnsTable({
         { key: 'unit', label: 'Its unit in the file' },
       ]}
     >
-      {columns.map(({ column, head, sample, unit }) => {
+      {columns.map((from) => {
+        const { column, head, sample, unit } = from;
         const name = head === '' ? `Column ${column + 1}` : head;
-        const chosen = layout.columns.find((one) => one.column === column);
+        const chosen = layout.columns.find((one) => isOf(one, from));
         const point = points.find((one) => one.key === chosen?.point);
         const isTime = layout.timeColumns.includes(column);
         const shown = isTime && layout.timeColumns[0] === column ? times : sample;
         return (
-          <Row key={column}>
+          <Row key={`${column} ${from.sensor ?? ''}`}>
             <RowHead className="max-w-48 break-words">
               {name}
               <span className="block font-mono text-[0.85rem] font-normal sm:hidden">{shown[0]}</span>
@@ -72,10 +79,10 @@ export function ColumnsTable({
                     onChange={(event) => {
                       const to = points.find((one) => one.key === event.target.value);
                       const [first] = to === undefined ? [] : fileUnitsOf(to.unit);
-                      if (to === undefined || first === undefined) return put(column, null);
+                      if (to === undefined || first === undefined) return put(from, null);
                       const own =
                         unit !== null && isFileUnit(unit) && FILE_UNITS[unit].kept === to.unit ? unit : first;
-                      put(column, { point: to.key, unit: own });
+                      put(from, { point: to.key, unit: own });
                     }}
                   >
                     <option value="">left out</option>
@@ -94,7 +101,7 @@ export function ColumnsTable({
                       value={chosen.unit}
                       onChange={(event) => {
                         if (isFileUnit(event.target.value))
-                          put(column, { point: chosen.point, unit: event.target.value });
+                          put(from, { point: chosen.point, unit: event.target.value });
                       }}
                     >
                       {fileUnitsOf(point.unit).map((key) => (

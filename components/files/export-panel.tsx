@@ -75,12 +75,14 @@ export function ExportPanel({
           <Fetch href={`${at}/export/readings?points=${chosen.join()}&${span}`}>Readings</Fetch>
         )}
         {error === undefined ? <Fetch href={`${at}/export/switchings?${span}`}>Switchings</Fetch> : null}
+        {error === undefined ? <Fetch href={`${at}/export/runs?${span}`}>What each load did</Fetch> : null}
         <Fetch href={`${at}/nights?format=csv`}>Nights, all of them</Fetch>
         {heaps.length === 0 ? null : <Fetch href={`${at}/export/heap-book`}>Heap book, whole</Fetch>}
       </ul>
       <p className="max-w-prose text-[0.9rem] text-soft">
         Times carry their offset, heads their unit. Readings are corrected by their calibration; those that
-        are doubtful or bad say so in the column beside them.
+        are doubtful or bad say so in the column beside them. What each load did, with the readings of its
+        loop, is what nights are reckoned from.
       </p>
     </div>
   );

@@ -59,7 +59,7 @@ export function LayoutPart({
         <div>{drop}</div>
       </>
     );
-  const { layout, columns, times, faults, doubts } = preview;
+  const { layout, columns, heads, times, faults, doubts } = preview;
   return (
     <div className="flex flex-col gap-4">
       <p className="max-w-prose text-soft">
@@ -71,7 +71,7 @@ export function LayoutPart({
           {text}
         </Notice>
       ))}
-      <LayoutFields layout={layout} columns={columns} onChange={show} />
+      <LayoutFields layout={layout} heads={heads} onChange={show} />
       <ColumnsTable
         layout={layout}
         columns={columns}

@@ -13,6 +13,8 @@ export interface ColumnLayout {
   /** Key of the point that its values go to. */
   point: string;
   unit: FileUnitKey;
+  /** Of a long table: the sensor whose lines are meant. */
+  sensor?: string | undefined;
 }
 
 export interface FileLayout {
@@ -23,6 +25,8 @@ export interface FileLayout {
   headLines: number;
   /** One column with the whole time, or the date's and the time of day's. */
   timeColumns: number[];
+  /** Of a long table: the column that names the sensor; left out where each sensor has a column of its own. */
+  sensorColumn?: number | undefined;
   time: TimeLayout;
   columns: ColumnLayout[];
 }

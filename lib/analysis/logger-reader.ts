@@ -5,7 +5,9 @@
 import { FILE_UNITS, keptValue } from '@/lib/units/file-units';
 import { cellNumber, type ColumnLayout, type FileLayout } from './logger-layout';
 import { type FileLine, LineReader } from './logger-lines';
-import { readTime, ZoneClock } from './logger-time';
+import { ZoneClock } from './logger-clock';
+import { isFirstPass, runsBackward } from './logger-direction';
+import { readTime } from './logger-time';
 
 export interface FileReading {
   /** The point's number. */
@@ -47,6 +49,8 @@ interface Column extends ColumnLayout {
 
 /** A logger whose battery died begins again at 1970 or 2000: those times are no readings' times. */
 const EARLIEST = Date.UTC(2000, 0, 2);
+/** Lines that are looked at to tell whether the oldest or the newest comes first. */
+const LOOKED_AT = 64;
 
 export class LoggerReader {
   readings: FileReading[] = [];
@@ -56,8 +60,13 @@ export class LoggerReader {
   lines = 0;
   private readonly lineReader: LineReader;
   private readonly clock: ZoneClock;
-  private readonly columns: Column[];
-  private lastAt = Number.NEGATIVE_INFINITY;
+  /** By the sensor that a line names; all under one where none is named. */
+  private readonly columns = new Map<string | undefined, Column[]>();
+  /** Of each sensor by itself: in a long table one's second pass may stand beside another's first. */
+  private readonly lastAt = new Map<string | undefined, number>();
+  private isBackward = false;
+  /** Lines held back until their direction is told; null from then on. */
+  private held: FileLine[] | null = [];
 
   /**
    * @param points by key; a column whose point is not among them is left out
@@ -70,18 +79,38 @@ export class LoggerReader {
   ) {
     this.lineReader = new LineReader(layout.delimiter);
     this.clock = new ZoneClock(layout.time.zone);
-    this.columns = layout.columns.flatMap((column) => {
+    for (const column of layout.columns) {
       const target = points.get(column.point);
-      return target === undefined ? [] : [{ ...column, target }];
-    });
+      const sensor = layout.sensorColumn === undefined ? undefined : (column.sensor ?? '');
+      if (target !== undefined)
+        this.columns.set(sensor, [...(this.columns.get(sensor) ?? []), { ...column, target }]);
+    }
   }
 
   push(piece: string): void {
-    for (const line of this.lineReader.push(piece)) this.take(line);
+    for (const line of this.lineReader.push(piece)) this.hold(line);
   }
 
   end(): void {
-    for (const line of this.lineReader.end()) this.take(line);
+    for (const line of this.lineReader.end()) this.hold(line);
+    this.settle();
+  }
+
+  /** Reads what is held back now: for whoever has only a file's beginning. */
+  settle(): void {
+    const held = this.held ?? [];
+    this.held = null;
+    this.isBackward = runsBackward(
+      held.map(({ cells }) => (cells === null ? '' : this.timeText(cells))),
+      this.layout.time.order,
+    );
+    for (const line of held) this.take(line);
+  }
+
+  private hold(line: FileLine): void {
+    if (this.held === null || line.number <= this.layout.headLines) return this.take(line);
+    this.held.push(line);
+    if (this.held.length >= LOOKED_AT) this.settle();
   }
 
   private take(line: FileLine): void {
@@ -89,19 +118,28 @@ export class LoggerReader {
     if (line.number <= this.layout.headLines) return;
     if (line.cells === null) return this.refuse(line, line.fault ?? 'This line cannot be read.');
     if (line.text.trim() === '') return;
-    const at = this.timeOf(line, line.cells);
+    const { sensorColumn } = this.layout;
+    const sensor = sensorColumn === undefined ? undefined : line.cells[sensorColumn]?.trim();
+    if (sensorColumn !== undefined && sensor === undefined)
+      return this.refuse(line, `The line has no column ${sensorColumn + 1}, which names the sensor.`);
+    const columns = this.columns.get(sensor) ?? [];
+    if (sensorColumn !== undefined && columns.length === 0) return;
+    const at = this.timeOf(line, line.cells, sensor);
     if (at === null) return;
     if (at < EARLIEST) return this.refuse(line, 'The time lies before 2000: the logger’s clock was not set.');
     if (at > this.latest) return this.refuse(line, TOO_NEW);
-    this.lastAt = at;
-    for (const column of this.columns) this.value(line, line.cells, column, at);
+    this.lastAt.set(sensor, at);
+    for (const column of columns) this.value(line, line.cells, column, at);
   }
 
-  private timeOf(line: FileLine, cells: readonly string[]): number | null {
-    const { timeColumns, time } = this.layout;
-    const [date = 0, ofDay] = timeColumns;
-    const text = ofDay === undefined ? (cells[date] ?? '') : `${cells[date] ?? ''} ${cells[ofDay] ?? ''}`;
-    const read = readTime(text, time.order);
+  private timeText(cells: readonly string[]): string {
+    const [date = 0, ofDay] = this.layout.timeColumns;
+    return ofDay === undefined ? (cells[date] ?? '') : `${cells[date] ?? ''} ${cells[ofDay] ?? ''}`;
+  }
+
+  private timeOf(line: FileLine, cells: readonly string[], sensor: string | undefined): number | null {
+    const text = this.timeText(cells);
+    const read = readTime(text, this.layout.time.order);
     if (read === null) {
       this.refuse(line, `${JSON.stringify(text.slice(0, 40))} is no time of the form that was chosen.`);
       return null;
@@ -112,7 +150,7 @@ export class LoggerReader {
     if (first !== undefined && second === undefined) return first;
     return first === undefined || second === undefined
       ? this.skipped(line, read.wall)
-      : this.twice(line, first, second);
+      : this.twice(line, first, second, sensor);
   }
 
   private skipped(line: FileLine, wall: number): number | null {
@@ -121,12 +159,13 @@ export class LoggerReader {
     return at;
   }
 
-  private twice(line: FileLine, first: number, second: number): number | null {
+  private twice(line: FileLine, first: number, second: number, sensor: string | undefined): number | null {
     const { twice } = this.layout.time;
     const at =
       twice === 'leave-out'
         ? null
-        : twice === 'first' || (twice === 'by-order' && first > this.lastAt)
+        : twice === 'first' ||
+            (twice === 'by-order' && isFirstPass(first, second, this.lastAt.get(sensor), this.isBackward))
           ? first
           : second;
     this.doubts.push({ line: line.number, text: line.text.slice(0, 80), kind: 'twice', readAs: at });

@@ -2,9 +2,9 @@
  * Times as loggers write them. A time without an offset is read in a zone, and there two kinds of it are doubtful: one that
  * comes twice when the clock goes back, and one that the clock skips in spring. Neither is decided in silence.
  */
-import { IANAZone } from 'luxon';
+import { fixedOffset } from './logger-clock';
 
-export const DATE_ORDERS = ['ymd', 'dmy', 'mdy', 'seconds', 'milliseconds'] as const;
+export const DATE_ORDERS = ['ymd', 'dmy', 'mdy', 'seconds', 'milliseconds', 'serial'] as const;
 export type DateOrder = (typeof DATE_ORDERS)[number];
 /** How a time that comes twice is read: by the order of the lines, always the one, or not at all. */
 export const TWICE = ['by-order', 'first', 'second', 'leave-out'] as const;
@@ -15,6 +15,7 @@ export type Skipped = (typeof SKIPPED)[number];
 
 export interface TimeLayout {
   order: DateOrder;
+  /** IANA name, or the fixed offset of a clock that no summer moves: `UTC-07:00`. */
   zone: string;
   twice: Twice;
   skipped: Skipped;
@@ -24,21 +25,38 @@ export interface TimeLayout {
 export type ReadTime = { wall: number } | { instant: number } | null;
 
 const MONTHS = 'jan feb mar apr may jun jul aug sep oct nov dec'.split(' ');
-const DATED =
-  /^(\d{1,4})[-/. ]{1,2}(\d{1,2}|[a-z]{3,9})[-/. ]{1,2}(\d{1,4})(?:[t, ]+(\d{1,2})[:.](\d{2})(?:[:.](\d{2})(?:[.,](\d{1,9}))?)?)?\s*([ap])?\.?(?:m\.?)?\s*(z|utc|gmt|[+-]\d{2}:?\d{2})?$/i;
+const WEEKDAY = /(?:(?:mon|tue|wed|thu|fri|sat|sun)[a-z]{0,6}[.,]{0,2} +)?/;
+const DATE = /(\d{1,4}|[a-z]{3,9})[-/. ]{1,2}(\d{1,2}|[a-z]{3,9})(?:[-/. ]{1,2}|, ?)(\d{1,4})/;
+const CLOCK = /(\d{1,2})[:.](\d{2})(?:[:.](\d{2})(?:[.,](\d{1,9}))?)?/;
+const HALF = /(?:\s*([ap])\.?\s*(?:m\.?)?)?/;
+const OFFSET = /(?:\s*(z|utc|gmt|(?:utc|gmt)?[+-]\d{1,2}(?::?\d{2})?))?/;
+const DATED = new RegExp(
+  `^${WEEKDAY.source}${DATE.source}(?:[t, ]+${CLOCK.source}${HALF.source}${OFFSET.source})?$`,
+  'i',
+);
+/** ISO 8601's basic form: no marks in the date, and in the time of day none or colons. */
+const UNMARKED = /^((?:19|20)\d{2})(\d{2})(\d{2})(?:[t ]*(\d{2})(\d{2})(\d{2})?(?![\d:.]))?/i;
+
+/** Days since 1899-12-30 as spreadsheets count them (from March 1900 on); the bounds are of 1954 and 2119. */
+const FIRST_SERIAL = 20_000;
+const LAST_SERIAL = 80_000;
+const SERIAL_OF_1970 = 25_569;
 
 /** @example readTime('26.11.2026 02:30', 'dmy') */
 export function readTime(text: string, order: DateOrder): ReadTime {
   const said = text.trim();
+  if (order === 'serial') return ofSerial(said);
   if (order === 'seconds' || order === 'milliseconds') {
     if (!/^\d{1,13}(\.\d{1,9})?$/.test(said)) return null;
     return { instant: Math.round(Number(said) * (order === 'seconds' ? 1000 : 1)) };
   }
-  const found = DATED.exec(said);
+  const found = DATED.exec(said) ?? (order === 'ymd' ? DATED.exec(marked(said)) : null);
   if (found === null) return null;
   const [, first = '', middle = '', last = '', hour, minute, second, part, half, offset] = found;
   const [year, month, day] =
     order === 'ymd' ? [first, middle, last] : order === 'dmy' ? [last, middle, first] : [last, first, middle];
+  // nobody writes 26-Nov-05 for the 5th
+  if (order === 'ymd' && year.length < 4 && !/^\d/.test(month)) return null;
   const wall = wallOf(
     yearOf(year),
     monthOf(month),
@@ -48,7 +66,22 @@ export function readTime(text: string, order: DateOrder): ReadTime {
     Number(second ?? 0) * 1000 + Number((part ?? '').padEnd(3, '0').slice(0, 3)),
   );
   if (wall === null) return null;
-  return offset === undefined ? { wall } : { instant: wall - offsetMs(offset) };
+  return offset === undefined ? { wall } : { instant: wall - (fixedOffset(offset) ?? 0) * 60_000 };
+}
+
+/** A spreadsheet keeps five to ten places of a day: whole seconds are what they can tell. */
+function ofSerial(said: string): ReadTime {
+  if (!/^\d{5}([.,]\d{1,15})?$/.test(said)) return null;
+  const days = Number(said.replace(',', '.'));
+  if (days < FIRST_SERIAL || days > LAST_SERIAL) return null;
+  return { wall: Math.round((days - SERIAL_OF_1970) * 86_400) * 1000 };
+}
+
+function marked(said: string): string {
+  return said.replace(UNMARKED, (_, year: string, month: string, day: string, ...rest: unknown[]) => {
+    const clock = rest.slice(0, 3).filter((part) => typeof part === 'string');
+    return `${year}-${month}-${day}${clock.length === 0 ? '' : ` ${clock.join(':')}`}`;
+  });
 }
 
 function yearOf(text: string): number {
@@ -75,48 +108,3 @@ function wallOf(year: number, month: number, day: number, hour: number, minute: 
 }
 
 const isLeap = (year: number) => (year % 4 === 0 && year % 100 !== 0) || year % 400 === 0;
-
-function offsetMs(text: string): number {
-  const found = /^([+-])(\d{2}):?(\d{2})$/.exec(text);
-  if (found === null) return 0;
-  return (found[1] === '-' ? -1 : 1) * (Number(found[2]) * 60 + Number(found[3])) * 60_000;
-}
-
-const QUARTER_MS = 900_000;
-const DAY_MS = 86_400_000;
-
-/** Times on the wall of one zone as instants. Offsets change at quarters of an hour only, so one look a quarter is enough. */
-export class ZoneClock {
-  private readonly zone: IANAZone;
-  private readonly offsets = new Map<number, number[]>();
-  private last = { quarter: Number.NaN, offsets: [0] };
-
-  constructor(zone: string) {
-    this.zone = IANAZone.create(zone);
-  }
-
-  /** Instants at which the wall shows this, the earlier first: one, two where it comes twice, none where it is skipped. */
-  instantsOf(wall: number): number[] {
-    return this.offsetsAt(wall).map((offset) => wall - offset);
-  }
-
-  /** A skipped time with the offset before the gap. */
-  beforeGap(wall: number): number {
-    return wall - this.zone.offset(wall - DAY_MS) * 60_000;
-  }
-
-  private offsetsAt(wall: number): number[] {
-    const quarter = Math.floor(wall / QUARTER_MS);
-    if (quarter === this.last.quarter) return this.last.offsets;
-    let offsets = this.offsets.get(quarter);
-    if (offsets === undefined) {
-      const about = [wall - DAY_MS, wall + DAY_MS].map((at) => this.zone.offset(at) * 60_000);
-      offsets = [...new Set(about)]
-        .filter((offset) => this.zone.offset(wall - offset) * 60_000 === offset)
-        .sort((a, b) => b - a);
-      this.offsets.set(quarter, offsets);
-    }
-    this.last = { quarter, offsets };
-    return offsets;
-  }
-}

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { fixedOffset } from '@/lib/analysis/logger-clock';
 import { DELIMITERS, ENCODINGS } from '@/lib/analysis/logger-layout';
 import { DATE_ORDERS, SKIPPED, TWICE } from '@/lib/analysis/logger-time';
 import { FILE_UNITS, isFileUnit, type FileUnitKey } from '@/lib/units/file-units';
@@ -27,20 +28,35 @@ const Unit = z.custom<FileUnitKey>(
   `Give one of ${Object.keys(FILE_UNITS).join(', ')}.`,
 );
 
+const FileZone = z
+  .string()
+  .trim()
+  .refine(
+    (value) => fixedOffset(value) !== null || Zone.safeParse(value).success,
+    'Name an IANA time zone, such as Europe/London, or a fixed offset, such as UTC+01:00.',
+  );
+
 export const ImportLayout = z.strictObject({
   encoding: z.enum(ENCODINGS),
   delimiter: z.enum(DELIMITERS),
   decimal: z.enum(['.', ',']),
   headLines: z.number().int().min(0, 'At least 0.').max(1000, 'At most 1000 lines.'),
   timeColumns: z.array(column).min(1, 'Choose the column with the time.').max(2, 'At most date and time.'),
+  /** Of a table with a line a sensor: the column that names it. */
+  sensorColumn: column.optional(),
   time: z.strictObject({
     order: z.enum(DATE_ORDERS),
-    zone: Zone,
+    zone: FileZone,
     twice: z.enum(TWICE),
     skipped: z.enum(SKIPPED),
   }),
   columns: z
-    .array(z.strictObject({ column, point: Key, unit: Unit.meta({ type: 'string' }) }))
+    .array(
+      z.strictObject({
+        ...{ column, point: Key, unit: Unit.meta({ type: 'string' }) },
+        sensor: z.string().min(1).max(200).optional(),
+      }),
+    )
     .min(1, 'Choose a point for one column at least.')
     .max(200, 'At most 200 columns.'),
 });
@@ -108,12 +124,16 @@ const PreviewColumn = z.strictObject({
   sample: z.array(z.string()),
   unit: z.string().nullable(),
   isTime: z.boolean(),
+  /** Of a table with a line a sensor: whose lines these are. */
+  sensor: z.string().nullable(),
 });
 
 /** The file's first lines as they are understood; `times` of the lines, as they would be read by `layout`. */
 export const ImportPreview = z.strictObject({
   layout: z.strictObject({ ...ImportLayout.shape, columns: z.array(ImportLayout.shape.columns.element) }),
   columns: z.array(PreviewColumn),
+  /** Of every column of the file. */
+  heads: z.array(z.string()),
   times: z.array(Instant),
   faults: z.array(Fault),
   doubts: z.array(z.string()),

@@ -4,7 +4,8 @@ import type { Holding } from '@/db/client';
 import * as imports from '@/db/queries/import';
 import { listPoints } from '@/db/queries/point';
 import { Refusal } from '@/db/queries/refusal';
-import { encodingOf, guessLayout, isNumeric, matchColumns } from '@/lib/analysis/logger-guess';
+import { isNumeric, matchColumns } from '@/lib/analysis/logger-columns';
+import { encodingOf, guessLayout } from '@/lib/analysis/logger-guess';
 import { LoggerReader } from '@/lib/analysis/logger-reader';
 import type { Import, ImportCreate, ImportLayout, ImportPreview, ImportState } from '@/lib/schema/import';
 import type { House, Point } from '@/lib/schema/yard-view';
@@ -89,6 +90,7 @@ export async function previewImport(
   const numbers = columns.find((column) => !column.isTime);
   const first = layout.columns[0] ?? {
     ...{ column: numbers?.column ?? 0, point: numbers?.head ?? '', unit: 'Cel' as const },
+    ...(numbers === undefined || numbers.sensor === null ? {} : { sensor: numbers.sensor }),
   };
   const target = { key: first.point, number: 0, unit: '', min: null, max: null };
   // any number of a point will do: what is looked at is the times
@@ -98,9 +100,10 @@ export async function previewImport(
     now.getTime(),
   );
   reader.push(text);
+  reader.settle();
   const times = [...new Set(reader.readings.map((reading) => reading.at))].slice(0, SHOWN);
   return {
-    ...{ layout, columns, doubts: guess.doubts },
+    ...{ layout, columns, heads: guess.heads, doubts: guess.doubts },
     times: times.map((at) => isoIn(house.zone, at)),
     faults: reader.faults.slice(0, SHOWN),
   };
@@ -110,7 +113,7 @@ export async function previewImport(
 export async function checkLayout(holding: Holding, house: House, layout: ImportLayout): Promise<void> {
   const points = new Map(measured(await listPoints(holding, house.id)).map((point) => [point.key, point]));
   const taken = new Set<string>();
-  layout.columns.forEach(({ point: key, unit, column }, at) => {
+  layout.columns.forEach(({ point: key, unit, column, sensor }, at) => {
     const point = points.get(key);
     if (point === undefined)
       throw new Refusal(`columns.${at}.point`, `This house has no measured point ${JSON.stringify(key)}.`);
@@ -122,6 +125,15 @@ export async function checkLayout(holding: Holding, house: House, layout: Import
       );
     if (layout.timeColumns.includes(column))
       throw new Refusal(`columns.${at}.column`, 'This column holds the time.');
+    if (column === layout.sensorColumn)
+      throw new Refusal(`columns.${at}.column`, 'This column names the sensor.');
+    if ((sensor === undefined) !== (layout.sensorColumn === undefined))
+      throw new Refusal(
+        `columns.${at}.sensor`,
+        sensor === undefined
+          ? 'A column of this file names the sensor; say whose lines go to this point.'
+          : 'No column of this file names a sensor; leave it out.',
+      );
     taken.add(key);
   });
 }

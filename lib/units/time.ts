@@ -70,9 +70,12 @@ export function day(at: number, zone: string): string {
   return `${there.day} ${MONTHS[there.month - 1] ?? ''}`;
 }
 
-/** A night by its evening's date. @example nightLabel('2026-11-26') === '26 Nov' */
+/**
+ * A night by its evening's date. Its name says all of that: a format of Intl, only to take it apart, would cost a phone more
+ * than a table of nights. @example nightLabel('2026-11-26') === '26 Nov'
+ */
 export function nightLabel(night: string): string {
-  return day(Date.parse(`${night}T12:00:00Z`), 'UTC');
+  return `${Number(night.slice(8, 10))} ${MONTHS[Number(night.slice(5, 7)) - 1] ?? ''}`;
 }
 
 /** A clock time with as much of the date as makes it plain beside `now`. */

@@ -1,31 +1,9 @@
 // Files as other people's loggers write them: what is understood of each, and what is read by that.
 import { describe, expect, it } from 'vitest';
-import { encodingOf, guessLayout, matchColumns } from '@/lib/analysis/logger-guess';
+import { encodingOf, guessLayout } from '@/lib/analysis/logger-guess';
 import type { FileLayout } from '@/lib/analysis/logger-layout';
-import { LoggerReader, type TargetPoint } from '@/lib/analysis/logger-reader';
-
-const points = [
-  { key: 'bench-1', name: 'Bench 1', unit: 'Cel', number: 1, min: -30, max: 60 },
-  { key: 'humidity', name: 'Humidity', unit: '%RH', number: 2, min: null, max: null },
-  { key: 'light', name: 'Light', unit: 'W/m2', number: 3, min: null, max: null },
-];
-const targets = new Map<string, TargetPoint>(points.map((point) => [point.key, point]));
-const LATEST = Date.parse('2026-11-30T00:00:00Z');
-
-function guess(text: string, zone = 'Europe/Zurich') {
-  const found = guessLayout(text, 'utf-8', zone);
-  if (found === null) throw new Error('nothing was understood');
-  return { ...found, layout: { ...found.layout, columns: matchColumns(found.columns, points) } };
-}
-
-function read(text: string, layout: FileLayout, piece = 7) {
-  const reader = new LoggerReader(layout, targets, LATEST);
-  for (let at = 0; at < text.length; at += piece) reader.push(text.slice(at, at + piece));
-  reader.end();
-  return reader;
-}
-const told = (reader: LoggerReader) =>
-  reader.readings.map(({ point, at, value }) => [point, new Date(at).toISOString(), value]);
+import type { LoggerReader } from '@/lib/analysis/logger-reader';
+import { guess, read, told } from '../support/logger-files';
 
 const NORDIC = [
   'Serial;4711',
@@ -129,6 +107,35 @@ describe('where the clock changes', () => {
     expect(reader.doubts.map((doubt) => [doubt.line, doubt.kind])).toEqual(
       [2, 3, 4, 5].map((line) => [line, 'twice']),
     );
+  });
+
+  it('a file with the newest line first has both passes, none over the other', () => {
+    const newest = AUTUMN.trim().split('\n').reverse().join('\n');
+    expect(times(read(newest, layout()))).toEqual(['02:00', '01:30', '01:00', '00:30', '00:00', '23:30']);
+    // and where it begins within the hour that comes twice
+    const within = newest.split('\n').slice(1).join('\n');
+    expect(times(read(within, layout()))).toEqual(['01:30', '01:00', '00:30', '00:00', '23:30']);
+  });
+
+  it('a long file gives the same readings whichever way it runs', () => {
+    const first = Date.parse('2026-10-24T12:00:00Z');
+    const wall = new Intl.DateTimeFormat('sv', {
+      timeZone: 'Europe/London',
+      dateStyle: 'short',
+      timeStyle: 'short',
+    });
+    const oldest = Array.from(
+      { length: 300 },
+      (_, at) => `${wall.format(first + at * 600_000)},${at % 50}\n`,
+    );
+    const readings = read(oldest.join(''), layout()).readings;
+    expect(readings.map(({ at }) => at)).toEqual(oldest.map((_, at) => first + at * 600_000));
+    expect(read(oldest.toReversed().join(''), layout()).readings.toReversed()).toEqual(readings);
+  });
+
+  it('the direction is told by most of the first lines, not by one that is out of its place', () => {
+    const jumbled = `2026-10-25 00:40,9\n2026-10-25 00:20,9\n${AUTUMN}`;
+    expect(times(read(jumbled, layout())).slice(2)).toEqual(times(read(AUTUMN, layout())));
   });
 
   it('it is always the first, always the second, or left out, as somebody chose', () => {

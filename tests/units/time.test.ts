@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { USUAL, type Preferences } from '@/lib/units/preferences';
-import { age, clock, dayTime, duration, moment } from '@/lib/units/time';
+import { age, clock, day, dayTime, duration, moment, nightLabel } from '@/lib/units/time';
 import { numberTyped, secondsTyped } from '@/lib/units/typed';
 
 const twelve: Preferences = { ...USUAL, clock: 12 };
@@ -50,6 +50,12 @@ describe('a clock time', () => {
     expect(read('2026-11-22T09:00:00Z')).toBe('22 Nov, 09:00');
     expect(read('2026-11-27T08:00:00Z')).toBe('tomorrow 08:00');
   });
+});
+
+it('a night is labelled with the day on which its evening was', () => {
+  for (const night of ['2026-01-01', '2026-02-28', '2026-09-09', '2027-12-31'])
+    expect(nightLabel(night)).toBe(day(at(`${night}T12:00:00Z`), 'UTC'));
+  expect(nightLabel('2026-11-26')).toBe('26 Nov');
 });
 
 describe('what is typed', () => {
