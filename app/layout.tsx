@@ -2,7 +2,8 @@ import './globals.css';
 import type { Metadata, Viewport } from 'next';
 import { cookies } from 'next/headers';
 import type { ReactNode } from 'react';
-import { faces } from './fonts';
+import { BringFaces } from '@/components/shell/bring-faces';
+import { faces, families } from './fonts';
 
 export const metadata: Metadata = {
   title: { default: 'Middenward', template: '%s · Middenward' },
@@ -18,12 +19,25 @@ export const viewport: Viewport = {
   ],
 };
 
-/** The theme is a cookie so that the server renders it: a page must not flash white at three in the morning. */
+/**
+ * The theme is a cookie so that the server renders it: a page must not flash white at three in the morning. So is whether
+ * this browser keeps our faces already.
+ */
 export default async function RootLayout({ children }: { children: ReactNode }) {
-  const theme = (await cookies()).get('theme')?.value;
+  const kept = await cookies();
+  const theme = kept.get('theme')?.value;
+  const hasFaces = kept.get('faces')?.value === 'kept';
   return (
-    <html lang="en" data-theme={theme === 'light' || theme === 'dark' ? theme : undefined} className={faces}>
-      <body>{children}</body>
+    <html
+      lang="en"
+      data-theme={theme === 'light' || theme === 'dark' ? theme : undefined}
+      data-faces={hasFaces ? undefined : 'later'}
+      className={faces}
+    >
+      <body>
+        {children}
+        {hasFaces ? null : <BringFaces families={families} />}
+      </body>
     </html>
   );
 }

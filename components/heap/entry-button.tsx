@@ -1,6 +1,7 @@
 'use client';
 import { useState, type ComponentType, type ReactNode } from 'react';
-import { Button, type ButtonKind } from '@/components/ui/button';
+import { Button } from '@/components/ui/button';
+import type { ButtonKind } from '@/components/ui/button-look';
 import type { EntryTarget } from './entry-target';
 import { offlineBook } from './offline-book-address';
 

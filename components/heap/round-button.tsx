@@ -1,6 +1,7 @@
 'use client';
 import { useState, type ComponentType } from 'react';
-import { Button, type ButtonKind } from '@/components/ui/button';
+import { Button } from '@/components/ui/button';
+import type { ButtonKind } from '@/components/ui/button-look';
 import { offlineBook } from './offline-book-address';
 import type { RoundTarget } from './round-form';
 

@@ -1,5 +1,5 @@
 'use client';
-import { Button, ButtonLink } from '@/components/ui/button';
+import { buttonLook } from '@/components/ui/button-look';
 import { Failed } from '@/components/ui/states';
 
 /** What a page shows in place of itself when it could not be made. The relays are the worker's, which is not touched. */
@@ -11,10 +11,13 @@ export function PageFailed({ digest, retry }: { digest: string | undefined; retr
         title="This page could not be shown."
         action={
           <>
-            <Button kind="primary" onClick={retry}>
+            {/* plain ones: this comes with every page, and after a failure a whole load is the surer way */}
+            <button type="button" onClick={retry} className={buttonLook('primary')}>
               Try again
-            </Button>
-            <ButtonLink href="/">Go to Watch</ButtonLink>
+            </button>
+            <a href="/" className={buttonLook('plain')}>
+              Go to Watch
+            </a>
           </>
         }
       >

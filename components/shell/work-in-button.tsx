@@ -1,6 +1,7 @@
 'use client';
 import { useState } from 'react';
-import { Button, type ButtonKind } from '@/components/ui/button';
+import { Button } from '@/components/ui/button';
+import type { ButtonKind } from '@/components/ui/button-look';
 import { workIn } from './work-in';
 
 export function WorkInButton({ id, name, kind }: { id: string; name: string; kind?: ButtonKind }) {

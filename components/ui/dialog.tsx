@@ -1,7 +1,8 @@
 'use client';
 import * as Radix from 'radix-ui/dialog';
 import { useRef, type ReactNode } from 'react';
-import { Button, type ButtonKind } from './button';
+import { Button } from './button';
+import type { ButtonKind } from './button-look';
 
 interface DialogProps {
   open: boolean;

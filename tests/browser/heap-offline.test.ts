@@ -45,6 +45,23 @@ const entriesWith = async (page: Page, words: string): Promise<number> => {
   return items.filter((entry) => entry.text === words).length;
 };
 
+/** A note, by the form: pressed until the page listens. */
+async function writeDown(page: Page, words: string): Promise<void> {
+  await until(
+    'the form',
+    async () => {
+      await page
+        .getByRole('button', { name: 'Note', exact: true })
+        .click({ timeout: 1000 })
+        .catch(() => undefined);
+      return page.getByRole('dialog').isVisible();
+    },
+    20_000,
+  );
+  await page.getByLabel('What you saw').fill(words);
+  await page.getByRole('button', { name: 'Write it down' }).click();
+}
+
 describe('the heap book without a line', () => {
   it('takes an entry and a round on the page that it keeps, and sends both once when the line is back', async () => {
     const { context, page } = await onPhone();
@@ -96,19 +113,7 @@ describe('the heap book without a line', () => {
       await route.fetch();
       await route.abort('connectionreset');
     });
-    await until(
-      'the form',
-      async () => {
-        await page
-          .getByRole('button', { name: 'Note', exact: true })
-          .click({ timeout: 1000 })
-          .catch(() => undefined);
-        return page.getByRole('dialog').isVisible();
-      },
-      20_000,
-    );
-    await page.getByLabel('What you saw').fill(words);
-    await page.getByRole('button', { name: 'Write it down' }).click();
+    await writeDown(page, words);
     await page.getByRole('dialog').waitFor({ state: 'detached' });
     await page.getByText('Waiting to be sent: 1').waitFor();
     expect(await entriesWith(page, words)).toBe(1);
@@ -143,19 +148,7 @@ describe('the heap book without a line', () => {
     await page.route('**/heap-entries', (route) =>
       route.request().method() === 'POST' ? route.abort('internetdisconnected') : route.continue(),
     );
-    await until(
-      'the form',
-      async () => {
-        await page
-          .getByRole('button', { name: 'Note', exact: true })
-          .click({ timeout: 1000 })
-          .catch(() => undefined);
-        return page.getByRole('dialog').isVisible();
-      },
-      20_000,
-    );
-    await page.getByLabel('What you saw').fill(words);
-    await page.getByRole('button', { name: 'Write it down' }).click();
+    await writeDown(page, words);
     await page.getByText('Waiting to be sent: 1').waitFor();
     await page.unroute('**/heap-entries');
     const other = await signedIn(browser, sharedApp(), 'owner@larkmoor.example', {});
