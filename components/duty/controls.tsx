@@ -8,7 +8,7 @@ import { Choice } from './choice';
 import { compareChoices, nightsWords } from './compare-choices';
 import type { DutyHouse, DutyViewData } from './duty-data';
 import { Overview } from './overview';
-import { barsPath, overviewTicks } from './overview-layout';
+import { overviewTicks } from './overview-layout';
 import { PrintButton } from './print-button';
 
 /** Which source, which nights, beside what; the file and the print. */
@@ -57,12 +57,7 @@ export function Controls({
           address={own}
           nights={names}
           of={hasHeat ? 'kWh a night' : 'how long it ran a night'}
-          bars={barsPath(
-            nights.map(({ night, heat, dutyOfNight }) => ({
-              night,
-              value: hasHeat ? (heat?.kWh ?? null) : dutyOfNight,
-            })),
-          )}
+          heights={nights.map(({ heat, dutyOfNight }) => (hasHeat ? (heat?.kWh ?? null) : dutyOfNight))}
           ticks={overviewTicks(names)}
           chosen={isPart ? brushOf(names, chosen[0]?.night ?? '', chosen.at(-1)?.night ?? '') : null}
           other={against?.kind === 'nights' ? brushOf(names, against.from, against.to) : null}

@@ -5,6 +5,7 @@ import { temperature, temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { day } from '@/lib/units/time';
 import { nightDate } from '@/lib/wording/duty';
+import { DawnTable } from './dawn-table';
 
 const wide = 320;
 const high = 190;
@@ -44,7 +45,7 @@ export function CoreAtDawn({
     line<Dawn>(
       (dawn) => x(dawn.at),
       (dawn) => y(dawn.value),
-    )(dawns) ?? '';
+    ).digits(1)(dawns) ?? '';
   const said = `Core at dawn, ${nightDate(first.night)} to ${nightDate(last.night)}: from ${temperature(first.value, preferences)} to ${temperature(last.value, preferences)}, between ${temperature(Math.min(...values), preferences)} and ${temperature(Math.max(...values), preferences)}.`;
   return (
     <figure>
@@ -74,24 +75,7 @@ export function CoreAtDawn({
           {day(last.at, zone)}
         </text>
       </svg>
-      <details className="text-[0.9rem]">
-        <summary className="flex min-h-11 cursor-pointer items-center text-soft hover:text-ink">
-          As a table
-        </summary>
-        <table className="w-full">
-          <caption className="sr-only">Core at dawn</caption>
-          <tbody>
-            {dawns.map((dawn) => (
-              <tr key={dawn.at} className="border-t border-faint">
-                <th scope="row" className="py-1 text-left font-normal">
-                  {day(dawn.at, zone)}
-                </th>
-                <td className="py-1 text-right font-mono">{temperature(dawn.value, preferences)}</td>
-              </tr>
-            ))}
-          </tbody>
-        </table>
-      </details>
+      <DawnTable rows={dawns.map((dawn) => [day(dawn.at, zone), temperature(dawn.value, preferences)])} />
     </figure>
   );
 }

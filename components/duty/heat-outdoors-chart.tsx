@@ -1,14 +1,14 @@
 'use client';
 import { Area, ComposedChart, ErrorBar, Line, Scatter, XAxis, YAxis } from 'recharts';
 import { scaleLinear } from 'd3-scale';
-import { useEffect, useRef, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 
 export interface OutdoorsChartProps {
   /** What the chart shows, for who does not see it. */
   said: string;
   /** In the reader's degrees. */
   unit: string;
-  nights: { outdoors: number; kWh: number; sd: number }[];
+  nights: [outdoors: number, kWh: number, sd: number][];
   curve: { outdoors: number; kWh: number; line: [number, number]; night: [number, number] }[];
 }
 
@@ -17,9 +17,10 @@ const AXIS = { fontSize: 10.5, fontFamily: 'var(--face-figure)', fill: 'var(--so
 /** Nights as dots with their deviation; the line, its interval darker, that of a single night lighter. */
 export default function HeatOutdoorsChart({ unit, nights, curve }: OutdoorsChartProps) {
   const place = useRef<HTMLDivElement>(null);
-  const cold = nights.map((night) => night.outdoors);
+  const cold = nights.map(([outdoors]) => outdoors);
   // whole degrees beyond the outermost nights, so that round figures stand on the axis
   const ends = [Math.floor(Math.min(...cold)), Math.ceil(Math.max(...cold))];
+  const dots = useMemo(() => nights.map(([outdoors, kWh, sd]) => ({ outdoors, kWh, sd })), [nights]);
   const [width, setWidth] = useState(0);
   useEffect(() => {
     const element = place.current;
@@ -73,7 +74,7 @@ export default function HeatOutdoorsChart({ unit, nights, curve }: OutdoorsChart
             dot={false}
             isAnimationActive={false}
           />
-          <Scatter data={nights} dataKey="kWh" shape={<Dot />} isAnimationActive={false}>
+          <Scatter data={dots} dataKey="kWh" shape={<Dot />} isAnimationActive={false}>
             <ErrorBar dataKey="sd" direction="y" width={0} strokeWidth={1} stroke="var(--soft)" />
           </Scatter>
         </ComposedChart>

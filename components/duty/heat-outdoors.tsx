@@ -7,7 +7,8 @@ import type { OutdoorsChartProps } from './heat-outdoors-chart';
 // the chart's library is larger than all of the page before it
 const Chart = lazy(() => import('./heat-outdoors-chart'));
 
-const place = <Skeleton className="h-52" />;
+// stands far under the screen's edge: what breathes there would cost frames and battery, and nobody sees it
+const place = <div className="h-52" />;
 
 /** The scatter of heat against the cold outdoors, fetched when somebody scrolls to it. */
 export function HeatOutdoors(props: OutdoorsChartProps) {
@@ -15,7 +16,7 @@ export function HeatOutdoors(props: OutdoorsChartProps) {
     <div role="img" aria-label={props.said} className="h-52">
       <WhenSeen instead={place}>
         {() => (
-          <Suspense fallback={place}>
+          <Suspense fallback={<Skeleton className="h-52" />}>
             <Chart {...props} />
           </Suspense>
         )}

@@ -1,8 +1,9 @@
 import Link from 'next/link';
 import { ButtonLink } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
-import { count, share, temperature, UNKNOWN } from '@/lib/units/format';
+import { count, temperature, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
+import { markWords } from '@/lib/wording/duty-notes';
 import { oldWords } from '@/lib/wording/houses';
 import type { HouseWeek } from './houses-data';
 import { SourceWeeks } from './source-weeks';
@@ -69,7 +70,8 @@ export function HousePanel({
 
 function lowNote(night: HouseWeek['lastNight']): string {
   if (night === null) return 'no whole night is kept yet';
-  if (night.coverageLow) return `only ${share(night.coverage)} of it was read`;
+  const mark = markWords(night);
+  if (mark !== null) return mark;
   return night.lowest?.name ?? `${UNKNOWN}: no point of the house was read`;
 }
 

@@ -7,6 +7,8 @@ export interface SourceOfHouse {
   slug: string;
   name: string;
   week: NightTotals | null;
+  /** The first and the last night of the seven, by name; null where none is kept. */
+  nights: { from: string; to: string } | null;
   missing: NightSummary['missing']['heat'];
   core: { trend: CoreTrend | null; last: { value: number; at: number } } | null;
 }

@@ -1,8 +1,8 @@
 /** A night as its row shows it: words and paths, ready for the browser, which knows no analysis and no units. */
 import type { NightSummary } from '@/lib/analysis/nights';
-import { share } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { type NightCells, nightCells } from '@/lib/wording/duty-figures';
+import { markWords } from '@/lib/wording/duty-notes';
 import { type StripPaths, stripPaths } from './strip-paths';
 
 export interface NightLine extends NightCells {
@@ -20,10 +20,7 @@ export function nightLine(
   frostLimitC: number | null,
   preferences: Preferences,
 ): NightLine {
-  const notes = [
-    ...(night.complete ? [] : ['so far']),
-    ...(night.coverageLow ? [`${share(night.coverage)} of it was read`] : []),
-  ];
+  const notes = [night.complete ? [] : 'so far', markWords(night) ?? []].flat();
   const isCold = frostLimitC !== null && night.lowest !== null && night.lowest.value < frostLimitC;
   return {
     night: night.night,

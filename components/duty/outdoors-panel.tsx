@@ -21,10 +21,7 @@ export function OutdoorsPanel({
   const known = heatNights(nights);
   const line = heatLine(known);
   const said = outdoorsWords(line, known, midSentence(source), preferences);
-  const shown = <T extends { outdoors: number }>(one: T): T => ({
-    ...one,
-    outdoors: preferences.temperature === 'F' ? fahrenheit(one.outdoors) : one.outdoors,
-  });
+  const degreesOf = (celsius: number) => (preferences.temperature === 'F' ? fahrenheit(celsius) : celsius);
   return (
     <Panel title="Heat against outdoors">
       <p className="text-[0.9rem] text-soft">kWh a night, by the lowest outdoors</p>
@@ -32,11 +29,16 @@ export function OutdoorsPanel({
         <HeatOutdoors
           said={said}
           unit={degrees(preferences)}
-          nights={known.map(({ outdoors, kWh, sd }) => shown({ outdoors, kWh, sd }))}
-          curve={'why' in line ? [] : line.curve.map(shown)}
+          nights={known.map(({ outdoors, kWh, sd }) => [hundredth(degreesOf(outdoors)), kWh, sd])}
+          curve={
+            'why' in line ? [] : line.curve.map((one) => ({ ...one, outdoors: degreesOf(one.outdoors) }))
+          }
         />
       )}
       <p className="pt-1 text-[0.9rem]">{said}</p>
     </Panel>
   );
 }
+
+/** As near as a dot can be drawn. */
+const hundredth = (value: number) => Math.round(value * 100) / 100;

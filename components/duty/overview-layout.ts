@@ -1,18 +1,15 @@
 /** Where the nights of the overview stand: a bar a night, and dates under them. Pure. */
 import { nightLabel } from '@/lib/units/time';
 
-export interface OverviewNight {
-  night: string;
-  /** What its bar is as high as; null draws none. */
-  value: number | null;
-}
-
 /** The bars' drawing is as many units wide as there are nights, and this high. */
 export const BARS_HIGH = 40;
 
-/** All bars as one path over the line of nothing; a night that took heat out of the house hangs below it. */
-export function barsPath(nights: readonly OverviewNight[]): { bars: string; zero: number } {
-  const values = nights.map(({ value }) => value ?? 0);
+/**
+ * All bars as one path over the line of nothing; a night that took heat out of the house hangs below it.
+ * @param heights what each night's bar is as high as; null draws none
+ */
+export function barsPath(heights: readonly (number | null)[]): { bars: string; zero: number } {
+  const values = heights.map((value) => value ?? 0);
   const [least, most] = [Math.min(0, ...values), Math.max(0, ...values)];
   const unit = most === least ? 0 : BARS_HIGH / (most - least);
   const zero = round(most * unit);

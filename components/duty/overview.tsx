@@ -1,45 +1,33 @@
 'use client';
-import { useRef, type PointerEvent } from 'react';
+import { useMemo } from 'react';
 import { addressOf, type DutyAddress } from './address';
 import { againstText } from './against';
-import { type Brush, drawn, type Handle, handleAt, moved, placeAt } from './brush';
+import type { Brush } from './brush';
 import { BrushEnds } from './brush-ends';
-import { BARS_HIGH, type OverviewTick } from './overview-layout';
+import { BARS_HIGH, barsPath, type OverviewTick } from './overview-layout';
 import { useBrushes } from './use-brushes';
+import { useDrawing } from './use-drawing';
 
 export interface OverviewProps {
   house: string;
   address: DutyAddress;
   /** Names, ascending. */
   nights: string[];
-  bars: { bars: string; zero: number };
-  ticks: OverviewTick[];
-  /** What the bars are as high as. */
+  /** What each night's bar is as high as, and what that is in words. */
+  heights: (number | null)[];
   of: string;
+  ticks: OverviewTick[];
   chosen: Brush | null;
   /** Nights of the same source that the chosen ones are compared with by a brush of their own. */
   other: Brush | null;
 }
 
-type Which = 'chosen' | 'other';
-/** How far beside an end a finger still takes it, px. */
-const REACH_PX = 14;
-/** Less is a slip, or a tap. */
-const LEAST_DRAG_PX = 5;
-
-interface Drag {
-  which: Which;
-  handle: Handle | null;
-  from: number;
-  x: number;
-  before: Brush | null;
-  moved: boolean;
-}
-
 /** All nights as bars, over which some are chosen: by drawing over them, or with the ends as sliders. */
 export function Overview(props: OverviewProps) {
-  const { house, address, nights, bars, ticks, of } = props;
+  const { house, address, nights, heights, ticks, of } = props;
   const count = nights.length;
+  // here and not on the server: the path of four hundred bars is four times as long as their heights, and would be sent twice
+  const bars = useMemo(() => barsPath(heights), [heights]);
   const { brushes, draft, commit } = useBrushes(props, (next) => {
     const change: Partial<DutyAddress> = { night: undefined };
     const { chosen, other } = next;
@@ -49,39 +37,7 @@ export function Overview(props: OverviewProps) {
     if (from !== undefined && to !== undefined) change.against = againstText({ kind: 'nights', from, to });
     return addressOf(house, address, change);
   });
-  const drag = useRef<Drag | null>(null);
-
-  const partOf = (event: PointerEvent<HTMLDivElement>) => {
-    const box = event.currentTarget.getBoundingClientRect();
-    return { part: (event.clientX - box.left) / box.width, reach: (REACH_PX / box.width) * count };
-  };
-  const onDown = (event: PointerEvent<HTMLDivElement>) => {
-    if (event.button !== 0) return;
-    const { part, reach } = partOf(event);
-    const [from, x] = [placeAt(part, count), event.clientX];
-    const taken = (['chosen', 'other'] as const).flatMap((which) => {
-      const handle = brushes[which] === null ? null : handleAt(brushes[which], part * count - 0.5, reach);
-      return handle === null ? [] : [{ which, handle }];
-    })[0] ?? { which: 'chosen' as const, handle: null };
-    drag.current = { ...taken, from, x, before: brushes[taken.which], moved: false };
-    event.currentTarget.setPointerCapture(event.pointerId);
-  };
-  const onMove = (event: PointerEvent<HTMLDivElement>) => {
-    const now = drag.current;
-    if (now === null || (!now.moved && Math.abs(event.clientX - now.x) < LEAST_DRAG_PX)) return;
-    now.moved = true;
-    const at = placeAt(partOf(event).part, count);
-    const next =
-      now.handle === null || now.before === null
-        ? drawn(now.from, at, count)
-        : moved(now.before, now.handle, at - now.from, count);
-    draft(now.which, next);
-  };
-  const onUp = () => {
-    if (drag.current?.moved === true) commit();
-    drag.current = null;
-  };
-
+  const pointer = useDrawing({ count, brushes, draft, commit });
   return (
     <div role="group" aria-label="Choose nights" className="not-on-paper">
       <p className="flex justify-between gap-4 pb-1 text-[0.85rem] text-soft">
@@ -90,10 +46,7 @@ export function Overview(props: OverviewProps) {
       </p>
       <div
         className="relative h-12 cursor-crosshair touch-pan-y select-none border-b border-line"
-        onPointerDown={onDown}
-        onPointerMove={onMove}
-        onPointerUp={onUp}
-        onPointerCancel={onUp}
+        {...pointer}
       >
         <svg
           aria-hidden="true"

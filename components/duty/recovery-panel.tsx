@@ -1,18 +1,8 @@
 import { Figures, Panel } from '@/components/ui/panel';
 import type { EntryEffect, RecoveryTrend, RecoveryWeek } from '@/lib/analysis/recovery';
 import type { Preferences } from '@/lib/units/preferences';
-import { count } from '@/lib/units/format';
-import { day } from '@/lib/units/time';
 import { nightDate } from '@/lib/wording/duty';
-import {
-  effectWords,
-  endsOf,
-  type Known,
-  levelWords,
-  tauWords,
-  trendWords,
-} from '@/lib/wording/duty-recovery';
-import { kindWord } from '@/lib/wording/heap';
+import { effectName, effectWords, endsOf, trendWords, weekRows } from '@/lib/wording/duty-recovery';
 import { RecoveryCurves } from './recovery-curves';
 import type { RestCurve } from './recovery-group';
 
@@ -69,9 +59,7 @@ export function RecoveryPanel({
           <ul className="border-t border-line">
             {recovery.effects.map((effect) => (
               <li key={`${effect.at} ${effect.kind}`} className="border-b border-faint py-1.5">
-                <span className="font-semibold">
-                  {kindWord(effect.kind)}, {day(effect.at, zone)}:
-                </span>{' '}
+                <span className="font-semibold">{effectName(effect, zone)}</span>{' '}
                 {effectWords(effect, preferences)}
               </li>
             ))}
@@ -80,16 +68,4 @@ export function RecoveryPanel({
       )}
     </Panel>
   );
-}
-
-function weekRows({ week, recovery }: Known, preferences: Preferences) {
-  const of = `week of ${nightDate(week)}`;
-  return [
-    { name: `Comes back to, ${of}`, value: levelWords(recovery.level, preferences) },
-    {
-      name: `Regains two thirds in, ${of}`,
-      value: tauWords(recovery.tau),
-      note: `from ${count(recovery.rests, 'rest')}`,
-    },
-  ];
 }

@@ -31,7 +31,7 @@ export function SourceWeeks({
         <Row key={source.slug}>
           <RowHead className="py-1.5! font-normal!">
             <Link
-              href={`/${house}/duty?source=${source.slug}&nights=7`}
+              href={`/${house}/duty?source=${source.slug}&nights=14${source.nights === null ? '' : `&from=${source.nights.from}&to=${source.nights.to}`}`}
               className="inline-flex min-h-6 items-center underline decoration-line underline-offset-4 hover:decoration-ink"
             >
               {source.name}

@@ -2,10 +2,9 @@
 import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useEffect, useMemo, useRef, useState, type KeyboardEvent, type PointerEvent } from 'react';
-import { decimal, share, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { nightLabel } from '@/lib/units/time';
 import { arrowStep, dayAt, type YearDay, yearLayout } from './year-layout';
+import { dayWords } from './year-words';
 
 const CELL_PX = 13;
 /** Cells' widths left of the weeks for their days' names, and right for the last month's. */
@@ -108,15 +107,4 @@ export function YearCalendar({
       </p>
     </>
   );
-}
-
-/** @example "26 Nov: ran 31 %, 5.2 kWh, lowest 2.6 °C, under the frost limit" */
-function dayWords(day: YearDay, preferences: Preferences): string {
-  return [
-    `${nightLabel(day.night)}: ran ${share(day.ran)}`,
-    ...(day.kWh === null ? [] : [`${decimal(day.kWh, 1)}\u00a0kWh`]),
-    ...(day.lowest === null ? [] : [`lowest ${temperature(day.lowest, preferences)}`]),
-    ...(day.isCold ? ['under the frost limit'] : []),
-    ...(day.isThin ? ['under 90\u00a0% of it was read'] : []),
-  ].join(', ');
 }

@@ -1,16 +1,17 @@
 /** A year of nights as a calendar: a column a week, a row a day of the week. Pure. */
 
+/** What is not known, or not so, is left out: it would be sent for every night of a year. */
 export interface YearDay {
   night: string;
   /** Share of the night that the source ran, 0 to 1. */
   ran: number;
-  kWh: number | null;
+  kWh?: number;
   /** °C */
-  lowest: number | null;
+  lowest?: number;
   /** Under the frost limit at some time. */
-  isCold: boolean;
+  isCold?: true;
   /** Under 90 % was read. */
-  isThin: boolean;
+  isThin?: true;
 }
 
 export interface YearCell {
@@ -63,7 +64,7 @@ export function yearLayout(days: readonly YearDay[]): YearLayout {
     frames: of((_, cell) => square(cell, CELL)),
     // the area says how long it ran, so the side is its root
     fills: of((day, cell) => (day.ran <= 0 ? '' : square(cell, CELL * Math.sqrt(day.ran / most)))),
-    cold: of((day, cell) => (day.isCold ? square(cell, CELL + 0.06) : '')),
+    cold: of((day, cell) => (day.isCold === true ? square(cell, CELL + 0.06) : '')),
     months: monthsOf(days, cells),
   };
 }

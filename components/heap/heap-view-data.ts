@@ -1,12 +1,6 @@
 /** What the page Heap book is given. */
-import type { CoreTrend } from '@/lib/analysis/core';
-import type { Findings } from '@/lib/analysis/heap-facts';
-import type { HeatRecord } from '@/lib/analysis/hygiene';
-import type { HeapMix } from '@/lib/analysis/material-book';
 import type { HeapJob } from '@/lib/schema/heap-job';
-import type { HeapEntry } from '@/lib/schema/heap-view';
-import type { Material } from '@/lib/schema/material';
-import type { ProbeSet } from '@/lib/schema/probe-set';
+import type { HeapRecord } from '@/lib/schema/heap-record';
 
 export interface HeapViewHouse {
   slug: string;
@@ -15,20 +9,12 @@ export interface HeapViewHouse {
   latitude: number;
 }
 
-export interface HeapOnPage {
+export interface HeapOnPage extends HeapRecord {
   slug: string;
   name: string;
   coreFloor: number | null;
-  hasCorePoint: boolean;
-  core: { value: number; at: number } | null;
-  trend: CoreTrend | null;
-  entries: HeapEntry[];
-  rounds: ProbeSet[];
-  curve: { at: number; value: number }[];
-  materials: Material[];
-  mix: HeapMix | null;
-  heat: HeatRecord | null;
-  findings: Findings;
+  /** What its core has to show before control draws on it; null where nothing is asked, or it has. */
+  notReady: { level: number; forS: number } | null;
   jobs: HeapJob[];
 }
 

@@ -14,6 +14,7 @@ import { HeatPanel } from './heat-panel';
 import type { HeapOnPage, HeapViewData, HeapViewHouse } from './heap-view-data';
 import { JobsPanel } from './jobs-panel';
 import { MixPanel } from './mix-panel';
+import { NotReady } from './not-ready';
 import { ProbeRounds } from './probe-rounds';
 
 export interface HeapViewProps {
@@ -68,6 +69,14 @@ function OneHeap({
             label: one.name,
             current: one.slug === heap.slug,
           }))}
+        />
+      )}
+      {heap.notReady === null ? null : (
+        <NotReady
+          house={slug}
+          heap={{ ...heap, notReady: heap.notReady }}
+          mayGive={allowed.includes('channel.hand')}
+          preferences={preferences}
         />
       )}
       <HeapActions {...{ house, data, heap, mayWrite, reader, preferences }} />

@@ -31,7 +31,7 @@ export function NightFigures({
   );
   const total = totalOf(nights);
   const { lowest } = total;
-  const under = nights.reduce((most, night) => Math.max(most, night.belowFrostLimitSeconds), 0);
+  const under = nights.reduce((most, night) => Math.max(most, night.belowFrostLimitSeconds ?? 0), 0);
   const rows = [
     ...drawn.flatMap((night) => [
       {

@@ -9,7 +9,7 @@ const WITHIN = /[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}/g;
 const KEPT = 26;
 const REMEMBERED = 20_000;
 /** Texts in which an id stands among other words. */
-const WITH_IDS = new Set(['alarm.key']);
+const WITH_IDS = new Set(['alarm.key', 'finding_dismissal.mark']);
 
 export class NewIds {
   private readonly made = new Map<string, string>();

@@ -101,7 +101,10 @@ function spansOf(late: readonly LateRow[]): PointSpan[] {
   return spans;
 }
 
-/** Nights of the points' houses that touch a span were made without what it holds by now: they are due. */
+/** A point may be believed for a day at most (lib/schema/point.ts): so far behind its noon a night's readings reach into it. */
+const REACH_MS = 86_400_000;
+
+/** Nights of the points' houses that a span's readings reach into were made without what it holds by now: they are due. */
 export async function markNights(db: Db, points: readonly number[], from: number, to: number): Promise<void> {
   if (points.length === 0) return;
   const numbers = sql.join(
@@ -113,5 +116,5 @@ export async function markNights(db: Db, points: readonly number[], from: number
       update ${table} kept set made_at = to_timestamp(0)
       from (select distinct holding_id, house_id from point where number in (${numbers})) own
       where kept.holding_id = own.holding_id and kept.house_id = own.house_id
-        and (kept.body->>'from')::float8 <= ${to} and (kept.body->>'ends')::float8 > ${from}`);
+        and (kept.body->>'from')::float8 <= ${to} and (kept.body->>'ends')::float8 > ${from - REACH_MS}`);
 }

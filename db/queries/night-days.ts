@@ -3,14 +3,15 @@ import { sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { SUMMARY_VERSION } from '@/lib/analysis/nights';
 
+/** What is not known, or not so, is left out: the page sends this for every night of a year. */
 export interface NightDay {
   night: string;
   ran: number;
-  kWh: number | null;
-  lowest: number | null;
+  kWh?: number;
+  lowest?: number;
   /** Under the frost limit at some time. */
-  isCold: boolean;
-  isThin: boolean;
+  isCold?: true;
+  isThin?: true;
 }
 
 /** Ascending, from the night of this name on. */
@@ -20,7 +21,7 @@ export async function readDays(holding: Holding, sourceId: string, from: string)
     ran: number;
     kwh: number | null;
     lowest: number | null;
-    below: number;
+    below: number | null;
     thin: boolean;
   }>(sql`
     select night::text as night, (body->>'dutyOfNight')::float8 as ran, (body#>>'{heat,kWh}')::float8 as kwh,
@@ -30,8 +31,11 @@ export async function readDays(holding: Holding, sourceId: string, from: string)
     where holding_id = ${holding.id} and source_id = ${sourceId} and night >= ${from}::date
       and (body->>'version')::int = ${SUMMARY_VERSION}
     order by night`);
-  return rows.map(({ night, ran, kwh: kWh, lowest, below, thin: isThin }) => ({
-    ...{ night, ran, kWh, lowest, isThin },
-    isCold: below > 0,
+  return rows.map(({ night, ran, kwh: kWh, lowest, below, thin }) => ({
+    ...{ night, ran },
+    ...(kWh === null ? {} : { kWh }),
+    ...(lowest === null ? {} : { lowest }),
+    ...((below ?? 0) > 0 ? { isCold: true } : {}),
+    ...(thin ? { isThin: true } : {}),
   }));
 }

@@ -4,9 +4,10 @@
  * which readings came late. So it does not matter how often, or after which end, somebody looks.
  */
 import { createHash } from 'node:crypto';
-import { and, eq, sql } from 'drizzle-orm';
+import { and, eq, isNull, sql } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { houseNight as houseNightTable, night as nightTable } from '@/db/schema/study';
+import { source } from '@/db/schema/channel';
 import { house } from '@/db/schema/house';
 import { houseNight } from '@/lib/analysis/house-night';
 import { type Night, nightOf, nightsBetween } from '@/lib/analysis/night';
@@ -73,6 +74,7 @@ export async function bringUp(holding: Holding, houseId: string, nowMs: number):
  * @returns how many nights were made
  */
 export async function refreshNights(holding: Holding, houseId: string, nowMs: number): Promise<number> {
+  await dropUnknown(holding, houseId);
   const made = await makeDue(holding, houseId, nowMs, null, (night, kept) =>
     kept === undefined ? true : kept.madeAt < Math.min(night.to, nowMs),
   );
@@ -91,21 +93,43 @@ export async function remakeNights(
   return makeDue(holding, houseId, nowMs, nights, () => true);
 }
 
-/** Whole nights of the last days that have more readings by now than they were made of. */
+/**
+ * Takes nights away that would not be made any more: those that ended before the first thing that is known of their source
+ * or house. A logger's file that is taken back leaves them, and nothing would ever look at them again.
+ */
+async function dropUnknown(holding: Holding, houseId: string): Promise<void> {
+  const sources = await firstKnown(holding, houseId);
+  const reading = (await firstReading(holding, houseId)) ?? Infinity;
+  const first = Math.min(reading, ...sources.values());
+  const endsBy = (at: number) => (at === Infinity ? sql`true` : sql`(body->>'ends')::float8 <= ${at}`);
+  const ofHouse = sql`holding_id = ${holding.id} and house_id = ${houseId}`;
+  await holding.db.execute(sql`delete from house_night where ${ofHouse} and ${endsBy(first)}`);
+  const inUse = await holding.db
+    .select({ id: source.id })
+    .from(source)
+    .where(and(eq(source.holdingId, holding.id), eq(source.houseId, houseId), isNull(source.removedAt)));
+  for (const { id } of inUse)
+    await holding.db.execute(
+      sql`delete from night where ${ofHouse} and source_id = ${id} and ${endsBy(sources.get(id) ?? Infinity)}`,
+    );
+}
+
+/** Nights of the last days that ended and have more readings by now than they were made of, or than were seen behind them. */
 async function nightsGrown(holding: Holding, houseId: string, nowMs: number): Promise<Night[]> {
   const yard = await yardOfNights(holding, houseId);
   if (yard === null) return [];
   const grown: Night[] = [];
   for (const night of nightsBetween(nowMs - LATE_MS, nowMs, yard.house.zone)) {
     if (night.to > nowMs) continue;
-    const { rows } = await holding.db.execute<{ readings: number | null }>(sql`
+    const { rows } = await holding.db.execute<{ seen: number | null }>(sql`
       select least(
-        (select min((body->>'readings')::int) from night
+        (select min((body->>'seen')::int) from night
           where holding_id = ${holding.id} and house_id = ${houseId} and night = ${night.night}),
-        (select (body->>'readings')::int from house_night
-          where holding_id = ${holding.id} and house_id = ${houseId} and night = ${night.night})) as readings`);
-    const kept = rows[0]?.readings;
-    if (typeof kept === 'number' && kept < (await countReadings(holding, yard, night))) grown.push(night);
+        (select (body->>'seen')::int from house_night
+          where holding_id = ${holding.id} and house_id = ${houseId} and night = ${night.night})) as seen`);
+    const kept = rows[0]?.seen;
+    if (typeof kept === 'number' && kept < (await countReadings(holding, yard, night, nowMs)))
+      grown.push(night);
   }
   return grown;
 }
@@ -209,7 +233,11 @@ async function make(
   };
   const rows = [...inputs.sources]
     .filter(([sourceId]) => sources.has(sourceId))
-    .map(([sourceId, input]) => ({ ...row, sourceId, body: { ...summarise(input), recipe } }));
+    .map(([sourceId, input]) => ({
+      ...row,
+      sourceId,
+      body: { ...summarise(input), recipe, seen: inputs.seen },
+    }));
   // two may make the same night at once: what saw more readings stays, of equals the later look
   const newer = (table: typeof nightTable | typeof houseNightTable) =>
     sql`coalesce((${table.body}->>'readings')::int, 0) < (excluded.body->>'readings')::int
@@ -227,7 +255,7 @@ async function make(
   }
   await holding.db
     .insert(houseNightTable)
-    .values({ ...row, body: { ...houseNight(inputs.house), recipe } })
+    .values({ ...row, body: { ...houseNight(inputs.house), recipe, seen: inputs.seen } })
     .onConflictDoUpdate({
       target: [houseNightTable.holdingId, houseNightTable.houseId, houseNightTable.night],
       set,

@@ -10,6 +10,7 @@ import { CALIBRATED_SD_K, classSd } from '@/lib/analysis/sensor-class';
 import type { HouseNightInput } from '@/lib/analysis/house-night';
 import type { Night } from '@/lib/analysis/night';
 import type { Series } from '@/lib/analysis/series';
+import { readingsOf } from '@/lib/analysis/summarise';
 import { recordsOf } from './channel-records';
 import type { Calibration } from './plan';
 import { correct } from './reading';
@@ -44,7 +45,7 @@ interface ChannelOfNights extends Omit<NightChannel, 'record'> {
 
 /** Twice a missed report still counts as read; the third makes the point silent, as control counts it. */
 const REPORTS_HELD = 3;
-/** Readings shortly before the noon hold into the night. */
+/** Readings so long before the noon hold into the night at least. */
 const LEAD_MS = 15 * 60_000;
 
 /** Parts of a house that nights are made of, those taken out of use included: what they did stays. Null: no such house. */
@@ -144,6 +145,8 @@ export interface InputsOfNight {
   house: HouseNightInput;
   /** By the source's id. */
   sources: Map<string, NightInput>;
+  /** Good readings that were looked at, those behind its second noon included: where more are kept by now, it is due. */
+  seen: number;
 }
 
 /** One night of a house and of every source of it, ready to be summed up. */
@@ -156,7 +159,10 @@ export async function nightInputs(
   const to = Math.min(night.to, nowMs);
   const channels = yard.channels.filter((one) => one.removedAt === null || one.removedAt > night.from);
   const records = await recordsOf(holding, yard.house.id, channels, night.from, to);
-  const points = await seriesOf(holding, yard, night.from - LEAD_MS, to);
+  const reach = reachOf(yard);
+  // the line over the second noon ends at the first reading behind it; whatever is summed up is cut at the night's end
+  const until = Math.min(night.to + reach, nowMs);
+  const points = await seriesOf(holding, yard, { from: night.from - reach, to, until });
   const recorded = channels.flatMap((one) => {
     const record = records.get(one.id);
     return record === undefined ? [] : [{ ...one, record }];
@@ -166,7 +172,13 @@ export async function nightInputs(
     const own = recorded.filter((one) => one.sourceId === id);
     return [id, { ...common, source, channels: own }] as const;
   });
-  return { house: { ...common, channels: recorded }, sources: new Map(sources) };
+  const seen = readingsOf(points, night.from, until);
+  return { house: { ...common, channels: recorded }, sources: new Map(sources), seen };
+}
+
+/** How far before and after a night its readings reach into it, ms: as long as any of its points is believed. */
+function reachOf(yard: YardOfNights): number {
+  return Math.max(LEAD_MS, ...pointsOfNights(yard).map((one) => one.holdS * 1000));
 }
 
 const ROLES_OF_EVERY_NIGHT = ['house-air', 'bench', 'outdoors', 'humidity'];
@@ -194,13 +206,19 @@ function calibratedBy({ calibrations }: PointOfNights, at: number): boolean {
   return inForce !== undefined && (inForce.offset !== 0 || inForce.gain !== 1);
 }
 
-/** How many good readings a whole night would be made of by now. */
-export async function countReadings(holding: Holding, yard: YardOfNights, night: Night): Promise<number> {
+/** How many good readings a night that has ended would look at by now. */
+export async function countReadings(
+  holding: Holding,
+  yard: YardOfNights,
+  night: Night,
+  nowMs: number,
+): Promise<number> {
   const points = pointsOfNights(yard);
   if (points.length === 0) return 0;
+  const until = Math.min(night.to + reachOf(yard), nowMs);
   const { rows } = await holding.db.execute<{ count: number }>(sql`
     select count(*)::int as count from reading
-    where point in (${numbersOf(points)}) and at >= ${new Date(night.from)} and at < ${new Date(night.to)}
+    where point in (${numbersOf(points)}) and at >= ${new Date(night.from)} and at < ${new Date(until)}
       and quality = 0`);
   return rows[0]?.count ?? 0;
 }
@@ -209,8 +227,7 @@ export async function countReadings(holding: Holding, yard: YardOfNights, night:
 async function seriesOf(
   holding: Holding,
   yard: YardOfNights,
-  from: number,
-  to: number,
+  { from, to, until }: { from: number; to: number; until: number },
 ): Promise<Map<string, Series>> {
   const wanted = pointsOfNights(yard);
   const series = new Map<number, { from: PointOfNights; line: Series }>(
@@ -223,7 +240,7 @@ async function seriesOf(
   if (wanted.length > 0) {
     const { rows } = await holding.db.execute<{ point: string; at: number; value: number }>(sql`
       select point, (extract(epoch from at) * 1000)::float8 as at, value from reading
-      where point in (${numbersOf(wanted)}) and at >= ${new Date(from)} and at < ${new Date(to)}
+      where point in (${numbersOf(wanted)}) and at >= ${new Date(from)} and at < ${new Date(until)}
         and quality = 0
       order by point, at`);
     for (const row of rows) {

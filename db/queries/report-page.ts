@@ -79,7 +79,7 @@ export async function readReport(
     // of a source that did nothing there is nothing more to say
     if (nights.length === 0) continue;
     if (has('nights')) blocks.push(nightsBlock(source, preferences));
-    if (has('recovery')) blocks.push(recoveryBlock(source, preferences));
+    if (has('recovery')) blocks.push(recoveryBlock(source, house.zone, preferences));
     if (has('money')) blocks.push(await moneyOf(holding, house, one, nowMs, Math.min(to - 1, nowMs)));
   }
   if (has('book'))

@@ -2,7 +2,8 @@
 import { type Heat, heatSum, loopHeat, NO_HEAT } from './heat';
 import type { ChannelNight, DrawHeat, HeatForPower, Missing, NightChannel, NightHeat } from './nights';
 import { round } from './rounding';
-import { running, type Running, runsOf } from './running';
+import { running, type Running } from './running';
+import { runsOf } from './runs';
 import type { Extent, Series } from './series';
 import { channelSpans, secondsOf, type Span, startsOf } from './spans';
 
@@ -13,6 +14,8 @@ export interface ChannelWork {
   draws: DrawHeat[];
   heat: (Heat & { assumed: boolean; ranS: number }) | { why: Missing };
   powerKWh: number | { why: Missing };
+  /** Of it, what the load took while its heat was known, standing included; nothing where the heat is not known. */
+  heatPowerKWh: number;
 }
 
 /** @returns a channel's night over [night.from, to); figures are cut to what they can bear */
@@ -29,7 +32,8 @@ export function channelNight(
   const passedS = (extent.to - extent.from) / 1000;
   const { runProof } = channel;
   const proof = runProof && { series: points.get(runProof.point), above: runProof.above };
-  const draws = runsOf(spans).map((run) => ({ run, running: running(run, proof) }));
+  const runs = runsOf(spans).map(({ from, to }) => ({ from, to }));
+  const draws = runs.map((run) => ({ run, running: running(run, proof) }));
   const loop = loopOf(channel, points);
   const heats = draws.map((draw) => drawHeat(draw.running, loop, altitudeM));
   const heat = heatOf(heats, draws, loop);
@@ -37,6 +41,7 @@ export function channelNight(
     channel.powerW === null
       ? { why: 'no-power' as const }
       : (channel.powerW * secondsOf(spans, (span) => span.on)) / 3_600_000;
+  const standingS = draws.reduce((sum, draw) => sum + draw.running.standingS, 0);
   const night: ChannelNight = {
     number: channel.number,
     label: channel.label,
@@ -47,7 +52,7 @@ export function channelNight(
     dutyOfNight: passedS === 0 ? 0 : round(onSeconds / passedS, 4),
     dutyOfDraw: onSeconds + restSeconds === 0 ? null : round(onSeconds / (onSeconds + restSeconds), 4),
     starts: startsOf(spans),
-    standingSeconds: Math.round(draws.reduce((sum, draw) => sum + draw.running.standingS, 0)),
+    standingSeconds: Math.round(standingS),
     heat: 'why' in heat ? null : shownHeat(heat, heat.assumed),
     electricity: typeof powerKWh === 'number' ? { kWh: round(powerKWh, 4) } : null,
   };
@@ -57,7 +62,21 @@ export function channelNight(
     draws: draws.map((draw, i) => shownDraw(channel.number, draw, heats[i] ?? null)),
     heat,
     powerKWh,
+    heatPowerKWh: 'why' in heat || typeof powerKWh !== 'number' ? 0 : powerKWh * knownShare(heat, standingS),
   };
+}
+
+/** Share of the time on in which the heat is known: read at both ends, or none because the load stood. */
+function knownShare({ measuredS, ranS }: { measuredS: number; ranS: number }, standingS: number): number {
+  const onS = ranS + standingS;
+  return onS === 0 ? 0 : Math.min(1, (measuredS + standingS) / onS);
+}
+
+/** Share of the run in which both ends of the loops were read; null where nothing ran. */
+export function measuredShare(heats: readonly { measuredS: number; ranS: number }[]): number | null {
+  const sum = (of: (one: (typeof heats)[number]) => number) => heats.reduce((all, one) => all + of(one), 0);
+  const ranS = sum((one) => one.ranS);
+  return ranS === 0 ? null : round(Math.min(1, sum((one) => one.measuredS) / ranS), 3);
 }
 
 interface Draw {
@@ -113,7 +132,10 @@ function shownDraw(channel: number, { run, running: load }: Draw, heat: Heat | n
   };
 }
 
-/** kWh of heat for 1 kWh of electricity; null where either is not known or hardly anything ran. */
+/**
+ * kWh of heat for 1 kWh of the electricity that was used while it was measured: a loop that was read for half of its run
+ * would else look half as good. Null where either is not known or hardly anything ran.
+ */
 export function heatForPower(
   heat: NightHeat | null,
   electricity: { kWh: number } | null,
@@ -123,4 +145,4 @@ export function heatForPower(
 }
 
 /** Under 1 Wh a ratio is a quotient of roundings. */
-const LEAST_POWER_KWH = 0.001;
+export const LEAST_POWER_KWH = 0.001;

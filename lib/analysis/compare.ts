@@ -2,35 +2,11 @@
  * Two sets of nights side by side, and of each figure whether it differs by more than chance. A set is nights of one source
  * or of a house; figures are of a night, so that sets of unlike length can be compared.
  */
+import { type ComparableNight, COMPARED, type FigureKey, figuresOf, lastingOf } from './compare-figures';
 import { meanOfNights, type NightsMean } from './mean-of-nights';
 import type { HouseNight, NightSummary } from './nights';
 import { classSd } from './sensor-class';
 import { t95 } from './student';
-
-export const COMPARED = [
-  'ran',
-  'heat',
-  'electricity',
-  'forPower',
-  'core',
-  'lowest',
-  'underLimit',
-  'lift',
-  'humid',
-  'outdoors',
-] as const;
-/**
- * Shares 0 to 1; kWh a night; kWh for 1 kWh; °C; hours a night under the frost limit; K that the house was warmer than
- * outdoors on the mean; hours a night over 90 %.
- */
-export type FigureKey = (typeof COMPARED)[number];
-
-export interface ComparableNight {
-  night: string;
-  values: Partial<Record<FigureKey, number>>;
-  /** Deviation of a figure that is the same every night, from probes and flow; left out: none is known. */
-  lasting: Partial<Record<FigureKey, number>>;
-}
 
 export interface ComparedMean extends NightsMean {
   /** Of the mean, with what sensors and flow may be wrong by. */
@@ -83,8 +59,11 @@ export function comparable(nights: readonly (NightSummary | HouseNight)[]): Set 
       lasting: {
         ...PROBES,
         ...(night.heat === null ? {} : { heat: night.heat.sd }),
-        ...(night.heatForPower === null ? {} : { forPower: night.heatForPower.sd }),
       },
+      forPower:
+        night.heat === null || night.heatElectricity === null
+          ? null
+          : { heat: night.heat.kWh, electricity: night.heatElectricity.kWh },
     })),
   };
 }
@@ -99,12 +78,11 @@ const PROBES = {
 } as const;
 
 function valuesOf(night: NightSummary | HouseNight): ComparableNight['values'] {
-  const { heat, electricity, heatForPower, lowest, liftDegreeHours, over90Hours, outdoorsLowest } = night;
+  const { heat, electricity, lowest, liftDegreeHours, over90Hours, outdoorsLowest } = night;
   const known: [FigureKey, number | null | undefined][] = [
     ['ran', 'dutyOfNight' in night ? night.dutyOfNight : null],
     ['heat', heat?.kWh],
     ['electricity', electricity?.kWh],
-    ['forPower', heatForPower?.ratio],
     ['core', 'coreAtDawn' in night ? night.coreAtDawn?.value : null],
     ['lowest', lowest?.value],
     ['underLimit', underLimitHours(night)],
@@ -116,8 +94,6 @@ function valuesOf(night: NightSummary | HouseNight): ComparableNight['values'] {
 }
 
 function underLimitHours(night: NightSummary | HouseNight): number | null {
-  if (night.lowest === null || ('source' in night && night.missing.belowFrostLimit !== undefined))
-    return null;
   return night.belowFrostLimitSeconds === null ? null : night.belowFrostLimitSeconds / 3600;
 }
 
@@ -158,14 +134,8 @@ function compareFigure(
 }
 
 function meanOf(key: FigureKey, nights: readonly ComparableNight[]): ComparedMean | null {
-  const mean = meanOfNights(nights.flatMap(({ values }) => values[key] ?? []));
+  const mean = meanOfNights(figuresOf(key, nights).map((one) => one.value));
   return mean === null ? null : { ...mean, sdWhole: Math.hypot(mean.sd, lastingOf(key, nights)) };
-}
-
-/** The sensors are as wrong in every night, so that the mean is as wrong as a night is on the mean. */
-function lastingOf(key: FigureKey, nights: readonly ComparableNight[]): number {
-  const known = nights.flatMap(({ values, lasting }) => (key in values ? [lasting[key] ?? 0] : []));
-  return known.length === 0 ? 0 : known.reduce((sum, one) => sum + one, 0) / known.length;
 }
 
 /** Welch: the two scatter each in its own way. */
@@ -181,11 +151,20 @@ function betweenPairs(
   chosen: readonly ComparableNight[],
   other: readonly ComparableNight[],
 ): NightsMean | null {
-  const theirs = new Map(other.map(({ night, values }) => [night, values[key]]));
+  // of the nights that both have: a ratio of sums is of the nights that are summed
+  const has = (nights: readonly ComparableNight[]) =>
+    new Set(figuresOf(key, nights).map(({ night }) => night));
+  const [mine, theirs] = [has(chosen), has(other)];
+  const both = (nights: readonly ComparableNight[]) =>
+    figuresOf(
+      key,
+      nights.filter(({ night }) => mine.has(night) && theirs.has(night)),
+    );
+  const facing = new Map(both(other).map(({ night, value }) => [night, value]));
   return meanOfNights(
-    chosen.flatMap(({ night, values }) => {
-      const [one, two] = [values[key], theirs.get(night)];
-      return one === undefined || two === undefined ? [] : [one - two];
+    both(chosen).flatMap(({ night, value }) => {
+      const two = facing.get(night);
+      return two === undefined ? [] : [value - two];
     }),
   );
 }

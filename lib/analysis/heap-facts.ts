@@ -17,6 +17,20 @@ export interface BookEntry {
   squeeze: Squeeze | null;
 }
 
+/**
+ * What was written of the heap that stands: from its last building on, all of it where no building is in the book. A heap
+ * that was built anew is another one, and what was done to the old one says nothing of it.
+ * @param entries newest first
+ */
+export function sinceBuilt<Entry extends { at: string; kind: string }>(
+  entries: readonly Entry[],
+): readonly Entry[] {
+  const built = entries.find((entry) => entry.kind === 'built');
+  if (built === undefined) return entries;
+  const from = Date.parse(built.at);
+  return entries.filter((entry) => Date.parse(entry.at) >= from);
+}
+
 export interface HeapFacts {
   now: number;
   core: { value: number; at: number } | null;

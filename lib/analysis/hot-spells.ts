@@ -1,8 +1,8 @@
 /** Unbroken times over a temperature, from what was measured. A silence of the probe ends one: it is no proof of heat. */
 
-/** What a probe read in one step of time. */
+/** What a probe read in one step of time; a single reading is a step as well, that begins and ends with it. */
 export interface HeatStep {
-  /** Epoch ms, and to where the step reaches. */
+  /** Epoch ms of its first and its last reading, or where it is known to lie among others, of its bounds. */
   from: number;
   to: number;
   /** °C */
@@ -24,7 +24,8 @@ const HOUR_MS = 3_600_000;
 export const SILENCE_MS = 15 * 60_000;
 
 /**
- * Spells in which every reading lay from `fromC` up to `toC`, both counted in.
+ * Spells in which every reading lay from `fromC` up to `toC`, both counted in. A spell goes from reading to reading: what was
+ * before its first and after its last is not known.
  * @param steps in order of time
  */
 export function spells(
@@ -33,12 +34,20 @@ export function spells(
   toC = Infinity,
   silenceMs = SILENCE_MS,
 ): Spell[] {
+  return spellsWhere(steps, (step) => step.least >= fromC && step.greatest <= toC, silenceMs);
+}
+
+function spellsWhere(
+  steps: readonly HeatStep[],
+  isIn: (step: HeatStep) => boolean,
+  silenceMs = SILENCE_MS,
+): Spell[] {
   const found: Spell[] = [];
   let open: Spell | null = null;
   for (const step of steps) {
-    const isIn = step.least >= fromC && step.greatest <= toC;
-    if (open !== null && (!isIn || step.from - open.to > silenceMs)) open = null;
-    if (!isIn) continue;
+    const counts = isIn(step);
+    if (open !== null && (!counts || step.from - open.to > silenceMs)) open = null;
+    if (!counts) continue;
     if (open === null) {
       open = { from: step.from, to: step.to, hours: 0, leastC: step.least };
       found.push(open);
@@ -57,32 +66,35 @@ export function longest(found: readonly Spell[]): Spell | null {
   );
 }
 
-/** Hours of all steps that lie wholly over `aboveC`; what was not read is not counted. */
+/** Hours of all spells over `aboveC`; what was not read is not counted. */
 export function hoursAbove(steps: readonly HeatStep[], aboveC: number): number {
-  return sumHours(steps.filter((step) => step.least > aboveC));
+  return sumHours(spellsWhere(steps, (step) => step.least > aboveC));
 }
 
-/** Hours of all steps at or over `fromC`. */
+/** Hours of all spells at or over `fromC`. */
 export function hoursFrom(steps: readonly HeatStep[], fromC: number): number {
-  return sumHours(steps.filter((step) => step.least >= fromC));
+  return sumHours(spells(steps, fromC));
 }
 
-function sumHours(steps: readonly HeatStep[]): number {
-  return steps.reduce((sum, step) => sum + (step.to - step.from) / HOUR_MS, 0);
+/** Hours from reading to reading, whatever was read: without the silences of the probe. */
+export function hoursRead(steps: readonly HeatStep[]): number {
+  return sumHours(spellsWhere(steps, () => true));
+}
+
+function sumHours(found: readonly Spell[]): number {
+  return found.reduce((sum, spell) => sum + spell.hours, 0);
 }
 
 /** The most hours over `aboveC` that any `windowH` hours within the steps hold. */
 export function mostHoursAbove(steps: readonly HeatStep[], aboveC: number, windowH: number): number {
-  const hot = steps.filter((step) => step.least > aboveC);
-  let [most, sum, first] = [0, 0, 0];
-  for (const step of hot) {
-    sum += (step.to - step.from) / HOUR_MS;
-    for (let oldest = hot[first]; oldest !== undefined && step.to - oldest.from > windowH * HOUR_MS;) {
-      sum -= (oldest.to - oldest.from) / HOUR_MS;
-      first += 1;
-      oldest = hot[first];
-    }
-    most = Math.max(most, sum);
-  }
-  return most;
+  const hot = spellsWhere(steps, (step) => step.least > aboveC);
+  const windowMs = windowH * HOUR_MS;
+  const within = (from: number) =>
+    hot.reduce(
+      (sum, one) => sum + Math.max(0, Math.min(one.to, from + windowMs) - Math.max(one.from, from)),
+      0,
+    );
+  // the fullest window begins with a spell or ends with one: moved from there, it gains no more than it loses
+  const most = hot.reduce((top, { from, to }) => Math.max(top, within(from), within(to - windowMs)), 0);
+  return most / HOUR_MS;
 }

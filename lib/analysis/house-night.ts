@@ -1,5 +1,5 @@
 /** A night of a whole house, with every channel of it: of one without any source as well. */
-import { channelNight, heatForPower, shownHeat } from './channel-night';
+import { channelNight, heatForPower, measuredShare, shownHeat } from './channel-night';
 import { climateOf } from './climate';
 import { type Heat, heatSum, NO_HEAT } from './heat';
 import { hoursBetween, type Night } from './night';
@@ -37,7 +37,7 @@ export function houseNight(input: HouseNightInput): HouseNight {
   const lowest = lowestOf(ofHouse, night.from, to);
   const coldest = lowestOf(of(['outdoors']), night.from, to);
   const under = (limit: number | null) =>
-    limit === null ? null : Math.round(secondsUnder(ofHouse, limit, night.from, to));
+    limit === null || lowest === null ? null : Math.round(secondsUnder(ofHouse, limit, night.from, to));
   const heats = work.flatMap(({ heat }) => ('why' in heat ? [] : [heat]));
   const powers = work.flatMap(({ powerKWh }) => (typeof powerKWh === 'number' ? [powerKWh] : []));
   const heat =
@@ -56,6 +56,12 @@ export function houseNight(input: HouseNightInput): HouseNight {
             4,
           ),
         };
+  const heatElectricity = heat === null ? null : warmingPower(work);
+  const heatMeasured = measuredShare(heats);
+  // a loop that ran and was hardly read has no heat at all: the sum is of the others
+  const isPart = work.some(
+    ({ heat: own, night: { onSeconds } }) => 'why' in own && own.why === 'no-readings' && onSeconds > 0,
+  );
   const { missing, ...climate } = climateOf(points, night.from, to);
   const coverage = round(meanCoverage(of(CLIMATE_ROLES), night.from, to), 4);
   return {
@@ -71,12 +77,14 @@ export function houseNight(input: HouseNightInput): HouseNight {
     belowFrostAlarmSeconds: under(house.frostAlarmC),
     outdoorsLowest: coldest && { value: round(coldest.value, 2), at: coldest.at },
     heat,
+    heatMeasured,
     electricity,
-    heatForPower: heatForPower(heat, warmingPower(work)),
+    heatElectricity,
+    heatForPower: heatForPower(heat, heatElectricity),
     channels: work.map((one) => one.night),
     ...climate,
     coverage,
-    coverageLow: coverage < LEAST_COVERAGE,
+    coverageLow: isPart || Math.min(coverage, heatMeasured ?? 1) < LEAST_COVERAGE,
     readings: readingsOf(points, night.from, to),
     missing: {
       ...missing,
@@ -87,15 +95,15 @@ export function houseNight(input: HouseNightInput): HouseNight {
   };
 }
 
-/** Electricity of the channels whose heat is known: a lamp's would make the loops look poor. */
+/** Electricity of the channels whose heat is known, while it was: a lamp's would make the loops look poor. */
 function warmingPower(work: readonly ReturnType<typeof channelNight>[]): { kWh: number } | null {
   let kWh = 0;
-  for (const { heat, powerKWh } of work) {
+  for (const { heat, powerKWh, heatPowerKWh } of work) {
     if ('why' in heat) continue;
     if (typeof powerKWh !== 'number') return null;
-    kWh += powerKWh;
+    kWh += heatPowerKWh;
   }
-  return { kWh };
+  return { kWh: round(kWh, 4) };
 }
 
 function meanCoverage(all: readonly Series[], fromMs: number, toMs: number): number {

@@ -11,6 +11,7 @@ import { celsius } from '@/lib/units/conversion';
 import {
   hoursAbove,
   hoursFrom,
+  hoursRead,
   longest,
   mostHoursAbove,
   spells,
@@ -24,6 +25,8 @@ export const WARM_C = 40;
 export const ORGANIC_FROM_C = celsius(131);
 export const ORGANIC_TO_C = celsius(170);
 export const ORGANIC_CN = { least: 25, most: 40 } as const;
+/** On which side of these a core lies decides what counts. */
+export const RULE_LINES = [WARM_C, HOT_C, ORGANIC_TO_C];
 const STILL_H = 72;
 const WINDROW_H = 360;
 const TURNINGS = 5;
@@ -92,7 +95,7 @@ export function heatRecord(steps: readonly HeatStep[], turnings: readonly number
   const hot = spells(steps, HOT_C);
   const organic = spells(steps, ORGANIC_FROM_C, ORGANIC_TO_C);
   const hottest = steps.reduce((top, step) => (step.greatest > top.greatest ? step : top), first);
-  const measuredHours = steps.reduce((sum, step) => sum + step.to - step.from, 0) / 3_600_000;
+  const measuredHours = hoursRead(steps);
   return {
     hoursFromHot: hoursFrom(steps, HOT_C),
     hoursOverTop: hoursAbove(steps, ORGANIC_TO_C),

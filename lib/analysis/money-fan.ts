@@ -2,7 +2,6 @@
 import type { PricedSpan, Tariff } from './money-tariff';
 import { pricedSpans } from './money-tariff';
 import type { NightSummary } from './nights';
-import { round } from './rounding';
 
 /** Electricity used at one price. */
 export interface PriceUse {
@@ -24,13 +23,13 @@ export interface FanCost {
 }
 
 /**
- * A night's electricity, to the watt-hour that its row shows, laid upon the hours in which its channels ran and counted at
+ * A night's electricity, as it is kept, laid upon the hours in which its channels ran and counted at
  * the price of each. So the cost follows from what the page shows and from the runs.
  * @param zone IANA, of the house
  */
 export function fanCostOfNight(night: NightOfFan, tariffs: readonly Tariff[], zone: string): FanCost {
   if (night.electricity === null) return { micros: null, missing: 'no-power', uses: [] };
-  const kWh = round(night.electricity.kWh, 3);
+  const { kWh } = night.electricity;
   if (kWh === 0) return { micros: 0, missing: null, uses: [] };
   const spans = pricedSpans(tariffs, zone, night.from, night.to);
   const uses = new Map<number, PriceUse>();

@@ -33,7 +33,8 @@ export function nightAnswer(summary: NightSummary, zone: string): NightAnswer {
     heat: summary.heat && { kWh: summary.heat.kWh, sd: summary.heat.sd },
     electricity: summary.electricity,
     lowest: lowest && { point: lowest.point, value: lowest.value, at: isoIn(lowest.at, zone) },
-    belowFrostLimitSeconds: summary.belowFrostLimitSeconds,
+    // a number by contract; that nothing is known of it shows in `lowest`, and in the limit of the house
+    belowFrostLimitSeconds: summary.belowFrostLimitSeconds ?? 0,
     recovery: recovery && {
       tau: recovery.tau,
       tauSd: recovery.tauSd,

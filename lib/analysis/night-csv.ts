@@ -37,6 +37,7 @@ const COLUMNS: [head: string, of: (night: NightSummary, time: (at: number) => st
   ['level_C', (night) => night.recovery?.level ?? null],
   ['level_sd_C', (night) => night.recovery?.levelSd ?? null],
   ['rests_fitted', (night) => night.recovery?.rests ?? null],
+  ['heat_electricity_kWh', (night) => night.heatElectricity?.kWh ?? null],
 ];
 
 /** Figures exactly as the interface tells them; what is not known is empty. Lines end in CR LF. */

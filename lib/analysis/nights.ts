@@ -9,9 +9,9 @@ import type { Series } from './series';
 import type { ChannelRecord, SpanKind } from './spans';
 
 /** How a summary is made; a summary of an older make is made anew. */
-export const SUMMARY_VERSION = 2;
+export const SUMMARY_VERSION = 3;
 
-/** Below this share of good readings a night says so; its sums are of what was read, and never scaled up. */
+/** Below this share of good readings, of the house's points or of a run of the loop, a night says so; its sums are of what was read, and never scaled up. */
 export const LEAST_COVERAGE = 0.9;
 
 export interface NightChannel {
@@ -148,9 +148,12 @@ export interface NightSummary extends NightClimate {
   /** Share of the run in which both ends of the loop were read. */
   heatMeasured: number | null;
   electricity: { kWh: number } | null;
+  /** Of it, what was used while the heat was measured: what `heatForPower` is reckoned with. */
+  heatElectricity: { kWh: number } | null;
   heatForPower: HeatForPower | null;
   lowest: { point: string; name: string; value: number; at: number } | null;
-  belowFrostLimitSeconds: number;
+  /** Null where the house has no such limit, or nothing was read. */
+  belowFrostLimitSeconds: number | null;
   outdoorsLowest: { value: number; at: number } | null;
   coreAtDawn: { value: number; at: number } | null;
   recovery: NightRecovery | null;
@@ -159,7 +162,7 @@ export interface NightSummary extends NightClimate {
   channels: ChannelNight[];
   /** Share of the time in which the points that matter here had good readings, 0 to 1. */
   coverage: number;
-  /** Under LEAST_COVERAGE. */
+  /** `coverage` or `heatMeasured` is under LEAST_COVERAGE. */
   coverageLow: boolean;
   /** Good readings that it was made of: where more are kept by now, it is due anew. */
   readings: number;
@@ -189,17 +192,21 @@ export interface HouseNight extends NightClimate {
   complete: boolean;
   hours: number;
   lowest: { point: string; name: string; value: number; at: number } | null;
-  /** Null where the house has no such limit. */
+  /** Null where the house has no such limit, or nothing was read. */
   belowFrostLimitSeconds: number | null;
   belowFrostAlarmSeconds: number | null;
   outdoorsLowest: { value: number; at: number } | null;
   /** Sums of the channels that are known; null where none is. */
   heat: NightHeat | null;
+  /** Share of the run in which both ends of the loops that are known were read. */
+  heatMeasured: number | null;
   electricity: { kWh: number } | null;
+  heatElectricity: { kWh: number } | null;
   heatForPower: HeatForPower | null;
   /** Every channel of the house, those that draw on nothing included. */
   channels: ChannelNight[];
   coverage: number;
+  /** `coverage` or `heatMeasured` is under LEAST_COVERAGE. */
   coverageLow: boolean;
   readings: number;
   missing: Partial<

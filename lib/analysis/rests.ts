@@ -7,7 +7,7 @@ import { LEAST_TAUS, pooledRecovery } from './recovery';
 import { type Drift, fitCurve, LEAST_READINGS } from './rest-curve';
 import type { RestFit, RestWhy } from './rest-fit';
 import { round } from './rounding';
-import { runsOf } from './running';
+import { runsOf } from './runs';
 import type { Extent, Reading, Series } from './series';
 import type { Span } from './spans';
 import { t95 } from './student';

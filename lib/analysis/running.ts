@@ -1,6 +1,5 @@
 /** When a load ran, and whether it is known or only supposed. */
 import type { Extent, Series } from './series';
-import type { Span } from './spans';
 
 /** s that a proof may need to follow its load: a fan comes up to speed, a clamp is read once a report. */
 const PROOF_LAG_S = 5;
@@ -11,18 +10,6 @@ export interface Running {
   standingS: number;
   /** Some of it was not proved: no proof, or one that was silent. */
   assumed: boolean;
-}
-
-/** Runs of a channel: neighbouring spans with the load on are one draw, whoever decided them. */
-export function runsOf(spans: readonly Span[]): Extent[] {
-  const runs: Extent[] = [];
-  for (const { on, from, to } of spans) {
-    if (!on) continue;
-    const last = runs.at(-1);
-    if (last?.to === from) last.to = to;
-    else runs.push({ from, to });
-  }
-  return runs;
 }
 
 /**

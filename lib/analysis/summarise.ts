@@ -1,5 +1,5 @@
 /** Sums a night of a source up from what was recorded: making it again gives the same. */
-import { channelNight, type ChannelWork, heatForPower, shownHeat } from './channel-night';
+import { channelNight, type ChannelWork, heatForPower, measuredShare, shownHeat } from './channel-night';
 import { climateOf } from './climate';
 import { dawnOf } from './dawn';
 import { type Heat, heatSum, NO_HEAT } from './heat';
@@ -45,6 +45,16 @@ export function summarise(input: NightInput): NightSummary {
   const shown = 'why' in heat ? null : shownHeat(heat, heat.assumed);
   const electricity = electricityOf(work);
   const power = 'why' in electricity ? null : { kWh: round(electricity.kWh, 4) };
+  const heatMeasured = 'why' in heat ? null : measuredShare([heat]);
+  const heatElectricity =
+    'why' in heat || power === null
+      ? null
+      : {
+          kWh: round(
+            work.reduce((all, one) => all + one.heatPowerKWh, 0),
+            4,
+          ),
+        };
   const core = source.core === null ? undefined : points.get(source.core);
   const dawn = dawnOf(night, house.zone, house.latitude, house.longitude);
   const atDawn = core === undefined || dawn > to ? null : nearest(core, dawn);
@@ -70,12 +80,15 @@ export function summarise(input: NightInput): NightSummary {
     dutyOfDraw: onSeconds + restSeconds === 0 ? null : round(onSeconds / (onSeconds + restSeconds), 4),
     starts: sum((one) => one.starts),
     heat: shown,
-    heatMeasured: 'why' in heat || heat.ranS === 0 ? null : round(Math.min(1, heat.measuredS / heat.ranS), 3),
+    heatMeasured,
     electricity: power,
-    heatForPower: heatForPower(shown, power),
+    heatElectricity,
+    heatForPower: heatForPower(shown, heatElectricity),
     lowest: lowest && { ...lowest, value: round(lowest.value, 2) },
     belowFrostLimitSeconds:
-      house.frostLimitC === null ? 0 : Math.round(secondsUnder(ofHouse, house.frostLimitC, night.from, to)),
+      house.frostLimitC === null || lowest === null
+        ? null
+        : Math.round(secondsUnder(ofHouse, house.frostLimitC, night.from, to)),
     outdoorsLowest: coldest && { value: round(coldest.value, 2), at: coldest.at },
     coreAtDawn: atDawn && { value: round(atDawn.value, 2), at: atDawn.at },
     recovery,
@@ -84,12 +97,13 @@ export function summarise(input: NightInput): NightSummary {
     channels,
     ...climate,
     coverage: covered,
-    coverageLow: covered < LEAST_COVERAGE,
+    coverageLow: Math.min(covered, heatMeasured ?? 1) < LEAST_COVERAGE,
     readings: readingsOf(points, night.from, to),
     missing: {
       ...('why' in heat ? { heat: heat.why } : {}),
       ...('why' in electricity ? { electricity: electricity.why } : {}),
       ...(lowest === null ? { lowest: 'no-readings' as const } : {}),
+      ...(lowest === null ? { belowFrostLimit: 'no-readings' as const } : {}),
       ...(house.frostLimitC === null ? { belowFrostLimit: 'no-limit' as const } : {}),
       ...climateMissing,
       ...(recovery === null ? { recovery: whyNotRecovered(rests, source.base) } : {}),

@@ -1,4 +1,6 @@
-/** Nights of one source taken together, so that what stands under a table is what its rows add up to. */
+/** Nights of one source taken together: sums of the nights as they are kept and exported, rounded once, where they are shown. */
+import { round } from './rounding';
+import { LEAST_POWER_KWH } from './channel-night';
 import type { NightSummary } from './nights';
 
 export interface NightTotals {
@@ -15,20 +17,22 @@ export interface NightTotals {
   /** Null where no night has a figure; `nights` says how many have. */
   heat: { kWh: number; sd: number; nights: number } | null;
   electricity: { kWh: number; nights: number } | null;
-  /** kWh of heat for 1 kWh of fan, over the nights that have both; null under 1 Wh of fan. */
+  /** kWh of heat for 1 kWh of fan while it was measured, over the nights that have both; null under 1 Wh of fan. */
   heatPerElectricity: { value: number; sd: number } | null;
   lowest: { value: number; at: number; night: string } | null;
   outdoorsLowest: { value: number; night: string } | null;
-  belowFrostLimitSeconds: number;
+  /** Over the nights of which it is known; null where it is of none. */
+  belowFrostLimitSeconds: number | null;
 }
 
-const tenth = (value: number) => Math.round(value * 10) / 10;
-const thousandth = (value: number) => Math.round(value * 1000) / 1000;
+/** A night's heat is kept to 1 Wh and its electricity to 0.1 Wh: so cut, a sum is free of what binary fractions add. */
+const HEAT_PLACES = 3;
+const ELECTRICITY_PLACES = 4;
 
 /**
- * Sums of nights. Heat is summed as rows show it, to 0.1 kWh, and fan power to 1 Wh: a reader who adds the column up gets
- * the total. That moves the sum of 35 nights by some 0.2 kWh, far inside its deviation; deviations add as they are, since
- * the same flow and the same sensors err the same way every night (see heat.ts).
+ * Sums of nights, to all the digits that nights are kept and exported with. A sum of rounded rows would be off by some
+ * 0.2 kWh over a season, and by another 0.2 in another choice of nights. Deviations add as they are, since the same flow and
+ * the same sensors err the same way every night (see heat.ts).
  */
 export function totalOf(nights: readonly NightSummary[]): NightTotals {
   const sum = (of: (night: NightSummary) => number) => nights.reduce((total, night) => total + of(night), 0);
@@ -55,27 +59,38 @@ export function totalOf(nights: readonly NightSummary[]): NightTotals {
       warmed.length === 0
         ? null
         : {
-            kWh: tenth(sum((night) => tenth(night.heat?.kWh ?? 0))),
-            sd: sum((night) => night.heat?.sd ?? 0),
+            kWh: round(
+              sum((night) => night.heat?.kWh ?? 0),
+              HEAT_PLACES,
+            ),
+            sd: round(
+              sum((night) => night.heat?.sd ?? 0),
+              HEAT_PLACES,
+            ),
             nights: warmed.length,
           },
     electricity:
       powered.length === 0
         ? null
         : {
-            kWh: thousandth(sum((night) => thousandth(night.electricity?.kWh ?? 0))),
+            kWh: round(
+              sum((night) => night.electricity?.kWh ?? 0),
+              ELECTRICITY_PLACES,
+            ),
             nights: powered.length,
           },
-    heatPerElectricity: heatPerElectricity(warmed.filter((night) => night.electricity !== null)),
+    heatPerElectricity: heatPerElectricity(warmed.filter((night) => night.heatElectricity !== null)),
     lowest: least(lows),
     outdoorsLowest: least(colds),
-    belowFrostLimitSeconds: sum((night) => night.belowFrostLimitSeconds),
+    belowFrostLimitSeconds: nights.every((night) => night.belowFrostLimitSeconds === null)
+      ? null
+      : sum((night) => night.belowFrostLimitSeconds ?? 0),
   };
 }
 
 function heatPerElectricity(nights: readonly NightSummary[]): { value: number; sd: number } | null {
-  const fan = nights.reduce((sum, night) => sum + (night.electricity?.kWh ?? 0), 0);
-  if (fan < 0.001) return null;
+  const fan = nights.reduce((sum, night) => sum + (night.heatElectricity?.kWh ?? 0), 0);
+  if (fan < LEAST_POWER_KWH) return null;
   const heat = nights.reduce((sum, night) => sum + (night.heat?.kWh ?? 0), 0);
   const sd = nights.reduce((sum, night) => sum + (night.heat?.sd ?? 0), 0);
   return { value: heat / fan, sd: sd / fan };

@@ -12,6 +12,7 @@ import type { HeapBookExport, ReadingsExport, SwitchingsExport } from '@/lib/sch
 import type { House } from '@/lib/schema/yard-view';
 import { csvLine, type CsvCell } from '@/lib/units/csv';
 import type { Answer } from './guard';
+import { runParts } from './runs-file';
 import { isoIn } from './wire';
 
 const DAY_MS = 86_400_000;
@@ -126,6 +127,17 @@ async function* switchingParts(
       .join('');
     if (rows.length < ROWS_A_PAGE) return;
   }
+}
+
+/** Until `to`, but no further than now: nobody knows yet what a load will have done. */
+export function runsFile(
+  holding: Holding,
+  house: House,
+  query: z.output<typeof SwitchingsExport>,
+  now: Date,
+): Answer {
+  const { from, to } = spanOf(query);
+  return csv(house, 'runs', runParts(holding.id, house, from, Math.min(to, now.getTime())));
 }
 
 /** Newest first, as the book is. */

@@ -74,7 +74,7 @@ export function restWords(reason: Reason<'rest'>, scene: Scene): string {
     case 'no-gain':
       return said(
         `The loop brought less than ${difference(reason.leastGainK ?? null, scene.preferences)} of warmth, so the draw was ended.`,
-        until !== null && `Rests till ${until}.`,
+        reason.recovery === undefined ? until !== null && `Rests till ${until}.` : restTill(reason, scene),
         sooner,
       );
     case 'not-worth-a-start':

@@ -1,5 +1,6 @@
 /** Two sets of nights side by side, in words: each figure, how it differs, and whether chance alone would do that. */
-import type { ComparedFigure, ComparedMean, Comparison, FigureKey } from '@/lib/analysis/compare';
+import type { ComparedFigure, ComparedMean, Comparison } from '@/lib/analysis/compare';
+import type { FigureKey } from '@/lib/analysis/compare-figures';
 import { decimal, difference, share, temperatureFigure, degrees, UNKNOWN } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { between, join, sentences } from './join';

@@ -58,7 +58,7 @@ export function nightFigures(
       ? null
       : {
           name: `Under ${temperature(frostLimitC, preferences)}`,
-          value: hours(totals.belowFrostLimitSeconds),
+          value: totals.belowFrostLimitSeconds === null ? UNKNOWN : hours(totals.belowFrostLimitSeconds),
         },
     outdoorsLowest === null
       ? null

@@ -6,9 +6,12 @@ import type {
   RecoveryTrend,
   RecoveryWeek,
 } from '@/lib/analysis/recovery';
-import { temperature, difference, temperatureFigure, decimal, degrees } from '@/lib/units/format';
+import { count, temperature, difference, temperatureFigure, decimal, degrees } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { duration } from '@/lib/units/time';
+import { day, duration } from '@/lib/units/time';
+import { nightDate } from './duty';
+import type { FigureRow } from './duty-figures';
+import { kindWord } from './heap';
 import { join } from './join';
 import type { Phrase } from './phrase';
 
@@ -43,6 +46,19 @@ export function endsOf(weeks: readonly RecoveryWeek[]): { first: Known; last: Kn
 }
 
 export type Known = RecoveryWeek & { recovery: PooledRecovery };
+
+/** One week's figures. */
+export function weekRows({ week, recovery }: Known, preferences: Preferences): FigureRow[] {
+  const of = `week of ${nightDate(week)}`;
+  return [
+    { name: `Comes back to, ${of}`, value: levelWords(recovery.level, preferences) },
+    {
+      name: `Regains two thirds in, ${of}`,
+      value: tauWords(recovery.tau),
+      note: `from ${count(recovery.rests, 'rest')}`,
+    },
+  ];
+}
 
 /** For the head of Duty: only a change that the trend's interval leaves no doubt of; else nothing. */
 export function recoverySentence(
@@ -91,6 +107,11 @@ function perWeek({ ratioPerWeek }: RecoveryTrend): string {
   // the nearer end first, whichever way it goes
   const inOrder = ratioPerWeek.value < 1 ? { ...ratioPerWeek, low: high, high: low } : ratioPerWeek;
   return `${part(ratioPerWeek.value)}${space}% (${interval(inOrder, part)})`;
+}
+
+/** @example 'Turned, 21 November:' */
+export function effectName({ kind, at }: EntryEffect, zone: string): string {
+  return `${kindWord(kind)}, ${day(at, zone)}:`;
 }
 
 /** What turning, feeding or watering did to it. @example 'two thirds in 0.8 times the time (0.7 to 0.9)' */

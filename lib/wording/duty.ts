@@ -99,18 +99,19 @@ function frostSentence({ totals, nights, frostLimitC }: DutyStanding, preference
   const { lowest } = totals;
   if (lowest === null) return ['No point of the house had a good reading.'];
   const place = nights.length === 1 ? '' : ` in the night of ${nightTitle(lowest.night)}`;
-  if (frostLimitC === null || totals.belowFrostLimitSeconds === 0) {
+  const underS = totals.belowFrostLimitSeconds ?? 0;
+  if (frostLimitC === null || underS === 0) {
     return join(
       'The house was lowest at ',
       { text: temperature(lowest.value, preferences), tone: 'house' },
       `${place}.`,
     );
   }
-  const under = nights.filter((night) => night.belowFrostLimitSeconds > 0).length;
+  const under = nights.filter((night) => (night.belowFrostLimitSeconds ?? 0) > 0).length;
   return join(
     'The house stood ',
     {
-      text: `under its frost limit of ${temperature(frostLimitC, preferences)} for ${duration(totals.belowFrostLimitSeconds)}`,
+      text: `under its frost limit of ${temperature(frostLimitC, preferences)} for ${duration(underS)}`,
       tone: 'alarm',
     },
     nights.length === 1 ? '' : ` in ${countWord(under)} of them`,

@@ -1,6 +1,7 @@
 /** How a heap stands, for the head of its book; and what was done to it, entry by entry. */
 import { DateTime } from 'luxon';
 import type { CoreTrend } from '@/lib/analysis/core';
+import { sinceBuilt } from '@/lib/analysis/heap-facts';
 import { decimal, difference, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { join, sentences } from './join';
@@ -54,14 +55,16 @@ export const HOT_CORE_C = 75;
  * well beyond its day-to-day wander. It was last turned on 12 November. Probe and squeeze it first; …"
  */
 export function heapSentence(standing: HeapStanding, preferences: Preferences): Phrase[] {
-  const { entries, name } = standing;
-  const own = midSentence(name);
+  // what was done to the heap that stood there before is in the book, and no more than that
+  const entries = sinceBuilt(standing.entries);
+  const ofThis = { ...standing, entries };
+  const own = midSentence(standing.name);
   const built = entries.find((entry) => entry.kind === 'built');
   return sentences(
-    builtSentence(standing, own, built),
+    builtSentence(ofThis, own, built),
     coreSentence(standing, built === undefined ? `The core of the ${own}` : 'Its core', preferences),
-    turnedSentence(standing),
-    adviceSentence(standing, preferences),
+    turnedSentence(ofThis),
+    adviceSentence(ofThis, preferences),
   );
 }
 

@@ -9,7 +9,7 @@ import type { Preferences } from '@/lib/units/preferences';
 import { dutySentence, nightDate } from './duty';
 import { type FigureRow, nightCells, nightFigures } from './duty-figures';
 import { nightNotes } from './duty-notes';
-import { recoverySentence } from './duty-recovery';
+import { effectName, effectWords, endsOf, recoverySentence, trendWords, weekRows } from './duty-recovery';
 import type { Phrase } from './phrase';
 
 export interface ReportBlock {
@@ -95,14 +95,23 @@ export function nightsBlock({ name, nights }: ReportSource, preferences: Prefere
 
 export function recoveryBlock(
   { name, recovery }: ReportSource,
+  zone: string,
   preferences: Preferences,
 ): ReportBlock | null {
   if (recovery === null) return null;
-  const sentence = recoverySentence(recovery.weeks, recovery.trend, preferences);
+  const { weeks, trend, effects } = recovery;
+  const block = { key: 'recovery', title: `How ${name} comes back` };
+  const last = endsOf(weeks)?.last;
+  if (last === undefined) return { ...block, sentence: ['Not known yet: no week has rests enough.'] };
+  const sentence = recoverySentence(weeks, trend, preferences);
   return {
-    key: 'recovery',
-    title: `How ${name} comes back`,
-    sentence: sentence.length === 0 ? ['Not known yet: no week has rests enough.'] : sentence,
+    ...block,
+    ...(sentence.length === 0 ? {} : { sentence }),
+    rows: weekRows(last, preferences),
+    notes: [
+      trendWords(trend),
+      ...effects.map((effect) => `${effectName(effect, zone)} ${effectWords(effect, preferences)}.`),
+    ],
   };
 }
 

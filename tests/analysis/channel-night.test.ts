@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { houseNight } from '@/lib/analysis/house-night';
 import { summarise } from '@/lib/analysis/summarise';
 import { after, minute, night, scene, series } from './scene';
 
@@ -105,6 +106,37 @@ it('a kilowatt hour of fan stands against its heat, with the same share of uncer
     (heat?.sd ?? 0) / (heat?.kWh ?? 1),
     3,
   );
+});
+
+describe('a run that was read in part', () => {
+  const input = scene();
+  // of 80 min of run, the return was read in the first 56
+  const points = new Map(input.points).set(
+    'loop-return',
+    series('loop-return', 'loop-return', (m) => (m <= 696 || m > 720 ? 15 : null)),
+  );
+  const part = summarise({ ...input, points });
+
+  it('is marked, though the house was read nearly throughout', () => {
+    expect(part.coverage).toBeGreaterThan(0.99);
+    expect([part.heatMeasured, part.coverageLow]).toEqual([0.7, true]);
+    const house = houseNight({ ...input, points, house: { ...input.house, frostAlarmC: null } });
+    expect([house.heatMeasured, house.coverageLow]).toEqual([0.7, true]);
+  });
+
+  it('has its heat stand against the electricity of what was read, not of all of the run', () => {
+    expect(part.electricity?.kWh).toBe(0.016);
+    expect(part.heatElectricity?.kWh).toBe(0.0112);
+    expect(part.heatForPower?.ratio).toBeCloseTo(unproved.heatForPower?.ratio ?? NaN, 0);
+    const house = houseNight({ ...input, points, house: { ...input.house, frostAlarmC: null } });
+    expect(house.heatForPower).toEqual(part.heatForPower);
+  });
+
+  it('counts the electricity of a fan that stands: of that the heat is known', () => {
+    const stuck = summarise(proved((m) => draws(m) && m < 690));
+    expect(stuck.heatElectricity).toEqual(stuck.electricity);
+    expect(stuck.coverageLow).toBe(false);
+  });
 });
 
 describe('a night that was read in part', () => {

@@ -1,8 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { comparable, compareNights, type FigureKey } from '@/lib/analysis/compare';
+import { comparable, compareNights } from '@/lib/analysis/compare';
+import type { FigureKey } from '@/lib/analysis/compare-figures';
 import { meanOfNights } from '@/lib/analysis/mean-of-nights';
 import { nightBefore } from '@/lib/analysis/night';
 import type { NightSummary } from '@/lib/analysis/nights';
+import { totalOf } from '@/lib/analysis/totals';
 import { t95 } from '@/lib/analysis/student';
 import { summarise } from '@/lib/analysis/summarise';
 import { type Chance, chance } from './chance';
@@ -147,6 +149,32 @@ describe('nights side by side', () => {
     const b = comparable(nightsWith([4.1, 3.9, 4, 4.2], (value) => low(value)));
     expect(figure(compareNights(a, b, 'houses'), 'lowest').isBeyondChance).toBe(false);
     expect(figure(compareNights(a, b, 'ranges'), 'lowest').other?.sdWhole).toBeGreaterThan(0.28);
+  });
+
+  it('tell heat for a unit of power as Duty does: one ratio of sums, whatever a short night may show', () => {
+    const nights = nightsWith([1, 9, 12, 8, 0], (kWh, place) => ({
+      ...heat(kWh, kWh / 10),
+      heatElectricity: { kWh: [0.005, 0.2, 0.24, 0.16, 0][place] ?? 0 },
+    }));
+    const told = totalOf(nights).heatPerElectricity;
+    const { chosen } = figure(compareNights(comparable(nights), comparable(nights), 'houses'), 'forPower');
+    expect(told?.value).toBeCloseTo(30 / 0.605, 9);
+    expect(chosen?.mean).toBeCloseTo(told?.value ?? NaN, 9);
+    expect(Math.sqrt((chosen?.sdWhole ?? 0) ** 2 - (chosen?.sd ?? 0) ** 2)).toBeCloseTo(told?.sd ?? NaN, 9);
+  });
+
+  it('keep the true heat for a unit of power in 19 of 20 intervals', () => {
+    const random = chance(12);
+    let kept = 0;
+    for (let run = 0; run < 400; run += 1) {
+      const nights = nightsWith(spells(random, 20, 0.3), (value) => {
+        const kWh = 0.15 + 0.04 * Math.tanh(value);
+        return { ...heat(40 * kWh + 0.6 * random.normal(), 0), heatElectricity: { kWh } };
+      });
+      const { chosen } = figure(compareNights(comparable(nights), comparable(nights), 'ranges'), 'forPower');
+      if (chosen !== null && Math.abs(chosen.mean - 40) <= t95(chosen.degrees) * chosen.sd) kept += 1;
+    }
+    expect(kept).toBeGreaterThan(0.93 * 400);
   });
 
   it('say nothing of a difference where a figure is not known of one of them', () => {

@@ -25,9 +25,11 @@ describe('nights as comma-separated values', () => {
   });
 
   it('leave empty what is not known, never zero', () => {
-    expect(table(nightsCsv([{ ...night, heat: null, coreAtDawn: null }], 'UTC'))).toMatchObject({
+    const unknown = { ...night, heat: null, coreAtDawn: null, belowFrostLimitSeconds: null };
+    expect(table(nightsCsv([unknown], 'UTC'))).toMatchObject({
       heat_kWh: '',
       core_at_dawn_C: '',
+      below_frost_limit_s: '',
     });
   });
 

@@ -30,6 +30,16 @@ describe('a night of a source', () => {
     expect(summarise({ ...cold, points: two }).belowFrostLimitSeconds).toBe(603 * 60);
   });
 
+  it('knows no time under the limit without a limit, or without a reading, and says why', () => {
+    const input = scene();
+    const none = summarise({ ...input, house: { ...input.house, frostLimitC: null } });
+    const unread = summarise(scene({ points: new Map() }));
+    expect([none.belowFrostLimitSeconds, none.missing.belowFrostLimit]).toEqual([null, 'no-limit']);
+    expect([unread.belowFrostLimitSeconds, unread.missing.belowFrostLimit]).toEqual([null, 'no-readings']);
+    // by contract a number, with no `lowest` beside it
+    expect(nightAnswer(unread, 'UTC')).toMatchObject({ belowFrostLimitSeconds: 0, lowest: null });
+  });
+
   it('reckons a fan of 12 W over a whole day as 0.288 kWh', () => {
     const input = scene();
     const [fan] = input.channels;

@@ -7,10 +7,10 @@ export const night = nightNamed('2026-11-26', 'Europe/London');
 /** Epoch ms of so many minutes after the night's first noon. */
 export const after = (minutes: number) => night.from + minutes * minute;
 
-/** Readings once a minute over the night and ten minutes before it. */
+/** Readings once a minute over the night, ten minutes before it and ten after: what is loaded of a night that ended. */
 export function series(key: string, role: string, value: (minutes: number) => number | null): Series {
   const good: Series['good'] = [];
-  for (let m = -10; m < (night.to - night.from) / minute; m += 1) {
+  for (let m = -10; m < (night.to - night.from) / minute + 10; m += 1) {
     const v = value(m);
     if (v !== null) good.push({ at: after(m), value: v });
   }

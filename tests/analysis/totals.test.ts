@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { NightSummary } from '@/lib/analysis/nights';
 import { summarise } from '@/lib/analysis/summarise';
 import { totalOf } from '@/lib/analysis/totals';
+import { decimal } from '@/lib/units/format';
 import { scene } from './scene';
 
 const one = summarise(scene());
@@ -11,9 +12,24 @@ const withHeat = (kWh: number, sd: number): NightSummary => ({
 });
 
 describe('nights taken together', () => {
-  it('add up to what a reader gets from the rows at a tenth of a kilowatt hour', () => {
-    const nights = [withHeat(1.14, 0.1), withHeat(1.14, 0.1), withHeat(1.14, 0.1)];
-    expect(totalOf(nights).heat?.kWh).toBe(3.3);
+  it('are sums of what is kept and exported, to its last digit, and not of rounded rows', () => {
+    const nights = [withHeat(1.14, 0.1), withHeat(1.14, 0.1), withHeat(1.141, 0.101)];
+    // each shows as 1.1; an outside script that adds the exported column up gets this, and shows 3.4
+    expect(totalOf(nights).heat).toEqual({ kWh: 3.421, sd: 0.301, nights: 3 });
+    const fan = [0.0894, 0.0894, 0.0894].map((kWh) => ({ ...one, electricity: { kWh } }));
+    expect(totalOf(fan).electricity?.kWh).toBe(0.2682);
+  });
+
+  it('show a half of a tenth below nothing as its row does', () => {
+    const shown = (kWh: number) => decimal(totalOf([withHeat(kWh, 0.1)]).heat?.kWh ?? NaN, 1);
+    expect(shown(-0.25)).toBe(decimal(-0.25, 1));
+    expect(shown(0.25)).toBe(decimal(0.25, 1));
+  });
+
+  it('tell time under the limit of the nights of which it is known, and none where it is of none', () => {
+    const unread: NightSummary = { ...one, belowFrostLimitSeconds: null };
+    expect(totalOf([unread, { ...one, belowFrostLimitSeconds: 60 }]).belowFrostLimitSeconds).toBe(60);
+    expect(totalOf([unread, unread]).belowFrostLimitSeconds).toBeNull();
   });
 
   it('keep the deviation of a wrong flow, which does not average out', () => {
@@ -31,13 +47,15 @@ describe('nights taken together', () => {
   });
 
   it('compare heat with the fan only over nights that have both', () => {
-    const powered: NightSummary = { ...withHeat(4, 0.4), electricity: { kWh: 0.1 } };
-    const unknown: NightSummary = { ...withHeat(4, 0.4), electricity: null };
+    const powered: NightSummary = { ...withHeat(4, 0.4), heatElectricity: { kWh: 0.1 } };
+    const unknown: NightSummary = { ...withHeat(4, 0.4), heatElectricity: null };
     expect(totalOf([powered, unknown]).heatPerElectricity).toEqual({ value: 40, sd: 4 });
   });
 
   it('claim no heat for a fan that hardly ran', () => {
-    expect(totalOf([{ ...withHeat(0.1, 0.1), electricity: { kWh: 0.0004 } }]).heatPerElectricity).toBeNull();
+    expect(
+      totalOf([{ ...withHeat(0.1, 0.1), heatElectricity: { kWh: 0.0004 } }]).heatPerElectricity,
+    ).toBeNull();
   });
 
   it('are empty, not wrong, without any night', () => {

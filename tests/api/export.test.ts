@@ -51,6 +51,23 @@ it('switchings have their head where none was made', async () => {
   expect(told.text).toBe('at,channel,from,to,claim,command,rule_version\r\n');
 });
 
+it('what loads did has a line a span, with what is reckoned from it', async () => {
+  const told = await owner.get(`${at}/export/runs?from=2026-10-24T00:00:00Z&to=2026-10-24T01:00:00Z`);
+  expect(told.text.split('\r\n').slice(0, 2)).toEqual([
+    'channel,key,from,to,seconds,load,kind,claim,power_W,flow_L_per_s,intake,return,altitude_m',
+    '1,gate-heap-fan,2026-10-24T01:00:00.000+01:00,2026-10-24T02:00:00.000+01:00,3600,off,off,,12,42.5,loop-intake,loop-return,310',
+  ]);
+});
+
+it('what loads did ends now, whatever is asked for', async () => {
+  const [from, to] = [Date.now() - 3_600_000, Date.now() + 86_400_000];
+  const told = await owner.get(
+    `${at}/export/runs?from=${new Date(from).toISOString()}&to=${new Date(to).toISOString()}`,
+  );
+  const [, row = ''] = told.text.split('\r\n');
+  expect(Number(row.split(',')[4])).toBeLessThan(3_700);
+});
+
 it.each([
   ['points=nobody&from=2026-10-24T00:00:00Z&to=2026-10-27T00:00:00Z', 'points'],
   ['points=bench-1&from=2026-10-28T00:00:00Z&to=2026-10-27T00:00:00Z', 'from'],

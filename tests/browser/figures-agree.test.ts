@@ -121,12 +121,18 @@ describe.each(SOURCES)('The nights of %s, %s', (house, source) => {
       expect(together['Rested']).toBe(plain(long(add(nights, (night) => night.restSeconds))));
       const warm = nights.flatMap(({ heat }) => (heat === null ? [] : [heat]));
       if (warm.length > 0) {
-        // as the rows show it: who adds the column up gets the total
-        const kWh = warm.reduce((sum, heat) => sum + fixed(heat.kWh, 1), 0);
+        // as the file has it: who adds its column up and rounds once gets the total
+        const kWh = fixed(
+          warm.reduce((sum, heat) => sum + heat.kWh, 0),
+          3,
+        );
         const sd = warm.reduce((sum, heat) => sum + heat.sd, 0);
         expect(together['Heat']).toBe(plain(energy(kWh, 1, sd)));
       }
-      const electricity = add(nights, (night) => fixed(night.electricity?.kWh ?? 0, 3));
+      const electricity = fixed(
+        add(nights, (night) => night.electricity?.kWh ?? 0),
+        4,
+      );
       expect(together['Electricity']).toBe(plain(energy(electricity, 3)));
       const least = Math.min(...nights.map((night) => night.lowest?.value ?? Infinity));
       expect(together['Lowest in the house']).toContain(`${plain(temperature(least, USUAL))}, `);

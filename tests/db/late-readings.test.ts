@@ -93,6 +93,60 @@ describe('readings that come three weeks late', () => {
   });
 });
 
+describe('a file of readings from before everything else', () => {
+  const old = nightNamed('2025-12-20', 'Europe/London');
+  const kept = async (table: 'night' | 'house_night') => {
+    const found = await holding.db.execute<{ night: string }>(
+      sql.raw(
+        `select distinct night::text as night from ${table} where house_id = '${house.houseId}' order by 1`,
+      ),
+    );
+    return found.rows.map((row) => row.night);
+  };
+  const core = async () => {
+    const all = await holding.db.select().from(point).where(eq(point.houseId, house.houseId));
+    return all.find(({ key }) => key === 'gate-core')?.number ?? 0;
+  };
+
+  it('leaves no night behind when it is taken back, of the house or of a source', async () => {
+    const before = { night: await kept('night'), house: await kept('house_night') };
+    const brought = [...rows(await core(), 50, old.from + hour, 60), ...rows(bench, 4, old.from + hour, 60)];
+    await arrive(brought);
+    await makeLate(everyPool(), everyHolding());
+    await refreshNights(holding, house.houseId, now);
+    expect((await kept('night'))[0]).toBe(old.night);
+    expect((await kept('house_night'))[0]).toBe(old.night);
+
+    await holding.db.execute(sql`delete from reading where at < ${new Date(old.to)}`);
+    await noteLate(everyPool(), brought, Infinity);
+    await makeLate(everyPool(), everyHolding());
+    await refreshNights(holding, house.houseId, now);
+    expect({ night: await kept('night'), house: await kept('house_night') }).toEqual(before);
+  });
+
+  it('of which nothing is left leaves no night at all', async () => {
+    const { rows: gone } = await holding.db.execute<{
+      point: string;
+      at: Date;
+      value: number;
+      quality: number;
+    }>(sql`delete from reading returning point, at, value, quality`);
+    await refreshNights(holding, house.houseId, now);
+    expect([await kept('night'), await kept('house_night')]).toEqual([[], []]);
+    await storeReadings(
+      everyPool(),
+      gone.map((row) => ({
+        point: Number(row.point),
+        at: +new Date(row.at),
+        value: row.value,
+        quality: 0 as const,
+      })),
+    );
+    await refreshNights(holding, house.houseId, now);
+    expect((await kept('house_night'))[0]).toBe(first.night);
+  });
+});
+
 it('a flow that is corrected makes the nights anew by which it was reckoned', async () => {
   const [fan] = await holding.db
     .select()

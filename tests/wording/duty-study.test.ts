@@ -136,8 +136,17 @@ describe('the notes under nights', () => {
   const assumed = { ...night, heat: { kWh: 2, sd: 0.3, assumedRunning: true } };
   const seen = { ...night, heat: { kWh: 2, sd: 0.3, assumedRunning: false } };
 
-  it('say nothing where every night was read and every run was seen', () =>
-    expect(nightNotes([seen, seen])).toEqual([]));
+  it('say nothing of a night that was read and whose run was seen', () =>
+    expect(nightNotes([seen])).toEqual([]));
+
+  it('say of several that their sum is rounded once', () =>
+    expect(nightNotes([seen, seen])).toEqual([expect.stringContaining('rounded once')]));
+
+  it('say where the loop was hardly read while it ran, though the house was', () => {
+    const part = { ...seen, coverageLow: true, coverage: 0.98, heatMeasured: 0.62 };
+    expect(plain(nightNotes([part])[0] ?? '')).toContain('Only 62 % of the run was read at both ends');
+    expect(plain(nightNotes([part, seen])[0] ?? '')).toContain('In one night under 90 % of the run was read');
+  });
 
   it('say of how many nights too little was read, and of one how much', () => {
     const thin = { ...seen, coverageLow: true, coverage: 0.71 };

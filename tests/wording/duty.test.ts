@@ -24,13 +24,14 @@ const said = (nights: NightSummary[], preferences = USUAL, frostLimitC: number |
   ).replaceAll('\u00a0', ' ');
 
 describe('the sentence over Duty', () => {
-  it('tells run, heat and fan power as the table under it sums them', () => {
+  it('tells run, heat and fan power as the table under it sums them, rounded once', () => {
     const nights = many(10, () => ({
       heat: { kWh: 4.04, sd: 0.5, assumedRunning: false },
       electricity: { kWh: 0.04 },
+      heatElectricity: { kWh: 0.04 },
     }));
     expect(said(nights)).toContain(
-      'Over 10 nights the gate heap ran 6 % of the time and moved 40.0 ± 5.0 kWh of heat on 0.400 kWh of fan power: 101 kWh of heat for 1 kWh of fan.',
+      'Over 10 nights the gate heap ran 6 % of the time and moved 40.4 ± 5.0 kWh of heat on 0.400 kWh of fan power: 101 kWh of heat for 1 kWh of fan.',
     );
   });
 

@@ -37,10 +37,10 @@ const say = (change: Partial<BalanceAsk>, currency: string | null = 'EUR') =>
   ).replaceAll('\u00a0', ' ');
 
 it('the sentence tells what was worked out on paper', () => {
-  // 10 nights of 4.0 kWh as shown; half of 40.00 and 1.200 kWh of fan at 0.30: 20.36 over 40 kWh, 12.5 % of deviation
+  // 10 nights of 4.04 kWh; half of 40.00 and 1.200 kWh of fan at 0.30: 20.36 over 40.4 kWh, 5.0 of deviation
   expect(say({})).toBe(
-    'In the season 2026/27 a kWh of heat from the gate heap has cost 0.509 ± 0.068 EUR/kWh, all in. ' +
-      'Its fan used 1.200 kWh for 0.36 EUR, for 40.0 ± 5.0 kWh of heat. ' +
+    'In the season 2026/27 a kWh of heat from the gate heap has cost 0.504 ± 0.067 EUR/kWh, all in. ' +
+      'Its fan used 1.200 kWh for 0.36 EUR, for 40.4 ± 5.0 kWh of heat. ' +
       'A kWh of heat costs 0.140 EUR/kWh from propane and 0.300 EUR/kWh from electricity.',
   );
 });
@@ -58,6 +58,6 @@ it('what is not known is said to be not known, with its reason', () => {
 });
 it('the same heat bears the deviation of the heat', () => {
   const [propane] = balanceOf(ask).alternatives;
-  expect(propane?.same?.micros).toBeCloseTo((3_000_000 / (26.82 * 0.8)) * 40, 3);
-  expect((propane?.same?.sd ?? 0) / (propane?.same?.micros ?? 1)).toBeCloseTo(0.125, 9);
+  expect(propane?.same?.micros).toBeCloseTo((3_000_000 / (26.82 * 0.8)) * 40.4, 3);
+  expect((propane?.same?.sd ?? 0) / (propane?.same?.micros ?? 1)).toBeCloseTo(5 / 40.4, 9);
 });

@@ -10,6 +10,11 @@ import { loadState, type Trip } from './node-relays';
 
 /** An epoch this far above ours is a fault of the node, not a restored backup. */
 const EPOCH_TRUST = 1000;
+/**
+ * A report that says what the one before said decides nothing: it goes along with the step of the next pack. This long
+ * after it (app time) it is told by itself, long before the core takes the one that it knows for stale.
+ */
+const TELL_WITHIN_MS = 6000;
 
 export class NodeReports {
   constructor(
@@ -19,7 +24,7 @@ export class NodeReports {
 
   /** What each coil really is. Its answer is a command. */
   takeRelays(node: AttachedNode, link: CommandLink, frame: RelaysFrame, at: number): void {
-    const { changed, trip } = node.relays.take(link.boot, frame, at, link.canFallback);
+    const { changed, trip, isNews } = node.relays.take(link.boot, frame, at, link.canFallback);
     const report = node.relays.lastReport;
     const turned = new Set([...changed, ...(trip?.dropped ?? [])].map(({ relay }) => relay));
     const alone = node.fallback.takeReport(frame.channels, report?.isAlone === true, at, turned);
@@ -29,7 +34,8 @@ export class NodeReports {
     }
     if (trip !== null) this.noteTrip(node, trip, at);
     const before = node.relays.current?.number;
-    this.house.step();
+    if (isNews || alone.length > 0) this.house.step();
+    else this.house.stepWithin(TELL_WITHIN_MS / this.deps.clock.rate);
     this.compareNumbers(node, frame.number);
     if (trip !== null && node.relays.current?.number === before) {
       node.relays.renumber(this.deps.epoch());
