@@ -1,8 +1,9 @@
 import { Figures, Panel } from '@/components/ui/panel';
+import { WATCH_C } from '@/lib/analysis/heap-findings';
 import { shrinkage } from '@/lib/analysis/heap-volume';
 import { decimal, share, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { HOT_CORE_C, longDay } from '@/lib/wording/heap';
+import { longDay } from '@/lib/wording/heap';
 import type { HeapOnPage } from './heap-view-data';
 
 /** The heap so far: hottest, how it sinks, what was done how often. */
@@ -37,7 +38,7 @@ export function HeapFigures({
                 {
                   name: 'Hottest hour of the core',
                   value: `${temperature(hottest.value, preferences)}, ${longDay(hottest.at, zone)}`,
-                  ...(hottest.value >= HOT_CORE_C ? { note: 'too hot: see above' } : {}),
+                  ...(hottest.value > WATCH_C ? { note: 'too hot: a heap may heat itself from there' } : {}),
                 },
               ]),
           ...(coreFloor === null

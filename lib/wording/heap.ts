@@ -2,6 +2,7 @@
 import { DateTime } from 'luxon';
 import type { CoreTrend } from '@/lib/analysis/core';
 import { sinceBuilt } from '@/lib/analysis/heap-facts';
+import { ACT_C, WATCH_C } from '@/lib/analysis/heap-findings';
 import { decimal, difference, temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { join, sentences } from './join';
@@ -47,8 +48,6 @@ export function kindWord(kind: string): string {
 }
 
 const space = '\u00a0';
-/** Over this a heap heats itself towards fire: feedstock dries and chars. */
-export const HOT_CORE_C = 75;
 
 /**
  * @example "The gate heap is 34 days old and about 10.5 m³. Its core stands at 45.4 °C and has fallen 4.1 °C in 7 days,
@@ -118,10 +117,11 @@ function adviceSentence(
   { core, coreFloor, trend, entries }: HeapStanding,
   preferences: Preferences,
 ): Phrase[] {
-  if (core !== null && core.value >= HOT_CORE_C) {
+  if (core !== null && core.value > WATCH_C) {
+    const isNow = core.value > ACT_C;
     return join(
-      { text: 'It is dangerously hot:', tone: 'alarm' },
-      ` over ${temperature(HOT_CORE_C, preferences, 0)} a heap dries, chars and can catch fire. Do not open it alone; wet it through from outside and keep water at hand.`,
+      { text: isNow ? 'It is dangerously hot:' : 'It is hot:', tone: isNow ? 'alarm' : 'warn' },
+      ` over ${temperature(isNow ? ACT_C : WATCH_C, preferences, 0)} a heap dries, chars and can catch fire. Do not open it alone; wet it from outside and keep water at hand.`,
     );
   }
   if (core !== null && coreFloor !== null && core.value < coreFloor) {

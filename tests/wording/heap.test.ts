@@ -47,7 +47,9 @@ describe('the sentence over the heap book', () => {
   });
 
   it('warns of a heap that may catch fire before anything else that could be advised', () => {
-    expect(said({ core: { value: 76, at: 0 } })).toContain('It is dangerously hot: over 75 °C');
+    // USDA NRCS practice standard 317, job sheet: watch over 165 °F, act over 185 °F
+    expect(said({ core: { value: 76, at: 0 } })).toContain('It is hot: over 74 °C');
+    expect(said({ core: { value: 86, at: 0 } })).toContain('It is dangerously hot: over 85 °C');
   });
 
   it('says that the core cannot be read rather than an old value', () => {
