@@ -78,6 +78,7 @@ export function ExportPanel({
         {error === undefined ? <Fetch href={`${at}/export/runs?${span}`}>What each load did</Fetch> : null}
         <Fetch href={`${at}/nights?format=csv`}>Nights, all of them</Fetch>
         {heaps.length === 0 ? null : <Fetch href={`${at}/export/heap-book`}>Heap book, whole</Fetch>}
+        {heaps.length === 0 ? null : <Fetch href={`${at}/export/probe-rounds`}>Probe rounds</Fetch>}
       </ul>
       <p className="max-w-prose text-[0.9rem] text-soft">
         Times carry their offset, heads their unit. Readings are corrected by their calibration; those that

@@ -83,7 +83,12 @@ function OneHeap({
       <FindingList {...target} findings={heap.findings} mayWrite={mayWrite} preferences={preferences} />
       <div className="grid gap-5 lg:grid-cols-[minmax(0,1.35fr)_minmax(0,1fr)] lg:items-start">
         <div className="flex min-w-0 flex-col gap-5">
-          <ProbeRounds rounds={heap.rounds} zone={zone} preferences={preferences} />
+          <ProbeRounds
+            rounds={heap.rounds}
+            zone={zone}
+            preferences={preferences}
+            {...(mayWrite ? { amends: { house: slug, heap: heap.slug, owner: reader.owner } } : {})}
+          />
           <Panel title="Core, and what was done">
             {heap.hasCorePoint ? (
               <CoreCurve

@@ -6,6 +6,8 @@ import { degrees, difference, temperature, temperatureFigure } from '@/lib/units
 import type { Preferences } from '@/lib/units/preferences';
 import { clock } from '@/lib/units/time';
 import { longDay } from '@/lib/wording/heap';
+import { RoundButton } from './round-button';
+import type { RoundsToAmend } from './round-target';
 import { SectionDrawing } from './section-drawing';
 
 /** The last round drawn, what has changed since the one before, and the rounds as a table. */
@@ -13,17 +15,18 @@ export function ProbeRounds({
   rounds,
   zone,
   preferences,
-  actions,
+  amends,
 }: {
   rounds: ProbeSet[];
   zone: string;
   preferences: Preferences;
-  actions?: React.ReactNode;
+  /** Left out for who only reads. */
+  amends?: RoundsToAmend;
 }) {
   const [last, before] = rounds;
   if (last === undefined)
     return (
-      <Panel title="Probe rounds" actions={actions}>
+      <Panel title="Probe rounds">
         <p className="text-soft">
           None yet. A round reads the heap at the same places each time, and draws it in section: where it is
           hot, where it is cold, and whether the cold side is dry.
@@ -32,7 +35,7 @@ export function ProbeRounds({
     );
   const at = Date.parse(last.at);
   return (
-    <Panel title={`Probe round of ${longDay(at, zone)}, ${clock(at, zone, preferences)}`} actions={actions}>
+    <Panel title={`Probe round of ${longDay(at, zone)}, ${clock(at, zone, preferences)}`}>
       <p className="mb-2 text-[0.9rem] text-soft">{noteOf(last, before, preferences)}</p>
       <div className="overflow-x-auto" tabIndex={0} role="group" aria-label="The heap in section">
         <SectionDrawing id={last.id} section={last.section} places={last.places} preferences={preferences} />
@@ -51,10 +54,11 @@ export function ProbeRounds({
             { key: 'cold', label: `coldest ${degrees(preferences)}`, figure: true },
             { key: 'mean', label: `mean ${degrees(preferences)}`, figure: true },
             { key: 'hot', label: `hottest ${degrees(preferences)}`, figure: true },
+            ...(amends === undefined ? [] : [{ key: 'act', label: 'Change', labelHidden: true }]),
           ]}
         >
           {rounds.map((round) => (
-            <RoundRow key={round.id} round={round} zone={zone} preferences={preferences} />
+            <RoundRow key={round.id} {...{ round, zone, preferences, amends }} />
           ))}
         </Table>
       </details>
@@ -62,7 +66,17 @@ export function ProbeRounds({
   );
 }
 
-function RoundRow({ round, zone, preferences }: { round: ProbeSet; zone: string; preferences: Preferences }) {
+function RoundRow({
+  round,
+  zone,
+  preferences,
+  amends,
+}: {
+  round: ProbeSet;
+  zone: string;
+  preferences: Preferences;
+  amends: RoundsToAmend | undefined;
+}) {
   const sum = probeSummary(round.places);
   if (sum === null) return null;
   const at = Date.parse(round.at);
@@ -71,11 +85,19 @@ function RoundRow({ round, zone, preferences }: { round: ProbeSet; zone: string;
     <Row>
       <RowHead>
         {longDay(at, zone)}, {clock(at, zone, preferences)}
+        {round.amendedBy === null ? null : (
+          <span className="block text-[0.85rem] font-normal text-soft">amended by {round.amendedBy}</span>
+        )}
       </RowHead>
       <Cell figure>{sum.many}</Cell>
       <Cell figure>{figure(sum.coldest.celsius)}</Cell>
       <Cell figure>{figure(sum.meanC)}</Cell>
       <Cell figure>{figure(sum.hottest.celsius)}</Cell>
+      {amends === undefined ? null : (
+        <Cell>
+          <RoundButton {...amends} {...{ zone, preferences, round }} section={null} />
+        </Cell>
+      )}
     </Row>
   );
 }

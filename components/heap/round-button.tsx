@@ -3,7 +3,7 @@ import { useState, type ComponentType } from 'react';
 import { Button } from '@/components/ui/button';
 import type { ButtonKind } from '@/components/ui/button-look';
 import { offlineBook } from './offline-book-address';
-import type { RoundTarget } from './round-form';
+import type { RoundTarget } from './round-target';
 
 type Form = ComponentType<RoundTarget & { onClose: () => void }>;
 
@@ -22,7 +22,7 @@ export function RoundButton({ look = 'plain', ...target }: RoundTarget & { look?
   return (
     <>
       <Button kind={look} onClick={open} aria-haspopup="dialog" className="shrink-0">
-        Probe round …
+        {target.round === undefined ? 'Probe round …' : 'Amend'}
       </Button>
       {isOpen && Form !== null ? <Form {...target} onClose={() => setOpen(false)} /> : null}
     </>

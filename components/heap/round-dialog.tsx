@@ -3,7 +3,8 @@ import { useRouter } from 'next/navigation';
 import { Dialog } from '@/components/ui/dialog';
 import { say } from '@/components/ui/toast';
 import { Cautions } from './cautions';
-import { RoundForm, type RoundTarget } from './round-form';
+import { RoundForm } from './round-form';
+import type { RoundTarget } from './round-target';
 
 export function RoundDialog({ onClose, ...target }: RoundTarget & { onClose: () => void }) {
   const router = useRouter();

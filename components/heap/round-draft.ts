@@ -1,7 +1,8 @@
 /** A probe round while it is entered: the text of each place, and which place is next. */
 import type { Section } from '@/lib/analysis/probe-section';
-import { ProbeSetCreate, Section as SectionShape } from '@/lib/schema/probe-set';
+import { ProbeSetCreate, Section as SectionShape, type ProbeSet } from '@/lib/schema/probe-set';
 import { celsius } from '@/lib/units/conversion';
+import { temperatureFigure } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { numberTyped } from '@/lib/units/typed';
 
@@ -30,6 +31,26 @@ export function sectionDraft(section: Section): SectionDraft {
   return {
     ...{ widthM: String(widthM), heightM: String(heightM), sunkM: String(sunkM) },
     ...{ columns: String(columns), rows: String(rows), left, right },
+  };
+}
+
+/** What the form begins with: a round that is amended as it stands, else the places of the last one, without figures. */
+export function roundDraft({
+  section,
+  round,
+  preferences,
+}: {
+  section: Section | null;
+  round?: ProbeSet;
+  preferences: Preferences;
+}): RoundDraft {
+  const typed = (round?.places ?? []).map((place): [string, string] => [
+    keyOf(place),
+    temperatureFigure(place.celsius, preferences),
+  ]);
+  return {
+    section: sectionDraft(round?.section ?? section ?? FIRST_SECTION),
+    ...{ typed: Object.fromEntries(typed), place: { column: 0, row: 0 }, text: round?.text ?? '' },
   };
 }
 

@@ -3,37 +3,14 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { useAppNow } from '@/components/ui/clock';
 import { TextArea } from '@/components/ui/field';
-import type { Section } from '@/lib/analysis/probe-section';
 import { degrees } from '@/lib/units/format';
-import { toLocal } from '@/lib/units/local-time';
-import type { Preferences } from '@/lib/units/preferences';
-import { outcomeOf } from './entry-save';
-import { newId } from './outbox';
 import { RoundGrid } from './round-grid';
 import { RoundKeys } from './round-keys';
-import {
-  FIRST_SECTION,
-  gridOf,
-  isWhole,
-  judgeRound,
-  keyOf,
-  nextPlace,
-  pressed,
-  sectionDraft,
-} from './round-draft';
+import { gridOf, isWhole, judgeRound, keyOf, nextPlace, pressed, roundDraft } from './round-draft';
 import type { RoundDraft } from './round-draft';
+import { saveRound } from './round-save';
+import type { RoundTarget } from './round-target';
 import { SectionFields } from './section-fields';
-import { writeDown } from './write-down';
-
-export interface RoundTarget {
-  house: string;
-  heap: string;
-  zone: string;
-  owner: string;
-  /** Of the last round: the same places again. */
-  section: Section | null;
-  preferences: Preferences;
-}
 
 /** A round place by place, with gloves: big keys, and the next place comes by itself. */
 export function RoundForm({
@@ -41,12 +18,9 @@ export function RoundForm({
   onLeave,
   ...target
 }: RoundTarget & { onDone: (said: string) => void; onLeave: () => void }) {
-  const { house, heap, zone, owner, preferences } = target;
+  const { heap, preferences, round } = target;
   const now = useAppNow(60_000);
-  const [draft, setDraft] = useState<RoundDraft>(() => ({
-    section: sectionDraft(target.section ?? FIRST_SECTION),
-    ...{ typed: {}, place: { column: 0, row: 0 }, text: '' },
-  }));
+  const [draft, setDraft] = useState<RoundDraft>(() => roundDraft(target));
   const [fields, setFields] = useState<Record<string, string>>({});
   const [wrong, setWrong] = useState<string[]>([]);
   const [failure, setFailure] = useState<string | null>(null);
@@ -72,14 +46,8 @@ export function RoundForm({
     setFailure(judged.ok ? null : judged.message);
     if (!judged.ok) return;
     setBusy(true);
-    const id = newId();
-    const at = new Date(now).toISOString();
-    const label = `Probe round, ${toLocal(now, zone).replace('T', ', ')}`;
-    const path = `/houses/${house}/probe-sets`;
-    const piece = { id, owner, path, label, writtenAt: Date.now(), refused: null };
-    const outcome = await writeDown([{ ...piece, body: { ...judged.body, id, at } }]);
+    const saved = await saveRound(target, judged.body, now);
     setBusy(false);
-    const saved = outcomeOf(outcome, 'The round stands in the book.');
     if (saved.ok) onDone(saved.said);
     else setFailure(saved.message);
   }
@@ -115,7 +83,7 @@ export function RoundForm({
       />
       <div className="flex flex-wrap gap-2">
         <Button type="submit" kind="primary" busy={isBusy}>
-          Write the round down
+          {round === undefined ? 'Write the round down' : 'Save'}
         </Button>
         <Button onClick={onLeave}>Leave as it is</Button>
         <p role="alert" className="w-full font-semibold text-alarm empty:hidden">

@@ -2,15 +2,14 @@ import 'server-only';
 import type { z } from 'zod';
 import { inHolding, type Holding } from '@/db/client';
 import { channelNumbers } from '@/db/queries/channel-numbers';
-import { listHeapEntries } from '@/db/queries/heap-entry';
 import { listPoints, pointNumbers } from '@/db/queries/point';
 import { readRawSeries } from '@/db/queries/reading';
 import { Refusal } from '@/db/queries/refusal';
 import { listSwitchings, type Switching } from '@/db/queries/running';
-import type { Place } from '@/lib/schema/common';
-import type { HeapBookExport, ReadingsExport, SwitchingsExport } from '@/lib/schema/export';
+import type { ReadingsExport, SwitchingsExport } from '@/lib/schema/export';
 import type { House } from '@/lib/schema/yard-view';
 import { csvLine, type CsvCell } from '@/lib/units/csv';
+import { csvFile } from './csv-file';
 import type { Answer } from './guard';
 import { runParts } from './runs-file';
 import { isoIn } from './wire';
@@ -22,10 +21,6 @@ const LONGEST_DAYS = 4000;
 const MOST_POINTS = 50;
 const ROWS_A_PAGE = 500;
 const QUALITIES = ['good', 'uncertain', 'bad'] as const;
-
-const csv = (house: House, what: string, parts: AsyncIterable<string>): Answer => ({
-  stream: { type: 'text/csv', name: `${house.slug}-${what}.csv`, parts },
-});
 
 function spanOf(query: { from: string; to: string }): { from: number; to: number } {
   const [from, to] = [Date.parse(query.from), Date.parse(query.to)];
@@ -55,7 +50,7 @@ export async function readingsFile(
     if (one === undefined) throw new Refusal('points', `This house has no point ${JSON.stringify(ref)}.`);
     return { ...one, unit: units.get(one.key) ?? '' };
   });
-  return csv(house, 'readings', readingParts(holding.id, house.zone, points, from, to));
+  return csvFile(house, 'readings', readingParts(holding.id, house.zone, points, from, to));
 }
 
 async function* readingParts(
@@ -95,7 +90,7 @@ export async function switchingsFile(
 ): Promise<Answer> {
   const { from, to } = spanOf(query);
   const numbers = await channelNumbers(holding, house.id);
-  return csv(house, 'switchings', switchingParts(holding.id, house, numbers, from, to));
+  return csvFile(house, 'switchings', switchingParts(holding.id, house, numbers, from, to));
 }
 
 async function* switchingParts(
@@ -137,54 +132,5 @@ export function runsFile(
   now: Date,
 ): Answer {
   const { from, to } = spanOf(query);
-  return csv(house, 'runs', runParts(holding.id, house, from, Math.min(to, now.getTime())));
-}
-
-/** Newest first, as the book is. */
-export function heapBookFile(holding: Holding, house: House, query: z.output<typeof HeapBookExport>): Answer {
-  return csv(house, 'heap-book', heapBookParts(holding.id, house, query.source));
-}
-
-const HEAP_COLUMNS = [
-  ...['at', 'heap', 'kind', 'text', 'materials', 'water_L', 'volume_m3', 'smell', 'squeeze'],
-  ...['photographs', 'by', 'entered_at', 'amended_by', 'amended_at'],
-];
-
-async function* heapBookParts(
-  holdingId: string,
-  house: House,
-  source: string | undefined,
-): AsyncGenerator<string> {
-  yield csvLine(HEAP_COLUMNS);
-  const iso = (at: string | null) => (at === null ? null : isoIn(house.zone, Date.parse(at)));
-  let cursor: Place | undefined;
-  for (;;) {
-    const { items, next } = await inHolding(holdingId, (holding) =>
-      listHeapEntries(holding, house.id, { limit: ROWS_A_PAGE, cursor, source }),
-    );
-    yield items
-      .map((entry) =>
-        csvLine([
-          ...[iso(entry.at), entry.source, entry.kind, entry.text, materialText(entry.materials)],
-          ...[entry.litresOfWater, entry.volume, entry.smell, entry.squeeze, entry.photographs.length],
-          ...[entry.by, iso(entry.enteredAt), entry.amendedBy, iso(entry.amendedAt)],
-        ]),
-      )
-      .join('');
-    const last = items.at(-1);
-    if (next === null || last === undefined) return;
-    cursor = { id: last.id, at: Date.parse(last.at) };
-  }
-}
-
-/** All that is known of a material, so that nothing of the book is lost in the table. */
-function materialText(materials: readonly object[]): string {
-  return materials
-    .map((one) =>
-      Object.entries(one)
-        .filter(([, value]) => value !== null && value !== undefined)
-        .map(([name, value]) => `${name} ${String(value)}`)
-        .join(' '),
-    )
-    .join('; ');
+  return csvFile(house, 'runs', runParts(holding.id, house, from, Math.min(to, now.getTime())));
 }

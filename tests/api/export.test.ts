@@ -46,6 +46,24 @@ it('text of the heap book that a spreadsheet would take for a formula is kept fr
   expect(told.text).toContain('forty litres');
 });
 
+it('probe rounds have a line a place, with column and row as they are counted by hand', async () => {
+  const section = { widthM: 3, heightM: 1.2, sunkM: 0.5, columns: 4, rows: 3, left: 'N', right: 'S' };
+  const places = [
+    { column: 0, row: 0, celsius: 16.2 },
+    { column: 3, row: 2, celsius: 37.9 },
+  ];
+  const round = { source: 'gate-heap', at: '2026-10-24T07:20:00Z', section, places, text: '=1+1' };
+  await owner.make(`${at}/probe-sets`, round);
+  const told = await owner.get(`${at}/export/probe-rounds`);
+  const [head, ...lines] = told.text.split('\r\n');
+  const own = lines.filter((line) => line.startsWith('2026-10-24T08:20:00.000+01:00,gate-heap,'));
+  expect(head).toBe('at,heap,column,row,temperature_Cel,left,right,text,by,entered_at,amended_by,amended_at');
+  expect(own.map((line) => line.split(',').slice(2, 8))).toEqual([
+    ['1', '1', '16.2', 'N', 'S', "'=1+1"],
+    ['4', '3', '37.9', 'N', 'S', "'=1+1"],
+  ]);
+});
+
 it('switchings have their head where none was made', async () => {
   const told = await owner.get(`${at}/export/switchings?from=2026-10-24T00:00:00Z&to=2026-10-27T00:00:00Z`);
   expect(told.text).toBe('at,channel,from,to,claim,command,rule_version\r\n');

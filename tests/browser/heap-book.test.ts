@@ -146,6 +146,19 @@ describe('the heap book in the browser', () => {
       /column 2, row 2: 52\.3/.test((await drawing.getAttribute('aria-label')) ?? ''),
     );
     expect(await drawing.locator('g path').count()).toBeGreaterThan(3);
+
+    await page.getByText('Rounds as a table').click();
+    const rounds = page.getByRole('table', { name: 'Probe rounds' });
+    await rounds.getByRole('button', { name: 'Amend' }).first().click();
+    const again = page.getByRole('dialog', { name: 'Probe round' });
+    await again.getByRole('button', { name: 'Column 2, row 2: 52.3' }).click();
+    await page.keyboard.press('Backspace');
+    await page.keyboard.type('9');
+    await again.getByRole('button', { name: 'Save' }).click();
+    await again.waitFor({ state: 'detached' });
+    await until('the round is drawn as it was amended', async () =>
+      /column 2, row 2: 52\.9/.test((await drawing.getAttribute('aria-label')) ?? ''),
+    );
     await page.context().close();
   });
 

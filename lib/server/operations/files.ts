@@ -131,3 +131,14 @@ export const exportHeapBook = operation({
   answers: {},
   onlyAnswers: 'text/csv',
 });
+export const exportProbeRounds = operation({
+  id: 'export.probe-rounds',
+  method: 'GET',
+  path: '/houses/{house}/export/probe-rounds',
+  action: 'holding.see',
+  summary:
+    'Rounds with the probe as CSV, a line a place, newest first; column and row count from 1 at the top left',
+  query: HeapBookExport,
+  answers: {},
+  onlyAnswers: 'text/csv',
+});

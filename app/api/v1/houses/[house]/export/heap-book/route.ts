@@ -1,5 +1,5 @@
-import { heapBookFile } from '@/lib/server/exports';
 import { serve } from '@/lib/server/guard';
+import { heapBookFile } from '@/lib/server/heap-files';
 import { exportHeapBook } from '@/lib/server/operations/files';
 
 export const GET = serve(exportHeapBook, ({ holding, things, query }) =>
