@@ -2,16 +2,20 @@
 import { installDebian } from './debian.mjs';
 import { inPath } from './path.mjs';
 
+/** The one without a window comes first: another keeps its own window's page busy beside the page that is tested. */
+const NAMES = ['chromium-headless-shell', 'chromium', 'chromium-browser', 'google-chrome'];
+
 /** The browser's program, or undefined: what CHROMIUM names, else the first found in PATH. */
 export function findChromium() {
-  return process.env.CHROMIUM || inPath('chromium') || inPath('chromium-browser') || inPath('google-chrome');
+  if (process.env.CHROMIUM) return process.env.CHROMIUM;
+  return NAMES.map(inPath).find((found) => found !== undefined);
 }
 
 export function ensureChromium() {
   const found = findChromium();
   if (found !== undefined) return found;
   installDebian(
-    ['chromium'],
+    ['chromium-headless-shell'],
     'the tests in a browser',
     'Or name a Chromium that you already have: CHROMIUM=/path/to/chromium',
   );

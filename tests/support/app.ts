@@ -47,7 +47,7 @@ export interface RunningApp {
   stop: () => Promise<void>;
 }
 
-const READY_LIMIT_MS = 60_000;
+const READY_LIMIT_MS = 180_000;
 
 /** Starts the program and waits until it says that it is ready. The pages must have been built (`npm run build`). */
 export async function startApp(
