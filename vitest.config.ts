@@ -22,7 +22,7 @@ export default defineConfig({
           name: 'pure',
           testTimeout: 20_000,
           include: under(
-            '{control,physics,analysis,wording,units,field,schema,structure,yard,live,door,components}',
+            '{control,physics,analysis,wording,units,field,schema,structure,yard,live,door,components,conformance}',
           ),
         },
       },

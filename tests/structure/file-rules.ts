@@ -6,7 +6,7 @@ const KNOWN_PLACES = [
   /^db\/((schema|queries|migrations|seed)\/|client\.ts$|[a-z-]+\.ts$)/,
   /^lib\/(units|physics|control|analysis|wording|field|live|schema|server)\//,
   /^worker\/((control|field|hub|alarms|jobs|spool|door|yard)\/|[a-z-]+\.ts$)/,
-  /^(tests|scripts|public|deploy|docs)\//,
+  /^(tests|scripts|public|deploy|docs|examples)\//,
   /^[^/]+$/, // settings and papers at the root
   /^\.(ci|github)\//,
 ];
