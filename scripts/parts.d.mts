@@ -8,6 +8,7 @@ export function doorArguments(options: {
   webPort: number;
   workerPort: number;
   standbyPorts?: number[];
+  trainingPort?: number | undefined;
   yard: boolean;
   rate: number;
   dataDir: string;
@@ -21,6 +22,7 @@ export function partsEnvironment(options: {
   webPort: number;
   workerPort: number;
   mailPort: number;
+  trainingPort?: number | undefined;
   rate: number;
   yard: boolean;
 }): { NODE_ENV: 'production'; [name: string]: string };

@@ -17,6 +17,7 @@ export function doorArguments({
   webPort,
   workerPort,
   standbyPorts = [],
+  trainingPort,
   yard,
   rate,
   dataDir,
@@ -32,6 +33,7 @@ export function doorArguments({
     ...['env', ...NOT_FOR_YARD.flatMap((name) => ['-u', name])],
     ...[node, '--enable-source-maps', path.join(BUILD, 'yard.mjs')],
     ...['--config', path.join(dataDir, 'yard.json'), '--server', address, '--rate', String(rate)],
+    ...(trainingPort === undefined ? [] : ['--training', String(trainingPort)]),
   ];
   return [
     ...['--port', String(port), '--web-port', String(webPort), '--worker-port', String(workerPort)],
@@ -57,6 +59,7 @@ export function partsEnvironment({
   webPort,
   workerPort,
   mailPort,
+  trainingPort,
   rate,
   yard,
 }) {
@@ -70,6 +73,7 @@ export function partsEnvironment({
     MAIL_PORT: String(mailPort),
     CLOCK_RATE: String(rate),
     YARD: yard ? 'on' : 'off',
+    ...(yard && trainingPort !== undefined ? { TRAINING_PORT: String(trainingPort) } : {}),
     NODE_ENV: 'production',
     NEXT_TELEMETRY_DISABLED: '1',
   };

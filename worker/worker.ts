@@ -44,6 +44,7 @@ export async function startWorker(base: Base, instance: string, port: number): P
     },
     onState: (house, state) => hub.publish(house, state),
     onSwitching: (house, channel, at, to, claim) => hub.tellSwitching(house, channel, at, to, claim),
+    onPack: (house, nodeKey, told) => hub.tellTail(house.id, nodeKey, told),
   });
   const hub = new Hub({ ...base, houses, isLeading });
   const gate = new Gate({ ...base, houses, ingest, stall, isLeading });

@@ -1,5 +1,5 @@
 /** The browser's end of the live feed: one socket, kept alive. Knows nothing of React. */
-import type { LiveFrame } from '@/lib/live/frames';
+import type { LiveAsk, LiveFrame } from '@/lib/live/frames';
 
 /** Codes with which the worker closes for good: signed out, not allowed, no such house (lib/live/frames). */
 const FOR_GOOD = [4401, 4403, 4404];
@@ -15,9 +15,10 @@ export interface FeedEvents {
 /**
  * Joins the feed of a house, and joins it again whenever it is lost: after half a second, then twice as long each time,
  * with jitter, so that a restarted worker is not met by all browsers at once.
+ * @param ask what is said first on each connection
  * @returns a function that leaves
  */
-export function joinFeed(houseId: string, events: FeedEvents): () => void {
+export function joinFeed(houseId: string, events: FeedEvents, ask?: LiveAsk): () => void {
   let socket: WebSocket | null = null;
   let timer: ReturnType<typeof setTimeout> | undefined;
   let tries = 0;
@@ -41,6 +42,7 @@ export function joinFeed(houseId: string, events: FeedEvents): () => void {
     one.onopen = () => {
       clearTimeout(slow);
       tries = 0;
+      if (ask !== undefined) one.send(JSON.stringify(ask));
       events.link('live');
     };
     one.onmessage = (message) => {
@@ -85,7 +87,7 @@ function readFrame(text: string): LiveFrame | null {
   try {
     const frame: unknown = JSON.parse(text);
     const isFrame = typeof frame === 'object' && frame !== null && 'type' in frame;
-    return isFrame && ['state', 'switching', 'alarms', 'plan'].includes(String(frame.type))
+    return isFrame && ['state', 'switching', 'alarms', 'plan', 'tail'].includes(String(frame.type))
       ? (frame as LiveFrame)
       : null;
   } catch {

@@ -12,13 +12,14 @@ const TokenSheet = dynamic(() => import('./token-sheet').then((module) => module
 
 interface Editing {
   allowed: readonly string[];
-  edit: (kind: Kind, id: string | null) => void;
+  /** @param given what stands in a new form at first, over the usual */
+  edit: (kind: Kind, id: string | null, given?: object) => void;
   token: (nodeId: string, doing: 'rotate' | 'revoke') => void;
 }
 const Context = createContext<Editing>({ allowed: [], edit: () => undefined, token: () => undefined });
 
 type Open =
-  | { what: 'kind'; kind: Kind; id: string | null }
+  | { what: 'kind'; kind: Kind; id: string | null; given?: object | undefined }
   | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' };
 
 /** Opens the forms of the page; without the right, its buttons are not there. */
@@ -39,14 +40,12 @@ export function WiringEditing({
     <Context
       value={{
         allowed,
-        edit: (kind, id) => setOpen({ what: 'kind', kind, id }),
+        edit: (kind, id, given) => setOpen({ what: 'kind', kind, id, given }),
         token: (nodeId, doing) => setOpen({ what: 'token', nodeId, doing }),
       }}
     >
       {children}
-      {open?.what === 'kind' ? (
-        <KindSheet yard={yard} preferences={preferences} kind={open.kind} id={open.id} onClose={close} />
-      ) : null}
+      {open?.what === 'kind' ? <KindSheet {...{ yard, preferences }} {...open} onClose={close} /> : null}
       {open?.what === 'token' ? (
         <TokenSheet yard={yard} nodeId={open.nodeId} doing={open.doing} onClose={close} />
       ) : null}
@@ -71,6 +70,30 @@ export function AddButton({
   return (
     <Button kind={primary ? 'primary' : 'plain'} onClick={() => edit(kind, null)}>
       {label}
+    </Button>
+  );
+}
+
+/** Opens the form of a new thing with what is known of it filled in. `of` is read out only. */
+export function OfferButton({
+  kind,
+  label,
+  of,
+  given,
+}: {
+  kind: Kind;
+  label: string;
+  of: string;
+  given: object;
+}) {
+  const { allowed, edit } = use(Context);
+  if (!allowed.includes(needs(kind))) return null;
+  return (
+    <Button onClick={() => edit(kind, null, given)}>
+      <span>
+        {label}
+        <span className="sr-only">: {of}</span>
+      </span>
     </Button>
   );
 }

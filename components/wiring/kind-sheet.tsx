@@ -64,12 +64,15 @@ export function KindSheet({
   preferences,
   kind,
   id,
+  given = {},
   onClose,
 }: {
   yard: Yard;
   preferences: Preferences;
   kind: Kind;
   id: string | null;
+  /** What stands in a new form at first, over the usual. */
+  given?: object | undefined;
   onClose: () => void;
 }) {
   const [token, setToken] = useState<{ nodeKey: string; kind: string; token: string } | null>(null);
@@ -89,7 +92,7 @@ export function KindSheet({
       title={entity === null ? `New ${of.word}` : `Change this ${of.word}`}
       groups={of.groups(yard, entity?.id ?? null)}
       schema={() => Promise.resolve(entity === null ? of.create : of.amend)}
-      entity={entity ?? of.first(yard)}
+      entity={entity ?? { ...of.first(yard), ...given }}
       preferences={preferences}
       method={entity === null ? 'POST' : 'PATCH'}
       path={path}

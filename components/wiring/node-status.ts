@@ -12,6 +12,14 @@ export interface NodeStatus {
   canFallback: CanFallback;
   /** Why, the newest first. */
   refusals: { name: string; why: string }[];
+  /** Starts since it was first heard. */
+  restarts: number | null;
+  /** Taken, over the last minutes; null while nothing is known yet. */
+  readingsAMinute: number | null;
+  /** Relays that the node itself says it has. */
+  relaysTold: number | null;
+  /** Names it sends that are no point of it, with the unit they come in. */
+  unknown: { name: string; unit: string | null }[];
 }
 
 const text = (value: unknown) => (typeof value === 'string' && value !== '' ? value : null);
@@ -28,6 +36,10 @@ export function nodeStatus(kept: Record<string, unknown> | undefined): NodeStatu
     refused: number(kept?.refused),
     canFallback: !Array.isArray(kept?.can) ? 'not-told' : kept.can.includes('fallback') ? 'can' : 'cannot',
     refusals: (Array.isArray(kept?.refusals) ? kept.refusals : []).flatMap(refusal),
+    restarts: number(kept?.restarts),
+    readingsAMinute: number(kept?.readingsAMinute),
+    relaysTold: number(kept?.channels),
+    unknown: (Array.isArray(kept?.unknown) ? kept.unknown : []).flatMap(unknownName),
   };
 }
 
@@ -35,6 +47,12 @@ function refusal(value: unknown): NodeStatus['refusals'] {
   if (typeof value !== 'object' || value === null) return [];
   const { name, why } = value as Record<string, unknown>;
   return typeof name === 'string' && typeof why === 'string' ? [{ name, why }] : [];
+}
+
+function unknownName(value: unknown): NodeStatus['unknown'] {
+  if (typeof value !== 'object' || value === null) return [];
+  const { name, unit } = value as Record<string, unknown>;
+  return typeof name === 'string' ? [{ name, unit: text(unit) }] : [];
 }
 
 /** Whether each node can run fallbacks, by its key. */

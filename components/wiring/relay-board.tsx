@@ -2,92 +2,91 @@ import { classes } from '@/components/ui/classes';
 import { Panel } from '@/components/ui/panel';
 import type { StateChannel } from '@/lib/schema/house-state';
 import type { Channel, FieldNode } from '@/lib/schema/yard-view';
+import { relayWords, type RelayWords } from '@/lib/wording/relay';
+import { RelayDrawing } from './relay-drawing';
 
-/** A contact is closed where its load has current, whichever way it is wired. */
-function Contact({ state, contact }: { state: 'on' | 'off' | null; contact: 'NO' | 'NC' }) {
-  const isClosed = state === 'on';
+function Spare({ relay }: { relay: number }) {
   return (
-    <svg aria-hidden="true" viewBox="0 0 64 30" className="w-full max-w-20">
-      <g
-        className={classes(
-          'fill-current stroke-current',
-          isClosed ? 'text-ember' : state === null ? 'text-edge' : 'text-ink',
-        )}
-      >
-        <circle cx="12" cy="22" r="3" stroke="none" />
-        <circle cx="52" cy="22" r="3" stroke="none" />
-        <path
-          d={isClosed ? 'M12 22H52' : 'M12 22 45 9'}
-          fill="none"
-          strokeWidth="2.4"
-          strokeDasharray={state === null ? '3 3' : undefined}
-        />
-        {/* the fixed contact of an NC relay stands on the arm's side of rest */}
-        {contact === 'NC' ? <path d="M52 22V12h-6" fill="none" strokeWidth="1.6" /> : null}
-      </g>
-    </svg>
+    <li className="flex min-h-36 flex-col justify-between rounded-md border border-line bg-sheet/60 p-2 text-[0.85rem] text-soft">
+      <span className="font-semibold tabular-nums">
+        <span className="sr-only">Relay </span>
+        {relay}
+      </span>
+      <span className="text-center">spare</span>
+      <span />
+    </li>
   );
 }
 
-function Relay({
-  relay,
-  channel,
-  reported,
-}: {
-  relay: number;
-  channel: Channel | undefined;
-  reported: 'on' | 'off' | null;
-}) {
-  if (channel === undefined) {
-    return (
-      <li className="flex min-h-28 flex-col justify-between rounded-md border border-line bg-sheet/60 p-2 text-[0.85rem] text-soft">
-        <span className="font-semibold tabular-nums">{relay}</span>
-        <span className="text-center">spare</span>
-      </li>
-    );
-  }
+function Relay({ relay, channel, words }: { relay: number; channel: Channel; words: RelayWords }) {
+  const isFault = words.fault !== null;
   return (
-    <li className="flex min-h-28 flex-col justify-between rounded-md border border-ink bg-sheet p-2 text-[0.85rem]">
+    <li
+      className={classes(
+        'flex min-h-36 flex-col justify-between gap-1 rounded-md border bg-sheet p-2 text-[0.85rem]',
+        isFault ? 'border-2 border-alarm' : 'border-ink',
+      )}
+    >
       <span className="flex justify-between gap-1">
         <span className="font-semibold tabular-nums">
           <span className="sr-only">Relay </span>
           {relay}
         </span>
-        <span className={reported === 'on' ? 'text-ember' : 'text-soft'}>
-          {reported === null ? 'not told' : reported === 'on' ? 'closed' : 'open'}
-        </span>
+        <span className="text-soft">{channel.contact}</span>
       </span>
-      <span className="flex justify-center py-1">
-        <Contact state={reported} contact={channel.contact} />
+      <span className="flex justify-center">
+        <RelayDrawing
+          contact={channel.contact}
+          isCoilOn={words.coil === 'coil not told' ? null : words.coil === 'coil on'}
+          isClosed={words.isClosed}
+        />
       </span>
-      <span className="text-center leading-tight hyphens-auto">
-        {channel.label}
-        <span className="block text-soft">
-          channel {channel.number}, {channel.contact}
-        </span>
+      <span className="text-center leading-tight">
+        <span className="font-semibold hyphens-auto">{channel.label}</span>
+        <span className="block text-soft">channel {channel.number}</span>
       </span>
+      <ul className="leading-tight">
+        <li>{words.coil}</li>
+        <li>{words.contact}</li>
+        <li className={words.isClosed === true ? 'font-semibold text-ember' : undefined}>{words.load}</li>
+        {words.wanted === null ? null : <li className="font-semibold text-warn">{words.wanted}</li>}
+      </ul>
+      {isFault ? <p className="font-semibold text-alarm">{words.fault}</p> : null}
     </li>
   );
 }
 
-/** The relays of one node as they lie on its board, each with its contact as it was last reported. */
+/** The relays of one node as they lie on its board: what each was ordered, and its coil, contact and load as last reported. */
 export function RelayBoard({
   node,
   channels,
   states,
+  channelAlarms,
 }: {
   node: FieldNode;
   channels: Channel[];
   states: StateChannel[];
+  /** Kinds of the alarms that stand, by the channel's key. */
+  channelAlarms: Readonly<Record<string, string[]>>;
 }) {
   if (node.channels === 0) return null;
   return (
-    <Panel title={`Relay board of node ${node.key}`}>
-      <ol className="grid grid-cols-3 gap-2 rounded-lg bg-earth p-2 sm:grid-cols-4 xl:grid-cols-8">
+    <Panel
+      title={`Relay board of node ${node.key}`}
+      note="The node tells what its coils are. Contact and load follow from that, until a run proof shows otherwise."
+    >
+      <ol className="grid grid-cols-2 gap-2 rounded-lg bg-earth p-2 sm:grid-cols-4 xl:grid-cols-8">
         {Array.from({ length: node.channels }, (_, place) => {
           const channel = channels.find((one) => one.node === node.key && one.relay === place + 1);
-          const state = states.find((one) => one.key === channel?.key);
-          return <Relay key={place} relay={place + 1} channel={channel} reported={state?.reported ?? null} />;
+          if (channel === undefined) return <Spare key={place} relay={place + 1} />;
+          const state = states.find((one) => one.key === channel.key);
+          const words = relayWords({
+            contact: channel.contact,
+            wanted: state?.state ?? null,
+            reported: state?.reported ?? null,
+            alarms: channelAlarms[channel.key] ?? [],
+          });
+          return <Relay key={place} relay={place + 1} channel={channel} words={words} />;
         })}
       </ol>
     </Panel>

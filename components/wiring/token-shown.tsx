@@ -1,8 +1,12 @@
 'use client';
+import dynamic from 'next/dynamic';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
-import { tokenUse } from '@/lib/wording/wiring-parts';
+import { nodeSettingsText, tokenUse } from '@/lib/wording/wiring-parts';
+
+/** The encoder is wanted here only. */
+const QrCode = dynamic(() => import('@/components/ui/qr-code').then((module) => module.QrCode));
 
 /** A node's token, shown this once: only its hash is kept. */
 export function TokenShown({
@@ -46,6 +50,16 @@ export function TokenShown({
       <div className="flex flex-wrap items-center gap-3">
         <Button onClick={() => void copy()}>Copy</Button>
         <p role="status">{said}</p>
+      </div>
+      <div>
+        <p className="font-semibold">For a camera</p>
+        <p className="mb-2 text-[0.95rem] text-soft">
+          Address, name and token as the node’s settings hold them. It is drawn here and goes nowhere.
+        </p>
+        <QrCode
+          text={nodeSettingsText(nodeKey, token, window.location.origin)}
+          label={`QR code of the settings of ${nodeKey}`}
+        />
       </div>
       <div>
         <p className="font-semibold">Where it goes</p>

@@ -1,6 +1,7 @@
 import { Notice } from '@/components/ui/notice';
 import { Sentence } from '@/components/ui/sentence';
 import type { HouseState } from '@/lib/schema/house-state';
+import type { Training } from '@/lib/schema/training';
 import type { Preferences } from '@/lib/units/preferences';
 import { LEASE_S, wiringSentence } from '@/lib/wording/wiring';
 import { Channels } from './channels';
@@ -14,10 +15,12 @@ import { Points } from './points';
 import { RelayBoard } from './relay-board';
 import { Interlocks } from './interlocks';
 import { Sources } from './sources';
+import { TrainingPanel } from './training-panel';
 
 export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;
   ranAlone: Record<string, number>;
+  channelAlarms: Record<string, string[]>;
   state: HouseState | null;
 }
 
@@ -27,16 +30,18 @@ const isHeard = (node: { lastHeardAt: string | null }, now: number) =>
 /** The page Wiring: how it stands in a sentence, the boards, then everything that is wired. */
 export function WiringView({
   data,
+  training,
   allowed,
   preferences,
   now,
 }: {
   data: WiringData;
+  training: Training;
   allowed: readonly string[];
   preferences: Preferences;
   now: number;
 }) {
-  const { nodeStatus, ranAlone, state, ...yard } = data;
+  const { nodeStatus, ranAlone, channelAlarms, state, ...yard } = data;
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
   const can = canFallback(nodes, nodeStatus);
@@ -84,6 +89,7 @@ export function WiringView({
             channels={channels}
             // what a silent node last said is no longer true: its leases have run out
             states={isHeard(node, now) ? (state?.channels ?? []) : []}
+            channelAlarms={channelAlarms}
           />
         ))}
         <Channels
@@ -95,7 +101,12 @@ export function WiringView({
           {...{ points, zone, now, preferences }}
           hasNode={nodes.some((node) => node.channels > 0)}
         />
-        <Nodes nodes={nodes} kept={nodeStatus} zone={zone} now={now} preferences={preferences} />
+        <Nodes
+          kept={nodeStatus}
+          pointKeys={points.map(({ key }) => key)}
+          houseId={house.id}
+          {...{ nodes, zone, now, preferences }}
+        />
         <Points points={points} states={state?.points ?? []} nodes={nodes} {...{ now, zone, preferences }} />
         <div className="grid grid-cols-1 gap-5 xl:grid-cols-2">
           <Sources
@@ -110,6 +121,11 @@ export function WiringView({
             <HousePanel house={house} preferences={preferences} mayAdd={allowed.includes('yard.write')} />
           </div>
         </div>
+        <TrainingPanel
+          {...{ training, zone, now, preferences }}
+          house={house.slug}
+          mayOrder={allowed.includes('wiring.write')}
+        />
         <FormerLockOuts
           lockouts={lockouts}
           channels={channels}

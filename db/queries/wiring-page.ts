@@ -2,6 +2,7 @@
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { node } from '@/db/schema/node';
+import { alarm } from '@/db/schema/watch';
 import type { HouseState } from '@/lib/schema/house-state';
 import type {
   Channel,
@@ -36,6 +37,8 @@ export interface WiringPage {
   lockouts: Lockout[];
   /** When a channel was last put on by its node's fallback, epoch ms by the channel's id; absent where it never was. */
   ranAlone: Record<string, number>;
+  /** Kinds of the alarms that stand about a channel, by its key. */
+  channelAlarms: Record<string, string[]>;
   /** Null until the worker has stepped this house for the first time. */
   state: HouseState | null;
 }
@@ -52,6 +55,7 @@ export async function readWiring(holding: Holding, house: House): Promise<Wiring
   );
   return {
     ...{ house, channels, ranAlone: Object.fromEntries(ranAlone) },
+    channelAlarms: await standingByChannel(holding, house.id),
     nodes: await listNodes(holding, house.id),
     nodeStatus: Object.fromEntries(rows.map((row) => [row.id, row.status])),
     points: await listPoints(holding, house.id),
@@ -61,4 +65,16 @@ export async function readWiring(holding: Holding, house: House): Promise<Wiring
     lockouts: await listLockouts(holding, house.id),
     state: (await readMemory(holding, house.id))?.state ?? null,
   };
+}
+
+async function standingByChannel(holding: Holding, houseId: string): Promise<Record<string, string[]>> {
+  const rows = await holding.db
+    .select({ kind: alarm.kind, about: alarm.about })
+    .from(alarm)
+    .where(and(eq(alarm.holdingId, holding.id), eq(alarm.houseId, houseId), isNull(alarm.clearedAt)));
+  const byChannel: Record<string, string[]> = {};
+  for (const { kind, about } of rows) {
+    if (about.channel !== undefined) byChannel[about.channel] = [...(byChannel[about.channel] ?? []), kind];
+  }
+  return byChannel;
 }

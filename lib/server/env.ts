@@ -17,6 +17,8 @@ const Env = z.object({
   MAIL_FROM: z.string().default('Middenward <middenward@localhost>'),
   MAIL_PORT: Port.default(3025),
   CLOCK_RATE: z.coerce.number().min(0.1).max(600).default(1),
+  /** Where the simulated yard takes orders of faults for training, on loopback. */
+  TRAINING_PORT: Port.optional(),
   YARD: z.enum(['on', 'off']).default('on'),
   DEMO_PASSWORD: z.string().min(15, 'must be at least 15 characters').optional(),
   /** Real milliseconds in which sign-ins are counted, and how many are let through. */

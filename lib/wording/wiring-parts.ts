@@ -79,6 +79,11 @@ export function tokenUse(kind: string, origin: string): string[] {
     : [`${socket}/field/v1`, 'Authorization: Bearer TOKEN'];
 }
 
+/** What a node needs to know to call, as its settings hold it (examples/node). */
+export function nodeSettingsText(node: string, token: string, origin: string): string {
+  return JSON.stringify({ server: origin.replace(/^http/, 'ws'), node, token });
+}
+
 export const MAINS_CAUTION =
   'Mains circuits here need residual-current protection and enclosures for wet places, and belong to a licensed electrician under your local code. This sheet records the work; it does not approve it.';
 export const LOCKOUT_CAUTION =

@@ -34,8 +34,9 @@ export async function start(env = process.env, usual = {}) {
   const webPort = settings.webPort ?? (await nextFree(port + 1, LOOPBACK));
   const workerPort = settings.workerPort ?? (await nextFree(Math.max(port, webPort) + 1, LOOPBACK));
   const mailPort = settings.mailPort ?? (await nextFree(Math.max(port, webPort, workerPort) + 1, LOOPBACK));
+  const trainingPort = await nextFree(Math.max(port, webPort, workerPort, mailPort) + 1, LOOPBACK);
   const publicUrl = settings.publicUrl ?? `http://localhost:${port}`;
-  const ports = { webPort, workerPort, mailPort };
+  const ports = { webPort, workerPort, mailPort, trainingPort };
   const parts = { ...settings, ...ports, ...secrets, databaseUrl: database.url, publicUrl };
   Object.assign(process.env, partsEnvironment(parts));
   await seed(secrets.password, usual.seedArguments ?? []);

@@ -64,9 +64,9 @@ export async function startApp(
     seed === false
       ? await cloneDatabase(cluster)
       : await seededDatabase(cluster, { nights: seed.nights, rate, dataDir });
-  const [port = 0, webPort = 0, workerPort = 0, mailPort = 0] = await severalFree(4);
+  const [port = 0, webPort = 0, workerPort = 0, mailPort = 0, trainingPort = 0] = await severalFree(5);
   const url = `http://localhost:${port}`;
-  const parts = { webPort, workerPort, mailPort, yard, rate, dataDir, standbyPorts };
+  const parts = { webPort, workerPort, mailPort, trainingPort, yard, rate, dataDir, standbyPorts };
 
   const door = spawn(process.execPath, [DOOR, ...doorArguments({ ...parts, port, portFixed: true })], {
     cwd: ROOT,

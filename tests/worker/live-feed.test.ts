@@ -128,6 +128,33 @@ describe('The live feed', () => {
     expect(browser.closed).toBe(LIVE_CLOSE.signedOut);
   });
 
+  it('tells what a node sends to whoever asked for it, and to nobody else', async () => {
+    const scene = await makeScene();
+    const cookie = await signIn(scene);
+    const [asks, asksOther, silent] = [1, 2, 3].map(() => open(scene.houseId, cookie)) as [
+      Browser,
+      Browser,
+      Browser,
+    ];
+    const all = [asks, asksOther, silent];
+    await until('all have a state', () => all.every((one) => stateOf(one) !== undefined));
+    asks.socket.send('{"type":"tail","node":"N-1"}');
+    asksOther.socket.send('{"type":"tail","node":"N-2"}');
+    const node = await OutsideNode.connect(worker.url, scene.token, 'N-1', 4);
+    const tails = (one: Browser) => one.frames.filter((frame) => frame.type === 'tail');
+    let sent = 3;
+    await until('a pack is told', async () => {
+      await node.readings(pack({ 'bench-1': (sent += 0.1), attic: 3 }));
+      return tails(asks).length > 0;
+    });
+    expect(tails(asks)[0]?.records.map(({ name, unit, why }) => [name, unit, why])).toEqual([
+      ['bench-1', 'Cel', null],
+      ['attic', 'Cel', 'this node has no point of that name'],
+    ]);
+    expect([...tails(asksOther), ...tails(silent)]).toEqual([]);
+    node.close();
+  });
+
   it('closes to a browser that says anything but that it is there', async () => {
     const scene = await makeScene();
     const browser = open(scene.houseId, await signIn(scene));

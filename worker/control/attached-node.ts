@@ -10,10 +10,18 @@ import { NodeLogs } from './node-logs';
 import { NodeOrders } from './node-orders';
 import { refusalsOfBoot, withRefused } from './node-refusals';
 import { NodeRelays, loadState } from './node-relays';
+import { ReadingRate, startsOf, withUnknown } from './node-told';
 import type { NodeStanding } from './state';
 
 /** What the core remembers of loads, by channel. */
 export type RememberedLoads = ReadonlyMap<string, ChannelMemory>;
+
+/** A pack as it was sent, how many readings were taken of it, and what was refused. */
+export interface TookPack {
+  pack: readonly unknown[];
+  taken: number;
+  refused: readonly RefusedRecord[];
+}
 
 export class AttachedNode {
   readonly relays: NodeRelays;
@@ -25,6 +33,7 @@ export class AttachedNode {
   /** Relays that the node itself says it has. */
   relayCount: number;
   private status: Record<string, unknown>;
+  private readonly rate: ReadingRate;
   /** There is something worth keeping in the node's row that has not been kept. */
   private isNoted = false;
 
@@ -56,6 +65,7 @@ export class AttachedNode {
     this.orders = new NodeOrders(this.relays, () => this.link, house, deps);
     this.relayCount = wiring.channels;
     this.status = wiring.status;
+    this.rate = new ReadingRate(deps.clock.appNow());
   }
 
   /** The channels wired to it, by the house's record of now. */
@@ -88,6 +98,8 @@ export class AttachedNode {
     this.status = {
       ...this.status,
       ...refusalsOfBoot(this.status, hello.boot),
+      ...startsOf(this.status, hello.boot, at),
+      boot: hello.boot,
       firmware,
       channels,
       clockErrorS: clock === null ? null : clock - at / 1000,
@@ -97,9 +109,15 @@ export class AttachedNode {
     this.isNoted = true;
   }
 
-  tookPack(refused: readonly RefusedRecord[], now: number): void {
+  tookPack({ pack, taken, refused }: TookPack, now: number): void {
     this.heard(now);
-    this.status = { ...this.status, ...withRefused(this.status, refused, now) };
+    this.rate.add(taken, now);
+    this.status = {
+      ...this.status,
+      ...withRefused(this.status, refused, now),
+      ...withUnknown(this.status, refused, pack, now),
+      readingsAMinute: this.rate.perMinute(now),
+    };
   }
 
   /** What has changed since the last call, for its row; null where nothing has. */

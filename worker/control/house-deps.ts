@@ -1,6 +1,7 @@
 import type { HouseRecord } from '@/db/queries/plan';
 import type { StepResult } from '@/lib/control/step-result';
 import type { State } from '@/lib/control/types';
+import type { TailRecord } from '@/lib/live/frames';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { AlarmKeeper } from '../alarms/keeper';
 import type { Base } from '../base';
@@ -31,4 +32,6 @@ export interface HouseDeps extends Base {
   startedAt: number;
   onState: (house: ControlledHouse, state: HouseState) => void;
   onSwitching: (house: ControlledHouse, channel: number, at: number, to: State, claim: string) => void;
+  /** A pack came from a node, by its key; what was made of it is only reckoned where somebody looks. */
+  onPack: (house: ControlledHouse, nodeKey: string, told: () => TailRecord[]) => void;
 }

@@ -3,9 +3,10 @@ import type { HouseRecord, NodeWiring } from '@/db/queries/plan';
 import type { Memory } from '@/lib/control/memory';
 import type { StepResult } from '@/lib/control/step-result';
 import type { ObservedRelay } from '@/lib/control/types';
-import type { HelloFrame, LogFrame, RefusedRecord, RelaysFrame } from '@/lib/field/frames';
+import type { HelloFrame, LogFrame, RelaysFrame } from '@/lib/field/frames';
+import type { TailRecord } from '@/lib/live/frames';
 import type { HouseState } from '@/lib/schema/house-state';
-import { AttachedNode, type RememberedLoads } from './attached-node';
+import { AttachedNode, type RememberedLoads, type TookPack } from './attached-node';
 import type { CommandLink } from './command-link';
 import type { ControlledHouse, HouseDeps } from './house-deps';
 import { NodeReports } from './node-reports';
@@ -68,8 +69,11 @@ export class HouseNodes {
   }
 
   /** A pack came; what was refused of it is kept where whoever wires the node finds it. */
-  tookPack(nodeId: string, refused: readonly RefusedRecord[]): void {
-    this.nodes.get(nodeId)?.tookPack(refused, this.deps.clock.appNow());
+  tookPack(nodeId: string, took: TookPack, told: () => TailRecord[]): void {
+    const node = this.nodes.get(nodeId);
+    if (node === undefined) return;
+    node.tookPack(took, this.deps.clock.appNow());
+    this.deps.onPack(this.house, node.wiring.key, told);
   }
 
   setCloned(nodeId: string, isCloned: boolean): void {

@@ -8,6 +8,7 @@ import type { Base } from '../base';
 import type { House } from '../control/house';
 import type { Ingest, Stored } from './ingest';
 import { pointsOf, qualityOf, type NodePoint } from './node-points';
+import { tailOf } from './tail';
 
 export interface Taken extends Stored {
   refused: RefusedRecord[];
@@ -24,7 +25,9 @@ export async function takePack(
   const points = pointsOf(house.record.points, node.id);
   const { readings, refused } = readPack(pack, points, base.clock.appNow());
   base.metrics.add('readings_refused_total', refused.length);
-  house.nodes.tookPack(node.id, refused);
+  house.nodes.tookPack(node.id, { pack, refused, taken: readings.length }, () =>
+    tailOf(readings, refused, points, pack),
+  );
   const known = readings.flatMap((reading) => {
     const point = points.get(reading.key);
     return point === undefined ? [] : [{ point, reading }];

@@ -2,7 +2,7 @@
 import type { IncomingMessage } from 'node:http';
 import type { Duplex } from 'node:stream';
 import { WebSocketServer, type WebSocket } from 'ws';
-import { LIVE_CLOSE, LiveRequest, type LiveFrame } from '@/lib/live/frames';
+import { LIVE_CLOSE, LiveRequest, type LiveFrame, type TailRecord } from '@/lib/live/frames';
 import type { HouseState } from '@/lib/schema/house-state';
 import { getSessionFromHeaders, type Viewer } from '@/lib/server/auth';
 import { trustedOrigins } from '@/lib/server/origins';
@@ -82,6 +82,14 @@ export class Hub {
     this.tell(house.id, { type: 'switching', house: house.id, channel, at: isoUtc(at), to, claim });
   }
 
+  tellTail(houseId: string, node: string, told: () => TailRecord[]): void {
+    const readers = [...(this.readers.get(houseId) ?? [])].filter(({ tail }) => tail === node);
+    if (readers.length === 0) return;
+    const frame: LiveFrame = { type: 'tail', house: houseId, node, records: told() };
+    const text = JSON.stringify(frame);
+    for (const reader of readers) reader.send(text);
+  }
+
   stop(): void {
     this.cancel();
   }
@@ -106,8 +114,9 @@ export class Hub {
     const readers = this.readers.get(house.id) ?? new Set();
     this.readers.set(house.id, readers.add(reader));
     ws.on('message', (data) => {
-      if (!LiveRequest.safeParse(parse(rawText(data))).success)
-        reader.close(1008, 'only {"type":"here"} may be said');
+      const { data: said } = LiveRequest.safeParse(parse(rawText(data)));
+      if (said === undefined) reader.close(1008, 'only {"type":"here"} and {"type":"tail"} may be said');
+      else if (said.type === 'tail') reader.tail = said.node;
     });
     ws.on('close', () => {
       readers.delete(reader);

@@ -17,6 +17,8 @@ export interface ReaderDeps {
 
 /** One browser's socket. */
 export class Reader {
+  /** Key of the node of which this reader wants to see what comes. */
+  tail: string | null = null;
   private isBehind = false;
   private heardAtMs: number;
   private readonly cancels: Cancel[];

@@ -22,7 +22,11 @@ const yardConfig = z.strictObject({
   ),
 });
 
-export type YardConfig = z.infer<typeof yardConfig> & { server: string; rate: number };
+export type YardConfig = z.infer<typeof yardConfig> & {
+  server: string;
+  rate: number;
+  trainingPort: number | null;
+};
 
 /** @throws Error with a sentence that says what to give, for arguments or a file that do not fit */
 export function readConfig(argv: readonly string[]): YardConfig {
@@ -32,16 +36,24 @@ export function readConfig(argv: readonly string[]): YardConfig {
       config: { type: 'string' },
       server: { type: 'string' },
       rate: { type: 'string', default: '1' },
+      training: { type: 'string' },
     },
   });
   if (values.config === undefined || values.server === undefined) {
-    throw new Error('give --config FILE --server WS_URL [--rate N]');
+    throw new Error('give --config FILE --server WS_URL [--rate N] [--training PORT]');
   }
   const rate = Number(values.rate);
   if (!Number.isFinite(rate) || rate <= 0)
     throw new Error(`--rate must be a number above 0, not "${values.rate}"`);
   if (!/^wss?:\/\//.test(values.server)) {
     throw new Error(`--server must begin with ws:// or wss://, not "${values.server}"`);
+  }
+  const trainingPort = values.training === undefined ? null : Number(values.training);
+  if (
+    trainingPort !== null &&
+    !(Number.isInteger(trainingPort) && trainingPort > 0 && trainingPort < 65_536)
+  ) {
+    throw new Error(`--training must be a port, not "${values.training}"`);
   }
   let body: unknown;
   try {
@@ -56,5 +68,5 @@ export function readConfig(argv: readonly string[]): YardConfig {
       `the file of --config is wrong at ${issue?.path.join('.') ?? ''}: ${issue?.message ?? ''}`,
     );
   }
-  return { ...parsed.data, server: values.server, rate };
+  return { ...parsed.data, server: values.server, rate, trainingPort };
 }

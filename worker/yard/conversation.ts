@@ -48,6 +48,14 @@ export class Conversation {
     this.line.stop();
   }
 
+  unplug(): void {
+    this.line.unplug();
+  }
+
+  plugIn(): void {
+    this.line.plugIn();
+  }
+
   /** A new boot: it numbers from the beginning, on a new line. */
   restart(): void {
     this.seq = 0;

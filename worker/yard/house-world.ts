@@ -74,6 +74,7 @@ export function isOn(coils: Coils, relay: number | undefined): boolean {
 /**
  * A house `dtS` seconds on from `ms`, with these coils all the while.
  * @param weatherOf the weather at its place, by epoch ms
+ * @param leak share of outdoor air in what the heap's loop brings back: its pipe has come apart outdoors
  */
 export function stepHouse(
   place: YardHouse,
@@ -82,6 +83,7 @@ export function stepHouse(
   ms: number,
   dtS: number,
   weatherOf: (ms: number) => Weather,
+  leak = 0,
 ): HouseWorld {
   const pressurePa = pressureAtAltitude(place.altitudeM);
   const corePerK = coreJPerK(place.heap, now.heap);
@@ -113,7 +115,8 @@ export function stepHouse(
     const fromHeap = heapLoop && loopFlow(heapLoop, airC, baseC);
     const fromSoil = soilLoop && loopFlow(soilLoop, airC, ringC);
     const farW = place.ground === undefined ? 0 : ringFlowW(place.ground, ringC, farC);
-    const loopsW = (fromHeap?.intoHouseW ?? 0) + (fromSoil?.intoHouseW ?? 0);
+    const leakW = leak * (fromHeap?.capacityWPerK ?? 0) * ((fromHeap?.returnC ?? 0) - weather.tempC);
+    const loopsW = (fromHeap?.intoHouseW ?? 0) + (fromSoil?.intoHouseW ?? 0) - leakW;
 
     const airW = house.sunToAirW + loopsW - house.airToOutdoorsW - house.airToVentW - house.airToMassW;
     const massW = house.airToMassW + house.sunToMassW + matW - house.massToGroundW;
@@ -127,7 +130,7 @@ export function stepHouse(
       baseW / place.heap.baseJPerK,
       place.ground === undefined ? 0 : ringW / place.ground.soilJPerK,
       -heap.generatedW,
-      -house.airToOutdoorsW,
+      -house.airToOutdoorsW - leakW,
       -house.airToVentW,
       -house.massToGroundW,
       house.sunToAirW + house.sunToMassW,
@@ -152,17 +155,19 @@ export function stepHouse(
   ];
   const end = advance(start, ms / 1000, dtS, rates);
   const [airC = 0, massC = 0, coreC = 0, baseC = 0, ringC = 0, digestibleJ = 0, ...flows] = end;
-  const lagged = (felt: number, loop: Loop | undefined, mediumC: number): number =>
-    loop === undefined
-      ? approach(felt, 0.85 * airC + 0.15 * mediumC, dtS, stillS)
-      : approach(felt, loopFlow(loop, airC, mediumC).returnC, dtS, blownS);
+  const lagged = (felt: number, loop: Loop | undefined, mediumC: number, share: number): number => {
+    if (loop === undefined) return approach(felt, 0.85 * airC + 0.15 * mediumC, dtS, stillS);
+    const { returnC } = loopFlow(loop, airC, mediumC);
+    const mixedC = share === 0 ? returnC : returnC + share * (weatherOf(ms + dtS * 1000).tempC - returnC);
+    return approach(felt, mixedC, dtS, blownS);
+  };
   return {
     airC,
     massC,
     heap: { ...now.heap, coreC, baseC, digestibleJ },
     ringC,
-    heapReturnC: lagged(now.heapReturnC, heapLoop, baseC),
-    soilReturnC: lagged(now.soilReturnC, soilLoop, ringC),
+    heapReturnC: lagged(now.heapReturnC, heapLoop, baseC, leak),
+    soilReturnC: lagged(now.soilReturnC, soilLoop, ringC, 0),
     flowsJ: named(flows),
   };
 }

@@ -30,6 +30,7 @@ export class Line {
   private attempts = 0;
   private heardMs = 0;
   private stopped = false;
+  private unplugged = false;
   private readonly timers: Timers<'dial' | 'ping' | 'silence'>;
 
   /** @param server `ws://` or `wss://` origin, without the path */
@@ -43,7 +44,7 @@ export class Line {
   }
 
   dial(): void {
-    if (this.stopped || this.socket !== undefined) return;
+    if (this.stopped || this.unplugged || this.socket !== undefined) return;
     const socket = new WebSocket(new URL(fieldPath, this.server), {
       headers: { authorization: `Bearer ${this.token}` },
       maxPayload: frameBytesMax,
@@ -89,6 +90,21 @@ export class Line {
     this.socket?.terminate();
   }
 
+  /** The cable is out: the line goes down without a word, and is not dialled. */
+  unplug(): void {
+    this.unplugged = true;
+    this.timers.cancel('dial');
+    this.socket?.terminate();
+  }
+
+  plugIn(): void {
+    if (!this.unplugged) return;
+    this.unplugged = false;
+    this.attempts = 0;
+    // one that is still going down dials again by itself
+    this.dial();
+  }
+
   stop(): void {
     this.stopped = true;
     this.timers.cancelAll();
@@ -101,7 +117,7 @@ export class Line {
     this.timers.cancel('ping');
     this.timers.cancel('silence');
     const waitMs = code === closeCode.takenOver ? takenOverWaitMs : this.backOffMs();
-    if (!this.stopped) this.timers.set('dial', waitMs, () => this.dial());
+    if (!this.stopped && !this.unplugged) this.timers.set('dial', waitMs, () => this.dial());
     this.events.closed(code, why, waitMs);
   }
 

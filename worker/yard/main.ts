@@ -1,10 +1,11 @@
 /**
- * The yard as a process: `--config FILE --server WS_URL [--rate N]`. One JSON line an event on standard
+ * The yard as a process: `--config FILE --server WS_URL [--rate N] [--training PORT]`. One JSON line an event on standard
  * output, `at` being app time where that is known; ends with 0 on SIGTERM and SIGINT after saving its world, with 78 on a wrong setting.
  */
 import { iso, systemClock } from './clock';
 import { readConfig, type YardConfig } from './config';
 import { readWorld, saveWorld } from './store';
+import { openTrainingDoor } from './training-door';
 import { Yard, type YardLog } from './yard';
 
 const saveEveryMs = 60_000;
@@ -57,6 +58,11 @@ function main(): void {
     world: 'world' in saved ? `from ${iso(saved.world.ms)}` : saved.why,
   });
   yard.start();
+  if (settings.trainingPort !== null) {
+    const door = openTrainingDoor(settings.trainingPort, yard);
+    // a taken port must not stop the nodes: there is only nothing to practise on then
+    door.on('error', (error) => log('no door for training', { why: error.message }));
+  }
   saveAgain();
 }
 

@@ -27,6 +27,7 @@ export class FieldNode {
   private readonly sampler: Sampler;
   private readonly conversation: Conversation;
   private ranMs: number;
+  private isPowered = true;
   private readonly timers: Timers<TimerName>;
 
   constructor(private readonly parts: NodeParts) {
@@ -77,6 +78,16 @@ export class FieldNode {
     this.conversation.stop();
   }
 
+  /** Whether the node has power, and its line is plugged in. What is so already changes nothing. */
+  supply({ power, line }: { power: boolean; line: boolean }): void {
+    if (power !== this.isPowered) {
+      if (power) this.powerOn();
+      else this.powerOff();
+    }
+    if (power && line) this.conversation.plugIn();
+    else this.conversation.unplug();
+  }
+
   /** What the coils really are, and how much waits to be acknowledged. */
   state(): ReturnType<RelayBoard['state']> & { boot: BootId; unacknowledged: number } {
     return { ...this.board.state(), boot: this.board.boot, unacknowledged: this.outbox.size };
@@ -89,6 +100,7 @@ export class FieldNode {
 
   /** Everything that the node does goes through here, so that a gap in its running is always seen first. */
   private run(work: () => void): void {
+    if (!this.isPowered) return;
     const now = this.parts.clock.monotonicMs();
     const resetMs = this.ranMs + watchdogMs;
     const frozen = now > resetMs;
@@ -140,6 +152,22 @@ export class FieldNode {
     this.sampler.schedule();
     this.feedWatchdog();
     this.waitAlone();
+  }
+
+  private powerOff(): void {
+    const now = this.parts.clock.monotonicMs();
+    this.expireLease(now);
+    this.parts.beforeCoilsChange(now);
+    this.board = new RelayBoard(this.parts.relays, this.board.boot, this.parts.rate, now);
+    this.timers.cancelAll();
+    this.isPowered = false;
+    this.parts.log('power off', {});
+  }
+
+  private powerOn(): void {
+    this.isPowered = true;
+    this.ranMs = this.parts.clock.monotonicMs();
+    this.reset(this.ranMs);
   }
 
   private feedWatchdog(): void {

@@ -29,15 +29,22 @@ export function createWorld(seed: number, startMs: number): World {
 /**
  * The world `dtS` seconds on, with these coils all the while. Any step; over 60 s it is cut up inside.
  * A node that is missing in `relays` has all coils off.
+ * @param leaks share of outdoor air in what a house's heap loop brings back, by house; none is a whole pipe
  */
-export function stepWorld(world: World, relays: YardRelays, dtS: number): World {
+export function stepWorld(
+  world: World,
+  relays: YardRelays,
+  dtS: number,
+  leaks: Readonly<Record<string, number>> = {},
+): World {
   const houses: Record<string, HouseWorld> = {};
   // All houses ask for the same few moments, and the weather is half of the work of a step.
   const weather = remembered((ms) => weatherAt(world.seed, ms));
   for (const place of yardHouses) {
     const coils = relays[place.node] ?? {};
     const local = (ms: number): Weather => sheltered(weather(ms), place);
-    houses[place.key] = stepHouse(place, houseWorld(world, place.key), coils, world.ms, dtS, local);
+    const leak = leaks[place.key] ?? 0;
+    houses[place.key] = stepHouse(place, houseWorld(world, place.key), coils, world.ms, dtS, local, leak);
   }
   return { ...world, ms: world.ms + dtS * 1000, houses, relays };
 }

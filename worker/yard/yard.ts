@@ -5,9 +5,11 @@
 import { reportEveryS, yardHouse } from './catalogue';
 import { AppTime, iso, type Clock } from './clock';
 import type { YardConfig } from './config';
+import { Faults } from './faults';
 import { FieldNode } from './node';
 import { sensorReadings } from './sensors';
 import { nodeFlash } from './store';
+import { hashOf, type FaultOrder, type TrainedNode, type Trainer } from './training-door';
 import { createWorld, stepWorld, type World, type YardRelays } from './world';
 
 /** A world that stood still for longer is taken up from here: nobody waits for a summer to be stepped. */
@@ -19,10 +21,17 @@ const stepEveryS = 5;
 
 export type YardLog = (event: string, fields: Record<string, unknown>) => void;
 
-export class Yard {
+/** A node of the yard, with what is made to go wrong about it. */
+interface Standing {
+  node: FieldNode;
+  faults: Faults;
+  given: YardConfig['nodes'][number];
+}
+
+export class Yard implements Trainer {
   private world: World | undefined;
   private readonly time: AppTime;
-  private readonly nodes: FieldNode[];
+  private readonly standing: Standing[];
   private cancelStep: (() => void) | undefined;
 
   /** @param saved the world of an earlier run, to go on from */
@@ -34,17 +43,20 @@ export class Yard {
   ) {
     this.world = saved;
     this.time = new AppTime(clock, config.rate);
-    this.nodes = config.nodes.map((node) => this.node(node));
+    this.standing = config.nodes.map((given) => {
+      const faults = new Faults();
+      return { node: this.node(given, faults), faults, given };
+    });
   }
 
   start(): void {
-    for (const node of this.nodes) node.start();
+    for (const { node } of this.standing) node.start();
     this.keepStepping();
   }
 
   stop(): void {
     this.cancelStep?.();
-    for (const node of this.nodes) node.stop();
+    for (const { node } of this.standing) node.stop();
   }
 
   /** The world as it is now, for saving; undefined while the time is not known yet. */
@@ -53,7 +65,44 @@ export class Yard {
     return this.world;
   }
 
-  private node({ key, token, house }: YardConfig['nodes'][number]): FieldNode {
+  /** Every node with what is wrong about it just now. */
+  nodes(): TrainedNode[] {
+    const now = this.clock.monotonicMs();
+    return this.standing.map(({ faults, given }) => ({
+      tokenHash: hashOf(given.token),
+      points: yardHouse(given.house).points.map(({ key }) => key),
+      relays: yardHouse(given.house).relays,
+      faults: faults.at(now).map(({ endsMs, ...fault }) => ({
+        ...fault,
+        leftS: Math.ceil(((endsMs - now) * this.config.rate) / 1000),
+      })),
+    }));
+  }
+
+  /** Puts a fault, or ends it. */
+  order({ tokenHash, on, seconds, ...about }: FaultOrder): string | null {
+    const found = this.standing.find(({ given }) => hashOf(given.token) === tokenHash);
+    if (found === undefined) return 'this node is not of the yard';
+    const place = yardHouse(found.given.house);
+    const has = (point: string | null) => place.points.some(({ key }) => key === point);
+    const { fault, point, other, relay } = about;
+    const isProbe = fault === 'dead-sensor' || fault === 'lying-85' || fault === 'swapped-probes';
+    if (isProbe && !has(point)) return `this node has no point "${point ?? ''}"`;
+    if (fault === 'swapped-probes' && (!has(other) || other === point))
+      return 'two different points are swapped';
+    const isRelay = fault === 'welded-relay' || fault === 'dead-fan';
+    if (isRelay && !(relay !== null && relay <= place.relays)) return 'give the relay';
+    // what has been until now is reckoned with the faults of until now
+    this.current();
+    const one = { ...about, endsMs: this.clock.monotonicMs() + this.time.realMs(seconds) };
+    if (on) found.faults.put(one);
+    else found.faults.end(one);
+    this.log('training', { ...this.at(), node: found.given.key, on, ...about });
+    this.supply();
+    return null;
+  }
+
+  private node({ key, token, house }: YardConfig['nodes'][number], faults: Faults): FieldNode {
     const place = yardHouse(house);
     return new FieldNode({
       key,
@@ -67,7 +116,12 @@ export class Yard {
       sample: (appMs) => {
         const world = this.current();
         if (world === undefined) return [];
-        return sensorReadings(world, house, appMs).map(({ key: n, unit: u, value: v }) => ({ n, u, v }));
+        const seen = sensorReadings(world, house, appMs).map(({ key: n, unit: u, value: v }) => ({
+          n,
+          u,
+          v,
+        }));
+        return faults.readings(seen, this.clock.monotonicMs());
       },
       beforeCoilsChange: (monotonicMs) => this.bringUpTo(monotonicMs),
       log: (event, fields) => this.log(event, { ...this.at(), node: key, ...fields }),
@@ -87,7 +141,8 @@ export class Yard {
     const everyMs = Math.min(1000, Math.max(50, this.time.realMs(stepEveryS)));
     this.cancelStep = this.clock.after(everyMs, () => {
       // After a stall each node first sees which coils dropped meanwhile; then the world is stepped.
-      for (const node of this.nodes) node.wake();
+      for (const { node } of this.standing) node.wake();
+      this.supply();
       this.current();
       this.keepStepping();
     });
@@ -106,14 +161,31 @@ export class Yard {
       this.log('world moved on', { hours: Math.round(gapMs / 3_600_000) });
       this.world = stepWorld({ ...world, ms: appMs - catchUpMsMost }, {}, catchUpMsMost / 1000);
     } else {
-      this.world = gapMs > 0 ? stepWorld(world, this.relays(), gapMs / 1000) : world;
+      this.world = gapMs > 0 ? stepWorld(world, this.contacts(), gapMs / 1000, this.leaks()) : world;
     }
   }
 
-  /** Coils by the node that the catalogue wires to each house, whatever key the config gave it. */
-  private relays(): YardRelays {
+  /** Which loads run, by the node that the catalogue wires to each house, whatever key the config gave it. */
+  private contacts(): YardRelays {
+    const now = this.clock.monotonicMs();
     return Object.fromEntries(
-      this.nodes.map((node, i) => [yardHouse(this.config.nodes[i]?.house ?? '').node, node.state().channels]),
+      this.standing.map(({ node, faults, given }) => [
+        yardHouse(given.house).node,
+        faults.contacts(node.state().channels, now),
+      ]),
     );
+  }
+
+  private leaks(): Record<string, number> {
+    const now = this.clock.monotonicMs();
+    return Object.fromEntries(this.standing.map(({ faults, given }) => [given.house, faults.leak(now)]));
+  }
+
+  /** Power and line of each node are as its faults say; what has ended by itself is mended here. */
+  private supply(): void {
+    const now = this.clock.monotonicMs();
+    for (const { node, faults } of this.standing) {
+      node.supply({ power: !faults.has('power-cut', now), line: !faults.has('lost-link', now) });
+    }
   }
 }

@@ -9,6 +9,7 @@ import * as people from './people';
 import * as record from './record';
 import * as rules from './rules';
 import * as running from './running';
+import * as training from './training';
 import * as wiring from './wiring';
 import * as yard from './yard';
 
@@ -16,6 +17,7 @@ import * as yard from './yard';
 export const OPERATIONS: readonly Operation[] = [
   yard,
   wiring,
+  training,
   running,
   rules,
   record,
