@@ -1,5 +1,6 @@
 import type { Operation } from '../operation';
 import * as archives from './archives';
+import * as buses from './buses';
 import * as files from './files';
 import * as heap from './heap';
 import * as heapYear from './heap-year';
@@ -16,6 +17,7 @@ import * as yard from './yard';
 export const OPERATIONS: readonly Operation[] = [
   yard,
   wiring,
+  buses,
   running,
   rules,
   record,
