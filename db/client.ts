@@ -17,6 +17,7 @@ import * as rule from './schema/rule';
 import * as nodeLog from './schema/node-log';
 import * as running from './schema/running';
 import * as study from './schema/study';
+import * as testRead from './schema/test-read';
 import * as watch from './schema/watch';
 
 export const schema = {
@@ -33,6 +34,7 @@ export const schema = {
   ...nodeLog,
   ...running,
   ...study,
+  ...testRead,
   ...watch,
 };
 /** The pool's handle, or that of one transaction. */

@@ -20,6 +20,8 @@ async function main() {
   const cluster = await testCluster();
   const { ensureChromium } = await import('./chromium.mjs');
   say(`browser for the tests: ${ensureChromium()}`);
+  const { ensureMosquitto } = await import('./mosquitto.mjs');
+  say(`broker for the tests: ${ensureMosquitto()}`);
 
   const chosen = process.argv.slice(2);
   const checks = chosen.length === 0 ? await runChecks() : [];

@@ -6,6 +6,8 @@ const HELP = {
   readings_commits_total: 'Transactions in which readings were committed.',
   readings_refused_total: 'Records of packs refused, each with its reason.',
   frames_malformed_total: 'Frames of nodes that could not be read.',
+  frames_retained_total: 'Messages that a broker had kept: ignored.',
+  frames_unsigned_total: 'Messages of a broker that no known node has signed: ignored.',
   commands_sent_total: 'Commands sent to nodes, renewals among them.',
   commands_withheld_total: 'Commands not sent since they would have come too late.',
   takeovers_total: 'Connections that took over from another of the same node.',

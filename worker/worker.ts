@@ -2,12 +2,14 @@
 import type http from 'node:http';
 import { tellOfGap } from './alarms/gap';
 import { AlarmKeeper } from './alarms/keeper';
+import { LEASE_S } from '@/db/queries/leader';
 import type { Base } from './base';
 import { keepGap } from './control/gap';
 import { Journal } from './control/journal';
 import { Houses } from './control/houses';
 import { Lead } from './control/lead';
 import { Listener } from './control/listener';
+import { Buses } from './field/buses';
 import { Gate } from './field/gate';
 import { Ingest } from './field/ingest';
 import { Stall } from './field/stall';
@@ -48,17 +50,27 @@ export async function startWorker(base: Base, instance: string, port: number): P
   });
   const hub = new Hub({ ...base, houses, isLeading });
   const gate = new Gate({ ...base, houses, ingest, stall, isLeading });
+  const buses = new Buses(
+    {
+      ...{ ...base, ingest, gate, epoch: () => lead.epoch ?? 0 },
+      isSure: () => lead.epoch !== null && (lead.heartbeatAgeS ?? Infinity) < LEASE_S,
+    },
+    houses,
+  );
   const jobs = new Jobs({ ...base, houses, ingest, isLeading });
   const lead: Lead = new Lead(base, instance, {
     lastStepAt: () => houses.lastStepAt(),
     onLead: async ({ formerHeartbeatAt, wasReleased }) => {
       await houses.lead(formerHeartbeatAt);
+      buses.start();
       jobs.start();
       await keepGap(base, formerHeartbeatAt);
       await tellOfGap(base, wasReleased ? null : formerHeartbeatAt);
     },
     onLost: () => {
       jobs.stop();
+      // who leads now speaks to the boards
+      void buses.stop(false);
       gate.closeAll();
       hub.closeAll();
       houses.stop(false);
@@ -74,9 +86,11 @@ export async function startWorker(base: Base, instance: string, port: number): P
       if (channel === 'plan') {
         houses.planChanged(payload).then(() => {
           gate.recheck(payload);
+          buses.look();
           hub.tell(payload, { type: 'plan', house: payload });
         }, complain);
       }
+      if (channel === 'test_read') buses.answer().catch(complain);
       if (channel === 'alarm') {
         for (const house of houses.all().filter((one) => one.holdingId === payload)) {
           hub.tell(house.id, { type: 'alarms', house: house.id });
@@ -92,6 +106,7 @@ export async function startWorker(base: Base, instance: string, port: number): P
   metrics.gauge('epoch', 'Epoch of its lead.', () => lead.epoch ?? 0);
   metrics.gauge('houses', 'Houses under control.', () => houses.all().length);
   metrics.gauge('nodes_online', 'Nodes connected.', () => gate.online);
+  metrics.gauge('buses_online', 'Boards and brokers connected to.', () => buses.online);
   metrics.gauge('live_readers', 'Browsers connected.', () => hub.count);
   metrics.gauge('readings_held', 'Readings not yet committed.', () => ingest.held);
   metrics.gauge('journal_held', 'Rows of control not yet committed.', () => journal.held);
@@ -126,6 +141,7 @@ export async function startWorker(base: Base, instance: string, port: number): P
     stop: async () => {
       listener.stop();
       jobs.stop();
+      await buses.stop(isLeading());
       hub.closeAll();
       gate.closeAll();
       houses.stop(isLeading());

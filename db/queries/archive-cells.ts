@@ -2,6 +2,7 @@
 import { z } from 'zod';
 import { CLAIMS } from '@/lib/control/types';
 import { ALARM_KINDS } from '@/lib/schema/alarm';
+import { ModbusBus, MqttBus, Registers } from '@/lib/schema/bus';
 import { Key, Zone } from '@/lib/schema/common';
 import { HEAP_ENTRY_KINDS, HeapMaterial } from '@/lib/schema/heap';
 import { HEAP_JOB_KINDS } from '@/lib/schema/heap-job';
@@ -37,6 +38,7 @@ export const CELLS: Readonly<Record<string, Readonly<Record<string, z.ZodType>>>
   node: {
     ...{ key: Key, kind: nodeFields.kind, channels: nodeFields.channels },
     report_every_s: nodeFields.reportEvery,
+    ...{ modbus: ModbusBus, mqtt: MqttBus, registers: Registers },
   },
   point: {
     ...{ key: Key, name: pointFields.name, role: pointFields.role, unit: pointFields.unit },

@@ -26,7 +26,15 @@ type TableKey = keyof typeof schema;
 /** Parents before what names them. */
 const GIVEN: [TableKey, Given][] = [
   ['house', { without: ['plan_revision', 'laid_up_at'] }],
-  ['node', { without: ['token_hash', 'former_token_hash', 'former_token_until', 'status', 'last_heard_at'] }],
+  [
+    'node',
+    {
+      without: [
+        ...['token_hash', 'former_token_hash', 'former_token_until', 'bus_secret'],
+        ...['status', 'last_heard_at'],
+      ],
+    },
+  ],
   ['point', { refs: { node_id: 'node' } }],
   ['calibration', {}],
   ['source', { refs: { core_point_id: 'point', base_point_id: 'point' } }],
@@ -80,13 +88,14 @@ export const STAYS: Partial<Record<TableKey, string>> = {
   calendarLink: 'secret addresses of calendars',
   idempotency: 'answers kept for a day against doubled requests',
   controlMemory: 'the control’s memory of its last step',
+  testRead: 'test readings of boards',
   archive: 'the list of archives themselves',
 };
 
 /** Said in every manifest. */
 export const LEFT_OUT: readonly string[] = [
   'passwords, sessions and invitations: people are listed by name, e-mail and role, and are invited anew',
-  'tokens of field nodes',
+  'tokens of field nodes, and passwords of brokers',
   'settings of the mail server',
   ...Object.values(STAYS),
   'roll-ups of readings, which are made anew',

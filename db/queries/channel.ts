@@ -8,6 +8,7 @@ import type { ChannelCreate } from '@/lib/schema/channel';
 import { Channel } from '@/lib/schema/yard-view';
 import { ofARun, ofOwnNode } from './channel-points';
 import { listNodes } from './node';
+import { refuseHeater } from './node-bus';
 import { touchPlan } from './plan';
 import { rulesOfChannel } from './point-uses';
 import { houseNames, inUse, isId, type HouseNames } from './reference';
@@ -63,6 +64,7 @@ async function columns(holding: Holding, houseId: string, given: Given) {
       `Node ${node.key} has ${relays === 0 ? 'no relays' : `relays 1 to ${relays}`}.`,
     );
   }
+  await refuseHeater(holding, node.id, given.load.kind);
   const named = <T extends { point: string }>(part: T | null, path: string): T | null =>
     part === null ? null : { ...part, point: names.points.find(part.point, `${path}.point`).key };
   const { number, relay, key, label, frostHelp, contact, startsPerHour } = given;

@@ -8,6 +8,7 @@ import { channel } from '@/db/schema/channel';
 import { node, point } from '@/db/schema/node';
 import type { NodeCreate } from '@/lib/schema/node';
 import { FieldNode } from '@/lib/schema/yard-view';
+import { keptBus, refuseLosingWatchdog, toldBus } from './node-bus';
 import { touchPlan } from './plan';
 import { inUse, isId } from './reference';
 import { Refusal } from './refusal';
@@ -23,6 +24,7 @@ function toNode(row: typeof node.$inferSelect): FieldNode {
     kind: row.kind,
     reportEvery: row.reportEveryS,
     channels: row.channels,
+    ...toldBus(row),
     lastHeardAt: iso(row.lastHeardAt),
     revokedAt: iso(row.revokedAt),
     formerTokenUntil: iso(row.formerTokenUntil),
@@ -52,12 +54,14 @@ export async function createNode(
   houseId: string,
   given: Given,
   tokenHash: string,
+  seal: (password: string) => string,
 ): Promise<FieldNode> {
   const { key, kind, channels, reportEvery } = given;
   const rows = await holding.db
     .insert(node)
     .values({
       ...{ key, kind, channels, houseId, tokenHash },
+      ...keptBus(given, null, seal),
       reportEveryS: reportEvery,
       id: uuid(),
       holdingId: holding.id,
@@ -71,7 +75,8 @@ export async function amendNode(
   holding: Holding,
   houseId: string,
   id: string,
-  given: Omit<Given, 'kind'>,
+  given: Given,
+  seal: (password: string) => string,
 ): Promise<FieldNode> {
   const used = await holding.db
     .select({ most: sql<number>`coalesce(max(${channel.relay}), 0)`.mapWith(Number) })
@@ -79,7 +84,13 @@ export async function amendNode(
     .where(and(inUse(holding, houseId, channel), eq(channel.nodeId, id)));
   const most = used[0]?.most ?? 0;
   if (given.channels < most) throw new Refusal('channels', `Relay ${most} is in use; at least ${most}.`);
+  await refuseLosingWatchdog(holding, id, given.kind, given.modbus);
+  const [before] = await holding.db
+    .select()
+    .from(node)
+    .where(and(eq(node.holdingId, holding.id), eq(node.id, id)));
   return change(holding, houseId, id, {
+    ...keptBus(given, before ?? null, seal),
     key: given.key,
     channels: given.channels,
     reportEveryS: given.reportEvery,

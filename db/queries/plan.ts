@@ -7,6 +7,7 @@ import { channel, interlock, lockout, loop, source } from '@/db/schema/channel';
 import { house } from '@/db/schema/house';
 import { calibration, node, point } from '@/db/schema/node';
 import type { Contact, HouseConfig } from '@/lib/control/types';
+import type { ModbusBus, MqttBus, Register } from '@/lib/schema/bus';
 import { houseConfig } from './house-config';
 
 export interface HouseHead {
@@ -33,6 +34,12 @@ export interface NodeWiring {
   tokens: { hash: string; until: number | null }[];
   lastHeardAt: number | null;
   status: Record<string, unknown>;
+  /** How it is reached, where the worker has to go to it. */
+  modbus: ModbusBus | null;
+  mqtt: MqttBus | null;
+  /** The broker's password, sealed. */
+  busSecret: string | null;
+  registers: Register[];
 }
 
 export interface PointWiring {
@@ -195,6 +202,10 @@ function nodeWiring(row: typeof node.$inferSelect): NodeWiring {
     tokens: row.revokedAt === null ? tokens : [],
     lastHeardAt: row.lastHeardAt?.getTime() ?? null,
     status: row.status,
+    modbus: row.modbus,
+    mqtt: row.mqtt,
+    busSecret: row.busSecret,
+    registers: row.registers,
   };
 }
 

@@ -215,7 +215,12 @@ const NODES_A_STATEMENT = 500;
 /** What the link last knew of each node, for the wiring page and for a restarted worker. */
 export async function writeNodeStatus(
   db: Db,
-  nodes: readonly { id: string; holdingId: string; lastHeardAt: number; status: Record<string, unknown> }[],
+  nodes: readonly {
+    id: string;
+    holdingId: string;
+    lastHeardAt: number | null;
+    status: Record<string, unknown>;
+  }[],
 ): Promise<void> {
   for (let first = 0; first < nodes.length; first += NODES_A_STATEMENT) {
     const told = nodes
@@ -224,10 +229,10 @@ export async function writeNodeStatus(
         holding_id: holdingId,
         id,
         status,
-        heard_at: new Date(lastHeardAt),
+        heard_at: lastHeardAt === null ? null : new Date(lastHeardAt),
       }));
     await db.execute(sql`
-      update node set status = told.status, last_heard_at = told.heard_at
+      update node set status = told.status, last_heard_at = coalesce(told.heard_at, node.last_heard_at)
       from jsonb_to_recordset(${JSON.stringify(told, storable)}::jsonb)
         as told(holding_id uuid, id uuid, status jsonb, heard_at timestamptz)
       where node.holding_id = told.holding_id and node.id = told.id`);

@@ -13,6 +13,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
+import type { ModbusBus, MqttBus, Register } from '@/lib/schema/bus';
 import { createdAt, holdingId, instant, removedAt, revision } from './columns';
 import { inHouse, ofHouse } from './of-house';
 
@@ -31,6 +32,14 @@ export const node = pgTable(
     formerTokenHash: text('former_token_hash'),
     formerTokenUntil: instant('former_token_until'),
     revokedAt: instant('revoked_at'),
+    /** How a board on Modbus TCP is reached; null too for every other kind. */
+    modbus: jsonb('modbus').$type<ModbusBus>(),
+    /** How the broker of a node is reached, but for its password; null too for every other kind. */
+    mqtt: jsonb('mqtt').$type<MqttBus>(),
+    /** The broker's password, sealed. */
+    busSecret: text('bus_secret'),
+    /** What is read of a board, and as which point. */
+    registers: jsonb('registers').$type<Register[]>().notNull().default([]),
     /** What the link last knew: boot, firmware, clock error, trips, refused readings. */
     status: jsonb('status').$type<Record<string, unknown>>().notNull().default({}),
     lastHeardAt: instant('last_heard_at'),

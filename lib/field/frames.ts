@@ -99,6 +99,8 @@ export const welcomeFrame = z.strictObject({
   rate: z.number().positive(),
   lease: z.number().positive(),
   report: z.number().positive(),
+  /** By way of a broker only: of the lead that answers. */
+  epoch: z.number().int().nonnegative().optional(),
 });
 
 export const refusedRecord = z.strictObject({
@@ -142,6 +144,8 @@ export const errorFrame = z.strictObject({
   type: z.literal('error'),
   why: z.string(),
   seq: seq.optional(),
+  /** By way of a broker only, where no line is seen to end: say hello again. */
+  hello: z.boolean().optional(),
 });
 
 export const serverFrame = z.union([welcomeFrame, readingsAckFrame, logAckFrame, commandFrame, errorFrame]);

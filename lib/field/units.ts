@@ -83,6 +83,11 @@ const wireUnits: ReadonlyMap<string, WireUnit> = new Map([
   ['l/s', unit(flow, 1, 1000)],
 ]);
 
+/** Whether a SenML unit is one that this program reads. @example isWireUnit('Far') */
+export function isWireUnit(name: string): boolean {
+  return wireUnits.has(name);
+}
+
 export type Converted = { ok: true; value: number } | { ok: false; why: string };
 
 /**

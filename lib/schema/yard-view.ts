@@ -1,5 +1,6 @@
 /** The things of the yard as routes answer them and pages show them: what was given, with its id and how often it changed. */
 import { z } from 'zod';
+import { ModbusBus, MqttTold, Register } from './bus';
 import { channelFields } from './channel';
 import { houseFields } from './house';
 import { nodeFields } from './node';
@@ -22,6 +23,9 @@ export type House = z.infer<typeof House>;
 export const FieldNode = z.strictObject({
   ...entity,
   ...nodeFields,
+  modbus: ModbusBus.nullable(),
+  mqtt: MqttTold.nullable(),
+  registers: z.array(Register),
   lastHeardAt: at.nullable(),
   revokedAt: at.nullable(),
   /** A former token stays good until then. */

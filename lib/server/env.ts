@@ -3,6 +3,30 @@ import { z } from 'zod';
 
 const Port = z.coerce.number().int().min(0).max(65_535);
 
+export interface BusHost {
+  host: string;
+  /** Null: any. */
+  port: number | null;
+}
+
+const BUS_HOST = /^(?:\[([0-9a-f:.]+)\]|([a-z0-9][a-z0-9.-]*))(?::(\d{1,5}))?$/;
+
+function busHosts(text: string, context: z.RefinementCtx): BusHost[] {
+  return text.split(',').flatMap((part) => {
+    const entry = part.trim().toLowerCase();
+    if (entry === '') return [];
+    const [, six, host = six, port] = BUS_HOST.exec(entry) ?? [];
+    if (host === undefined || Number(port ?? 1) < 1 || Number(port ?? 1) > 65_535) {
+      context.addIssue({
+        code: 'custom',
+        message: 'must be a list such as 192.0.2.10:502, broker.example, [2001:db8::1]:8883',
+      });
+      return [];
+    }
+    return { host, port: port === undefined ? null : Number(port) };
+  });
+}
+
 const Env = z.object({
   /** App role: neither owner nor above row security. */
   DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/, error: 'must be a postgres:// address' }),
@@ -19,6 +43,8 @@ const Env = z.object({
   CLOCK_RATE: z.coerce.number().min(0.1).max(600).default(1),
   /** Where the simulated yard takes orders of faults for training, on loopback. */
   TRAINING_PORT: Port.optional(),
+  /** Which boards and brokers may be connected to: `host` or `host:port`, with commas between them. */
+  BUS_HOSTS: z.string().default('').transform(busHosts),
   YARD: z.enum(['on', 'off']).default('on'),
   DEMO_PASSWORD: z.string().min(15, 'must be at least 15 characters').optional(),
   /** Real milliseconds in which sign-ins are counted, and how many are let through. */

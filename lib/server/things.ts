@@ -25,7 +25,9 @@ import { isId } from '@/db/queries/reference';
 import { findReportSchedule } from '@/db/queries/report-schedule';
 import { findRule, type FoundRule } from '@/db/queries/rule';
 import { findSource } from '@/db/queries/source';
+import { findTestRead } from '@/db/queries/test-read';
 import type { Archive } from '@/lib/schema/archive';
+import type { TestRead } from '@/lib/schema/bus';
 import type { Dismissal } from '@/lib/schema/heap-finding';
 import type { HeapJob } from '@/lib/schema/heap-job';
 import type { HeapEntry, Photograph } from '@/lib/schema/heap-view';
@@ -49,6 +51,7 @@ import type {
 export interface Things {
   house: House;
   node: FieldNode;
+  testRead: TestRead;
   point: Point;
   source: Source;
   channel: Channel;
@@ -80,6 +83,7 @@ type Find<T> = (holding: Holding, ref: string, houseId: string) => Promise<T | n
 export const FIND: { [K in ThingName]: Find<Things[K]> } = {
   house: findHouse,
   node: (holding, ref, house) => findNode(holding, house, ref),
+  testRead: (holding, ref, house) => findTestRead(holding, house, ref),
   point: (holding, ref, house) => findPoint(holding, house, ref),
   source: (holding, ref, house) => findSource(holding, house, ref),
   channel: (holding, ref, house) => findChannel(holding, house, ref),

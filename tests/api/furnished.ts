@@ -37,8 +37,16 @@ export async function furnish(holding: Holding, owner: Asker): Promise<Furnished
   await keep('house', '/houses', shown.house);
   const at = '/houses/long-house';
   await keep('node', `${at}/nodes`, shown.node);
+  await owner.make(`${at}/nodes`, shown.board);
   for (const point of shown.otherPoints) await owner.make(`${at}/points`, point);
   await keep('point', `${at}/points`, shown.bench);
+  await keep('testRead', `${at}/test-reads`, {
+    node: 'MB-1',
+    table: 'input',
+    address: 0,
+    type: 's16',
+    unit: 'Cel',
+  });
   await keep('source', `${at}/sources`, shown.source);
   await owner.make(`${at}/channels`, shown.vent);
   await keep('channel', `${at}/channels`, shown.fan);

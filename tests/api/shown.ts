@@ -9,6 +9,20 @@ export const house = {
   frostAlarm: 2.0,
 };
 export const node = { key: 'LH-1', kind: 'socket', reportEvery: 30, channels: 8 };
+/** SOURCE: the product's own docs/buses.md. */
+export const board = {
+  key: 'MB-1',
+  kind: 'modbus',
+  reportEvery: 10,
+  channels: 4,
+  modbus: { host: '127.0.0.1', port: 502, unit: 1, timeout: 2, firstCoil: 0, watchdog: null },
+  registers: [
+    {
+      ...{ point: 'bench-2', table: 'input', address: 0, type: 's16', wordOrder: 'high-first' },
+      ...{ scale: 0.1, offset: 0, unit: 'Cel' },
+    },
+  ],
+};
 export const bench = {
   key: 'bench-1',
   node: 'LH-1',

@@ -14,6 +14,7 @@ process.env['DATA_DIR'] = dataDir;
 process.env['AUTH_SECRET'] = 'only-for-tests-only-for-tests-only-for-tests';
 process.env['PUBLIC_URL'] = 'http://localhost:3000';
 process.env['CLOCK_RATE'] = '1';
+process.env['BUS_HOSTS'] = '127.0.0.1, localhost';
 process.env['LOG_LEVEL'] = 'silent';
 
 afterAll(async () => {

@@ -26,19 +26,21 @@ export interface WantedAlarms {
 
 /**
  * App time at which a node that says nothing more is lost. Silence counts from the worker's own start, for before it the
- * silence may have been ours. Null: it is here, was never heard of, or is not one that calls.
+ * silence may have been ours. Null: it is here, or was never heard of.
  */
 export function lostAt(
   node: NodeWiring,
   standing: NodeStanding | undefined,
   startedAt: number,
 ): number | null {
-  const calls = node.kind === 'socket' || node.kind === 'http';
-  if (!calls || standing === undefined || standing.lastHeardAt === null) return null;
-  if (node.kind === 'socket' && standing.online) return null;
+  if (standing === undefined || standing.lastHeardAt === null) return null;
+  if (isLinked(node) && standing.online) return null;
   const heardAt = Math.max(standing.lastHeardAt, startedAt);
   return heardAt + SILENT_INTERVALS * node.reportEveryS * 1000 + LOST_AFTER_SILENCE_MS;
 }
+
+/** It is here while its link stands; one that only posts is here while it does. */
+const isLinked = (node: NodeWiring) => node.kind !== 'http';
 
 /** What stands while a house's own step fails: nothing is known of the rest. */
 export function controlFailed(houseId: string, why: string, since: number): WantedAlarms {
@@ -89,7 +91,7 @@ export function wantedAlarms(
         since: now,
       });
     }
-    const isHere = node.kind === 'socket' ? standing?.online === true : at !== null && now < at;
+    const isHere = isLinked(node) ? standing?.online === true : at !== null && now < at;
     if (!isHere) away.add(node.id);
   }
   for (const fault of result.faults) {

@@ -42,7 +42,7 @@ export class AttachedNode {
     private readonly house: ControlledHouse,
     formerLeaseEnd: number | null,
     remembered: RememberedLoads,
-    deps: HouseDeps,
+    private readonly deps: HouseDeps,
   ) {
     const channels = this.channels();
     this.relays = new NodeRelays(
@@ -61,6 +61,7 @@ export class AttachedNode {
       isCloned: false,
       isEpochTooFar: false,
     };
+    this.relays.hold(heldAfterLeaseMs(wiring, deps.clock.rate));
     this.fallback = new NodeFallback(() => this.channels(), keptAlone(wiring.status));
     this.orders = new NodeOrders(this.relays, () => this.link, house, deps);
     this.relayCount = wiring.channels;
@@ -76,6 +77,7 @@ export class AttachedNode {
   rewire(wiring: NodeWiring): void {
     this.wiring = wiring;
     this.relays.rewire(this.channels());
+    this.relays.hold(heldAfterLeaseMs(wiring, this.deps.clock.rate));
   }
 
   attach(link: CommandLink): void {
@@ -86,6 +88,16 @@ export class AttachedNode {
   detach(): void {
     this.link = null;
     this.standing.online = false;
+    // a board holds no lease: what it last showed says nothing of what its coils are now
+    if (this.wiring.kind === 'modbus') this.relays.lost();
+  }
+
+  /** Why there is no link to a node that the worker goes to itself; null: there is one. */
+  tellLink(why: string | null, at: number): void {
+    const { linkTrouble } = this.status;
+    if ((linkTrouble ?? null) === why) return;
+    this.status = { ...this.status, linkTrouble: why, linkSince: at };
+    this.isNoted = true;
   }
 
   heard(now: number): void {
@@ -121,15 +133,22 @@ export class AttachedNode {
   }
 
   /** What has changed since the last call, for its row; null where nothing has. */
-  takeNote(): { lastHeardAt: number; status: Record<string, unknown> } | null {
+  takeNote(): { lastHeardAt: number | null; status: Record<string, unknown> } | null {
     const { lastHeardAt } = this.standing;
-    if (!this.isNoted || lastHeardAt === null) return null;
+    if (!this.isNoted) return null;
     this.isNoted = false;
     return {
       lastHeardAt,
       status: { ...this.status, ...this.relays.status(), ...this.fallback.status() },
     };
   }
+}
+
+/** How long a coil may stay on after the last lease: a board drops it by its watchdog, or never. App ms. */
+function heldAfterLeaseMs({ kind, modbus }: NodeWiring, rate: number): number {
+  if (kind !== 'modbus') return 0;
+  const watchdog = modbus?.watchdog ?? null;
+  return watchdog === null ? Infinity : watchdog.within * 1000 * rate;
 }
 
 function keptTrips(status: Record<string, unknown>): { boot: BootId; trips: number } | null {

@@ -76,6 +76,11 @@ export class HouseNodes {
     this.deps.onPack(this.house, node.wiring.key, told);
   }
 
+  /** How the way to a node stands that the worker goes to itself; null: it is there. */
+  tellLink(nodeId: string, why: string | null): void {
+    this.nodes.get(nodeId)?.tellLink(why, this.deps.clock.appNow());
+  }
+
   setCloned(nodeId: string, isCloned: boolean): void {
     const node = this.nodes.get(nodeId);
     if (node === undefined) return;
@@ -180,7 +185,12 @@ export class HouseNodes {
   }
 
   /** What has changed of each node since the last call, for its row. */
-  takeNotes(): { id: string; holdingId: string; lastHeardAt: number; status: Record<string, unknown> }[] {
+  takeNotes(): {
+    id: string;
+    holdingId: string;
+    lastHeardAt: number | null;
+    status: Record<string, unknown>;
+  }[] {
     return [...this.nodes].flatMap(([id, node]) => {
       const note = node.takeNote();
       return note === null ? [] : { id, holdingId: this.house.holdingId, ...note };

@@ -26,7 +26,7 @@ export class Listener {
       };
       client.on('error', lost);
       client.on('end', lost);
-      await client.query('listen plan; listen command; listen alarm');
+      await client.query('listen plan; listen command; listen alarm; listen test_read');
       this.missed();
     } catch {
       this.client?.release(true);

@@ -38,6 +38,8 @@ export interface Trip {
 }
 
 const LEASE_MS = leaseS * 1000;
+/** The greatest that a date can be: the memory keeps it as JSON, which has no infinity. */
+const LAST_INSTANT = 8.64e15;
 /** A node's lease ends sooner than it can by our reckoning: by as long as frames are under way. */
 const UNDER_WAY_MS = 2000;
 
@@ -50,6 +52,8 @@ export class NodeRelays {
   private trips: { boot: BootId; count: number } | null;
   /** Coils as last known, over boots and connections. */
   private lastCoils: Coils = {};
+  private isLost = false;
+  private heldMs = 0;
 
   constructor(
     private channels: ChannelWiring[],
@@ -66,6 +70,16 @@ export class NodeRelays {
 
   rewire(channels: ChannelWiring[]): void {
     this.channels = channels;
+  }
+
+  /** Coils may stay as they are for so long (app ms) after a lease has ended; Infinity: for ever. */
+  hold(ms: number): void {
+    this.heldMs = ms;
+  }
+
+  /** Nothing is known of the coils until they are reported again. */
+  lost(): void {
+    this.isLost = true;
   }
 
   get lastReport(): Report | null {
@@ -177,12 +191,14 @@ export class NodeRelays {
     const isAlone = canFallback && (isOver || trip !== null);
     this.report = { at, boot, channels: frame.channels, number: frame.number, isAlone };
     this.lastCoils = { ...before, ...frame.channels };
-    const isNews = trip !== null || changed.length > 0 || former === null || !saysSame(former, this.report);
+    const isNews =
+      trip !== null || changed.length > 0 || this.isLost || former === null || !saysSame(former, this.report);
+    this.isLost = false;
     return { changed, trip, isNews };
   }
 
   observed(channel: ChannelWiring): ObservedRelay | null {
-    const coil = this.report?.channels[String(channel.relay)];
+    const coil = this.isLost ? undefined : this.report?.channels[String(channel.relay)];
     if (this.report === null && this.leaseEndsAt === null) return null;
     const isAlone = this.report?.isAlone === true && coil === 'on' && channel.fallback !== null;
     return {
@@ -191,8 +207,11 @@ export class NodeRelays {
       reportedAt: coil === undefined ? null : (this.report?.at ?? null),
       // while its fallback runs, no order of ours stands against what it says
       acknowledges:
-        isAlone || (this.report !== null && this.report.number >= (this.changedBy.get(channel.relay) ?? 0)),
-      leaseEndsAt: this.leaseEndsAt,
+        isAlone ||
+        (this.report !== null &&
+          !this.isLost &&
+          this.report.number >= (this.changedBy.get(channel.relay) ?? 0)),
+      leaseEndsAt: this.leaseEndsAt === null ? null : Math.min(this.leaseEndsAt + this.heldMs, LAST_INSTANT),
     };
   }
 

@@ -10,6 +10,7 @@ import type { Cancel } from '../clock';
 import type { House } from '../control/house';
 import type { Houses } from '../control/houses';
 import type { Ingest } from './ingest';
+import { SocketLine, type Line } from './line';
 import { NodeLink } from './link';
 import { refuseUpgrade } from './problem';
 import { takePosted } from './posted';
@@ -56,16 +57,24 @@ export class Gate {
     if (admitted === 'away') return refuseUpgrade(socket, 503, 'Not ready for nodes yet; try again.');
     if (admitted === null) return refuseUpgrade(socket, 401, 'This token opens nothing here.');
     this.sockets.handleUpgrade(request, socket, head, (ws) => {
-      const link = new NodeLink(ws, admitted.house, admitted.node.id, admitted.tokenHash, {
-        ...this.deps,
-        onHello: (one) => this.greeted(one),
-        onClose: (one) => this.closed(one),
-      });
-      this.takeOver(link);
-      this.open.add(link);
-      this.cancelWatch ??= this.deps.clock.every(pingEveryMs / 4, () => this.watch());
-      this.deps.stall.add(link);
+      const failed = (error: Error) =>
+        this.deps.log.debug({ err: error, node: admitted.node.id }, 'the line of a node failed');
+      this.carry(new SocketLine(ws, failed), admitted.house, admitted.node.id, admitted.tokenHash);
     });
+  }
+
+  /** A line that a node stands behind, as its token has shown: it is the node's from now on. */
+  carry(line: Line, house: House, nodeId: string, tokenHash: string): NodeLink {
+    const link = new NodeLink(line, house, nodeId, tokenHash, {
+      ...this.deps,
+      onHello: (one) => this.greeted(one),
+      onClose: (one) => this.closed(one),
+    });
+    this.takeOver(link);
+    this.open.add(link);
+    this.cancelWatch ??= this.deps.clock.every(pingEveryMs / 4, () => this.watch());
+    this.deps.stall.add(link);
+    return link;
   }
 
   async post(request: IncomingMessage, response: ServerResponse): Promise<void> {
@@ -96,14 +105,15 @@ export class Gate {
     // Known houses first: nodes find in while the database is away.
     for (const house of this.deps.houses.all()) {
       const node = house.record.nodes.find((one) => opens(one, tokenHash, this.deps.clock.realNow()));
-      if (node !== undefined) return { house, node, tokenHash };
+      if (node !== undefined) return calls(node) ? { house, node, tokenHash } : null;
     }
     const found = await findNodeByToken(this.deps.db, tokenHash);
     if (found === null) return null;
     // Made a moment ago: the notification may still be on its way.
     const house = await this.deps.houses.refresh(found.holdingId, found.houseId);
     const node = house?.record.nodes.find((one) => one.id === found.nodeId);
-    return house === undefined || node === undefined ? 'away' : { house, node, tokenHash };
+    if (house === undefined || node === undefined) return 'away';
+    return calls(node) ? { house, node, tokenHash } : null;
   }
 
   /** The newest connection is the node's, from when it opens: what the token opens is not shared. */
@@ -152,6 +162,11 @@ export class Gate {
     if (this.links.get(link.nodeId) === link) this.links.delete(link.nodeId);
     link.house.nodes.detach(link.nodeId, link);
   }
+}
+
+/** One on a bus is gone to: two ways to one node would command it twice. */
+function calls({ kind }: NodeWiring): boolean {
+  return kind === 'socket' || kind === 'http';
 }
 
 function opens(node: NodeWiring, tokenHash: string, realNow: number): boolean {

@@ -1,5 +1,4 @@
 /** One connection of a node: frames in, frames out, the line watched from both sides. */
-import type { WebSocket } from 'ws';
 import type { NodeWiring } from '@/db/queries/plan';
 import {
   closeCode,
@@ -7,7 +6,6 @@ import {
   malformedPerMinuteMax,
   parseNodeFrame,
   pingEveryMs,
-  silenceMs,
   type BootId,
   type CommandFrame,
   type HelloFrame,
@@ -17,9 +15,9 @@ import {
 import type { Base } from '../base';
 import type { CommandLink } from '../control/command-link';
 import type { House } from '../control/house';
-import { rawText } from '../raw-text';
 import type { Ingest } from './ingest';
 import { takePack } from './intake';
+import type { Line } from './line';
 import type { Stall } from './stall';
 
 /** A command that leaves later than this after it was made is not sent: the state of the house has moved on. */
@@ -49,18 +47,19 @@ export class NodeLink implements CommandLink {
   private lastPingMs = -Infinity;
 
   constructor(
-    private readonly socket: WebSocket,
+    private readonly line: Line,
     readonly house: House,
     readonly nodeId: string,
     readonly tokenHash: string,
     private readonly deps: LinkDeps,
   ) {
     this.heardAtMs = deps.clock.monotonicMs();
-    socket.on('message', (data, isBinary) => this.guard(() => this.take(rawText(data), isBinary)));
-    socket.on('pong', (data) => this.guard(() => this.takePong(data)));
-    socket.on('ping', () => this.guard(() => this.heard()));
-    socket.on('error', (error) => deps.log.debug({ err: error, node: nodeId }, 'the line of a node failed'));
-    socket.on('close', () => this.closed());
+    line.listen({
+      text: (text, isBinary) => this.guard(() => this.take(text, isBinary)),
+      pong: (mark) => this.guard(() => this.takePong(mark)),
+      heard: () => this.guard(() => this.heard()),
+      closed: () => this.closed(),
+    });
   }
 
   /** As wired now; a change of plan may have changed it. */
@@ -74,9 +73,9 @@ export class NodeLink implements CommandLink {
 
   close(code: number, why: string): void {
     if (this.isClosed) return;
-    this.socket.close(code, why);
+    this.line.close(code, why);
     // One that does not answer the closing is cut: it may be half-open.
-    this.deps.clock.after(1000, () => this.socket.terminate());
+    this.deps.clock.after(1000, () => this.line.cut());
     this.closed();
   }
 
@@ -170,8 +169,7 @@ export class NodeLink implements CommandLink {
   }
 
   private send(frame: ServerFrame): void {
-    if (!this.isClosed && this.socket.readyState === this.socket.OPEN)
-      this.socket.send(JSON.stringify(frame));
+    if (!this.isClosed) this.line.send(JSON.stringify(frame));
   }
 
   private heard(): void {
@@ -187,9 +185,9 @@ export class NodeLink implements CommandLink {
   /** Called each quarter of the time between two pings. */
   watch(): void {
     const now = this.deps.clock.monotonicMs();
-    if (now - this.heardAtMs > silenceMs) {
+    if (now - this.heardAtMs > this.line.silenceMs) {
       this.deps.log.info({ node: this.nodeId }, 'a node is silent; its line is cut');
-      this.socket.terminate();
+      this.line.cut();
       return this.closed();
     }
     if (now - this.lastPingMs < pingEveryMs - PING_SLACK_MS) return;
@@ -198,7 +196,7 @@ export class NodeLink implements CommandLink {
   }
 
   ping(mark: string): void {
-    if (this.socket.readyState === this.socket.OPEN) this.socket.ping(mark);
+    if (!this.isClosed) this.line.ping(mark);
   }
 
   private closed(): void {

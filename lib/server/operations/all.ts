@@ -1,5 +1,6 @@
 import type { Operation } from '../operation';
 import * as archives from './archives';
+import * as buses from './buses';
 import * as files from './files';
 import * as heap from './heap';
 import * as heapYear from './heap-year';
@@ -18,6 +19,7 @@ export const OPERATIONS: readonly Operation[] = [
   yard,
   wiring,
   training,
+  buses,
   running,
   rules,
   record,

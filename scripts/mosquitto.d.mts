@@ -1,0 +1,2 @@
+export function findMosquitto(): string | undefined;
+export function ensureMosquitto(): string | undefined;

@@ -1,0 +1,305 @@
+/**
+ * A board on Modbus TCP, played as a node: polled for readings, its coils commanded, read back and reported. The lease
+ * that such a board cannot keep is kept here; what a lost link leaves behind is said to be unknown.
+ */
+import { v7 as uuid } from 'uuid';
+import { leaseS, relaysEveryS, type CommandFrame, type RefusedRecord } from '@/lib/field/frames';
+import type { ModbusBus, Register } from '@/lib/schema/bus';
+import type { Cancel } from '../clock';
+import type { CommandLink } from '../control/command-link';
+import { BackOff } from './back-off';
+import { BoardCoils } from './board-coils';
+import { wiringOf, type Bus, type BusDeps, type BusNode } from './bus';
+import { takePack } from './intake';
+import { ModbusLine } from './modbus-line';
+import { poll, readOnce, type ReadOnce } from './modbus-poll';
+import { tailOf } from './tail';
+
+/** reliability.md: no command older than 2 s. */
+const COMMAND_AGE_MS = 2000;
+/** A clean end waits so long for the coils of a board without watchdog. */
+const END_LIMIT_MS = 2500;
+
+export class ModbusNode implements Bus, CommandLink {
+  readonly boot = uuid();
+  readonly canFallback = false;
+  seen: { seq: number; at: number } | null = null;
+  private seq = 0;
+  private line: ModbusLine | null = null;
+  private why = 'it has not been reached yet';
+  private stopped = false;
+  /** Somebody else drives this board: its coils are left alone. */
+  private isLeft = false;
+  private busy = false;
+  private underWay: Promise<void> = Promise.resolve();
+  private asked = false;
+  private isDropDue = false;
+  private leaseUntilMs = 0;
+  private reportedAtMs = 0;
+  private cancels: Cancel[] = [];
+  private cancelDial: Cancel = () => undefined;
+  private cancelLease: Cancel = () => undefined;
+  private readonly backOff = new BackOff();
+  private readonly board: BoardCoils;
+
+  constructor(
+    private readonly node: BusNode,
+    private readonly settings: ModbusBus,
+    private readonly deps: BusDeps,
+  ) {
+    this.board = new BoardCoils(
+      settings,
+      () => this.wiring?.channels ?? 0,
+      (relay) => this.isBarred(relay),
+      (ms) => new Promise((resolve) => void deps.clock.after(ms, resolve)),
+    );
+    void this.dial();
+  }
+
+  get isUp(): boolean {
+    return this.line !== null;
+  }
+
+  private get wiring() {
+    return wiringOf(this.node);
+  }
+
+  /** Somebody at the panel wants to see one register. @throws Error in words */
+  async readOnce(row: Omit<Register, 'point'>): Promise<ReadOnce> {
+    if (this.line === null) throw new Error(`There is no link to the board: ${this.why}.`);
+    return readOnce(this.line, row);
+  }
+
+  sendCommand(frame: CommandFrame, madeAtMs: number): void {
+    const { clock, metrics } = this.deps;
+    if (clock.monotonicMs() - madeAtMs > COMMAND_AGE_MS || frame.seen !== this.seen?.seq || this.isLeft)
+      return metrics.add('commands_withheld_total');
+    if (!this.board.take(frame)) return;
+    metrics.add('commands_sent_total');
+    this.leaseUntilMs = this.reportedAtMs + (leaseS * 1000) / clock.rate;
+    this.asked = true;
+    this.cancelLease();
+    this.cancelLease = clock.after(this.leaseUntilMs - clock.monotonicMs(), () => this.endLease());
+    this.work();
+  }
+
+  close(): void {
+    // who closes it has taken it out of the plan; that it goes is seen there
+  }
+
+  async stop(isEnd: boolean): Promise<void> {
+    this.stopped = true;
+    this.cancelDial();
+    this.rest();
+    const { line } = this;
+    this.line = null;
+    if (line === null) return;
+    // nobody else would: such a board keeps a fan running for ever
+    if (isEnd && this.settings.watchdog === null && !this.isLeft) {
+      const limit = new Promise<void>((resolve) => void this.deps.clock.after(END_LIMIT_MS, resolve));
+      // what is being written just now would put a coil on behind our back
+      const dropped = this.underWay.then(() => this.board.drop(line)).catch(() => false);
+      await Promise.race([dropped, limit]);
+    }
+    line.close();
+    this.node.house.nodes.detach(this.node.nodeId, this);
+  }
+
+  private async dial(): Promise<void> {
+    if (this.stopped) return;
+    try {
+      const line = await ModbusLine.open(this.settings, {
+        heard: () => this.node.house.nodes.heard(this.node.nodeId),
+        lost: (why) => this.lost(why),
+      });
+      // what the coils are is read before anything is said of them
+      await this.board.read(line).catch((error: unknown) => {
+        line.close();
+        throw error;
+      });
+      this.up(line);
+    } catch (error) {
+      this.again(wordsOf(error));
+    }
+  }
+
+  private up(line: ModbusLine): void {
+    const { clock } = this.deps;
+    const { house, nodeId } = this.node;
+    const { wiring } = this;
+    if (this.stopped || wiring === undefined) return line.close();
+    this.line = line;
+    this.backOff.reset();
+    this.isLeft = false;
+    this.leaseUntilMs = clock.monotonicMs() + (leaseS * 1000) / clock.rate;
+    this.cancelLease = clock.after(this.leaseUntilMs - clock.monotonicMs(), () => this.endLease());
+    house.nodes.attach(nodeId, this);
+    const { host, port, unit } = this.settings;
+    const firmware = `Modbus unit ${unit} at ${host}:${port}`;
+    house.nodes.tellLink(nodeId, null);
+    house.nodes.greet(
+      nodeId,
+      { type: 'hello', node: wiring.key, firmware, channels: wiring.channels, boot: this.boot, clock: null },
+      clock.appNow(),
+    );
+    this.report();
+    this.cancels = [
+      clock.every((relaysEveryS * 1000) / clock.rate, () => this.look()),
+      clock.every((wiring.reportEveryS * 1000) / clock.rate, () => void this.poll()),
+    ];
+    const { watchdog } = this.settings;
+    // three chances within its time; its time is the board's own and passes at no other rate
+    if (watchdog !== null)
+      this.cancels.push(clock.every((watchdog.within * 1000) / 3, () => void this.feed()));
+    void this.poll();
+  }
+
+  /** Tells what the coils were just read to be; the answer is a command. */
+  private report(): void {
+    const { clock } = this.deps;
+    const at = clock.appNow();
+    this.seen = { seq: ++this.seq, at };
+    this.reportedAtMs = clock.monotonicMs();
+    const { coils, number, trips } = this.board;
+    this.node.house.nodes.takeRelays(
+      this.node.nodeId,
+      this,
+      { type: 'relays', seq: this.seq, channels: coils, number, trips },
+      at,
+    );
+  }
+
+  private look(): void {
+    if (this.isLeft && this.deps.isSure()) this.isLeft = false;
+    if (this.isLeaseOver) this.endLease();
+    this.run(async (line) => {
+      const isMoved = await this.board.read(line);
+      // cut off from the database, and the board is moved by somebody: another worker leads
+      if (isMoved && !this.deps.isSure()) {
+        this.isLeft = true;
+        this.deps.log.warn({ node: this.node.nodeId }, 'somebody else drives this board; it is left to them');
+      }
+      this.report();
+    });
+  }
+
+  private get isLeaseOver(): boolean {
+    return this.deps.clock.monotonicMs() >= this.leaseUntilMs;
+  }
+
+  /** Asked for again when what is under way is done, should it be. */
+  private endLease(): void {
+    if (!this.isLeaseOver || this.isLeft) return;
+    if (this.busy) this.isDropDue = true;
+    else this.run((line) => this.dropAll(line));
+  }
+
+  private async dropAll(line: ModbusLine): Promise<void> {
+    if (await this.board.drop(line))
+      this.deps.log.warn({ node: this.node.nodeId }, 'a lease ran out; coils dropped');
+    this.report();
+  }
+
+  /** One after the other: an order that comes while coils are written is followed right after. */
+  private work(): void {
+    this.run(async (line) => {
+      while (this.asked) {
+        this.asked = false;
+        const before = JSON.stringify(this.board.coils);
+        const { refused } = await this.board.apply(line);
+        this.tellRefused(refused);
+        await this.feed();
+        if (JSON.stringify(this.board.coils) !== before || refused.length > 0) this.report();
+      }
+    });
+  }
+
+  private run(work: (line: ModbusLine) => Promise<void>): void {
+    const { line } = this;
+    if (line === null || this.busy) return;
+    this.busy = true;
+    this.underWay = work(line)
+      .catch((error: unknown) =>
+        this.deps.log.info({ err: error, node: this.node.nodeId }, 'a board did not answer'),
+      )
+      .finally(() => {
+        this.busy = false;
+        if (this.line === null) return;
+        const isDropDue = this.isDropDue;
+        this.isDropDue = false;
+        if (isDropDue) this.endLease();
+        else if (this.asked) this.work();
+      });
+  }
+
+  /** Only while the lease holds: a house that is not controlled lets its board drop. */
+  private async feed(): Promise<void> {
+    const { watchdog } = this.settings;
+    if (watchdog === null || this.isLeaseOver || this.isLeft || this.line === null) return;
+    const { house, nodeId } = this.node;
+    await this.line.writeRegister(watchdog.address, watchdog.value).then(
+      () => house.nodes.tellLink(nodeId, null),
+      (error: unknown) => house.nodes.tellLink(nodeId, `its watchdog is not fed: ${wordsOf(error)}`),
+    );
+  }
+
+  private async poll(): Promise<void> {
+    const { line, wiring } = this;
+    const { house } = this.node;
+    if (line === null || wiring === undefined || wiring.registers.length === 0) return;
+    try {
+      const { pack, refused } = await poll(line, wiring.registers, () => this.deps.clock.appNow() / 1000);
+      this.tellNotTaken(refused);
+      await takePack(this.deps, this.deps.ingest, house, wiring, pack);
+    } catch (error) {
+      this.deps.log.info({ err: error, node: wiring.key }, 'a board could not be read');
+    }
+  }
+
+  private tellNotTaken(refused: readonly RefusedRecord[]): void {
+    if (refused.length === 0) return;
+    this.node.house.nodes.tookPack(this.node.nodeId, { pack: [], taken: 0, refused }, () =>
+      tailOf([], refused, new Map(), []),
+    );
+  }
+
+  private tellRefused(refused: readonly { relay: number; why: string }[]): void {
+    this.tellNotTaken(refused.map(({ relay, why }) => ({ index: 0, name: `relay ${relay}`, why })));
+  }
+
+  /** A heater stays cold on a board that would keep it on, however it came to be wired there. */
+  private isBarred(relay: number): boolean {
+    if (this.settings.watchdog !== null) return false;
+    const { channels, config } = this.node.house.record;
+    const wired = channels.find((one) => one.nodeId === this.node.nodeId && one.relay === relay);
+    return config.channels.find((one) => one.id === wired?.id)?.loadKind === 'heater';
+  }
+
+  private lost(why: string): void {
+    if (this.line === null) return;
+    this.line = null;
+    this.rest();
+    this.node.house.nodes.detach(this.node.nodeId, this);
+    this.again(why);
+  }
+
+  private again(why: string): void {
+    if (this.stopped) return;
+    this.why = why;
+    const waitMs = this.backOff.next();
+    this.node.house.nodes.tellLink(this.node.nodeId, why);
+    this.deps.log.info({ node: this.node.nodeId, why, waitMs: Math.round(waitMs) }, 'a board is not there');
+    this.cancelDial = this.deps.clock.after(waitMs, () => void this.dial());
+  }
+
+  private rest(): void {
+    for (const cancel of this.cancels) cancel();
+    this.cancels = [];
+    this.cancelLease();
+    this.asked = false;
+  }
+}
+
+function wordsOf(error: unknown): string {
+  return error instanceof Error ? error.message : String(error);
+}
