@@ -6,9 +6,11 @@ import * as heapYear from './heap-year';
 import * as money from './money';
 import * as open from './open';
 import * as people from './people';
+import * as points from './points';
 import * as record from './record';
 import * as rules from './rules';
 import * as running from './running';
+import * as setup from './setup';
 import * as wiring from './wiring';
 import * as yard from './yard';
 
@@ -16,6 +18,8 @@ import * as yard from './yard';
 export const OPERATIONS: readonly Operation[] = [
   yard,
   wiring,
+  setup,
+  points,
   running,
   rules,
   record,
