@@ -12,13 +12,14 @@ const TokenSheet = dynamic(() => import('./token-sheet').then((module) => module
 
 interface Editing {
   allowed: readonly string[];
-  edit: (kind: Kind, id: string | null) => void;
+  /** `first`: what a new one begins with, over its kind's own beginning. */
+  edit: (kind: Kind, id: string | null, first?: object) => void;
   token: (nodeId: string, doing: 'rotate' | 'revoke') => void;
 }
 const Context = createContext<Editing>({ allowed: [], edit: () => undefined, token: () => undefined });
 
 type Open =
-  | { what: 'kind'; kind: Kind; id: string | null }
+  | { what: 'kind'; kind: Kind; id: string | null; first?: object | undefined }
   | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' };
 
 /** Opens the forms of the page; without the right, its buttons are not there. */
@@ -39,13 +40,19 @@ export function WiringEditing({
     <Context
       value={{
         allowed,
-        edit: (kind, id) => setOpen({ what: 'kind', kind, id }),
+        edit: (kind, id, first) => setOpen({ what: 'kind', kind, id, first }),
         token: (nodeId, doing) => setOpen({ what: 'token', nodeId, doing }),
       }}
     >
       {children}
       {open?.what === 'kind' ? (
-        <KindSheet yard={yard} preferences={preferences} kind={open.kind} id={open.id} onClose={close} />
+        <KindSheet
+          kind={open.kind}
+          id={open.id}
+          first={open.first}
+          onClose={close}
+          {...{ yard, preferences }}
+        />
       ) : null}
       {open?.what === 'token' ? (
         <TokenSheet yard={yard} nodeId={open.nodeId} doing={open.doing} onClose={close} />
@@ -61,15 +68,17 @@ export function AddButton({
   kind,
   label,
   primary = false,
+  first,
 }: {
   kind: Kind;
   label: string;
   primary?: boolean;
+  first?: object;
 }) {
   const { allowed, edit } = use(Context);
   if (!allowed.includes(needs(kind))) return null;
   return (
-    <Button kind={primary ? 'primary' : 'plain'} onClick={() => edit(kind, null)}>
+    <Button kind={primary ? 'primary' : 'plain'} onClick={() => edit(kind, null, first)}>
       {label}
     </Button>
   );

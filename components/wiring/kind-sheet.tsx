@@ -8,7 +8,9 @@ import { contactFit, isMains, safeStateWords } from '@/lib/wording/wiring-load';
 import { LOOP_CAUTION, MAINS_CAUTION } from '@/lib/wording/wiring-parts';
 import { EntitySheet } from './entity-sheet';
 import type { Yard } from './forms/options';
+import { InterlockEffect } from './interlock-effect';
 import { KINDS, type Kind } from './kinds';
+import { PlaceRemarks } from './place-remarks';
 import { at, bodyOf } from './spec';
 import { TokenShown } from './token-shown';
 
@@ -64,12 +66,15 @@ export function KindSheet({
   preferences,
   kind,
   id,
+  first,
   onClose,
 }: {
   yard: Yard;
   preferences: Preferences;
   kind: Kind;
   id: string | null;
+  /** What a new one begins with, over its kind's own beginning. */
+  first?: object | undefined;
   onClose: () => void;
 }) {
   const [token, setToken] = useState<{ nodeKey: string; kind: string; token: string } | null>(null);
@@ -89,7 +94,7 @@ export function KindSheet({
       title={entity === null ? `New ${of.word}` : `Change this ${of.word}`}
       groups={of.groups(yard, entity?.id ?? null)}
       schema={() => Promise.resolve(entity === null ? of.create : of.amend)}
-      entity={entity ?? of.first(yard)}
+      entity={entity ?? { ...of.first(yard), ...first }}
       preferences={preferences}
       method={entity === null ? 'POST' : 'PATCH'}
       path={path}
@@ -105,8 +110,12 @@ export function KindSheet({
         return true;
       }}
       beside={(form) =>
-        kind === 'channel' ? (
+        kind === 'house' ? (
+          <PlaceRemarks form={form} preferences={preferences} />
+        ) : kind === 'channel' ? (
           <LoadEffect form={form} preferences={preferences} yard={yard} />
+        ) : kind === 'interlock' ? (
+          <InterlockEffect id={entity?.id ?? null} {...{ form, yard, preferences }} />
         ) : kind === 'loop' ? (
           <Notice tone="warn" title="Air of a heap">
             {LOOP_CAUTION}

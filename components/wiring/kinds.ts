@@ -23,7 +23,7 @@ export interface KindOf {
   list: (yard: Yard) => { id: string; revision: number }[];
   groups: (yard: Yard, id: string | null) => Group[];
   /** What stands in a new form at first. */
-  first: (yard: Yard) => unknown;
+  first: (yard: Yard) => object;
   /** What happens when it is taken out of use; null: that is not done here. */
   removal: string | null;
 }

@@ -2,23 +2,29 @@ import type { Metadata } from 'next';
 import { KeepFresh } from '@/components/ui/keep-fresh';
 import { WiringView } from '@/components/wiring/wiring-view';
 import { inHolding } from '@/db/client';
-import { readWiring } from '@/db/queries/wiring-page';
+import { readSetup } from '@/db/queries/setup';
+import { setupSteps } from '@/lib/analysis/setup';
 import { requireViewer, viewerHouse } from '@/lib/server/next-session';
 import { shellFacts } from '@/lib/server/shell';
+import { missingSentence } from '@/lib/wording/setup';
 
 export const metadata: Metadata = { title: 'Wiring' };
 
 export default async function WiringPage({ params }: { params: Promise<{ house: string }> }) {
   const house = await viewerHouse((await params).house);
   const viewer = await requireViewer();
-  const [data, { preferences, now }] = await Promise.all([
-    inHolding(viewer.holdingId, (holding) => readWiring(holding, house)),
+  const [{ facts, ...data }, { preferences, now }] = await Promise.all([
+    inHolding(viewer.holdingId, (holding) => readSetup(holding, house)),
     shellFacts(viewer),
   ]);
   return (
     <>
       <KeepFresh everyS={15} />
-      <WiringView data={data} allowed={viewer.allowed} preferences={preferences} now={now} />
+      <WiringView
+        missing={missingSentence(setupSteps(facts))}
+        allowed={viewer.allowed}
+        {...{ data, preferences, now }}
+      />
     </>
   );
 }
