@@ -62,7 +62,7 @@ export function StepActs({ step, isNext, facts, yard, allowed, preferences }: Ac
       return channels
         .filter((one) => one.provedAt === null)
         .map((one) => (
-          <ButtonLink key={one.key} href={`/${house.slug}/wiring/prove/${one.key}`}>
+          <ButtonLink key={one.key} prefetch={false} href={`/${house.slug}/wiring/prove/${one.key}`}>
             Prove the {one.label}
           </ButtonLink>
         ));

@@ -16,7 +16,9 @@ export function Signatures() {
         {LINES.map((line) => (
           <div key={line}>
             <dt className="text-soft">{line}</dt>
-            <dd aria-label="a line to write on" className="h-7 border-b border-edge" />
+            <dd className="relative h-7 border-b border-edge">
+              <span className="sr-only">a line to write on</span>
+            </dd>
           </div>
         ))}
       </dl>
