@@ -60,15 +60,17 @@ export function AddButton({
   kind,
   label,
   primary = false,
+  first,
 }: {
   kind: Kind;
   label: string;
   primary?: boolean;
+  first?: object;
 }) {
   const { allowed, edit } = use(Context);
   if (!allowed.includes(needs(kind))) return null;
   return (
-    <Button kind={primary ? 'primary' : 'plain'} onClick={() => edit(kind, null)}>
+    <Button kind={primary ? 'primary' : 'plain'} onClick={() => edit(kind, null, first)}>
       {label}
     </Button>
   );

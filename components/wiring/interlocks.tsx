@@ -3,6 +3,7 @@ import { Phrases } from '@/components/ui/sentence';
 import type { Channel, Interlock } from '@/lib/schema/yard-view';
 import { interlockSentence } from '@/lib/wording/wiring-parts';
 import { AddButton, ChangeButton } from './editing';
+import { InterlockDrawing } from './interlock-drawing';
 import { partLine } from './part-line';
 
 /** Which channels must not, or must, run together. */
@@ -19,28 +20,31 @@ export function Interlocks({ interlocks, channels }: { interlocks: Interlock[]; 
           each want one.
         </p>
       ) : (
-        <ul className="divide-y divide-line border-t border-line">
-          {interlocks.map((one) => (
-            <li key={one.id} className={partLine}>
-              <p className="min-w-0 flex-1">
-                <Phrases
-                  phrases={interlockSentence({
-                    kind: one.kind,
-                    channel: label(one.channel),
-                    other: label(one.other),
-                    delayS: one.delay,
-                    frostMayBreak: one.frostMayBreak,
-                  })}
+        <>
+          <InterlockDrawing channels={channels} locks={interlocks} />
+          <ul className="divide-y divide-line border-t border-line">
+            {interlocks.map((one) => (
+              <li key={one.id} className={partLine}>
+                <p className="min-w-0 flex-1">
+                  <Phrases
+                    phrases={interlockSentence({
+                      kind: one.kind,
+                      channel: label(one.channel),
+                      other: label(one.other),
+                      delayS: one.delay,
+                      frostMayBreak: one.frostMayBreak,
+                    })}
+                  />
+                </p>
+                <ChangeButton
+                  kind="interlock"
+                  id={one.id}
+                  of={`of ${label(one.channel)} and ${label(one.other)}`}
                 />
-              </p>
-              <ChangeButton
-                kind="interlock"
-                id={one.id}
-                of={`of ${label(one.channel)} and ${label(one.other)}`}
-              />
-            </li>
-          ))}
-        </ul>
+              </li>
+            ))}
+          </ul>
+        </>
       )}
     </Panel>
   );

@@ -8,7 +8,9 @@ import { contactFit, isMains, safeStateWords } from '@/lib/wording/wiring-load';
 import { LOOP_CAUTION, MAINS_CAUTION } from '@/lib/wording/wiring-parts';
 import { EntitySheet } from './entity-sheet';
 import type { Yard } from './forms/options';
+import { InterlockEffect } from './interlock-effect';
 import { KINDS, type Kind } from './kinds';
+import { PlaceRemarks } from './place-remarks';
 import { at, bodyOf } from './spec';
 import { TokenShown } from './token-shown';
 
@@ -108,8 +110,12 @@ export function KindSheet({
         return true;
       }}
       beside={(form) =>
-        kind === 'channel' ? (
+        kind === 'house' ? (
+          <PlaceRemarks form={form} preferences={preferences} />
+        ) : kind === 'channel' ? (
           <LoadEffect form={form} preferences={preferences} yard={yard} />
+        ) : kind === 'interlock' ? (
+          <InterlockEffect id={entity?.id ?? null} {...{ form, yard, preferences }} />
         ) : kind === 'loop' ? (
           <Notice tone="warn" title="Air of a heap">
             {LOOP_CAUTION}

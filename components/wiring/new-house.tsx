@@ -5,11 +5,12 @@ import { Button } from '@/components/ui/button';
 import { useAwake } from '@/components/ui/use-awake';
 import type { Preferences } from '@/lib/units/preferences';
 import { houseGroups } from './forms/house';
+import { PlaceRemarks } from './place-remarks';
 import { at } from './spec';
 import { SpecFields } from './spec-fields';
 import { useSpecForm } from './use-spec-form';
 
-/** A house from nothing: where it stands and at what cold it acts. Its wiring comes next. */
+/** A house from nothing: where it stands and at what cold it acts. Its set-up goes on from there. */
 export function NewHouse({ preferences }: { preferences: Preferences }) {
   const router = useRouter();
   const isAwake = useAwake();
@@ -22,7 +23,7 @@ export function NewHouse({ preferences }: { preferences: Preferences }) {
     path: '/houses',
     onAnswer: (answer) => {
       const slug = at(answer, 'slug');
-      router.push(typeof slug === 'string' ? `/${slug}/wiring` : '/');
+      router.push(typeof slug === 'string' ? `/${slug}/setup` : '/');
       router.refresh();
     },
   });
@@ -39,6 +40,7 @@ export function NewHouse({ preferences }: { preferences: Preferences }) {
     >
       <fieldset disabled={!isAwake} className="flex flex-col gap-4">
         <SpecFields groups={houseGroups} form={form} preferences={preferences} />
+        <PlaceRemarks form={form} preferences={preferences} />
       </fieldset>
       <p role="alert" className="font-semibold text-alarm empty:hidden">
         {failure}

@@ -1,22 +1,19 @@
+import Link from 'next/link';
 import { Age } from '@/components/ui/age';
 import { Cell, Row, RowHead } from '@/components/ui/table';
 import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
-import { decimal, pointValue } from '@/lib/units/format';
+import { pointValue } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
+import { correctionWords } from '@/lib/wording/calibration';
 import { exactly } from '@/lib/wording/settings';
 import { ChangeButton } from './editing';
 import { roleWords } from './forms/options';
 import { PointDoubt } from './point-doubt';
 
-function calibrationWords(point: Point): string {
-  const gain = point.gain === 1 ? '' : `× ${decimal(point.gain, 3)} `;
-  const offset = point.offset === 0 ? '' : `${point.offset > 0 ? '+' : ''}${decimal(point.offset, 2)}`;
-  return `${gain}${offset}`.trim() || 'none';
-}
-
 /** One point: what it says now, how it is wired, and between which values it is believed. */
 export function PointRow({
+  house,
   point,
   now,
   reportEvery,
@@ -24,6 +21,8 @@ export function PointRow({
   zone,
   preferences,
 }: {
+  /** Its slug. */
+  house: string;
   point: Point;
   now: StatePoint | undefined;
   reportEvery: number | undefined;
@@ -37,7 +36,12 @@ export function PointRow({
   return (
     <Row>
       <RowHead className="min-w-40">
-        {point.name}
+        <Link
+          href={`/${house}/wiring/points/${point.key}`}
+          className="flex min-h-11 items-center underline underline-offset-4"
+        >
+          {point.name}
+        </Link>
         <span className="block text-[0.85rem] font-normal text-soft">
           <span className="font-mono">{point.key}</span>, {roleWords(point.role)}
         </span>
@@ -76,7 +80,7 @@ export function PointRow({
       <Cell figure wideOnly>
         {stale === null ? <span className="font-sans text-soft">as its inputs</span> : exactly(stale)}
       </Cell>
-      <Cell figure>{calibrationWords(point)}</Cell>
+      <Cell figure>{correctionWords(point)}</Cell>
       <Cell className="py-0 text-right align-middle">
         <ChangeButton kind="point" id={point.id} of={point.name} />
       </Cell>

@@ -1,3 +1,4 @@
+import { ButtonLink } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
 import { Empty } from '@/components/ui/states';
 import { Table } from '@/components/ui/table';
@@ -20,6 +21,7 @@ const columns = [
 
 /** Where something is measured, with what it says now and how old that is. */
 export function Points({
+  house,
   points,
   states,
   nodes,
@@ -27,6 +29,8 @@ export function Points({
   zone,
   preferences,
 }: {
+  /** Its slug. */
+  house: string;
   points: Point[];
   states: StatePoint[];
   nodes: { key: string; reportEvery: number }[];
@@ -38,7 +42,14 @@ export function Points({
   return (
     <Panel
       title="Points"
-      actions={nodes.length === 0 ? undefined : <AddButton kind="point" label="Add a point…" />}
+      actions={
+        nodes.length === 0 ? undefined : (
+          <>
+            <ButtonLink href={`/${house}/wiring/warm-hand`}>Warm-hand test</ButtonLink>
+            <AddButton kind="point" label="Add a point…" />
+          </>
+        )
+      }
     >
       {points.length === 0 ? (
         <Empty title="No point yet.">
@@ -50,6 +61,7 @@ export function Points({
           {points.map((point) => (
             <PointRow
               key={point.id}
+              house={house}
               point={point}
               now={states.find((one) => one.key === point.key)}
               reportEvery={nodes.find((one) => one.key === point.node)?.reportEvery}

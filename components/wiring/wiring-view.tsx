@@ -1,8 +1,11 @@
+import { ButtonLink } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { Sentence } from '@/components/ui/sentence';
 import type { HouseState } from '@/lib/schema/house-state';
 import type { Training } from '@/lib/schema/training';
 import type { Preferences } from '@/lib/units/preferences';
+import { sentences } from '@/lib/wording/join';
+import type { Phrase } from '@/lib/wording/phrase';
 import { LEASE_S, wiringSentence } from '@/lib/wording/wiring';
 import { Channels } from './channels';
 import { WiringEditing } from './editing';
@@ -34,9 +37,12 @@ export function WiringView({
   allowed,
   preferences,
   now,
+  missing,
 }: {
   data: WiringData;
   training: Training;
+  /** What of its set-up is missing; empty: nothing. */
+  missing: Phrase[];
   allowed: readonly string[];
   preferences: Preferences;
   now: number;
@@ -75,7 +81,13 @@ export function WiringView({
           house={house.slug}
           mayRemove={allowed.includes('lockout.remove')}
         />
-        <Sentence before="Wiring" phrases={wiringSentence(standing, now)} />
+        <Sentence before="Wiring" phrases={sentences(missing, wiringSentence(standing, now))} />
+        <div className="flex flex-wrap gap-2">
+          <ButtonLink href={`/${house.slug}/setup`}>
+            {missing.length === 0 && nodes.length > 0 ? 'Its set-up, step by step' : 'Go on with the set-up'}
+          </ButtonLink>
+          <ButtonLink href={`/${house.slug}/wiring/sheet`}>The printed sheet</ButtonLink>
+        </div>
         {allowed.includes('wiring.write') ? null : (
           <Notice tone="quiet" title="You can read the wiring, not change it.">
             Wiring decides what a relay may do to whoever stands at it, so an installer or an owner changes
@@ -107,7 +119,11 @@ export function WiringView({
           houseId={house.id}
           {...{ nodes, zone, now, preferences }}
         />
-        <Points points={points} states={state?.points ?? []} nodes={nodes} {...{ now, zone, preferences }} />
+        <Points
+          house={house.slug}
+          states={state?.points ?? []}
+          {...{ points, nodes, now, zone, preferences }}
+        />
         <div className="grid grid-cols-1 gap-5 xl:grid-cols-2">
           <Sources
             sources={sources}

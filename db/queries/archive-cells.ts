@@ -1,12 +1,15 @@
 /** What cells of an archive must be beyond their column's type: what pages and control take for granted of their rows. */
 import { z } from 'zod';
+import { CAN_WAIT } from '@/lib/analysis/setup';
 import { CLAIMS } from '@/lib/control/types';
 import { ALARM_KINDS } from '@/lib/schema/alarm';
 import { ModbusBus, MqttBus, Registers } from '@/lib/schema/bus';
+import { Calibration } from '@/lib/schema/calibration';
 import { Key, Zone } from '@/lib/schema/common';
 import { HEAP_ENTRY_KINDS, HeapMaterial } from '@/lib/schema/heap';
 import { HEAP_JOB_KINDS } from '@/lib/schema/heap-job';
 import { COST_KINDS } from '@/lib/schema/money';
+import { PointPhotograph } from '@/lib/schema/point-photograph';
 import { ProbePlace, Section } from '@/lib/schema/probe-set';
 import { SECTIONS, SPANS } from '@/lib/schema/report';
 import { RuleBody } from '@/lib/schema/rule';
@@ -34,6 +37,7 @@ export const CELLS: Readonly<Record<string, Readonly<Record<string, z.ZodType>>>
     ...{ longitude: houseFields.longitude, altitude: houseFields.altitude },
     ...{ frost_limit: houseFields.frostLimit, frost_alarm: houseFields.frostAlarm },
     last_resort: houseFields.lastResort,
+    setup_skipped: z.array(z.enum(CAN_WAIT)).max(CAN_WAIT.length),
   },
   node: {
     ...{ key: Key, kind: nodeFields.kind, channels: nodeFields.channels },
@@ -44,7 +48,12 @@ export const CELLS: Readonly<Record<string, Readonly<Record<string, z.ZodType>>>
     ...{ key: Key, name: pointFields.name, role: pointFields.role, unit: pointFields.unit },
     ...{ derived: pointFields.derived, stale_after_s: seconds, frozen_after_s: seconds },
   },
-  calibration: { offset: pointFields.offset, gain: pointFields.gain },
+  calibration: {
+    ...{ offset: pointFields.offset, gain: pointFields.gain },
+    ...{ kind: Calibration.shape.kind, places: Calibration.shape.places },
+    note: z.string().max(500),
+  },
+  attachment: { shows: PointPhotograph.shape.shows },
   source: { slug: Slug, name: sourceFields.name, kind: sourceFields.kind },
   channel: {
     ...{ number: channelFields.number, relay: channelFields.relay, key: Key, label: channelFields.label },

@@ -1,9 +1,11 @@
 import 'server-only';
-import { and, asc, eq, inArray } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNotNull, or } from 'drizzle-orm';
 import type { Holding } from '@/db/client';
 import { attachment, heapEntry } from '@/db/schema/heap';
 import { source } from '@/db/schema/channel';
+import { point } from '@/db/schema/node';
 import type { Photograph } from '@/lib/schema/heap-view';
+import { PointPhotograph } from '@/lib/schema/point-photograph';
 import { isId } from './reference';
 
 /** What is told of a photograph: never its bytes, of which a page of the book would carry hundreds of megabytes. */
@@ -33,8 +35,19 @@ export async function photographsOf(
     .from(attachment)
     .where(and(eq(attachment.holdingId, holding.id), inArray(attachment.entryId, [...entries])))
     .orderBy(asc(attachment.enteredAt), asc(attachment.id));
-  for (const row of rows) byEntry.set(row.entryId, [...(byEntry.get(row.entryId) ?? []), told(row)]);
+  for (const { entryId, ...row } of rows)
+    if (entryId !== null) byEntry.set(entryId, [...(byEntry.get(entryId) ?? []), told(row)]);
   return byEntry;
+}
+
+/** Photographs of a point's place and shield, oldest first. */
+export async function photographsOfPoint(holding: Holding, pointId: string): Promise<PointPhotograph[]> {
+  const rows = await holding.db
+    .select({ ...facts, shows: attachment.shows })
+    .from(attachment)
+    .where(and(eq(attachment.holdingId, holding.id), eq(attachment.pointId, pointId)))
+    .orderBy(asc(attachment.enteredAt), asc(attachment.id));
+  return rows.map((row) => PointPhotograph.parse({ ...told(row), shows: row.shows }));
 }
 
 /** One of a house's photographs, without its bytes. */
@@ -47,12 +60,19 @@ export async function findPhotograph(
   const [row] = await holding.db
     .select(facts)
     .from(attachment)
-    .innerJoin(
+    .leftJoin(
       heapEntry,
       and(eq(heapEntry.holdingId, attachment.holdingId), eq(heapEntry.id, attachment.entryId)),
     )
-    .innerJoin(source, and(eq(source.holdingId, heapEntry.holdingId), eq(source.id, heapEntry.sourceId)))
-    .where(and(eq(attachment.holdingId, holding.id), eq(source.houseId, houseId), eq(attachment.id, id)));
+    .leftJoin(source, and(eq(source.holdingId, heapEntry.holdingId), eq(source.id, heapEntry.sourceId)))
+    .leftJoin(point, and(eq(point.holdingId, attachment.holdingId), eq(point.id, attachment.pointId)))
+    .where(
+      and(
+        eq(attachment.holdingId, holding.id),
+        or(eq(source.houseId, houseId), eq(point.houseId, houseId)),
+        eq(attachment.id, id),
+      ),
+    );
   return row === undefined ? null : told(row);
 }
 
@@ -75,6 +95,24 @@ export interface MadePhotograph {
   thumbnail: Buffer;
 }
 
+/** A photograph of a point. @returns null where the id was used for another picture */
+export async function addPointPhotograph(
+  holding: Holding,
+  pointId: string,
+  of: { id: string; shows: PointPhotograph['shows'] },
+  made: MadePhotograph,
+  act: { by: string; now: Date },
+): Promise<PointPhotograph | null> {
+  await holding.db
+    .insert(attachment)
+    .values({
+      ...{ holdingId: holding.id, ...of, pointId, by: act.by, enteredAt: act.now },
+      ...{ widthPx: made.width, heightPx: made.height, image: made.image, thumbnail: made.thumbnail },
+    })
+    .onConflictDoNothing();
+  return (await photographsOfPoint(holding, pointId)).find((one) => one.id === of.id) ?? null;
+}
+
 /** Writes it once, however often it is sent under its id. @returns null where the id is another entry's */
 export async function addPhotograph(
   holding: Holding,
@@ -93,6 +131,20 @@ export async function addPhotograph(
   return (await photographsOf(holding, [entryId])).get(entryId)?.find((one) => one.id === id) ?? null;
 }
 
-export async function removePhotograph(holding: Holding, id: string): Promise<void> {
-  await holding.db.delete(attachment).where(and(eq(attachment.holdingId, holding.id), eq(attachment.id, id)));
+/** @returns false where it is none of the book's */
+export async function removePhotograph(holding: Holding, id: string): Promise<boolean> {
+  const gone = await holding.db
+    .delete(attachment)
+    .where(and(eq(attachment.holdingId, holding.id), eq(attachment.id, id), isNotNull(attachment.entryId)))
+    .returning({ id: attachment.id });
+  return gone.length > 0;
+}
+
+/** @returns false where it is none of the point's */
+export async function removePointPhotograph(holding: Holding, pointId: string, id: string): Promise<boolean> {
+  const gone = await holding.db
+    .delete(attachment)
+    .where(and(eq(attachment.holdingId, holding.id), eq(attachment.id, id), eq(attachment.pointId, pointId)))
+    .returning({ id: attachment.id });
+  return gone.length > 0;
 }

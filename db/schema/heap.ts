@@ -16,6 +16,7 @@ import {
 import { holdingId, instant } from './columns';
 import { organization } from './auth';
 import { source } from './channel';
+import { point } from './node';
 
 const revision = () => integer('revision').notNull().default(1);
 /** Who wrote a row and when, by app time; an amendment stays beside it. */
@@ -86,13 +87,17 @@ export const heapMaterial = pgTable(
   ],
 );
 
-/** Photographs of an entry, as they were made anew here: without the place, the camera and all else a file carries. */
+/** Photographs of an entry or of a point's place, as they were made anew here: without the place, the camera and all else a file carries. */
 export const attachment = pgTable(
   'attachment',
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    entryId: uuid('entry_id').notNull(),
+    /** One of the two is told: what the picture is of. */
+    entryId: uuid('entry_id'),
+    pointId: uuid('point_id'),
+    /** Of a point's picture what it shows: its place, or its shield against the sun. */
+    shows: text('shows'),
     by: text('by').notNull(),
     enteredAt: instant('entered_at').notNull(),
     widthPx: integer('width_px').notNull(),
@@ -106,7 +111,12 @@ export const attachment = pgTable(
       columns: [table.holdingId, table.entryId],
       foreignColumns: [heapEntry.holdingId, heapEntry.id],
     }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.pointId],
+      foreignColumns: [point.holdingId, point.id],
+    }).onDelete('cascade'),
     index('attachment_entry').on(table.holdingId, table.entryId),
+    index('attachment_point').on(table.holdingId, table.pointId),
   ],
 );
 

@@ -29,6 +29,8 @@ export const house = pgTable(
     lastResort: jsonb('last_resort').$type<{ below: number; provedOn: string | null }>(),
     /** Out of an archive and not put in service yet: the worker does not take it up, and no node can call it. */
     laidUpAt: instant('laid_up_at'),
+    /** Steps of the set-up that somebody put off: words of lib/analysis/setup.ts. */
+    setupSkipped: jsonb('setup_skipped').$type<string[]>().notNull().default([]),
     /** Grows with every change of anything the core reads of this house. */
     planRevision: bigint('plan_revision', { mode: 'number' }).notNull().default(1),
     revision: revision(),

@@ -16,6 +16,7 @@ import {
 import type { ModbusBus, MqttBus, Register } from '@/lib/schema/bus';
 import { createdAt, holdingId, instant, removedAt, revision } from './columns';
 import { inHouse, ofHouse } from './of-house';
+import type { CalibrationPlace } from '@/lib/analysis/calibrate';
 
 export const node = pgTable(
   'node',
@@ -104,6 +105,13 @@ export const calibration = pgTable(
     offset: doublePrecision('offset').notNull(),
     gain: doublePrecision('gain').notNull(),
     by: text('by').notNull(),
+    /** How it was found: a word of lib/analysis/calibrate.ts; typed where nobody says. */
+    kind: text('kind').notNull().default('typed'),
+    /** What the point read beside which reference, where it was found by a run. */
+    places: jsonb('places').$type<CalibrationPlace[]>(),
+    /** Deviation that is left at the places, in the point's unit; null where it was typed. */
+    residual: doublePrecision('residual'),
+    note: text('note').notNull().default(''),
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),

@@ -20,6 +20,7 @@ const NOTHING = '018f3f3f-0000-7000-8000-000000000000';
 /** What a list or a chart must be asked with. */
 const QUERY: Record<string, string> = {
   '/houses/{house}/readings': '?points=bench-1',
+  '/houses/{house}/interlock-replay': '?channel=ridge-vent&kind=never-with&other=gate-heap-fan',
   '/houses/{house}/heap-findings': '?source=gate-heap',
   '/houses/{house}/imports/{import}/piece': '?from=0',
   '/archives/{archive}/piece': '?from=0',

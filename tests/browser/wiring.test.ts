@@ -160,8 +160,8 @@ describe('wiring in the browser', () => {
     await page.getByText('Name an IANA time zone', { exact: false }).waitFor();
     await page.getByLabel('Time zone').fill('Europe/London');
     await page.getByRole('button', { name: 'Add the house' }).click();
-    await page.waitForURL(/\/cold-frame-yard(-\d+)?\/wiring/);
-    await page.getByText('No field node yet.').first().waitFor();
+    await page.waitForURL(/\/cold-frame-yard(-\d+)?\/setup/);
+    await page.getByText('Next: field nodes.', { exact: false }).waitFor();
     await page.context().close();
   });
 });

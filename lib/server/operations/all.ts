@@ -7,10 +7,12 @@ import * as heapYear from './heap-year';
 import * as money from './money';
 import * as open from './open';
 import * as people from './people';
+import * as points from './points';
 import * as record from './record';
 import * as rules from './rules';
 import * as running from './running';
 import * as training from './training';
+import * as setup from './setup';
 import * as wiring from './wiring';
 import * as yard from './yard';
 
@@ -20,6 +22,8 @@ export const OPERATIONS: readonly Operation[] = [
   wiring,
   training,
   buses,
+  setup,
+  points,
   running,
   rules,
   record,

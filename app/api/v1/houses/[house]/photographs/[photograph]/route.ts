@@ -10,6 +10,6 @@ export const GET = serve(getPhotograph, async ({ holding, things, query }) => {
 });
 
 export const DELETE = serve(removePhotograph, async ({ holding, things }) => {
-  await attachments.removePhotograph(holding, things.photograph.id);
+  if (!(await attachments.removePhotograph(holding, things.photograph.id))) throw new Problem('not-found');
   return {};
 });
