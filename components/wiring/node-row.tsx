@@ -113,7 +113,7 @@ export function NodeRow({
       <Cell>{tokenWords(node, now, zone, preferences)}</Cell>
       <Cell className="align-middle">
         <div className="flex flex-wrap justify-end">
-          <NodeTailButton node={node.key} houseId={houseId} />
+          <NodeTailButton node={node.key} {...{ houseId, preferences }} />
           <ChangeButton kind="node" id={node.id} of={node.key} />
           <TokenButtons nodeId={node.id} nodeKey={node.key} isRevoked={node.revokedAt !== null} />
         </div>
