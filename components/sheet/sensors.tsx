@@ -31,8 +31,10 @@ export function Sensors({
   const wired = data.points.filter((one) => one.node !== null);
   const whenWords = (point: Point): string => {
     const last = data.calibrations[point.id];
-    if (last === undefined || last.from === 0)
-      return correctionWords(point) === 'none' ? 'never calibrated' : 'typed when it was added';
+    // what stands for "as it is" was typed when the point was added, and is no calibration
+    if (last === undefined || (last.residual === null && correctionWords(point) === 'none'))
+      return 'not calibrated';
+    if (last.from === 0) return 'typed when it was added';
     const year = new Date(last.from).getUTCFullYear();
     const far = year === new Date(now).getUTCFullYear() ? '' : ` ${year}`;
     const left = last.residual === null ? '' : `, ± ${difference(last.residual, preferences, 2)} left`;

@@ -44,7 +44,7 @@ export function Sheet({
       <PaperChoice house={house.slug} paper={paper} />
       <article
         data-sheet={house.slug}
-        className={`flex flex-col gap-5 rounded-lg border border-line bg-sheet p-4 text-[0.95rem] print:block print:border-0 print:p-0 print:text-[10pt] print:*:mt-4 ${paper === null ? '' : `paper-${paper}`}`}
+        className={`flex flex-col gap-5 rounded-lg border border-line bg-sheet p-4 text-[0.95rem] print:block print:border-0 print:p-0 print:text-[9.5pt] print:*:mt-3 print:[&_table]:text-[8.5pt] print:[&_td]:py-1 print:[&_th]:py-1 ${paper === null ? '' : `paper-${paper}`}`}
       >
         <header className="flex items-start justify-between gap-4">
           <div className="min-w-0">

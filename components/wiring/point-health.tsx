@@ -65,7 +65,7 @@ export function PointHealthPanel({
             ))}
           </Table>
           <p className="mt-2 text-[0.85rem] text-soft">
-            Noise is what scatters about a line through half an hour, between one and five in the morning.{' '}
+            Noise is what scatters about a line through ten minutes, between one and five in the morning.{' '}
             {siblings.length === 0
               ? 'No other point here measures the same, so it is held against none.'
               : `Its siblings: ${siblings.join(', ')}.`}

@@ -38,7 +38,7 @@ export function PointRow({
       <RowHead className="min-w-40">
         <Link
           href={`/${house}/wiring/points/${point.key}`}
-          className="flex min-h-11 items-center underline underline-offset-4"
+          className="-my-2.5 flex min-h-11 items-center underline underline-offset-4"
         >
           {point.name}
         </Link>

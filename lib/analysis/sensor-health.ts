@@ -1,19 +1,19 @@
 /**
  * How a sensor is, night by night: its noise, how far it stands from its siblings and whether it moves away from them, and
- * the gaps in what it sends. Noise is what scatters about a line through half an hour of the quiet hours, so that a house
- * that cools in the night is not taken for a probe that shakes.
+ * the gaps in what it sends. Noise is what scatters about a line through ten minutes of the quiet hours, so that neither a
+ * house that cools nor one that a fan warms for half an hour is taken for a probe that shakes.
  */
 import { lineThrough } from './line';
 import { median } from './median';
 import type { Read } from './steadiness';
 import { t95 } from './student';
 
-const WINDOW_MS = 30 * 60_000;
+const WINDOW_MS = 10 * 60_000;
 /** Fewer readings in a window say nothing of their scatter. */
 const LEAST_IN_WINDOW = 8;
 
 /**
- * Deviation of one reading about the line through its half hour, the middle one of all windows: a door that was opened
+ * Deviation of one reading about the line through its ten minutes, the middle one of all windows: a door that was opened
  * spoils one window and not the figure. Null where no window is full enough.
  */
 export function noiseOf(readings: readonly Read[]): number | null {

@@ -30,10 +30,10 @@ export function pointSentence(
         );
   if (point.node === null) return says;
   const at = newest === null ? 0 : Date.parse(newest.from);
-  if (newest === null || at === 0) {
-    const none = newest === null || correctionWords(newest) === 'none';
-    return join(says, none ? ' It was never calibrated.' : ' It began with a typed calibration.');
-  }
+  // what stands for "as it is" was typed when the point was added, and is no calibration
+  const none = newest === null || (newest.kind === 'typed' && correctionWords(newest) === 'none');
+  if (none) return join(says, ' It is not calibrated.');
+  if (at === 0) return join(says, ' It began with a typed calibration.');
   return join(
     says,
     ` It was calibrated on ${day(at, scene.zone)} (${KIND_WORDS[newest.kind]}) by ${newest.by}: ${correctionWords(newest)}.`,

@@ -40,9 +40,9 @@ describe('the line of least squares', () => {
   });
 });
 
-const HALF_HOUR = 1_800_000;
+const WINDOW = 600_000;
 /** Readings each minute from `begin`, by a function of the minute. */
-const minutes = (begin: number, value: (minute: number) => number, many = 30) =>
+const minutes = (begin: number, value: (minute: number) => number, many = 10) =>
   Array.from({ length: many }, (_, minute) => ({ at: begin + minute * 60_000, value: value(minute) }));
 
 describe('noise', () => {
@@ -50,15 +50,20 @@ describe('noise', () => {
     expect(noiseOf(minutes(0, (minute) => 8 - 0.05 * minute))).toBeCloseTo(0, 9);
   });
   it('is the deviation about the line', () => {
-    // ± 0.1 in turn over an even number leaves all but a shade of 0.1 × √(n ÷ (n − 2)): n = 30 gives 0.1035
-    expect(noiseOf(minutes(0, (minute) => 5 + (minute % 2 === 0 ? 0.1 : -0.1)))).toBeCloseTo(0.1035, 3);
+    // ± 0.1 in turn over ten: squares 0.1 less the line’s 0.5² ÷ 82.5, ÷ 8, root: 0.110096
+    expect(noiseOf(minutes(0, (minute) => 5 + (minute % 2 === 0 ? 0.1 : -0.1)))).toBeCloseTo(0.110096, 6);
   });
-  it('is not spoilt by one half hour in which a door stood open', () => {
+  it('is not spoilt by ten minutes in which a door stood open', () => {
     const calm = [0, 1, 2, 4].flatMap((window) =>
-      minutes(window * HALF_HOUR, (minute) => (minute % 2 === 0 ? 0.1 : -0.1)),
+      minutes(window * WINDOW, (minute) => (minute % 2 === 0 ? 0.1 : -0.1)),
     );
-    const door = minutes(3 * HALF_HOUR, (minute) => (minute > 10 && minute < 20 ? -6 : 4));
-    expect(noiseOf([...calm, ...door])).toBeCloseTo(0.1035, 3);
+    const door = minutes(3 * WINDOW, (minute) => (minute > 3 && minute < 7 ? -6 : 4));
+    expect(noiseOf([...calm, ...door])).toBeCloseTo(0.110096, 6);
+  });
+  it('does not take a fan that warms the house for half an hour for one either', () => {
+    // towards 5 °C more with a time constant of 20 min; a parabola’s bend in ten minutes leaves some hundredths
+    const warms = minutes(0, (minute) => 4 + 5 * (1 - Math.exp(-minute / 20)), 30);
+    expect(noiseOf(warms)).toBeLessThan(0.06);
   });
   it('is not known from a few readings', () => {
     expect(noiseOf(minutes(0, () => 5, 7))).toBeNull();
