@@ -8,18 +8,22 @@ import type { Kind } from './kinds';
 
 /** Forms with their schemas are half of this page's script, and most visits only read. */
 const KindSheet = dynamic(() => import('./kind-sheet').then((module) => module.KindSheet));
+const RegistersSheet = dynamic(() => import('./registers-sheet').then((module) => module.RegistersSheet));
 const TokenSheet = dynamic(() => import('./token-sheet').then((module) => module.TokenSheet));
 
 interface Editing {
   allowed: readonly string[];
   edit: (kind: Kind, id: string | null) => void;
   token: (nodeId: string, doing: 'rotate' | 'revoke') => void;
+  registers: (nodeId: string) => void;
 }
-const Context = createContext<Editing>({ allowed: [], edit: () => undefined, token: () => undefined });
+const nothing = () => undefined;
+const Context = createContext<Editing>({ allowed: [], edit: nothing, token: nothing, registers: nothing });
 
 type Open =
   | { what: 'kind'; kind: Kind; id: string | null }
-  | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' };
+  | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' }
+  | { what: 'registers'; nodeId: string };
 
 /** Opens the forms of the page; without the right, its buttons are not there. */
 export function WiringEditing({
@@ -41,11 +45,15 @@ export function WiringEditing({
         allowed,
         edit: (kind, id) => setOpen({ what: 'kind', kind, id }),
         token: (nodeId, doing) => setOpen({ what: 'token', nodeId, doing }),
+        registers: (nodeId) => setOpen({ what: 'registers', nodeId }),
       }}
     >
       {children}
       {open?.what === 'kind' ? (
         <KindSheet yard={yard} preferences={preferences} kind={open.kind} id={open.id} onClose={close} />
+      ) : null}
+      {open?.what === 'registers' ? (
+        <RegistersSheet yard={yard} preferences={preferences} nodeId={open.nodeId} onClose={close} />
       ) : null}
       {open?.what === 'token' ? (
         <TokenSheet yard={yard} nodeId={open.nodeId} doing={open.doing} onClose={close} />
@@ -83,6 +91,18 @@ export function ChangeButton({ kind, id, of }: { kind: Kind; id: string; of: str
     <Button kind="quiet" onClick={() => edit(kind, id)}>
       <span>
         Change<span className="sr-only"> {of}</span>…
+      </span>
+    </Button>
+  );
+}
+
+export function RegistersButton({ nodeId, nodeKey }: { nodeId: string; nodeKey: string }) {
+  const { allowed, registers } = use(Context);
+  if (!allowed.includes('wiring.write')) return null;
+  return (
+    <Button kind="quiet" className="-ml-3" onClick={() => registers(nodeId)}>
+      <span>
+        What is read<span className="sr-only"> of {nodeKey}</span>…
       </span>
     </Button>
   );

@@ -7,8 +7,9 @@ import { decimal } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 import { NODE_WORDS } from '@/lib/wording/wiring-parts';
+import { BusLine } from './bus-line';
 import { AddButton, ChangeButton, TokenButtons } from './editing';
-import { nodeStatus, type NodeStatus } from './node-status';
+import { linkTrouble, nodeStatus, type NodeStatus } from './node-status';
 
 const columns = [
   { key: 'node', label: 'Node' },
@@ -79,6 +80,7 @@ export function Nodes({
                     {NODE_WORDS[node.kind]}; {node.channels} relays, reports every {node.reportEvery}&nbsp;s
                     {status.canFallback === 'can' ? '; can keep a house by itself' : ''}
                   </span>
+                  <BusLine node={node} trouble={linkTrouble(kept[node.id])} />
                 </RowHead>
                 <Cell className="whitespace-nowrap">
                   {node.lastHeardAt === null ? (

@@ -2,6 +2,7 @@ import { classes } from '@/components/ui/classes';
 import { Panel } from '@/components/ui/panel';
 import type { StateChannel } from '@/lib/schema/house-state';
 import type { Channel, FieldNode } from '@/lib/schema/yard-view';
+import { NO_WATCHDOG } from '@/lib/wording/bus';
 
 /** A contact is closed where its load has current, whichever way it is wired. */
 function Contact({ state, contact }: { state: 'on' | 'off' | null; contact: 'NO' | 'NC' }) {
@@ -83,6 +84,9 @@ export function RelayBoard({
   if (node.channels === 0) return null;
   return (
     <Panel title={`Relay board of node ${node.key}`}>
+      {node.kind === 'modbus' && (node.modbus?.watchdog ?? null) === null ? (
+        <p className="mb-2 text-warn">{NO_WATCHDOG}</p>
+      ) : null}
       <ol className="grid grid-cols-3 gap-2 rounded-lg bg-earth p-2 sm:grid-cols-4 xl:grid-cols-8">
         {Array.from({ length: node.channels }, (_, place) => {
           const channel = channels.find((one) => one.node === node.key && one.relay === place + 1);
