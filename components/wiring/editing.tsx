@@ -8,6 +8,7 @@ import type { Kind } from './kinds';
 
 /** Forms with their schemas are half of this page's script, and most visits only read. */
 const KindSheet = dynamic(() => import('./kind-sheet').then((module) => module.KindSheet));
+const RegistersSheet = dynamic(() => import('./registers-sheet').then((module) => module.RegistersSheet));
 const TokenSheet = dynamic(() => import('./token-sheet').then((module) => module.TokenSheet));
 
 interface Editing {
@@ -15,12 +16,15 @@ interface Editing {
   /** @param given what stands in a new form at first, over the usual */
   edit: (kind: Kind, id: string | null, given?: object) => void;
   token: (nodeId: string, doing: 'rotate' | 'revoke') => void;
+  registers: (nodeId: string) => void;
 }
-const Context = createContext<Editing>({ allowed: [], edit: () => undefined, token: () => undefined });
+const nothing = () => undefined;
+const Context = createContext<Editing>({ allowed: [], edit: nothing, token: nothing, registers: nothing });
 
 type Open =
   | { what: 'kind'; kind: Kind; id: string | null; given?: object | undefined }
-  | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' };
+  | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' }
+  | { what: 'registers'; nodeId: string };
 
 /** Opens the forms of the page; without the right, its buttons are not there. */
 export function WiringEditing({
@@ -42,10 +46,14 @@ export function WiringEditing({
         allowed,
         edit: (kind, id, given) => setOpen({ what: 'kind', kind, id, given }),
         token: (nodeId, doing) => setOpen({ what: 'token', nodeId, doing }),
+        registers: (nodeId) => setOpen({ what: 'registers', nodeId }),
       }}
     >
       {children}
       {open?.what === 'kind' ? <KindSheet {...{ yard, preferences }} {...open} onClose={close} /> : null}
+      {open?.what === 'registers' ? (
+        <RegistersSheet yard={yard} preferences={preferences} nodeId={open.nodeId} onClose={close} />
+      ) : null}
       {open?.what === 'token' ? (
         <TokenSheet yard={yard} nodeId={open.nodeId} doing={open.doing} onClose={close} />
       ) : null}
@@ -108,6 +116,18 @@ export function ChangeButton({ kind, id, of }: { kind: Kind; id: string; of: str
     <Button kind="quiet" onClick={() => edit(kind, id)}>
       <span>
         Change<span className="sr-only"> {of}</span>…
+      </span>
+    </Button>
+  );
+}
+
+export function RegistersButton({ nodeId, nodeKey }: { nodeId: string; nodeKey: string }) {
+  const { allowed, registers } = use(Context);
+  if (!allowed.includes('wiring.write')) return null;
+  return (
+    <Button kind="quiet" className="-ml-3" onClick={() => registers(nodeId)}>
+      <span>
+        What is read<span className="sr-only"> of {nodeKey}</span>…
       </span>
     </Button>
   );

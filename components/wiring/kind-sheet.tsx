@@ -105,7 +105,8 @@ export function KindSheet({
       onClose={onClose}
       onAnswer={(answer) => {
         const given = at(answer, 'token');
-        if (kind !== 'node' || typeof given !== 'string') return false;
+        // a board has no use for a token: it is gone to
+        if (kind !== 'node' || typeof given !== 'string' || at(answer, 'kind') === 'modbus') return false;
         setToken({ nodeKey: String(at(answer, 'key')), kind: String(at(answer, 'kind')), token: given });
         return true;
       }}

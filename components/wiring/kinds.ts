@@ -8,6 +8,7 @@ import { LoopAmend, LoopCreate, SourceAmend, SourceCreate } from '@/lib/schema/s
 import { channelGroups } from './forms/channel';
 import { houseGroups } from './forms/house';
 import { interlockGroups, loopGroups } from './forms/loop';
+import { busesAtFirst } from './forms/bus';
 import { nodeGroups } from './forms/node';
 import type { Yard } from './forms/options';
 import { pointGroups } from './forms/point';
@@ -45,8 +46,8 @@ export const KINDS: Record<Kind, KindOf> = {
     create: NodeCreate,
     amend: NodeAmend,
     list: (yard) => yard.nodes,
-    groups: (_, id) => nodeGroups(id === null),
-    first: () => ({ kind: 'socket', reportEvery: 30, channels: 8 }),
+    groups: (yard, id) => nodeGroups(yard.nodes.find((one) => one.id === id) ?? null),
+    first: () => ({ kind: 'socket', reportEvery: 30, channels: 8, ...busesAtFirst }),
     removal:
       'Its token ends at once and its relays fall to their safe states. Its points and channels must be moved or removed first.',
   },

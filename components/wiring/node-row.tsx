@@ -6,8 +6,9 @@ import { decimal } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 import { NODE_WORDS } from '@/lib/wording/wiring-parts';
+import { BusLine } from './bus-line';
 import { ChangeButton, TokenButtons } from './editing';
-import { nodeStatus, type NodeStatus } from './node-status';
+import { linkTrouble, nodeStatus, type NodeStatus } from './node-status';
 import { NodeTailButton } from './node-tail';
 
 const unknown = <span className="font-sans text-soft">not told</span>;
@@ -31,7 +32,15 @@ function Refusals({ refusals }: { refusals: NodeStatus['refusals'] }) {
   );
 }
 
-function Name({ node, status }: { node: FieldNode; status: NodeStatus }) {
+function Name({
+  node,
+  status,
+  trouble,
+}: {
+  node: FieldNode;
+  status: NodeStatus;
+  trouble: ReturnType<typeof linkTrouble>;
+}) {
   const differs = status.relaysTold !== null && status.relaysTold !== node.channels;
   return (
     <RowHead className="min-w-36">
@@ -40,6 +49,7 @@ function Name({ node, status }: { node: FieldNode; status: NodeStatus }) {
         {NODE_WORDS[node.kind]}; {node.channels} relays, reports every {node.reportEvery}&nbsp;s
         {status.canFallback === 'can' ? '; can keep a house by itself' : ''}
       </span>
+      <BusLine node={node} trouble={trouble} />
       {differs ? (
         <span className="block text-[0.85rem] text-warn">
           It says that it has {status.relaysTold} relays; {node.channels} are registered. Change one of the
@@ -83,7 +93,7 @@ export function NodeRow({
   const status = nodeStatus(kept);
   return (
     <Row>
-      <Name node={node} status={status} />
+      <Name node={node} status={status} trouble={linkTrouble(kept)} />
       <Cell className="whitespace-nowrap">
         {node.lastHeardAt === null ? (
           <span className="font-semibold text-warn">Never</span>

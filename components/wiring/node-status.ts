@@ -43,6 +43,11 @@ export function nodeStatus(kept: Record<string, unknown> | undefined): NodeStatu
   };
 }
 
+/** Why a board or a broker that is gone to cannot be reached; null: it can, or the node calls by itself. */
+export function linkTrouble(kept: Record<string, unknown> | undefined): string | null {
+  return text(kept?.linkTrouble);
+}
+
 function refusal(value: unknown): NodeStatus['refusals'] {
   if (typeof value !== 'object' || value === null) return [];
   const { name, why } = value as Record<string, unknown>;

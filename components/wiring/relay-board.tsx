@@ -2,6 +2,7 @@ import { classes } from '@/components/ui/classes';
 import { Panel } from '@/components/ui/panel';
 import type { StateChannel } from '@/lib/schema/house-state';
 import type { Channel, FieldNode } from '@/lib/schema/yard-view';
+import { NO_WATCHDOG } from '@/lib/wording/bus';
 import { relayWords, type RelayWords } from '@/lib/wording/relay';
 import { RelayDrawing } from './relay-drawing';
 
@@ -75,6 +76,9 @@ export function RelayBoard({
       title={`Relay board of node ${node.key}`}
       note="The node tells what its coils are. Contact and load follow from that, until a run proof shows otherwise."
     >
+      {node.kind === 'modbus' && (node.modbus?.watchdog ?? null) === null ? (
+        <p className="mb-2 text-warn">{NO_WATCHDOG}</p>
+      ) : null}
       <ol className="grid grid-cols-2 gap-2 rounded-lg bg-earth p-2 sm:grid-cols-4 xl:grid-cols-8">
         {Array.from({ length: node.channels }, (_, place) => {
           const channel = channels.find((one) => one.node === node.key && one.relay === place + 1);

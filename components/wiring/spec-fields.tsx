@@ -5,7 +5,7 @@ import { classes } from '@/components/ui/classes';
 import { NumberField, Select, TextArea, TextField } from '@/components/ui/field';
 import { fieldUnit } from '@/lib/units/fields';
 import type { Preferences } from '@/lib/units/preferences';
-import { at, sectionsOf, type Group, type Spec } from './spec';
+import { at, isAsked, sectionsOf, type Group, type Spec } from './spec';
 
 interface Props {
   form: UseFormReturn;
@@ -43,7 +43,12 @@ function SpecField({ spec, form, preferences }: Props & { spec: Spec }) {
       return <NumberField {...common} {...(unit === undefined ? {} : { unit })} />;
     }
     case 'text':
-      return spec.long === true ? <TextArea {...common} /> : <TextField {...common} />;
+      if (spec.long === true) return <TextArea {...common} />;
+      return spec.secret === true ? (
+        <TextField {...common} type="password" autoComplete="new-password" />
+      ) : (
+        <TextField {...common} />
+      );
   }
 }
 
@@ -75,7 +80,9 @@ function Fields({ group, isFirst, ...props }: Props & { group: Group; isFirst: b
 
 /** All groups of a form, each a fieldset with its note; what is folded opens by itself where an error waits inside. */
 export function SpecFields({ groups, ...props }: Props & { groups: Group[] }) {
-  return sectionsOf(groups).map((section, place) => {
+  const values = groups.some((group) => group.when !== undefined) ? props.form.watch() : undefined;
+  const asked = groups.filter((group) => isAsked(group, values));
+  return sectionsOf(asked).map((section, place) => {
     const name = section[0]?.folded;
     const fields = section.map((group, at) => (
       <Fields key={at} group={group} isFirst={at === 0 && (place === 0 || name !== undefined)} {...props} />

@@ -15,7 +15,7 @@ interface Own {
   hint?: string;
 }
 export type Spec =
-  | (Own & { as: 'text'; empty?: Empty; long?: boolean })
+  | (Own & { as: 'text'; empty?: Empty; long?: boolean; secret?: boolean })
   | (Own & { as: 'number'; quantity: Quantity; unit?: string; empty?: Empty })
   | (Own & { as: 'choice'; options: { value: string; label: string }[]; empty?: Empty; none?: string })
   | (Own & { as: 'check' });
@@ -28,6 +28,8 @@ export interface Group {
   columns?: 1 | 2 | 3;
   /** The object at `path` as a whole is null while the field at `unless` is empty. */
   nullUnless?: { path: string; unless: string };
+  /** Asked and sent only while the field at `path` holds this. */
+  when?: { path: string; is: string };
   /** Folded away until asked for: what a first set-up need not know. Neighbours of one name fold together. */
   folded?: string;
 }
@@ -99,7 +101,7 @@ export function bodyOf(
 ): { body: Json; errors: Errors } {
   const body: Json = {};
   const errors: Errors = {};
-  for (const group of groups) {
+  for (const group of groups.filter((one) => isAsked(one, values))) {
     const off = group.nullUnless !== undefined && isEmpty(at(values, group.nullUnless.unless));
     if (group.nullUnless !== undefined && off) {
       const { path, unless } = group.nullUnless;
@@ -116,6 +118,11 @@ export function bodyOf(
     }
   }
   return { body, errors };
+}
+
+/** Whether a group is asked, as the form stands. */
+export function isAsked({ when }: Group, values: unknown): boolean {
+  return when === undefined || at(values, when.path) === when.is;
 }
 
 function isEmpty(value: unknown): boolean {

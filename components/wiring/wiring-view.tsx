@@ -57,6 +57,7 @@ export function WiringView({
       key: node.key,
       lastHeardAt: node.lastHeardAt === null ? null : Date.parse(node.lastHeardAt),
       isRevoked: node.revokedAt !== null,
+      ...(node.kind === 'modbus' ? { board: { watchdogS: node.modbus?.watchdog?.within ?? null } } : {}),
       keeps: channels
         .filter((one) => one.node === node.key && one.fallback !== null && can[node.key] === 'can')
         .map((one) => one.label),

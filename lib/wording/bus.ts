@@ -91,4 +91,61 @@ export function boardWords(watchdogS: number | null): string {
     : `Its watchdog drops every relay ${watchdogS}\u00a0s after it was last spoken to.`;
 }
 
-export const NO_WATCHDOG_SHORT = 'no watchdog: keeps its last state';
+/** On the relay board of one without watchdog. */
+export const NO_WATCHDOG =
+  'This board has no watchdog: when the network fails, or this program ends without a word, every relay stays as it last was. Its isolator is the only sure way to stop a load.';
+
+/** @example linkWords('mqtt', 'it does not answer') === 'Broker: it does not answer.' */
+export function linkWords(kind: string, trouble: string): string {
+  return `${kind === 'mqtt' ? 'Broker' : 'Board'}: ${trouble.replace(/\.$/, '')}.`;
+}
+
+const UNITS: Record<string, string> = {
+  Cel: '°C',
+  Far: '°F',
+  '%RH': '% RH',
+  '/': '',
+  'W/m2': 'W/m²',
+  'm3/s': 'm³/s',
+};
+
+export interface ReadFacts {
+  state: 'asked' | 'answered' | 'failed';
+  words: number[] | null;
+  raw: number | null;
+  value: number | null;
+  unit: string;
+  why: string | null;
+}
+
+/** @example testReadWords({ state: 'answered', value: 23.4, unit: 'Cel', raw: 234, … }) === '23.4 °C, raw 234' */
+export function testReadWords({ state, words, raw, value, unit, why }: ReadFacts): string {
+  if (state === 'asked') return 'Asked; the board has not answered yet.';
+  if (state === 'failed' || value === null) {
+    const held = words === null ? '' : ` It holds ${words.join(', ')}.`;
+    const said = why ?? 'no reason was told';
+    return `No reading: ${said.replace(/\.$/, '')}.${held}`;
+  }
+  const named = UNITS[unit] ?? unit;
+  const space = '\u00a0';
+  return `${value}${named === '' ? '' : space + named}, raw ${raw ?? words?.join(', ') ?? 'not told'}`;
+}
+
+export const TABLE_WORDS: Record<string, string> = {
+  coil: 'Coil',
+  discrete: 'Discrete input',
+  input: 'Input register',
+  holding: 'Holding register',
+};
+export const TYPE_WORDS: Record<string, string> = {
+  bit: 'one bit, on or off',
+  u16: '16 bits, never negative',
+  s16: '16 bits, with sign',
+  u32: '32 bits, never negative',
+  s32: '32 bits, with sign',
+  f32: '32 bits, floating point',
+};
+export const ORDER_WORDS: Record<string, string> = {
+  'high-first': 'high register first',
+  'low-first': 'low register first',
+};

@@ -69,6 +69,12 @@ export const NODE_WORDS: Record<string, string> = {
 
 /** Where a node's own programme puts its token. */
 export function tokenUse(kind: string, origin: string): string[] {
+  if (kind === 'mqtt')
+    return [
+      'The node signs each frame with it; it is never sent.',
+      'Its two topics stand beside it under Field nodes;',
+      'how a frame is signed is in docs/buses.md.',
+    ];
   const socket = origin.replace(/^http/, 'ws');
   return kind === 'http'
     ? [

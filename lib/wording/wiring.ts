@@ -12,6 +12,8 @@ export interface WiringStanding {
     isRevoked: boolean;
     /** Labels of channels that it keeps by their fallback. */
     keeps?: string[];
+    /** It is a board that keeps no lease; null: nor a watchdog. */
+    board?: { watchdogS: number | null };
   }[];
   points: { name: string; isGood: boolean }[];
   channels: { number: number; label: string; isProved: boolean; isLockedOut: boolean }[];
@@ -83,8 +85,40 @@ function provedSentence({ channels, points }: WiringStanding): Phrase[] {
   );
 }
 
+/** A board keeps no lease of ours: what becomes of its relays is its watchdog's business, or nobody's. */
+function boardSentence(
+  { key, lastHeardAt, isRevoked }: WiringStanding['nodes'][number],
+  watchdogS: number | null,
+  now: number,
+): Phrase[] {
+  const keeps = watchdogS === null;
+  const left = keeps
+    ? { text: 'having no watchdog, its relays may still be as they last were.', tone: 'warn' as const }
+    : 'its watchdog has dropped its relays.';
+  if (isRevoked) return join('Board ', key, ' is revoked: it is neither read nor switched.');
+  if (lastHeardAt === null)
+    return join('Board ', key, { text: ' has never answered:', tone: 'warn' }, ' look at how it is reached.');
+  const silentS = (now - lastHeardAt) / 1000;
+  if (silentS > Math.max(LEASE_S, watchdogS ?? 0))
+    return join(
+      'Board ',
+      key,
+      { text: ` has been silent for ${duration(silentS)};`, tone: 'warn' },
+      ' ',
+      left,
+    );
+  const answered = `Board ${key} answered ${age(now - lastHeardAt)}; `;
+  return keeps
+    ? join(answered, {
+        text: 'having no watchdog, its relays stay as they are when the network fails.',
+        tone: 'warn',
+      })
+    : join(answered, `its watchdog drops its relays ${watchdogS}\u00a0s after it was last spoken to.`);
+}
+
 function nodeSentence(node: WiringStanding['nodes'][number], now: number): Phrase[] {
   const key = node.key;
+  if (node.board !== undefined) return boardSentence(node, node.board.watchdogS, now);
   if (node.isRevoked)
     return join(
       'Field node ',

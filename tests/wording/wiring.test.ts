@@ -42,6 +42,25 @@ describe('the sentence of the wiring', () => {
     );
   });
 
+  it('says of a board what becomes of its relays, and never that they fall back by a lease', () => {
+    const board = (watchdogS: number | null, change: object = {}) =>
+      says({ nodes: [{ ...node, key: 'MB-1', board: { watchdogS }, ...change }] }).replace(
+        /^.*tested\. /,
+        '',
+      );
+    expect(board(null)).toBe(
+      'Board MB-1 answered 3 s ago; having no watchdog, its relays stay as they are when the network fails.',
+    );
+    expect(board(20)).toBe(
+      'Board MB-1 answered 3 s ago; its watchdog drops its relays 20 s after it was last spoken to.',
+    );
+    const silent = { lastHeardAt: now - 120_000 };
+    expect(board(null, silent)).toMatch(/silent for 2 min; having no watchdog, its relays may still be as/);
+    expect(board(20, silent)).toMatch(/silent for 2 min; its watchdog has dropped its relays\.$/);
+    expect(board(null, { lastHeardAt: null })).toMatch(/^Board MB-1 has never answered: look at how it is/);
+    expect(board(null, { isRevoked: true })).toMatch(/neither read nor switched\.$/);
+  });
+
   it('says it shortly when all is proved', () => {
     expect(says({ channels: four.slice(0, 3) })).toMatch(/^All three channels are proved\. Field node/);
     expect(says({ channels: four.slice(0, 1) })).toMatch(/^The one channel is proved\. /);
