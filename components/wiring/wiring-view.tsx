@@ -11,6 +11,7 @@ import { FormerLockOuts, StandingLockOuts } from './lock-outs';
 import { canFallback } from './node-status';
 import { Nodes } from './nodes';
 import { Points } from './points';
+import type { LastProof } from './proved-cell';
 import { RelayBoard } from './relay-board';
 import { Interlocks } from './interlocks';
 import { Sources } from './sources';
@@ -18,6 +19,7 @@ import { Sources } from './sources';
 export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;
   ranAlone: Record<string, number>;
+  proofs: Record<string, LastProof>;
   state: HouseState | null;
 }
 
@@ -36,7 +38,7 @@ export function WiringView({
   preferences: Preferences;
   now: number;
 }) {
-  const { nodeStatus, ranAlone, state, ...yard } = data;
+  const { nodeStatus, ranAlone, proofs, state, ...yard } = data;
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
   const can = canFallback(nodes, nodeStatus);
@@ -92,6 +94,7 @@ export function WiringView({
           lockouts={lockouts}
           house={house.slug}
           alone={{ can, ran: ranAlone }}
+          proofs={proofs}
           {...{ points, zone, now, preferences }}
           hasNode={nodes.some((node) => node.channels > 0)}
         />

@@ -7,6 +7,7 @@ import { HEAP_ENTRY_KINDS, HeapMaterial } from '@/lib/schema/heap';
 import { HEAP_JOB_KINDS } from '@/lib/schema/heap-job';
 import { COST_KINDS } from '@/lib/schema/money';
 import { ProbePlace, Section } from '@/lib/schema/probe-set';
+import { ProofOutcome, ProofRecord, ProofRun } from '@/lib/schema/proof';
 import { SECTIONS, SPANS } from '@/lib/schema/report';
 import { RuleBody } from '@/lib/schema/rule';
 import { channelFields, InterlockCreate } from '@/lib/schema/channel';
@@ -48,12 +49,21 @@ export const CELLS: Readonly<Record<string, Readonly<Record<string, z.ZodType>>>
     ...{ number: channelFields.number, relay: channelFields.relay, key: Key, label: channelFields.label },
     ...{ contact: channelFields.contact, load: channelFields.load, high_limit: channelFields.highLimit },
     ...{ run_proof: channelFields.runProof, fallback: channelFields.fallback, flow: channelFields.flow },
+    protection: channelFields.protection,
     ...{ min_on_s: seconds, min_off_s: seconds, longest_on_s: seconds },
   },
   loop: { slug: Slug },
   interlock: { kind: InterlockCreate.shape.kind, delay_s: seconds },
   rule: { slug: Slug },
-  rule_version: { status: z.enum(['draft', 'in-force', 'retired']), body: RuleBody, number: whole(1, 1e6) },
+  rule_version: {
+    ...{ status: z.enum(['draft', 'in-force', 'retired']), body: RuleBody, number: whole(1, 1e6) },
+    unproved: z.strictObject({ by: z.string(), at: z.string(), words: z.string().nullable() }),
+  },
+  proof: {
+    ...{ outcome: ProofOutcome, records: z.array(ProofRecord).max(500), runs: z.array(ProofRun).max(500) },
+    wiring: z.looseObject({ node: Key, relay: whole(1, 64) }),
+  },
+  attachment: { shows: z.enum(['plate', 'wiring']) },
   heap_entry: { kind: z.enum(HEAP_ENTRY_KINDS), materials: z.array(HeapMaterial).max(20) },
   probe_set: { section: Section, places: z.array(ProbePlace) },
   heap_job: {

@@ -33,7 +33,8 @@ export async function photographsOf(
     .from(attachment)
     .where(and(eq(attachment.holdingId, holding.id), inArray(attachment.entryId, [...entries])))
     .orderBy(asc(attachment.enteredAt), asc(attachment.id));
-  for (const row of rows) byEntry.set(row.entryId, [...(byEntry.get(row.entryId) ?? []), told(row)]);
+  for (const { entryId, ...row } of rows)
+    if (entryId !== null) byEntry.set(entryId, [...(byEntry.get(entryId) ?? []), told(row)]);
   return byEntry;
 }
 

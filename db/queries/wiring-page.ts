@@ -20,6 +20,7 @@ import { listLoops } from './loop';
 import { listNodes } from './node';
 import { lastAlone } from './node-log';
 import { listPoints } from './point';
+import { lastProofs, type LastProof } from './proof';
 import { readMemory } from './running';
 import { listSources } from './source';
 
@@ -36,6 +37,8 @@ export interface WiringPage {
   lockouts: Lockout[];
   /** When a channel was last put on by its node's fallback, epoch ms by the channel's id; absent where it never was. */
   ranAlone: Record<string, number>;
+  /** What the proof of each proved channel found, by the channel's id; absent where no record is kept of it. */
+  proofs: Record<string, LastProof>;
   /** Null until the worker has stepped this house for the first time. */
   state: HouseState | null;
 }
@@ -52,6 +55,7 @@ export async function readWiring(holding: Holding, house: House): Promise<Wiring
   );
   return {
     ...{ house, channels, ranAlone: Object.fromEntries(ranAlone) },
+    proofs: Object.fromEntries(await lastProofs(holding, house.id)),
     nodes: await listNodes(holding, house.id),
     nodeStatus: Object.fromEntries(rows.map((row) => [row.id, row.status])),
     points: await listPoints(holding, house.id),

@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm';
 import {
+  check,
   customType,
   date,
   doublePrecision,
@@ -16,6 +17,7 @@ import {
 import { holdingId, instant } from './columns';
 import { organization } from './auth';
 import { source } from './channel';
+import { proof } from './proof';
 
 const revision = () => integer('revision').notNull().default(1);
 /** Who wrote a row and when, by app time; an amendment stays beside it. */
@@ -86,13 +88,20 @@ export const heapMaterial = pgTable(
   ],
 );
 
-/** Photographs of an entry, as they were made anew here: without the place, the camera and all else a file carries. */
+/**
+ * Photographs of an entry or of a proof, as they were made anew here: without the place, the camera and all else a file
+ * carries.
+ */
 export const attachment = pgTable(
   'attachment',
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    entryId: uuid('entry_id').notNull(),
+    /** One of the two. */
+    entryId: uuid('entry_id'),
+    proofId: uuid('proof_id'),
+    /** Of a proof's: what it shows. */
+    shows: text('shows').$type<'plate' | 'wiring'>(),
     by: text('by').notNull(),
     enteredAt: instant('entered_at').notNull(),
     widthPx: integer('width_px').notNull(),
@@ -106,7 +115,13 @@ export const attachment = pgTable(
       columns: [table.holdingId, table.entryId],
       foreignColumns: [heapEntry.holdingId, heapEntry.id],
     }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.proofId],
+      foreignColumns: [proof.holdingId, proof.id],
+    }).onDelete('cascade'),
     index('attachment_entry').on(table.holdingId, table.entryId),
+    index('attachment_proof').on(table.holdingId, table.proofId),
+    check('attachment_of_one', sql`(entry_id is null) <> (proof_id is null)`),
   ],
 );
 

@@ -6,6 +6,7 @@ import * as heapYear from './heap-year';
 import * as money from './money';
 import * as open from './open';
 import * as people from './people';
+import * as proofs from './proofs';
 import * as record from './record';
 import * as rules from './rules';
 import * as running from './running';
@@ -25,5 +26,6 @@ export const OPERATIONS: readonly Operation[] = [
   archives,
   money,
   people,
+  proofs,
   open,
 ].flatMap((subject) => Object.values<Operation>(subject));
