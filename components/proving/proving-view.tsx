@@ -7,7 +7,7 @@ import type { Proof } from '@/lib/schema/proof';
 import { day } from '@/lib/units/time';
 import { provingSentence } from '@/lib/wording/proving';
 import { isMains } from '@/lib/wording/wiring-load';
-import { LOCKOUT_CAUTION, LOOP_CAUTION, MAINS_CAUTION } from '@/lib/wording/wiring-parts';
+import { LOOP_CAUTION, MAINS_CAUTION } from '@/lib/wording/wiring-parts';
 import { ChannelFacts } from './channel-facts';
 import { ProvingContext, type ProvingData } from './context';
 import { FormerProofs } from './former-proofs';
@@ -55,11 +55,6 @@ export function ProvingView({ start, mayProve }: { start: ProvingStart; mayProve
         {mayProve ? null : (
           <Notice tone="quiet" title="You can read a proof, not make one.">
             A proof runs a load for whoever stands at it, so an installer or an owner makes it.
-          </Notice>
-        )}
-        {lockout === null ? null : (
-          <Notice tone="warn" title={`Locked out by ${lockout.by}: “${lockout.why}”`}>
-            {LOCKOUT_CAUTION}
           </Notice>
         )}
         <div className="grid grid-cols-1 items-start gap-5 xl:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">

@@ -7,7 +7,7 @@ import { Channels } from './channels';
 import { WiringEditing } from './editing';
 import type { Yard } from './forms/options';
 import { HousePanel } from './house-panel';
-import { FormerLockOuts, StandingLockOuts } from './lock-outs';
+import { FormerLockOuts } from './lock-outs';
 import { canFallback } from './node-status';
 import { Nodes } from './nodes';
 import { Points } from './points';
@@ -66,12 +66,6 @@ export function WiringView({
   return (
     <WiringEditing yard={yard} preferences={preferences} allowed={allowed}>
       <div className="flex flex-col gap-5">
-        <StandingLockOuts
-          lockouts={lockouts}
-          channels={channels}
-          house={house.slug}
-          mayRemove={allowed.includes('lockout.remove')}
-        />
         <Sentence before="Wiring" phrases={wiringSentence(standing, now)} />
         {allowed.includes('wiring.write') ? null : (
           <Notice tone="quiet" title="You can read the wiring, not change it.">
