@@ -12,6 +12,7 @@ import * as house from './schema/house';
 import * as node from './schema/node';
 import * as money from './schema/money';
 import * as people from './schema/people';
+import * as proof from './schema/proof';
 import * as report from './schema/report';
 import * as rule from './schema/rule';
 import * as nodeLog from './schema/node-log';
@@ -29,6 +30,7 @@ export const schema = {
   ...node,
   ...money,
   ...people,
+  ...proof,
   ...report,
   ...rule,
   ...nodeLog,

@@ -35,7 +35,8 @@ export function ForceDialog({
   version: number;
   channelLabel: string;
   isProved: boolean;
-  onForce: (why: string, acceptUnproved: boolean) => Promise<Answer<unknown>>;
+  /** `consent` is what was typed; null on a proved channel. */
+  onForce: (why: string, consent: string | null) => Promise<Answer<unknown>>;
   onClose: () => void;
 }) {
   const changes = inForce === null ? null : ruleChanges(inForce, body, names, preferences);
@@ -53,7 +54,7 @@ export function ForceDialog({
     setErrors(wrong);
     if (Object.keys(wrong).length > 0) return;
     setBusy(true);
-    const answer = await onForce(why, !isProved);
+    const answer = await onForce(why, isProved ? null : consent.trim());
     setBusy(false);
     if (answer.ok) return onClose();
     setErrors(answer.fields.why === undefined ? { all: answer.message } : { why: answer.fields.why });
@@ -96,7 +97,7 @@ export function ForceDialog({
         <>
           <Notice tone="warn" title={`${channelLabel} is not proved.`}>
             Nobody has seen that this relay moves this load, and the right way round. Have an installer prove
-            it, or look at the load yourself while it first runs.
+            it, or look at the load yourself while it first runs. Your words are kept beside this version.
           </Notice>
           <TextField
             label={`Type “${CONSENT}” to put it into force all the same`}

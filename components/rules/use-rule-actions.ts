@@ -59,12 +59,12 @@ export function useRuleActions({
     return answer;
   }
 
-  async function force(why: string, acceptUnproved: boolean): Promise<Answer<unknown>> {
+  async function force(why: string, typed: string | null): Promise<Answer<unknown>> {
     if (form.formState.isDirty || rule.draft === null) {
       const saved = await save();
       if (!saved.ok) return saved;
     }
-    const consent = acceptUnproved ? { acceptUnproved } : {};
+    const consent = typed === null ? {} : { acceptUnproved: true, consent: typed };
     const answer = await send(
       'POST',
       `/rules/${rule.id}/force`,

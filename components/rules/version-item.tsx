@@ -54,6 +54,12 @@ export function VersionItem({
           ))}
         </ul>
       )}
+      {version.unproved === null ? null : (
+        <p className="text-[0.9rem] text-warn">
+          On a channel that nobody had proved: accepted by {version.unproved.by}, {at(version.unproved.at)}
+          {version.unproved.words === null ? '' : `, with the words “${version.unproved.words}”`}.
+        </p>
+      )}
       {ending === null ? null : <p className="text-[0.9rem] text-soft">{ending}</p>}
       {children}
     </li>

@@ -2,12 +2,12 @@ import { Phrases } from '@/components/ui/sentence';
 import { Cell, Row, RowHead } from '@/components/ui/table';
 import type { Channel, Lockout, Point, Source } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
-import { day } from '@/lib/units/time';
 import { exactly } from '@/lib/wording/settings';
 import { circuitWords, contactFit, LOAD_WORDS, ratedWords, safeStateWords } from '@/lib/wording/wiring-load';
 import { ChangeButton } from './editing';
 import { FallbackLine, type Alone } from './fallback-line';
 import { LockOutButton } from './lock-out';
+import { ProvedCell, type LastProof } from './proved-cell';
 
 /** What a channel's fallback is read with. */
 export interface ChannelReading {
@@ -26,12 +26,14 @@ export function ChannelRow({
   lockout,
   zone,
   house,
+  proof,
   ...reading
 }: ChannelReading & {
   channel: Channel;
   source: Source | undefined;
   lockout: Lockout | undefined;
   house: string;
+  proof: LastProof | undefined;
 }) {
   const fit = contactFit(channel.load);
   return (
@@ -67,11 +69,13 @@ export function ChannelRow({
       <Cell wideOnly>{channel.contact}</Cell>
       <Cell>{safeStateWords(channel.contact, channel.load.kind)}</Cell>
       <Cell>
-        {channel.provedAt === null ? (
-          <span className="font-semibold text-warn">Not proved</span>
-        ) : (
-          <span className="whitespace-nowrap">{day(Date.parse(channel.provedAt), zone)}</span>
-        )}
+        <ProvedCell
+          channel={channel}
+          house={house}
+          zone={zone}
+          proof={proof}
+          preferences={reading.preferences}
+        />
       </Cell>
       <Cell className="align-middle">
         <div className="flex justify-end">

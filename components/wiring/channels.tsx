@@ -7,6 +7,7 @@ import { isMains, SHARE_NOTE } from '@/lib/wording/wiring-load';
 import { MAINS_CAUTION } from '@/lib/wording/wiring-parts';
 import { ChannelRow, type ChannelReading } from './channel-row';
 import { AddButton } from './editing';
+import type { LastProof } from './proved-cell';
 
 const columns = [
   { key: 'number', label: 'Ch', figure: false },
@@ -26,6 +27,7 @@ export function Channels({
   lockouts,
   house,
   hasNode,
+  proofs,
   ...reading
 }: ChannelReading & {
   channels: Channel[];
@@ -33,6 +35,8 @@ export function Channels({
   lockouts: Lockout[];
   house: string;
   hasNode: boolean;
+  /** The last proof of each channel that was proved, by its id. */
+  proofs: Record<string, LastProof>;
 }) {
   return (
     <Panel
@@ -55,6 +59,7 @@ export function Channels({
               source={sources.find((one) => one.slug === channel.source)}
               lockout={lockouts.find((one) => one.channel === channel.key && one.removedAt === null)}
               house={house}
+              proof={proofs[channel.id]}
               {...reading}
             />
           ))}

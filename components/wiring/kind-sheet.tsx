@@ -6,6 +6,7 @@ import { Phrases } from '@/components/ui/sentence';
 import type { Preferences } from '@/lib/units/preferences';
 import { contactFit, isMains, safeStateWords } from '@/lib/wording/wiring-load';
 import { LOOP_CAUTION, MAINS_CAUTION } from '@/lib/wording/wiring-parts';
+import type { Channel } from '@/lib/schema/yard-view';
 import { EntitySheet } from './entity-sheet';
 import type { Yard } from './forms/options';
 import { InterlockEffect } from './interlock-effect';
@@ -13,16 +14,20 @@ import { KINDS, type Kind } from './kinds';
 import { PlaceRemarks } from './place-remarks';
 import { at, bodyOf } from './spec';
 import { TokenShown } from './token-shown';
+import { Unproves } from './unproves';
 
 /** The effect of what is being typed into a channel's form: its safe state, its contact, and the caution that goes with mains. */
 function LoadEffect({
   form,
   preferences,
   yard,
+  before,
 }: {
   form: UseFormReturn;
   preferences: Preferences;
   yard: Yard;
+  /** The channel that is changed; undefined of a new one. */
+  before: Channel | undefined;
 }) {
   const { body } = bodyOf(KINDS.channel.groups(yard, null), form.watch(), preferences);
   const number = (path: string) => {
@@ -51,6 +56,7 @@ function LoadEffect({
           </>
         )}
       </p>
+      {before === undefined ? null : <Unproves before={before} body={body} />}
       {isMains(load) ? (
         <Notice tone="warn" title="Mains in a damp house">
           {MAINS_CAUTION}
@@ -114,7 +120,12 @@ export function KindSheet({
         kind === 'house' ? (
           <PlaceRemarks form={form} preferences={preferences} />
         ) : kind === 'channel' ? (
-          <LoadEffect form={form} preferences={preferences} yard={yard} />
+          <LoadEffect
+            form={form}
+            preferences={preferences}
+            yard={yard}
+            before={yard.channels.find((one) => one.id === id)}
+          />
         ) : kind === 'interlock' ? (
           <InterlockEffect id={entity?.id ?? null} {...{ form, yard, preferences }} />
         ) : kind === 'loop' ? (

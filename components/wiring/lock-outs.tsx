@@ -7,7 +7,7 @@ import type { Channel, Lockout } from '@/lib/schema/yard-view';
 import { LOCKOUT_CAUTION } from '@/lib/wording/wiring-parts';
 import { RemoveLockOutButton } from './remove-lock-out';
 
-/** Standing lock-outs, large and above everything else of the page. */
+/** Standing lock-outs, large and above everything else of a page. */
 export function StandingLockOuts({
   lockouts,
   channels,
@@ -15,7 +15,7 @@ export function StandingLockOuts({
   mayRemove,
 }: {
   lockouts: Lockout[];
-  channels: Channel[];
+  channels: Pick<Channel, 'key' | 'label' | 'number'>[];
   house: string;
   mayRemove: boolean;
 }) {

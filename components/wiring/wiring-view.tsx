@@ -11,10 +11,11 @@ import { Channels } from './channels';
 import { WiringEditing } from './editing';
 import type { Yard } from './forms/options';
 import { HousePanel } from './house-panel';
-import { FormerLockOuts, StandingLockOuts } from './lock-outs';
+import { FormerLockOuts } from './lock-outs';
 import { canFallback } from './node-status';
 import { Nodes } from './nodes';
 import { Points } from './points';
+import type { LastProof } from './proved-cell';
 import { RelayBoard } from './relay-board';
 import { Interlocks } from './interlocks';
 import { Sources } from './sources';
@@ -24,6 +25,7 @@ export interface WiringData extends Yard {
   nodeStatus: Record<string, Record<string, unknown>>;
   ranAlone: Record<string, number>;
   channelAlarms: Record<string, string[]>;
+  proofs: Record<string, LastProof>;
   state: HouseState | null;
 }
 
@@ -47,7 +49,7 @@ export function WiringView({
   preferences: Preferences;
   now: number;
 }) {
-  const { nodeStatus, ranAlone, channelAlarms, state, ...yard } = data;
+  const { nodeStatus, ranAlone, channelAlarms, proofs, state, ...yard } = data;
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
   const can = canFallback(nodes, nodeStatus);
@@ -76,12 +78,6 @@ export function WiringView({
   return (
     <WiringEditing yard={yard} preferences={preferences} allowed={allowed}>
       <div className="flex flex-col gap-5">
-        <StandingLockOuts
-          lockouts={lockouts}
-          channels={channels}
-          house={house.slug}
-          mayRemove={allowed.includes('lockout.remove')}
-        />
         <Sentence before="Wiring" phrases={sentences(missing, wiringSentence(standing, now))} />
         <div className="flex flex-wrap gap-2">
           <ButtonLink href={`/${house.slug}/setup`}>
@@ -111,6 +107,7 @@ export function WiringView({
           lockouts={lockouts}
           house={house.slug}
           alone={{ can, ran: ranAlone }}
+          proofs={proofs}
           {...{ points, zone, now, preferences }}
           hasNode={nodes.some((node) => node.channels > 0)}
         />

@@ -11,6 +11,7 @@ import { HEAP_JOB_KINDS } from '@/lib/schema/heap-job';
 import { COST_KINDS } from '@/lib/schema/money';
 import { PointPhotograph } from '@/lib/schema/point-photograph';
 import { ProbePlace, Section } from '@/lib/schema/probe-set';
+import { ProofOutcome, ProofPicture, ProofRecord, ProofRun } from '@/lib/schema/proof';
 import { SECTIONS, SPANS } from '@/lib/schema/report';
 import { RuleBody } from '@/lib/schema/rule';
 import { channelFields, InterlockCreate } from '@/lib/schema/channel';
@@ -53,18 +54,28 @@ export const CELLS: Readonly<Record<string, Readonly<Record<string, z.ZodType>>>
     ...{ kind: Calibration.shape.kind, places: Calibration.shape.places },
     note: z.string().max(500),
   },
-  attachment: { shows: PointPhotograph.shape.shows },
+  attachment: {
+    shows: z.enum([...PointPhotograph.shape.shows.options, ...ProofPicture.shape.shows.options]),
+  },
   source: { slug: Slug, name: sourceFields.name, kind: sourceFields.kind },
   channel: {
     ...{ number: channelFields.number, relay: channelFields.relay, key: Key, label: channelFields.label },
     ...{ contact: channelFields.contact, load: channelFields.load, high_limit: channelFields.highLimit },
     ...{ run_proof: channelFields.runProof, fallback: channelFields.fallback, flow: channelFields.flow },
+    protection: channelFields.protection,
     ...{ min_on_s: seconds, min_off_s: seconds, longest_on_s: seconds },
   },
   loop: { slug: Slug },
   interlock: { kind: InterlockCreate.shape.kind, delay_s: seconds },
   rule: { slug: Slug },
-  rule_version: { status: z.enum(['draft', 'in-force', 'retired']), body: RuleBody, number: whole(1, 1e6) },
+  rule_version: {
+    ...{ status: z.enum(['draft', 'in-force', 'retired']), body: RuleBody, number: whole(1, 1e6) },
+    unproved: z.strictObject({ by: z.string(), at: z.string(), words: z.string().nullable() }),
+  },
+  proof: {
+    ...{ outcome: ProofOutcome, records: z.array(ProofRecord).max(500), runs: z.array(ProofRun).max(500) },
+    wiring: z.looseObject({ node: Key, relay: whole(1, 64) }),
+  },
   heap_entry: { kind: z.enum(HEAP_ENTRY_KINDS), materials: z.array(HeapMaterial).max(20) },
   probe_set: { section: Section, places: z.array(ProbePlace) },
   heap_job: {

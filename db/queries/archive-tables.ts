@@ -50,6 +50,7 @@ const GIVEN: [TableKey, Given][] = [
   ],
   ['interlock', { refs: { channel_id: 'channel', other_id: 'channel' } }],
   ['lockout', { refs: { channel_id: 'channel' } }],
+  ['proof', { refs: { channel_id: 'channel' } }],
   ['rule', { refs: { channel_id: 'channel' } }],
   ['ruleVersion', {}],
   ['heapMaterial', {}],

@@ -5,11 +5,13 @@ import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { channel, interlock, loop } from '@/db/schema/channel';
 import type { ChannelCreate } from '@/lib/schema/channel';
+import { changedWiring, wiringOf } from '@/lib/schema/wiring';
 import { Channel } from '@/lib/schema/yard-view';
 import { ofARun, ofOwnNode } from './channel-points';
 import { listNodes } from './node';
 import { refuseHeater } from './node-bus';
 import { touchPlan } from './plan';
+import { endProof, openProof } from './proof';
 import { rulesOfChannel } from './point-uses';
 import { houseNames, inUse, isId, type HouseNames } from './reference';
 import { Refusal } from './refusal';
@@ -19,10 +21,10 @@ type Row = typeof channel.$inferSelect;
 
 function toChannel(row: Row, names: HouseNames): Channel {
   const { id, revision, number, relay, key, label, frostHelp, contact, load, startsPerHour } = row;
-  const { highLimit, runProof, fallback, flow } = row;
+  const { highLimit, runProof, fallback, flow, protection } = row;
   return Channel.parse({
     ...{ id, revision, number, relay, key, label, frostHelp, contact, load, startsPerHour },
-    ...{ highLimit, runProof, fallback, flow },
+    ...{ highLimit, runProof, fallback, flow, protection },
     node: names.nodes.key(row.nodeId) ?? '',
     source: names.sources.key(row.sourceId),
     minOn: row.minOnS,
@@ -69,7 +71,7 @@ async function columns(holding: Holding, houseId: string, given: Given) {
     part === null ? null : { ...part, point: names.points.find(part.point, `${path}.point`).key };
   const { number, relay, key, label, frostHelp, contact, startsPerHour } = given;
   const { kind, watts, volts, supply, contactAmps } = given.load;
-  const { flow } = given;
+  const { flow, protection } = given;
   return {
     ...{ number, relay, key, label, frostHelp, contact, startsPerHour },
     load: {
@@ -87,6 +89,7 @@ async function columns(holding: Holding, houseId: string, given: Given) {
             from: flow.from,
             ...(flow.sd === undefined ? {} : { sd: flow.sd }),
           },
+    protection,
     nodeId: node.id,
     sourceId: names.sources.id(given.source, 'source'),
     minOnS: given.minOn,
@@ -107,25 +110,35 @@ export async function createChannel(holding: Holding, houseId: string, given: Gi
   return found(holding, houseId, id);
 }
 
-/** A proof is of a wiring: another node, relay, contact or load has not been seen to run. */
+/** A proof is of a wiring: another one has not been seen to run, and a proof that goes on ends with it. */
 export async function amendChannel(
   holding: Holding,
   houseId: string,
   before: Channel,
   given: Given,
+  act: { by: string; now: Date },
 ): Promise<Channel> {
   const set = await columns(holding, houseId, given);
-  const rewired =
-    given.node !== before.node ||
-    given.relay !== before.relay ||
-    given.contact !== before.contact ||
-    JSON.stringify(set.load) !== JSON.stringify(before.load);
+  // a body may name the same node by its key or by its id
+  const node = (await wiredNode(holding, before.id)) === set.nodeId ? before.node : given.node;
+  const parts = changedWiring(wiringOf(before), wiringOf({ ...given, ...set, node }));
   await holding.db
     .update(channel)
-    .set({ ...set, ...(rewired ? { provedAt: null } : {}), revision: sql`${channel.revision} + 1` })
+    .set({ ...set, ...(parts.length > 0 ? { provedAt: null } : {}), revision: sql`${channel.revision} + 1` })
     .where(and(eq(channel.holdingId, holding.id), eq(channel.id, before.id)));
+  const going = parts.length === 0 ? null : await openProof(holding, houseId, before.id);
+  if (going !== null)
+    await endProof(holding, houseId, going, { outcome: 'rewired', why: parts.join(', ') }, act);
   await touchPlan(holding, houseId);
   return found(holding, houseId, before.id);
+}
+
+async function wiredNode(holding: Holding, id: string): Promise<string | null> {
+  const [row] = await holding.db
+    .select({ nodeId: channel.nodeId })
+    .from(channel)
+    .where(and(eq(channel.holdingId, holding.id), eq(channel.id, id)));
+  return row?.nodeId ?? null;
 }
 
 export async function removeChannel(

@@ -6,7 +6,7 @@ import { channel, lockout } from '@/db/schema/channel';
 import type { Lockout } from '@/lib/schema/yard-view';
 import { addPersonCommand } from './person-command';
 import { touchPlan } from './plan';
-import { houseNames, isId } from './reference';
+import { houseNames, inUse, isId } from './reference';
 import { Refusal } from './refusal';
 
 const fields = {
@@ -51,6 +51,20 @@ async function select(
 export async function listLockouts(holding: Holding, houseId: string): Promise<Lockout[]> {
   const rows = (await select(holding, houseId, undefined)).map(toLockout);
   return [...rows.filter((row) => row.removedAt === null), ...rows.filter((row) => row.removedAt !== null)];
+}
+
+/** What stands, and what people call the channels of it: for the bar over every page of the house. */
+export async function readStandingLockouts(
+  holding: Holding,
+  houseId: string,
+): Promise<{ lockouts: Lockout[]; channels: { key: string; label: string; number: number }[] }> {
+  const rows = await select(holding, houseId, isNull(lockout.removedAt));
+  if (rows.length === 0) return { lockouts: [], channels: [] };
+  const channels = await holding.db
+    .select({ key: channel.key, label: channel.label, number: channel.number })
+    .from(channel)
+    .where(inUse(holding, houseId, channel));
+  return { lockouts: rows.map(toLockout), channels };
 }
 
 export async function findLockout(holding: Holding, houseId: string, id: string): Promise<Lockout | null> {

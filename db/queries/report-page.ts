@@ -5,6 +5,7 @@ import type { NightSummary } from '@/lib/analysis/nights';
 import { type Span, type SpanOfNights, spanBefore, spanOfNight } from '@/lib/analysis/report-span';
 import type { ReportSection } from '@/lib/schema/report';
 import type { House } from '@/lib/schema/yard-view';
+import { toLocal } from '@/lib/units/local-time';
 import type { Preferences } from '@/lib/units/preferences';
 import {
   figuresBlock,
@@ -25,6 +26,7 @@ import { readRecovery } from './duty-recovery';
 import { readMoney } from './money-page';
 import { listHouses } from './house';
 import { listNights } from './night';
+import { lastProofs } from './proof';
 import { listSources } from './source';
 
 export interface ReportAsk {
@@ -122,10 +124,13 @@ async function alarmsOf(holding: Holding, house: House, from: number, to: number
     alarms.map((alarm) => ({ ...alarm, events: events.get(alarm.id) ?? [] })),
     scene,
   );
-  const channels = (await listChannels(holding, house.id)).map(({ label, provedAt }) => ({
-    ...{ label, provedAt: provedAt === null ? null : Date.parse(provedAt) },
+  const proofs = await lastProofs(holding, house.id);
+  const channels = (await listChannels(holding, house.id)).map(({ id, label, provedAt, protection }) => ({
+    ...{ label, protection, proof: proofs.get(id) ?? null },
+    provedAt: provedAt === null ? null : Date.parse(provedAt),
   }));
-  return { ...block, rows: [...provingRows(channels, scene), ...(block.rows ?? [])] };
+  const today = toLocal(scene.now, house.zone).slice(0, 10);
+  return { ...block, rows: [...provingRows(channels, today, scene), ...(block.rows ?? [])] };
 }
 
 /** The same of every house that is in use, in the order of the menus. */

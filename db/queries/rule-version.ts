@@ -63,19 +63,26 @@ export async function dropDraft(holding: Holding, rule: FoundRule, act: Act): Pr
   await touchRule(holding, rule.id, {});
 }
 
-/** The draft takes the place of what was in force, at once and in one transaction. */
+/**
+ * The draft takes the place of what was in force, at once and in one transaction.
+ * @param unproved where nobody has proved its channel: that this was accepted, and in which words
+ */
 export async function forceDraft(
   holding: Holding,
   rule: FoundRule,
   why: string,
   act: Act,
+  unproved: { words: string | null } | null,
 ): Promise<RuleVersion> {
   const { draft, inForce } = rule;
   if (draft === null) throw new Refusal(null, 'This rule has no draft to put into force.');
   if (inForce !== null) await endVersion(holding, inForce.id, act, null);
   await holding.db
     .update(ruleVersion)
-    .set({ status: 'in-force', why, by: act.by, forcedAt: act.now })
+    .set({
+      ...{ status: 'in-force', why, by: act.by, forcedAt: act.now },
+      unproved: unproved === null ? null : { by: act.by, at: act.now.toISOString(), words: unproved.words },
+    })
     .where(mine(holding, draft.id));
   await touchRule(holding, rule.id, { retiredAt: null });
   await touchPlan(holding, rule.houseId);

@@ -59,7 +59,7 @@ export function toVersion(row: typeof ruleVersion.$inferSelect): RuleVersion {
     draftedAt: row.draftedAt.toISOString(),
     forcedAt: row.forcedAt?.toISOString() ?? null,
     endedAt: row.endedAt?.toISOString() ?? null,
-    ...{ endedBy: row.endedBy, endedWhy: row.endedWhy },
+    ...{ endedBy: row.endedBy, endedWhy: row.endedWhy, unproved: row.unproved },
   };
 }
 

@@ -21,6 +21,7 @@ import { listLoops } from './loop';
 import { listNodes } from './node';
 import { lastAlone } from './node-log';
 import { listPoints } from './point';
+import { lastProofs, type LastProof } from './proof';
 import { readMemory } from './running';
 import { listSources } from './source';
 
@@ -39,6 +40,8 @@ export interface WiringPage {
   ranAlone: Record<string, number>;
   /** Kinds of the alarms that stand about a channel, by its key. */
   channelAlarms: Record<string, string[]>;
+  /** What the proof of each proved channel found, by the channel's id; absent where no record is kept of it. */
+  proofs: Record<string, LastProof>;
   /** Null until the worker has stepped this house for the first time. */
   state: HouseState | null;
 }
@@ -56,6 +59,7 @@ export async function readWiring(holding: Holding, house: House): Promise<Wiring
   return {
     ...{ house, channels, ranAlone: Object.fromEntries(ranAlone) },
     channelAlarms: await standingByChannel(holding, house.id),
+    proofs: Object.fromEntries(await lastProofs(holding, house.id)),
     nodes: await listNodes(holding, house.id),
     nodeStatus: Object.fromEntries(rows.map((row) => [row.id, row.status])),
     points: await listPoints(holding, house.id),

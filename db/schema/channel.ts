@@ -12,6 +12,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
+import type { Protection } from '@/lib/schema/channel';
 import { createdAt, holdingId, instant, removedAt, revision } from './columns';
 import { inHouse, ofHouse } from './of-house';
 import { node } from './node';
@@ -75,6 +76,7 @@ export const channel = pgTable(
       offFor: number;
     }>(),
     flow: jsonb('flow').$type<{ litresPerSecond: number; from: string; sd?: number }>(),
+    protection: jsonb('protection').$type<Protection>(),
     /** When this wiring was proved; a changed wiring clears it. */
     provedAt: instant('proved_at'),
     revision: revision(),

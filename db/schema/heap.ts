@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm';
 import {
+  check,
   customType,
   date,
   doublePrecision,
@@ -17,6 +18,7 @@ import { holdingId, instant } from './columns';
 import { organization } from './auth';
 import { source } from './channel';
 import { point } from './node';
+import { proof } from './proof';
 
 const revision = () => integer('revision').notNull().default(1);
 /** Who wrote a row and when, by app time; an amendment stays beside it. */
@@ -87,17 +89,21 @@ export const heapMaterial = pgTable(
   ],
 );
 
-/** Photographs of an entry or of a point's place, as they were made anew here: without the place, the camera and all else a file carries. */
+/**
+ * Photographs of an entry, a point or a proof, as they were made anew here: without the place, the camera and all else a
+ * file carries.
+ */
 export const attachment = pgTable(
   'attachment',
   {
     holdingId: holdingId(),
     id: uuid('id').notNull(),
-    /** One of the two is told: what the picture is of. */
+    /** One of the three: what the picture belongs to. */
     entryId: uuid('entry_id'),
     pointId: uuid('point_id'),
-    /** Of a point's picture what it shows: its place, or its shield against the sun. */
-    shows: text('shows'),
+    proofId: uuid('proof_id'),
+    /** Of a point's or a proof's: what it shows. */
+    shows: text('shows').$type<'place' | 'shield' | 'plate' | 'wiring'>(),
     by: text('by').notNull(),
     enteredAt: instant('entered_at').notNull(),
     widthPx: integer('width_px').notNull(),
@@ -115,8 +121,14 @@ export const attachment = pgTable(
       columns: [table.holdingId, table.pointId],
       foreignColumns: [point.holdingId, point.id],
     }).onDelete('cascade'),
+    foreignKey({
+      columns: [table.holdingId, table.proofId],
+      foreignColumns: [proof.holdingId, proof.id],
+    }).onDelete('cascade'),
     index('attachment_entry').on(table.holdingId, table.entryId),
     index('attachment_point').on(table.holdingId, table.pointId),
+    index('attachment_proof').on(table.holdingId, table.proofId),
+    check('attachment_of_one', sql`num_nonnulls(entry_id, point_id, proof_id) = 1`),
   ],
 );
 

@@ -55,6 +55,8 @@ export const ruleVersion = pgTable(
     endedBy: text('ended_by'),
     /** Why the rule was retired; null where another version only took its place, which says its own why. */
     endedWhy: text('ended_why'),
+    /** Who let it run a channel that nobody had proved, when, and in which words; null where it was proved. */
+    unproved: jsonb('unproved').$type<{ by: string; at: string; words: string | null }>(),
   },
   (table) => [
     primaryKey({ columns: [table.holdingId, table.id] }),

@@ -105,6 +105,8 @@ export interface FailSafeReason {
   points: { point: string; why: string | null; lastAt: number | null }[];
   /** The relay dropped with its lease: no sensor is missing, nobody commanded it. */
   trip?: string;
+  /** Between these two it dropped: its last renewal (null: not known any more), and the report that told of it. */
+  lease?: { renewedAt: number | null; toldAt: number };
   /** The same, known only from control not running since. */
   stoppedAt?: number;
   /** Its node's own fallback switched it while nobody commanded the node; °C. */

@@ -62,6 +62,8 @@ function take(run: Run, command: PersonCommand): void {
       return takeUnlock(run, channel, command);
     case 'prove':
       return takeProve(run, channel, command);
+    case 'prove-end':
+      return endProve(run, channel);
   }
 }
 
@@ -140,4 +142,14 @@ function takeProve(run: Run, channel: number, command: Given<'prove'>): void {
   const until = Math.min(command.at, run.at) + command.seconds * 1000;
   if (until <= run.at) return refuse(run, command, channel, 'too-late');
   run.channels[channel] = { ...memory, prove: { by: command.by, seconds: command.seconds, until } };
+}
+
+/** Whoever watches the run says stop. It ends as it would by itself, now. */
+function endProve(run: Run, channel: number): void {
+  const memory = entry(run.channels, channel);
+  if (memory.prove === null) return;
+  run.channels[channel] = {
+    ...memory,
+    prove: { ...memory.prove, until: Math.min(memory.prove.until, run.at) },
+  };
 }

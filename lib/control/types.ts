@@ -178,6 +178,7 @@ export type PersonCommand = { number: number; at: number; by: string } & (
   | { kind: 'lock-out'; channel: string; lockout: string; why: string }
   | { kind: 'unlock'; channel: string; lockout: string }
   | { kind: 'prove'; channel: string; seconds: number }
+  | { kind: 'prove-end'; channel: string }
   | { kind: 'ready'; source: string }
   | { kind: 'rebuilt'; source: string }
 );

@@ -11,6 +11,31 @@ const Load = z.strictObject({
   supply: z.enum(['ac', 'dc']).optional(),
   contactAmps: finite(0, 200, 'A').optional(),
 });
+/** What stands between the mains and the load; a record of the work, not an approval of it. */
+export const Protection = z.strictObject({
+  /** The load hangs on an enclosed contactor, whose coil the relay switches. */
+  contactor: z.boolean(),
+  fuseAmps: finite(0.1, 200, 'A'),
+  cableMm2: finite(0.1, 200, 'mm²').optional(),
+  /** Of the enclosure (IEC 60529). */
+  ip: z
+    .string()
+    .trim()
+    .toUpperCase()
+    .regex(/^IP[0-6X][0-9X]K?[A-DHMSW]{0,3}$/, 'Give the enclosure’s mark, such as IP65.')
+    .optional(),
+  rcdMilliamps: finite(1, 1000, 'mA').optional(),
+  rcdTestedOn: z.iso.date({ error: 'Give the date as YYYY-MM-DD.' }).optional(),
+  /** By local code or by the maker. */
+  rcdTestEveryMonths: z
+    .number({ error: 'Give whole months.' })
+    .int('Give whole months.')
+    .min(1, 'At least 1 month.')
+    .max(60, 'At most 60 months.')
+    .optional(),
+});
+export type Protection = z.infer<typeof Protection>;
+
 export const channelFields = {
   number: z.number().int().min(1).max(999),
   node: Key,
@@ -52,6 +77,7 @@ export const channelFields = {
       sd: finite(0, 10_000, 'L/s').optional(),
     })
     .nullable(),
+  protection: Protection.nullable(),
 };
 export const ChannelCreate = z.strictObject({
   ...channelFields,
@@ -63,6 +89,7 @@ export const ChannelCreate = z.strictObject({
   runProof: channelFields.runProof.default(null),
   fallback: channelFields.fallback.default(null),
   flow: channelFields.flow.default(null),
+  protection: channelFields.protection.default(null),
 });
 export const ChannelAmend = z.strictObject(channelFields).partial();
 

@@ -15,6 +15,8 @@ export const RuleVersion = z.strictObject({
   /** Who took it out of force or put another in its place; the why is that of retiring. */
   endedBy: z.string().nullable(),
   endedWhy: z.string().nullable(),
+  /** Who let it drive a channel that nobody had proved; null where it was proved. */
+  unproved: z.strictObject({ by: z.string(), at: z.string(), words: z.string().nullable() }).nullable(),
 });
 export type RuleVersion = z.infer<typeof RuleVersion>;
 

@@ -145,7 +145,12 @@ export type RuleBodyInput = z.input<typeof RuleBody>;
 
 export const RuleCreate = z.strictObject({ name: Name, channel: Key, body: RuleBody });
 export const RuleAmend = z.strictObject({ name: Name.optional() });
-export const RuleForce = z.strictObject({ why: Why, acceptUnproved: z.boolean().optional() });
+export const RuleForce = z.strictObject({
+  why: Why,
+  acceptUnproved: z.boolean().optional(),
+  /** What a person typed to accept it; kept with who and when. */
+  consent: z.string().trim().max(200, 'At most 200 characters.').optional(),
+});
 export const RuleRetire = z.strictObject({ why: Why });
 /** Without a version: what last was in force. Either way it comes back as a draft. */
 export const RuleRestore = z.strictObject({ version: z.number().int().min(1).optional() });

@@ -89,6 +89,7 @@ function factsOf(channels: Channel[]): NonNullable<CheckContext['channels']> {
         proved: one.provedAt !== null,
         startsPerHour: one.startsPerHour,
         volts: one.load.volts ?? null,
+        supply: one.load.supply ?? null,
         contactAmps: one.load.contactAmps ?? null,
         hasFallback: one.fallback !== null,
       },
@@ -111,24 +112,28 @@ async function greatestOf(
   return values.length === 0 ? null : { [point.key]: Math.max(...values) };
 }
 
-/** @throws Problem `conflict` for what keeps a draft out of force */
+/**
+ * @returns whether its channel is not proved, which was accepted
+ * @throws Problem `conflict` for what keeps a draft out of force
+ */
 export async function refuseForce(
   holding: Holding,
   rule: FoundRule,
   acceptUnproved: boolean,
   act: { caller: Pick<Caller, 'userId'>; now: Date },
-): Promise<void> {
+): Promise<{ isUnproved: boolean }> {
   if (rule.draft === null) throw conflict('This rule has no draft to put into force.');
   const channel = (await listChannels(holding, rule.houseId)).find((one) => one.id === rule.channelId);
   if (channel === undefined) throw conflict('The channel of this rule was taken out of use.');
-  if (channel.provedAt === null && !acceptUnproved) {
+  const isUnproved = channel.provedAt === null;
+  if (isUnproved && !acceptUnproved) {
     throw conflict(
       `${channel.label} is not proved: nobody has seen that this relay moves this load. Prove it, or accept that (acceptUnproved).`,
     );
   }
   const { findings } = await findingsOf(holding, rule, undefined, act);
   const stops = findings.filter((one) => one.level === 'stop');
-  if (stops.length === 0) return;
+  if (stops.length === 0) return { isUnproved };
   const errors = stops.flatMap(({ paths, text }) => paths.map((path) => ({ path, message: text })));
   throw new Problem('conflict', { detail: stops.map((one) => one.text).join(' '), errors });
 }

@@ -21,6 +21,8 @@ import { listInvitations, type InvitationRow } from '@/db/queries/invitation';
 import { findMember, type MemberRow } from '@/db/queries/member';
 import { findPoint } from '@/db/queries/point';
 import { findProbeSet } from '@/db/queries/probe-set';
+import { findProof, type KeptProof } from '@/db/queries/proof';
+import { findPicture, type FoundPicture } from '@/db/queries/proof-picture';
 import { isId } from '@/db/queries/reference';
 import { findReportSchedule } from '@/db/queries/report-schedule';
 import { findRule, type FoundRule } from '@/db/queries/rule';
@@ -60,6 +62,8 @@ export interface Things {
   lockout: Lockout;
   entry: HeapEntry;
   photograph: Photograph;
+  proof: KeptProof;
+  picture: FoundPicture;
   round: ProbeSet;
   import: Import;
   job: HeapJob;
@@ -92,6 +96,8 @@ export const FIND: { [K in ThingName]: Find<Things[K]> } = {
   lockout: (holding, ref, house) => findLockout(holding, house, ref),
   entry: (holding, ref, house) => findHeapEntry(holding, house, ref),
   photograph: (holding, ref, house) => findPhotograph(holding, house, ref),
+  proof: (holding, ref, house) => findProof(holding, house, ref),
+  picture: (holding, ref, house) => findPicture(holding, house, ref),
   import: (holding, ref, house) => findImport(holding, house, ref),
   round: (holding, ref, house) => findProbeSet(holding, house, ref),
   job: (holding, ref, house) => findHeapJob(holding, house, ref),

@@ -4,6 +4,8 @@ import { UNKNOWN } from '@/lib/units/format';
 import { alarmWords, type AlarmFacts } from './alarm';
 import { capital, counted } from './counts';
 import { kindWord } from './heap';
+import { rcdWords, type Protection } from './protection';
+import { gainWords } from './proving';
 import type { ReportBlock } from './report';
 import type { Scene } from './scene';
 
@@ -21,7 +23,7 @@ export interface ReportEntry {
   by: string;
 }
 
-/** Delivery, proving and tests of residual-current devices are said not to be kept, so that nobody takes silence for "none". */
+/** That delivery is not kept is said, so that nobody takes silence for "none". */
 export function alarmsBlock(alarms: readonly ReportAlarm[], scene: Scene): ReportBlock {
   const when = (at: number) => moment(at, scene.now, scene.zone, scene.preferences);
   const answered = alarms.filter((alarm) =>
@@ -52,22 +54,37 @@ export function alarmsBlock(alarms: readonly ReportAlarm[], scene: Scene): Repor
             }),
           },
         }),
-    rows: [
-      { name: 'Whether and when letters and calls of alarms were delivered', value: 'not kept yet' },
-      { name: 'Tests of residual-current devices', value: 'not kept yet' },
-    ],
+    rows: [{ name: 'Whether and when letters and calls of alarms were delivered', value: 'not kept yet' }],
   };
 }
 
-/** When each channel's load was seen to follow its relay: what is kept of proving so far. */
+export interface ProvenChannel {
+  label: string;
+  provedAt: number | null;
+  /** Of its last finished proof; null: none is on record. */
+  proof: { by: string; gain: { kelvin: number; sd: number | null; seconds: number } | null } | null;
+  protection: Protection | null;
+}
+
+/** When each channel was proved, by whom and with what gain, and whether its residual-current device was tested. `today` is YYYY-MM-DD. */
 export function provingRows(
-  channels: readonly { label: string; provedAt: number | null }[],
+  channels: readonly ProvenChannel[],
+  today: string,
   scene: Scene,
 ): { name: string; value: string }[] {
-  return channels.map(({ label, provedAt }) => ({
-    name: `${label}, proved`,
-    value: provedAt === null ? 'not yet' : moment(provedAt, scene.now, scene.zone, scene.preferences),
-  }));
+  const proofs = channels.map(({ label, provedAt, proof }) => {
+    if (provedAt === null) return { name: `${label}, proved`, value: 'not yet' };
+    const when = moment(provedAt, scene.now, scene.zone, scene.preferences);
+    const gain = proof?.gain ?? null;
+    const found = gain === null ? null : gainWords(gain.kelvin, gain.sd, gain.seconds, scene.preferences);
+    const by = proof === null ? ', no record of its steps is kept' : `, by ${proof.by}`;
+    return { name: `${label}, proved`, value: `${when}${by}${found === null ? '' : `, ${found}`}` };
+  });
+  const tests = channels.flatMap(({ label, protection }) =>
+    protection === null ? [] : [{ name: `${label}, protection`, value: rcdWords(protection, today) }],
+  );
+  const none = { name: 'Tests of residual-current devices', value: 'no channel tells of one' };
+  return [...proofs, ...(tests.length === 0 ? [none] : tests)];
 }
 
 export function bookBlock(entries: readonly ReportEntry[], scene: Scene): ReportBlock {

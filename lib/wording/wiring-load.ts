@@ -1,4 +1,5 @@
 /** A channel's load and contact in words and figures. */
+import { contactLoad, ratedAmps, type ContactLoad } from '@/lib/physics/contact';
 import { decimal } from '@/lib/units/format';
 import { join } from './join';
 import type { Phrase } from './phrase';
@@ -10,6 +11,8 @@ export interface Load {
   supply?: 'ac' | 'dc' | undefined;
   contactAmps?: number | undefined;
 }
+
+export { isMains } from '@/lib/physics/contact';
 
 const space = '\u00a0';
 
@@ -43,13 +46,6 @@ export function safeStateWords(contact: 'NO' | 'NC', kind: string): string {
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
-/** A: what the load draws when it runs; null where watts or volts are not told. */
-export function ratedAmps(load: Load): number | null {
-  return load.watts === undefined || load.volts === undefined || load.volts <= 0
-    ? null
-    : load.watts / load.volts;
-}
-
 /** @example circuitWords({kind: 'heater', volts: 230, supply: 'ac'}) === '230 V AC' */
 export function circuitWords(load: Load): string {
   if (load.volts === undefined) return load.supply === undefined ? 'not told' : load.supply.toUpperCase();
@@ -64,20 +60,6 @@ export function ratedWords(load: Load): string {
   return amps === null ? watts : `${watts} · ${decimal(amps, 2)}${space}A`;
 }
 
-/** Above this a circuit is mains for the caution: extra-low voltage ends at 50 V AC and 120 V DC (IEC 61140). */
-export function isMains(load: Load): boolean {
-  return load.volts !== undefined && load.volts > (load.supply === 'dc' ? 120 : 50);
-}
-
-/**
- * Share of a contact's resistive rating that common practice leaves for a load: the start of a motor draws five to eight
- * times its running current, that of a filament lamp ten to fifteen times.
- */
-export function usualShare(kind: string): number {
-  if (kind === 'motor' || kind === 'vent' || kind === 'valve') return 1 / 3;
-  return kind === 'lamp' ? 1 / 10 : 1;
-}
-
 export interface ContactFit {
   isOver: boolean;
   words: Phrase[];
@@ -85,22 +67,41 @@ export interface ContactFit {
 
 /** Whether the contact carries the load; null where a figure for it is missing. */
 export function contactFit(load: Load): ContactFit | null {
-  const amps = ratedAmps(load);
-  if (amps === null || load.contactAmps === undefined) return null;
-  const share = usualShare(load.kind);
-  const bears = load.contactAmps * share;
-  const isOver = amps > bears;
-  const a = (value: number) => `${decimal(value, 2)}${space}A`;
-  const rating = `${plainNumber(load.contactAmps)}${space}A`;
-  const left =
-    share === 1 ? `the contact’s ${rating}` : `${a(bears)} (${shareWords(share)} of the contact’s ${rating})`;
+  const carried = contactLoad(load);
+  if (carried === null) return null;
+  const { amps, isOver } = carried;
   return {
     isOver,
-    words: join({ text: a(amps), tone: isOver ? 'alarm' : 'strong' }, isOver ? ' is over ' : ' of ', left),
+    words: join(
+      { text: ampsWords(amps), tone: isOver ? 'alarm' : 'strong' },
+      isOver ? ' is over ' : ' of ',
+      bearsWords(carried),
+    ),
   };
 }
 
-const shareWords = (share: number) => (share < 0.2 ? 'a tenth' : 'a third');
+export const ampsWords = (amps: number): string => `${decimal(amps, 2)}${space}A`;
+
+/** @example "1.67 A (a third of the contact’s 5 A)"; "0.67 A (a third, and of that a fifth at 48 V DC, of the contact’s 10 A)" */
+function bearsWords(carried: ContactLoad): string {
+  const rating = `${plainNumber(carried.rating)}${space}A`;
+  const shares = [
+    ...(carried.kindShare === 1 ? [] : [shareWords(carried.kindShare)]),
+    ...(carried.dcShare === 1 ? [] : [`${shareWords(carried.dcShare)} for direct current`]),
+  ];
+  return shares.length === 0
+    ? `the contact’s ${rating}`
+    : `${ampsWords(carried.bears)} (${shares.join(', and of that ')} of the contact’s ${rating})`;
+}
+
+const SHARES: readonly [number, string][] = [
+  [1 / 3, 'a third'],
+  [1 / 5, 'a fifth'],
+  [1 / 10, 'a tenth'],
+  [1 / 30, 'a thirtieth'],
+];
+const shareWords = (share: number): string =>
+  SHARES.find(([known]) => Math.abs(known - share) < 1e-9)?.[1] ?? `${decimal(share * 100, 0)}${space}%`;
 
 export const SHARE_NOTE =
-  'A contact keeps a third of its rating for motors, vents and valves, and a tenth for lamps, since starting draws many times the running current. This is common practice; the maker’s data sheet decides.';
+  'A contact keeps a third of its rating for motors, vents and valves, and a tenth for lamps, since starting draws many times the running current; of direct current over 30 V it keeps a fifth, over 60 V a thirtieth, since the arc does not go out by itself. This is common practice; the maker’s data sheet decides.';

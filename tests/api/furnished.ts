@@ -55,6 +55,8 @@ export async function furnish(holding: Holding, owner: Asker): Promise<Furnished
   await keep('interlock', `${at}/interlocks`, shown.interlock);
   await keep('rule', `${at}/rules`, shown.rule);
   await keep('lockout', `${at}/lockouts`, { channel: 'ridge-vent', why: 'the arm is being mended' });
+  await keep('proof', `${at}/proofs`, { channel: 'gate-heap-fan' });
+  await keep('picture', `${at}/proofs/${ids['proof']}/photographs?shows=plate`, await picture());
   await keep('entry', `${at}/heap-entries`, { source: 'gate-heap', kind: 'watered', text: 'forty litres' });
   await keep('photograph', `${at}/heap-entries/${ids['entry']}/photographs`, await picture());
   await keep('round', `${at}/probe-sets`, shown.round);

@@ -2,7 +2,7 @@
 import { describe } from 'vitest';
 import type { ChannelConfig, HouseConfig } from '@/lib/control/types';
 import { body, channel, house, rule, source } from './house';
-import { hand, holds, lockOut, prove, unlock } from './table';
+import { hand, holds, lockOut, prove, proveEnd, unlock } from './table';
 
 const warm = { bench: 9, air: 9, core: 50, base: 45 };
 const cold = { ...warm, bench: 3.5 };
@@ -52,6 +52,20 @@ describe('lock-out', () => {
 });
 
 describe('proving', () => {
+  holds('ends at once when whoever watches says stop, as it would by itself', {
+    config: fan({ minOnS: 120, minOffS: 180 }),
+    reads: warm,
+    rows: [
+      [10, prove(60), 'on proving'],
+      [20, proveEnd(), 'off idle'],
+      // least off runs from there: the band has to wait for it
+      [21, (play) => play.reads({ ...warm, bench: 3 }), 'off short-cycle'],
+      [200, null, 'on band'],
+      // a stop without a run stops nothing
+      [210, proveEnd(), 'on band'],
+    ],
+  });
+
   holds('begins no least on, breaks least off, and its end begins least off', {
     config: fan({ minOnS: 120, minOffS: 180 }),
     reads: warm,

@@ -156,6 +156,10 @@ export const prove =
   (seconds: number, channel = 'fan') =>
   (play: Play): void =>
     play.order({ kind: 'prove', channel, seconds });
+export const proveEnd =
+  (channel = 'fan') =>
+  (play: Play): void =>
+    play.order({ kind: 'prove-end', channel });
 export const lockOut =
   (channel = 'fan', lockout = 'l') =>
   (play: Play): void =>

@@ -2,7 +2,7 @@
 
 const KNOWN_PLACES = [
   /^app\//,
-  /^components\/(ui|chart|shell|door|watch|rules|wiring|setup|sheet|heap|duty|money|reports|files|alarms|sizing|people)\//,
+  /^components\/(ui|chart|shell|door|watch|rules|wiring|proving|setup|sheet|heap|duty|money|reports|files|alarms|sizing|people)\//,
   /^db\/((schema|queries|migrations|seed)\/|client\.ts$|[a-z-]+\.ts$)/,
   /^lib\/(units|physics|control|analysis|wording|field|live|schema|server)\//,
   /^worker\/((control|field|hub|alarms|jobs|spool|door|yard)\/|[a-z-]+\.ts$)/,

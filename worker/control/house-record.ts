@@ -64,8 +64,13 @@ export function reportRows(
 }
 
 /** Coils that dropped with their lease: switchings of their own, that no command made. */
-export function tripRows(house: HouseHead, { trip, dropped }: Trip, at: number): SwitchingRow[] {
-  return dropped.map((channel) => uncommanded(house, channel, 'off', at, trip, {}));
+export function tripRows(
+  house: HouseHead,
+  { trip, dropped }: Trip,
+  at: number,
+  lease: { renewedAt: number | null; toldAt: number },
+): SwitchingRow[] {
+  return dropped.map((channel) => uncommanded(house, channel, 'off', at, trip, { lease }));
 }
 
 /** What a node's fallback did: switchings of their own too, each told once by its time. */

@@ -1,6 +1,6 @@
 /** What a node reports, and what is made of it: its `relays` frames, leases that ran out, the log of its fallback. */
 import type { SwitchingRow } from '@/db/queries/running';
-import { epochOf, type LogFrame, type RelaysFrame } from '@/lib/field/frames';
+import { epochOf, leaseS, type LogFrame, type RelaysFrame } from '@/lib/field/frames';
 import type { AttachedNode } from './attached-node';
 import type { CommandLink } from './command-link';
 import type { ControlledHouse, HouseDeps } from './house-deps';
@@ -79,7 +79,10 @@ export class NodeReports {
     );
     const droppedAt = Math.min(node.relays.leaseEnd ?? at, at);
     node.fallback.dropped(droppedAt);
-    const switchings = tripRows(record, trip, droppedAt);
+    const end = node.relays.leaseEnd;
+    // the node counts its trips without their times: it dropped the coil between its last renewal and this report
+    const lease = { renewedAt: end === null ? null : end - leaseS * 1000, toldAt: at };
+    const switchings = tripRows(record, trip, droppedAt, lease);
     if (switchings.length > 0) node.orders.waitFor(this.deps.journal.append({ switchings }));
   }
 

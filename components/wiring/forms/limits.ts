@@ -129,7 +129,64 @@ const flow: Group = {
   ],
 };
 
+const protection: Group = {
+  folded: 'Mains protection',
+  title: 'What stands between the mains and the load',
+  note: 'Over 50 V AC or 120 V DC: an enclosed contactor, a fuse, and a residual-current device. Proving asks for all of it. A licensed electrician does this work, under local code.',
+  nullUnless: { path: 'protection', unless: 'protection.fuseAmps' },
+  specs: [
+    {
+      as: 'number',
+      path: 'protection.fuseAmps',
+      label: 'Fuse or breaker',
+      quantity: 'number',
+      unit: 'A',
+      empty: 'null',
+      hint: 'Empty: no mains protection is told.',
+    },
+    {
+      as: 'check',
+      path: 'protection.contactor',
+      label: 'Behind an enclosed contactor',
+      hint: 'The relay switches its coil; the contact’s rating above is then the contactor’s.',
+    },
+    {
+      as: 'number',
+      path: 'protection.cableMm2',
+      label: 'Cable',
+      quantity: 'number',
+      unit: 'mm²',
+      empty: 'omit',
+    },
+    { as: 'text', path: 'protection.ip', label: 'Enclosure', empty: 'omit', hint: 'Its mark, such as IP65.' },
+    {
+      as: 'number',
+      path: 'protection.rcdMilliamps',
+      label: 'Residual-current device trips at',
+      quantity: 'number',
+      unit: 'mA',
+      empty: 'omit',
+    },
+    {
+      as: 'text',
+      path: 'protection.rcdTestedOn',
+      label: 'Last tested on',
+      empty: 'omit',
+      hint: 'YYYY-MM-DD, by its test button.',
+    },
+    {
+      as: 'number',
+      path: 'protection.rcdTestEveryMonths',
+      label: 'Test it every',
+      quantity: 'number',
+      unit: 'months',
+      empty: 'omit',
+      hint: 'By local code. Empty: 6 months, common practice.',
+    },
+  ],
+};
+
 /** What bounds a channel and what proves it: all optional, folded into one section of the channel's form. */
 export function limitGroups(yard: Yard): Group[] {
-  return [highLimit(yard), runs, runProof(yard), fallback(yard), flow];
+  return [highLimit(yard), runs, runProof(yard), fallback(yard), flow, protection];
 }

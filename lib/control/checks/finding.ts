@@ -38,6 +38,7 @@ export interface ChannelFacts {
   proved?: boolean;
   startsPerHour?: number | null;
   volts?: number | null;
+  supply?: 'ac' | 'dc' | null;
   contactAmps?: number | null;
   hasFallback?: boolean;
 }

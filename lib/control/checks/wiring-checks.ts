@@ -1,11 +1,9 @@
 /** Things to look at in what a rule hangs on: points, channel, contact, interlocks, conditions. */
+import { contactLoad } from '@/lib/physics/contact';
 import { needsCycle } from '../interlocks';
 import type { ConditionNode } from '../rule-body';
 import { look, stop, type CheckInput, type Finding } from './finding';
 import { canNeverHold } from './never-holds';
-
-/** A contact's rating is for a resistive load; a motor draws several times its current at each start. */
-const MOTOR_SHARE = 0.5;
 
 export function wiringChecks(input: CheckInput): Finding[] {
   return [
@@ -130,15 +128,17 @@ const nameOf = (config: CheckInput['config'], key: string): string =>
 
 function contactOverloaded({ channel, context }: CheckInput): Finding[] {
   const facts = channel === null ? undefined : context.channels?.[channel.key];
-  const volts = facts?.volts ?? 0;
-  const contactAmps = facts?.contactAmps ?? 0;
-  if (channel === null || channel.loadW === null || volts <= 0 || contactAmps <= 0) return [];
-  const amps = channel.loadW / volts;
-  const motor = channel.loadKind === 'motor' || channel.loadKind === 'vent';
-  const bears = contactAmps * (motor ? MOTOR_SHARE : 1);
-  if (amps <= bears) return [];
-  const derated = motor ? ` (half of its ${contactAmps} A, since a motor draws more at each start)` : '';
-  const text = `The load draws ${Math.round(amps * 100) / 100} A; its contact bears ${bears} A${derated}. Use a contactor, or another relay.`;
+  if (channel === null || facts === undefined) return [];
+  const { volts, supply, contactAmps } = facts;
+  const carried = contactLoad({ kind: channel.loadKind, watts: channel.loadW, volts, supply, contactAmps });
+  if (carried === null || !carried.isOver) return [];
+  const a = (amps: number) => `${Math.round(amps * 100) / 100} A`;
+  const why = [
+    ...(carried.kindShare === 1 ? [] : ['starting draws many times the running current']),
+    ...(carried.dcShare === 1 ? [] : ['direct current keeps its arc']),
+  ];
+  const of = why.length === 0 ? '' : ` of its ${carried.rating} A, since ${why.join(' and ')}`;
+  const text = `The load draws ${a(carried.amps)}; its contact bears ${a(carried.bears)}${of}. Use a contactor, or another relay.`;
   return [look('contact-overloaded', ['channel'], text)];
 }
 

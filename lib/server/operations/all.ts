@@ -8,6 +8,7 @@ import * as money from './money';
 import * as open from './open';
 import * as people from './people';
 import * as points from './points';
+import * as proofs from './proofs';
 import * as record from './record';
 import * as rules from './rules';
 import * as running from './running';
@@ -33,5 +34,6 @@ export const OPERATIONS: readonly Operation[] = [
   archives,
   money,
   people,
+  proofs,
   open,
 ].flatMap((subject) => Object.values<Operation>(subject));

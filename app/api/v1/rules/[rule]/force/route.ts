@@ -4,6 +4,8 @@ import { forceRule } from '@/lib/server/operations/rules';
 import { refuseForce } from '@/lib/server/rule-check';
 
 export const POST = serve(forceRule, async ({ holding, things, body, caller, now }) => {
-  await refuseForce(holding, things.rule, body.acceptUnproved ?? false, { caller, now });
-  return { body: await forceDraft(holding, things.rule, body.why, { by: caller.by, now }) };
+  const { rule } = things;
+  const { isUnproved } = await refuseForce(holding, rule, body.acceptUnproved ?? false, { caller, now });
+  const unproved = isUnproved ? { words: body.consent || null } : null;
+  return { body: await forceDraft(holding, rule, body.why, { by: caller.by, now }, unproved) };
 });

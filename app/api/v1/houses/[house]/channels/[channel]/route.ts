@@ -6,12 +6,13 @@ import { amendChannel, getChannel, removeChannel } from '@/lib/server/operations
 
 export const GET = serve(getChannel, ({ things }) => ({ body: things.channel }));
 
-export const PATCH = serve(amendChannel, async ({ holding, things, body }) => ({
+export const PATCH = serve(amendChannel, async ({ holding, things, body, caller, now }) => ({
   body: await channels.amendChannel(
     holding,
     things.house.id,
     things.channel,
     merged(ChannelCreate, things.channel, body),
+    { by: caller.by, now },
   ),
 }));
 
