@@ -3,6 +3,7 @@ import { sql } from 'drizzle-orm';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { closePools } from '@/db/client';
 import { touchPlan } from '@/db/queries/plan';
+import { askTestRead, findTestRead } from '@/db/queries/test-read';
 import type { Register } from '@/lib/schema/bus';
 import { linkTrouble, modbusScene, readingsOf, type BusScene } from '../support/bus-scene';
 import { rows, switchings } from '../support/field-scene';
@@ -52,6 +53,14 @@ async function reportedOf(scene: BusScene): Promise<string | null> {
     sql`select state -> 'channels' -> 0 ->> 'reported' as reported from control_memory where house_id = ${scene.houseId}`,
   );
   return found?.reported ?? null;
+}
+
+async function heard(scene: BusScene): Promise<boolean> {
+  const found = await rows(
+    scene,
+    sql`select 1 from node where id = ${scene.nodeId} and last_heard_at is not null`,
+  );
+  return found.length > 0;
 }
 
 describe('A board', () => {
@@ -126,6 +135,40 @@ describe('A board', () => {
   });
 });
 
+describe('Somebody at the panel', () => {
+  it('sees one register as it is now, or why not', async () => {
+    const board = await newBoard();
+    board.set(['input', 7, 234]);
+    const scene = await modbusScene({ port: board.port }, []);
+    const ask = async (address: number) => {
+      const place = { table: 'input', type: 's16', wordOrder: 'high-first', scale: 0.1, offset: 0 } as const;
+      const asked = { node: 'N-1', address, unit: 'Cel', ...place };
+      const { id } = await scene.holding.db.transaction((db) =>
+        askTestRead({ id: scene.holding.id, db }, scene.houseId, asked),
+      );
+      const found = () => findTestRead(scene.holding, scene.houseId, id);
+      await until('an answer', async () => (await found())?.state !== 'asked');
+      return found();
+    };
+    await until(
+      'the board is reached',
+      async () => (await linkTrouble(scene)) === null && (await heard(scene)),
+      15_000,
+    );
+    expect(await ask(7)).toMatchObject({ state: 'answered', raw: 234, value: 23.4 });
+    expect(await ask(500)).toMatchObject({
+      state: 'failed',
+      why: 'it has nothing at this address (exception 2)',
+    });
+    expect(await readingsOf(scene, 'bench-1')).toEqual([]);
+    await board.kill();
+    await until(
+      'it is gone',
+      async () => (await ask(7))?.why?.startsWith('There is no link to the board') === true,
+    );
+  });
+});
+
 describe('When the link is lost', () => {
   it('says that the relay is unknown, and commands by what it sees when it is back', async () => {
     const board = await newBoard();
@@ -183,15 +226,20 @@ describe('When the link is lost', () => {
 });
 
 describe('A worker', () => {
-  it('that stops drops the coils of a board that would keep them', async () => {
+  it('that stops drops the coils of a board that would keep them, and a stand-by takes it up', async () => {
     await worker.stop();
     const board = await newBoard();
     bench(board, 3);
-    await modbusScene({ port: board.port }, HOUSE);
-    const other = await ownWorker();
+    const scene = await modbusScene({ port: board.port }, HOUSE);
+    const first = await ownWorker();
     await untilCoil(board, 0, true);
-    await other.stop();
+    const standBy = await ownWorker(false);
+    await first.stop();
     expect(await coilOf(board, 0)).toBe(false);
+    await until('the stand-by leads', async () => (await standBy.health()).leader);
+    await untilCoil(board, 0, true);
+    await until('it is reported', async () => (await reportedOf(scene)) === 'on');
+    await standBy.stop();
     worker = await ownWorker(true, undefined, 1, 2);
-  });
+  }, 40_000);
 });

@@ -142,7 +142,10 @@ export class ModbusNode implements Bus, CommandLink {
       { type: 'hello', node: wiring.key, firmware, channels: wiring.channels, boot: this.boot, clock: null },
       clock.appNow(),
     );
-    this.report();
+    // readings before coils: points that fell silent with the link must not switch what they would leave on
+    void this.poll().then(() => {
+      if (this.line === line) this.report();
+    });
     this.cancels = [
       clock.every((relaysEveryS * 1000) / clock.rate, () => this.look()),
       clock.every((wiring.reportEveryS * 1000) / clock.rate, () => void this.poll()),
@@ -151,7 +154,6 @@ export class ModbusNode implements Bus, CommandLink {
     // three chances within its time; its time is the board's own and passes at no other rate
     if (watchdog !== null)
       this.cancels.push(clock.every((watchdog.within * 1000) / 3, () => void this.feed()));
-    void this.poll();
   }
 
   /** Tells what the coils were just read to be; the answer is a command. */
@@ -250,7 +252,10 @@ export class ModbusNode implements Bus, CommandLink {
     try {
       const { pack, refused } = await poll(line, wiring.registers, () => this.deps.clock.appNow() / 1000);
       this.tellNotTaken(refused);
-      await takePack(this.deps, this.deps.ingest, house, wiring, pack);
+      // seen by control at once; what follows is the disk's business
+      takePack(this.deps, this.deps.ingest, house, wiring, pack).catch((error: unknown) =>
+        this.deps.log.warn({ err: error, node: wiring.key }, 'readings of a board could not be stored'),
+      );
     } catch (error) {
       this.deps.log.info({ err: error, node: wiring.key }, 'a board could not be read');
     }
@@ -278,6 +283,8 @@ export class ModbusNode implements Bus, CommandLink {
   private lost(why: string): void {
     if (this.line === null) return;
     this.line = null;
+    // no order is an answer to what was said on the former connection
+    this.seen = null;
     this.rest();
     this.node.house.nodes.detach(this.node.nodeId, this);
     this.again(why);
