@@ -3,7 +3,8 @@ import type { Channel, FieldNode } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { day } from '@/lib/units/time';
 import { fallbackWords } from '@/lib/wording/alone';
-import { protectionWords } from '@/lib/wording/sheet';
+import { gainWords } from '@/lib/wording/proving';
+import { protectionOnPaper } from '@/lib/wording/sheet';
 import { circuitWords, LOAD_WORDS, ratedWords, safeStateWords } from '@/lib/wording/wiring-load';
 import { NODE_WORDS } from '@/lib/wording/wiring-parts';
 import type { SheetData } from './sheet-data';
@@ -87,7 +88,7 @@ function Terminal({
           {load.contactAmps === undefined ? ', rating not recorded' : `, ${load.contactAmps} A`}
         </span>
       </Cell>
-      <Cell>{protectionWords(Reflect.get(channel, 'protection'))}</Cell>
+      <Cell>{protectionOnPaper(channel.protection)}</Cell>
       <Cell>
         {safeStateWords(channel.contact, load.kind)}.
         {fallback === null ? null : (
@@ -96,13 +97,29 @@ function Terminal({
           </span>
         )}
       </Cell>
-      <Cell>
-        {channel.provedAt === null ? (
-          <strong>Not proved</strong>
-        ) : (
-          `${day(Date.parse(channel.provedAt), zone)} ${channel.provedAt.slice(0, 4)}`
-        )}
-      </Cell>
+      <Cell>{provedOf(channel, data.proofs[channel.id], zone, preferences)}</Cell>
     </Row>
+  );
+}
+
+function provedOf(
+  { provedAt }: Channel,
+  proof: SheetData['proofs'][string] | undefined,
+  zone: string,
+  preferences: Preferences,
+) {
+  if (provedAt === null) return <strong>Not proved</strong>;
+  const when = `${day(Date.parse(provedAt), zone)} ${provedAt.slice(0, 4)}`;
+  if (proof === undefined) return when;
+  const { by, gain } = proof;
+  return (
+    <>
+      {when}, by {by}
+      {gain === null ? null : (
+        <span className="block text-[0.9em]">
+          {gainWords(gain.kelvin, gain.sd, gain.seconds, preferences)}
+        </span>
+      )}
+    </>
   );
 }

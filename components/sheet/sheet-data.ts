@@ -1,3 +1,4 @@
+import type { LastProof } from '@/components/wiring/proved-cell';
 import type {
   Channel,
   FieldNode,
@@ -20,5 +21,7 @@ export interface SheetData {
   interlocks: Interlock[];
   lockouts: Lockout[];
   calibrations: Record<string, { from: number; by: string; residual: number | null }>;
+  /** Who proved a channel, and what its gain run brought, by the channel's id. */
+  proofs: Record<string, LastProof>;
   rests: Record<string, { longestDrawS: number; leastS: number }>;
 }

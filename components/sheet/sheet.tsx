@@ -1,3 +1,4 @@
+import { QrCode } from '@/components/ui/qr-code';
 import type { Channel } from '@/lib/schema/yard-view';
 import { temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
@@ -12,7 +13,6 @@ import {
 import { Limits } from './limits';
 import { PanelTable } from './panel-table';
 import { PaperChoice, type Paper } from './paper-choice';
-import { QrCode } from './qr-code';
 import { Sensors } from './sensors';
 import type { SheetData } from './sheet-data';
 import { Signatures } from './signatures';
@@ -55,7 +55,7 @@ export function Sheet({
             </p>
             <p className="mt-1 font-mono text-[0.85rem] wrap-anywhere">{address}</p>
           </div>
-          <QrCode text={address} label={`The address of this house’s wiring, ${address}`} />
+          <QrCode isOnPaper text={address} label={`The address of this house’s wiring, ${address}`} />
         </header>
         {standing.length === 0 ? null : (
           <p className="border-l-4 border-alarm pl-3 font-semibold">

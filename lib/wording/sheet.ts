@@ -1,43 +1,18 @@
 /** The printed wiring sheet in words: what protects a circuit, and what to do at the panel while no software answers. */
-import { decimal, temperature } from '@/lib/units/format';
+import { temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
+import { protectionWords, type Protection } from './protection';
 import { exactly } from './settings';
 
-const space = '\u00a0';
 export const NOT_RECORDED = 'not recorded';
 
-/**
- * What stands between a load and its supply, of what was recorded; keys that are not known here are left to the page that
- * keeps them.
- * @example protectionWords({ fuseAmps: 10, rcdMilliamps: 30, rcdTestedOn: '2026-10-02' }) === 'fuse 10 A; RCD 30 mA, tested 2026-10-02'
- */
-export function protectionWords(protection: unknown): string {
-  const figure = (key: string) => {
-    const value: unknown =
-      typeof protection === 'object' && protection !== null ? Reflect.get(protection, key) : undefined;
-    return typeof value === 'number' || typeof value === 'string' || value === true ? value : null;
-  };
-  const number = (key: string, unit: string) => {
-    const value = figure(key);
-    return typeof value === 'number'
-      ? `${decimal(value, Number.isInteger(value) ? 0 : 1)}${space}${unit}`
-      : null;
-  };
-  const contactor = figure('contactor');
-  const [fuse, cable, rcd] = [
-    number('fuseAmps', 'A'),
-    number('cableMm2', 'mm²'),
-    number('rcdMilliamps', 'mA'),
-  ];
-  const [ip, tested] = [figure('ip'), figure('rcdTestedOn')];
-  const told = [
-    contactor === null ? null : contactor === true ? 'contactor' : `contactor ${contactor}`,
-    fuse && `fuse ${fuse}`,
-    cable && `cable ${cable}`,
-    ip === null ? null : /^ip/i.test(String(ip)) ? String(ip) : `IP${ip}`,
-    rcd && `RCD ${rcd}${tested === null ? ', test not recorded' : `, tested ${tested}`}`,
-  ].filter((one) => one !== null);
-  return told.length === 0 ? NOT_RECORDED : told.join('; ');
+/** As on the screen, with the date of the residual-current device's test, for which a sheet on a door is read. */
+export function protectionOnPaper(protection: Protection | null): string {
+  if (protection === null) return NOT_RECORDED;
+  const { rcdMilliamps, rcdTestedOn } = protection;
+  const told = protectionWords(protection);
+  if (rcdMilliamps === undefined) return told;
+  return `${told}, ${rcdTestedOn === undefined ? 'test not recorded' : `tested ${rcdTestedOn}`}`;
 }
 
 export interface SheetLoad {

@@ -1,7 +1,7 @@
 // The sheet on the door: what it says must hold with the panel dead, and lead nobody to a live terminal.
 import { describe, expect, it } from 'vitest';
 import { USUAL } from '@/lib/units/preferences';
-import { protectionWords, withoutSoftware, type SheetLoad } from '@/lib/wording/sheet';
+import { protectionOnPaper, withoutSoftware, type SheetLoad } from '@/lib/wording/sheet';
 
 const fan: SheetLoad = {
   ...{ number: 1, label: 'Gate-heap fan', contact: 'NO', kind: 'motor', isDraw: true },
@@ -50,21 +50,17 @@ describe('how to run the fan without software', () => {
 });
 
 describe('protection', () => {
-  it('is told as far as it was recorded', () => {
-    expect(
-      protectionWords({
-        ...{ contactor: true, fuseAmps: 10, cableMm2: 1.5, ip: 'IP65' },
-        ...{ rcdMilliamps: 30, rcdTestedOn: '2026-10-02' },
-      }).replaceAll('\u00a0', ' '),
-    ).toBe('contactor; fuse 10 A; cable 1.5 mm²; IP65; RCD 30 mA, tested 2026-10-02');
-    expect(protectionWords({ ip: '54', rcdMilliamps: 30, rcdTestedOn: null }).replaceAll('\u00a0', ' ')).toBe(
-      'IP54; RCD 30 mA, test not recorded',
-    );
+  const guard = { contactor: true, fuseAmps: 10, cableMm2: 1.5, ip: 'IP65', rcdMilliamps: 30 };
+  const said = (given: Parameters<typeof protectionOnPaper>[0]) =>
+    protectionOnPaper(given).replaceAll('\u00a0', ' ');
+
+  it('is told as far as it was recorded, with the test of its residual-current device', () => {
+    expect(said({ ...guard, rcdTestedOn: '2026-10-02' })).toMatch(/IP65, RCD 30 mA, tested 2026-10-02$/);
+    expect(said(guard)).toMatch(/RCD 30 mA, test not recorded$/);
+    expect(said({ contactor: false, fuseAmps: 4 })).toBe('no contactor, fuse 4 A, no RCD told');
   });
-  it.each([[undefined], [null], [{}], ['x'], [{ fuseAmps: null, hint: 'x' }]])(
-    'of %j is not recorded',
-    (given) => {
-      expect(protectionWords(given)).toBe('not recorded');
-    },
-  );
+
+  it('that nobody recorded is told as such', () => {
+    expect(said(null)).toBe('not recorded');
+  });
 });
