@@ -14,6 +14,10 @@ const channel = {
   runProof: { point: 'fan-amps', above: 0.2 },
   fallback: { point: 'bench', below: 2, above: 5, onFor: 1200, offFor: 2400 },
   flow: { litresPerSecond: 42.5, from: 'measured', sd: 4 },
+  protection: {
+    ...{ contactor: true, fuseAmps: 10, cableMm2: 1.5, ip: 'IP65', rcdMilliamps: 30 },
+    ...{ rcdTestedOn: '2026-10-02', rcdTestEveryMonths: 6 },
+  },
 };
 const groups = channelGroups(yard);
 
@@ -32,6 +36,7 @@ it('a channel without limits and proofs is sent without any', () => {
     runProof: null,
     fallback: null,
     flow: null,
+    protection: null,
   };
   const first = valuesOf(groups, { ...channel, ...bare }, USUAL);
   expect(bodyOf(groups, first, USUAL, first)).toMatchObject({ body: bare, errors: {} });
@@ -39,6 +44,6 @@ it('a channel without limits and proofs is sent without any', () => {
 
 it('each limit and each proof says what it does', () => {
   const folded = groups.filter((group) => group.folded !== undefined);
-  expect(folded.map((group) => group.title)).toHaveLength(5);
+  expect(folded.map((group) => group.title)).toHaveLength(6);
   for (const group of folded) expect(group.note).toMatch(/\w.*\.$/);
 });
