@@ -59,7 +59,7 @@ it('as it came it is taken, and what is inside is told before anything is put in
   expect(told).toMatchObject({
     state: 'checked',
     found: {
-      ...{ holding: 'larkmoor', houses: ['Long house'], readings: 50, photographs: 1 },
+      ...{ holding: 'larkmoor', houses: ['Long house'], readings: 50, photographs: 2 },
       ...{
         months: { from: '2026-12', to: '2026-12' },
         people: [{ email: 'owner@larkmoor.example', role: 'owner' }],
