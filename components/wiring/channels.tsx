@@ -41,7 +41,14 @@ export function Channels({
   return (
     <Panel
       title="Channels"
-      actions={hasNode ? <AddButton kind="channel" label="Add a channel…" /> : undefined}
+      actions={
+        hasNode ? (
+          <>
+            <AddButton kind="channel" label="Add a channel…" />
+            <AddButton kind="reversing-vent" label="A reversing vent…" />
+          </>
+        ) : undefined
+      }
     >
       {channels.length === 0 ? (
         <Empty title="No channel yet.">

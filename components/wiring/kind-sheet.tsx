@@ -12,6 +12,7 @@ import type { Yard } from './forms/options';
 import { InterlockEffect } from './interlock-effect';
 import { KINDS, type Kind } from './kinds';
 import { PlaceRemarks } from './place-remarks';
+import { ReversingEffect } from './reversing-effect';
 import { at, bodyOf } from './spec';
 import { TokenShown } from './token-shown';
 import { Unproves } from './unproves';
@@ -126,6 +127,8 @@ export function KindSheet({
             yard={yard}
             before={yard.channels.find((one) => one.id === id)}
           />
+        ) : kind === 'reversing-vent' ? (
+          <ReversingEffect {...{ form, yard, preferences }} />
         ) : kind === 'interlock' ? (
           <InterlockEffect id={entity?.id ?? null} {...{ form, yard, preferences }} />
         ) : kind === 'loop' ? (

@@ -4,6 +4,7 @@ import { ChannelAmend, ChannelCreate, InterlockAmend, InterlockCreate } from '@/
 import { HouseAmend, HouseCreate } from '@/lib/schema/house';
 import { NodeAmend, NodeCreate } from '@/lib/schema/node';
 import { PointAmend, PointCreate } from '@/lib/schema/point';
+import { ReversingVentCreate, DEAD_TIME_S } from '@/lib/schema/reversing-vent';
 import { LoopAmend, LoopCreate, SourceAmend, SourceCreate } from '@/lib/schema/source';
 import { channelGroups } from './forms/channel';
 import { houseGroups } from './forms/house';
@@ -12,10 +13,12 @@ import { busesAtFirst } from './forms/bus';
 import { nodeGroups } from './forms/node';
 import type { Yard } from './forms/options';
 import { pointGroups } from './forms/point';
+import { reversingVentGroups } from './forms/reversing-vent';
 import { sourceGroups } from './forms/source';
 import type { Group } from './spec';
 
-export type Kind = 'house' | 'node' | 'point' | 'source' | 'channel' | 'loop' | 'interlock';
+export type Kind =
+  'house' | 'node' | 'point' | 'source' | 'channel' | 'loop' | 'interlock' | 'reversing-vent';
 
 export interface KindOf {
   word: string;
@@ -104,5 +107,20 @@ export const KINDS: Record<Kind, KindOf> = {
     groups: interlockGroups,
     first: () => ({ kind: 'never-with', delay: 5 }),
     removal: 'The two channels no longer wait for one another.',
+  },
+  // made as one, then two channels and an interlock, each changed by its own form
+  'reversing-vent': {
+    word: 'reversing vent',
+    create: ReversingVentCreate,
+    amend: ReversingVentCreate,
+    list: () => [],
+    groups: reversingVentGroups,
+    first: (yard) => ({
+      node: yard.nodes.find((one) => one.channels > 1)?.key ?? '',
+      open: { number: nextNumber(yard) },
+      shut: { number: nextNumber(yard) + 1 },
+      deadTime: DEAD_TIME_S,
+    }),
+    removal: null,
   },
 };

@@ -4,7 +4,7 @@ import { plain } from '@/lib/control/plain';
 import { Celsius, finite, Key, Name, wholeSeconds, Why } from './common';
 
 export const LOAD_KINDS = ['motor', 'vent', 'heater', 'valve', 'lamp', 'other'] as const;
-const Load = z.strictObject({
+export const Load = z.strictObject({
   kind: z.enum(LOAD_KINDS),
   watts: finite(0, 50_000, 'W').optional(),
   volts: finite(0, 1000, 'V').optional(),

@@ -96,6 +96,9 @@ export const LOCKOUT_CAUTION =
   'A lock-out is not isolation: it only keeps this software from running the load. Before you touch anything, open the isolator, lock it, and test that the circuit is dead.';
 export const NC_LOCKOUT_REFUSAL =
   'A relay cannot make this load dead: its contact is normally closed, so the load runs while the coil is off. Use its isolator.';
+/** Common practice, no source. */
+export const REVERSING_CAUTION =
+  'Two relays, never both on: the interlock in Middenward does not replace one in the wiring; end switches of the motor stop it.';
 export const LOOP_CAUTION =
   'The loop stays closed. The fan blows into the heap’s pipe and never sucks from it, so that a leak goes outwards; never draw air out of a heap into a house where people work. Where they do, hang a certified carbon monoxide alarm of its own.';
 export const LAST_RESORT_CAUTION =

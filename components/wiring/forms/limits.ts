@@ -129,7 +129,7 @@ const flow: Group = {
   ],
 };
 
-const protection: Group = {
+export const protection: Group = {
   folded: 'Mains protection',
   title: 'What stands between the mains and the load',
   note: 'Over 50 V AC or 120 V DC: an enclosed contactor, a fuse, and a residual-current device. Proving asks for all of it. A licensed electrician does this work, under local code.',

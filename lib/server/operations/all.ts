@@ -14,6 +14,7 @@ import * as rules from './rules';
 import * as running from './running';
 import * as training from './training';
 import * as setup from './setup';
+import * as vents from './vents';
 import * as wiring from './wiring';
 import * as yard from './yard';
 
@@ -21,6 +22,7 @@ import * as yard from './yard';
 export const OPERATIONS: readonly Operation[] = [
   yard,
   wiring,
+  vents,
   training,
   buses,
   setup,
