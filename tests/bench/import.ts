@@ -25,7 +25,7 @@ export async function bench() {
   const { createPoint } = await import('@/db/queries/point');
   const { storeReadings } = await import('@/db/queries/reading-write');
   const { PointCreate } = await import('@/lib/schema/point');
-  const { writePiece } = await import('@/lib/server/import-file');
+  const { importFile, writePiece } = await import('@/lib/server/import-file');
   const { clockFrom } = await import('@/worker/clock');
   const { runImports } = await import('@/worker/jobs/import-run');
   const { makeScene } = await import('../support/field-scene');
@@ -52,7 +52,7 @@ export async function bench() {
       const bytes = Buffer.from(`time;${keys.join(';')}\n${lines.join('')}`);
       const act = { by: 'bench', now: new Date(), name: 'bench.csv', bytes: bytes.length };
       const { id } = await imports.createImport(holding, houseId, act);
-      await writePiece(id, 0, bytes);
+      await writePiece(importFile(id), 0, bytes);
       await imports.noteReceived(holding, id, bytes.length);
       await imports.moveImport(holding, id, ['received'], 'to-check', {
         ...{ encoding: 'utf-8', delimiter: ';', decimal: ',', headLines: 1, timeColumns: [0] },
