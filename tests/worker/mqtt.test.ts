@@ -83,7 +83,7 @@ describe('By way of a broker', () => {
     await second.readings(pack({ 'bench-1': 9 }));
     await second.coil(1, 'off');
     const told = heard.find((text) => text.includes('"1":"on"'));
-    expect(told).toBeDefined();
+    expect(JSON.parse(told ?? '{}')).toMatchObject({ type: 'relays', channels: { '1': 'on' } });
     const before = worker.metrics.read('frames_unsigned_total');
     await ear.publishAsync(`middenward/v1/${scene.nodeId}/up`, told ?? '', { qos: 1 });
     await until('it was refused', () => worker.metrics.read('frames_unsigned_total') > before);
