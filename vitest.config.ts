@@ -1,3 +1,4 @@
+import { availableParallelism } from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
@@ -15,6 +16,8 @@ const resolve = {
 
 export default defineConfig({
   test: {
+    // by itself it leaves one of two cores idle; many files wait for programs more than they reckon
+    maxWorkers: Math.max(2, availableParallelism()),
     projects: [
       {
         resolve,

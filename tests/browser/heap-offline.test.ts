@@ -21,7 +21,7 @@ async function onPhone(): Promise<{ context: BrowserContext; page: Page }> {
   return { context, page };
 }
 
-/** The worker keeps the shell while it is installed; it is ready once it leads the page. */
+/** The worker keeps the shell while it is installed; once it is active it takes the lead of the page that is open. */
 async function shellIsKept(page: Page): Promise<void> {
   await until(
     'the worker that keeps the page',
@@ -31,7 +31,6 @@ async function shellIsKept(page: Page): Promise<void> {
       ),
     30_000,
   );
-  await page.reload();
   await until(
     'the worker to lead the page',
     () => page.evaluate(() => navigator.serviceWorker.controller !== null),
