@@ -1,6 +1,6 @@
 import type { FieldNode } from '@/lib/schema/yard-view';
 import { boardWords, linkWords } from '@/lib/wording/bus';
-import { RegistersButton } from './editing';
+import { RegistersButton } from './node-buttons';
 
 /** How a node on a bus is reached, and why it is not. Nothing for one that calls by itself. */
 export function BusLine({ node, trouble }: { node: FieldNode; trouble: string | null }) {

@@ -21,6 +21,9 @@ interface Editing {
 const nothing = () => undefined;
 const Context = createContext<Editing>({ allowed: [], edit: nothing, token: nothing, registers: nothing });
 
+/** What the page's own buttons open; nothing where it is not around them. */
+export const useWiringEditing = () => use(Context);
+
 type Open =
   | { what: 'kind'; kind: Kind; id: string | null; given?: object | undefined }
   | { what: 'token'; nodeId: string; doing: 'rotate' | 'revoke' }
@@ -118,46 +121,5 @@ export function ChangeButton({ kind, id, of }: { kind: Kind; id: string; of: str
         Change<span className="sr-only"> {of}</span>…
       </span>
     </Button>
-  );
-}
-
-export function RegistersButton({ nodeId, nodeKey }: { nodeId: string; nodeKey: string }) {
-  const { allowed, registers } = use(Context);
-  if (!allowed.includes('wiring.write')) return null;
-  return (
-    <Button kind="quiet" className="-ml-3" onClick={() => registers(nodeId)}>
-      <span>
-        What is read<span className="sr-only"> of {nodeKey}</span>…
-      </span>
-    </Button>
-  );
-}
-
-export function TokenButtons({
-  nodeId,
-  nodeKey,
-  isRevoked,
-}: {
-  nodeId: string;
-  nodeKey: string;
-  isRevoked: boolean;
-}) {
-  const { allowed, token } = use(Context);
-  if (!allowed.includes('node.token')) return null;
-  return (
-    <>
-      <Button kind="quiet" onClick={() => token(nodeId, 'rotate')}>
-        <span>
-          New token<span className="sr-only"> for {nodeKey}</span>…
-        </span>
-      </Button>
-      {isRevoked ? null : (
-        <Button kind="quiet" onClick={() => token(nodeId, 'revoke')}>
-          <span>
-            Revoke<span className="sr-only"> the token of {nodeKey}</span>…
-          </span>
-        </Button>
-      )}
-    </>
   );
 }

@@ -7,14 +7,18 @@ import type { Preferences } from '@/lib/units/preferences';
 import { moment } from '@/lib/units/time';
 import { NODE_WORDS } from '@/lib/wording/wiring-parts';
 import { BusLine } from './bus-line';
-import { ChangeButton, TokenButtons } from './editing';
+import { ChangeButton } from './editing';
+import { TokenButtons } from './node-buttons';
 import { linkTrouble, nodeStatus, type NodeStatus } from './node-status';
 import { NodeTailButton } from './node-tail';
 
 const unknown = <span className="font-sans text-soft">not told</span>;
 
 function tokenWords(node: FieldNode, now: number, zone: string, preferences: Preferences): string {
-  if (node.revokedAt !== null) return `Revoked ${moment(Date.parse(node.revokedAt), now, zone, preferences)}`;
+  const isBoard = node.kind === 'modbus';
+  if (node.revokedAt !== null)
+    return `${isBoard ? 'Left alone since' : 'Revoked'} ${moment(Date.parse(node.revokedAt), now, zone, preferences)}`;
+  if (isBoard) return 'None: it is reached from here';
   const until = node.formerTokenUntil === null ? 0 : Date.parse(node.formerTokenUntil);
   return until > now ? `Valid; the one before till ${moment(until, now, zone, preferences)}` : 'Valid';
 }
@@ -125,7 +129,12 @@ export function NodeRow({
         <div className="flex flex-wrap justify-end">
           <NodeTailButton node={node.key} {...{ houseId, preferences }} />
           <ChangeButton kind="node" id={node.id} of={node.key} />
-          <TokenButtons nodeId={node.id} nodeKey={node.key} isRevoked={node.revokedAt !== null} />
+          <TokenButtons
+            nodeId={node.id}
+            nodeKey={node.key}
+            isBoard={node.kind === 'modbus'}
+            isRevoked={node.revokedAt !== null}
+          />
         </div>
       </Cell>
     </Row>

@@ -2,15 +2,15 @@
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
-import { Checkbox } from '@/components/ui/check';
 import { TextField } from '@/components/ui/field';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
 import { useAwake } from '@/components/ui/use-awake';
-import { correctionOf, LEAST_SPAN_K, unusual } from '@/lib/analysis/calibrate';
+import { correctionOf, unusual } from '@/lib/analysis/calibrate';
 import { temperature } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
-import { correctionWords, REFERENCE_WORDS, unusualWords } from '@/lib/wording/calibration';
+import { REFERENCE_WORDS } from '@/lib/wording/calibration';
+import { CalibrationVerdict } from './calibration-verdict';
 import { CalibrationBath, type KnownPlaces, type TakenPlace } from './point-bath';
 
 /** A calibration run: the probe comes to rest at one place or two, and what it read there is held against what is true. */
@@ -86,26 +86,7 @@ export function PointCalibrate({
       ) : null}
       {places.length > 0 && !isMore ? (
         <>
-          <p aria-live="polite">
-            {found === null ? (
-              <span className="font-semibold text-alarm">
-                The two places lie closer than {LEAST_SPAN_K} °C: begin anew with places further apart.
-              </span>
-            ) : (
-              <>
-                What is used = what is read <strong className="font-mono">{correctionWords(found)}</strong>,
-                from now on. Readings before keep the calibration of their time.
-              </>
-            )}
-          </p>
-          {asked.length === 0 ? null : (
-            <Checkbox
-              checked={isMeant}
-              onChange={(event) => setMeant(event.target.checked)}
-              label="It is meant so."
-              hint={unusualWords(asked, preferences)}
-            />
-          )}
+          <CalibrationVerdict {...{ found, asked, isMeant, setMeant, preferences }} />
           <TextField
             label="Note"
             value={note}

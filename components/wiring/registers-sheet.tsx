@@ -9,6 +9,7 @@ import { REGISTERS_MOST } from '@/lib/schema/bus';
 import type { Preferences } from '@/lib/units/preferences';
 import type { Yard } from './forms/options';
 import { RegisterFields } from './register-fields';
+import { RegistersFoot } from './registers-foot';
 import { bodyOfRow, bodyOfRows, rowAfter, rowsOf, type RegisterRow } from './register-rows';
 import { readNow } from './test-reading';
 
@@ -109,50 +110,12 @@ export function RegistersSheet({
         <p role="alert" className="font-semibold text-alarm empty:hidden">
           {failure}
         </p>
-        <Foot
+        <RegistersFoot
           {...{ isLeaving, isBusy, setLeaving, onClose }}
           save={() => void save()}
           leave={() => (isDirty ? setLeaving(true) : onClose())}
         />
       </div>
     </Dialog>
-  );
-}
-
-function Foot({
-  isLeaving,
-  isBusy,
-  save,
-  leave,
-  setLeaving,
-  onClose,
-}: {
-  isLeaving: boolean;
-  isBusy: boolean;
-  save: () => void;
-  leave: () => void;
-  setLeaving: (leaving: boolean) => void;
-  onClose: () => void;
-}) {
-  if (isLeaving) {
-    return (
-      <div className="flex flex-wrap gap-2">
-        <p role="alert" className="w-full font-semibold">
-          What you typed is not saved. Throw it away?
-        </p>
-        <Button autoFocus onClick={() => setLeaving(false)}>
-          Go on typing
-        </Button>
-        <Button onClick={onClose}>Throw away</Button>
-      </div>
-    );
-  }
-  return (
-    <div className="flex flex-wrap gap-2">
-      <Button kind="primary" busy={isBusy} onClick={save}>
-        Save
-      </Button>
-      <Button onClick={leave}>Leave as it is</Button>
-    </div>
   );
 }

@@ -19,6 +19,7 @@ import type { LastProof } from './proved-cell';
 import { RelayBoard } from './relay-board';
 import { Interlocks } from './interlocks';
 import { Sources } from './sources';
+import { standingOf } from './standing';
 import { TrainingPanel } from './training-panel';
 
 export interface WiringData extends Yard {
@@ -53,28 +54,7 @@ export function WiringView({
   const { house, nodes, channels, points, lockouts, sources } = yard;
   const { zone } = house;
   const can = canFallback(nodes, nodeStatus);
-  const isLocked = (key: string) => lockouts.some((one) => one.channel === key && one.removedAt === null);
-  const standing = {
-    nodes: nodes.map((node) => ({
-      key: node.key,
-      lastHeardAt: node.lastHeardAt === null ? null : Date.parse(node.lastHeardAt),
-      isRevoked: node.revokedAt !== null,
-      ...(node.kind === 'modbus' ? { board: { watchdogS: node.modbus?.watchdog?.within ?? null } } : {}),
-      keeps: channels
-        .filter((one) => one.node === node.key && one.fallback !== null && can[node.key] === 'can')
-        .map((one) => one.label),
-    })),
-    points: points.map((point) => ({
-      name: point.name,
-      isGood: state?.points.find((one) => one.key === point.key)?.quality === 'good',
-    })),
-    channels: channels.map((channel) => ({
-      number: channel.number,
-      label: channel.label,
-      isProved: channel.provedAt !== null,
-      isLockedOut: isLocked(channel.key),
-    })),
-  };
+  const standing = standingOf(yard, can, state);
   return (
     <WiringEditing yard={yard} preferences={preferences} allowed={allowed}>
       <div className="flex flex-col gap-5">
