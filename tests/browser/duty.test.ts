@@ -127,8 +127,9 @@ describe('Duty in the browser', () => {
     await rows.first().waitFor();
     const cores = await rows.locator('td').allInnerTexts();
     const said = (await panel.getByRole('img').getAttribute('aria-label')) ?? '';
-    // nights begun and nights whose sun has risen differ by the lasting one
-    expect((await table(page).locator('tbody tr').count()) - cores.length).toBeLessThanOrEqual(1);
+    // nights begun and nights whose sun has risen differ by the lasting one, and where noon comes between the history's
+    // making and this look, by the one that it began
+    expect((await table(page).locator('tbody tr').count()) - cores.length).toBeLessThanOrEqual(2);
     expect(said).toContain(`from ${cores[0]} to ${cores.at(-1)},`);
     await page.close();
   });

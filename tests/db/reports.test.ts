@@ -144,8 +144,8 @@ it('a report for an insurer tells what rang, who answered, what they did, and wh
   expect(plain(row?.[2] ?? '')).toContain(grower);
   expect(block?.rows?.filter((one) => one.value === 'not kept yet')).toHaveLength(1);
   expect(block?.rows).toContainEqual({
-    name: 'Tests of residual-current devices',
-    value: 'no channel tells of one',
+    name: 'Bench mat, protection',
+    value: 'The residual-current device: no test is written down.',
   });
 });
 

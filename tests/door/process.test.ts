@@ -106,7 +106,9 @@ it('ends with 78 and the reason when a part refuses its configuration', async ()
     '-e',
     "console.error('AUTH_SECRET is missing.'); process.exit(78)",
   ]);
-  const { child, state } = await startDoor(await anyFree(), '--yard', refusing);
+  // web never answers: a door that is ready would keep starting the part again
+  const silent = JSON.stringify([process.execPath, '-e', 'setInterval(() => {}, 60_000)']);
+  const { child, state } = await startDoor(await anyFree(), '--web', silent, '--yard', refusing);
   const [code] = (await once(child, 'exit')) as [number];
   expect(code).toBe(78);
   expect(state.text).toContain('yard cannot start: AUTH_SECRET is missing.');
