@@ -44,6 +44,12 @@ describe('who gets a request', () => {
   });
 });
 
+// RFC 9110, 7.6.1: Keep-Alive is of one connection and is not carried on
+it('how long web keeps its connections is not said of the door’s', async () => {
+  const { url } = await door();
+  expect((await fetch(url)).headers.get('keep-alive')).not.toBe('timeout=3600');
+});
+
 describe('the client’s address', () => {
   const forged = {
     'x-forwarded-for': '6.6.6.6',

@@ -19,6 +19,7 @@ export async function upstream(name: string): Promise<Upstream> {
   const sockets: net.Socket[] = [];
   const server = http.createServer((request, response) => {
     seen.push(request);
+    response.setHeader('keep-alive', 'timeout=3600');
     response.end(name);
   });
   server.on('upgrade', (request: http.IncomingMessage, socket: net.Socket) => {

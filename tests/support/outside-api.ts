@@ -44,8 +44,6 @@ export class OutsideApi {
       headers: {
         cookie: this.cookie,
         origin: this.url,
-        // after a wait the server may end a kept connection in the moment in which it is used again
-        connection: 'close',
         ...(body === undefined ? {} : { 'content-type': 'application/json' }),
         ...headers,
       },

@@ -29,6 +29,9 @@ export function createFront(options: {
 
   // the package throws, which would end the door, unless somebody listens; a client that resets its line is a daily thing
   proxy.on('error', (_error, _request, client) => client.destroy());
+  // of one connection alone (RFC 9110, 7.6.1): web keeps its own for longer than the door keeps the client's, and a
+  // client that believes web asks on a connection that is being closed
+  proxy.on('proxyRes', (answer) => delete answer.headers['keep-alive']);
   proxy.on('proxyReqWs', (innerRequest, _request, socket) => {
     innerRequest.once('upgrade', (_response, inner) => {
       const pipe = pipes.get(socket);

@@ -3,6 +3,9 @@ import type { Front } from './front';
 
 export class PortTaken extends Error {}
 
+/** Node's own five seconds are what many a program pauses between two questions, and a connection then ends as it is used. */
+const KEPT_MS = 65_000;
+
 const LOOPBACK = ['127.0.0.1', '::1'];
 
 /**
@@ -21,7 +24,7 @@ export async function openPort(front: Front, host: string | null, port: number, 
 async function tryPort(front: Front, hosts: string[], port: number): Promise<http.Server[] | null> {
   const servers: http.Server[] = [];
   for (const host of hosts) {
-    const server = http.createServer(front.onRequest);
+    const server = http.createServer({ keepAliveTimeout: KEPT_MS }, front.onRequest);
     server.on('upgrade', front.onUpgrade);
     const fault = await listen(server, host, port);
     if (fault === null) servers.push(server);
