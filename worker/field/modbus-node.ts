@@ -1,19 +1,19 @@
 /**
- * A board on Modbus TCP, played as a node: polled for readings, its coils commanded, read back and reported. The lease
- * that such a board cannot keep is kept here; what a lost link leaves behind is said to be unknown.
+ * A board on Modbus TCP, played as a node: polled for readings, its coils commanded, read back and reported. What a lost
+ * link leaves behind is said to be unknown.
  */
 import { v7 as uuid } from 'uuid';
-import { leaseS, relaysEveryS, type CommandFrame, type RefusedRecord } from '@/lib/field/frames';
+import { relaysEveryS, type CommandFrame } from '@/lib/field/frames';
 import type { ModbusBus, Register } from '@/lib/schema/bus';
 import type { Cancel } from '../clock';
 import type { CommandLink } from '../control/command-link';
-import { BackOff } from './back-off';
 import { BoardCoils } from './board-coils';
+import { BoardDial, errorWords } from './board-dial';
+import { BoardLease } from './board-lease';
+import { BoardReadings } from './board-readings';
 import { wiringOf, type Bus, type BusDeps, type BusNode } from './bus';
-import { takePack } from './intake';
-import { ModbusLine } from './modbus-line';
-import { poll, readOnce, type ReadOnce } from './modbus-poll';
-import { tailOf } from './tail';
+import type { ModbusLine } from './modbus-line';
+import { readOnce, type ReadOnce } from './modbus-poll';
 
 /** reliability.md: no command older than 2 s. */
 const COMMAND_AGE_MS = 2000;
@@ -26,21 +26,18 @@ export class ModbusNode implements Bus, CommandLink {
   seen: { seq: number; at: number } | null = null;
   private seq = 0;
   private line: ModbusLine | null = null;
-  private why = 'it has not been reached yet';
-  private stopped = false;
   /** Somebody else drives this board: its coils are left alone. */
   private isLeft = false;
   private busy = false;
   private underWay: Promise<void> = Promise.resolve();
   private asked = false;
   private isDropDue = false;
-  private leaseUntilMs = 0;
   private reportedAtMs = 0;
   private cancels: Cancel[] = [];
-  private cancelDial: Cancel = () => undefined;
-  private cancelLease: Cancel = () => undefined;
-  private readonly backOff = new BackOff();
   private readonly board: BoardCoils;
+  private readonly lease: BoardLease;
+  private readonly readings: BoardReadings;
+  private readonly link: BoardDial;
 
   constructor(
     private readonly node: BusNode,
@@ -53,7 +50,15 @@ export class ModbusNode implements Bus, CommandLink {
       (relay) => this.isBarred(relay),
       (ms) => new Promise((resolve) => void deps.clock.after(ms, resolve)),
     );
-    void this.dial();
+    this.lease = new BoardLease(deps.clock, () => this.endLease());
+    this.readings = new BoardReadings(node, deps);
+    this.link = new BoardDial(node, settings, deps, {
+      // what the coils are is read before anything is said of them
+      first: (line) => this.board.read(line),
+      up: (line) => this.up(line),
+      lost: (why) => this.lost(why),
+    });
+    void this.link.dial();
   }
 
   get isUp(): boolean {
@@ -66,7 +71,7 @@ export class ModbusNode implements Bus, CommandLink {
 
   /** Somebody at the panel wants to see one register. @throws Error in words */
   async readOnce(row: Omit<Register, 'point'>): Promise<ReadOnce> {
-    if (this.line === null) throw new Error(`There is no link to the board: ${this.why}.`);
+    if (this.line === null) throw new Error(`There is no link to the board: ${this.link.why}.`);
     return readOnce(this.line, row);
   }
 
@@ -76,10 +81,8 @@ export class ModbusNode implements Bus, CommandLink {
       return metrics.add('commands_withheld_total');
     if (!this.board.take(frame)) return;
     metrics.add('commands_sent_total');
-    this.leaseUntilMs = this.reportedAtMs + (leaseS * 1000) / clock.rate;
+    this.lease.runFrom(this.reportedAtMs);
     this.asked = true;
-    this.cancelLease();
-    this.cancelLease = clock.after(this.leaseUntilMs - clock.monotonicMs(), () => this.endLease());
     this.work();
   }
 
@@ -88,8 +91,7 @@ export class ModbusNode implements Bus, CommandLink {
   }
 
   async stop(isEnd: boolean): Promise<void> {
-    this.stopped = true;
-    this.cancelDial();
+    this.link.stop();
     this.rest();
     const { line } = this;
     this.line = null;
@@ -105,34 +107,14 @@ export class ModbusNode implements Bus, CommandLink {
     this.node.house.nodes.detach(this.node.nodeId, this);
   }
 
-  private async dial(): Promise<void> {
-    if (this.stopped) return;
-    try {
-      const line = await ModbusLine.open(this.settings, {
-        heard: () => this.node.house.nodes.heard(this.node.nodeId),
-        lost: (why) => this.lost(why),
-      });
-      // what the coils are is read before anything is said of them
-      await this.board.read(line).catch((error: unknown) => {
-        line.close();
-        throw error;
-      });
-      this.up(line);
-    } catch (error) {
-      this.again(wordsOf(error));
-    }
-  }
-
   private up(line: ModbusLine): void {
     const { clock } = this.deps;
     const { house, nodeId } = this.node;
     const { wiring } = this;
-    if (this.stopped || wiring === undefined) return line.close();
+    if (wiring === undefined) return line.close();
     this.line = line;
-    this.backOff.reset();
     this.isLeft = false;
-    this.leaseUntilMs = clock.monotonicMs() + (leaseS * 1000) / clock.rate;
-    this.cancelLease = clock.after(this.leaseUntilMs - clock.monotonicMs(), () => this.endLease());
+    this.lease.runFrom(clock.monotonicMs());
     house.nodes.attach(nodeId, this);
     const { host, port, unit } = this.settings;
     const firmware = `Modbus unit ${unit} at ${host}:${port}`;
@@ -143,12 +125,12 @@ export class ModbusNode implements Bus, CommandLink {
       clock.appNow(),
     );
     // readings before coils: points that fell silent with the link must not switch what they would leave on
-    void this.poll().then(() => {
+    void this.readings.poll(line).then(() => {
       if (this.line === line) this.report();
     });
     this.cancels = [
       clock.every((relaysEveryS * 1000) / clock.rate, () => this.look()),
-      clock.every((wiring.reportEveryS * 1000) / clock.rate, () => void this.poll()),
+      clock.every((wiring.reportEveryS * 1000) / clock.rate, () => void this.readings.poll(line)),
     ];
     const { watchdog } = this.settings;
     // three chances within its time; its time is the board's own and passes at no other rate
@@ -173,7 +155,7 @@ export class ModbusNode implements Bus, CommandLink {
 
   private look(): void {
     if (this.isLeft && this.deps.isSure()) this.isLeft = false;
-    if (this.isLeaseOver) this.endLease();
+    if (this.lease.isOver) this.endLease();
     this.run(async (line) => {
       const isMoved = await this.board.read(line);
       // cut off from the database, and the board is moved by somebody: another worker leads
@@ -185,13 +167,9 @@ export class ModbusNode implements Bus, CommandLink {
     });
   }
 
-  private get isLeaseOver(): boolean {
-    return this.deps.clock.monotonicMs() >= this.leaseUntilMs;
-  }
-
   /** Asked for again when what is under way is done, should it be. */
   private endLease(): void {
-    if (!this.isLeaseOver || this.isLeft) return;
+    if (!this.lease.isOver || this.isLeft) return;
     if (this.busy) this.isDropDue = true;
     else this.run((line) => this.dropAll(line));
   }
@@ -209,7 +187,7 @@ export class ModbusNode implements Bus, CommandLink {
         this.asked = false;
         const before = JSON.stringify(this.board.coils);
         const { refused } = await this.board.apply(line);
-        this.tellRefused(refused);
+        this.readings.tellRefused(refused);
         await this.feed();
         if (JSON.stringify(this.board.coils) !== before || refused.length > 0) this.report();
       }
@@ -237,39 +215,12 @@ export class ModbusNode implements Bus, CommandLink {
   /** Only while the lease holds: a house that is not controlled lets its board drop. */
   private async feed(): Promise<void> {
     const { watchdog } = this.settings;
-    if (watchdog === null || this.isLeaseOver || this.isLeft || this.line === null) return;
+    if (watchdog === null || this.lease.isOver || this.isLeft || this.line === null) return;
     const { house, nodeId } = this.node;
     await this.line.writeRegister(watchdog.address, watchdog.value).then(
       () => house.nodes.tellLink(nodeId, null),
-      (error: unknown) => house.nodes.tellLink(nodeId, `its watchdog is not fed: ${wordsOf(error)}`),
+      (error: unknown) => house.nodes.tellLink(nodeId, `its watchdog is not fed: ${errorWords(error)}`),
     );
-  }
-
-  private async poll(): Promise<void> {
-    const { line, wiring } = this;
-    const { house } = this.node;
-    if (line === null || wiring === undefined || wiring.registers.length === 0) return;
-    try {
-      const { pack, refused } = await poll(line, wiring.registers, () => this.deps.clock.appNow() / 1000);
-      this.tellNotTaken(refused);
-      // seen by control at once; what follows is the disk's business
-      takePack(this.deps, this.deps.ingest, house, wiring, pack).catch((error: unknown) =>
-        this.deps.log.warn({ err: error, node: wiring.key }, 'readings of a board could not be stored'),
-      );
-    } catch (error) {
-      this.deps.log.info({ err: error, node: wiring.key }, 'a board could not be read');
-    }
-  }
-
-  private tellNotTaken(refused: readonly RefusedRecord[]): void {
-    if (refused.length === 0) return;
-    this.node.house.nodes.tookPack(this.node.nodeId, { pack: [], taken: 0, refused }, () =>
-      tailOf([], refused, new Map(), []),
-    );
-  }
-
-  private tellRefused(refused: readonly { relay: number; why: string }[]): void {
-    this.tellNotTaken(refused.map(({ relay, why }) => ({ index: 0, name: `relay ${relay}`, why })));
   }
 
   /** A heater stays cold on a board that would keep it on, however it came to be wired there. */
@@ -287,26 +238,13 @@ export class ModbusNode implements Bus, CommandLink {
     this.seen = null;
     this.rest();
     this.node.house.nodes.detach(this.node.nodeId, this);
-    this.again(why);
-  }
-
-  private again(why: string): void {
-    if (this.stopped) return;
-    this.why = why;
-    const waitMs = this.backOff.next();
-    this.node.house.nodes.tellLink(this.node.nodeId, why);
-    this.deps.log.info({ node: this.node.nodeId, why, waitMs: Math.round(waitMs) }, 'a board is not there');
-    this.cancelDial = this.deps.clock.after(waitMs, () => void this.dial());
+    this.link.again(why);
   }
 
   private rest(): void {
     for (const cancel of this.cancels) cancel();
     this.cancels = [];
-    this.cancelLease();
+    this.lease.rest();
     this.asked = false;
   }
-}
-
-function wordsOf(error: unknown): string {
-  return error instanceof Error ? error.message : String(error);
 }
