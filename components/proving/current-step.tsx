@@ -1,14 +1,13 @@
 'use client';
-import { Button } from '@/components/ui/button';
 import { pointValue } from '@/lib/units/format';
-import { BIG } from './big';
 import { useProving } from './context';
+import { DoneButton } from './done-button';
 import { RunButton } from './run-button';
 import { Running } from './running';
 
 /** The load's own sensor, as it was during a run. */
 export function CurrentStep() {
-  const { act, busy, proof, channel, preferences } = useProving();
+  const { proof, channel, preferences } = useProving();
   const going = proof?.runs.find((one) => one.kind === 'pulse' && !one.isOver);
   if (going !== undefined) return <Running run={going} />;
   const shown = (proof?.runs ?? []).flatMap((one) =>
@@ -24,14 +23,7 @@ export function CurrentStep() {
           : `${best.point} showed ${pointValue(best.greatest, best.unit, preferences)}; it counts as running over ${pointValue(above, best.unit, preferences)}.`}
       </p>
       {best !== undefined && (best.greatest ?? 0) > above ? (
-        <Button
-          kind="primary"
-          className={BIG}
-          busy={busy}
-          onClick={() => void act('POST', 'steps', { step: 'current' })}
-        >
-          Its sensor shows it
-        </Button>
+        <DoneButton step="current">Its sensor shows it</DoneButton>
       ) : null}
       <RunButton kind="pulse" seconds={60} label="Run again, 60 s" />
     </div>

@@ -1,11 +1,10 @@
 'use client';
 import { useState } from 'react';
-import { Button } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/segmented';
 import { change } from '@/lib/units/format';
 import { gainWords } from '@/lib/wording/proving';
-import { BIG } from './big';
 import { useProving } from './context';
+import { DoneButton } from './done-button';
 import { RunButton } from './run-button';
 import { Running } from './running';
 import { Without } from './without';
@@ -13,7 +12,7 @@ import { Without } from './without';
 const MINUTES = ['3', '5', '10'] as const;
 
 export function GainStep() {
-  const { act, busy, proof, preferences } = useProving();
+  const { proof, preferences } = useProving();
   const [minutes, setMinutes] = useState<(typeof MINUTES)[number]>('5');
   const run = proof?.runs.find((one) => one.kind === 'gain');
   if (run !== undefined && !run.isOver)
@@ -36,16 +35,7 @@ export function GainStep() {
           {words ?? 'No good readings of both ends of the loop came in the last third of the run.'}
         </p>
       )}
-      {words === null ? null : (
-        <Button
-          kind="primary"
-          className={BIG}
-          busy={busy}
-          onClick={() => void act('POST', 'steps', { step: 'gain' })}
-        >
-          Write it down
-        </Button>
-      )}
+      {words === null ? null : <DoneButton step="gain">Write it down</DoneButton>}
       <Segmented
         label="For how many minutes"
         options={MINUTES.map((value) => ({ value, label: `${value} min` }))}

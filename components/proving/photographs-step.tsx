@@ -1,9 +1,9 @@
 'use client';
-import { Button } from '@/components/ui/button';
 import { buttonLook } from '@/components/ui/button-look';
 import type { ProofPicture } from '@/lib/schema/proof';
 import { BIG } from './big';
 import { useProving } from './context';
+import { DoneButton } from './done-button';
 import { Pictures } from './pictures';
 import { Without } from './without';
 
@@ -14,7 +14,7 @@ const SHOWN = [
 
 /** The phone's own camera opens. Plate and wiring are told apart, since the sheet asks for both. */
 export function PhotographsStep() {
-  const { proof, act, busy } = useProving();
+  const { proof } = useProving();
   const pictures = proof?.pictures ?? [];
   return (
     <div className="flex flex-col gap-3">
@@ -26,14 +26,7 @@ export function PhotographsStep() {
           pictures={pictures.filter((one) => one.shows === shows)}
         />
       ))}
-      <Button
-        kind="primary"
-        className={BIG}
-        busy={busy}
-        onClick={() => void act('POST', 'steps', { step: 'photographs' })}
-      >
-        Both are photographed
-      </Button>
+      <DoneButton step="photographs">Both are photographed</DoneButton>
       <Without step="photographs" word="No photograph" />
     </div>
   );

@@ -1,14 +1,15 @@
 'use client';
-import { Button, ButtonLink } from '@/components/ui/button';
+import { ButtonLink } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { rcdTest, rcdWords, ratingVerdict } from '@/lib/wording/protection';
 import { SHARE_NOTE } from '@/lib/wording/wiring-load';
 import { BIG } from './big';
 import { useProving } from './context';
+import { DoneButton } from './done-button';
 
 /** The load against its contact: reckoned, and refused with the arithmetic where it is too much. */
 export function RatingStep() {
-  const { act, busy, channel, house, today } = useProving();
+  const { channel, house, today } = useProving();
   const { load, protection, highLimit } = channel;
   const verdict = ratingVerdict(load, protection, highLimit !== null);
   const isDue = protection !== null && rcdTest(protection, today).state === 'due';
@@ -24,14 +25,7 @@ export function RatingStep() {
         <p className="text-[0.9rem] text-soft">{rcdWords(protection, today)}</p>
       )}
       {verdict.isFit ? (
-        <Button
-          kind="primary"
-          className={BIG}
-          busy={busy}
-          onClick={() => void act('POST', 'steps', { step: 'rating' })}
-        >
-          It fits the plate
-        </Button>
+        <DoneButton step="rating">It fits the plate</DoneButton>
       ) : (
         <ButtonLink href={`/${house.slug}/wiring`} className={BIG}>
           To the channel’s form

@@ -1,5 +1,6 @@
 'use client';
 import { Button } from '@/components/ui/button';
+import { ThrowAway } from './throw-away';
 
 /** Save or leave; what was typed is not thrown away without being asked about. */
 export function RegistersFoot({
@@ -18,17 +19,7 @@ export function RegistersFoot({
   onClose: () => void;
 }) {
   if (isLeaving) {
-    return (
-      <div className="flex flex-wrap gap-2">
-        <p role="alert" className="w-full font-semibold">
-          What you typed is not saved. Throw it away?
-        </p>
-        <Button autoFocus onClick={() => setLeaving(false)}>
-          Go on typing
-        </Button>
-        <Button onClick={onClose}>Throw away</Button>
-      </div>
-    );
+    return <ThrowAway className="flex flex-wrap gap-2" onKeep={() => setLeaving(false)} onThrow={onClose} />;
   }
   return (
     <div className="flex flex-wrap gap-2">

@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { send } from '@/components/ui/send';
 import { say } from '@/components/ui/toast';
+import { ThrowAway } from './throw-away';
 
 /** A sheet's buttons, and the two questions that may come before them: throw away what was typed, take out of use. */
 export function SheetFoot({
@@ -43,17 +44,7 @@ export function SheetFoot({
   const strip =
     'sticky -bottom-5 -mx-5 -mb-5 flex flex-wrap items-center gap-2 border-t border-line bg-sheet px-5 py-3';
   if (isLeaving) {
-    return (
-      <div className={strip}>
-        <p role="alert" className="w-full font-semibold">
-          What you typed is not saved. Throw it away?
-        </p>
-        <Button autoFocus onClick={() => setLeaving(false)}>
-          Go on typing
-        </Button>
-        <Button onClick={onClose}>Throw away</Button>
-      </div>
-    );
+    return <ThrowAway className={strip} onKeep={() => setLeaving(false)} onThrow={onClose} />;
   }
   if (isRemoving && removal !== null) {
     return (
