@@ -32,13 +32,15 @@ export function settleProof(run: Run, channel: number): void {
 /**
  * After `after` of a draw, return minus intake under the least gain for 2 min by good readings alone ends the
  * channel's draw: it is moving air, not heat. If nothing else draws, the source's credit is spent with it.
+ * @returns whether it ends just now, so that what its source found before must be found once more
  */
-export function settleGain(run: Run, channel: number): void {
+export function settleGain(run: Run, channel: number): boolean {
   const { source, rules } = entry(run.plan.channels, channel);
-  if (source === null) return;
+  if (source === null) return false;
   const memory = entry(run.channels, channel);
   const wanted = draws(run, channel) ? gainWanted(run, rules) : null;
   let { gainLowSince, noGainUntil } = memory;
+  let ends = false;
   if (noGainUntil !== null && run.at >= noGainUntil) noGainUntil = null;
   if (noGainUntil !== null) dueAt(run, noGainUntil);
   if (wanted === null) gainLowSince = null;
@@ -54,12 +56,14 @@ export function settleGain(run: Run, channel: number): void {
         gainLowSince = run.at;
         noGainUntil = run.at + leastRestMs(run, entry(run.plan.sources, source));
         spendAll(run, source, channel);
+        ends = true;
       }
       wakeAt(run, gainLowSince + LOW_MS);
     } else gainLowSince = null;
   }
   if (gainLowSince !== memory.gainLowSince || noGainUntil !== memory.noGainUntil)
     run.channels[channel] = { ...memory, gainLowSince, noGainUntil };
+  return ends;
 }
 
 type Gain = NonNullable<NonNullable<Run['plan']['rules'][number]['rest']>['leastGain']>;

@@ -61,9 +61,9 @@ function settlePart(run: Run, index: number): void {
   // each round can only let a channel follow another, so a chain through all of them is the longest
   for (let round = 0; round < run.plan.channels.length + 4; round += 1) {
     run.wake = Infinity;
-    settleSources(run, part);
+    const drawsEnded = settleSources(run, part);
     const handsEnded = settleDemands(run, part);
-    if (!decideAll(run, part) && !handsEnded) break;
+    if (!decideAll(run, part) && !handsEnded && !drawsEnded) break;
   }
   explainDecisions(run, part, firstEvent);
   run.partWake[index] = run.wake;
@@ -84,7 +84,8 @@ export function settleUndriven(run: Run): void {
   }
 }
 
-function settleSources(run: Run, { channels, sources, rules }: PlanPart): void {
+/** Whether a draw ended for want of gain: its source was settled as if it went on. */
+function settleSources(run: Run, { channels, sources, rules }: PlanPart): boolean {
   for (const channel of channels) {
     settleCounted(run, channel);
     settleProof(run, channel);
@@ -94,8 +95,10 @@ function settleSources(run: Run, { channels, sources, rules }: PlanPart): void {
     settleSource(run, source);
     settleGuard(run, source);
   }
-  for (const channel of channels) settleGain(run, channel);
+  let drawsEnded = false;
+  for (const channel of channels) drawsEnded = settleGain(run, channel) || drawsEnded;
   for (const rule of rules) settleRule(run, rule);
+  return drawsEnded;
 }
 
 /** Whether a limit ended a hand on: its end is then no longer waited for. */
