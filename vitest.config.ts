@@ -2,6 +2,7 @@ import { availableParallelism } from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
+import { BaseSequencer, type TestSpecification } from 'vitest/node';
 
 const root = path.dirname(fileURLToPath(import.meta.url));
 const under = (folders: string) => [`tests/${folders}/**/*.test.{ts,tsx}`];
@@ -14,19 +15,41 @@ const resolve = {
   ],
 };
 
+const CORES = Math.max(2, availableParallelism());
+
+/** Files that wait for leases to end begin first, so that others reckon meanwhile. */
+class LongWaitsFirst extends BaseSequencer {
+  override async sort(files: TestSpecification[]): Promise<TestSpecification[]> {
+    const sorted = await super.sort(files);
+    const waits = (file: TestSpecification) => file.project.name === 'conformance';
+    return [...sorted.filter(waits), ...sorted.filter((file) => !waits(file))];
+  }
+}
+
 export default defineConfig({
   test: {
+    sequence: { sequencer: LongWaitsFirst },
     // by itself it leaves one of two cores idle; many files wait for programs more than they reckon
-    maxWorkers: Math.max(2, availableParallelism()),
+    maxWorkers: CORES,
     projects: [
+      {
+        resolve,
+        test: {
+          name: 'conformance',
+          testTimeout: 20_000,
+          include: under('conformance'),
+          maxWorkers: CORES + 1,
+        },
+      },
       {
         resolve,
         test: {
           name: 'pure',
           testTimeout: 20_000,
           include: under(
-            '{control,physics,analysis,wording,units,field,schema,structure,yard,live,door,components,conformance}',
+            '{control,physics,analysis,wording,units,field,schema,structure,yard,live,door,components}',
           ),
+          maxWorkers: CORES + 1,
         },
       },
       {
@@ -38,6 +61,7 @@ export default defineConfig({
           setupFiles: 'tests/support/own-database.ts',
           testTimeout: 20_000,
           hookTimeout: 60_000,
+          maxWorkers: CORES + 1,
         },
       },
       {
@@ -57,10 +81,8 @@ export default defineConfig({
           name: 'browser',
           include: under('browser'),
           globalSetup: ['tests/support/cluster.ts', 'tests/support/shared-app.ts'],
-          testTimeout: 60_000,
+          testTimeout: 90_000,
           hookTimeout: 180_000,
-          // one file at a time: two browsers on two cores make each other late
-          fileParallelism: false,
           sequence: { groupOrder: 2 },
         },
       },
