@@ -81,8 +81,10 @@ export default defineConfig({
           name: 'browser',
           include: under('browser'),
           globalSetup: ['tests/support/cluster.ts', 'tests/support/shared-app.ts'],
-          testTimeout: 90_000,
+          testTimeout: 60_000,
           hookTimeout: 180_000,
+          // one file at a time: two browsers on two cores make each other late, and the whole no sooner
+          fileParallelism: false,
           sequence: { groupOrder: 2 },
         },
       },

@@ -3,6 +3,8 @@ import type { ReactNode } from 'react';
 import { Shell } from '@/components/shell/shell';
 import { requireViewer } from '@/lib/server/next-session';
 import { shellFacts } from '@/lib/server/shell';
+// its script then comes with the layout's: hydration waits for it, and by itself it is asked for only then
+import './error';
 
 export default async function YardLayout({ children }: { children: ReactNode }) {
   const viewer = await requireViewer();

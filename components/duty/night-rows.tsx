@@ -1,5 +1,5 @@
 'use client';
-import { memo, type MouseEvent } from 'react';
+import { memo, useMemo, type MouseEvent } from 'react';
 import { classes } from '@/components/ui/classes';
 import { nightLabel } from '@/lib/units/time';
 import type { NightLine } from './night-line';
@@ -8,22 +8,29 @@ import { useGrowing, useOpening } from './use-night-rows';
 
 /** The rows of the table of nights. @param to the address of an opened night, but for its name */
 export function NightRows({
-  lines,
+  first,
+  later,
+  count,
   to,
   opened,
   hasHeat,
 }: {
-  lines: NightLine[];
+  first: NightLine[];
+  /** JSON of the lines after the first ones. */
+  later: string;
+  count: number;
   to: string;
   opened: string | null;
   hasHeat: boolean;
 }) {
-  const many = useGrowing(lines.length);
+  const many = useGrowing(count);
   const onOpen = useOpening();
-  const left = lines.slice(many);
+  const hasGrown = many > first.length;
+  const rest = useMemo(() => (hasGrown ? (JSON.parse(later) as NightLine[]) : []), [later, hasGrown]);
+  const left = count - many;
   return (
     <>
-      {lines.slice(0, many).map((line) => (
+      {[...first, ...rest.slice(0, many - first.length)].map((line) => (
         <NightRow
           key={line.night}
           line={line}
@@ -33,8 +40,8 @@ export function NightRows({
           onOpen={onOpen}
         />
       ))}
-      {left.length === 0 ? null : (
-        <tr aria-hidden="true" style={{ height: `${left.length * 1.55}rem` }}>
+      {left === 0 ? null : (
+        <tr aria-hidden="true" style={{ height: `${left * 1.55}rem` }}>
           <td colSpan={7} />
         </tr>
       )}

@@ -8,6 +8,7 @@ import { nightNotes } from '@/lib/wording/duty-notes';
 import { addressOf, type DutyAddress, type Sort } from './address';
 import { nightLine } from './night-line';
 import { NightRows } from './night-rows';
+import { AT_ONCE } from './rows-at-once';
 import { StripAxis } from './night-strip';
 import { sorted } from './sorting';
 
@@ -55,6 +56,7 @@ export function NightsTable(props: NightsTableProps) {
   const figure = (celsius: number) => temperatureFigure(celsius, preferences);
   const bare = addressOf(house, address, { night: undefined });
   const notes = nightNotes(nights);
+  const lines = sorted(nights, address).map((night) => nightLine(night, frostLimitC, preferences));
   return (
     <>
       <Table
@@ -81,7 +83,10 @@ export function NightsTable(props: NightsTableProps) {
         <NightRows
           // a choice of other nights begins from its own first screen
           key={`${address.sort} ${address.order} ${nights[0]?.night ?? ''}`}
-          lines={sorted(nights, address).map((night) => nightLine(night, frostLimitC, preferences))}
+          first={lines.slice(0, AT_ONCE)}
+          // as text: React would read each part of four hundred nights before anything of the page answers
+          later={JSON.stringify(lines.slice(AT_ONCE))}
+          count={lines.length}
           to={`${bare}${bare.includes('?') ? '&' : '?'}night=`}
           opened={address.night ?? null}
           hasHeat={hasHeat}

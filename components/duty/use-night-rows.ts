@@ -2,9 +2,8 @@
 import { useRouter } from 'next/navigation';
 import { startTransition, useCallback, useEffect, useState, type MouseEvent } from 'react';
 import { flushSync } from 'react-dom';
+import { AT_ONCE } from './rows-at-once';
 
-/** What the server draws: more than a screen of 1440 px shows at once. */
-const AT_ONCE = 42;
 /** So many more whenever the browser has nothing else to do: some 10 ms of a slow phone. */
 const AT_IDLE = 24;
 

@@ -92,12 +92,12 @@ it('stops its children and frees its port on SIGTERM', async () => {
 
 it('leaves no child behind when it is killed outright', async () => {
   const { child, state } = await startDoor(await anyFree());
-  await until('ready', () => state.text.includes('is ready'));
+  const children = () => new Set(state.text.match(/pid \d+/g) ?? []).size;
+  await until('both are there', () => state.text.includes('is ready') && children() === 2);
   child.kill('SIGKILL');
   await until('web and worker are gone', async () => {
     return (await isFree(state.webPort)) && (await isFree(state.workerPort));
   });
-  expect(state.text.match(/pid \d+/g)).toHaveLength(2);
 });
 
 it('ends with 78 and the reason when a part refuses its configuration', async () => {

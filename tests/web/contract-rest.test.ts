@@ -116,7 +116,8 @@ describe.concurrent('Rest and draw credit, in times worked out on paper', () => 
     await scene.claim(1, 'short-cycle');
     told = await scene.waitTold(1, 3);
     near((told[2]?.at ?? 0) - (told[1]?.at ?? 0), 40);
-    await scene.hand(1, { state: 'off', seconds: 5 });
+    // shorter than the least off, long enough to be heard by a machine that has much else to do
+    await scene.hand(1, { state: 'off', seconds: 30 });
     told = await scene.waitTold(1, 4);
     expect((told[3]?.at ?? 0) - (told[2]?.at ?? 0)).toBeLessThan(50);
     told = await scene.waitTold(1, 5);
