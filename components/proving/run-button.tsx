@@ -18,10 +18,13 @@ export function RunButton({
   kind,
   seconds,
   label,
+  isAgain = false,
 }: {
   kind: RunKind;
   seconds?: number | undefined;
   label: string;
+  /** It has run already: what was seen is asked first. */
+  isAgain?: boolean;
 }) {
   const { act, busy, proof } = useProving();
   const now = useAppNow();
@@ -35,7 +38,7 @@ export function RunButton({
     );
   return (
     <Button
-      kind="primary"
+      kind={isAgain ? 'plain' : 'primary'}
       className={BIG}
       busy={busy}
       onClick={() => void act('POST', 'runs', { kind, ...(seconds === undefined ? {} : { seconds }) })}

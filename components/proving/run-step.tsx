@@ -70,7 +70,7 @@ export function SeenStep() {
           {saw === 'right' && isHeapFan ? 'It blows into the heap’s pipe' : label}
         </Button>
       ))}
-      <RunButton kind="pulse" seconds={10} label="Run once more, 10 s" />
+      <RunButton kind="pulse" seconds={10} label="Run once more, 10 s" isAgain />
     </div>
   );
 }

@@ -15,10 +15,13 @@ function set(next: readonly Said[]): void {
   for (const listener of listeners) listener();
 }
 
+/** More would cover what is being worked at: five points are added in half a minute. */
+const AT_ONCE = 2;
+
 /** Says that something was done: shown for 6 s and read out. Not for failures: these stay beside what failed. */
 export function say(text: string): void {
   const id = nextId++;
-  set([...said, { id, text }]);
+  set([...said, { id, text }].slice(-AT_ONCE));
   setTimeout(() => set(said.filter((one) => one.id !== id)), 6000);
 }
 

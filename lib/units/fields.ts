@@ -15,7 +15,7 @@ import { numberTyped, secondsTyped } from './typed';
 
 /** `minutes`, `seconds` and `hours` are all kept in seconds; they differ in what a bare number means. */
 export type Quantity =
-  'number' | 'temperature' | 'difference' | 'seconds' | 'minutes' | 'hours' | 'litres-per-second';
+  'number' | 'whole' | 'temperature' | 'difference' | 'seconds' | 'minutes' | 'hours' | 'litres-per-second';
 
 export function fieldUnit(quantity: Quantity, preferences: Preferences): string | undefined {
   switch (quantity) {
@@ -31,6 +31,7 @@ export function fieldUnit(quantity: Quantity, preferences: Preferences): string 
     case 'litres-per-second':
       return preferences.flow;
     case 'number':
+    case 'whole':
       return undefined;
   }
 }
@@ -91,6 +92,8 @@ export function fieldValue(text: string, quantity: Quantity, preferences: Prefer
       return clean(isF ? kelvinDifference(bare) : bare);
     case 'litres-per-second':
       return clean(preferences.flow === 'cfm' ? cubicMetresPerSecondFromCfm(bare) * 1000 : bare);
+    case 'whole':
+      return Number.isInteger(bare) ? bare : null;
     default:
       return bare;
   }
@@ -110,6 +113,8 @@ export function unreadable(quantity: Quantity, preferences: Preferences): string
       return 'Give hours, such as 8, or 7 h 30.';
     case 'seconds':
       return 'Give seconds, such as 90, or 2 min.';
+    case 'whole':
+      return 'Give a whole number, such as 4.';
     default: {
       const unit = fieldUnit(quantity, preferences);
       return unit === undefined ? 'Give a number, such as 4.5.' : `Give a number in ${unit}, such as 4.5.`;

@@ -73,9 +73,9 @@ export function channelGroups(yard: Yard): Group[] {
       title: 'Where it is wired',
       columns: 3,
       specs: [
-        { as: 'number', path: 'number', label: 'Channel number', quantity: 'number' },
+        { as: 'number', path: 'number', label: 'Channel number', quantity: 'whole' },
         { as: 'choice', path: 'node', label: 'Node', options: nodeOptions(yard.nodes) },
-        { as: 'number', path: 'relay', label: 'Relay on its board', quantity: 'number' },
+        { as: 'number', path: 'relay', label: 'Relay on its board', quantity: 'whole' },
       ],
     },
     load,

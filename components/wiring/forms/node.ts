@@ -28,7 +28,7 @@ export function nodeGroups(node: FieldNode | null): Group[] {
         as: 'number',
         path: 'channels',
         label: 'Relays on its board',
-        quantity: 'number',
+        quantity: 'whole',
         hint: 'None for a node that only measures: 0.',
       },
     ],

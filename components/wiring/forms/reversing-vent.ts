@@ -6,8 +6,8 @@ const way = (title: string, path: 'open' | 'shut'): Group => ({
   title,
   columns: 2,
   specs: [
-    { as: 'number', path: `${path}.number`, label: `Channel number, to ${path}`, quantity: 'number' },
-    { as: 'number', path: `${path}.relay`, label: `Relay on its board, to ${path}`, quantity: 'number' },
+    { as: 'number', path: `${path}.number`, label: `Channel number, to ${path}`, quantity: 'whole' },
+    { as: 'number', path: `${path}.relay`, label: `Relay on its board, to ${path}`, quantity: 'whole' },
   ],
 });
 
