@@ -98,6 +98,7 @@ it('leaves no child behind when it is killed outright', async () => {
   await until('web and worker are gone', async () => {
     return (await isFree(state.webPort)) && (await isFree(state.workerPort));
   });
+  expect(state.text.match(/pid \d+/g)).toHaveLength(2);
 });
 
 it('ends with 78 and the reason when a part refuses its configuration', async () => {

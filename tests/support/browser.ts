@@ -61,9 +61,7 @@ declare global {
 export async function accessibilityFaults(page: Page): Promise<string[]> {
   await page.evaluate(axeSource);
   // all rules are run; of what passes, only that it passes is kept, which is half of the time
-  const { violations } = await page.evaluate(() =>
-    window.axe.run(document, { resultTypes: ['violations'], preload: false }),
-  );
+  const { violations } = await page.evaluate(() => window.axe.run(document, { resultTypes: ['violations'] }));
   return violations.map(
     ({ id, help, nodes }) => `${id}: ${help} — ${nodes.map((node) => node.target.join(' ')).join(', ')}`,
   );
