@@ -1,7 +1,7 @@
 /** How a board on Modbus TCP or a broker of MQTT is reached, and what is read of a board. */
 import { z } from 'zod';
 import { isWireUnit } from '@/lib/field/units';
-import { finite, Key, wholeSeconds } from './common';
+import { finite, isSeen, Key, SEEN, wholeSeconds } from './common';
 
 const Host = z
   .string()
@@ -18,7 +18,8 @@ const whole = (least: number, most: number) =>
     .max(most, `At most ${most}.`);
 const Port = whole(1, 65_535);
 /** As on the wire, from 0: what a data sheet calls coil 1 or register 40001 is 0. */
-const Address = whole(0, 65_535);
+export const ADDRESS_LAST = 65_535;
+const Address = whole(0, ADDRESS_LAST);
 
 /** Slower than a minute is no guard of a load. */
 const WATCHDOG_LONGEST_S = 60;
@@ -61,6 +62,7 @@ const mqttFields = {
     .trim()
     .min(1, 'Give a name, or leave it out.')
     .max(200, 'At most 200 characters.')
+    .refine(isSeen, SEEN)
     .nullable(),
 };
 /** As it is kept; its password is kept apart, sealed. */

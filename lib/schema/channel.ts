@@ -1,7 +1,7 @@
 /** Channels, what keeps them off, and what a person orders of them. */
 import { z } from 'zod';
 import { plain } from '@/lib/control/plain';
-import { Celsius, finite, Key, Name, wholeSeconds, Why } from './common';
+import { Celsius, finite, Key, Measured, Name, wholeSeconds, Why } from './common';
 
 export const LOAD_KINDS = ['motor', 'vent', 'heater', 'valve', 'lamp', 'other'] as const;
 export const Load = z.strictObject({
@@ -54,7 +54,7 @@ export const channelFields = {
   runProof: z
     .strictObject({
       point: Key,
-      above: z.number().min(0, 'Not under 0: a standing fan would pass for a running one.'),
+      above: Measured.min(0, 'Not under 0: a standing fan would pass for a running one.'),
     })
     .nullable(),
   fallback: z

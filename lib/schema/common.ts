@@ -8,15 +8,37 @@ export const Key = z
     'Use letters, digits, dot, dash or underscore; begin with a letter or digit; 63 at most.',
   );
 
-export const Name = z.string().trim().min(1, 'Give a name.').max(120, 'At most 120 characters.');
+/** Whether there is anything to see: spaces without width and their like leave a row that nobody can press. */
+export const isSeen = (text: string) => /[^\p{C}\p{Z}\p{Default_Ignorable_Code_Point}]/u.test(text);
+export const SEEN = 'Give something that can be seen.';
+const isOneLine = (text: string) => !/[\t\n\r\u2028\u2029]/.test(text);
+
+export const Name = z
+  .string()
+  .trim()
+  .min(1, 'Give a name.')
+  .max(120, 'At most 120 characters.')
+  .refine(isOneLine, 'Give one line, without tabs.')
+  .refine(isSeen, SEEN);
 export const Text = z.string().trim().max(4000, 'At most 4000 characters.');
-export const Why = z.string().trim().min(1, 'Say why in a few words.').max(500, 'At most 500 characters.');
+export const Why = z
+  .string()
+  .trim()
+  .min(1, 'Say why in a few words.')
+  .max(500, 'At most 500 characters.')
+  .refine(isSeen, SEEN);
 
 export const finite = (least: number, most: number, unit: string) =>
   z
     .number({ error: `Give a number in ${unit}.` })
     .min(least, `At least ${least} ${unit}.`)
     .max(most, `At most ${most} ${unit}.`);
+
+/** A value of a point in its own unit: a meter that counts all that a holding ever used stays under it. */
+export const Measured = z
+  .number({ error: 'Give a number.' })
+  .min(-1e9, 'At least −1,000,000,000.')
+  .max(1e9, 'At most 1,000,000,000.');
 
 export const wholeSeconds = (least: number, most: number) =>
   z

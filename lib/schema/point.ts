@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { pointUnits } from '@/lib/field/units';
-import { Key, Name, wholeSeconds } from './common';
+import { isSeen, Key, Measured, Name, SEEN, wholeSeconds } from './common';
 
 export const POINT_ROLES = [
   'house-air',
@@ -71,14 +71,19 @@ export const pointFields = {
   name: Name,
   role: z.enum(POINT_ROLES),
   unit: PointUnit,
-  min: z.number().nullable(),
-  max: z.number().nullable(),
+  min: Measured.nullable(),
+  max: Measured.nullable(),
   staleAfter: wholeSeconds(1, 86_400).nullable(),
-  maxRate: z.number().positive('Above 0 a second, or leave it out.').nullable(),
+  maxRate: Measured.positive('Above 0 a second, or leave it out.').nullable(),
   frozenAfter: wholeSeconds(1, 31 * 86_400).nullable(),
   offset: z.number().min(-50).max(50),
   gain: z.number().min(0.1, 'Between 0.1 and 10.').max(10, 'Between 0.1 and 10.'),
-  sensor: z.string().trim().max(60).nullable(),
+  sensor: z
+    .string()
+    .trim()
+    .max(60)
+    .refine((text) => text === '' || isSeen(text), SEEN)
+    .nullable(),
   derived: Derived.nullable(),
 };
 export const PointCreate = z

@@ -37,11 +37,29 @@ export function parseJson(text: string): unknown {
   } catch {
     throw refuse(text.trim() === '' ? 'This request needs a body in JSON.' : 'The body is not valid JSON.');
   }
-  // NUL and halves of a surrogate pair are valid JSON, and PostgreSQL takes neither in text. What turns the direction of
-  // writing would turn other words of a page or a message with it.
-  if (/[\0\p{Surrogate}\u202a-\u202e\u2066-\u2069]/u.test(everyText(value)))
-    throw refuse('The body holds a character that cannot be kept.');
+  const at = unkeptAt(value);
+  if (at !== null)
+    throw refuse('This holds a character that is no text, and cannot be kept: type it anew.', at.join('.'));
   return value;
+}
+
+/**
+ * NUL and halves of a surrogate pair are valid JSON, and PostgreSQL takes neither in text. The other control characters
+ * nobody types, and some a terminal or a printer obeys. What turns the direction of writing would turn other words of a
+ * page or a message with it.
+ */
+const UNKEPT = /[\0-\x08\v\f\x0e-\x1f\x7f-\x9f\p{Surrogate}\u202a-\u202e\u2066-\u2069]/u;
+
+/** The way to the first text that cannot be kept, or to what has such a name; null where all can. */
+function unkeptAt(value: unknown, way: string[] = []): string[] | null {
+  if (typeof value === 'string') return UNKEPT.test(value) ? way : null;
+  if (typeof value !== 'object' || value === null) return null;
+  for (const [key, inner] of Object.entries(value)) {
+    if (UNKEPT.test(key)) return way;
+    const found = unkeptAt(inner, [...way, key]);
+    if (found !== null) return found;
+  }
+  return null;
 }
 
 const DEEPEST = 60;
@@ -57,16 +75,6 @@ function depthOf(text: string): number {
   return deepest;
 }
 
-function everyText(value: unknown): string {
-  const texts: string[] = [];
-  JSON.stringify(value, (key, inner: unknown) => {
-    texts.push(key);
-    if (typeof inner === 'string') texts.push(inner);
-    return inner;
-  });
-  return texts.join('\n');
-}
-
-function refuse(message: string): Problem {
-  return new Problem('not-valid', { errors: [{ path: '', message }] });
+function refuse(message: string, path = ''): Problem {
+  return new Problem('not-valid', { errors: [{ path, message }] });
 }
