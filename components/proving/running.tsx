@@ -20,7 +20,7 @@ export function Running({ run, isOrdered = true }: { run: RunSeen; isOrdered?: b
           aria-label="Seconds left"
           className="font-mono text-[3.2rem] leading-none tabular-nums"
         >
-          {leftWords(left)}
+          {leftWords(left, run.seconds)}
         </span>
         <span>s left. It ends by itself.</span>
       </p>

@@ -1,5 +1,5 @@
 /** The register map as it is typed: every field text, and what it comes to. */
-import type { Register } from '@/lib/schema/bus';
+import { ADDRESS_LAST, type Register } from '@/lib/schema/bus';
 import { fieldValue } from '@/lib/units/fields';
 import type { Preferences } from '@/lib/units/preferences';
 
@@ -51,7 +51,10 @@ export function withTable(row: RegisterRow, table: string): RegisterRow {
 /** @returns the row as it is sent but for its point, and by field what cannot be read of it */
 export function bodyOfRow(row: RegisterRow, preferences: Preferences): { body: object; errors: Errors } {
   const errors: Errors = {};
-  const number = (field: 'address' | 'scale' | 'offset') => {
+  const address = fieldValue(row.address, 'whole', preferences);
+  if (address === null || address < 0 || address > ADDRESS_LAST)
+    errors['address'] = `Give a whole number from 0 to ${ADDRESS_LAST}, as it is on the wire.`;
+  const number = (field: 'scale' | 'offset') => {
     const typed = row[field].trim();
     // very small scales are kept, and so shown, as 1e-7
     const value = POWER.test(typed) ? Number(typed) : fieldValue(typed, 'number', preferences);
@@ -59,7 +62,7 @@ export function bodyOfRow(row: RegisterRow, preferences: Preferences): { body: o
     return value;
   };
   const { table, type, wordOrder, unit } = row;
-  const numbers = { address: number('address'), scale: number('scale'), offset: number('offset') };
+  const numbers = { address, scale: number('scale'), offset: number('offset') };
   return { body: { table, type, wordOrder, unit: unit.trim(), ...numbers }, errors };
 }
 

@@ -151,8 +151,13 @@ export function fellWords(how: string | null, awayS: number | null): string | nu
   return how === 'seen' ? 'Seen by whoever stood there; this board keeps no count of its own.' : null;
 }
 
-/** A count-down: seconds that are left, upwards. @example leftWords(9400) === '10' */
-export const leftWords = (ms: number): string => decimal(Math.max(0, Math.ceil(ms / 1000)), 0);
+/**
+ * A count-down: seconds that are left, upwards, and never more than were ordered: a phone whose page was made a moment
+ * before the order would begin a run of 60 s at 61.
+ * @example leftWords(9400, 10) === '10'
+ */
+export const leftWords = (ms: number, ofS: number): string =>
+  decimal(Math.min(ofS, Math.max(0, Math.ceil(ms / 1000))), 0);
 
 const PARTS: Record<string, string> = {
   node: 'its node',

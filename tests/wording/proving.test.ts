@@ -53,7 +53,12 @@ describe('a proof in words', () => {
 
   it('names the step that has to come first, and counts the last second as one', () => {
     expect(firstWords('dead')).toBe('First: isolator off and locked, circuit dead at the board.');
-    expect([leftWords(9400), leftWords(1), leftWords(0), leftWords(-500)]).toEqual(['10', '1', '0', '0']);
+    const left = [9400, 1, 0, -500].map((ms) => leftWords(ms, 10));
+    expect(left).toEqual(['10', '1', '0', '0']);
+  });
+
+  it('never counts down from more than was ordered', () => {
+    expect([60_001, 61_400, 60_000, 59_001].map((ms) => leftWords(ms, 60))).toEqual(['60', '60', '60', '60']);
   });
 
   it('tells what was found from the figures that were kept', () => {

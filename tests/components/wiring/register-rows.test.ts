@@ -31,6 +31,26 @@ describe('the register map as it is typed', () => {
     expect(Object.keys(errors).sort()).toEqual(['registers.1.address', 'registers.1.scale']);
   });
 
+  it.each(['0.5', '-1', '65536', '1e2', '', 'four'])(
+    'tells of an address %o what an address is',
+    (address) => {
+      const [row] = rowsOf(registers);
+      const { errors } = bodyOfRows(row === undefined ? [] : [{ ...row, address }], USUAL);
+      expect(errors).toEqual({
+        'registers.0.address': 'Give a whole number from 0 to 65535, as it is on the wire.',
+      });
+    },
+  );
+
+  it('takes the first and the last address that there is', () => {
+    const [row] = rowsOf(registers);
+    const typed = row === undefined ? [] : ['0', '65535'].map((address, id) => ({ ...row, id, address }));
+    expect(bodyOfRows(typed, USUAL)).toMatchObject({
+      body: [{ address: 0 }, { address: 65_535 }],
+      errors: {},
+    });
+  });
+
   it('goes on behind a value of two registers, and turns a coil into a bit', () => {
     const next = rowAfter(rowsOf(registers));
     expect([next.address, next.point, next.id]).toEqual(['6', '', 1]);
