@@ -85,6 +85,25 @@ describe('a change in mid-draw', () => {
     player.step();
     expect(player.says()).toBe('on frost');
   });
+
+  it('that takes the frost limit away ends a frost that holds blind, too', () => {
+    const helped = [channel('fan', 1, { source: 'heap', frostHelp: true })];
+    const limits = (frostLimit: number | null) =>
+      compile({
+        ...config({ channels: helped }),
+        house: { ...house().house, frostLimit, frostAlarm: 1 },
+      });
+    const player = new Player(config({ channels: helped }), { ...cold, bench: 5, air: 5 });
+    player.plan = limits(6);
+    player.step();
+    for (const one of ['bench', 'air']) player.silent.add(one);
+    player.pass(5 * MIN, MIN);
+    expect(player.says()).toBe('on frost');
+    player.plan = limits(null);
+    player.step();
+    expect(player.says()).not.toBe('on frost');
+    expect(player.memory.frost).toMatchObject({ on: false, blindSince: null });
+  });
 });
 
 describe('what is kept with its id', () => {

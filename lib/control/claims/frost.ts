@@ -92,7 +92,9 @@ export function settleFrost(run: Run): void {
     return;
   }
   if (frostLimit !== null) settleContradiction(run, frostLimit);
-  let { on, alarm, blindSince } = before;
+  let { alarm, blindSince } = before;
+  // without a limit there is no frost, blind or not
+  let on = before.on && frostLimit !== null;
   if (run.plan.housePoints.some((index) => isBelieved(run, index))) {
     blindSince = null;
     on = frostLimit !== null && anyUnder(run, on ? frostLimit + ENDS_K : frostLimit);
@@ -103,7 +105,7 @@ export function settleFrost(run: Run): void {
       on = false;
       blindSince = null;
     } else wakeAt(run, blindSince + BLIND_MS);
-  }
+  } else blindSince = null;
   if (on === before.on && alarm === before.alarm && blindSince === before.blindSince) return;
   run.frost = { on, alarm, blindSince, since: on ? (before.since ?? run.at) : null };
 }
