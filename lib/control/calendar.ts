@@ -178,17 +178,25 @@ function eventOf(where: Place, day: number, time: DayTimeOf): number {
   return wallInstant(where, time.kind === 'sunrise' ? day : day + 1, 0);
 }
 
+const QUARTER_MS = 900_000;
+
 /** time.hour, time.month, time.weekday and time.sunUp of a place. */
 export function compileTimeFacts(where: Place): (at: number) => TimeFacts {
   return remembering((at) => {
     const wall = DateTime.fromMillis(wallAt(where, at), { zone: 'utc' });
     const day = dayNumber(where, at);
-    // an hour may be cut by a change of the clock: quarters are edges as the next full hour is
-    const edges = [wallInstant(where, day, (wall.hour + 1) * 60), at + 900_000 - (at % 900_000)];
+    const edges = [hourEnds(where, at, wall.hour)];
     const sunUp = isSunUp(where, day, at, edges);
     const until = Math.min(...edges.filter((edge) => edge > at));
     return { from: at, until, hour: wall.hour, month: wall.month, weekday: wall.weekday, sunUp };
   });
+}
+
+/** A change of the clock may cut an hour at any quarter, or show it once more: each is looked at till another hour shows. */
+function hourEnds(where: Place, at: number, hour: number): number {
+  let edge = at + QUARTER_MS - (at % QUARTER_MS);
+  while (DateTime.fromMillis(wallAt(where, edge), { zone: 'utc' }).hour === hour) edge += QUARTER_MS;
+  return edge;
 }
 
 /** In a northern June the sun of one date may set after midnight, so the days beside it are asked too. */

@@ -5,8 +5,11 @@ import { play } from './play';
 import { entry, type Run } from './run';
 import type { Claim, Observed, State } from './types';
 
-/** Instants looked at: what does not come within so many is too far to be foreseen, and each costs a step. */
-const WAKES = 16;
+/**
+ * Instants looked at: what does not come within so many is too far to be foreseen, and each costs a step. A rule that goes by
+ * the hour wakes its house 24 times a day, and what comes of it within the day is to be found behind them.
+ */
+const WAKES = 48;
 
 export interface Told {
   at: number;

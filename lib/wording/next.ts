@@ -58,7 +58,7 @@ export function nextSentence(next: readonly unknown[], scene: Scene, present: St
   if (event !== undefined) return `${begin(doesWords(event, scene, present))} when ${happens(event, scene)}.`;
   if (reading !== undefined)
     return `${begin(doesWords(reading, scene, present))} if ${passes(reading, scene)}.`;
-  return 'Nothing is due by the clock within a day; a reading or a person may change it.';
+  return 'Nothing is foreseen by the clock; a reading or a person may change it.';
 }
 
 function whenWords(one: NextIf | NextWhen, at: number, scene: Scene, present: State | undefined): string {

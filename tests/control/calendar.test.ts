@@ -113,6 +113,19 @@ describe('periods, seasons and facts of time', () => {
     expect(facts(at('2026-12-31T12:59:59Z'))).toMatchObject({ hour: 23, month: 12, weekday: 4 });
   });
 
+  it('facts hold till the clock shows another hour, or the sun rises or sets', () => {
+    const facts = compileTimeFacts(zone('Europe/Zurich'));
+    const untils = ['2026-12-01T10:07:00Z', '2026-03-29T00:20:00Z', '2026-10-25T00:20:00Z'].map((from) =>
+      new Date(facts(at(from)).until).toISOString(),
+    );
+    // at the end of October the clock there shows two o'clock for two hours, at the end of March not at all
+    expect(untils).toEqual([
+      '2026-12-01T11:00:00.000Z',
+      '2026-03-29T01:00:00.000Z',
+      '2026-10-25T02:00:00.000Z',
+    ]);
+  });
+
   it('the sun is up between sunrise and sunset, after a local midnight too', () => {
     const reykjavik = compileTimeFacts(zone('Atlantic/Reykjavik', 64.1, -21.9));
     expect(reykjavik(at('2026-06-22T00:00:30Z')).sunUp).toBe(true);

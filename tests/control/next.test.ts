@@ -177,3 +177,27 @@ it('a decision without a switching carries its ladder', () => {
     }),
   );
 });
+
+describe('a condition by the clock', () => {
+  const hour = (value: number) => ({ all: [{ fact: 'time.hour', operator: 'equal' as const, value }] });
+  const timed = (value: number) =>
+    new Player(
+      house({
+        channels: [channel('fan', 1), channel('lamp', 2)],
+        rules: [rule('fan', body({ only: hour(value) }))],
+      }),
+      cold,
+    );
+
+  it.each([1, 5, 12, 17, 22])('that begins at hour %i of the day is foreseen from midnight', (value) =>
+    expect(next(timed(value))?.[0]).toEqual({
+      ...{ kind: 'then', at: START + value * H, state: 'on', claim: 'band' },
+    }),
+  );
+
+  it('hides nothing of another load: a hand of six hours ends when it ends', () => {
+    const player = timed(5);
+    player.order({ kind: 'hand', channel: 'lamp', state: 'on', seconds: 6 * 3600, holdInFrost: false });
+    expect(next(player, 'lamp')?.[0]).toMatchObject({ kind: 'then', at: player.now + 6 * H, state: 'off' });
+  });
+});

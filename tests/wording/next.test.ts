@@ -114,6 +114,6 @@ describe('the nearest of it in one sentence', () => {
     ));
   it('says so where nothing is foreseen', () =>
     expect(sentence([], 'off')).toBe(
-      'Nothing is due by the clock within a day; a reading or a person may change it.',
+      'Nothing is foreseen by the clock; a reading or a person may change it.',
     ));
 });
