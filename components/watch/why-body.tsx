@@ -3,8 +3,9 @@ import type { Why } from '@/lib/schema/running';
 import { becauseInstant } from '@/lib/wording/instants';
 import { nextWords } from '@/lib/wording/next';
 import { timeWords } from '@/lib/wording/scene';
-import { followedWords, gapWords, whySentence } from '@/lib/wording/why';
+import { followedWords, whySentence } from '@/lib/wording/why';
 import { useHouse } from './live-house';
+import { GapNow, GapsOver } from './why-gaps';
 import { Ladder } from './why-ladder';
 
 export function WhyBody({ why, at }: { why: Why; at: number | null }) {
@@ -18,11 +19,7 @@ export function WhyBody({ why, at }: { why: Why; at: number | null }) {
   const next = nextWords(why.next, scene, why.state);
   return (
     <>
-      {why.gaps.map((gap) => (
-        <p key={gap.from} className="border-l-4 border-warn pl-3 font-semibold text-warn">
-          {gapWords(gap, scene)}
-        </p>
-      ))}
+      <GapNow gaps={why.gaps} scene={scene} />
       <div aria-live="polite">
         {since === null ? null : (
           <p className="text-soft">{ended === null ? `Since ${since}` : `From ${since} to ${ended}`}</p>
@@ -31,6 +28,7 @@ export function WhyBody({ why, at }: { why: Why; at: number | null }) {
           {whySentence(why.claim, because ?? {}, scene, at !== null)} {followedWords(why, scene)}
         </p>
       </div>
+      <GapsOver gaps={why.gaps} scene={scene} isPast={at !== null} />
       {next.length === 0 ? null : (
         <section aria-label="What comes next">
           <h3 className="font-semibold">

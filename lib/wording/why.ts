@@ -63,12 +63,3 @@ function endedWords({ at, state, claim }: Followed, before: State, scene: Scene)
       : `${CLAIM_NAMES[claim]} ${state === before ? 'kept' : 'turned'} it ${state}`;
   return `It ended at ${when}: ${did}.`;
 }
-
-/** @example "Control was not running from 02:10 to 03:40: nothing was decided in that time." */
-export function gapWords({ from, to }: { from: string; to: string | null }, scene: Scene): string {
-  const began = timeWords(becauseInstant(from), scene) ?? '';
-  const ended = timeWords(becauseInstant(to), scene);
-  return ended === null
-    ? `Control has not run since ${began}: what is shown is how things stood then.`
-    : `Control was not running from ${began} to ${ended}: nothing was decided in that time.`;
-}

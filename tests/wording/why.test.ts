@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { figuresOf } from '@/lib/wording/because-figures';
-import { followedWords, gapWords, whySentence, whyTitle } from '@/lib/wording/why';
+import { followedWords, whySentence, whyTitle } from '@/lib/wording/why';
 import { american, at, scene, spaced } from './scene';
 
 const fan = { key: 'gate-heap-fan', loadKind: 'motor' };
@@ -62,16 +62,6 @@ describe('the panel', () => {
 
   it('tells what was read at the time as read then', () =>
     expect(spaced(whySentence('rest', rest, scene, true))).toContain('(39.9 °C then)'));
-
-  it('says when control did not run, and that it does not', () => {
-    const gap = { from: '2026-11-27T02:10:00Z', to: '2026-11-27T03:40:00Z' };
-    expect(gapWords(gap, scene)).toBe(
-      'Control was not running from 02:10 to 03:40: nothing was decided in that time.',
-    );
-    expect(gapWords({ ...gap, to: null }, scene)).toBe(
-      'Control has not run since 02:10: what is shown is how things stood then.',
-    );
-  });
 });
 
 describe('the figures behind a reason', () => {
