@@ -8,8 +8,12 @@ export const Key = z
     'Use letters, digits, dot, dash or underscore; begin with a letter or digit; 63 at most.',
   );
 
-/** Whether there is anything to see: spaces without width and their like leave a row that nobody can press. */
-export const isSeen = (text: string) => /[^\p{C}\p{Z}\p{Default_Ignorable_Code_Point}]/u.test(text);
+/**
+ * Whether there is anything to see: spaces without width and their like leave a row that nobody can press. Of no text at
+ * all each field says in its own words whether it is missing.
+ */
+export const isSeen = (text: string) =>
+  text === '' || /[^\p{C}\p{Z}\p{Default_Ignorable_Code_Point}]/u.test(text);
 export const SEEN = 'Give something that can be seen.';
 const isOneLine = (text: string) => !/[\t\n\r\u2028\u2029]/.test(text);
 

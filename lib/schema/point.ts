@@ -78,12 +78,7 @@ export const pointFields = {
   frozenAfter: wholeSeconds(1, 31 * 86_400).nullable(),
   offset: z.number().min(-50).max(50),
   gain: z.number().min(0.1, 'Between 0.1 and 10.').max(10, 'Between 0.1 and 10.'),
-  sensor: z
-    .string()
-    .trim()
-    .max(60)
-    .refine((text) => text === '' || isSeen(text), SEEN)
-    .nullable(),
+  sensor: z.string().trim().max(60).refine(isSeen, SEEN).nullable(),
   derived: Derived.nullable(),
 };
 export const PointCreate = z

@@ -20,7 +20,7 @@ const refused: [string, string, Json, string][] = [
   ['a round of what is still to come', 'probe-sets', { ...shown.round, at: '2199-01-01T00:00:00Z' }, 'at'],
   ['an entry of what is no heap', 'heap-entries', { ...entry, source: 'ground-tubes' }, 'source'],
   ['a round in what is no heap', 'probe-sets', { ...shown.round, source: 'ground-tubes' }, 'source'],
-  ['words that turn the writing', 'heap-entries', { ...entry, text: 'dry \u202e yrd' }, ''],
+  ['words that turn the writing', 'heap-entries', { ...entry, text: 'dry \u202e yrd' }, 'text'],
   ['an id of its own make', 'heap-entries', { ...entry, id: '1' }, 'id'],
   [
     'a finding set aside that there is not',
