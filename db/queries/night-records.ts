@@ -176,7 +176,7 @@ export async function nightInputs(
   return { house: { ...common, channels: recorded }, sources: new Map(sources), seen };
 }
 
-/** How far before and after a night its readings reach into it, ms: as long as any of its points is believed. */
+/** How far before and after a night its readings reach into it, ms: the longest that one of its points is believed. */
 function reachOf(yard: YardOfNights): number {
   return Math.max(LEAD_MS, ...pointsOfNights(yard).map((one) => one.holdS * 1000));
 }

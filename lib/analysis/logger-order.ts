@@ -44,8 +44,9 @@ interface Place {
 }
 
 /**
- * The leftmost column with a time in at least half as many lines as any other, so that a date in the logger's own story is
- * not taken for the first reading's. Of days counted by a spreadsheet only one whose head says so: lux are such figures too.
+ * The leftmost column with a time in at least half as many lines as the column with most of them, so that a date in the
+ * logger's own story is not taken for the first reading's. Of days counted by a spreadsheet only one whose head says so:
+ * lux are such figures too.
  */
 function placeOf(table: Table, order: DateOrder): Place | null {
   const rows = table.rows.slice(0, SAMPLED);

@@ -183,7 +183,7 @@ const QUARTER_MS = 900_000;
 /** time.hour, time.month, time.weekday and time.sunUp of a place. */
 export function compileTimeFacts(where: Place): (at: number) => TimeFacts {
   return remembering((at) => {
-    const wall = DateTime.fromMillis(wallAt(where, at), { zone: 'utc' });
+    const wall = shownOn(where, at);
     const day = dayNumber(where, at);
     const edges = [hourEnds(where, at, wall.hour)];
     const sunUp = isSunUp(where, day, at, edges);
@@ -192,10 +192,12 @@ export function compileTimeFacts(where: Place): (at: number) => TimeFacts {
   });
 }
 
+const shownOn = (where: Place, at: number) => DateTime.fromMillis(wallAt(where, at), { zone: 'utc' });
+
 /** A change of the clock may cut an hour at any quarter, or show it once more: each is looked at till another hour shows. */
 function hourEnds(where: Place, at: number, hour: number): number {
   let edge = at + QUARTER_MS - (at % QUARTER_MS);
-  while (DateTime.fromMillis(wallAt(where, edge), { zone: 'utc' }).hour === hour) edge += QUARTER_MS;
+  while (shownOn(where, edge).hour === hour) edge += QUARTER_MS;
   return edge;
 }
 

@@ -195,6 +195,8 @@ describe('All houses', () => {
     const page = await context.newPage();
     await page.setViewportSize({ width, height: 800 });
     await page.goto('/houses');
+    for (const name of ['Long house', 'Prop house'])
+      expect(await page.getByRole('heading', { level: 2, name, exact: true }).count()).toBe(1);
     // other files may have made houses of their own by now
     const houses = (await (await page.request.get('/api/v1/houses')).json()) as { items: unknown[] };
     expect(houses.items.length).toBeGreaterThanOrEqual(2);
