@@ -40,7 +40,7 @@ export function SendInPieces<One extends Begun>({
 
   async function start(file: File) {
     setFailure(undefined);
-    if (file.size === 0) return setFailure('This file is empty.');
+    if (file.size === 0) return setFailure('This file is empty; choose one that is not.');
     if (file.size > most.bytes) return setFailure(`This file has ${megabytes(file.size)}; ${most.words}`);
     let one = unfinished;
     if (one !== null && (one.bytes !== file.size || one.name !== file.name))

@@ -7,9 +7,13 @@ const OFFSET_CELL = /^\s*(?:utc|gmt)\s*[+\-−–]\s*\d{1,2}(?::?\d{2})?\s*$/i;
 export function headRows(rows: readonly string[][], first: number, width: number): string[][] {
   return rows
     .slice(Math.max(0, first - 3), first)
-    .filter((cells) => cells.length >= width - 1)
+    .filter((cells, k, near) => cells.length >= width - 1 && (k === near.length - 1 || !isPaddedStory(cells)))
     .map((cells) => joined(cells, width));
 }
+
+/** "Logger 7;;": a spreadsheet fills every line up to the table's width, the story's too. */
+const isPaddedStory = (cells: readonly string[]): boolean =>
+  cells.length > 2 && cells.filter((cell) => cell.trim() !== '').length < 2;
 
 /** "Date Time, GMT-07:00" is parted by its comma where nobody quoted it, and every head behind it is a column off. */
 function joined(cells: string[], width: number): string[] {

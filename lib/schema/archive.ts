@@ -106,7 +106,11 @@ export const ArchiveList = listOf(Archive);
 
 export const ArchiveSend = z.strictObject({
   name: z.string().trim().min(1, 'Give the file’s name.').max(200, 'At most 200 characters.'),
-  bytes: z.number().int().min(1, 'This file is empty.').max(LARGEST_ARCHIVE, 'At most 4 GiB.'),
+  bytes: z
+    .number()
+    .int()
+    .min(1, 'This file is empty; choose one that is not.')
+    .max(LARGEST_ARCHIVE, 'At most 4 GiB.'),
 });
 
 export const ArchiveBring = z.strictObject({ name: Name });

@@ -14,7 +14,7 @@ export const ImportCreate = z.strictObject({
   bytes: z
     .number()
     .int()
-    .min(1, 'This file is empty.')
+    .min(1, 'This file is empty; choose one that is not.')
     .max(LARGEST_FILE, 'At most 200 MiB; split the file by seasons and bring the parts in one by one.'),
 });
 

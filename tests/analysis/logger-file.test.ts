@@ -38,6 +38,15 @@ describe('what is understood', () => {
     ]);
   });
 
+  it('of a file whose story was filled up to the width of its table', () => {
+    const padded = 'Logger 7;;\nDate;Bench 1;Humidity\n;°C;%RH\n26.11.2026 02:30;4,5;91\n';
+    expect(guess(padded).columns.map((column) => column.head)).toEqual([
+      'Date',
+      'Bench 1 °C',
+      'Humidity %RH',
+    ]);
+  });
+
   it('of an American file in °F, whose last line has no end', () => {
     const { layout } = guess(AMERICAN, 'America/Denver');
     expect(layout).toMatchObject({ delimiter: ',', decimal: '.', headLines: 1, timeColumns: [0] });
