@@ -20,7 +20,7 @@ const ceilMs = (ms: number): number => Math.ceil(ms - 1e-6);
 const inSeason = (run: Run, rule: number): boolean => run.calendars[rule]?.inSeason === true;
 
 /** Whether a rule's rest counts: those in season do; of all, if none is. */
-function counts(run: Run, rules: readonly number[], rule: number): boolean {
+export function counts(run: Run, rules: readonly number[], rule: number): boolean {
   return inSeason(run, rule) || !rules.some((one) => inSeason(run, one));
 }
 

@@ -90,7 +90,7 @@ const newPoint = (id: string): ParkedPoint => ({
   reading: NO_READING,
 });
 
-const newRule = (id: string): RuleMemory => ({ id, latch: false, using: 0 });
+const newRule = (id: string): RuleMemory => ({ id, latch: false, using: 0, gainLowSince: null });
 
 const newSource = (id: string, at: number): SourceMemory => ({
   id,

@@ -1,5 +1,12 @@
 /** Memories of earlier versions, and what makes today's of them. A step only knows today's. */
-import { emptyMemory, MEMORY_VERSION, type Memory, type ParkedPoint, type PointMemory } from './memory';
+import {
+  emptyMemory,
+  MEMORY_VERSION,
+  type Memory,
+  type ParkedPoint,
+  type PointMemory,
+  type RuleMemory,
+} from './memory';
 import { inLists } from './readings';
 
 /**
@@ -16,7 +23,22 @@ export function migrateMemory(json: unknown): Memory {
       `Memory of version ${String(version)} is unknown here; this code knows up to ${MEMORY_VERSION}.`,
     );
   // Written by this code alone and checked by its version; entries that lack a field are filled from an empty one.
-  return { ...emptyMemory(), ...(version === 1 ? ofVersion1(json as MemoryV1) : (json as Memory)) };
+  return withGainByRule({
+    ...emptyMemory(),
+    ...(version === 1 ? ofVersion1(json as MemoryV1) : (json as Memory)),
+  });
+}
+
+/**
+ * Want of gain was first kept by channel alone. Where there was none, no rule had any; where there was, which rule's it
+ * was is not said, and a rule that finds its gain low takes it for its own (least-gain.ts).
+ */
+function withGainByRule(memory: Memory): Memory {
+  if (memory.channels.some(({ gainLowSince }) => typeof gainLowSince === 'number')) return memory;
+  const filled = (rules: RuleMemory[]): RuleMemory[] =>
+    rules.map((rule) => ('gainLowSince' in rule ? rule : { ...rule, gainLowSince: null }));
+  const { rules, parked } = memory;
+  return { ...memory, rules: filled(rules), parked: { ...parked, rules: filled(parked.rules) } };
 }
 
 /** Version 1 kept a point's reading in its entry. */

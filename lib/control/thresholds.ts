@@ -5,6 +5,7 @@
 import type { RuleCalendar } from './calendar';
 import { waitingRules } from './credit';
 import { coldestPoint, ENDS_K } from './claims/frost';
+import { gainAsked } from './least-gain';
 import { AGAIN_K as LIMIT_AGAIN_K } from './claims/limit';
 import { AGAIN_K as FLOOR_AGAIN_K } from './claims/source-guard';
 import type { Condition, ConditionNode } from './rule-body';
@@ -160,7 +161,7 @@ function highLimit(run: Run, channel: number): Threshold[] {
 }
 
 function leastGain(run: Run, channel: number, rule: number): Threshold[] {
-  const gain = entry(run.plan.rules, rule).rest?.leastGain ?? null;
+  const gain = gainAsked(run, channel, rule);
   if (gain === null || gain.intake === null || entry(run.channels, channel).counted === 'off') return [];
   const intake = valueOf(run, gain.intake);
   const back = gain.return === null ? null : valueOf(run, gain.return);

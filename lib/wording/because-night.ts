@@ -73,7 +73,9 @@ export function restWords(reason: Reason<'rest'>, scene: Scene): string {
       );
     case 'no-gain':
       return said(
-        `The loop brought less than ${difference(reason.leastGainK ?? null, scene.preferences)} of warmth, so the draw was ended.`,
+        reason.leastGainK === undefined
+          ? 'The loop brought too little warmth, so the draw was ended.'
+          : `The loop brought less than ${difference(reason.leastGainK, scene.preferences)} of warmth, so the draw was ended.`,
         reason.recovery === undefined ? until !== null && `Rests till ${until}.` : restTill(reason, scene),
         sooner,
       );

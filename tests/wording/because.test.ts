@@ -62,6 +62,10 @@ describe('a rest says', () => {
         until: at('06:20'),
       }),
     ).toBe('The loop brought less than 3.0 °C of warmth, so the draw was ended. Rests till 06:20.'));
+  it('the same where the figure was not kept', () =>
+    expect(words('rest', { cause: 'no-gain', source: 'gate-heap', credit: 0, until: at('06:20') })).toBe(
+      'The loop brought too little warmth, so the draw was ended. Rests till 06:20.',
+    ));
   it('that what is left is worth no start', () =>
     expect(
       words('rest', {

@@ -117,13 +117,12 @@ function because(run: Run, channel: number): RestReason {
       ? { frostBreaksBelow: frostLimit }
       : {}),
   };
-  const gain = leastGainOf(run, channel);
-  if (memory.resting && memory.restWhy === 'no-gain' && gain.leastGainK !== undefined)
-    return { ...common, cause: 'no-gain', ...gain, ...restTimes(run, place) };
+  if (memory.resting && memory.restWhy === 'no-gain')
+    return { ...common, cause: 'no-gain', ...figure(memory.restGainK), ...restTimes(run, place) };
   if (cause === 'credit-spent') return { ...common, ...restTimes(run, place) };
   if (cause === 'no-gain') {
-    const { noGainUntil } = entry(run.channels, channel);
-    return { ...common, ...gain, restUntil: noGainUntil, until: noGainUntil };
+    const { noGainUntil, noGainK } = entry(run.channels, channel);
+    return { ...common, ...figure(noGainK), restUntil: noGainUntil, until: noGainUntil };
   }
   const drawnS = usedMs(memory, run.at) / 1000;
   const limitS = source.dailyLimitMs === null ? null : source.dailyLimitMs / 1000;
@@ -133,13 +132,9 @@ function because(run: Run, channel: number): RestReason {
   return { ...common, drawnS, limitS, leastOnS: minOnMs / 1000, worthS, until: null };
 }
 
-function leastGainOf(run: Run, channel: number): { leastGainK?: number } {
-  const rules = entry(run.plan.channels, channel).rules.map(
-    (rule) => entry(run.plan.rules, rule).rest?.leastGain?.kelvin,
-  );
-  const kelvin = rules.find((one) => one !== undefined);
-  return kelvin === undefined ? {} : { leastGainK: kelvin };
-}
+/** The figure that ended the draw, as it was kept then: rules and seasons may be others by now. */
+const figure = (leastGainK: number | undefined): { leastGainK?: number } =>
+  leastGainK === undefined ? {} : { leastGainK };
 
 type RestTimes = Pick<
   RestReason,
