@@ -88,7 +88,7 @@ export interface RuleMemory {
   latch: boolean;
   /** Which point is in use: 0 the rule's own, 1 its first stand-in, … */
   using: number;
-  /** Since when its channel's draw has been without the rule's least gain; memories of before this was kept by rule lack it. */
+  /** Its channel's draw has been without its least gain since; memories of before this was kept by rule lack it. */
   gainLowSince?: number | null;
 }
 
@@ -102,7 +102,7 @@ export interface SourceMemory {
   /** Beginning of the undrawn time of this rest; null while not resting or while something draws in it. */
   restSince: number | null;
   restWhy: 'credit-spent' | 'no-gain' | null;
-  /** no-gain: the least gain that the draw was without; memories of before this was kept lack it. */
+  /** The least gain that the draw was without; memories of before this was kept lack it. */
   restGainK?: number;
   /** The last rest ended only by its longest time. */
   ranToMost: boolean;
@@ -162,7 +162,6 @@ export interface ChannelMemory {
   ranLongest: { at: number; wantedOff: boolean } | null;
   /** None of its rules has had a usable point since. */
   pointDeadSince: number | null;
-  /** The earliest of its rules'. */
   gainLowSince: number | null;
   noGainUntil: number | null;
   /** The least gain that its draw was without when that ended it last; absent: none ever did, or it was before this was kept. */
