@@ -57,18 +57,25 @@ const EVERY = '*';
 interface Pools {
   tenant?: pg.Pool;
   every?: pg.Pool;
+  lead?: pg.Pool;
 }
 // A bundler may load this module twice in one process; the pools stay one.
 const pools: Pools = ((globalThis as { middenwardPools?: Pools }).middenwardPools ??= {});
 
-function makePool(holding: string): pg.Pool {
+/** How long a query may last, real ms. */
+const QUERY_MS = 30_000;
+/** The lead's own: a leader has to know well within its lease (15 s) that the database is away. */
+const LEAD_QUERY_MS = 2000;
+
+function makePool(holding: string, more: pg.PoolConfig = {}): pg.Pool {
   const pool = new pg.Pool({
     connectionString: env().DATABASE_URL,
     max: 10,
     connectionTimeoutMillis: 2000,
-    query_timeout: 30_000,
+    query_timeout: QUERY_MS,
     idleTimeoutMillis: 30_000,
     options: `-c app.holding=${holding} -c timezone=UTC`,
+    ...more,
   });
   // Without a listener the loss of an idle connection would end the process.
   pool.on('error', () => undefined);
@@ -112,6 +119,15 @@ export function everyHolding(): Db {
   return drizzle({ client: pools.every, schema });
 }
 
+/**
+ * For the lead alone: it waits neither for a database that hangs nor for a connection that others hold. One connection, so
+ * that a try after one that broke has a fresh one.
+ */
+export function leadDb(): Db {
+  pools.lead ??= makePool(EVERY, { max: 1, query_timeout: LEAD_QUERY_MS });
+  return drizzle({ client: pools.lead, schema });
+}
+
 /** The pool below `everyHolding`, for COPY and LISTEN, which drizzle does not speak. */
 export function everyPool(): pg.Pool {
   pools.every ??= makePool(EVERY);
@@ -119,8 +135,9 @@ export function everyPool(): pg.Pool {
 }
 
 export async function closePools(): Promise<void> {
-  const closing = [pools.tenant, pools.every].filter((pool) => pool !== undefined);
+  const closing = [pools.tenant, pools.every, pools.lead].filter((pool) => pool !== undefined);
   delete pools.tenant;
   delete pools.every;
+  delete pools.lead;
   await Promise.all(closing.map((pool) => pool.end()));
 }

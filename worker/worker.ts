@@ -2,7 +2,6 @@
 import type http from 'node:http';
 import { tellOfGap } from './alarms/gap';
 import { AlarmKeeper } from './alarms/keeper';
-import { LEASE_S } from '@/db/queries/leader';
 import type { Base } from './base';
 import { keepGap } from './control/gap';
 import { Journal } from './control/journal';
@@ -53,19 +52,26 @@ export async function startWorker(base: Base, instance: string, port: number): P
   const buses = new Buses(
     {
       ...{ ...base, ingest, gate, epoch: () => lead.epoch ?? 0 },
-      isSure: () => lead.epoch !== null && (lead.heartbeatAgeS ?? Infinity) < LEASE_S,
+      isSure: () => lead.isSure,
+      mayDrive: () => lead.mayDrive,
     },
     houses,
   );
   const jobs = new Jobs({ ...base, houses, ingest, isLeading });
+  const tellOfFormer = async (heartbeatAt: number | null, wasReleased: boolean) => {
+    await keepGap(base, heartbeatAt);
+    await tellOfGap(base, wasReleased ? null : heartbeatAt);
+  };
   const lead: Lead = new Lead(base, instance, {
     lastStepAt: () => houses.lastStepAt(),
     onLead: async ({ formerHeartbeatAt, wasReleased }) => {
       await houses.lead(formerHeartbeatAt);
       buses.start();
       jobs.start();
-      await keepGap(base, formerHeartbeatAt);
-      await tellOfGap(base, wasReleased ? null : formerHeartbeatAt);
+      // not waited for: the lead is renewed after this, and a database that hangs just now must not hold that up
+      tellOfFormer(formerHeartbeatAt, wasReleased).catch((error: unknown) => {
+        log.warn({ err: error }, 'the time in which nobody led cannot be told of');
+      });
     },
     onLost: () => {
       jobs.stop();
@@ -141,6 +147,7 @@ export async function startWorker(base: Base, instance: string, port: number): P
     stop: async () => {
       listener.stop();
       jobs.stop();
+      await lead.know();
       await buses.stop(isLeading());
       hub.closeAll();
       gate.closeAll();

@@ -46,7 +46,7 @@ async function opened(
   await once(server, 'listening');
   const { port } = server.address() as net.AddressInfo;
   const settings = { host: '127.0.0.1', port, unit: UNIT, timeout: 1, firstCoil: 0, watchdog: null };
-  const line = await ModbusLine.open(settings, { heard: () => undefined, lost });
+  const line = await ModbusLine.open(settings, { heard: () => undefined, mayWrite: () => true, lost });
   lines.push(line);
   await until('the board has taken it', () => isCome);
   return { line, requests, server };
@@ -121,7 +121,7 @@ describe('a line that is not well', () => {
 
   it('to where nothing listens is not opened, in words', async () => {
     const settings = { host: '127.0.0.1', port: 1, unit: 1, timeout: 1, firstCoil: 0, watchdog: null };
-    const watch = { heard: () => undefined, lost: () => undefined };
+    const watch = { heard: () => undefined, mayWrite: () => true, lost: () => undefined };
     await expect(ModbusLine.open(settings, watch)).rejects.toThrow('nothing listens there');
   });
 });

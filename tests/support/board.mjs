@@ -15,6 +15,8 @@ const state = {
   /** Every write of a coil, in order. */
   writes: [],
   feeds: 0,
+  /** Registers that somebody has asked for. */
+  reads: 0,
 };
 
 /** Illegal data address: exception 2 by the protocol's section 7. */
@@ -33,7 +35,10 @@ const server = new modbus.ServerTCP(
   {
     getCoil: (address) => at(state.coils, address),
     getDiscreteInput: (address) => at(state.discrete, address),
-    getInputRegister: (address) => at(state.input, address),
+    getInputRegister: (address) => {
+      state.reads += 1;
+      return at(state.input, address);
+    },
     getHoldingRegister: (address) => at(state.holding, address),
     setCoil: (address, isOn) => {
       at(state.coils, address);

@@ -4,6 +4,7 @@ import net from 'node:net';
 export class CutLine {
   private readonly sockets = new Set<net.Socket>();
   private isCut = false;
+  private isSilent = false;
 
   private constructor(
     private readonly server: net.Server,
@@ -28,8 +29,16 @@ export class CutLine {
     for (const socket of this.sockets) socket.destroy();
   }
 
+  /** Nothing is carried any more and nothing said of it: connections stand, new ones are taken, and nobody answers. */
+  fallSilent(): void {
+    this.isSilent = true;
+    for (const socket of this.sockets) socket.unpipe().pause();
+  }
+
   mend(): void {
+    if (this.isSilent) for (const socket of this.sockets) socket.destroy();
     this.isCut = false;
+    this.isSilent = false;
   }
 
   close(): void {
@@ -40,6 +49,10 @@ export class CutLine {
   private carry(socket: net.Socket, port: number): void {
     socket.on('error', () => socket.destroy());
     if (this.isCut) return void socket.destroy();
+    if (this.isSilent) {
+      this.sockets.add(socket);
+      return void socket.on('close', () => this.sockets.delete(socket));
+    }
     const inner = net.connect(port, '127.0.0.1');
     inner.on('error', () => inner.destroy());
     for (const [one, other] of [

@@ -8,6 +8,7 @@ export interface BoardState {
   holding: number[];
   writes: [number, boolean][];
   feeds: number;
+  reads: number;
 }
 type Set =
   ['coils' | 'discrete', number, boolean] | ['input' | 'holding', number, number] | ['refuses', 0, number[]];

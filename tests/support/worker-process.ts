@@ -11,6 +11,8 @@ export interface WorkerHealth {
   leader: boolean;
   epoch: number | null;
   database: boolean;
+  /** Seconds since it last renewed its lead. */
+  heartbeat: number | null;
 }
 
 export class WorkerProcess {

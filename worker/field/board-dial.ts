@@ -32,6 +32,7 @@ export class BoardDial {
       const line = await ModbusLine.open(this.settings, {
         heard: () => this.node.house.nodes.heard(this.node.nodeId),
         lost: this.on.lost,
+        mayWrite: this.deps.mayDrive,
       });
       await this.on.first(line).catch((error: unknown) => {
         line.close();

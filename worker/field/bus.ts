@@ -12,6 +12,8 @@ export interface BusDeps extends Base {
   epoch: () => number;
   /** Whether nobody else can lead by now: the lead was renewed in time. */
   isSure: () => boolean;
+  /** Whether it may write to what keeps no command numbers: it is sure, or has just found the database away. */
+  mayDrive: () => boolean;
 }
 
 export interface Bus {

@@ -20,6 +20,8 @@ export interface LineWatch {
   heard: () => void;
   /** Runs once: the connection is gone, with the reason. */
   lost: (why: string) => void;
+  /** Asked right before each write, however long that waited in the queue or the process stood still. */
+  mayWrite: () => boolean;
 }
 
 export class ModbusLine {
@@ -69,11 +71,11 @@ export class ModbusLine {
   }
 
   async writeCoil(address: number, isOn: boolean): Promise<void> {
-    await this.ask(() => this.client.writeCoil(address, isOn));
+    await this.ask(() => this.client.writeCoil(address, isOn), true);
   }
 
   async writeRegister(address: number, value: number): Promise<void> {
-    await this.ask(() => this.client.writeRegister(address, value));
+    await this.ask(() => this.client.writeRegister(address, value), true);
   }
 
   close(): void {
@@ -82,14 +84,15 @@ export class ModbusLine {
   }
 
   /** Boards answer one request after another; some drop a second one that comes meanwhile. */
-  private ask<T>(request: () => Promise<T>): Promise<T> {
-    const asked = this.tail.then(() => this.once(request));
+  private ask<T>(request: () => Promise<T>, isWrite = false): Promise<T> {
+    const asked = this.tail.then(() => this.once(request, isWrite));
     this.tail = asked.catch(() => undefined);
     return asked;
   }
 
-  private async once<T>(request: () => Promise<T>): Promise<T> {
+  private async once<T>(request: () => Promise<T>, isWrite: boolean): Promise<T> {
     if (this.gone !== null) throw new Error(this.gone);
+    if (isWrite && !this.watch.mayWrite()) throw new Error('this worker may not lead any more');
     try {
       const answer = await request();
       this.unanswered = 0;

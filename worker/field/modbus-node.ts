@@ -9,6 +9,7 @@ import type { Cancel } from '../clock';
 import type { CommandLink } from '../control/command-link';
 import { BoardCoils } from './board-coils';
 import { BoardDial, errorWords } from './board-dial';
+import { BoardFence } from './board-fence';
 import { BoardLease } from './board-lease';
 import { BoardReadings } from './board-readings';
 import { wiringOf, type Bus, type BusDeps, type BusNode } from './bus';
@@ -26,8 +27,6 @@ export class ModbusNode implements Bus, CommandLink {
   seen: { seq: number; at: number } | null = null;
   private seq = 0;
   private line: ModbusLine | null = null;
-  /** Somebody else drives this board: its coils are left alone. */
-  private isLeft = false;
   private busy = false;
   private underWay: Promise<void> = Promise.resolve();
   private asked = false;
@@ -36,6 +35,7 @@ export class ModbusNode implements Bus, CommandLink {
   private cancels: Cancel[] = [];
   private readonly board: BoardCoils;
   private readonly lease: BoardLease;
+  private readonly fence: BoardFence;
   private readonly readings: BoardReadings;
   private readonly link: BoardDial;
 
@@ -50,6 +50,7 @@ export class ModbusNode implements Bus, CommandLink {
       (relay) => this.isBarred(relay),
       (ms) => new Promise((resolve) => void deps.clock.after(ms, resolve)),
     );
+    this.fence = new BoardFence(deps, node.nodeId);
     this.lease = new BoardLease(deps.clock, () => this.endLease());
     this.readings = new BoardReadings(node, deps);
     this.link = new BoardDial(node, settings, deps, {
@@ -77,8 +78,8 @@ export class ModbusNode implements Bus, CommandLink {
 
   sendCommand(frame: CommandFrame, madeAtMs: number): void {
     const { clock, metrics } = this.deps;
-    if (clock.monotonicMs() - madeAtMs > COMMAND_AGE_MS || frame.seen !== this.seen?.seq || this.isLeft)
-      return metrics.add('commands_withheld_total');
+    const isStale = clock.monotonicMs() - madeAtMs > COMMAND_AGE_MS || frame.seen !== this.seen?.seq;
+    if (isStale || this.fence.isShut) return metrics.add('commands_withheld_total');
     if (!this.board.take(frame)) return;
     metrics.add('commands_sent_total');
     this.lease.runFrom(this.reportedAtMs);
@@ -97,7 +98,7 @@ export class ModbusNode implements Bus, CommandLink {
     this.line = null;
     if (line === null) return;
     // nobody else would: such a board keeps a fan running for ever
-    if (isEnd && this.settings.watchdog === null && !this.isLeft) {
+    if (isEnd && this.settings.watchdog === null && !this.fence.isShut) {
       const limit = new Promise<void>((resolve) => void this.deps.clock.after(END_LIMIT_MS, resolve));
       // what is being written just now would put a coil on behind our back
       const dropped = this.underWay.then(() => this.board.drop(line)).catch(() => false);
@@ -113,7 +114,7 @@ export class ModbusNode implements Bus, CommandLink {
     const { wiring } = this;
     if (wiring === undefined) return line.close();
     this.line = line;
-    this.isLeft = false;
+    this.fence.openIfSure();
     this.lease.runFrom(clock.monotonicMs());
     house.nodes.attach(nodeId, this);
     const { host, port, unit } = this.settings;
@@ -154,28 +155,23 @@ export class ModbusNode implements Bus, CommandLink {
   }
 
   private look(): void {
-    if (this.isLeft && this.deps.isSure()) this.isLeft = false;
+    this.fence.openIfSure();
     if (this.lease.isOver) this.endLease();
     this.run(async (line) => {
-      const isMoved = await this.board.read(line);
-      // cut off from the database, and the board is moved by somebody: another worker leads
-      if (isMoved && !this.deps.isSure()) {
-        this.isLeft = true;
-        this.deps.log.warn({ node: this.node.nodeId }, 'somebody else drives this board; it is left to them');
-      }
+      this.fence.seen(await this.board.read(line));
       this.report();
     });
   }
 
   /** Asked for again when what is under way is done, should it be. */
   private endLease(): void {
-    if (!this.lease.isOver || this.isLeft) return;
+    if (!this.lease.isOver || this.fence.isShut) return;
     if (this.busy) this.isDropDue = true;
     else this.run((line) => this.dropAll(line));
   }
 
   private async dropAll(line: ModbusLine): Promise<void> {
-    if (await this.board.drop(line))
+    if ((await this.fence.mayWrite(() => this.board.read(line))) && (await this.board.drop(line)))
       this.deps.log.warn({ node: this.node.nodeId }, 'a lease ran out; coils dropped');
     this.report();
   }
@@ -185,6 +181,7 @@ export class ModbusNode implements Bus, CommandLink {
     this.run(async (line) => {
       while (this.asked) {
         this.asked = false;
+        if (!(await this.fence.mayWrite(() => this.board.read(line)))) return this.report();
         const before = JSON.stringify(this.board.coils);
         const { refused } = await this.board.apply(line);
         this.readings.tellRefused(refused);
@@ -215,7 +212,7 @@ export class ModbusNode implements Bus, CommandLink {
   /** Only while the lease holds: a house that is not controlled lets its board drop. */
   private async feed(): Promise<void> {
     const { watchdog } = this.settings;
-    if (watchdog === null || this.lease.isOver || this.isLeft || this.line === null) return;
+    if (watchdog === null || this.lease.isOver || this.fence.isShut || this.line === null) return;
     const { house, nodeId } = this.node;
     await this.line.writeRegister(watchdog.address, watchdog.value).then(
       () => house.nodes.tellLink(nodeId, null),
