@@ -2,6 +2,7 @@
 // they were read in the same moment.
 import type { BrowserContext, Page } from 'playwright-core';
 import { describe, expect, it, vi } from 'vitest';
+import { round } from '@/lib/analysis/rounding';
 import { count, energy, temperature } from '@/lib/units/format';
 import { USUAL } from '@/lib/units/preferences';
 import { duration } from '@/lib/units/time';
@@ -61,15 +62,12 @@ describe.each([
       const heat = energy(own.heat?.kWh ?? null, places, own.onSeconds === 0 ? null : own.heat?.sd);
       // every source of a house tells the same lowest of it
       const { lowest } = own;
-      // as rows show it: who adds them up gets the total
-      const electricity = tonight.reduce(
-        (sum, night) => sum + Math.round((night.electricity?.kWh ?? 0) * 1000) / 1000,
-        0,
-      );
+      // nights are told to 0.1 Wh: their sum is rounded once, where it is shown, and not row by row before
+      const electricity = tonight.reduce((sum, night) => sum + (night.electricity?.kWh ?? 0), 0);
       expect(shown).toMatchObject({
         [`Heat from ${name}`]: plain(heat),
         [`${name} ran`]: plain(`${duration(own.onSeconds)} ${count(own.starts, 'start')}`),
-        'Electricity for it': plain(energy(electricity, 3)),
+        'Electricity for it': plain(energy(round(electricity, 4), 3)),
         'Lowest in the house':
           lowest === null
             ? 'not known'
