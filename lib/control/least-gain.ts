@@ -41,16 +41,16 @@ export function settleGain(run: Run, channel: number): boolean {
   const { source, rules } = entry(run.plan.channels, channel);
   if (source === null) return false;
   const memory = entry(run.channels, channel);
-  let { noGainUntil, gainLowSince } = memory;
+  let { noGainUntil } = memory;
   if (noGainUntil !== null && run.at >= noGainUntil) noGainUntil = null;
   if (noGainUntil !== null) dueAt(run, noGainUntil);
-  gainLowSince = null;
+  const isDrawing = draws(run, channel);
+  let gainLowSince: number | null = null;
   let noGainK: number | null = null;
   for (const rule of rules) {
-    const { rest } = entry(run.plan.rules, rule);
-    const gain = draws(run, channel) ? gainAsked(run, channel, rule) : null;
+    const gain = isDrawing ? gainAsked(run, channel, rule) : null;
     const since = gain === null ? null : lowSince(run, memory, rule, gain);
-    if (rest !== null && rest.leastGain !== null) keepLow(run, rule, since);
+    keepLow(run, rule, since);
     if (since === null || gain === null) continue;
     gainLowSince = Math.min(gainLowSince ?? since, since);
     // of two in the same instant the greater says more

@@ -1,21 +1,9 @@
 /** Several least gains of one channel, and the figure that is told of the one that decided. On paper; the doubt is 120 s. */
 import { describe, expect, it } from 'vitest';
-import { body, channel, house, point, rest, rule, S, source, START } from './house';
+import { cold, config, gain } from './gain-house';
+import { body, rest, rule, S, START } from './house';
 import { Player } from './player';
 import { hand, holds } from './table';
-
-const cold = { bench: 3, air: 10, core: 50, base: 40, in: 5, out: 5 };
-const gain = { kelvin: 3, after: 900, intake: 'in', return: 'out' };
-const config = () =>
-  house({
-    points: [...house().points, point('in', 'loop-intake'), point('out', 'loop-return')],
-    sources: [source('heap')],
-    channels: [channel('fan', 1, { source: 'heap' }), channel('second', 2, { source: 'heap' })],
-    rules: [
-      rule('fan', body({ rest: rest(7200, 1200, { leastGain: gain }) })),
-      rule('second', body({ point: 'air', rest: rest(7200, 1200) })),
-    ],
-  });
 
 /** Two rules of one fan that both want it on, each with its least gain; the winter's stands first. */
 const other = { kelvin: 5, after: 1800, intake: 'in', return: 'out' };

@@ -1,23 +1,9 @@
 /** A loop that moves air and no heat: least gain to the second. On paper; the wait is 900 s and the doubt 120 s. */
 import { describe, expect, it } from 'vitest';
-import { body, channel, house, point, rest, rule, S, source, START } from './house';
+import { cold, config, gain } from './gain-house';
+import { body, point, rest, rule, S, START } from './house';
 import { Player } from './player';
 import { hand, holds, silent, speaking } from './table';
-
-const cold = { bench: 3, air: 10, core: 50, base: 40, in: 5, out: 5 };
-const gain = { kelvin: 3, after: 900, intake: 'in', return: 'out' };
-const fan = (key: string, number: number, more = {}) => channel(key, number, { source: 'heap', ...more });
-const config = (more = {}, restMore = {}, frostLimit: number | null = null) =>
-  house({
-    frostLimit,
-    points: [...house().points, point('in', 'loop-intake'), point('out', 'loop-return')],
-    sources: [source('heap')],
-    channels: [fan('fan', 1, { frostHelp: true, ...more }), fan('second', 2)],
-    rules: [
-      rule('fan', body({ rest: rest(7200, 1200, { leastGain: gain, ...restMore }) })),
-      rule('second', body({ point: 'air', rest: rest(7200, 1200) })),
-    ],
-  });
 
 describe('least gain', () => {
   holds('under it for 2 min after the wait: the draw ends and a rest begins', {

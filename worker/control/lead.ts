@@ -1,5 +1,5 @@
 /** Who drives: a lease in the database, renewed each 2 s of real time. A lease alone excludes nobody; nodes fence by epoch. */
-import { leadDb, type Db } from '@/db/client';
+import { leadDb } from '@/db/client';
 import {
   LEASE_S,
   raiseEpoch,
@@ -35,12 +35,12 @@ export class Lead {
   private lastFailedMs: number | null = null;
   private stopped = false;
   private looking: Promise<void> | null = null;
+  private readonly db = leadDb();
 
   constructor(
     private readonly base: Base,
     private readonly instance: string,
     private readonly events: LeadEvents,
-    private readonly db: Db = leadDb(),
   ) {}
 
   /** Epoch of this worker's lead; null while another leads. */
