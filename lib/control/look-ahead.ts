@@ -3,12 +3,14 @@
  * Nothing here reasons about the claims: each candidate is tried on the core itself, and told only if it would change
  * what runs, when, or what decides.
  */
+import { isAskedFor } from './condition-thresholds';
 import type { NextIf, NextReason, NextThen } from './next';
 import { eventsAhead } from './events-ahead';
 import type { Memory } from './memory';
 import { entry, type Run } from './run';
 import { moved } from './moved';
-import { thresholdsOf, type Threshold } from './thresholds';
+import type { Threshold } from './threshold';
+import { thresholdsOf } from './thresholds';
 import type { Explanation } from './events';
 import { CLAIMS, type Data } from './types';
 import { asItIs, changesBy, ifInstead, type Future, type Told } from './what-if';
@@ -60,38 +62,60 @@ function whatNext(run: Run, memory: Memory, { channel: id, state, claim }: Expla
     one === null || (place === 1 && both[0]?.at === one.at) ? [] : [{ kind: 'then', ...one }],
   );
   const thresholds = thresholdsOf(run, channel, flip?.at ?? null);
-  const ifs = thresholds.flatMap((one) => tried(base, flip, one, isAlone(run, one, thresholds)) ?? []);
+  const ifs = thresholds.flatMap((one) => tried(base, flip, one, amidst(run, one, thresholds)));
   return [...thens, ...nearest(ifs, base.at), ...events];
 }
 
-/** What a reading past the threshold would bring; null: nothing. */
-function tried(base: Future, flip: Told | null, threshold: Threshold, alone: boolean): NextIf | null {
+/** What a reading past the threshold would bring; nothing: no news. */
+function tried(base: Future, flip: Told | null, threshold: Threshold, among: Amidst): NextIf[] {
   const { point, side, value, orAt, of } = threshold;
   const step = (side === 'above' ? 1 : -1) * 1e-6 * Math.max(1, Math.abs(value));
+  const exactly = orAt && threshold.isEqual;
   const outcome = outcomeOf(base, flip, threshold, orAt ? value : value + step);
-  if (outcome === null) return null;
+  // where somebody asks for the value itself, it can bring what no other on that side does
+  if (exactly || (orAt && among.isMet)) {
+    const isAsPast = isSame(outcomeOf(base, flip, threshold, value + step), outcome);
+    if (exactly && isAsPast) return [];
+    if (!exactly && !isAsPast)
+      return [{ isEqual: true }, { orAt: false }].flatMap((change) =>
+        tried(base, flip, { ...threshold, ...change }, among),
+      );
+  }
+  if (outcome === null) return [];
   const keepsState = outcome.state === base.state;
   // with nothing else to come, another claim for the same state is news only where it is the deciding one that lets go
   const letsGo = of === base.claim && CLAIMS.indexOf(outcome.claim) > CLAIMS.indexOf(base.claim);
-  if (keepsState && flip === null && !letsGo) return null;
+  if (keepsState && flip === null && !letsGo) return [];
   // what a threshold on the way there brings already is told of that one
   const near = orAt ? value - step : value;
-  const isSure = alone && outcome.at === base.at;
-  if (!isSure && isSame(outcomeOf(base, flip, { ...threshold, overTime: true }, near), outcome)) return null;
+  const isSure = among.isAlone && outcome.at === base.at;
+  if (!isSure && isSame(outcomeOf(base, flip, { ...threshold, overTime: true }, near), outcome)) return [];
   const key = point === null ? null : entry(base.plan.points, point).key;
-  return {
+  const told: NextIf = {
     ...{ kind: 'if', point: key, side, value },
     ...(orAt ? { orAt } : {}),
+    ...(exactly ? { exactly } : {}),
     ...(outcome.at > base.at ? { at: outcome.at } : {}),
     ...(flip !== null && outcome.at > flip.at ? { later: true } : {}),
     ...{ state: outcome.state, claim: outcome.claim },
   };
+  return [told];
 }
 
-/** No other threshold lies on the way to it: none of its point, of the coldest, or of a point made of others. */
-function isAlone(run: Run, one: Threshold, all: readonly Threshold[]): boolean {
+interface Amidst {
+  /** No other threshold lies on the way to it: none of its point, of the coldest, or of a point made of others. */
+  isAlone: boolean;
+  /** A condition asks whether some point is at the same value, be it another load's, which this one gives way to. */
+  isMet: boolean;
+}
+
+function amidst(run: Run, one: Threshold, all: readonly Threshold[]): Amidst {
   const isMade = ({ point }: Threshold) => point === null || entry(run.plan.points, point).derived !== null;
-  return all.every((other) => other === one || (other.point !== one.point && !isMade(other) && !isMade(one)));
+  const others = all.filter((other) => other !== one);
+  return {
+    isAlone: others.every((other) => other.point !== one.point && !isMade(other) && !isMade(one)),
+    isMet: isAskedFor(run, one.value),
+  };
 }
 
 /** What a channel does differently when a reading is `value`. */
@@ -126,18 +150,16 @@ function isMoved(base: Future, { run, claim }: Future): boolean {
 
 /** Of thresholds of one point that bring the same, the one that is reached first; the soonest first. */
 function nearest(ifs: NextIf[], now: number): NextIf[] {
-  const farther = (a: NextIf, b: NextIf) => (a.side === 'above' ? a.value > b.value : a.value < b.value);
   return ifs
-    .filter(
-      (one, place) =>
-        !ifs.some(
-          (other, at) =>
-            at !== place &&
-            other.point === one.point &&
-            other.side === one.side &&
-            other.state === one.state &&
-            (farther(one, other) || (other.value === one.value && at < place)),
-        ),
-    )
+    .filter((one, place) => !ifs.some((other, at) => at !== place && hides(other, one, at < place)))
     .sort((a, b) => (a.at ?? now) - (b.at ?? now));
+}
+
+function hides(other: NextIf, one: NextIf, isBefore: boolean): boolean {
+  if (other.point !== one.point || other.side !== one.side || other.state !== one.state) return false;
+  // a value that may be jumped over says nothing of what lies behind it
+  if (other.exactly === true && one.exactly !== true) return false;
+  if (other.value !== one.value)
+    return one.side === 'above' ? one.value > other.value : one.value < other.value;
+  return other.exactly === one.exactly ? isBefore : other.orAt === true;
 }

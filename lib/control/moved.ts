@@ -3,7 +3,7 @@ import type { Memory, Readings } from './memory';
 import type { Plan } from './plan';
 import { copyReadings, putReading, valueOf } from './readings';
 import { entry } from './run';
-import type { Threshold } from './thresholds';
+import type { Threshold } from './threshold';
 import type { Future } from './what-if';
 import { coldestPoint } from './claims/frost';
 

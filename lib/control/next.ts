@@ -20,6 +20,8 @@ export interface NextIf {
   value: number;
   /** The value itself is enough. */
   orAt?: true;
+  /** And nothing but it: a reading that jumps over it brings nothing. */
+  exactly?: true;
   /** When this then comes of it; absent: at once. */
   at?: number;
   /** That is later than by the clock alone. */

@@ -8,24 +8,11 @@ import { coldestPoint, ENDS_K } from './claims/frost';
 import { gainAsked } from './least-gain';
 import { AGAIN_K as LIMIT_AGAIN_K } from './claims/limit';
 import { AGAIN_K as FLOOR_AGAIN_K } from './claims/source-guard';
-import type { Condition, ConditionNode } from './rule-body';
+import { conditionThresholds } from './condition-thresholds';
 import { plain } from './plain';
 import { valueOf } from './readings';
 import { entry, type Run } from './run';
-import type { Claim } from './types';
-
-export interface Threshold {
-  /** null: the coldest point of the house. */
-  point: number | null;
-  side: 'above' | 'below';
-  value: number;
-  /** The value itself is enough. */
-  orAt: boolean;
-  /** The claim that compares. */
-  of: Claim;
-  /** What is compared counts over time, so nothing need change at once. */
-  overTime: boolean;
-}
+import { past, type Threshold } from './threshold';
 
 /** @param laterAt when the clock alone turns the channel: bands of that hour count too; null: it does not */
 export function thresholdsOf(run: Run, channel: number, laterAt: number | null): Threshold[] {
@@ -46,33 +33,14 @@ function ofChannel(run: Run, channel: number, laterAt: number | null): Threshold
     ...frostLimits(run, channel),
     ...sourceLevels(run, channel),
     ...highLimit(run, channel),
+    ...runProofs(run, channel),
     ...entry(run.plan.channels, channel).rules.flatMap((rule) => [
       ...leastGain(run, channel, rule),
       ...band(run, rule, entry(run.calendars, rule), false),
       ...(laterAt === null ? [] : band(run, rule, entry(run.plan.rules, rule).calendar(laterAt), true)),
-      ...conditions(run, rule),
+      ...conditionThresholds(run, rule, laterAt !== null),
     ]),
   ];
-}
-
-interface Compared {
-  of: Claim;
-  /** Whether the claim counts the value itself as low: `x ≤ value`, not `x < value`. */
-  lowIncludes: boolean;
-  overTime?: boolean;
-  /** Where only one way of passing it means anything. */
-  side?: Threshold['side'];
-}
-
-/** The way a point would have to go from where it is; none for one that is not to be trusted. */
-function past(run: Run, point: number | null, value: number, compared: Compared): Threshold[] {
-  if (point === null || run.usable[point] !== 'good') return [];
-  const now = valueOf(run, point);
-  if (now === null) return [];
-  const { of, lowIncludes, overTime = false } = compared;
-  const isLow = lowIncludes ? now <= value : now < value;
-  const side = compared.side ?? (isLow ? 'above' : 'below');
-  return [{ point, side, value, orAt: lowIncludes === (side === 'below'), of, overTime }];
 }
 
 function band(run: Run, rule: number, hour: RuleCalendar, isLater: boolean): Threshold[] {
@@ -89,29 +57,11 @@ function band(run: Run, rule: number, hour: RuleCalendar, isLater: boolean): Thr
   return past(run, point, value, { of: 'band', lowIncludes: isHigh, overTime: isLater, side });
 }
 
-function conditions(run: Run, rule: number): Threshold[] {
-  const { only } = entry(run.plan.rules, rule);
-  if (only === null) return [];
-  return leaves(only.tree).flatMap(({ fact, value, operator }) => {
-    const point = run.plan.pointPlaces.get(fact);
-    const ordered = operator.startsWith('lessThan') || operator.startsWith('greaterThan');
-    if (point === undefined || typeof value !== 'number' || !ordered) return [];
-    const lowIncludes = operator === 'lessThanInclusive' || operator === 'greaterThan';
-    return past(run, point, value, { of: 'band', lowIncludes });
-  });
-}
-
-function leaves(node: ConditionNode): Condition[] {
-  if ('all' in node) return node.all.flatMap(leaves);
-  if ('any' in node) return node.any.flatMap(leaves);
-  return 'not' in node ? leaves(node.not) : [node];
-}
-
 function frostLimits(run: Run, channel: number): Threshold[] {
   const { frostLimit } = run.plan.house;
   const { inFrost } = entry(run.plan.channels, channel);
   if (frostLimit === null || inFrost === null || coldestPoint(run) === null) return [];
-  const common = { point: null, of: 'frost', overTime: false } as const;
+  const common = { point: null, isEqual: false, of: 'frost', overTime: false } as const;
   return run.frost.on
     ? [{ ...common, side: 'above', value: frostLimit + ENDS_K, orAt: true }]
     : [{ ...common, side: 'below', value: frostLimit, orAt: false }];
@@ -171,4 +121,15 @@ function leastGain(run: Run, channel: number, rule: number): Threshold[] {
     ...past(run, gain.return, intake + gain.kelvin, { ...common, lowIncludes: false }),
     ...past(run, gain.intake, back - gain.kelvin, { ...common, lowIncludes: true }),
   ];
+}
+
+/** Of all that draw on the channel's source: one that stands still spends no credit, one that turns again does. */
+function runProofs(run: Run, channel: number): Threshold[] {
+  const { source } = entry(run.plan.channels, channel);
+  if (source === null) return [];
+  return entry(run.plan.sources, source).channels.flatMap((one) => {
+    const { config, runProofPoint } = entry(run.plan.channels, one);
+    if (config.runProof === null || entry(run.channels, one).counted === 'off') return [];
+    return past(run, runProofPoint, config.runProof.above, { of: 'rest', lowIncludes: true, overTime: true });
+  });
 }

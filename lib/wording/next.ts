@@ -76,11 +76,11 @@ function doesWords({ state, claim }: NextReason, scene: Scene, present: State | 
   return `${CLAIM_NAMES[claim]} ${keeps ? 'keeps' : 'turns'} it ${state}`;
 }
 
-function passes({ point, side, value, orAt }: NextIf, scene: Scene): string {
+function passes({ point, side, value, orAt, exactly }: NextIf, scene: Scene): string {
   // without a point it is the coldest of the house, which frost looks at
   const who = point === null ? 'the coldest sensor of the house' : pointName(point, scene);
   const moves = side === 'below' ? 'falls' : 'rises';
-  const past = orAt === true ? 'to' : side === 'below' ? 'under' : 'above';
+  const past = exactly === true ? 'to exactly' : orAt === true ? 'to' : side === 'below' ? 'under' : 'above';
   return `${who} ${moves} ${past} ${valueOf(point, value, scene)}`;
 }
 

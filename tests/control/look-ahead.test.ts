@@ -9,7 +9,7 @@ import { S } from './house';
 import { among, houses } from './look-ahead-houses';
 import { Player } from './player';
 
-const START_VALUES = { bench: 5, air: 8, core: 50, base: 40, return: 20 };
+const START_VALUES = { bench: 5, air: 8, core: 50, base: 40, return: 20, amps: 0.5 };
 const key = among('fan', 'vent', 'pump', 'second');
 type Deed =
   { do: 'pass'; s: number } | { do: 'say'; point: string; value: number } | { do: 'order'; order: Order };
@@ -19,8 +19,8 @@ const deeds: fc.Arbitrary<Deed> = fc.oneof(
     weight: 5,
     arbitrary: fc.record({
       do: among('say' as const),
-      point: among('bench', 'bench', 'bench', 'air', 'core', 'base', 'return'),
-      value: among(1, 2.5, 3.5, 3.5, 3.5, 3.8, 4, 5, 7.5, 8, 10, 11.5, 13, 37.5, 39, 42, 44, 50),
+      point: among('bench', 'bench', 'bench', 'air', 'core', 'base', 'return', 'amps'),
+      value: among(0.2, 1, 2.5, 3.5, 3.5, 3.5, 3.8, 4, 5, 7.5, 8, 10, 11.5, 13, 37.5, 39, 42, 44, 50),
     }),
   },
   {
@@ -82,7 +82,9 @@ function readings(player: Player, { point: name, side }: NextIf, value: number):
 function checkIf(player: Player, id: string, one: NextIf, others: NextReason[]) {
   // a derived point is not read: what its inputs would have to do is not said
   if (one.point === 'mean') return;
-  const past = one.value + (one.side === 'above' ? 1e-3 : -1e-3);
+  const step = one.side === 'above' ? 1e-3 : -1e-3;
+  if (one.exactly === true) return checkExactly(player, id, one, others, step);
+  const past = one.value + step;
   // the reading comes a millisecond after it was foreseen, and so does what counts from it
   const at = (one.at ?? player.now) + 2;
   const told = `${one.state} ${one.claim}`;
@@ -102,6 +104,16 @@ function checkIf(player: Player, id: string, one: NextIf, others: NextReason[]) 
   const isKept = player.of(id).state === one.state;
   if (!crosses || !isKept) expect(exactly, JSON.stringify([one, others])).not.toBe(told);
   if (!crosses) expect(exactly.split(' ')[0]).toBe(later(player, {}, id, at).split(' ')[0]);
+}
+
+/** At the value it comes; short of it, and past it, nothing has come of it. */
+function checkExactly(player: Player, id: string, one: NextIf, others: NextReason[], step: number) {
+  const at = (one.at ?? player.now) + 2;
+  const told = `${one.state} ${one.claim}`;
+  expect(later(player, readings(player, one, one.value), id, at), JSON.stringify(one)).toBe(told);
+  if (others.some((other) => other !== one && other.kind === 'if' && other.point === one.point)) return;
+  for (const value of [one.value - step, one.value + step])
+    expect(later(player, readings(player, one, value), id, at), JSON.stringify([one, value])).not.toBe(told);
 }
 
 function checkThen(player: Player, id: string, one: NextThen): void {

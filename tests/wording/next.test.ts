@@ -35,6 +35,14 @@ describe('a line of what comes next says', () => {
       'off',
     ],
     [
+      'If bench probe 1 rises to exactly 5.0 °C: it goes off.',
+      reading({
+        ...{ point: 'bench-1', side: 'above', value: 5, orAt: true, exactly: true },
+        ...{ state: 'off', claim: 'idle' },
+      }),
+      'on',
+    ],
+    [
       'If the heap beside the pipe falls under 43.0 °C: the band turns it on, but not before 03:00.',
       reading({ point: 'gate-base', value: 43, at: at('03:00'), later: true, claim: 'band' }),
       'off',
