@@ -42,6 +42,7 @@ function take(run: Run, command: PersonCommand): void {
   }
   if (command.kind === 'all-off') {
     const { seconds } = command;
+    if (!isHandTime(seconds)) return refuse(run, command, null, 'hand-too-long');
     run.plan.channels.forEach((_, channel) => {
       giveHand(run, channel, command, { state: 'off', seconds, holdInFrost: true });
     });
@@ -74,11 +75,14 @@ function refuse(run: Run, { number }: PersonCommand, channel: number | null, why
 
 type Given<K extends PersonCommand['kind']> = Extract<PersonCommand, { kind: K }>;
 
+/** Whether a hand of any load may be given for so long; what is no number is no time either. */
+const isHandTime = (seconds: number): boolean => seconds > 0 && seconds <= LONGEST_HAND_S;
+
 function takeHand(run: Run, channel: number, command: Given<'hand'>): void {
   const { config, inFrost } = entry(run.plan.channels, channel);
   const { pointDeadSince, lockouts } = entry(run.channels, channel);
   const { state, seconds, holdInFrost } = command;
-  if (!(seconds > 0 && seconds <= LONGEST_HAND_S)) return refuse(run, command, channel, 'hand-too-long');
+  if (!isHandTime(seconds)) return refuse(run, command, channel, 'hand-too-long');
   if (state === 'on' && lockouts.length > 0) return refuse(run, command, channel, 'locked-out');
   if (state === 'on' && config.loadKind === 'heater') {
     if (seconds > LONGEST_HEATER_S) return refuse(run, command, channel, 'heater-hand-too-long');
