@@ -1,7 +1,7 @@
 /** What control.md says of readings and the claims that hang on them, where no other file holds it. On paper. */
 import { describe, expect, it } from 'vitest';
 import type { PointConfig } from '@/lib/control/types';
-import { body, channel, house, MIN, point, rule, S, START } from './house';
+import { body, channel, house, MIN, point, rule, S, source, START } from './house';
 import { Player } from './player';
 import { holds, silent, type Play } from './table';
 
@@ -37,6 +37,27 @@ describe('A point that stands still', () => {
     const points = [point('probe', role, { frozenAfterS: 600 })];
     const player = new Player(house({ points }), { probe: 5 }).pass(11 * MIN);
     expect(player.result.points[0]?.quality).toBe(quality);
+  });
+});
+
+describe('A point of the house that stands still in the cold', () => {
+  // frozen with the reading of 3,660 s; the bench is a kelvin over the limit all along
+  it('is believed for 12 h against another, to the ms, and then the alarm begins', () => {
+    const config = house({
+      frostLimit: 3,
+      points: [point('bench', 'bench'), point('air', 'house-air', { frozenAfterS: 3600 })],
+      channels: [channel('fan', 1, { frostHelp: true })],
+    });
+    const player = new Player(config, { bench: 4, air: 1 }).pass(14 * 60 * MIN, MIN);
+    const ends = 3660 + 43_200;
+    expect(player.switchings()).toEqual([
+      [0, 'on', 'frost'],
+      [ends, 'off', 'idle'],
+    ]);
+    const begun = player.events.filter((one) => one.kind === 'fault-begun');
+    expect(begun.filter(({ fault }) => fault.kind === 'frozen-point-in-frost')).toMatchObject([
+      { at: START + ends * S },
+    ]);
   });
 });
 
@@ -113,6 +134,38 @@ describe('An uncertain point', () => {
     expect(player.result.points[0]?.quality).toBe('uncertain');
     expect(player.says()).toBe('on frost');
     fall(player, START + 12 * MIN);
+    expect(player.says()).toBe('off idle');
+  });
+});
+
+describe('A core in doubt', () => {
+  /** Two readings that jump too far: from 60 s on the core is uncertain, its value kept. */
+  const doubt = (player: Player) => {
+    for (const core of [80, 20]) player.say({ core }).pass(30 * S);
+    expect(player.result.points.find(({ id }) => id === 'core')).toMatchObject({ quality: 'uncertain' });
+    return player;
+  };
+  const points = house().points.map((one) => (one.key === 'core' ? { ...one, maxRate: 0.01 } : one));
+  const heap = { points, sources: [source('heap', { coreFloor: 38 })] };
+  const fan = [channel('fan', 1, { source: 'heap' })];
+
+  it('silences its floor at once, with an alarm, and stops no draw', () => {
+    const rules = [rule('fan', body())];
+    const under = new Player(house({ ...heap, channels: fan, rules }), { ...warm, bench: 3, core: 37 });
+    expect(under.says()).toBe('off source-guard');
+    expect(doubt(under).says()).toBe('on band');
+    expect(under.faults()).toContain('core-not-good');
+    const over = new Player(house({ ...heap, channels: fan, rules }), { ...warm, bench: 3, core: 50 });
+    expect(doubt(over).switchings()).toEqual([[0, 'on', 'band']]);
+  });
+
+  it('makes a condition on it unknown at once: only a good reading counts', () => {
+    const only = { all: [{ fact: 'core', operator: 'greaterThan' as const, value: 45 }] };
+    const player = new Player(house({ points, rules: [rule('fan', body({ only }))] }), { ...warm, bench: 3 });
+    expect(player.says()).toBe('on band');
+    expect(doubt(player).of()).toMatchObject({
+      because: { rules: [{ why: 'condition-unknown', unknown: ['core'] }] },
+    });
     expect(player.says()).toBe('off idle');
   });
 });
