@@ -6,7 +6,7 @@ import type { SourceMemory } from './memory';
 import { settleDay, usedMs } from './day';
 import { isUnder } from './lines';
 import { dueAt, entry, wakeAt, type Run } from './run';
-import type { PlanRule, PlanSource } from './plan';
+import type { PlanSource } from './plan';
 
 /** Credit of a source at an instant, 0 to 1. */
 export function creditAt(memory: SourceMemory, at: number): number {
@@ -53,12 +53,19 @@ export function leastRestMs(run: Run, source: PlanSource): number {
   return least;
 }
 
-/** Rules that count and wait for a recovery. */
-export function waitingRules(run: Run, source: PlanSource): PlanRule[] {
-  return source.rules
-    .filter((index) => counts(run, source.rules, index))
-    .map((index) => entry(run.plan.rules, index))
-    .filter((rule) => rule.rest !== null && rule.rest.until !== null);
+/** What a rest waits for past its least, and for how long at most. */
+export interface Wait {
+  until: { point: number | null; key: string; level: number };
+  mostMs: number;
+}
+
+/** The waits of the rules that count. */
+export function waitsOf(run: Run, source: PlanSource): Wait[] {
+  return source.rules.flatMap((index) => {
+    const { rest } = entry(run.plan.rules, index);
+    if (rest === null || rest.until === null || !counts(run, source.rules, index)) return [];
+    return [{ until: rest.until, mostMs: rest.mostMs ?? rest.leastMs }];
+  });
 }
 
 /** Whether a load takes heat from its source: it counts as on, and its proof, if it has one, does not deny it. */
@@ -154,13 +161,12 @@ function restEnd(
     return null;
   }
   let how: 'rested' | 'recovered' | 'longest-rest' = 'rested';
-  for (const { rest } of waitingRules(run, source)) {
-    if (rest === null || rest.until === null) continue;
-    if (!run.undriven && recovered(run, rest.until)) {
+  for (const { until, mostMs } of waitsOf(run, source)) {
+    if (!run.undriven && recovered(run, until)) {
       if (how === 'rested') how = 'recovered';
       continue;
     }
-    const mostEnds = since + (rest.mostMs ?? rest.leastMs);
+    const mostEnds = since + mostMs;
     if (run.at < mostEnds) {
       wakeAt(run, mostEnds);
       return null;

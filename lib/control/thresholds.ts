@@ -3,7 +3,7 @@
  * would really change anything now is for look-ahead.ts to try.
  */
 import type { RuleCalendar } from './calendar';
-import { waitingRules } from './credit';
+import { waitsOf } from './credit';
 import { coldestPoint, ENDS_K } from './claims/frost';
 import { gainAsked } from './least-gain';
 import { AGAIN_K as LIMIT_AGAIN_K } from './claims/limit';
@@ -86,14 +86,8 @@ function sourceLevels(run: Run, channel: number): Threshold[] {
       ? []
       : past(run, core, readiness.level, { of: 'source-guard', lowIncludes: true, overTime: true })),
     ...(resting
-      ? waitingRules(run, source).flatMap(({ rest }) =>
-          rest === null || rest.until === null
-            ? []
-            : past(run, rest.until.point, rest.until.level, {
-                of: 'rest',
-                lowIncludes: false,
-                overTime: true,
-              }),
+      ? waitsOf(run, source).flatMap(({ until: { point, level } }) =>
+          past(run, point, level, { of: 'rest', lowIncludes: false, overTime: true }),
         )
       : []),
   ];

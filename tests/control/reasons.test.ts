@@ -92,6 +92,10 @@ describe('the reason of', () => {
     expect(reason(played({ core: 45 }, { sources: [heap] }))[1]).toEqual({
       ...{ ...ready, value: 45, aboveSince: null, until: null },
     });
+    const blind = source('heap', { corePoint: null, ready: { level: 45, forS: 3600 } });
+    expect(reason(played({}, { sources: [blind] }))[1]).toEqual({
+      ...{ ...ready, point: null, value: null, aboveSince: null, until: null },
+    });
   });
 
   it('frost: the coldest, the limit, and what it borrows from', () => {

@@ -118,7 +118,8 @@ function settleContradiction(run: Run, limit: number): void {
     if (!isFrozenCold(run, index)) contradictedSince = null;
     else {
       const other = run.plan.housePoints.some(
-        (one) => one !== index && run.usable[one] === 'good' && !isUnder(run, one, limit + ENDS_K),
+        // the frozen one itself is not good
+        (one) => run.usable[one] === 'good' && !isUnder(run, one, limit + ENDS_K),
       );
       contradictedSince = other ? (contradictedSince ?? run.at) : null;
       if (contradictedSince !== null) wakeAt(run, contradictedSince + CONTRADICTED_MS);

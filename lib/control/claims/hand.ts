@@ -5,6 +5,7 @@
  * must not start by an old command when the lock is taken off.
  */
 import type { HandReason } from '../because';
+import { counts } from '../credit';
 import type { HandMemory } from '../memory';
 import { entry, wakeAt, type Run } from '../run';
 import type { ClaimRung } from './claim';
@@ -69,12 +70,10 @@ export function endHand(
   run.events.push({ kind: 'hand-ended', at: run.at, channel: memory.id, why: { cause, state, by } });
 }
 
-/** It has rules (those in season, else all), and none has a point or stand-in that is not bad. */
+/** It has rules that count, and none of them has a point or stand-in that is not bad. */
 function isPointDead(run: Run, channel: number): boolean {
   const { rules } = entry(run.plan.channels, channel);
-  if (rules.length === 0) return false;
-  const inSeason = rules.filter((rule) => run.calendars[rule]?.inSeason === true);
-  return (inSeason.length > 0 ? inSeason : rules).every((rule) => !hasUsablePoint(run, rule));
+  return rules.length > 0 && rules.every((rule) => !counts(run, rules, rule) || !hasUsablePoint(run, rule));
 }
 
 export function hasUsablePoint(run: Run, rule: number): boolean {

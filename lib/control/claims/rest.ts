@@ -4,7 +4,7 @@
  * The accounts themselves are kept in ../credit.ts and ../day.ts.
  */
 import type { RestReason } from '../because';
-import { creditAt, drawCost, leastRestMs, recovered, waitingRules } from '../credit';
+import { creditAt, drawCost, leastRestMs, waitsOf } from '../credit';
 import { usedMs } from '../day';
 import { valueOf } from '../readings';
 import { entry, wakeAt, type Run } from '../run';
@@ -39,8 +39,9 @@ export function restForbids(run: Run, channel: number): 'credit-spent' | 'daily-
     wakeForDay(run, source, dailyLimitMs);
     return 'daily-limit';
   }
+  // one that is over was taken away when the channel's gain was settled
   const { noGainUntil } = entry(run.channels, channel);
-  if (noGainUntil !== null && run.at < noGainUntil) {
+  if (noGainUntil !== null) {
     wakeAt(run, noGainUntil);
     return 'no-gain';
   }
@@ -61,8 +62,7 @@ function isWorthAStart(run: Run, channel: number): boolean {
       wakeAt(run, memory.creditAt + Math.ceil((needed - memory.credit) / memory.slope - 1e-6));
     return false;
   }
-  const { dailyLimitMs } = entry(run.plan.sources, source);
-  const targetMs = (dailyLimitMs ?? Infinity) - minOnMs * ((run.drawCount[source] ?? 0) + 1);
+  const targetMs = dailyLimitOf(run, source) - minOnMs * ((run.drawCount[source] ?? 0) + 1);
   if (dayMs < minOnMs) {
     wakeForDay(run, source, targetMs);
     return false;
@@ -70,9 +70,13 @@ function isWorthAStart(run: Run, channel: number): boolean {
   // a start that is held up meanwhile is worth it only until the others' draws have used up what it takes
   const { credit, creditAt: since, slope, day } = memory;
   wakeWhenGone(run, since, credit - minOnMs * ((run.drawRate[source] ?? 0) + cost), -slope);
-  if (dailyLimitMs !== null) wakeWhenGone(run, day.at, targetMs - day.usedMs, day.slope);
+  wakeWhenGone(run, day.at, targetMs - day.usedMs, day.slope);
   return true;
 }
+
+/** Infinity: the source has none, and what is left of it is never gone. */
+const dailyLimitOf = (run: Run, source: number): number =>
+  entry(run.plan.sources, source).dailyLimitMs ?? Infinity;
 
 /** Wakes in the first ms in which what was to spare at `since` is more than gone, at `rate` a ms. */
 function wakeWhenGone(run: Run, since: number, spare: number, rate: number): void {
@@ -81,15 +85,11 @@ function wakeWhenGone(run: Run, since: number, spare: number, rate: number): voi
 
 /** For how long credit and day would carry a start, ms. */
 function worth(run: Run, channel: number, source: number, cost: number): { creditMs: number; dayMs: number } {
-  const { dailyLimitMs } = entry(run.plan.sources, source);
   const memory = entry(run.sources, source);
   const rate = (run.drawRate[source] ?? 0) + cost;
   return {
     creditMs: cost === 0 ? Infinity : creditAt(memory, run.at) / rate,
-    dayMs:
-      dailyLimitMs === null
-        ? Infinity
-        : (dailyLimitMs - usedMs(memory, run.at)) / ((run.drawCount[source] ?? 0) + 1),
+    dayMs: (dailyLimitOf(run, source) - usedMs(memory, run.at)) / ((run.drawCount[source] ?? 0) + 1),
   };
 }
 
@@ -117,7 +117,7 @@ function because(run: Run, channel: number): RestReason {
       ? { frostBreaksBelow: frostLimit }
       : {}),
   };
-  if (memory.resting && memory.restWhy === 'no-gain')
+  if (memory.restWhy === 'no-gain')
     return { ...common, cause: 'no-gain', ...figure(memory.restGainK), ...restTimes(run, place) };
   if (cause === 'credit-spent') return { ...common, ...restTimes(run, place) };
   if (cause === 'no-gain') {
@@ -145,19 +145,13 @@ type RestTimes = Pick<
 export function restTimes(run: Run, place: number): RestTimes {
   const source = entry(run.plan.sources, place);
   const { restSince } = entry(run.sources, place);
-  const waits = waitingRules(run, source);
-  const recoveries = waits.flatMap(({ rest: own }) =>
-    own === null || own.until === null
-      ? []
-      : [
-          {
-            point: own.until.key,
-            value: own.until.point === null ? null : valueOf(run, own.until.point),
-            level: own.until.level,
-            good: own.until.point !== null && run.usable[own.until.point] === 'good',
-          },
-        ],
-  );
+  const waits = waitsOf(run, source);
+  const recoveries = waits.map(({ until: { point, key, level } }) => ({
+    point: key,
+    value: point === null ? null : valueOf(run, point),
+    level,
+    good: point !== null && run.usable[point] === 'good',
+  }));
   const [recovery, ...others] = recoveries;
   const told = {
     ...(recovery === undefined ? {} : { recovery }),
@@ -165,13 +159,10 @@ export function restTimes(run: Run, place: number): RestTimes {
   };
   if (restSince === null) return { restSince, restUntil: null, restAtMostUntil: null, until: null, ...told };
   const leastEnds = restSince + leastRestMs(run, source);
-  const most = waits.map((rule) => restSince + (rule.rest?.mostMs ?? 0));
-  const restAtMostUntil = waits.length === 0 ? null : Math.max(leastEnds, ...most);
-  // past the least, or where nobody can tell the level, the longest time is the end that is known
-  const known = recoveries.every(({ good }) => good) && run.at < leastEnds;
-  const waiting = waits.some(
-    ({ rest: own }) => own !== null && own.until !== null && !recovered(run, own.until),
-  );
-  const restUntil = restAtMostUntil === null || known || !waiting ? leastEnds : restAtMostUntil;
+  const mostEnds = Math.max(leastEnds, ...waits.map(({ mostMs }) => restSince + mostMs));
+  const restAtMostUntil = waits.length === 0 ? null : mostEnds;
+  // past the least it still waits, and where nobody can tell a level it may: then the longest time is the end that is known
+  const isKnown = recoveries.every(({ good }) => good) && run.at < leastEnds;
+  const restUntil = isKnown ? leastEnds : mostEnds;
   return { restSince, restUntil, restAtMostUntil, until: restUntil, ...told };
 }
