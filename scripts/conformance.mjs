@@ -12,7 +12,8 @@ const USAGE = `npm run conformance -- URL TOKEN [options]
   --run COMMAND  starts the node, and starts it again where a promise is about that; without it the node runs already
   --ask          instead of --run: you are asked to cut the node's power and give it again
   --rate N       app seconds a second (10): leases and intervals are N times shorter; 1 is the full length
-  --quick        leaves out what takes a minute of real time
+  --quick        leaves out what takes minutes of real time
+  --day N        minutes in which the node lives through 24 h without a line (2): more where its sensors are slow
   --only A,B     these groups only: ${GROUPS.join(', ')}
 Nothing that must not start by itself may be wired to the relays of this node.`;
 
@@ -47,6 +48,7 @@ function readArguments() {
       run: { type: 'string' },
       ask: { type: 'boolean', default: false },
       rate: { type: 'string', default: '10' },
+      day: { type: 'string', default: '2' },
     },
     ...{ quick: { type: 'boolean', default: false }, only: { type: 'string' } },
   };
@@ -61,13 +63,15 @@ function readArguments() {
   const url = URL.canParse(given ?? '') ? new URL(given) : undefined;
   const only = values.only?.split(',') ?? GROUPS;
   const rate = Number(values.rate);
+  const day = Number(values.day);
   const unknown = only.find((one) => !GROUPS.includes(one));
   if (token === undefined || positionals.length > 2) return USAGE;
   if (url?.protocol !== 'ws:' || url.port === '')
     return `URL must be ws:// with a port, not ${given}\n\n${USAGE}`;
   if (!(rate >= 0.1 && rate <= 60)) return `--rate must be from 0.1 to 60, not ${values.rate}`;
+  if (!(day >= 1 && day <= 1440)) return `--day must be from 1 to 1440 minutes, not ${values.day}`;
   if (unknown !== undefined) return `--only knows ${GROUPS.join(', ')}, not ${unknown}`;
-  return { ...values, url, token, rate, only };
+  return { ...values, url, token, rate, day, only };
 }
 
 if (isCommand(import.meta.url)) await main();

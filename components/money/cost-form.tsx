@@ -68,7 +68,14 @@ export function CostForm({
       ? send('POST', path, body.data)
       : send('PUT', `${path}/${cost.id}`, body.data));
     setBusy(false);
-    if (!answer.ok) return setFailure(answer.message);
+    if (!answer.ok) {
+      setErrors(
+        Object.fromEntries(
+          Object.entries(answer.fields).map(([path, why]) => [path.split('.').at(-1) ?? path, why]),
+        ),
+      );
+      return setFailure(answer.message);
+    }
     if (cost === undefined) setTyped({ ...EMPTY, on: typed.on });
     say(cost === undefined ? 'The cost is entered.' : 'The cost is changed.');
     onDone?.();

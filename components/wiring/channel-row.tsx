@@ -1,5 +1,5 @@
 import { Phrases } from '@/components/ui/sentence';
-import { Cell, Row, RowHead } from '@/components/ui/table';
+import { CardCell, CardRow, CardRowHead, type CardColumn } from '@/components/ui/card-table';
 import type { Channel, Lockout, Point, Source } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { exactly } from '@/lib/wording/settings';
@@ -8,6 +8,26 @@ import { ChangeButton } from './editing';
 import { FallbackLine, type Alone } from './fallback-line';
 import { LockOutButton } from './lock-out';
 import { ProvedCell, type LastProof } from './proved-cell';
+
+const TERM = {
+  number: 'Ch',
+  load: 'Load',
+  circuit: 'Circuit',
+  rated: 'Rated',
+  contact: 'Contact',
+  safe: 'With nothing to command it',
+  proved: 'Proved',
+};
+export const CHANNEL_COLUMNS: readonly CardColumn[] = [
+  { key: 'number', label: TERM.number },
+  { key: 'load', label: TERM.load },
+  { key: 'circuit', label: TERM.circuit },
+  { key: 'rated', label: TERM.rated, figure: true },
+  { key: 'contact', label: TERM.contact },
+  { key: 'safe', label: TERM.safe },
+  { key: 'proved', label: TERM.proved },
+  { key: 'act', label: 'Change', labelHidden: true },
+];
 
 /** What a channel's fallback is read with. */
 export interface ChannelReading {
@@ -37,9 +57,11 @@ export function ChannelRow({
 }) {
   const fit = contactFit(channel.load);
   return (
-    <Row>
-      <Cell className="font-semibold tabular-nums">{channel.number}</Cell>
-      <RowHead className="min-w-44">
+    <CardRow>
+      <CardCell term={TERM.number} className="font-semibold tabular-nums">
+        {channel.number}
+      </CardCell>
+      <CardRowHead className="min-w-44">
         {channel.label}
         <span className="block text-[0.85rem] font-normal text-soft">
           {LOAD_WORDS[channel.load.kind]}
@@ -51,24 +73,24 @@ export function ChannelRow({
         {lockout === undefined ? null : (
           <span className="block text-[0.9rem] text-warn">Locked out: {lockout.why}</span>
         )}
-      </RowHead>
-      <Cell>
+      </CardRowHead>
+      <CardCell term={TERM.circuit}>
         <span className="whitespace-nowrap">{circuitWords(channel.load)}</span>
         <span className="block text-[0.85rem] text-soft">
           {channel.node}, relay {channel.relay}
         </span>
-      </Cell>
-      <Cell figure>
+      </CardCell>
+      <CardCell term={TERM.rated} figure>
         {ratedWords(channel.load)}
         {fit === null ? null : (
-          <span className="ml-auto block max-w-48 font-sans text-[0.85rem] whitespace-normal text-soft">
+          <span className="block font-sans text-[0.85rem] whitespace-normal text-soft sm:ml-auto sm:max-w-48">
             <Phrases phrases={fit.words} />
           </span>
         )}
-      </Cell>
-      <Cell wideOnly>{channel.contact}</Cell>
-      <Cell>{safeStateWords(channel.contact, channel.load.kind)}</Cell>
-      <Cell>
+      </CardCell>
+      <CardCell term={TERM.contact}>{channel.contact}</CardCell>
+      <CardCell term={TERM.safe}>{safeStateWords(channel.contact, channel.load.kind)}</CardCell>
+      <CardCell term={TERM.proved}>
         <ProvedCell
           channel={channel}
           house={house}
@@ -76,9 +98,9 @@ export function ChannelRow({
           proof={proof}
           preferences={reading.preferences}
         />
-      </Cell>
-      <Cell className="align-middle">
-        <div className="flex justify-end">
+      </CardCell>
+      <CardCell className="align-middle">
+        <div className="flex flex-wrap max-sm:-ml-4 sm:justify-end">
           <ChangeButton kind="channel" id={channel.id} of={channel.label} />
           {lockout === undefined ? (
             <LockOutButton
@@ -89,7 +111,7 @@ export function ChannelRow({
             />
           ) : null}
         </div>
-      </Cell>
-    </Row>
+      </CardCell>
+    </CardRow>
   );
 }

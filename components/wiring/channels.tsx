@@ -1,24 +1,13 @@
 import { Notice } from '@/components/ui/notice';
+import { CardTable } from '@/components/ui/card-table';
 import { Panel } from '@/components/ui/panel';
 import { Empty } from '@/components/ui/states';
-import { Table } from '@/components/ui/table';
 import type { Channel, Lockout, Source } from '@/lib/schema/yard-view';
 import { isMains, SHARE_NOTE } from '@/lib/wording/wiring-load';
 import { MAINS_CAUTION } from '@/lib/wording/wiring-parts';
-import { ChannelRow, type ChannelReading } from './channel-row';
+import { CHANNEL_COLUMNS, ChannelRow, type ChannelReading } from './channel-row';
 import { AddButton } from './editing';
 import type { LastProof } from './proved-cell';
-
-const columns = [
-  { key: 'number', label: 'Ch', figure: false },
-  { key: 'load', label: 'Load' },
-  { key: 'circuit', label: 'Circuit' },
-  { key: 'rated', label: 'Rated', figure: true },
-  { key: 'contact', label: 'Contact', wideOnly: true },
-  { key: 'safe', label: 'With nothing to command it' },
-  { key: 'proved', label: 'Proved' },
-  { key: 'act', label: 'Change', labelHidden: true },
-];
 
 /** Channels with what they carry, what they fall to, and whether somebody saw them run. */
 export function Channels({
@@ -58,7 +47,7 @@ export function Channels({
             : 'Register the node that carries the relay first.'}
         </Empty>
       ) : (
-        <Table caption="Channels" captionHidden columns={columns}>
+        <CardTable caption="Channels" columns={CHANNEL_COLUMNS}>
           {channels.map((channel) => (
             <ChannelRow
               key={channel.id}
@@ -70,7 +59,7 @@ export function Channels({
               {...reading}
             />
           ))}
-        </Table>
+        </CardTable>
       )}
       {channels.length === 0 ? null : <p className="mt-2 text-[0.85rem] text-soft">{SHARE_NOTE}</p>}
       {channels.some((one) => isMains(one.load)) ? (

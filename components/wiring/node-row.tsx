@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { Age } from '@/components/ui/age';
-import { Cell, Row, RowHead } from '@/components/ui/table';
+import { CardCell, CardRow, CardRowHead, type CardColumn } from '@/components/ui/card-table';
 import type { FieldNode } from '@/lib/schema/yard-view';
 import { decimal } from '@/lib/units/format';
 import type { Preferences } from '@/lib/units/preferences';
@@ -11,6 +11,30 @@ import { ChangeButton } from './editing';
 import { TokenButtons } from './node-buttons';
 import { linkTrouble, nodeStatus, type NodeStatus } from './node-status';
 import { NodeTailButton } from './node-tail';
+
+const TERM = {
+  node: 'Node',
+  heard: 'Last heard',
+  firmware: 'Firmware',
+  boot: 'Boot',
+  clock: 'Clock error, s',
+  rate: 'Readings a minute',
+  trips: 'Lease trips',
+  refused: 'Refused',
+  token: 'Token',
+};
+export const NODE_COLUMNS: readonly CardColumn[] = [
+  { key: 'node', label: TERM.node },
+  { key: 'heard', label: TERM.heard },
+  { key: 'firmware', label: TERM.firmware },
+  { key: 'boot', label: TERM.boot },
+  { key: 'clock', label: TERM.clock, figure: true },
+  { key: 'rate', label: TERM.rate, figure: true },
+  { key: 'trips', label: TERM.trips, figure: true },
+  { key: 'refused', label: TERM.refused, figure: true },
+  { key: 'token', label: TERM.token },
+  { key: 'act', label: 'Change', labelHidden: true },
+];
 
 const unknown = <span className="font-sans text-soft">not told</span>;
 
@@ -26,7 +50,7 @@ function tokenWords(node: FieldNode, now: number, zone: string, preferences: Pre
 /** Readings that were not taken: what each calls its point, and what is wrong with it. */
 function Refusals({ refusals }: { refusals: NodeStatus['refusals'] }) {
   return (
-    <ul className="ml-auto w-52 font-sans text-[0.85rem] whitespace-normal text-soft">
+    <ul className="font-sans text-[0.85rem] whitespace-normal text-soft sm:ml-auto sm:w-52">
       {refusals.map(({ name, why }) => (
         <li key={`${name} ${why}`} className="wrap-anywhere">
           {name === '' ? 'without a name' : name}: {why}
@@ -47,7 +71,7 @@ function Name({
 }) {
   const differs = status.relaysTold !== null && status.relaysTold !== node.channels;
   return (
-    <RowHead className="min-w-36">
+    <CardRowHead className="min-w-36">
       <span className="font-mono">{node.key}</span>
       <span className="block text-[0.85rem] font-normal text-soft">
         {NODE_WORDS[node.kind]}; {node.channels} relays, reports every {node.reportEvery}&nbsp;s
@@ -60,7 +84,7 @@ function Name({
           two.
         </span>
       ) : null}
-    </RowHead>
+    </CardRowHead>
   );
 }
 
@@ -96,37 +120,39 @@ export function NodeRow({
 }) {
   const status = nodeStatus(kept);
   return (
-    <Row>
+    <CardRow>
       <Name node={node} status={status} trouble={linkTrouble(kept)} />
-      <Cell className="whitespace-nowrap">
+      <CardCell term={TERM.heard} className="whitespace-nowrap">
         {node.lastHeardAt === null ? (
           <span className="font-semibold text-warn">Never</span>
         ) : (
           <Age at={Date.parse(node.lastHeardAt)} />
         )}
-      </Cell>
-      <Cell>{status.firmware ?? unknown}</Cell>
-      <Cell wideOnly>
+      </CardCell>
+      <CardCell term={TERM.firmware}>{status.firmware ?? unknown}</CardCell>
+      <CardCell term={TERM.boot}>
         <Boot status={status} />
-      </Cell>
-      <Cell figure>{status.clockErrorS === null ? unknown : decimal(status.clockErrorS, 1)}</Cell>
-      <Cell figure>
+      </CardCell>
+      <CardCell term={TERM.clock} figure>
+        {status.clockErrorS === null ? unknown : decimal(status.clockErrorS, 1)}
+      </CardCell>
+      <CardCell term={TERM.rate} figure>
         {status.readingsAMinute === null ? (
           <span className="font-sans text-soft">not known yet</span>
         ) : (
           decimal(status.readingsAMinute, 1)
         )}
-      </Cell>
-      <Cell figure wideOnly>
+      </CardCell>
+      <CardCell term={TERM.trips} figure>
         {status.trips ?? unknown}
-      </Cell>
-      <Cell figure>
+      </CardCell>
+      <CardCell term={TERM.refused} figure>
         {status.refused ?? unknown}
         {status.refusals.length === 0 ? null : <Refusals refusals={status.refusals} />}
-      </Cell>
-      <Cell>{tokenWords(node, now, zone, preferences)}</Cell>
-      <Cell className="align-middle">
-        <div className="flex flex-wrap justify-end">
+      </CardCell>
+      <CardCell term={TERM.token}>{tokenWords(node, now, zone, preferences)}</CardCell>
+      <CardCell className="align-middle">
+        <div className="flex flex-wrap max-sm:-ml-4 sm:justify-end">
           <NodeTailButton node={node.key} {...{ houseId, preferences }} />
           <ChangeButton kind="node" id={node.id} of={node.key} />
           <TokenButtons
@@ -136,7 +162,7 @@ export function NodeRow({
             isRevoked={node.revokedAt !== null}
           />
         </div>
-      </Cell>
-    </Row>
+      </CardCell>
+    </CardRow>
   );
 }

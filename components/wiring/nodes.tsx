@@ -1,24 +1,11 @@
+import { CardTable } from '@/components/ui/card-table';
 import { Panel } from '@/components/ui/panel';
 import { Empty } from '@/components/ui/states';
-import { Table } from '@/components/ui/table';
 import type { FieldNode } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { AddButton } from './editing';
 import { NodeNames } from './node-names';
-import { NodeRow } from './node-row';
-
-const columns = [
-  { key: 'node', label: 'Node' },
-  { key: 'heard', label: 'Last heard' },
-  { key: 'firmware', label: 'Firmware' },
-  { key: 'boot', label: 'Boot', wideOnly: true },
-  { key: 'clock', label: 'Clock error, s', figure: true },
-  { key: 'rate', label: 'Readings a minute', figure: true },
-  { key: 'trips', label: 'Lease trips', figure: true, wideOnly: true },
-  { key: 'refused', label: 'Refused', figure: true },
-  { key: 'token', label: 'Token' },
-  { key: 'act', label: 'Change', labelHidden: true },
-];
+import { NODE_COLUMNS, NodeRow } from './node-row';
 
 /** Field nodes: when each was last heard, how it is, and what it sends that nobody has named yet. */
 export function Nodes({
@@ -51,11 +38,11 @@ export function Nodes({
         </Empty>
       ) : (
         <>
-          <Table caption="Field nodes" captionHidden columns={columns}>
+          <CardTable caption="Field nodes" columns={NODE_COLUMNS}>
             {nodes.map((node) => (
               <NodeRow key={node.id} kept={kept[node.id]} {...{ node, houseId, zone, now, preferences }} />
             ))}
-          </Table>
+          </CardTable>
           {nodes.map((node) => (
             <NodeNames key={node.id} node={node.key} kept={kept[node.id]} pointKeys={pointKeys} />
           ))}

@@ -7,7 +7,7 @@ const TOLD_MS = 86_400_000;
 /** A report that came late is none. */
 const SHORT_MS = 60_000;
 
-const UNDER_VALUE = 'ml-auto block max-w-44 font-sans text-[0.85rem] whitespace-normal';
+const UNDER_VALUE = 'block font-sans text-[0.85rem] whitespace-normal sm:ml-auto sm:max-w-44';
 
 /** Under a point's value: since when and why it is not trusted, or when it came back. */
 export function PointDoubt({

@@ -1,23 +1,12 @@
 import { ButtonLink } from '@/components/ui/button';
+import { CardTable } from '@/components/ui/card-table';
 import { Panel } from '@/components/ui/panel';
 import { Empty } from '@/components/ui/states';
-import { Table } from '@/components/ui/table';
 import type { StatePoint } from '@/lib/schema/house-state';
 import type { Point } from '@/lib/schema/yard-view';
 import type { Preferences } from '@/lib/units/preferences';
 import { AddButton } from './editing';
-import { PointRow } from './point-row';
-
-const columns = [
-  { key: 'point', label: 'Point' },
-  { key: 'now', label: 'Now', figure: true },
-  { key: 'heard', label: 'Heard' },
-  { key: 'wired', label: 'Wired to' },
-  { key: 'range', label: 'Range', figure: true, wideOnly: true },
-  { key: 'stale', label: 'Silent after', figure: true, wideOnly: true },
-  { key: 'calibration', label: 'Calibration', figure: true },
-  { key: 'act', label: 'Change', labelHidden: true },
-];
+import { POINT_COLUMNS, PointRow } from './point-row';
 
 /** Where something is measured, with what it says now and how old that is. */
 export function Points({
@@ -57,7 +46,7 @@ export function Points({
           nothing can be judged, not even frost.
         </Empty>
       ) : (
-        <Table caption="Points" captionHidden columns={columns}>
+        <CardTable caption="Points" columns={POINT_COLUMNS}>
           {points.map((point) => (
             <PointRow
               key={point.id}
@@ -70,7 +59,7 @@ export function Points({
               preferences={preferences}
             />
           ))}
-        </Table>
+        </CardTable>
       )}
     </Panel>
   );

@@ -6,8 +6,9 @@ import type { Holding } from '@/db/client';
 import { channel, interlock, loop } from '@/db/schema/channel';
 import type { ChannelCreate } from '@/lib/schema/channel';
 import { changedWiring, wiringOf } from '@/lib/schema/wiring';
-import { Channel } from '@/lib/schema/yard-view';
+import { Channel, type House } from '@/lib/schema/yard-view';
 import { ofARun, ofOwnNode } from './channel-points';
+import { refuseDayToCome } from './day-done';
 import { listNodes } from './node';
 import { refuseHeater } from './node-bus';
 import { touchPlan } from './plan';
@@ -17,6 +18,7 @@ import { houseNames, inUse, isId, type HouseNames } from './reference';
 import { Refusal } from './refusal';
 
 type Given = z.infer<typeof ChannelCreate>;
+type Place = Pick<House, 'id' | 'zone'>;
 type Row = typeof channel.$inferSelect;
 
 function toChannel(row: Row, names: HouseNames): Channel {
@@ -101,23 +103,37 @@ async function columns(holding: Holding, houseId: string, given: Given) {
   };
 }
 
-export async function createChannel(holding: Holding, houseId: string, given: Given): Promise<Channel> {
+/** @throws Refusal where a residual-current device is said to have been tested on a day yet to come */
+function refuseUntested({ protection }: Given, house: Place, now: Date): void {
+  const remedy = 'the day on which its test button was pressed, or leave it empty';
+  refuseDayToCome(protection?.rcdTestedOn, 'protection.rcdTestedOn', remedy, house, now);
+}
+
+export async function createChannel(
+  holding: Holding,
+  house: Place,
+  given: Given,
+  now: Date,
+): Promise<Channel> {
+  refuseUntested(given, house, now);
   const id = uuid();
   await holding.db
     .insert(channel)
-    .values({ ...(await columns(holding, houseId, given)), id, houseId, holdingId: holding.id });
-  await touchPlan(holding, houseId);
-  return found(holding, houseId, id);
+    .values({ ...(await columns(holding, house.id, given)), id, houseId: house.id, holdingId: holding.id });
+  await touchPlan(holding, house.id);
+  return found(holding, house.id, id);
 }
 
 /** A proof is of a wiring: another one has not been seen to run, and a proof that goes on ends with it. */
 export async function amendChannel(
   holding: Holding,
-  houseId: string,
+  house: Place,
   before: Channel,
   given: Given,
   act: { by: string; now: Date },
 ): Promise<Channel> {
+  refuseUntested(given, house, act.now);
+  const houseId = house.id;
   const set = await columns(holding, houseId, given);
   // a body may name the same node by its key or by its id
   const node = (await wiredNode(holding, before.id)) === set.nodeId ? before.node : given.node;

@@ -6,10 +6,9 @@ import type { Holding } from '@/db/client';
 import { house } from '@/db/schema/house';
 import type { HouseCreate } from '@/lib/schema/house';
 import type { House } from '@/lib/schema/yard-view';
-import { toLocal } from '@/lib/units/local-time';
+import { refuseDayToCome } from './day-done';
 import { touchPlan } from './plan';
 import { isId } from './reference';
-import { Refusal } from './refusal';
 import { freeSlug, NO_HOUSE } from './slug';
 
 type Row = typeof house.$inferSelect;
@@ -57,11 +56,8 @@ async function takenSlugs(holding: Holding): Promise<Set<string>> {
 
 /** @throws Refusal where a thermostat of last resort is said to have been seen at work on a day yet to come */
 function refuseUnseen({ lastResort, zone }: z.infer<typeof HouseCreate>, now: Date): void {
-  const seenOn = lastResort?.provedOn ?? null;
-  if (seenOn !== null && seenOn > toLocal(now.getTime(), zone).slice(0, 10)) {
-    const why = 'That day is yet to come: give the day on which it was seen to come on, or leave it empty.';
-    throw new Refusal('lastResort.provedOn', why);
-  }
+  const remedy = 'the day on which it was seen to come on, or leave it empty';
+  refuseDayToCome(lastResort?.provedOn, 'lastResort.provedOn', remedy, { zone }, now);
 }
 
 export async function createHouse(

@@ -7,9 +7,12 @@ import type { Holding } from '@/db/client';
 import { heapCost, moneyBook } from '@/db/schema/money';
 import { source } from '@/db/schema/channel';
 import { amountOf, HeapCost, type HeapCostCreate, MoneyBook, type MoneyBookWrite } from '@/lib/schema/money';
+import type { House } from '@/lib/schema/yard-view';
 import { microsText } from '@/lib/units/money';
+import { refuseDayToCome } from './day-done';
 import { houseNames, isId } from './reference';
 
+type Place = Pick<House, 'id' | 'zone'>;
 interface Act {
   by: string;
   now: Date;
@@ -68,34 +71,36 @@ export async function findHeapCost(holding: Holding, houseId: string, id: string
 
 export async function createHeapCost(
   holding: Holding,
-  houseId: string,
+  house: Place,
   given: z.infer<typeof HeapCostCreate>,
   act: Act,
 ): Promise<HeapCost> {
   const id = uuid();
   await holding.db
     .insert(heapCost)
-    .values({ holdingId: holding.id, id, ...(await rowOf(holding, houseId, given, act)) });
-  return written(holding, houseId, id);
+    .values({ holdingId: holding.id, id, ...(await rowOf(holding, house, given, act)) });
+  return written(holding, house.id, id);
 }
 
 /** As a whole, under the same id; who entered it is from then on who amended it. */
 export async function amendHeapCost(
   holding: Holding,
-  houseId: string,
+  house: Place,
   id: string,
   given: z.infer<typeof HeapCostCreate>,
   act: Act,
 ): Promise<HeapCost> {
   await holding.db
     .update(heapCost)
-    .set(await rowOf(holding, houseId, given, act))
+    .set(await rowOf(holding, house, given, act))
     .where(and(eq(heapCost.holdingId, holding.id), eq(heapCost.id, id)));
-  return written(holding, houseId, id);
+  return written(holding, house.id, id);
 }
 
-async function rowOf(holding: Holding, houseId: string, given: z.infer<typeof HeapCostCreate>, act: Act) {
-  const sourceId = (await houseNames(holding, houseId)).sources.find(given.source, 'source').id;
+/** @throws Refusal at `source` for one that there is not, at `on` for a day yet to come: what was not paid cost nothing yet */
+async function rowOf(holding: Holding, house: Place, given: z.infer<typeof HeapCostCreate>, act: Act) {
+  refuseDayToCome(given.on, 'on', 'the day on which it was paid or the work was done', house, act.now);
+  const sourceId = (await houseNames(holding, house.id)).sources.find(given.source, 'source').id;
   const { kind, text, work, years } = given;
   const micros = amountOf(given);
   if (micros === null) throw new Error('the schema lets no cost through that has no amount');

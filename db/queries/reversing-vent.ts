@@ -3,13 +3,14 @@ import type { z } from 'zod';
 import type { Holding } from '@/db/client';
 import { ChannelCreate } from '@/lib/schema/channel';
 import type { ReversingVent, ReversingVentCreate } from '@/lib/schema/reversing-vent';
-import type { Channel } from '@/lib/schema/yard-view';
+import type { Channel, House } from '@/lib/schema/yard-view';
 import { createChannel, listChannels } from './channel';
 import { createInterlock } from './interlock';
 import { houseNames } from './reference';
 import { Refusal } from './refusal';
 
 type Given = z.infer<typeof ReversingVentCreate>;
+type Place = Pick<House, 'id' | 'zone'>;
 
 const WAYS = ['open', 'shut'] as const;
 type Way = (typeof WAYS)[number];
@@ -54,9 +55,15 @@ function refuseTaken(given: Given, node: string, others: Channel[]): void {
 }
 
 /** A channel's refusal at the field of the form that asks for it. */
-async function createWay(holding: Holding, houseId: string, given: Given, way: Way): Promise<Channel> {
+async function createWay(
+  holding: Holding,
+  house: Place,
+  given: Given,
+  way: Way,
+  now: Date,
+): Promise<Channel> {
   try {
-    return await createChannel(holding, houseId, channelOf(given, way));
+    return await createChannel(holding, house, channelOf(given, way), now);
   } catch (error) {
     if (error instanceof Refusal && error.path === 'relay') throw new Refusal(`${way}.relay`, error.message);
     throw error;
@@ -68,11 +75,17 @@ async function createWay(holding: Holding, houseId: string, given: Given, way: W
  * Not even frost breaks the interlock, since both ways at once short the motor's supply or burn its windings.
  * Common practice, no source.
  */
-export async function createVent(holding: Holding, houseId: string, given: Given): Promise<ReversingVent> {
+export async function createVent(
+  holding: Holding,
+  house: Place,
+  given: Given,
+  now: Date,
+): Promise<ReversingVent> {
+  const houseId = house.id;
   const node = (await houseNames(holding, houseId)).nodes.find(given.node, 'node');
   refuseTaken(given, node.key, await listChannels(holding, houseId));
-  const open = await createWay(holding, houseId, given, 'open');
-  const shut = await createWay(holding, houseId, given, 'shut');
+  const open = await createWay(holding, house, given, 'open', now);
+  const shut = await createWay(holding, house, given, 'shut', now);
   const interlock = await createInterlock(holding, houseId, {
     channel: open.key,
     kind: 'never-with',

@@ -38,11 +38,12 @@ export const finite = (least: number, most: number, unit: string) =>
     .min(least, `At least ${least} ${unit}.`)
     .max(most, `At most ${most} ${unit}.`);
 
-/** A value of a point in its own unit: a meter that counts all that a holding ever used stays under it. */
+/** Of a value of a point in its own unit: a meter that counts all that a holding ever used stays under it. */
+export const MEASURED_MOST = 1e9;
 export const Measured = z
   .number({ error: 'Give a number.' })
-  .min(-1e9, 'At least −1,000,000,000.')
-  .max(1e9, 'At most 1,000,000,000.');
+  .min(-MEASURED_MOST, 'At least −1,000,000,000.')
+  .max(MEASURED_MOST, 'At most 1,000,000,000.');
 
 export const wholeSeconds = (least: number, most: number) =>
   z

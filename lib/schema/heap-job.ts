@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { Instant, listOf } from './common';
+import { Instant, isSeen, listOf, SEEN } from './common';
 
 export const HEAP_JOB_KINDS = ['build', 'first-frost', 'spring', 'rebuild', 'own'] as const;
 
@@ -8,11 +8,21 @@ const Day = z.iso
   .refine((value) => value >= '1970' && value < '2200', {
     error: 'Give a day between 1970 and 2200.',
   });
-const Line = z.string().trim().min(1, 'Say what is to be done.').max(200, 'At most 200 characters.');
+const Line = z
+  .string()
+  .trim()
+  .min(1, 'Say what is to be done.')
+  .max(200, 'At most 200 characters.')
+  .refine(isSeen, SEEN);
 
 const fields = {
   kind: z.enum(HEAP_JOB_KINDS),
-  title: z.string().trim().min(1, 'Give the job a name.').max(120),
+  title: z
+    .string()
+    .trim()
+    .min(1, 'Give the job a name.')
+    .max(120, 'At most 120 characters.')
+    .refine(isSeen, SEEN),
   dueOn: Day,
   checklist: z.array(z.strictObject({ text: Line, done: z.boolean().default(false) })).max(30),
 };

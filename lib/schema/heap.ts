@@ -1,11 +1,16 @@
 import { z } from 'zod';
 import { SMELLS, SQUEEZES } from '@/lib/analysis/heap-facts';
-import { finite, Instant, Text, Uuid } from './common';
+import { finite, Instant, isSeen, SEEN, Text, Uuid } from './common';
 
 export const HEAP_ENTRY_KINDS = ['built', 'fed', 'watered', 'turned', 'covered', 'note'] as const;
 
 export const HeapMaterial = z.strictObject({
-  material: z.string().trim().min(1, 'Name the material.').max(80),
+  material: z
+    .string()
+    .trim()
+    .min(1, 'Name the material.')
+    .max(80, 'At most 80 characters.')
+    .refine(isSeen, SEEN),
   kilograms: finite(0, 100_000, 'kg').optional(),
   litres: finite(0, 1_000_000, 'L').optional(),
 });

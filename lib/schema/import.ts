@@ -3,14 +3,19 @@ import { fixedOffset } from '@/lib/analysis/logger-clock';
 import { DELIMITERS, ENCODINGS } from '@/lib/analysis/logger-layout';
 import { DATE_ORDERS, SKIPPED, TWICE } from '@/lib/analysis/logger-time';
 import { FILE_UNITS, isFileUnit, type FileUnitKey } from '@/lib/units/file-units';
-import { Instant, Key, listOf, Zone } from './common';
+import { Instant, isSeen, Key, listOf, SEEN, Zone } from './common';
 
 export const LARGEST_FILE = 200 * 1024 ** 2;
 /** A file is sent in pieces, so that a broken line costs one of them and each goes through the guard like any other. */
 export const LARGEST_PIECE = 4 * 1024 ** 2;
 
 export const ImportCreate = z.strictObject({
-  name: z.string().trim().min(1, 'Give the file’s name.').max(200, 'At most 200 characters.'),
+  name: z
+    .string()
+    .trim()
+    .min(1, 'Give the file’s name.')
+    .max(200, 'At most 200 characters.')
+    .refine(isSeen, SEEN),
   bytes: z
     .number()
     .int()

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { finite, listOf } from './common';
+import { finite, isSeen, listOf, SEEN } from './common';
 
 const share = (what: string) =>
   z
@@ -8,13 +8,18 @@ const share = (what: string) =>
     .max(1, 'At most 1.');
 
 const fields = {
-  name: z.string().trim().min(1, 'Name the material.').max(80),
+  name: z.string().trim().min(1, 'Name the material.').max(80, 'At most 80 characters.').refine(isSeen, SEEN),
   /** kg/m³, loose */
   density: finite(5, 3000, 'kg/m³').nullable(),
   moisture: share('water').refine((value) => value < 1, 'Under 1: there is some dry matter in it.'),
   carbon: share('carbon').refine((value) => value <= 0.75, 'At most 0.75 of the dry mass.'),
   nitrogen: share('nitrogen').refine((value) => value <= 0.5, 'At most 0.5 of the dry mass.'),
-  from: z.string().trim().min(1, 'Say where the figures come from.').max(200),
+  from: z
+    .string()
+    .trim()
+    .min(1, 'Say where the figures come from.')
+    .max(200, 'At most 200 characters.')
+    .refine(isSeen, SEEN),
 };
 
 /** A material of the holding's own. Water is a share of the wet mass, carbon and nitrogen of the dry. */

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { plain } from '@/lib/control/plain';
-import { Celsius, DayTime, finite, Key, MonthDay, Name, wholeSeconds, Why } from './common';
+import { Celsius, DayTime, finite, Key, MEASURED_MOST, MonthDay, Name, wholeSeconds, Why } from './common';
 
 export const OPERATORS = [
   'equal',
@@ -38,6 +38,14 @@ const ConditionLeaf = z
   .refine((leaf) => (leaf.operator === 'in' || leaf.operator === 'notIn') === Array.isArray(leaf.value), {
     path: ['value'],
     error: 'A list goes with in and notIn only; a single value with the others.',
+  })
+  .refine(({ operator, value }) => typeof value !== 'boolean' || /^(not)?equal$/i.test(operator), {
+    path: ['value'],
+    error: 'Give a number: true or false goes with equal and notEqual only.',
+  })
+  .refine(({ value }) => [value].flat().every((one) => Math.abs(Number(one)) <= MEASURED_MOST), {
+    path: ['value'],
+    error: 'Give a number from −1,000,000,000 to 1,000,000,000: no point measures more.',
   });
 
 const Node: z.ZodType<ConditionNode> = z.lazy(() => z.union([ConditionLeaf, ConditionTree]));

@@ -66,6 +66,12 @@ export class Bench {
     return this.#startedAt / 1000 + ((performance.now() - this.#startedMs) / 1000) * this.rate;
   }
 
+  /** App time goes on from where it is, at another pace: a node is told so by its next welcome, and not before. */
+  #setRate(rate) {
+    [this.#startedAt, this.#startedMs] = [this.now() * 1000, performance.now()];
+    this.rate = rate;
+  }
+
   /** Real ms of seconds of app time. */
   ms(seconds) {
     return (seconds * 1000) / this.rate;
@@ -104,6 +110,7 @@ export class Bench {
   }
 
   welcome(line, report = this.reportS) {
+    line.welcomedAt = this.now();
     line.send({ type: 'welcome', now: this.now(), rate: this.rate, lease: LEASE_S, report });
   }
 
@@ -114,8 +121,8 @@ export class Bench {
     return this.#welcome(await this.greeted(this.connections.length - (open?.closed === null ? 1 : 0)));
   }
 
-  /** Cuts the line, and gives the next one once it is welcomed. */
-  async again({ closedForMs = 0, isAcking = true } = {}) {
+  /** Cuts the line, and gives the next one once it is welcomed, at another rate if one is given. */
+  async again({ closedForMs = 0, isAcking = true, rate = this.rate } = {}) {
     const before = this.connections.length;
     this.isOpen = closedForMs === 0;
     this.connections.at(-1)?.cut();
@@ -124,6 +131,7 @@ export class Bench {
     this.isOpen = true;
     const line = await this.greeted(from);
     line.isAcking = isAcking;
+    if (rate !== this.rate) this.#setRate(rate);
     return this.#welcome(line);
   }
 

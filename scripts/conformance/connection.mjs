@@ -10,6 +10,8 @@ export class Connection {
   /** What broke the form of a frame, in words. */
   wrong = [];
   closed = null;
+  /** App time of its welcome, Unix seconds. */
+  welcomedAt = null;
   pongs = 0;
   /** Whether packs and logs are acknowledged. */
   isAcking = true;

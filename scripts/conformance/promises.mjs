@@ -2,13 +2,14 @@
 import { Broken, LeftOut } from './bench.mjs';
 import { alone } from './alone.mjs';
 import { commands } from './commands.mjs';
+import { day } from './day.mjs';
 import { greeting } from './greeting.mjs';
 import { lease } from './lease.mjs';
 import { line } from './line.mjs';
 import { readings } from './readings.mjs';
 import { restart } from './restart.mjs';
 
-const PROMISES = { greeting, commands, lease, readings, alone, line, restart };
+const PROMISES = { greeting, commands, lease, readings, alone, line, restart, day };
 export const GROUPS = Object.keys(PROMISES);
 
 /** @returns how many of each outcome */
@@ -19,7 +20,7 @@ export async function runPromises(bench, { only, quick }) {
     const shared = {};
     for (const { promise, isSlow, look } of PROMISES[group]) {
       const [outcome, why] =
-        isSlow && quick ? ['leftOut', 'takes a minute'] : await outcomeOf(look, bench, shared);
+        isSlow && quick ? ['leftOut', 'takes minutes'] : await outcomeOf(look, bench, shared);
       count[outcome] += 1;
       const word = { kept: 'kept    ', broken: 'BROKEN  ', leftOut: 'left out' }[outcome];
       console.log(`  ${word}  ${promise}${why === undefined ? '' : `: ${why}`}`);

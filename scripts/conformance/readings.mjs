@@ -10,7 +10,7 @@ const WAITING = 130;
 const OFFLINE_MOST_MS = 20_000;
 
 /** The records of a line, each with its pack. */
-const recordsOf = (bench, line) =>
+export const recordsOf = (bench, line) =>
   line
     .of('readings')
     .flatMap(({ at, frame }, pack) =>
@@ -27,7 +27,7 @@ function grouped(records, keyOf) {
 const idOf = ({ n, t }) => `${n} ${t}`;
 
 /** A line on which readings come; a node that measures nothing is let off. */
-async function measuring(bench) {
+export async function measuring(bench) {
   const line = await bench.welcomed();
   const limitMs = 3 * bench.ms(bench.reportS) + 5000;
   try {

@@ -1,5 +1,5 @@
 // What cannot be meant in a field, by what the field holds.
-import type { Json } from './asker';
+import { errorsOf, type Json, type Told } from './asker';
 
 export interface BadBody {
   field: string;
@@ -36,17 +36,32 @@ const WRONG: Record<string, [string, string][]> = {
   ],
 };
 
-/** Where nothing to be seen is an honest answer: there is no note. A password is the broker's own business. */
+/** Where nothing to be seen is an honest answer: there is no note. A password is the broker's own business, a sensor's name its file's. */
 const MAY_BE: Record<string, string[]> = {
   note: ['nothing', 'spaces', 'what cannot be seen'],
+  text: ['nothing', 'spaces', 'what cannot be seen'],
+  /** What stands at a side of a heap's section. */
+  'section.left': ['nothing', 'spaces', 'what cannot be seen'],
+  'section.right': ['nothing', 'spaces', 'what cannot be seen'],
   sensor: ['nothing', 'spaces'],
-  password: ['spaces', 'what cannot be seen'],
+  'columns.0.sensor': ['spaces', 'what cannot be seen'],
+  'mqtt.password': ['spaces', 'what cannot be seen'],
 };
+
+/** @returns what is wrong with the answer; null where it is a refusal that names the field and says what to do */
+export function fault(told: Told, field: string): string | null {
+  if (told.status !== 422) return `${told.status} ${told.text.slice(0, 160)}`;
+  const errors = errorsOf(told) as { path: string; message: string }[];
+  const own = errors.find((one) => one.path === field || one.path.startsWith(`${field}.`));
+  const any = own ?? errors.find((one) => field.startsWith(`${one.path}.`));
+  if (any === undefined) return `names ${errors.map((one) => one.path).join()}`;
+  return /^Invalid|^Too |^Unrecognized|expected/i.test(any.message) ? `says only “${any.message}”` : null;
+}
 
 export function badBodies(body: Json): BadBody[] {
   return leaves(body).flatMap(({ at, value }) =>
     (WRONG[typeof value] ?? [])
-      .filter(([what]) => MAY_BE[at.at(-1) ?? '']?.includes(what) !== true)
+      .filter(([what]) => MAY_BE[at.join('.')]?.includes(what) !== true)
       .map(([what, text]) => ({
         field: at.join('.'),
         what,

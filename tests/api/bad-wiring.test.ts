@@ -1,7 +1,7 @@
 // What no form lets through, sent by a program: every field of wiring with what cannot be meant.
 import { beforeAll, describe, expect, test } from 'vitest';
-import { errorsOf, newHolding, personOf, type Asker, type Json, type Told } from './asker';
-import { badBodies } from './bad-values';
+import { newHolding, personOf, type Asker, type Json } from './asker';
+import { badBodies, fault } from './bad-values';
 import { AT, makeLongHouse } from './long-house';
 import * as shown from './shown';
 
@@ -59,16 +59,6 @@ const BODIES: [string, Json][] = [
 ];
 
 const path = (list: string) => (list.startsWith('/') ? list : `/${list}`);
-
-/** @returns what is wrong with the answer; null where it is a refusal that names the field and says what to do */
-function fault(told: Told, field: string): string | null {
-  if (told.status !== 422) return `${told.status} ${told.text.slice(0, 160)}`;
-  const errors = errorsOf(told) as { path: string; message: string }[];
-  const own = errors.find((one) => one.path === field || one.path.startsWith(`${field}.`));
-  const any = own ?? errors.find((one) => field.startsWith(`${one.path}.`));
-  if (any === undefined) return `names ${errors.map((one) => one.path).join()}`;
-  return /^Invalid|^Too |^Unrecognized|expected/i.test(any.message) ? `says only “${any.message}”` : null;
-}
 
 describe.each(BODIES)('A body for %s', (list, body) => {
   test('with a field that cannot be meant is refused, by its name and with what to give', async () => {

@@ -22,6 +22,19 @@ async function open(who: string, slug = house.slug, width = 1400): Promise<Page>
   return page;
 }
 
+/** What of tables the browser tells a screen reader, by role. */
+async function tableRoles(page: Page): Promise<Map<string, number>> {
+  const session = await page.context().newCDPSession(page);
+  const { nodes } = await session.send('Accessibility.getFullAXTree');
+  const roles = new Map<string, number>();
+  for (const { ignored, role } of nodes) {
+    const name = String(role?.value);
+    if (!ignored && /^(table|rowgroup|row|cell|rowheader|columnheader)$/.test(name))
+      roles.set(name, (roles.get(name) ?? 0) + 1);
+  }
+  return roles;
+}
+
 describe('wiring in the browser', () => {
   it.each([
     ['wide', 1400],
@@ -36,6 +49,27 @@ describe('wiring in the browser', () => {
     await page.getByRole('dialog').getByLabel('Rated power').waitFor();
     expect(await accessibilityFaults(page)).toEqual([]);
     await page.context().close();
+  });
+
+  it('on a phone shows cards that nothing must be scrolled for, and they are tables all the same', async () => {
+    const wide = await open('installer', 'long-house', 1400);
+    const phone = await open('installer', 'long-house', 390);
+    for (const name of ['Channels', 'Field nodes', 'Points']) {
+      const group = phone.getByRole('group', { name, exact: true });
+      expect(await group.evaluate((box) => box.scrollWidth - box.clientWidth), name).toBeLessThanOrEqual(0);
+    }
+    const term = (page: Page) =>
+      page
+        .locator('td[data-term="Circuit"]')
+        .first()
+        .evaluate((cell) => getComputedStyle(cell, '::before').content);
+    expect(await term(phone)).toMatch(/Circuit|attr\(data-term\)/);
+    expect(await term(wide)).toBe('none');
+    const told = await tableRoles(phone);
+    expect(told).toEqual(await tableRoles(wide));
+    for (const role of ['table', 'columnheader', 'rowheader', 'row', 'cell'])
+      expect(told.get(role)).toBeGreaterThan(2);
+    await Promise.all([wide.context().close(), phone.context().close()]);
   });
 
   it('shows a new node’s token once, with where it goes', async () => {

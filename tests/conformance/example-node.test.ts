@@ -25,7 +25,7 @@ function example(name: string, options: string[]): Promise<Outcome> {
 test.concurrent('the example node keeps every promise of the field protocol', async () => {
   const outcome = await example('quick', ['--quick']);
   expect(outcome.broken).toEqual([]);
-  expect(outcome.leftOut.map((line) => line.split(':')[1])).toEqual([' takes a minute', ' takes a minute']);
+  expect(outcome.leftOut.map((line) => line.split(':')[1])).toEqual(Array(3).fill(' takes minutes'));
   expect(outcome.code).toBe(0);
   expect(outcome.kept.length).toBeGreaterThan(40);
 });

@@ -21,7 +21,7 @@ test('a node of the simulated yard keeps the same promises', { timeout: 300_000 
     ['--quick'],
   );
   expect(outcome.broken).toEqual([]);
-  // what takes a minute is held to by tests/yard with a clock that is moved on
-  expect(outcome.leftOut.map((line) => line.split(':')[1])).toEqual([' takes a minute', ' takes a minute']);
+  // what takes minutes is held to by tests/yard with a clock that is moved on
+  expect(outcome.leftOut.map((line) => line.split(':')[1])).toEqual(Array(3).fill(' takes minutes'));
   expect(outcome.code).toBe(0);
 });

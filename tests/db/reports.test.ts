@@ -84,7 +84,7 @@ beforeAll(async () => {
   const cost = { source: 'gate-heap', kind: 'materials' as const, on: '2026-10-01', text: '', years: 1 };
   await createHeapCost(
     holding,
-    seeded.houseId,
+    house,
     { ...cost, amount: '12.5', work: null },
     { by: owner, now: new Date(begin) },
   );

@@ -30,6 +30,7 @@ export class OutsideMqttNode {
   private seq = 0;
   private helloMac = '';
   private session = '';
+  /** Greatest of the welcomes to the latest hello. */
   private epoch = 0;
   private rate = 1;
   private readonly relayFrames = new Map<number, number>();
@@ -70,6 +71,7 @@ export class OutsideMqttNode {
     clearTimeout(this.again);
     this.again = setTimeout(() => this.hello(), 2000);
     this.session = '';
+    this.epoch = 0;
     this.helloMac = this.publish(
       {
         type: 'hello',

@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { channelGroups } from '@/components/wiring/forms/channel';
 import type { Yard } from '@/components/wiring/forms/options';
-import { bodyOf, valuesOf } from '@/components/wiring/spec';
+import { bodyOf, issuesOf, valuesOf } from '@/components/wiring/spec';
 import { ChannelCreate } from '@/lib/schema/channel';
 import { USUAL } from '@/lib/units/preferences';
 
@@ -46,4 +46,11 @@ it('each limit and each proof says what it does', () => {
   const folded = groups.filter((group) => group.folded !== undefined);
   expect(folded.map((group) => group.title)).toHaveLength(6);
   for (const group of folded) expect(group.note).toMatch(/\w.*\.$/);
+});
+
+it('a refused day of a test stands at the field that asks for it', () => {
+  const path = ['protection', 'rcdTestedOn'];
+  expect(issuesOf([{ path, message: 'That day is yet to come.' }], groups)).toEqual({
+    'protection.rcdTestedOn': 'That day is yet to come.',
+  });
 });

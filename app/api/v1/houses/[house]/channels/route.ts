@@ -7,7 +7,7 @@ export const GET = serve(listChannels, async ({ holding, things, query }) => ({
   body: pageOf(await channels.listChannels(holding, things.house.id), query),
 }));
 
-export const POST = serve(createChannel, async ({ holding, things, body }) => ({
+export const POST = serve(createChannel, async ({ holding, things, body, now }) => ({
   status: 201,
-  body: await channels.createChannel(holding, things.house.id, body),
+  body: await channels.createChannel(holding, things.house, body, now),
 }));

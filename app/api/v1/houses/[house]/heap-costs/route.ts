@@ -8,5 +8,5 @@ export const GET = serve(listHeapCosts, async ({ holding, things, query }) => ({
 
 export const POST = serve(createHeapCost, async ({ holding, things, body, caller, now }) => ({
   status: 201,
-  body: await money.createHeapCost(holding, things.house.id, body, { by: caller.by, now }),
+  body: await money.createHeapCost(holding, things.house, body, { by: caller.by, now }),
 }));

@@ -9,7 +9,7 @@ export const GET = serve(getChannel, ({ things }) => ({ body: things.channel }))
 export const PATCH = serve(amendChannel, async ({ holding, things, body, caller, now }) => ({
   body: await channels.amendChannel(
     holding,
-    things.house.id,
+    things.house,
     things.channel,
     merged(ChannelCreate, things.channel, body),
     { by: caller.by, now },
