@@ -4,7 +4,7 @@ import path from 'node:path';
 import { promisify } from 'node:util';
 import { brotliCompress, constants, gzip } from 'node:zlib';
 
-/** Pictures and faces are comsmaller in themselves. */
+/** Pictures and faces are small already. */
 const TEXTS = new Set(['.js', '.css', '.json', '.svg', '.txt', '.map', '.html', '.xml']);
 
 const WAYS = {
