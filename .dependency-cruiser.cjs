@@ -133,9 +133,9 @@ module.exports = {
     },
     only(
       'door',
-      'the door: Node, the proxy package, itself',
+      'the door: Node, what carries requests (http-proxy-3), what sends files (sirv), itself',
       '^worker/door/',
-      ['^worker/door/', packages('http-proxy-3')],
+      ['^worker/door/', packages('http-proxy-3', 'sirv')],
       NODE,
     ),
     {

@@ -5,7 +5,8 @@ import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, openSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import { BUILD, isCommand, ROOT } from './places.mjs';
+import { compressTexts } from './compress.mjs';
+import { BUILD, isCommand, ROOT, STATIC } from './places.mjs';
 import { giveUp, say, Trouble } from './say.mjs';
 
 /** Name of the program in .build/ → the module it starts with. */
@@ -16,7 +17,13 @@ export const PROGRAMS = {
   seed: 'worker/jobs/seed.ts',
 };
 
-const SETTINGS = ['package.json', 'package-lock.json', 'tsconfig.json', 'scripts/build.mjs'];
+const SETTINGS = [
+  'package.json',
+  'package-lock.json',
+  'tsconfig.json',
+  'scripts/build.mjs',
+  'scripts/compress.mjs',
+];
 const PROGRAM_SOURCES = ['worker', 'db', 'lib', ...SETTINGS];
 const PAGE_SOURCES = [
   'app',
@@ -97,6 +104,7 @@ async function buildPages() {
     const lines = readFileSync(log, 'utf8').trimEnd().split('\n').slice(-40).join('\n');
     throw new Trouble(`${lines}\n\nThe pages do not build; the reason is above, all of it in ${log}.`);
   }
+  await compressTexts(STATIC);
   writeStamp('pages', mark());
 }
 

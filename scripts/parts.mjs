@@ -1,6 +1,6 @@
 // How the door and the parts behind it are called: the same for `npm start` and for tests.
 import path from 'node:path';
-import { BUILD, ROOT } from './places.mjs';
+import { BUILD, ROOT, STATIC } from './places.mjs';
 
 export const DOOR = path.join(BUILD, 'door.mjs');
 
@@ -45,7 +45,7 @@ export function doorArguments({
     ...(trustProxy ? ['--trust-proxy'] : []),
     ...['--web', JSON.stringify(web), '--worker', JSON.stringify(worker)],
     ...(yard ? ['--yard', JSON.stringify(simulated)] : []),
-    ...['--logs', path.join(dataDir, 'logs')],
+    ...['--static', STATIC, '--logs', path.join(dataDir, 'logs')],
     ...notes.flatMap((note) => ['--note', note]),
   ];
 }

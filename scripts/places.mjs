@@ -5,6 +5,8 @@ import { realpathSync } from 'node:fs';
 
 export const ROOT = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
 export const BUILD = path.join(ROOT, '.build');
+/** What the pages' build made for browsers. */
+export const STATIC = path.join(ROOT, '.next', 'static');
 export const MIGRATIONS = path.join(ROOT, 'db', 'migrations');
 
 /** The data folder: what DATA_DIR says (from the project's folder if it is relative), else `.data`. */

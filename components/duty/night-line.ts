@@ -1,9 +1,9 @@
-/** A night as its row shows it: words and paths, ready for the browser, which knows no analysis and no units. */
+/** A night as its row shows it: words and packed strips, for the browser, which knows no analysis and no units. */
 import type { NightSummary } from '@/lib/analysis/nights';
 import type { Preferences } from '@/lib/units/preferences';
 import { type NightCells, nightCells } from '@/lib/wording/duty-figures';
 import { markWords } from '@/lib/wording/duty-notes';
-import { type StripPaths, stripPaths } from './strip-paths';
+import { packStrip, USUAL_LENGTH } from './strip-paths';
 
 export interface NightLine extends NightCells {
   night: string;
@@ -11,7 +11,10 @@ export interface NightLine extends NightCells {
   note?: string;
   /** Under 90 % was read: the row is marked. */
   isThin?: true;
-  strips: StripPaths[];
+  /** A channel each, packed. */
+  strips: string[];
+  /** Length of the night, s, where it is not the usual: one that lasts ends early. */
+  length?: number;
   isCold?: true;
 }
 
@@ -21,10 +24,12 @@ export function nightLine(
   preferences: Preferences,
 ): NightLine {
   const notes = [night.complete ? [] : 'so far', markWords(night) ?? []].flat();
+  const length = (night.ends - night.from) / 1000;
   const isCold = frostLimitC !== null && night.lowest !== null && night.lowest.value < frostLimitC;
   return {
     night: night.night,
-    strips: night.strips.map(({ spans }) => stripPaths(spans, (night.ends - night.from) / 1000)),
+    strips: night.strips.map(({ spans }) => packStrip(spans)),
+    ...(length === USUAL_LENGTH ? {} : { length }),
     ...nightCells(night, preferences),
     // what there is not is not sent: it would be sent four hundred times
     ...(notes.length === 0 ? {} : { note: notes.join(', ') }),

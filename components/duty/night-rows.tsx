@@ -81,8 +81,8 @@ const NightRow = memo(function NightRow({
       </th>
       <td className={classes('w-1/2 min-w-32 px-0 py-0.5', QUARTERS)}>
         <span className="flex flex-col gap-0.5">
-          {line.strips.map((strip, place) => (
-            <NightStrip key={place} strip={strip} />
+          {line.strips.map((packed, place) => (
+            <NightStrip key={place} packed={packed} length={line.length} />
           ))}
         </span>
       </td>

@@ -1,4 +1,4 @@
-import { type StripPaths, USUAL_LENGTH } from './strip-paths';
+import { stripPaths, USUAL_LENGTH } from './strip-paths';
 
 /**
  * The two patterns of all strips of the page. A strip is drawn in seconds by its own height and then stretched, so each
@@ -42,14 +42,20 @@ const REST = 'stroke-[url(#duty-narrow-rest)] sm:stroke-[url(#duty-rest)]';
 const HELD = 'stroke-[url(#duty-narrow-held)] sm:stroke-[url(#duty-held)]';
 
 /** One channel's night from noon to noon. Its words stand beside it, so to a reader that cannot see it it is nothing. */
-export function NightStrip({ strip, tall = false }: { strip: StripPaths; tall?: boolean }) {
-  const { length = USUAL_LENGTH, run, rest, held, handOn, handOff } = strip;
+export function NightStrip({
+  packed,
+  length = USUAL_LENGTH,
+}: {
+  packed: string;
+  length?: number | undefined;
+}) {
+  const { run, rest, held, handOn, handOff } = stripPaths(packed);
   return (
     <svg
       aria-hidden="true"
       viewBox={`0 -0.5 ${length} 1`}
       preserveAspectRatio="none"
-      className={tall ? 'block h-7 w-full' : 'block h-3.5 w-full'}
+      className="block h-3.5 w-full"
     >
       {rest === undefined ? null : <path d={rest} className={REST} />}
       {held === undefined ? null : <path d={held} className={HELD} />}

@@ -12,16 +12,9 @@ const LEFT = 2.1;
 const RIGHT = 1;
 const TOP = 1.2;
 
-/** @param to the address of an opened night, but for its name */
-export function YearCalendar({
-  days,
-  to,
-  preferences,
-}: {
-  days: YearDay[];
-  to: string;
-  preferences: Preferences;
-}) {
+/** @param of JSON of a year's days, ascending @param to the address of an opened night, but for its name */
+export function YearCalendar({ of, to, preferences }: { of: string; to: string; preferences: Preferences }) {
+  const days = useMemo(() => JSON.parse(of) as YearDay[], [of]);
   const layout = useMemo(() => yearLayout(days), [days]);
   const [place, setPlace] = useState(days.length - 1);
   const scroller = useRef<HTMLDivElement>(null);

@@ -21,7 +21,8 @@ export function Year({
   return (
     <Panel title="The year" note="the larger the square, the longer it ran; outlined: under the frost limit">
       <YearCalendar
-        days={data.year}
+        // as text, which React takes as it is; of days as objects it would read each part before the page answers
+        of={JSON.stringify(data.year)}
         to={`${bare}${bare.includes('?') ? '&' : '?'}night=`}
         preferences={preferences}
       />

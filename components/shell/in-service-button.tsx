@@ -1,16 +1,19 @@
 'use client';
-import { lazy, Suspense, useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { usePressed } from '@/components/ui/use-pressed';
 
 // every page of every house carries this button's script, and few ever show it: its dialog comes when it is pressed
-const InServiceDialog = lazy(() => import('./in-service-dialog'));
+const fetchDialog = () => import('./in-service-dialog');
 
 export function InServiceButton({ house }: { house: { slug: string; name: string } }) {
-  const [isOpen, setOpen] = useState(false);
+  const { part, isOpen, setOpen, failure, press } = usePressed(fetchDialog);
   return (
     <>
-      <Button onClick={() => setOpen(true)}>Put it in service</Button>
-      <Suspense>{isOpen ? <InServiceDialog house={house} onClose={() => setOpen(false)} /> : null}</Suspense>
+      <Button {...press}>Put it in service</Button>
+      <p role="alert" className="w-full font-semibold text-alarm empty:hidden">
+        {failure}
+      </p>
+      {part === null || !isOpen ? null : <part.default house={house} onClose={() => setOpen(false)} />}
     </>
   );
 }

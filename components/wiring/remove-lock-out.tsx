@@ -1,46 +1,19 @@
 'use client';
-import { useRouter } from 'next/navigation';
-import { useState } from 'react';
 import { Button } from '@/components/ui/button';
-import { Dialog } from '@/components/ui/dialog';
-import { send } from '@/components/ui/send';
-import { say } from '@/components/ui/toast';
+import { usePressed } from '@/components/ui/use-pressed';
 
-/** Gives a channel back. What it does next is up to its rules, so that is said first. */
-export function RemoveLockOutButton({ house, id, label }: { house: string; id: string; label: string }) {
-  const router = useRouter();
-  const [open, setOpen] = useState(false);
-  const [busy, setBusy] = useState(false);
-  const [failure, setFailure] = useState<string>();
-  async function remove() {
-    setBusy(true);
-    const answer = await send('DELETE', `/houses/${house}/lockouts/${id}`);
-    setBusy(false);
-    if (!answer.ok) return setFailure(answer.message);
-    setOpen(false);
-    router.refresh();
-    say(`The ${label} is given back to its rules.`);
-  }
+// every page of every house carries this button's script, and few ever show it: its dialog comes when it is pressed
+const fetchDialog = () => import('./remove-lock-out-dialog');
+
+export function RemoveLockOutButton(props: { house: string; id: string; label: string }) {
+  const { part, isOpen, setOpen, failure, press } = usePressed(fetchDialog);
   return (
     <>
-      <Button onClick={() => setOpen(true)}>Remove the lock-out…</Button>
-      <Dialog
-        open={open}
-        onOpenChange={setOpen}
-        title={`Remove the lock-out of the ${label}?`}
-        description="Its rules, frost help and hand may run it again from this moment. Look that nobody is at the load, that guards are on, and that the isolator is meant to be closed."
-        actions={
-          <>
-            <Button kind="primary" busy={busy} onClick={() => void remove()}>
-              Remove it
-            </Button>
-            <Button onClick={() => setOpen(false)}>Leave it locked out</Button>
-            <p role="alert" className="w-full font-semibold text-alarm empty:hidden">
-              {failure}
-            </p>
-          </>
-        }
-      />
+      <Button {...press}>Remove the lock-out…</Button>
+      <p role="alert" className="w-full font-semibold text-alarm empty:hidden">
+        {failure}
+      </p>
+      {part === null ? null : <part.RemoveLockOutDialog {...props} open={isOpen} onOpenChange={setOpen} />}
     </>
   );
 }

@@ -48,6 +48,15 @@ describe('weeks of recovery', () => {
     ]);
   });
 
+  it('go over the ends of years and over a leap day', () => {
+    expect(['2025-01-05', '2025-01-06', '2024-03-03', '2024-03-04'].map(weekOf)).toEqual([
+      '2024-12-30',
+      '2025-01-06',
+      '2024-02-26',
+      '2024-03-04',
+    ]);
+  });
+
   it('hold the rests of their nights, and the time constant between its ends', () => {
     const weeks = recoveryWeeks(nightsOf(14, () => 1700));
     expect(weeks.map(({ week, rests }) => [week, rests])).toEqual([

@@ -33,7 +33,11 @@ const FILES: Record<string, string> = {
 
 const NEXT = `
   const fs = require('fs'), http = require('http'), [, , verb, ...rest] = process.argv;
-  if (verb === 'build') { fs.mkdirSync('.next', { recursive: true }); fs.writeFileSync('.next/BUILD_ID', String(process.pid)); }
+  if (verb === 'build') {
+    fs.mkdirSync('.next/static/chunks', { recursive: true });
+    fs.writeFileSync('.next/static/chunks/a.js', 'night();'.repeat(500));
+    fs.writeFileSync('.next/BUILD_ID', String(process.pid));
+  }
   else http.createServer((q, s) => s.end('{"web":true}')).listen(Number(rest[rest.indexOf('-p') + 1]), '127.0.0.1');`;
 
 export interface SmallProject {

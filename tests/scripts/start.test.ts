@@ -61,6 +61,16 @@ describe('npm start, from a path with a space in it', () => {
     await stop(running);
   }, 60_000);
 
+  it('sends the scripts that were built as the build compressed them', async () => {
+    const running = start();
+    await ready(running);
+    const at = `http://127.0.0.1:${port}/_next/static/chunks/a.js`;
+    const answer = await fetch(at, { headers: { 'accept-encoding': 'br' } });
+    expect(answer.headers.get('content-encoding')).toBe('br');
+    expect(await answer.text()).toBe('night();'.repeat(500));
+    await stop(running);
+  }, 60_000);
+
   it('keeps the password from start to start, where only the user can read it', async () => {
     const file = path.join(project.dataDir, 'secrets.json');
     const { password } = JSON.parse(readFileSync(file, 'utf8')) as { password: string };

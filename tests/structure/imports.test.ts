@@ -132,7 +132,7 @@ describe('each rule can fail', () => {
         "import { hostname } from 'node:os'; import { WebSocket } from 'ws'; export const x = [hostname, WebSocket];",
       'worker/jobs/demo-history.ts': from('../yard/world'),
       'worker/door/a.ts':
-        "import http from 'node:http'; import { createProxyServer } from 'http-proxy-3'; export const x = [http, createProxyServer];",
+        "import http from 'node:http'; import { createProxyServer } from 'http-proxy-3'; import sirv from 'sirv'; export const x = [http, createProxyServer, sirv];",
     });
     expect(found).toEqual([]);
   });

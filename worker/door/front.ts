@@ -4,6 +4,7 @@ import type { Duplex } from 'node:stream';
 import { createProxyServer } from 'http-proxy-3';
 import { answerAbsence, PAGES_ABSENT, refuseUpgrade, WORKER_ABSENT } from './answers';
 import { markClient } from './client-address';
+import type { StaticFiles } from './static-files';
 
 /** A part that accepts a request and says nothing for this long has failed it. */
 const SILENCE_LIMIT_MS = 120_000;
@@ -16,11 +17,16 @@ export interface Front {
   close: () => void;
 }
 
-/** Carries requests to web or to the leading worker, and upgrades by pipe; it does not read what it carries. */
+/**
+ * Carries requests to web or to the leading worker, and upgrades by pipe; it does not read what it carries. What never
+ * changes of the pages it sends itself.
+ */
 export function createFront(options: {
   webPort: number;
   leaderPort: () => number | null;
   trustProxy: boolean;
+  /** Left out, web sends these too. */
+  files?: StaticFiles | null;
 }): Front {
   // kept connections to the parts behind; without them every asset of a page would also cost the browser a connection
   const agent = new http.Agent({ keepAlive: true, maxFreeSockets: 64, timeout: 30_000 });
@@ -47,16 +53,21 @@ export function createFront(options: {
     return { port: isWorker ? options.leaderPort() : options.webPort, isWorker };
   }
 
+  function carry(request: IncomingMessage, response: ServerResponse): void {
+    const { port, isWorker } = targetOf(request);
+    const absence = isWorker ? WORKER_ABSENT : PAGES_ABSENT;
+    markClient(request, options.trustProxy);
+    if (port === null) return answerAbsence(request, response, absence);
+    proxy.web(request, response, { target: { host: '127.0.0.1', port } }, (error) => {
+      const refused = 'code' in error && error.code === 'ECONNREFUSED';
+      answerAbsence(request, response, { ...absence, status: refused ? 503 : 502 });
+    });
+  }
+
   return {
     onRequest(request, response) {
-      const { port, isWorker } = targetOf(request);
-      const absence = isWorker ? WORKER_ABSENT : PAGES_ABSENT;
-      markClient(request, options.trustProxy);
-      if (port === null) return answerAbsence(request, response, absence);
-      proxy.web(request, response, { target: { host: '127.0.0.1', port } }, (error) => {
-        const refused = 'code' in error && error.code === 'ECONNREFUSED';
-        answerAbsence(request, response, { ...absence, status: refused ? 503 : 502 });
-      });
+      if (options.files) options.files(request, response, () => carry(request, response));
+      else carry(request, response);
     },
 
     onUpgrade(request, socket, head) {

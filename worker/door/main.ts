@@ -7,6 +7,7 @@ import { openPort, PortTaken } from './listen';
 import { LogFile } from './log-file';
 import { askThroughDoor, waitUntilReady } from './ready';
 import { readSettings, SettingsFault, type Settings } from './settings';
+import { staticFiles } from './static-files';
 import { CONFIGURATION, Supervisor } from './supervise';
 
 const say = (line: string) => console.log(line);
@@ -25,6 +26,10 @@ async function run(settings: Settings): Promise<void> {
     webPort: settings.webPort,
     leaderPort: () => leader.port,
     trustProxy: settings.trustProxy,
+    files:
+      settings.static === null
+        ? null
+        : staticFiles(settings.static, settings.publicUrl?.startsWith('https://') === true),
   });
   const { port, servers } = await openPort(front, settings.host, settings.port, settings.portFixed);
   if (port !== settings.port) say(`Port ${settings.port} is taken, so Middenward takes ${port}.`);

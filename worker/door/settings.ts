@@ -16,6 +16,8 @@ export interface Settings {
   workerPorts: number[];
   /** Commands with their arguments; `{port}` in them becomes the public port. */
   children: { name: string; command: string[] }[];
+  /** Folder of what web's build made for browsers, which the door then sends itself; null leaves it to web. */
+  static: string | null;
   /** Folder of the children's logs; null lets them write where the door writes. */
   logs: string | null;
   /** Lines printed once all is ready. */
@@ -35,6 +37,7 @@ const OPTIONS = {
   web: { type: 'string' },
   worker: { type: 'string' },
   yard: { type: 'string' },
+  static: { type: 'string' },
   logs: { type: 'string' },
   note: { type: 'string', multiple: true },
 } as const;
@@ -55,6 +58,7 @@ export function readSettings(argv: string[]): Settings {
     webPort: portOf('web-port', values['web-port']),
     workerPorts: (values['worker-port'] ?? []).map((text) => portOf('worker-port', text)),
     children,
+    static: values.static ?? null,
     logs: values.logs ?? null,
     notes: values.note ?? [],
   };

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { barsPath, BARS_HIGH, overviewTicks } from '@/components/duty/overview-layout';
-import { stripPaths } from '@/components/duty/strip-paths';
+import { packStrip, stripPaths } from '@/components/duty/strip-paths';
 import { arrowStep, dayAt, type YearDay, yearLayout } from '@/components/duty/year-layout';
 import { nightBefore } from '@/lib/analysis/night';
 import type { StripSpan } from '@/lib/analysis/nights';
@@ -15,17 +15,16 @@ function strokesOf(path: string): [number, number][] {
   });
 }
 
+const drawn = (spans: readonly StripSpan[]) => stripPaths(packStrip(spans));
+
 describe('a strip', () => {
   it('draws every run from its second to its second, and each kind apart', () => {
-    const strip = stripPaths(
-      [
-        ['run', 600, 1800, true],
-        ['rest', 1800, 3600, false],
-        ['run', 3600, 4200, true],
-        ['held', 4200, 9000, false],
-      ],
-      86_400,
-    );
+    const strip = drawn([
+      ['run', 600, 1800, true],
+      ['rest', 1800, 3600, false],
+      ['run', 3600, 4200, true],
+      ['held', 4200, 9000, false],
+    ]);
     expect(strokesOf(strip.run ?? '')).toEqual([
       [600, 1800],
       [3600, 4200],
@@ -41,19 +40,40 @@ describe('a strip', () => {
       ['run', 120, 120, true],
       ['run', 120, 300, true],
     ];
-    expect(stripPaths(spans, 82_800)).toEqual({ length: 82_800, run: 'm60 0h240' });
+    expect(drawn(spans)).toEqual({ run: 'm60 0h240' });
+  });
+
+  it('leaves what was off, and what nobody knows, empty', () => {
+    const spans: StripSpan[] = [
+      ['off', 0, 300, false],
+      ['run', 300, 900, true],
+      ['off', 900, 1200, false],
+      ['run', 1500, 1800, true],
+      ['off', 1800, 86_400, false],
+    ];
+    expect(strokesOf(drawn(spans).run ?? '')).toEqual([
+      [300, 900],
+      [1500, 1800],
+    ]);
+    expect(Object.keys(drawn(spans))).toEqual(['run']);
+    expect(drawn([['off', 0, 86_400, false]])).toEqual({});
+  });
+
+  it('goes over the line with each second told once', () => {
+    const spans: StripSpan[] = [
+      ['run', 600, 1800, true],
+      ['rest', 1800, 3600, false],
+      ['off', 3600, 86_400, false],
+    ];
+    expect(packStrip(spans)).toBe('n600r1200x1800');
   });
 
   it('outlines what was by hand, on apart from off', () => {
-    const strip = stripPaths(
-      [
-        ['hand', 0, 900, true],
-        ['hand', 900, 1200, false],
-      ],
-      90_000,
-    );
-    expect(strip).toMatchObject({
-      length: 90_000,
+    const strip = drawn([
+      ['hand', 0, 900, true],
+      ['hand', 900, 1200, false],
+    ]);
+    expect(strip).toEqual({
       handOn: 'M0-.45h900v.9H0z',
       handOff: 'M900-.45h300v.9H900z',
     });

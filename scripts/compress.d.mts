@@ -1,0 +1,1 @@
+export function compressTexts(folder: string): Promise<void>;
