@@ -134,6 +134,12 @@ describe('the point of a channel is dead', () => {
     expect(ends(dead)[0]?.[0]).toBe(1890.001);
   });
 
+  it('never, where it has no rules at all: its hand lasts as long as it was given', () => {
+    const player = new Player(rules(), warm).order(on);
+    expect(player.of().because).not.toHaveProperty('pointDeadSince');
+    expect(player.pass(60 * MIN).says()).toBe('on hand');
+  });
+
   it('where it is not there at all', () => {
     const player = new Player(rules({ point: 'nowhere' }), warm).order(on);
     expect(player.of().because).toMatchObject({ pointDeadSince: START, until: START + 30 * MIN });
