@@ -31,6 +31,21 @@ describe('The ladder', () => {
   });
 });
 
+describe('A lock-out', () => {
+  it.each([
+    { kind: 'hand', channel: 'fan', state: 'on', seconds: 60, holdInFrost: false },
+    { kind: 'prove', channel: 'fan', seconds: 60 },
+  ] as const)('refuses a $kind, with its reason', (order) => {
+    const player = new Player(house({ channels: [channel('fan', 1)] }), warm);
+    player.order({ kind: 'lock-out', channel: 'fan', lockout: 'a', why: 'belt' });
+    player.order(order);
+    expect(player.events.at(-1)).toMatchObject({
+      ...{ kind: 'command-refused', number: 2, channel: 'fan', why: 'locked-out' },
+    });
+    expect(player.says()).toBe('off lock-out');
+  });
+});
+
 describe('An interlock', () => {
   const pair = (kind: 'needs' | 'never-with') =>
     house({

@@ -115,12 +115,13 @@ describe('A credit', () => {
 });
 
 describe('A rest', () => {
-  // the point is in doubt from 660 s on (two readings that are too fast), which is not good: no level counts
+  // the level is there till 1,500 s; in doubt from 1,560 on (two readings that are too fast) it is not good when the least
+  // passes at 1,800, though its last plausible value is over the level
   it('whose recovery point is in doubt runs to the most', () => {
     const until = { point: 'base', level: 43 };
     const config = one(rest(600, 1200, { until, most: 2400 }));
     config.points = config.points.map((p) => (p.key === 'base' ? { ...p, maxRate: 0.001 } : p));
-    const player = new Player(config, cold).until(START + 630 * S);
+    const player = new Player(config, { ...cold, base: 45 }).until(START + 1500 * S);
     for (let odd = 0; player.now < START + 2970 * S; odd = 1 - odd)
       player.say({ base: 60 + odd * 5 }).pass(30 * S);
     expect(player.says()).toBe('off rest');
