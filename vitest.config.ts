@@ -7,6 +7,8 @@ import { BaseSequencer, type TestSpecification } from 'vitest/node';
 const root = path.dirname(fileURLToPath(import.meta.url));
 const under = (folders: string) => [`tests/${folders}/**/*.test.{ts,tsx}`];
 
+const DAY = 'tests/conformance/day.test.ts';
+
 const resolve = {
   alias: [
     { find: /^@\//, replacement: `${root}/` },
@@ -38,6 +40,7 @@ export default defineConfig({
           name: 'conformance',
           testTimeout: 20_000,
           include: under('conformance'),
+          exclude: [DAY],
           maxWorkers: CORES + 1,
         },
       },
@@ -86,6 +89,16 @@ export default defineConfig({
           // one file at a time: two browsers on two cores make each other late, and the whole no sooner
           fileParallelism: false,
           sequence: { groupOrder: 2 },
+        },
+      },
+      {
+        resolve,
+        test: {
+          // a day's readings in two minutes: beside others it makes them late
+          name: 'conformance-day',
+          testTimeout: 20_000,
+          include: [DAY],
+          sequence: { groupOrder: 3 },
         },
       },
     ],
