@@ -18,7 +18,7 @@ const one = (own: RestBody | undefined, more = {}, house_ = {}) =>
 
 describe('A gain run', () => {
   // 300 s of 600 drawn by proving: the half that is left carries 300 s of the band’s
-  holds('draws from the credit as any draw does', {
+  holds('draws from the credit like every draw', {
     config: one(rest(600, 1200)),
     reads: warm,
     rows: [
